@@ -1,5 +1,18 @@
 /** The public face of the calculations: pure functions in double precision, with the units in their names. */
 export {
+  elevationOf,
+  standardPressure,
+  stationPressure,
+  stationUncertainty,
+  toAbsolute,
+  toGauge,
+  type AltimeterReport,
+  type StationPressureSource,
+} from './atmosphere';
+export { judge, type JudgedReading, type Verdict } from './decision';
+export { decodeTroubleCode, describeTroubleCode } from './trouble-code';
+export { expandedUncertainty, type UncertaintySources } from './uncertainty';
+export {
   convert,
   convertDifference,
   differenceFromBase,
@@ -13,3 +26,4 @@ export {
   type UnitKind,
   type UnitName,
 } from './units';
+export { checkVin, modelYear, vinCheckDigit, type VinCheck, type VinProblem } from './vin';
