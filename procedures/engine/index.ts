@@ -1,0 +1,2 @@
+export * from './run-event';
+export * from './run-state';

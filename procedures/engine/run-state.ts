@@ -1,0 +1,198 @@
+import type { JudgedResult, PressureSense } from '../document';
+import type { UnitName } from '../calculations';
+import type {
+  DecisionInput,
+  Figure,
+  InstrumentSnapshot,
+  ReadingSource,
+  RunEventData,
+  RunHeader,
+  TroubleCodeEntry,
+  VisitSnapshot,
+} from './run-event';
+
+/** What a run is after its events: derived by `replay`, never stored as truth. JSON-serialisable. */
+export interface RunState {
+  readonly header: RunHeader;
+  readonly status: 'open' | 'set-aside' | 'stopped' | 'lead-called' | 'closed' | 'signed';
+  /** Of the last event. */
+  readonly seq: number;
+  readonly head: string;
+  readonly openedAt: number;
+  readonly lastAt: number;
+  readonly openedBy: string;
+  readonly personName: string;
+  readonly visit: VisitSnapshot;
+  readonly siteName: string;
+  readonly inputs: Readonly<Record<string, Figure & { readonly source: string }>>;
+  /** The claimed step; absent once a finding is reached. */
+  readonly current: CurrentStep | undefined;
+  /** Every claim in order, the current one included. */
+  readonly walked: readonly WalkedStep[];
+  /** The latest of each named quantity. */
+  readonly values: Readonly<Record<string, NamedValue>>;
+  /** Options chosen, windows visited, noise heard: names that hold or do not. */
+  readonly truths: Readonly<Record<string, NamedTruth>>;
+  /** The finding that the way heads for. */
+  readonly verdict: string | undefined;
+  /** The finding that was reached. */
+  readonly finding: string | undefined;
+  readonly gear: Readonly<Record<string, InstrumentSnapshot & { readonly seq: number }>>;
+  readonly disturbed: readonly DisturbedItem[];
+  readonly series: Readonly<Record<string, SeriesState>>;
+  readonly codes: Readonly<Record<string, CodesState>>;
+  readonly choices: Readonly<Record<string, ChoiceState>>;
+  /** How often each bounded branch was taken: `step/branch index` -> count. */
+  readonly branchCounts: Readonly<Record<string, number>>;
+  /** A limit was exceeded and not yet acknowledged. */
+  readonly alarm: LimitAlarm | undefined;
+  /** Set while the run is stopped or set aside: when, by whom, why. */
+  readonly pause: { readonly seq: number; readonly at: number; readonly reason: string } | undefined;
+  readonly writeUp: RunEventData['write-up-written'] | undefined;
+  /** What this build computes differently from what an event says; recorded, never a reason to refuse. */
+  readonly discrepancies: readonly Discrepancy[];
+}
+
+export interface CurrentStep {
+  readonly id: string;
+  readonly claimedSeq: number;
+  readonly claimedAt: number;
+  /** Of the step's cautions, by place, those acknowledged in this claim. */
+  readonly acknowledged: readonly number[];
+  /** Takes recorded in this claim: name -> decimal texts. */
+  readonly takes: Readonly<Record<string, readonly Take[]>>;
+  readonly timer:
+    | {
+        readonly startedAt: number;
+        readonly startedElapsed: number;
+        readonly seconds: number;
+        readonly ended: boolean;
+        readonly certain: boolean;
+      }
+    | undefined;
+  /** `step-done` was written: only the way on is missing. */
+  readonly isDone: boolean;
+}
+
+export interface Take {
+  readonly seq: number;
+  readonly text: string;
+  readonly unit: UnitName;
+  readonly source: ReadingSource;
+  readonly way?: string;
+  readonly timeS?: number;
+}
+
+export interface WalkedStep {
+  readonly step: string;
+  readonly claimedSeq: number;
+  readonly claimedAt: number;
+  readonly doneSeq?: number;
+  readonly doneAt?: number;
+  /** The worst result among what was judged here, for the Route's bead. */
+  readonly result?: JudgedResult;
+  readonly notMeasured?: boolean;
+  readonly way?: BranchTaken;
+}
+
+export interface BranchTaken {
+  readonly seq: number;
+  readonly to: string;
+  readonly exit: string;
+  readonly when?: string;
+  readonly inputs: readonly DecisionInput[];
+  readonly because: string;
+  readonly verdict?: string;
+}
+
+/** A quantity of the run, in base units (Pa, K, s, ...) beside the text it was given as. */
+export interface NamedValue {
+  readonly name: string;
+  readonly label: string;
+  /** In base units. */
+  readonly value: number;
+  /** Expanded, k = 2, in base units. */
+  readonly uncertainty: number;
+  /** Rounded to what its resolution or uncertainty carries, in `unit`. */
+  readonly text: string;
+  readonly uncertaintyText: string;
+  readonly unit: UnitName;
+  readonly sense?: PressureSense;
+  readonly step: string;
+  readonly seq: number;
+  readonly at: number;
+  readonly source: ReadingSource;
+  readonly way?: string;
+  readonly takes: number;
+  /** Sample standard deviation of the takes, in base units; 0 for one. */
+  readonly spread: number;
+  readonly judgement?: Judgement;
+}
+
+export interface Judgement {
+  /** Absent when the band's condition did not hold; then `unjudged` says why. */
+  readonly result?: JudgedResult;
+  /** The band's ends in base units and as text in the value's unit. */
+  readonly low?: number;
+  readonly high?: number;
+  readonly lowText?: string;
+  readonly highText?: string;
+  readonly unjudged?: string;
+  readonly source: string;
+}
+
+export interface NamedTruth {
+  readonly holds: boolean;
+  readonly step: string;
+  readonly seq: number;
+}
+
+export interface DisturbedItem {
+  readonly item: string;
+  readonly label: string;
+  readonly restore: string;
+  readonly step: string;
+  readonly seq: number;
+}
+
+export interface SeriesState {
+  readonly step: string;
+  readonly seq: number;
+  readonly record: RunEventData['series-recorded'];
+  readonly marks: Readonly<
+    Partial<
+      Record<'noise-begins' | 'noise-stops', { readonly timeS: number; readonly seq: number; readonly by: string }>
+    >
+  >;
+}
+
+export interface CodesState {
+  readonly step: string;
+  readonly seq: number;
+  readonly codes: readonly TroubleCodeEntry[];
+}
+
+export interface ChoiceState {
+  readonly step: string;
+  readonly seq: number;
+  readonly options: readonly string[];
+  readonly labels: readonly string[];
+  readonly text?: string;
+}
+
+export interface LimitAlarm {
+  readonly seq: number;
+  readonly step: string;
+  readonly limit: string;
+  readonly name: string;
+  readonly figure: Figure;
+  readonly says: string;
+  readonly then: string;
+}
+
+export interface Discrepancy {
+  readonly seq: number;
+  readonly what: string;
+  readonly recorded: string;
+  readonly computed: string;
+}
