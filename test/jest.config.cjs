@@ -6,10 +6,7 @@ const plain = {
   rootDir: root,
   testEnvironment: 'node',
   transform: {
-    '^.+\\.ts$': [
-      'ts-jest',
-      { tsconfig: '<rootDir>/test/tsconfig.jest.json', isolatedModules: true, diagnostics: false },
-    ],
+    '^.+\\.ts$': ['ts-jest', { tsconfig: '<rootDir>/test/tsconfig.jest.json', diagnostics: false }],
   },
   moduleNameMapper: { '^(\\.{1,2}/.*)\\.js$': '$1' },
 };
