@@ -45,6 +45,8 @@ export interface GearNeed {
   readonly role: string;
   readonly kind: InstrumentKind;
   readonly label: string;
+  /** Whether a run can do without it (one of several ways needs it). */
+  readonly optional?: boolean;
   /** What it must be able to show; absent for gear that shows no number. */
   readonly shows?: {
     readonly unit: UnitName;
