@@ -10,6 +10,8 @@ export {
   type StationPressureSource,
 } from './atmosphere';
 export { judge, type JudgedReading, type Verdict } from './decision';
+export { fitLine, fitRobustLine, type LineFit } from './fit';
+export { trackSensors, type SensorSeries, type SensorTracking, type Tracking } from './sensor-tracking';
 export { decodeTroubleCode, describeTroubleCode } from './trouble-code';
 export { expandedUncertainty, type UncertaintySources } from './uncertainty';
 export {
