@@ -8,7 +8,8 @@ describe('medianOf', () => {
     fc.assert(
       fc.property(fc.array(number, { minLength: 1, maxLength: 60 }), (values) => {
         const before = [...values];
-        expect(medianOf(values)).toBe(median(values) + 0);
+        // The mean of two middle values may differ in its last bit by the order of the sum.
+        expect(Math.abs(medianOf(values) - median(values))).toBeLessThanOrEqual(1e-15 * Math.abs(median(values)));
         expect(values).toEqual(before);
       }),
     );
