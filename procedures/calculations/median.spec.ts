@@ -4,7 +4,9 @@ import { medianInPlace, medianOf } from './median';
 
 describe('medianOf', () => {
   it('agrees with simple-statistics, for odd and even numbers of values and for ties', () => {
-    const number = fc.oneof(fc.double({ min: -1e6, max: 1e6, noNaN: true }), fc.integer({ min: 0, max: 3 }));
+    const number = fc
+      .oneof(fc.integer({ min: -1e6, max: 1e6 }), fc.integer({ min: 0, max: 3 }))
+      .map((thousandths) => thousandths / 1000);
     fc.assert(
       fc.property(fc.array(number, { minLength: 1, maxLength: 60 }), (values) => {
         const before = [...values];
