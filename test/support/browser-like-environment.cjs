@@ -1,8 +1,8 @@
 // jsdom lacks what every browser has and the offline store needs: give it Node's own.
-const { TestEnvironment } = require('jest-preset-angular/environments/jest-jsdom-env');
+const { default: JsdomEnvironment } = require('jest-preset-angular/environments/jest-jsdom-env');
 const { webcrypto } = require('node:crypto');
 
-module.exports = class BrowserLikeEnvironment extends TestEnvironment {
+module.exports = class BrowserLikeEnvironment extends JsdomEnvironment {
   async setup() {
     await super.setup();
     this.global.structuredClone = structuredClone;
