@@ -1,0 +1,210 @@
+// @ts-check
+import { existsSync, realpathSync } from 'node:fs';
+import { readFile, rename, rm, stat, writeFile } from 'node:fs/promises';
+import { join } from 'node:path';
+import { runCommand } from './commands.mjs';
+import { freePort } from './free-port.mjs';
+import { postgresFailure } from './postgres-failure.mjs';
+import { StartProblem } from './sentences.mjs';
+import { atStop } from './stopping.mjs';
+
+/**
+ * A PostgreSQL cluster of ours, running or not.
+ * @typedef {object} Cluster
+ * @property {string} place the folder that holds `cluster` (its files) and `postgres.log`
+ * @property {string} programs the folder of the server's programs
+ * @property {import('./commands.mjs').Account} account who runs it
+ */
+
+/**
+ * What a running cluster was started with.
+ * @typedef {Record<string, string | number>} Settings server settings by name
+ */
+
+const portTries = 5;
+const startLimitS = 300;
+
+/** @param {Cluster} cluster */
+const filesOf = ({ place }) => join(place, 'cluster');
+
+/** @param {Cluster} cluster */
+const noteOf = (cluster) => join(filesOf(cluster), 'postmaster.pid');
+
+/** @param {Cluster} cluster */
+const logOf = ({ place }) => join(place, 'postgres.log');
+
+/**
+ * The PostgreSQL version that made the cluster in this folder; undefined when there is none.
+ * @param {string} place
+ * @returns {Promise<number | undefined>}
+ */
+export async function versionOfCluster(place) {
+  const folder = join(place, 'cluster');
+  if (!existsSync(folder)) return undefined;
+  const text = await readFile(join(folder, 'PG_VERSION'), 'utf8').catch(() => '');
+  const version = Number(text.trim());
+  if (Number.isInteger(version) && version > 0) return version;
+  throw new StartProblem(postgresFailure('The database does not start', 'is not a valid data directory', place));
+}
+
+/**
+ * Makes the cluster's files, whole or not at all: a start that is ended half-way leaves nothing that looks like a database.
+ * @param {Cluster} cluster
+ * @param {object} contents
+ * @param {string[]} contents.access the lines of pg_hba.conf
+ * @param {string[]} contents.statements SQL run once, offline, as the superuser
+ */
+export async function createCluster(cluster, { access, statements }) {
+  const halfMade = join(cluster.place, 'cluster.half-made');
+  const failed = `The database can't be made in ${cluster.place}`;
+  await rm(halfMade, { recursive: true, force: true });
+  await must(cluster, failed, 'initdb', [
+    ...['--pgdata', halfMade, '--encoding', 'UTF8', '--locale', 'C.UTF-8', '--username', 'postgres'],
+    ...['--auth', 'reject', '--data-checksums', '--no-instructions'],
+  ]);
+  await writeFile(join(halfMade, 'pg_hba.conf'), `${access.join('\n')}\n`);
+  await runOffline(cluster, statements, halfMade);
+  await rename(halfMade, filesOf(cluster));
+}
+
+/**
+ * Runs SQL as the superuser while the cluster is stopped. So the superuser needs no password and no way in from outside.
+ * @param {Cluster} cluster
+ * @param {string[]} statements each on one line
+ * @param {string} [files]
+ */
+export async function runOffline(cluster, statements, files = filesOf(cluster)) {
+  const failed = `The database in ${cluster.place} can't be set up`;
+  const input = statements.map((statement) => `${statement}\n`).join('');
+  const output = await must(cluster, failed, 'postgres', ['--single', '-D', files, 'postgres'], input);
+  // In this mode a refused statement does not show in the exit code.
+  if (/^.*\b(ERROR|FATAL|PANIC):/m.test(output)) throw new StartProblem(postgresFailure(failed, output, cluster.place));
+}
+
+/**
+ * Starts the cluster on 127.0.0.1 at a port that is free, without sockets in the file system. It is stopped when
+ * everything is.
+ * @param {Cluster} cluster
+ * @param {Settings} [settings]
+ * @returns {Promise<{ port: number, stop: () => Promise<void> }>}
+ */
+export async function startCluster(cluster, settings = {}) {
+  await forgetEarlierRun(cluster);
+  const stop = () => stopCluster(cluster);
+  const forget = atStop(stop);
+  const logFrom = await beginLog(cluster);
+  let output = '';
+  for (let tries = 0; tries < portTries; tries += 1) {
+    const port = await freePort();
+    const all = { listen_addresses: '127.0.0.1', port, unix_socket_directories: '', ...settings };
+    const options = Object.entries(all).map(([name, value]) => `-c ${name}=${value}`);
+    const start = await run(cluster, 'pg_ctl', [
+      ...['start', '-D', filesOf(cluster), '-l', logOf(cluster), '-w', '-t', String(startLimitS)],
+      ...['-o', options.join(' ')],
+    ]);
+    if (start.code === 0) {
+      return {
+        port,
+        stop: async () => {
+          forget();
+          await stop();
+        },
+      };
+    }
+    output = start.output + (await readLog(cluster)).slice(logFrom);
+    // Another program may have taken the port between the look and the start.
+    if (!/Address already in use/.test(output)) break;
+  }
+  throw new StartProblem(postgresFailure(`The database in ${cluster.place} does not start`, output, cluster.place));
+}
+
+/**
+ * Stops the cluster if it runs; clients are sent away, nothing committed is lost.
+ * @param {Cluster} cluster
+ */
+export async function stopCluster(cluster) {
+  if (!(await isRunning(cluster))) return;
+  const stop = ['stop', '-D', filesOf(cluster), '-w', '-t', '60'];
+  const fast = await run(cluster, 'pg_ctl', [...stop, '-m', 'fast']);
+  if (fast.code === 0 || !(await isRunning(cluster))) return;
+  // Files stay whole: the next start recovers from the log as after a power cut.
+  const immediate = await run(cluster, 'pg_ctl', [...stop, '-m', 'immediate']);
+  if (immediate.code !== 0) throw new StartProblem(`The database in ${cluster.place} does not stop: ${fast.output}`);
+}
+
+/**
+ * Gets rid of what a killed start left behind: a cluster that still runs, or a note whose process id now belongs to
+ * another program. Every other note is left to PostgreSQL's own judgement.
+ * @param {Cluster} cluster
+ */
+async function forgetEarlierRun(cluster) {
+  const noted = await notedProcess(cluster);
+  if (noted === undefined) return;
+  if (noted.home === realpathSync(filesOf(cluster))) await stopCluster(cluster);
+  else if (noted.home !== undefined || noted.isDead) await rm(noteOf(cluster), { force: true });
+}
+
+/**
+ * Whether this cluster runs. The note alone proves nothing: after a restart of the machine its process id may be
+ * anybody's, so the process must also be at home in the cluster's folder.
+ * @param {Cluster} cluster
+ */
+async function isRunning(cluster) {
+  const noted = await notedProcess(cluster);
+  return noted !== undefined && noted.home === realpathSync(filesOf(cluster));
+}
+
+/**
+ * The process that PostgreSQL's own note names: the folder it works in (undefined: no such process, or not ours to see),
+ * and whether it is dead but not yet collected, as in a container whose first process collects nothing. PostgreSQL would
+ * take such a one for alive.
+ * @param {Cluster} cluster
+ */
+async function notedProcess(cluster) {
+  const note = await readFile(noteOf(cluster), 'utf8').catch(() => '');
+  const pid = Number(note.split('\n', 1)[0]);
+  if (!Number.isInteger(pid) || pid <= 0) return undefined;
+  // Asked as the cluster's account: a container's root may not look into another account's processes.
+  const { code, output } = await runCommand('readlink', [`/proc/${pid}/cwd`], { account: cluster.account });
+  const state = await readFile(`/proc/${pid}/stat`, 'utf8').catch(() => '');
+  return { home: code === 0 ? output.trim() : undefined, isDead: /\) Z /.test(state) };
+}
+
+/** @param {Cluster} cluster */
+async function beginLog(cluster) {
+  const log = logOf(cluster);
+  const size = await stat(log).then(
+    (stats) => stats.size,
+    () => 0,
+  );
+  if (size < 10_000_000) return size;
+  await rename(log, `${log}.1`);
+  return 0;
+}
+
+/** @param {Cluster} cluster */
+const readLog = (cluster) => readFile(logOf(cluster), 'utf8').catch(() => '');
+
+/**
+ * @param {Cluster} cluster
+ * @param {string} failed the sentence's beginning
+ * @param {string} program
+ * @param {string[]} args
+ * @param {string} [input]
+ */
+async function must(cluster, failed, program, args, input) {
+  const { code, output } = await run(cluster, program, args, input);
+  if (code !== 0) throw new StartProblem(postgresFailure(failed, output, cluster.place));
+  return output;
+}
+
+/**
+ * @param {Cluster} cluster
+ * @param {string} program
+ * @param {string[]} args
+ * @param {string} [input]
+ */
+function run({ programs, account }, program, args, input) {
+  const env = Object.fromEntries(Object.entries(process.env).filter(([name]) => !name.startsWith('PG')));
+  return runCommand(join(programs, program), args, { account, env: { ...env, LC_ALL: 'C' }, input });
+}
