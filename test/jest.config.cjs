@@ -6,6 +6,7 @@ const plain = {
   rootDir: root,
   testEnvironment: 'node',
   transform: {
+    '^.+\\.mjs$': '<rootDir>/test/support/plain-modules.cjs',
     '^.+\\.ts$': ['ts-jest', { tsconfig: '<rootDir>/test/tsconfig.jest.json', diagnostics: false }],
   },
   moduleNameMapper: { '^(\\.{1,2}/.*)\\.js$': '$1' },
