@@ -1,0 +1,50 @@
+import compression from 'compression';
+import cookieParser from 'cookie-parser';
+import express, { type Express } from 'express';
+import type { Logger } from 'pino';
+import type { DataSource } from 'typeorm';
+import { accessRoutes } from './access/access.routes';
+import { AccessService } from './access/access.service';
+import { AccessTokens } from './access/access-token';
+import { Tablets } from './access/tablets';
+import type { Config } from './config';
+import { healthRoutes } from './health/health.routes';
+import { answerErrors, answerUnknownAddress } from './http/answer-errors';
+import { logRequests } from './http/log-requests';
+import { mountRoutes } from './http/mount-routes';
+import type { Route } from './http/route';
+import { securityHeaders } from './http/security-headers';
+import { serveApp } from './http/serve-app';
+
+/** What the app is made of; nothing in here is opened or closed by it. */
+export interface AppDeps {
+  readonly config: Pick<Config, 'tokenSecret' | 'isDemo' | 'appDir' | 'tls' | 'publicUrl'>;
+  readonly database: DataSource;
+  readonly log: Logger;
+  readonly clock: () => Date;
+  readonly isStopping: () => boolean;
+}
+
+export interface App {
+  readonly express: Express;
+  /** Every route with its roles: what is mounted, what OpenAPI describes and what the tests walk. */
+  readonly routes: readonly Route[];
+}
+
+/** Wires the whole server together. No side effects. */
+export function createApp({ config, database, log, clock, isStopping }: AppDeps): App {
+  const accessTokens = new AccessTokens(config.tokenSecret, clock);
+  const routes: readonly Route[] = [
+    ...healthRoutes(database, isStopping),
+    ...accessRoutes(new AccessService(database, accessTokens, clock), new Tablets(database, clock), config),
+  ];
+  const app = express();
+  app.disable('x-powered-by');
+  const isHttps = config.tls !== undefined || config.publicUrl?.protocol === 'https:';
+  app.use(logRequests(log), ...securityHeaders({ isHttps }), compression(), cookieParser());
+  mountRoutes(app, routes, (authorization) => accessTokens.read(authorization));
+  app.use(serveApp(config.appDir));
+  app.use(answerUnknownAddress);
+  app.use(answerErrors(log));
+  return { express: app, routes };
+}
