@@ -42,13 +42,19 @@ export class Tablet {
   }
 
   /**
-   * Registers this tablet under a name, unless it is registered. Throws `ApiProblem` when the server cannot be
+   * Registers this tablet under a name (without one: by four signs of its key), unless it is registered. Throws `ApiProblem` when the server cannot be
    * reached or fails; a refusal (403) is a state, not an error.
    */
-  async register(label: string): Promise<TabletState> {
+  async register(name?: string): Promise<TabletState> {
     await this.read();
     if (this.row()?.tabletId !== undefined) return this.state();
     const row = this.row() ?? (await this.makeKeys());
+    const label =
+      name ??
+      `Tablet ${(row.publicKey.x ?? '')
+        .replace(/[^A-Za-z0-9]/g, '')
+        .slice(0, 4)
+        .toUpperCase()}`;
     try {
       const answer = await firstValueFrom(
         this.http.post<{ id: string; label: string }>('/api/tablets', { label, publicKey: row.publicKey }),
