@@ -1,5 +1,6 @@
 // @ts-check
 import { spawn } from 'node:child_process';
+import { once } from 'node:events';
 import { atStop } from './stopping.mjs';
 
 /**
@@ -13,7 +14,7 @@ import { atStop } from './stopping.mjs';
  * @property {string} [cwd] the root folder unless given: another account may not be able to enter ours
  * @property {NodeJS.ProcessEnv} [env]
  * @property {string} [input] what the program reads; nothing unless given
- * @property {number} [limitMs] ends the program after this long
+ * @property {boolean} [mustFinish] whether stopping everything waits for its end, since half of it would be worse
  */
 
 /**
@@ -30,15 +31,16 @@ import { atStop } from './stopping.mjs';
  * @returns {Promise<CommandResult>}
  */
 export function runCommand(program, args, options = {}) {
-  const { account = {}, cwd = '/', env = process.env, input, limitMs } = options;
+  const { account = {}, cwd = '/', env = process.env, input, mustFinish } = options;
   return new Promise((resolve) => {
     // A group of its own: the terminal's Ctrl-C reaches us alone, and we end things in order.
     const child = spawn(program, args, { cwd, env, detached: true, stdio: ['pipe', 'pipe', 'pipe'], ...account });
     let output = '';
-    const forget = atStop(() => endGroup(child.pid));
-    const timer = limitMs === undefined ? undefined : setTimeout(() => endGroup(child.pid), limitMs);
+    const forget = atStop(async () => {
+      if (mustFinish) await once(child, 'exit');
+      else endGroup(child.pid);
+    });
     const settle = (/** @type {number} */ code) => {
-      clearTimeout(timer);
       forget();
       child.stdout.destroy();
       child.stderr.destroy();

@@ -21,15 +21,6 @@ export async function openDatabase(root, dataFolder, settings, secrets) {
 }
 
 /**
- * The environment by which the compiled server and its commands find the database.
- * @param {DatabaseUrls} urls
- * @param {boolean} isDemo
- */
-export function databaseEnv(urls, isDemo) {
-  return { DATABASE_URL: urls.appUrl, DATABASE_OWNER_URL: urls.ownerUrl, BAYHAND_DEMO: isDemo ? '1' : '0' };
-}
-
-/**
  * Brings the tables up to date and puts the demo in once, by the compiled server's own command.
  * @param {string} root the checkout
  * @param {DatabaseUrls} urls
@@ -38,7 +29,12 @@ export function databaseEnv(urls, isDemo) {
 export async function prepareDatabase(root, urls, isDemo) {
   const { code, output } = await runCommand(process.execPath, [join(root, prepareFile)], {
     cwd: root,
-    env: { ...process.env, ...databaseEnv(urls, isDemo) },
+    env: {
+      ...process.env,
+      DATABASE_URL: urls.appUrl,
+      DATABASE_OWNER_URL: urls.ownerUrl,
+      BAYHAND_DEMO: isDemo ? '1' : '0',
+    },
   });
   if (code !== 0)
     throw new StartProblem(

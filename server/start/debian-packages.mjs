@@ -72,4 +72,5 @@ const installCommand = (packages) => `sudo sh -c 'apt-get update && apt-get inst
 const aptGet = (args) =>
   runCommand('apt-get', ['-o', 'DPkg::Lock::Timeout=300', ...args], {
     env: { ...process.env, DEBIAN_FRONTEND: 'noninteractive' },
+    mustFinish: true,
   });

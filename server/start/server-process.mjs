@@ -6,7 +6,6 @@ import { request as requestHttp } from 'node:http';
 import { request as requestHttps } from 'node:https';
 import { join } from 'node:path';
 import { setTimeout as wait } from 'node:timers/promises';
-import { databaseEnv } from './database.mjs';
 import { StartProblem, lastLines } from './sentences.mjs';
 import { atStop } from './stopping.mjs';
 
@@ -17,7 +16,8 @@ const readyLimitMs = 60_000;
 const stopLimitMs = 15_000;
 
 /**
- * The environment of the compiled server.
+ * The environment of the compiled server. The owner's way into the database is not part of it: who serves may not change
+ * tables.
  * @param {string} root the checkout
  * @param {import('./settings.mjs').StartSettings} settings
  * @param {import('./own-database.mjs').DatabaseUrls} urls
@@ -25,9 +25,11 @@ const stopLimitMs = 15_000;
  * @returns {NodeJS.ProcessEnv}
  */
 export function serverEnv(root, settings, urls, secrets) {
+  const { DATABASE_OWNER_URL: _, ...env } = process.env;
   return {
-    ...process.env,
-    ...databaseEnv(urls, settings.isDemo),
+    ...env,
+    DATABASE_URL: urls.appUrl,
+    BAYHAND_DEMO: settings.isDemo ? '1' : '0',
     NODE_ENV: 'production',
     HOST: settings.host,
     PORT: String(settings.port),
@@ -37,30 +39,37 @@ export function serverEnv(root, settings, urls, secrets) {
 }
 
 /**
- * Starts the compiled server and waits until it is ready. It is stopped when everything is.
+ * Starts the compiled server and waits until it is ready. It is stopped when everything is, or by what is returned.
  * @param {object} options
  * @param {string} options.root the checkout
  * @param {NodeJS.ProcessEnv} options.env
  * @param {string} options.log the file that takes its log; the one of the start before is kept beside it
  * @param {string} options.address where it will be, as `http://127.0.0.1:4310/`
+ * @param {boolean} [options.isOfOurGroup] whether what ends our group of processes ends it too; otherwise we alone do
  * @param {(pid: number) => void} [options.noteServer]
- * @returns {Promise<{ ended: Promise<number> }>} resolves to the exit code if it ends by itself
+ * @returns {Promise<{ ended: Promise<number>, stop: () => Promise<void> }>} `ended` resolves to the exit code
  */
-export async function startServer({ root, env, log, address, noteServer }) {
+export async function startServer({ root, env, log, address, isOfOurGroup = false, noteServer }) {
   if (existsSync(log)) renameSync(log, `${log}.1`);
   const file = openSync(log, 'a', 0o600);
   const child = spawn(process.execPath, [join(root, serverFile)], {
     cwd: root,
     env,
-    detached: true,
+    detached: !isOfOurGroup,
     stdio: ['ignore', file, file],
   });
   closeSync(file);
   const ended = once(child, 'exit').then(([code, signal]) => (signal === null ? Number(code) : 128));
-  atStop(() => stopServer(child, ended));
+  const forget = atStop(() => stopServer(child, ended));
   if (child.pid !== undefined) noteServer?.(child.pid);
   const first = await Promise.race([ended.then((code) => ({ code })), untilReady(address)]);
-  if (first === 'ready') return { ended };
+  if (first === 'ready') {
+    const stop = async () => {
+      forget();
+      await stopServer(child, ended);
+    };
+    return { ended, stop };
+  }
   const why = first === 'late' ? `was not ready within ${readyLimitMs / 1000} s` : `ended with code ${first.code}`;
   throw new StartProblem(
     `The server ${why}. The end of its log (${log}):\n${lastLines(readFileSync(log, 'utf8'))}\nMend that, then run the same command again.`,

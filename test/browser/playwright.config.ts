@@ -1,0 +1,28 @@
+import { defineConfig } from '@playwright/test';
+import { chromiumPath, chromiumSwitches } from './support/chromium';
+
+/** Real Chromium from Debian's packages, against servers that the tests start themselves. */
+export default defineConfig({
+  testDir: '.',
+  testMatch: '**/*.spec.ts',
+  outputDir: '../../test-results/browser',
+  globalSetup: './support/ensure-database.mjs',
+  // Two tablets at a time: as many as there are cores.
+  workers: 2,
+  fullyParallel: false,
+  retries: 0,
+  forbidOnly: true,
+  timeout: 60_000,
+  expect: { timeout: 10_000 },
+  reporter: [['list'], ['json', { outputFile: '../../test-results/browser.json' }]],
+  use: {
+    browserName: 'chromium',
+    headless: true,
+    launchOptions: { executablePath: chromiumPath, args: [...chromiumSwitches] },
+    // A tablet that lies on the fender.
+    viewport: { width: 1280, height: 800 },
+    locale: 'en-GB',
+    timezoneId: 'UTC',
+    trace: 'retain-on-failure',
+  },
+});
