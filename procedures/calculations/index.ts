@@ -11,6 +11,10 @@ export {
 } from './atmosphere';
 export { judge, type JudgedReading, type Verdict } from './decision';
 export { fitLine, fitRobustLine, type LineFit } from './fit';
+export { type RampSample } from './ramp-series';
+export { sealPointFromMarks, type SealMarks } from './seal-marks';
+export { findSealPoint } from './seal-point';
+export { type NoSealReason, type SealOptions, type SealPoint } from './seal-result';
 export { trackSensors, type SensorSeries, type SensorTracking, type Tracking } from './sensor-tracking';
 export { decodeTroubleCode, describeTroubleCode } from './trouble-code';
 export { expandedUncertainty, type UncertaintySources } from './uncertainty';

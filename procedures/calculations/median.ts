@@ -45,3 +45,26 @@ export function medianOf(values: ArrayLike<number>, from = 0, to = values.length
   for (let index = from; index < to; index++) copy[index - from] = values[index] ?? NaN;
   return medianInPlace(copy);
 }
+
+/**
+ * Gives the running median of five: a spike of one or two values leaves no trace, while an edge stays where it is. The
+ * first and last two values have the median of as many neighbours as there are on both sides. Linear time.
+ */
+export function runningMedianOfFive(values: Float64Array): Float64Array {
+  const n = values.length;
+  const medians = Float64Array.from(values);
+  for (const index of n < 3 ? [] : [1, n - 2]) medians[index] = medianOf(values, index - 1, index + 2);
+  let [a = NaN, b = NaN, c = NaN, d = NaN] = values;
+  for (let index = 2; index < n - 2; index++) {
+    const e = values[index + 2] ?? NaN;
+    // Of two ordered pairs the smaller minimum and the larger maximum cannot be the median of the five.
+    const low = Math.max(Math.min(a, b), Math.min(c, d));
+    const high = Math.min(Math.max(a, b), Math.max(c, d));
+    medians[index] = low > high ? Math.max(high, Math.min(low, e)) : Math.max(low, Math.min(high, e));
+    a = b;
+    b = c;
+    c = d;
+    d = e;
+  }
+  return medians;
+}
