@@ -1,8 +1,10 @@
+/** The public face of the engine: events and their chain, replay, deciding, and what a run's state gives to show. */
 export * from './run-event';
 export * from './run-state';
+export * from './run-command';
 export * from './series';
+export { applyEvent } from './apply-event';
 export { canonicalJson } from './canonical-json';
-export { sha256Hex } from './sha256';
 export {
   brokenLink,
   contentHash,
@@ -13,3 +15,26 @@ export {
   type ChainVerdict,
   type EventPlace,
 } from './chain';
+export { newCodesAgainst } from './compare-codes';
+export { cautionCount, decide } from './decide';
+export { coarseness, isOverdue } from './decide-gear';
+export { parseDecimal, tidyDecimal } from './figures';
+export { samplesOf, suggestMark, type MarkSuggestion } from './listening';
+export { openRun, type OpeningFacts } from './open-run';
+export {
+  expectedSteps,
+  previewListening,
+  previewReading,
+  routeAhead,
+  type ListeningPreview,
+  type ReadingPreview,
+  type WayAhead,
+} from './preview';
+export { previewBand, previewResults } from './preview-step';
+export { channelsOf, readsOf, resultsOf, takesNeeded } from './quantities';
+export { type Refusal, type ReplayResult } from './refusal';
+export { replay } from './replay';
+export { sha256Hex } from './sha256';
+export { renderCited, renderTemplate, shownUnit, type Citation } from './template';
+export { exitsOf, wayOn, type NamedExit } from './ways-on';
+export { composeWriteUp, writeUpParts, type WriteUp, type WriteUpPart } from './write-up';

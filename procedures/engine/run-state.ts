@@ -42,7 +42,9 @@ export interface RunState {
   readonly series: Readonly<Record<string, SeriesState>>;
   readonly codes: Readonly<Record<string, CodesState>>;
   readonly choices: Readonly<Record<string, ChoiceState>>;
-  /** How often each bounded branch was taken: `step/branch index` -> count. */
+  /** A step whose way is being overruled: its next `branch-taken` is the person's choice. */
+  readonly overruled: string | undefined;
+  /** How often each bounded branch was taken: `step/next-N` -> count. */
   readonly branchCounts: Readonly<Record<string, number>>;
   /** A limit was exceeded and not yet acknowledged. */
   readonly alarm: LimitAlarm | undefined;
@@ -92,6 +94,10 @@ export interface WalkedStep {
   /** The worst result among what was judged here, for the Route's bead. */
   readonly result?: JudgedResult;
   readonly notMeasured?: boolean;
+  /** The finding that the run headed for when the step was claimed. */
+  readonly verdictBefore?: string;
+  /** The claim was left without being done: by redoing another step, or because the way to it was overruled. */
+  readonly isLeft?: boolean;
   readonly way?: BranchTaken;
 }
 
@@ -158,7 +164,8 @@ export interface DisturbedItem {
 export interface SeriesState {
   readonly step: string;
   readonly seq: number;
-  readonly record: RunEventData['series-recorded'];
+  /** Absent while marks are placed and points are typed, before the series is kept. */
+  readonly record?: RunEventData['series-recorded'];
   readonly marks: Readonly<
     Partial<
       Record<'noise-begins' | 'noise-stops', { readonly timeS: number; readonly seq: number; readonly by: string }>

@@ -1,0 +1,74 @@
+import type { CompiledProcedure } from '../document';
+import { dropLastTake } from './apply-readings';
+import { requireStep } from './apply-walk';
+import { RefusedEvent } from './refusal';
+import type { EventOf } from './run-event';
+import type { RunState } from './run-state';
+
+export function overrule(procedure: CompiledProcedure, state: RunState, event: EventOf<'branch-overruled'>): RunState {
+  requireStep(procedure, event.data.step);
+  const at = findLastIndex(state.walked, (claim) => claim.step === event.data.step && claim.way !== undefined);
+  if (at < 0) throw new RefusedEvent('not-done', 'no way was taken from that step');
+  const overruled = state.walked[at];
+  const walked = state.walked.map((claim, index) => (index > at ? { ...claim, isLeft: true } : claim));
+  return {
+    ...state,
+    walked:
+      overruled === undefined ? walked : [...walked, { ...overruled, claimedSeq: event.seq, claimedAt: event.at }],
+    overruled: event.data.step,
+    verdict: overruled?.verdictBefore,
+    finding: undefined,
+    current: undefined,
+  };
+}
+
+export function redo(procedure: CompiledProcedure, state: RunState, event: EventOf<'step-redone'>): RunState {
+  requireStep(procedure, event.data.step);
+  const at = findLastIndex(state.walked, (claim) => claim.step === event.data.step);
+  const earlier = state.walked[at];
+  if (earlier === undefined) throw new RefusedEvent('not-done', 'that step was never walked');
+  const last = state.walked.length - 1;
+  return {
+    ...state,
+    walked: state.walked.map((claim, index) =>
+      index === last && claim.doneSeq === undefined ? { ...claim, isLeft: true } : claim,
+    ),
+    verdict: earlier.verdictBefore,
+    finding: undefined,
+    current: undefined,
+  };
+}
+
+function findLastIndex<T>(list: readonly T[], matches: (entry: T) => boolean): number {
+  for (let index = list.length - 1; index >= 0; index -= 1) {
+    const entry = list[index];
+    if (entry !== undefined && matches(entry)) return index;
+  }
+  return -1;
+}
+
+export function exceedLimit(procedure: CompiledProcedure, state: RunState, event: EventOf<'limit-exceeded'>): RunState {
+  const limit = procedure.document.limits.find((candidate) => candidate.id === event.data.limit);
+  if (limit === undefined) throw new RefusedEvent('unknown-name', `the procedure has no limit ${event.data.limit}`);
+  const { step: stepId, name, figure } = event.data;
+  const alarm = { seq: event.seq, step: stepId, limit: limit.id, name, figure, says: limit.says, then: limit.then };
+  return { ...dropLastTake(state, name), alarm };
+}
+
+export function reachFinding(
+  procedure: CompiledProcedure,
+  state: RunState,
+  event: EventOf<'finding-reached'>,
+): RunState {
+  const finding = requireStep(procedure, event.data.finding);
+  if (finding.kind !== 'finding') throw new RefusedEvent('unknown-step', `step ${finding.number} is no finding`);
+  const claim = {
+    step: finding.id,
+    claimedSeq: event.seq,
+    claimedAt: event.at,
+    doneSeq: event.seq,
+    doneAt: event.at,
+    result: finding.result,
+  };
+  return { ...state, current: undefined, verdict: finding.id, finding: finding.id, walked: [...state.walked, claim] };
+}

@@ -1,0 +1,81 @@
+import type { CompiledProcedure } from '../document';
+import { requireCurrent, requireStep } from './apply-walk';
+import { newCodesAgainst } from './compare-codes';
+import { own } from './environment';
+import { RefusedEvent } from './refusal';
+import type { EventOf } from './run-event';
+import type { RunState } from './run-state';
+
+export function acknowledge(state: RunState, event: EventOf<'caution-acknowledged'>): RunState {
+  const current = requireCurrent(state, event.data.step);
+  const acknowledged = [...new Set([...current.acknowledged, event.data.caution])];
+  return { ...state, current: { ...current, acknowledged } };
+}
+
+export function recordCodes(procedure: CompiledProcedure, state: RunState, event: EventOf<'codes-recorded'>): RunState {
+  const codesStep = requireStep(procedure, event.data.step);
+  requireCurrent(state, codesStep.id);
+  if (codesStep.kind !== 'codes' || codesStep.name !== event.data.name) {
+    throw new RefusedEvent('unknown-name', `step ${codesStep.number} takes no codes ${event.data.name}`);
+  }
+  const entry = { step: codesStep.id, seq: event.seq, codes: event.data.codes };
+  const earlier = codesStep.comparedWith === undefined ? undefined : own(state.codes, codesStep.comparedWith);
+  const truth =
+    codesStep.newCodes === undefined
+      ? {}
+      : {
+          [codesStep.newCodes]: {
+            holds: newCodesAgainst(earlier?.codes ?? [], event.data.codes).length > 0,
+            step: codesStep.id,
+            seq: event.seq,
+          },
+        };
+  return {
+    ...state,
+    codes: { ...state.codes, [codesStep.name]: entry },
+    truths: { ...state.truths, ...truth },
+  };
+}
+
+export function runTimer(state: RunState, event: EventOf<'timer-started'> | EventOf<'timer-ended'>): RunState {
+  const current = requireCurrent(state, event.data.step);
+  if (event.type === 'timer-started') {
+    const timer = {
+      startedAt: event.at,
+      startedElapsed: event.elapsed,
+      seconds: event.data.seconds,
+      ended: false,
+      certain: true,
+    };
+    return { ...state, current: { ...current, timer } };
+  }
+  if (current.timer === undefined) throw new RefusedEvent('not-done', 'the timer was never started');
+  return { ...state, current: { ...current, timer: { ...current.timer, ended: true, certain: event.data.certain } } };
+}
+
+export function makeChoice(procedure: CompiledProcedure, state: RunState, event: EventOf<'choice-made'>): RunState {
+  const { step: stepId, name, options, text } = event.data;
+  const chosen = requireStep(procedure, stepId);
+  requireCurrent(state, stepId);
+  if ((chosen.kind !== 'choice' && chosen.kind !== 'drive') || chosen.name !== name) {
+    throw new RefusedEvent('unknown-name', `step ${chosen.number} takes no choice ${name}`);
+  }
+  const offered = chosen.kind === 'choice' ? chosen.options : chosen.windows;
+  if (options.some((option) => !offered.some((candidate) => candidate.name === option))) {
+    throw new RefusedEvent('unknown-name', `step ${chosen.number} does not offer that option`);
+  }
+  const truths = Object.fromEntries(
+    offered.map((option) => [option.name, { holds: options.includes(option.name), step: stepId, seq: event.seq }]),
+  );
+  const labels = offered.filter((option) => options.includes(option.name)).map((option) => option.label);
+  const choice = { step: stepId, seq: event.seq, options, labels, ...(text === undefined ? {} : { text }) };
+  return { ...state, truths: { ...state.truths, ...truths }, choices: { ...state.choices, [name]: choice } };
+}
+
+export function disturb(procedure: CompiledProcedure, state: RunState, event: EventOf<'disturbed'>): RunState {
+  const { step: stepId, item, label } = event.data;
+  const declared = requireStep(procedure, stepId).disturbs?.find((candidate) => candidate.item === item);
+  if (declared === undefined) throw new RefusedEvent('unknown-name', `${item} is not disturbed by that step`);
+  const rest = state.disturbed.filter((candidate) => candidate.item !== item);
+  return { ...state, disturbed: [...rest, { item, label, restore: declared.restore, step: stepId, seq: event.seq }] };
+}

@@ -1,0 +1,110 @@
+import { isUnit } from '../calculations';
+import type { ListenStep } from '../document';
+import { CannotDo, type Drafting } from './drafting';
+import { own } from './environment';
+import { completeStep } from './go-on';
+import { brokenLimit } from './limits';
+import { analyseListening } from './listening';
+import type { RunCommand } from './run-command';
+import type { Series } from './series';
+
+type Import = Extract<RunCommand, { do: 'import-series' }>;
+type Mark = Extract<RunCommand, { do: 'mark' }>;
+
+/** Keeps a series with the step and holds every sample against the limits. */
+export function importSeries(drafting: Drafting, step: ListenStep, { record, series }: Import): void {
+  const missing = step.channels.filter(
+    (channel) => channel.needed && !series.channels.some((candidate) => candidate.name === channel.name),
+  );
+  if (missing.length > 0) {
+    const labels = missing.map(({ label }) => label.toLowerCase()).join(' and ');
+    throw new CannotDo(
+      'missing-channel',
+      `The series has no ${labels}. Choose its column, or take another file.`,
+      'channels',
+    );
+  }
+  if (series.timeS.length < 3)
+    throw new CannotDo('too-short', 'The series has fewer than three samples. Take another file.', 'file');
+  drafting.add({ type: 'series-recorded', data: { ...record, step: step.id, name: step.name } });
+  const worst = worstSample(drafting, step, series);
+  if (worst !== undefined) {
+    drafting.add({
+      type: 'limit-exceeded',
+      data: { step: step.id, limit: worst.limit, name: worst.name, figure: { text: worst.text, unit: 'kPa' } },
+    });
+  }
+}
+
+/** The highest sample of the first channel that breaks a limit. */
+function worstSample(
+  drafting: Drafting,
+  step: ListenStep,
+  series: Series,
+): { readonly limit: string; readonly name: string; readonly text: string } | undefined {
+  for (const channel of series.channels) {
+    const authored = step.channels.find((candidate) => candidate.name === channel.name);
+    if (authored === undefined || !isUnit(channel.unit)) continue;
+    const highest = channel.values.reduce<number>(
+      (most, value) => (value === undefined ? most : Math.max(most, value)),
+      Number.NEGATIVE_INFINITY,
+    );
+    if (!Number.isFinite(highest)) continue;
+    const sense = authored.sense === undefined ? {} : { sense: authored.sense };
+    const broken = brokenLimit(drafting.procedure, drafting.state, {
+      name: channel.name,
+      value: highest,
+      unit: channel.unit,
+      ...sense,
+    });
+    if (broken !== undefined) return { limit: broken.id, name: channel.name, text: highest.toFixed(1) };
+  }
+  return undefined;
+}
+
+/** Places one of the two marks; the noise cannot stop before it began. */
+export function placeMark(drafting: Drafting, step: ListenStep, { mark, timeS, by }: Mark): void {
+  const marks = own(drafting.state.series, step.name)?.marks ?? {};
+  const begins = mark === 'noise-begins' ? timeS : marks['noise-begins']?.timeS;
+  const stops = mark === 'noise-stops' ? timeS : marks['noise-stops']?.timeS;
+  if (!(timeS >= 0)) throw new CannotDo('no-time', 'The mark lies before the series begins.', 'timeS');
+  if (begins !== undefined && stops !== undefined && stops <= begins) {
+    throw new CannotDo('mark-order', 'Noise stops must lie after noise begins. Move one of the marks.', 'timeS');
+  }
+  drafting.add({ type: 'mark-placed', data: { step: step.id, series: step.name, mark, timeS, by } });
+}
+
+export function takeMarkAway(drafting: Drafting, step: ListenStep, mark: Mark['mark']): void {
+  const seq = own(drafting.state.series, step.name)?.marks[mark]?.seq;
+  if (seq === undefined) throw new CannotDo('no-mark', 'There is no such mark to take away.');
+  drafting.add({ type: 'undone', data: { seq, reason: 'mark taken away' } });
+}
+
+/** Computes what is to be found, names it, and goes on. */
+export function finishListening(drafting: Drafting, step: ListenStep, series: Series): void {
+  if (own(drafting.state.series, step.name)?.record === undefined) {
+    throw new CannotDo(
+      'no-series',
+      'Type at least three points of the ramp, or take the file from the scan tool, first.',
+      'series',
+    );
+  }
+  const { found } = analyseListening(drafting.state, step, series);
+  for (const { quantity, figure } of found) {
+    drafting.add({
+      type: 'reading-recorded',
+      data: {
+        step: step.id,
+        name: quantity.name,
+        figure: {
+          text: figure.text,
+          unit: quantity.unit,
+          ...(quantity.sense === undefined ? {} : { sense: quantity.sense }),
+        },
+        source: 'computed',
+        uncertainty: figure.uncertaintyText,
+      },
+    });
+  }
+  completeStep(drafting, step);
+}

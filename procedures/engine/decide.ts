@@ -1,0 +1,253 @@
+import type { CompiledProcedure, Step } from '../document';
+import { isComplete, recordTake } from './decide-readings';
+import { finishListening, importSeries, placeMark, takeMarkAway } from './decide-listening';
+import { close, keepWriteUp, leavePause, leaveStop, overrule, pause, redo } from './decide-run';
+import { chooseGear, requireGear } from './decide-gear';
+import { CannotDo, Drafting } from './drafting';
+import { completeStep } from './go-on';
+import { exitsOf } from './ways-on';
+import type { Outcome, RunCommand } from './run-command';
+import { RefusedEvent } from './refusal';
+import type { RunState } from './run-state';
+
+/** What may be done while the run waits, before its current step's cautions, or under an alarm. */
+const always: ReadonlySet<RunCommand['do']> = new Set(['stop', 'note', 'resume', 'leave-stop', 'set-aside']);
+const beforeCautions: ReadonlySet<RunCommand['do']> = new Set([
+  ...always,
+  'acknowledge-caution',
+  'choose-gear',
+  'not-sure',
+  'redo',
+  'overrule',
+  'cannot-measure',
+  'restore',
+  'keep-write-up',
+  'close',
+  'unmark',
+]);
+
+/**
+ * Decides what a command means as the run stands: the events to write, in order, or why it cannot be done, in words
+ * that say how to go on. Writes nothing and knows no clock.
+ */
+export function decide(procedure: CompiledProcedure, state: RunState, command: RunCommand): Outcome {
+  const drafting = new Drafting(procedure, state);
+  try {
+    requireOpen(state, command);
+    perform(drafting, command);
+    return { ok: true, drafts: drafting.drafts };
+  } catch (error) {
+    if (error instanceof CannotDo) {
+      const { code, message, field } = error;
+      return { ok: false, code, message, ...(field === undefined ? {} : { field }) };
+    }
+    // The reducer refuses what has no place in the run; a RangeError is a figure outside of a calculation's range.
+    if (error instanceof RefusedEvent || error instanceof RangeError) {
+      return { ok: false, code: 'refused', message: `This cannot be done here: ${error.message}.` };
+    }
+    throw error;
+  }
+}
+
+function requireOpen(state: RunState, command: RunCommand): void {
+  if (state.status === 'closed' || state.status === 'signed') {
+    throw new CannotDo('closed', 'The run is closed. What is to be added now is an amendment.');
+  }
+  if (state.alarm !== undefined && command.do !== 'acknowledge-limit' && command.do !== 'stop') {
+    throw new CannotDo('alarm', `${state.alarm.says} ${state.alarm.then} Acknowledge it first.`);
+  }
+  if (state.status !== 'open' && !always.has(command.do)) {
+    throw new CannotDo('not-open', 'The run is not open: go back to its step first.');
+  }
+}
+
+function perform(drafting: Drafting, command: RunCommand): void {
+  switch (command.do) {
+    case 'note':
+      return note(drafting, command);
+    case 'stop':
+    case 'set-aside':
+    case 'not-sure':
+      return pause(drafting, command);
+    case 'resume':
+      return leavePause(drafting);
+    case 'leave-stop':
+      return leaveStop(drafting, command.how);
+    case 'acknowledge-limit':
+      return acknowledgeLimit(drafting);
+    case 'redo':
+      return redo(drafting, command);
+    case 'overrule':
+      return overrule(drafting, command);
+    case 'restore':
+      return restore(drafting, command.item);
+    case 'keep-write-up':
+      return keepWriteUp(drafting, command);
+    case 'close':
+      return close(drafting);
+    default:
+      return performInStep(drafting, command);
+  }
+}
+
+function performInStep(drafting: Drafting, command: RunCommand): void {
+  const step = currentStep(drafting);
+  if (!beforeCautions.has(command.do)) requireCautions(drafting, step);
+  switch (command.do) {
+    case 'acknowledge-caution':
+      return acknowledgeCaution(drafting, step, command.caution);
+    case 'choose-gear':
+      return chooseGear(drafting, command);
+    case 'confirm':
+      return confirm(drafting, step);
+    case 'record':
+      return recordTake(drafting, step, command);
+    case 'choose':
+      return choose(drafting, step, command);
+    case 'record-codes':
+      if (step.kind !== 'codes') throw wrongKind(step);
+      drafting.add({ type: 'codes-recorded', data: { step: step.id, name: step.name, codes: command.codes } });
+      return completeStep(drafting, step);
+    case 'start-timer':
+      if (step.kind !== 'hold') throw wrongKind(step);
+      return drafting.add({ type: 'timer-started', data: { step: step.id, seconds: step.seconds } });
+    case 'end-timer':
+      return endTimer(drafting, step, command.certain);
+    case 'cannot-measure':
+      return cannotMeasure(drafting, step, command.reason);
+    case 'import-series':
+      if (step.kind !== 'listen') throw wrongKind(step);
+      return importSeries(drafting, step, command);
+    case 'mark':
+      if (step.kind !== 'listen') throw wrongKind(step);
+      return placeMark(drafting, step, command);
+    case 'unmark':
+      if (step.kind !== 'listen') throw wrongKind(step);
+      return takeMarkAway(drafting, step, command.mark);
+    case 'finish-listening':
+      if (step.kind !== 'listen') throw wrongKind(step);
+      return finishListening(drafting, step, command.series);
+    default:
+      throw wrongKind(step);
+  }
+}
+
+function currentStep(drafting: Drafting): Step {
+  const { current } = drafting.state;
+  const step = current === undefined ? undefined : drafting.procedure.step(current.id);
+  if (step === undefined)
+    throw new CannotDo('no-step', 'The run has reached its finding: nothing is left to do in a step.');
+  return step;
+}
+
+function wrongKind(step: Step): CannotDo {
+  return new CannotDo('wrong-kind', `Step ${step.number} does not take that.`);
+}
+
+/** How many cautions gate a step: the start card's hold throughout, the others are the step's own. */
+export function cautionCount(procedure: CompiledProcedure, step: Step): number {
+  return step.kind === 'start'
+    ? procedure.document.start.throughout.length + (step.cautions?.length ?? 0)
+    : (step.cautions?.length ?? 0);
+}
+
+function requireCautions(drafting: Drafting, step: Step): void {
+  const acknowledged = drafting.state.current?.acknowledged.length ?? 0;
+  if (acknowledged < cautionCount(drafting.procedure, step)) {
+    throw new CannotDo('caution-first', 'Read the caution first and say so.');
+  }
+}
+
+function acknowledgeCaution(drafting: Drafting, step: Step, caution: number): void {
+  if (!Number.isInteger(caution) || caution < 0 || caution >= cautionCount(drafting.procedure, step)) {
+    throw new CannotDo('no-caution', `Step ${step.number} has no such caution.`);
+  }
+  if (drafting.state.current?.acknowledged.includes(caution)) return;
+  drafting.add({ type: 'caution-acknowledged', data: { step: step.id, caution } });
+}
+
+function confirm(drafting: Drafting, step: Step): void {
+  switch (step.kind) {
+    case 'start':
+      requireGear(drafting);
+      return completeStep(drafting, step);
+    case 'action':
+    case 'compute':
+      return completeStep(drafting, step);
+    case 'restore':
+      if (drafting.state.disturbed.length > 0) {
+        throw new CannotDo(
+          'still-disturbed',
+          `Still to be put back: ${drafting.state.disturbed.map(({ label }) => label).join(', ')}.`,
+        );
+      }
+      return completeStep(drafting, step);
+    case 'reading':
+    case 'wait':
+      if (!isComplete(drafting, step)) throw new CannotDo('not-complete', 'Enter what the step asks for first.');
+      return completeStep(drafting, step);
+    default:
+      throw new CannotDo('not-complete', 'Enter what the step asks for first.');
+  }
+}
+
+function choose(drafting: Drafting, step: Step, { options, text }: Extract<RunCommand, { do: 'choose' }>): void {
+  if (step.kind !== 'choice' && step.kind !== 'drive') throw wrongKind(step);
+  if (step.kind === 'choice') {
+    if (options.length === 0)
+      throw new CannotDo('choose-one', 'Choose what you see. If it cannot be seen, say so below.', 'options');
+    if (options.length > 1 && step.several !== true) throw new CannotDo('choose-one', 'Choose one only.', 'options');
+    const asked = step.options.find((option) => options.includes(option.name) && option.ask !== undefined);
+    if (asked?.ask !== undefined && (text ?? '').trim() === '') throw new CannotDo('say-which', asked.ask, 'text');
+  }
+  const words = (text ?? '').trim();
+  drafting.add({
+    type: 'choice-made',
+    data: { step: step.id, name: step.name, options, ...(words === '' ? {} : { text: words }) },
+  });
+  completeStep(drafting, step);
+}
+
+function endTimer(drafting: Drafting, step: Step, certain: boolean): void {
+  if (step.kind !== 'hold') throw wrongKind(step);
+  if (drafting.state.current?.timer === undefined) throw new CannotDo('no-timer', 'Start the clock first.');
+  drafting.add({ type: 'timer-ended', data: { step: step.id, certain } });
+  if (certain) completeStep(drafting, step);
+}
+
+function cannotMeasure(drafting: Drafting, step: Step, reason: string): void {
+  if (!('cannotMeasure' in step))
+    throw new CannotDo(
+      'wrong-kind',
+      'There is nothing to be measured in this step. If it cannot be done, stop the test or ask the lead.',
+    );
+  const why = reason.trim();
+  if (why === '') throw new CannotDo('say-why', 'Say in a few words why it cannot be measured.', 'reason');
+  drafting.add({ type: 'not-measurable', data: { step: step.id, reason: why } });
+  const exit = exitsOf(drafting.procedure, step).find((candidate) => candidate.exit === 'cannot-measure');
+  completeStep(drafting, step, exit);
+}
+
+function restore(drafting: Drafting, item: string): void {
+  if (!drafting.state.disturbed.some((candidate) => candidate.item === item)) {
+    throw new CannotDo('not-disturbed', 'That is back in its place already.');
+  }
+  const { current } = drafting.state;
+  const step = current === undefined ? undefined : drafting.procedure.step(current.id);
+  if (step !== undefined) requireCautions(drafting, step);
+  drafting.add({ type: 'restored', data: { step: step?.id ?? drafting.state.finding ?? '', item } });
+  if (step?.kind === 'restore' && drafting.state.disturbed.length === 0) completeStep(drafting, step);
+}
+
+function acknowledgeLimit(drafting: Drafting): void {
+  const { alarm } = drafting.state;
+  if (alarm === undefined) throw new CannotDo('no-alarm', 'No limit is exceeded.');
+  drafting.add({ type: 'alert-acknowledged', data: { seq: alarm.seq } });
+}
+
+function note(drafting: Drafting, { text, isMargin }: Extract<RunCommand, { do: 'note' }>): void {
+  const words = text.trim();
+  if (words === '') throw new CannotDo('empty', 'Write the note first.', 'text');
+  const step = drafting.state.current?.id ?? drafting.state.finding ?? '';
+  drafting.add({ type: isMargin === true ? 'margin-note-written' : 'note-written', data: { step, text: words } });
+}

@@ -1,0 +1,28 @@
+import { toBase } from '../calculations';
+import type { Environment, JudgedResult } from '../document';
+import type { NamedValue, RunState } from './run-state';
+
+/** What expressions see of a run: its values, truths and inputs, with `extra` values laid over them. */
+export function environmentOf(
+  state: Pick<RunState, 'values' | 'truths' | 'inputs' | 'verdict' | 'header'>,
+  extra: Readonly<Record<string, Pick<NamedValue, 'value' | 'uncertainty' | 'judgement'>>> = {},
+): Environment {
+  const value = (name: string): Pick<NamedValue, 'value' | 'uncertainty' | 'judgement'> | undefined => {
+    const known = own(extra, name) ?? own(state.values, name);
+    if (known !== undefined) return known;
+    const input = own(state.inputs, name);
+    return input === undefined ? undefined : { value: toBase(Number(input.text), input.unit), uncertainty: 0 };
+  };
+  return {
+    number: (name) => value(name)?.value,
+    uncertainty: (name) => value(name)?.uncertainty,
+    result: (name): JudgedResult | undefined => value(name)?.judgement?.result,
+    isMeasured: (name) => value(name) !== undefined,
+    truth: (name) => own(state.truths, name)?.holds ?? (state.verdict === name || state.header.half === name),
+  };
+}
+
+/** The record's own member: names come from documents, so `constructor` must not find the prototype's. */
+export function own<T>(record: Readonly<Record<string, T>>, name: string): T | undefined {
+  return Object.hasOwn(record, name) ? record[name] : undefined;
+}

@@ -1,0 +1,37 @@
+import type { Step } from '../document';
+import { CannotDo, type Drafting } from './drafting';
+import { renderTemplate } from './template';
+import { branchData, wayOn, type NamedExit } from './ways-on';
+
+/** Completes the current step: what it disturbs, its results, the way its conditions lead to, and the next claim. */
+export function completeStep(drafting: Drafting, step: Step, forced?: NamedExit): void {
+  const { procedure } = drafting;
+  for (const { item, label } of step.disturbs ?? []) {
+    drafting.add({ type: 'disturbed', data: { step: step.id, item, label } });
+  }
+  drafting.add({ type: 'step-done', data: { step: step.id } });
+  const exit = forced ?? wayOn(procedure, drafting.state, step);
+  if (exit === undefined)
+    throw new CannotDo('no-way-on', `Step ${step.number} has no way on. Set the run aside and tell the lead.`);
+  takeExit(drafting, step, exit);
+}
+
+/** Takes one exit: the branch, then the next step's claim or the finding. */
+export function takeExit(drafting: Drafting, step: Step, exit: NamedExit): void {
+  const { procedure } = drafting;
+  const data = branchData(procedure, drafting.state, step, exit);
+  const target = procedure.step(data.to);
+  if (target === undefined) {
+    throw new CannotDo(
+      'no-way-on',
+      `Step ${step.number} leads to ${data.to}, which this version does not have. Set the run aside and tell the lead.`,
+    );
+  }
+  drafting.add({ type: 'branch-taken', data });
+  if (target.kind === 'finding') {
+    const verdict = renderTemplate(procedure, drafting.state, target.verdict) ?? target.title;
+    drafting.add({ type: 'finding-reached', data: { finding: target.id, verdict } });
+  } else {
+    drafting.add({ type: 'step-claimed', data: { step: target.id } });
+  }
+}

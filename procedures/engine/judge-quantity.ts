@@ -1,0 +1,60 @@
+import { fromBase, judge } from '../calculations';
+import type { CompiledProcedure, Environment, Quantity } from '../document';
+import { decimalsOf, fixed } from './figures';
+import type { Judgement } from './run-state';
+
+/**
+ * Judges a value (base units, expanded uncertainty k = 2) against its quantity's band: in, out or too close to call,
+ * guarded on both sides. Undefined where the quantity has no band. A band whose condition does not hold, or whose
+ * ends need a value that was never measured, is not judged, and says so.
+ */
+export function judgeQuantity(
+  procedure: CompiledProcedure,
+  quantity: Quantity,
+  value: number,
+  uncertainty: number,
+  environment: Environment,
+): Judgement | undefined {
+  const band = quantity.band;
+  if (band === undefined) return undefined;
+  const low = endOf(procedure, band.low, environment);
+  const high = endOf(procedure, band.high, environment);
+  const ends = {
+    ...(low === undefined ? {} : { low, lowText: endText(low, quantity) }),
+    ...(high === undefined ? {} : { high, highText: endText(high, quantity) }),
+    source: band.source,
+  };
+  const isMissing = (band.low !== undefined && low === undefined) || (band.high !== undefined && high === undefined);
+  const isJudged = band.when === undefined || truthOf(procedure, band.when, environment) === true;
+  if (isMissing || !isJudged) {
+    return { ...ends, unjudged: band.unjudged ?? 'Not judged: what its band needs was not measured.' };
+  }
+  return {
+    ...ends,
+    result: judge({
+      value,
+      uncertainty,
+      ...(low === undefined ? {} : { low }),
+      ...(high === undefined ? {} : { high }),
+    }),
+  };
+}
+
+function endOf(procedure: CompiledProcedure, source: string | undefined, environment: Environment): number | undefined {
+  if (source === undefined) return undefined;
+  const outcome = procedure.expression(source).evaluate(environment);
+  return outcome.ok && typeof outcome.value === 'number' ? outcome.value : undefined;
+}
+
+/** Whether the condition holds; undefined where it needs something that was never measured. */
+export function truthOf(procedure: CompiledProcedure, source: string, environment: Environment): boolean | undefined {
+  const outcome = procedure.expression(source).evaluate(environment);
+  return outcome.ok && typeof outcome.value === 'boolean' ? outcome.value : undefined;
+}
+
+/** A band's end as people read it: as many decimals as needed, at most two, at least one where it is not whole. */
+function endText(end: number, quantity: Quantity): string {
+  const shown = fromBase(end, quantity.unit);
+  const text = String(Number(shown.toFixed(2)));
+  return decimalsOf(text) === 0 && !Number.isInteger(shown) ? fixed(shown, 1) : text;
+}

@@ -1,0 +1,32 @@
+import type { CompiledProcedure, Quantity } from '../document';
+import { environmentOf } from './environment';
+import { judgeQuantity } from './judge-quantity';
+import { evaluateResult } from './measure-quantity';
+import { resultsOf } from './quantities';
+import type { Judgement, NamedValue, RunState } from './run-state';
+
+/** A quantity's band as the run stands, before there is a value: its ends and where they come from. */
+export function previewBand(
+  procedure: CompiledProcedure,
+  state: RunState,
+  quantity: Quantity,
+): Omit<Judgement, 'result'> | undefined {
+  const judgement = judgeQuantity(procedure, quantity, 0, 0, environmentOf(state));
+  if (judgement === undefined) return undefined;
+  const { result: _ofNothing, ...band } = judgement;
+  return band;
+}
+
+/** What the current step would compute if it were done now: its results in order, those that can be evaluated. */
+export function previewResults(procedure: CompiledProcedure, state: RunState): readonly NamedValue[] {
+  const step = state.current === undefined ? undefined : procedure.step(state.current.id);
+  if (step === undefined) return [];
+  const provenance = { step: step.id, seq: state.seq, at: state.lastAt };
+  let known = state;
+  return resultsOf(step).flatMap((result) => {
+    const value = evaluateResult(procedure, known, result, provenance);
+    if (value === undefined) return [];
+    known = { ...known, values: { ...known.values, [value.name]: value } };
+    return [value];
+  });
+}

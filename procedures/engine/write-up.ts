@@ -1,0 +1,75 @@
+import type { CompiledProcedure, FindingStep, Sentence } from '../document';
+import { environmentOf } from './environment';
+import { truthOf } from './judge-quantity';
+import type { RunState } from './run-state';
+import { renderCited, type Citation } from './template';
+
+/** One part of a write-up, sentence by sentence with what each one rests on. */
+export interface WriteUpPart {
+  readonly text: string;
+  readonly sentences: readonly { readonly text: string; readonly cites: readonly Citation[] }[];
+}
+
+export interface WriteUp {
+  readonly concern: WriteUpPart;
+  readonly cause: WriteUpPart;
+  readonly correction: WriteUpPart;
+  readonly customer: WriteUpPart;
+  readonly deference: string;
+}
+
+export const writeUpParts = ['concern', 'cause', 'correction', 'customer'] as const;
+
+/**
+ * Composes concern, cause and correction from what was measured. Each number stands with the step that it comes from;
+ * a sentence whose value was never measured, or whose condition does not hold, is left out.
+ */
+export function composeWriteUp(procedure: CompiledProcedure, state: RunState): WriteUp {
+  const finding = state.finding === undefined ? undefined : procedure.step(state.finding);
+  const authored: Pick<FindingStep, 'cause' | 'correction' | 'customer'> =
+    finding?.kind === 'finding' ? finding : { cause: [], correction: [], customer: [] };
+  const verdict: Sentence[] = finding?.kind === 'finding' ? [{ text: finding.verdict }] : [];
+  return {
+    concern: part(procedure, state, [...concernOf(state), ...codesOf(procedure)], true),
+    cause: part(procedure, state, [...verdict, ...authored.cause], true),
+    correction: part(procedure, state, [...authored.correction, ...testedBy(procedure, state)], true),
+    customer: part(procedure, state, authored.customer, false),
+    deference: procedure.document.deference,
+  };
+}
+
+function concernOf(state: RunState): readonly Sentence[] {
+  const { visit } = state;
+  const odometer = `${visit.odometer.text} ${visit.odometer.unit}`;
+  return [{ text: `${visit.car}, RO ${visit.repairOrder}, ${odometer}: ${endStop(visit.concern)}` }];
+}
+
+/** The first codes step tells what stood before anything was touched. */
+function codesOf(procedure: CompiledProcedure): readonly Sentence[] {
+  const first = procedure.document.steps.find((step) => step.kind === 'codes');
+  return first === undefined ? [] : [{ text: `Trouble codes before the test: {${first.name}}.` }];
+}
+
+function testedBy(procedure: CompiledProcedure, state: RunState): readonly Sentence[] {
+  const instruments = Object.values(state.gear).map(({ label }) => label);
+  const gear = instruments.length === 0 ? '' : ` with ${instruments.join(', ')}`;
+  return [{ text: `Tested by ${procedure.document.title}, version ${state.header.version}${gear}.` }];
+}
+
+function part(
+  procedure: CompiledProcedure,
+  state: RunState,
+  sentences: readonly Sentence[],
+  cite: boolean,
+): WriteUpPart {
+  const environment = environmentOf(state);
+  const rendered = sentences
+    .filter(({ when }) => when === undefined || truthOf(procedure, when, environment) === true)
+    .flatMap(({ text }) => renderCited(procedure, state, text, { cite }) ?? []);
+  return { text: rendered.map(({ text }) => text).join(' '), sentences: rendered };
+}
+
+function endStop(text: string): string {
+  const tidy = text.trim();
+  return /[.!?]$/.test(tidy) ? tidy : `${tidy}.`;
+}
