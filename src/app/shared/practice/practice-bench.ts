@@ -1,0 +1,42 @@
+import type { TroubleCodeEntry } from '../../../../procedures/engine';
+import type { UnitName } from '../../../../procedures/calculations';
+import type { BenchEntry } from './practice-scenario';
+
+/** An instrument shows a figure. */
+export function shows(name: string, label: string, text: string, unit: UnitName): BenchEntry {
+  return { what: 'figure', name, label, text, unit };
+}
+
+/** Something is seen or heard. */
+export function seen(text: string): BenchEntry {
+  return { what: 'seen', text };
+}
+
+/** The scan tool lists trouble codes. */
+export function lists(...codes: readonly TroubleCodeEntry[]): BenchEntry {
+  return { what: 'codes', codes };
+}
+
+/** The air of the place is the same in all scenarios: 93.9 kPa at 640 m. */
+export const airOfThePlace: readonly BenchEntry[] = [
+  shows('altimeterSetting', 'Altimeter setting of the next airfield', '1014', 'hPa'),
+  shows('barometerPressure', 'Barometer', '93.9', 'kPa'),
+];
+
+export const coldTemperatures: readonly BenchEntry[] = [
+  shows('coolantTemperature', 'Scan tool, coolant', '14', 'degC'),
+  shows('ambientTemperature', 'Thermometer, air around the car', '13', 'degC'),
+];
+
+/** The two sensors, key on and engine off, as the scan tool shows them. */
+export function sensorsAtRest(manifold: string, boost: string): Readonly<Record<string, readonly BenchEntry[]>> {
+  return {
+    'manifold-pressure': [shows('manifoldPressure', 'Scan tool, manifold pressure', manifold, 'kPa')],
+    'boost-pressure': [shows('boostPressure', 'Scan tool, boost pressure', boost, 'kPa')],
+  };
+}
+
+export const gaugeBackAtZero: readonly BenchEntry[] = [shows('gaugeLeft', 'Gauge of the supply', '0.0', 'kPa')];
+
+/** The place of every practice run. */
+export const practicePlace = { name: 'Practice bay', elevationM: '640' } as const;
