@@ -7,6 +7,8 @@ import { accessRoutes } from './access/access.routes';
 import { AccessService } from './access/access.service';
 import { AccessTokens } from './access/access-token';
 import { Tablets } from './access/tablets';
+import { AttachmentsService } from './attachments/attachments.service';
+import { attachmentsRoutes } from './attachments/attachments.routes';
 import type { Config } from './config';
 import { healthRoutes } from './health/health.routes';
 import { answerErrors, answerUnknownAddress } from './http/answer-errors';
@@ -15,6 +17,17 @@ import { mountRoutes } from './http/mount-routes';
 import type { Route } from './http/route';
 import { securityHeaders } from './http/security-headers';
 import { serveApp } from './http/serve-app';
+import { withOpenApi } from './openapi/openapi.routes';
+import { proceduresRoutes } from './procedures/procedures.routes';
+import { CompiledProcedures, ProceduresService } from './procedures/procedures.service';
+import { recordsRoutes } from './records/records.routes';
+import { RecordsService } from './records/records.service';
+import { Countersigner } from './sync/countersigner';
+import { RunIntake } from './sync/run-intake';
+import { ServerKeys } from './sync/server-keys';
+import { syncRoutes } from './sync/sync.routes';
+import { SyncService } from './sync/sync.service';
+import { VisitsService } from './visits/visits.service';
 
 /** What the app is made of; nothing in here is opened or closed by it. */
 export interface AppDeps {
@@ -22,6 +35,8 @@ export interface AppDeps {
   readonly database: DataSource;
   readonly log: Logger;
   readonly clock: () => Date;
+  /** Which build of the core computes here. */
+  readonly build: string;
   readonly isStopping: () => boolean;
 }
 
@@ -32,12 +47,19 @@ export interface App {
 }
 
 /** Wires the whole server together. No side effects. */
-export function createApp({ config, database, log, clock, isStopping }: AppDeps): App {
+export function createApp({ config, database, log, clock, build, isStopping }: AppDeps): App {
   const accessTokens = new AccessTokens(config.tokenSecret, clock);
-  const routes: readonly Route[] = [
+  const tablets = new Tablets(database, clock);
+  const countersigner = new Countersigner(new ServerKeys(config.tokenSecret, clock), clock);
+  const runs = new RunIntake(database, new CompiledProcedures(), countersigner, clock, build);
+  const routes = withOpenApi([
     ...healthRoutes(database, isStopping),
-    ...accessRoutes(new AccessService(database, accessTokens, clock), new Tablets(database, clock), config),
-  ];
+    ...accessRoutes(new AccessService(database, accessTokens, clock), tablets, config),
+    ...syncRoutes(new SyncService(database, tablets, new VisitsService(database, clock), runs)),
+    ...attachmentsRoutes(new AttachmentsService(database, clock)),
+    ...proceduresRoutes(new ProceduresService(database, clock)),
+    ...recordsRoutes(new RecordsService(database)),
+  ]);
   const app = express();
   app.disable('x-powered-by');
   const isHttps = config.tls !== undefined || config.publicUrl?.protocol === 'https:';

@@ -3,6 +3,7 @@ import { createServer as createHttpsServer } from 'node:https';
 import type { AddressInfo } from 'node:net';
 import { pino, type Logger } from 'pino';
 import { createApp } from './app';
+import { coreBuild } from './build-identity';
 import { loadConfig, ConfigProblem, type Config } from './config';
 import { createDataSource } from './database/data-source';
 import { databaseSentence } from './database/database-sentence';
@@ -25,7 +26,7 @@ export async function start(config: Config, log: Logger, clock: () => Date = () 
   try {
     await refuseUnpreparedDatabase(database);
     let isStopping = false;
-    const app = createApp({ config, database, log, clock, isStopping: () => isStopping });
+    const app = createApp({ config, database, log, clock, build: coreBuild(), isStopping: () => isStopping });
     const server =
       config.tls === undefined ? createHttpServer(app.express) : createHttpsServer(config.tls, app.express);
     const port = await listen(server, config);

@@ -1,11 +1,10 @@
 import { IsIn, IsInt, IsOptional, IsString, IsUUID, MaxLength, MinLength } from 'class-validator';
+import { PlainText } from '../http/plain-text';
 import { everyRole, type Role } from '../http/route';
 import { Nested } from '../http/validated';
 
 export class SignInRequest {
-  @IsString()
-  @MinLength(1)
-  @MaxLength(100)
+  @PlainText({ min: 1, max: 100 })
   declare name: string;
 
   @IsString()
@@ -86,9 +85,7 @@ export class PublicKeyJwk {
 }
 
 export class TabletRequest {
-  @IsString()
-  @MinLength(1)
-  @MaxLength(60)
+  @PlainText({ min: 1, max: 60 })
   declare label: string;
 
   @Nested(() => PublicKeyJwk)

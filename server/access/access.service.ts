@@ -1,4 +1,4 @@
-import type { DataSource } from 'typeorm';
+import { In, type DataSource, type EntityManager } from 'typeorm';
 import { WrongNameOrPassword } from '../http/problem';
 import type { Principal } from '../http/route';
 import { Person } from './access.entity';
@@ -58,4 +58,19 @@ export class AccessService {
 
 function principalOf(person: Person): Principal {
   return { personId: person.id, displayName: person.displayName, role: person.role, siteId: person.siteId };
+}
+
+/** What of a person is on every tablet. */
+export type ColleagueOnTheWire = Readonly<Pick<Person, 'id' | 'displayName' | 'role'>>;
+
+/** The people, or those of these ids. */
+export async function peopleForPull(
+  manager: EntityManager,
+  ids?: readonly string[],
+): Promise<readonly ColleagueOnTheWire[]> {
+  const people = await manager.find(Person, {
+    ...(ids === undefined ? {} : { where: { id: In(ids) } }),
+    order: { name: 'ASC' },
+  });
+  return people.map(({ id, displayName, role }) => ({ id, displayName, role }));
 }

@@ -15,7 +15,7 @@ export interface Principal {
 /** What a route takes besides its address. `document` is a JSON object that the feature itself checks. */
 export type RouteBody<B extends object> =
   | { readonly kind: 'json'; readonly dto: Dto<B>; readonly limitBytes: number }
-  | { readonly kind: 'document'; readonly limitBytes: number }
+  | { readonly kind: 'document'; readonly describedBy?: Dto<object>; readonly limitBytes: number }
   | { readonly kind: 'bytes'; readonly limitBytes: number };
 
 /** What a route says of itself: how its input is checked and how OpenAPI describes it. */
@@ -23,8 +23,8 @@ export interface RouteSays<B extends object, Q extends object> {
   readonly summary: string;
   readonly body?: RouteBody<B>;
   readonly query?: Dto<Q>;
-  /** Status -> the class of the answer's body, or words where there is none. */
-  readonly answers: Readonly<Record<number, Dto<object> | string>>;
+  /** Status -> the class of the answer's body (in brackets: a list of them), or words where there is none. */
+  readonly answers: Readonly<Record<number, Dto<object> | readonly [Dto<object>] | string>>;
 }
 
 /** One request, checked: rights first, then size, then shape. */

@@ -1,0 +1,80 @@
+import { IsArray, IsIn, IsInt, IsISO8601, IsObject, IsOptional, IsString, IsUUID } from 'class-validator';
+import type { ProcedureDocument } from '../../procedures/document';
+import { PlainText } from '../http/plain-text';
+import { Nested } from '../http/validated';
+
+export class VersionSummary {
+  @IsInt()
+  declare version: number;
+
+  @IsIn(['published', 'withdrawn'])
+  declare status: 'published' | 'withdrawn';
+
+  @IsISO8601()
+  declare publishedAt: string;
+
+  /** The person's name as records show it. */
+  @IsString()
+  declare publishedBy: string;
+
+  @IsString()
+  declare contentHash: string;
+}
+
+export class DraftSummary {
+  @IsUUID()
+  declare id: string;
+
+  @IsISO8601()
+  declare importedAt: string;
+
+  @IsString()
+  declare importedBy: string;
+
+  /** Always empty: a document with problems is not kept. */
+  @IsArray()
+  declare problems: never[];
+}
+
+export class ProcedureSummary {
+  @IsString()
+  declare id: string;
+
+  @IsString()
+  declare title: string;
+
+  @Nested(() => VersionSummary, { each: true })
+  declare versions: VersionSummary[];
+
+  @IsOptional()
+  @Nested(() => DraftSummary)
+  declare draft?: DraftSummary;
+}
+
+export class DraftAnswer {
+  @IsUUID()
+  declare id: string;
+
+  @IsString()
+  declare procedureId: string;
+
+  @IsArray()
+  declare problems: never[];
+}
+
+/** A published version without its document. */
+export class PublicationAnswer extends VersionSummary {
+  @IsString()
+  declare id: string;
+}
+
+/** A published version on the wire. */
+export class PublishedProcedure extends PublicationAnswer {
+  @IsObject()
+  declare document: ProcedureDocument;
+}
+
+export class WithdrawalRequest {
+  @PlainText({ min: 1, max: 1000 })
+  declare reason: string;
+}

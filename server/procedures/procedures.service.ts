@@ -1,0 +1,121 @@
+import { IsNull, type DataSource, type EntityManager } from 'typeorm';
+import { v7 as uuidv7 } from 'uuid';
+import { canonicalJson, sha256Hex } from '../../procedures/engine';
+import { Person } from '../access/access.entity';
+import { noteChange } from '../database/change-log';
+import { Conflict, NotFound } from '../http/problem';
+import type { Principal } from '../http/route';
+import { checkedDocument } from './checked-document';
+import type { DraftAnswer, ProcedureSummary, PublicationAnswer } from './procedures.dto';
+import { ProcedureDraft, ProcedureVersion, ProcedureWithdrawal } from './procedures.entity';
+import { summariesOf } from './summaries';
+
+export { PublishedProcedure } from './procedures.dto';
+export { publishedVersion, type PublishedVersion } from './published-version';
+export { publishedProcedures } from './published-procedures';
+export { CompiledProcedures } from './compiled-procedures';
+
+/** Drafts, and what becomes of them: versions that never change, and their withdrawal. */
+export class ProceduresService {
+  constructor(
+    private readonly database: DataSource,
+    private readonly clock: () => Date,
+  ) {}
+
+  list(): Promise<readonly ProcedureSummary[]> {
+    return summariesOf(this.database.manager);
+  }
+
+  /** Keeps a document as a draft, in place of an earlier one that was not published. Throws `Invalid`; then nothing is kept. */
+  async importDraft(sent: object, person: Principal): Promise<DraftAnswer> {
+    const document = checkedDocument(sent);
+    const text = canonicalJson(document);
+    const draft = {
+      id: uuidv7(),
+      procedureId: document.id,
+      title: document.title,
+      document: text,
+      contentHash: sha256Hex(text),
+      importedBy: person.personId,
+      importedAt: this.clock(),
+    };
+    await this.database.transaction(async (manager) => {
+      await manager.delete(ProcedureDraft, { procedureId: document.id, publishedVersion: IsNull() });
+      await manager.insert(ProcedureDraft, draft);
+    });
+    return { id: draft.id, procedureId: document.id, problems: [] };
+  }
+
+  /** Publishes a draft as the next version. Throws `NotFound`, or `Conflict` when it, or just that, is published. */
+  async publish(draftId: string, person: Principal): Promise<PublicationAnswer> {
+    return this.database.transaction(async (manager) => {
+      const draft = await manager.findOne(ProcedureDraft, {
+        where: { id: draftId },
+        lock: { mode: 'pessimistic_write' },
+      });
+      if (draft === null) throw new NotFound('There is no such draft.');
+      if (draft.publishedVersion !== null)
+        throw new Conflict(`This draft is version ${draft.publishedVersion} already.`);
+      // Two drafts of one procedure at once would both take the same number.
+      await manager.query('SELECT pg_advisory_xact_lock(hashtextextended($1, 0))', [`procedure/${draft.procedureId}`]);
+      const version = await this.nextVersion(manager, draft);
+      const published = {
+        procedureId: draft.procedureId,
+        version,
+        title: draft.title,
+        document: draft.document,
+        contentHash: draft.contentHash,
+        publishedBy: person.personId,
+        publishedAt: this.clock(),
+      };
+      await manager.insert(ProcedureVersion, published);
+      await manager.update(ProcedureDraft, { id: draftId }, { publishedVersion: version });
+      await noteChange(manager, 'procedure', `${draft.procedureId}/${version}`);
+      return {
+        id: draft.procedureId,
+        version,
+        status: 'published',
+        publishedAt: published.publishedAt.toISOString(),
+        publishedBy: await this.nameOf(manager, person),
+        contentHash: draft.contentHash,
+      };
+    });
+  }
+
+  /** Says that a version must start no new run. Throws `NotFound`, or `Conflict` when that was said before. */
+  async withdraw(procedureId: string, version: number, reason: string, person: Principal): Promise<void> {
+    await this.database.transaction(async (manager) => {
+      if (!(await manager.existsBy(ProcedureVersion, { procedureId, version }))) {
+        throw new NotFound('There is no such version.');
+      }
+      const withdrawn: unknown[] = await manager.query(
+        `INSERT INTO procedure_withdrawal (procedure_id, version, reason, withdrawn_by, withdrawn_at)
+         VALUES ($1, $2, $3, $4, $5) ON CONFLICT DO NOTHING RETURNING version`,
+        [procedureId, version, reason, person.personId, this.clock()],
+      );
+      if (withdrawn.length === 0) throw new Conflict('This version is withdrawn already.');
+      await noteChange(manager, 'procedure', `${procedureId}/${version}`);
+    });
+  }
+
+  private async nextVersion(manager: EntityManager, draft: ProcedureDraft): Promise<number> {
+    const latest = await manager.findOne(ProcedureVersion, {
+      where: { procedureId: draft.procedureId },
+      order: { version: 'DESC' },
+    });
+    if (latest === null) return 1;
+    const isWithdrawn = await manager.existsBy(ProcedureWithdrawal, {
+      procedureId: latest.procedureId,
+      version: latest.version,
+    });
+    if (latest.contentHash === draft.contentHash && !isWithdrawn) {
+      throw new Conflict(`Version ${latest.version} says exactly the same.`);
+    }
+    return latest.version + 1;
+  }
+
+  private async nameOf(manager: EntityManager, { personId, displayName }: Principal): Promise<string> {
+    const person = await manager.findOneBy(Person, { id: personId });
+    return person?.displayName ?? displayName;
+  }
+}

@@ -1,0 +1,61 @@
+import type { EntityManager } from 'typeorm';
+import type { ProcedureSummary, VersionSummary } from './procedures.dto';
+
+interface VersionRow {
+  procedure_id: string;
+  version: number;
+  title: string;
+  content_hash: string;
+  published_at: Date;
+  published_by: string;
+  is_withdrawn: boolean;
+}
+
+interface DraftRow {
+  id: string;
+  procedure_id: string;
+  title: string;
+  imported_at: Date;
+  imported_by: string;
+}
+
+/** Every procedure with its versions, newest first, and the draft that waits. Without documents, which are large. */
+export async function summariesOf(manager: EntityManager): Promise<readonly ProcedureSummary[]> {
+  const versions = await manager.query<VersionRow[]>(
+    `SELECT v.procedure_id, v.version, v.title, v.content_hash, v.published_at, p.display_name AS published_by,
+       EXISTS (SELECT FROM procedure_withdrawal w WHERE (w.procedure_id, w.version) = (v.procedure_id, v.version))
+         AS is_withdrawn
+     FROM procedure_version v JOIN person p ON p.id = v.published_by
+     ORDER BY v.procedure_id, v.version DESC`,
+  );
+  const drafts = await manager.query<DraftRow[]>(
+    `SELECT d.id, d.procedure_id, d.title, d.imported_at, p.display_name AS imported_by
+     FROM procedure_draft d JOIN person p ON p.id = d.imported_by
+     WHERE d.published_version IS NULL ORDER BY d.imported_at`,
+  );
+  const ids = new Set([...versions, ...drafts].map((row) => row.procedure_id));
+  return [...ids].sort().map((id) => {
+    const own = versions.filter((row) => row.procedure_id === id);
+    const draft = drafts.findLast((row) => row.procedure_id === id);
+    return {
+      id,
+      title: own[0]?.title ?? draft?.title ?? id,
+      versions: own.map(versionSummary),
+      ...(draft === undefined ? {} : { draft: draftSummary(draft) }),
+    };
+  });
+}
+
+function versionSummary(row: VersionRow): VersionSummary {
+  return {
+    version: row.version,
+    status: row.is_withdrawn ? 'withdrawn' : 'published',
+    publishedAt: row.published_at.toISOString(),
+    publishedBy: row.published_by,
+    contentHash: row.content_hash,
+  };
+}
+
+function draftSummary(row: DraftRow): NonNullable<ProcedureSummary['draft']> {
+  return { id: row.id, importedAt: row.imported_at.toISOString(), importedBy: row.imported_by, problems: [] };
+}

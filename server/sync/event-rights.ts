@@ -1,0 +1,69 @@
+import type { RunEvent, RunEventType } from '../../procedures/engine';
+import { everyRole, type Role } from '../http/route';
+
+const atTheCar: readonly Role[] = ['technician', 'lead', 'apprentice'];
+const leads: readonly Role[] = ['lead'];
+
+/**
+ * Whose event each type may be. A manager reads records and makes none; releasing and deciding about a new version are
+ * the lead's.
+ */
+const whoMay: Readonly<Record<RunEventType, readonly Role[]>> = {
+  opened: atTheCar,
+  'gear-chosen': atTheCar,
+  'step-claimed': atTheCar,
+  'step-done': atTheCar,
+  'caution-acknowledged': atTheCar,
+  'reading-recorded': atTheCar,
+  'not-measurable': atTheCar,
+  'not-applicable': atTheCar,
+  predicted: atTheCar,
+  'series-recorded': atTheCar,
+  'mark-placed': atTheCar,
+  'codes-recorded': atTheCar,
+  'timer-started': atTheCar,
+  'timer-ended': atTheCar,
+  'choice-made': atTheCar,
+  'photo-attached': atTheCar,
+  'note-written': everyRole,
+  'margin-note-written': atTheCar,
+  disturbed: atTheCar,
+  restored: atTheCar,
+  'branch-taken': atTheCar,
+  'branch-overruled': atTheCar,
+  'step-redone': atTheCar,
+  undone: atTheCar,
+  'lead-called': atTheCar,
+  released: leads,
+  'set-aside': atTheCar,
+  resumed: atTheCar,
+  'handed-over': atTheCar,
+  'limit-exceeded': atTheCar,
+  'alert-raised': atTheCar,
+  'alert-acknowledged': atTheCar,
+  stopped: atTheCar,
+  'version-notice-answered': leads,
+  'finding-reached': atTheCar,
+  'write-up-written': atTheCar,
+  closed: atTheCar,
+  verified: atTheCar,
+  signed: everyRole,
+  amended: everyRole,
+  joined: everyRole,
+  'clock-jumped': everyRole,
+  transcribed: everyRole,
+};
+
+export function isEventType(type: unknown): type is RunEventType {
+  return typeof type === 'string' && Object.hasOwn(whoMay, type);
+}
+
+/** Why this event may not be its actor's; undefined when it may. `role` is undefined for a person whom nobody knows. */
+export function missingRight(event: RunEvent, role: Role | undefined): string | undefined {
+  if (role === undefined) return `event ${event.seq} is by a person who has no account here`;
+  const isReview = event.type === 'signed' && event.data.meaning === 'reviewed';
+  const mayDo = isReview ? (['lead', 'manager'] as const) : whoMay[event.type];
+  return mayDo.some((allowed) => allowed === role)
+    ? undefined
+    : `event ${event.seq} (${event.type}) is by a ${role}, whose it can not be`;
+}
