@@ -11,7 +11,14 @@ import { RefusedEvent } from './refusal';
 import type { RunState } from './run-state';
 
 /** What may be done while the run waits, before its current step's cautions, or under an alarm. */
-const always: ReadonlySet<RunCommand['do']> = new Set(['stop', 'note', 'resume', 'leave-stop', 'set-aside']);
+const always: ReadonlySet<RunCommand['do']> = new Set([
+  'stop',
+  'note',
+  'resume',
+  'leave-stop',
+  'set-aside',
+  'acknowledge-limit',
+]);
 const beforeCautions: ReadonlySet<RunCommand['do']> = new Set([
   ...always,
   'acknowledge-caution',
