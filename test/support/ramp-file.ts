@@ -67,6 +67,11 @@ export function withChannel(
   };
 }
 
+/** The same ramp without one channel. */
+export function withoutChannel(series: Series, name: Series['channels'][number]['name']): Series {
+  return { ...series, channels: series.channels.filter((channel) => channel.name !== name) };
+}
+
 /** The ramp up to the moment at which the gauge first shows more than `gaugeKpa`. */
 export function endedAt(series: Series, gaugeKpa: number): Series {
   const gauge = series.channels.find((channel) => channel.name === 'gauge')?.values ?? [];
