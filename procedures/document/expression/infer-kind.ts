@@ -138,7 +138,7 @@ class KindReader {
     const first = kinds[0] ?? plainNumber;
     switch (node.calls) {
       case 'abs':
-        if (first.sense === 'absolute') throw new Unfit(node, `abs takes a difference, not ${kindInWords(first)}.`);
+        if (first.sense === 'absolute') throw new Unfit(node, `\`abs\` takes a difference, not ${kindInWords(first)}.`);
         return first;
       case 'min':
       case 'max':

@@ -14,8 +14,8 @@ export function parseExpression(source: string): Parsed {
   const scanned = tokenise(source);
   if (!scanned.ok) return scanned;
   const { tokens } = scanned;
-  const gap = missingOperator(tokens);
-  if (gap !== undefined) return { ok: false, problem: gap };
+  const misplaced = missingOperator(tokens) ?? missingValue(tokens);
+  if (misplaced !== undefined) return { ok: false, problem: misplaced };
   const skeleton = skeletonOf(tokens);
   let tree: GrammarNode;
   try {
@@ -64,6 +64,22 @@ function missingOperator(tokens: readonly Token[]): ExpressionProblem | undefine
     if (!ends || !(begins || isOpening)) continue;
     const message = 'Between these two stands no operator. Write + - * /, a comparison, and, or.';
     return { start: before.start, end: token.end, message };
+  }
+  return undefined;
+}
+
+/** A word operator where a value should stand, which mathjs would take for a name. */
+function missingValue(tokens: readonly Token[]): ExpressionProblem | undefined {
+  for (const [index, token] of tokens.entries()) {
+    if (token.token !== 'sign' || !['and', 'or', 'not'].includes(token.sign)) continue;
+    const before = tokens[index - 1];
+    const hasLeft = before !== undefined && (before.token !== 'sign' || before.sign === ')');
+    const after = tokens[index + 1];
+    const hasRight = after !== undefined && (after.token !== 'sign' || ['(', '-', '+', 'not'].includes(after.sign));
+    const { start, end } = token;
+    if (token.sign !== 'not' && !hasLeft)
+      return { start, end, message: `Before \`${token.sign}\` a value is missing.` };
+    if (!hasRight) return { start, end, message: `After \`${token.sign}\` a value is missing.` };
   }
   return undefined;
 }
