@@ -9,9 +9,12 @@ export {
   type AltimeterReport,
   type StationPressureSource,
 } from './atmosphere';
+export { channelQuantity, type ChannelQuantity } from './channel-quantity';
 export { judge, type JudgedReading, type Verdict } from './decision';
 export { fitLine, fitRobustLine, type LineFit } from './fit';
+export { parseScanLog } from './parse-scan-log';
 export { type RampSample } from './ramp-series';
+export { type LogChannel, type LogHints, type LogProblem, type ScanLog } from './scan-log';
 export { sealPointFromMarks, type SealMarks } from './seal-marks';
 export { findSealPoint } from './seal-point';
 export { type NoSealReason, type SealOptions, type SealPoint } from './seal-result';

@@ -1,0 +1,104 @@
+import { channelQuantity } from './channel-quantity';
+import { isNothing, numberIn, type CellStyle } from './log-cells';
+import { unitNamed } from './log-units';
+import { type LogProblem, type ScanLog } from './scan-log';
+
+/** So many problems are told one by one; a file that has more has one cause. */
+const toldProblems = 100;
+
+interface ChannelDraft {
+  readonly name: string;
+  unit: string | undefined;
+  readonly values: (number | undefined)[];
+  readonly refused: LogProblem[];
+  readonly firstLine: number;
+}
+
+const numberWithUnit = /^([+-]?[\d.,]+(?:e[+-]?\d+)?)\s*([^\d\s].*)$/i;
+
+const shortened = (text: string): string => (text.length > 40 ? `${text.slice(0, 40)}...` : text);
+
+/** Puts a log together row by row, in the order of the file. */
+export class LogBuilder {
+  private readonly channels = new Map<string, ChannelDraft>();
+  private readonly timesS: number[] = [];
+  private readonly problems: LogProblem[] = [];
+
+  constructor(private readonly style: CellStyle) {}
+
+  report(line: number, what: string): void {
+    this.problems.push({ line, what });
+  }
+
+  /** The time of the last row, or undefined before the first. */
+  get lastTimeS(): number | undefined {
+    return this.timesS.at(-1);
+  }
+
+  /** Opens a sample at this time, or goes back to it when it is that of the last one. Times never fall. */
+  openSample(timeS: number): void {
+    if (timeS !== this.lastTimeS) this.timesS.push(timeS);
+  }
+
+  /** Puts a cell into the open sample; gives false when the channel has a value there already. */
+  put(name: string, unit: string | undefined, cell: string, line: number): boolean {
+    if (name === '') return true;
+    const channel = this.channelOf(name, unit, line);
+    const sample = this.timesS.length - 1;
+    if (isNothing(cell)) return true;
+    const value = this.readNumber(channel, cell);
+    if (value === undefined) {
+      channel.refused.push({ line, what: `${name}: "${shortened(cell)}" is no number` });
+      return true;
+    }
+    if (channel.values[sample] !== undefined) return channel.values[sample] === value;
+    while (channel.values.length < sample) channel.values.push(undefined);
+    channel.values[sample] = value;
+    return true;
+  }
+
+  /** The log, with time from 0; channels without a single number are left out. */
+  finish(): ScanLog {
+    const startS = this.timesS[0] ?? 0;
+    const drafts = [...this.channels.values()];
+    const kept = drafts.filter(({ values }) => values.some((value) => value !== undefined));
+    for (const { name, values, refused, firstLine } of drafts) {
+      if (values.some((value) => value !== undefined)) for (const problem of refused) this.problems.push(problem);
+      else if (refused.length > 0) this.report(firstLine, `${name} holds words and no numbers: left out`);
+    }
+    return {
+      channels: kept.map(({ name, unit }) => ({ name, unit, quantity: channelQuantity(name) })),
+      // Decimal times differ by binary dust; a microsecond is finer than any logger's clock.
+      timeS: this.timesS.map((timeS) => Math.round((timeS - startS) * 1e6) / 1e6),
+      values: kept.map(({ values }) => Array.from(this.timesS, (_, sample) => values[sample])),
+      problems: this.toldProblems(),
+    };
+  }
+
+  private toldProblems(): LogProblem[] {
+    const ordered = this.problems.sort((first, second) => first.line - second.line);
+    const more = ordered.length - toldProblems;
+    const next = ordered[toldProblems];
+    if (next === undefined) return ordered;
+    return [...ordered.slice(0, toldProblems), { line: next.line, what: `and ${more} more from here on` }];
+  }
+
+  private channelOf(name: string, unit: string | undefined, line: number): ChannelDraft {
+    const known = this.channels.get(name);
+    if (known !== undefined) return known;
+    const channel: ChannelDraft = { name, unit, values: [], refused: [], firstLine: line };
+    this.channels.set(name, channel);
+    return channel;
+  }
+
+  /** Reads a number, or a number with its unit beside it; the first such unit becomes the channel's. */
+  private readNumber(channel: ChannelDraft, cell: string): number | undefined {
+    const value = numberIn(cell, this.style.decimalMark);
+    if (value !== undefined) return value;
+    const [, figures = '', unitText = ''] = numberWithUnit.exec(cell) ?? [];
+    const unit = unitNamed(unitText);
+    if (unit === undefined || (channel.unit !== undefined && channel.unit !== unit)) return undefined;
+    channel.unit = unit;
+    return numberIn(figures, this.style.decimalMark);
+  }
+}

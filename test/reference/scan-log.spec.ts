@@ -1,0 +1,37 @@
+import { readFileSync } from 'node:fs';
+import { join } from 'node:path';
+import { parseScanLog } from '../../procedures/calculations';
+
+interface LogTruth {
+  readonly file: string;
+  readonly note: string;
+  readonly samples: number;
+  readonly durationS: number;
+  readonly channels: { match: string; unit: string; at: { t: number; v: number }[] }[];
+}
+
+const folder = join(__dirname, 'logs');
+const truths = JSON.parse(readFileSync(join(folder, 'truth.json'), 'utf8')) as LogTruth[];
+
+describe('logs in the layouts that are met in the trade (common practice, no source)', () => {
+  it.each(truths.map((truth) => [`${truth.file}: ${truth.note}`, truth] as const))('%s', (_title, truth) => {
+    const log = parseScanLog(new Uint8Array(readFileSync(join(folder, truth.file))));
+    expect(log.problems).toEqual([]);
+    expect(log.timeS).toHaveLength(truth.samples);
+    expect(log.timeS[0]).toBe(0);
+    expect(log.timeS.at(-1)).toBeCloseTo(truth.durationS, 6);
+    expect(log.timeS.every((timeS, index) => index === 0 || timeS > log.timeS[index - 1]!)).toBe(true);
+    for (const { match, unit, at } of truth.channels) {
+      const channel = log.channels.findIndex(({ name }) => name.toLowerCase().includes(match));
+      expect(log.channels[channel]?.unit).toBe(unit);
+      for (const { t, v } of at) {
+        const sample = log.timeS.findIndex((timeS) => Math.abs(timeS - t) < 1e-6);
+        expect(log.values[channel]?.[sample]).toBe(v);
+      }
+    }
+  });
+
+  it('has six files to look at', () => {
+    expect(truths).toHaveLength(6);
+  });
+});
