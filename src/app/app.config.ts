@@ -1,13 +1,32 @@
-import { type ApplicationConfig, isDevMode, provideBrowserGlobalErrorListeners } from '@angular/core';
-import { provideRouter, withComponentInputBinding } from '@angular/router';
+import { provideHttpClient, withFetch, withInterceptors } from '@angular/common/http';
+import { type ApplicationConfig, ErrorHandler, isDevMode, provideBrowserGlobalErrorListeners } from '@angular/core';
+import {
+  provideRouter,
+  TitleStrategy,
+  withComponentInputBinding,
+  withInMemoryScrolling,
+  withRouterConfig,
+} from '@angular/router';
 import { provideServiceWorker } from '@angular/service-worker';
 import { routes } from './app.routes';
+import { PageTitle } from './core/page-title';
+import { problemInterceptor } from './core/problem-interceptor';
+import { sessionInterceptor } from './core/session-interceptor';
+import { UnexpectedErrors } from './core/unexpected-errors';
 
 /** What the whole app shares. */
 export const appConfig: ApplicationConfig = {
   providers: [
     provideBrowserGlobalErrorListeners(),
-    provideRouter(routes, withComponentInputBinding()),
+    { provide: ErrorHandler, useExisting: UnexpectedErrors },
+    provideRouter(
+      routes,
+      withComponentInputBinding(),
+      withRouterConfig({ paramsInheritanceStrategy: 'always' }),
+      withInMemoryScrolling({ scrollPositionRestoration: 'top' }),
+    ),
+    { provide: TitleStrategy, useExisting: PageTitle },
+    provideHttpClient(withFetch(), withInterceptors([sessionInterceptor, problemInterceptor])),
     provideServiceWorker('ngsw-worker.js', { enabled: !isDevMode() }),
   ],
 };

@@ -1,11 +1,55 @@
-import { ChangeDetectionStrategy, Component } from '@angular/core';
-import { RouterOutlet } from '@angular/router';
+import { afterNextRender, ChangeDetectionStrategy, Component, inject, Injector, signal } from '@angular/core';
+import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
+import { NavigationEnd, Router, RouterOutlet } from '@angular/router';
+import { filter, take } from 'rxjs';
+import { AppUpdate } from './core/app-update';
+import { HandSetting } from './core/hand-setting';
+import { StorageRoom } from './core/storage-room';
+import { Sync } from './core/sync';
+import { Theme } from './core/theme';
+import { UnexpectedErrors } from './core/unexpected-errors';
 
-/** The root: everything else is a lazy route. */
+/** The root: everything else is a lazy route. What goes wrong unexpectedly is said here, over any page. */
 @Component({
   selector: 'bay-root',
   imports: [RouterOutlet],
-  template: '<router-outlet />',
+  templateUrl: './app.html',
+  styleUrl: './app.css',
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
-export class App {}
+export class App {
+  private readonly injector = inject(Injector);
+  private readonly router = inject(Router);
+  private readonly errors = inject(UnexpectedErrors);
+  protected readonly update = inject(AppUpdate);
+
+  protected readonly hasArrived = signal(false);
+  protected readonly trouble = this.errors.shown;
+
+  constructor() {
+    inject(Theme);
+    inject(HandSetting);
+    this.router.events
+      .pipe(
+        filter((event) => event instanceof NavigationEnd),
+        take(1),
+        takeUntilDestroyed(),
+      )
+      .subscribe(() => this.hasArrived.set(true));
+    afterNextRender(() => this.startInBackground());
+  }
+
+  protected reload(): void {
+    this.update.take();
+  }
+
+  protected dismiss(): void {
+    this.errors.dismiss();
+  }
+
+  private startInBackground(): void {
+    void this.injector.get(Sync).start();
+    void this.injector.get(StorageRoom).secure();
+    this.update.start();
+  }
+}

@@ -69,7 +69,7 @@ export class Session {
     try {
       const answer = await firstValueFrom(this.http.post<SessionAnswer>('/api/session', body, outsideSession()));
       await this.settings.forget(signedOutKey);
-      await this.accept(answer);
+      await this.accept(answer, tablet);
       return { ok: true };
     } catch (error) {
       if (error instanceof ApiProblem) return refusalOf(error);
@@ -116,21 +116,21 @@ export class Session {
       return;
     }
     this.last.set(await this.settings.read<RememberedPerson>(rememberedKey));
-    const renewed = this.refresh();
-    if (this.last() === undefined) {
-      await renewed;
-      if (this.status() === 'starting') this.status.set('signed-out');
-      return;
-    }
     const patience = new Promise<'late'>((resolve) => setTimeout(() => resolve('late'), startPatienceMs));
-    const first = await Promise.race([renewed, patience]);
-    if (first === 'late' && this.status() === 'starting') this.goOnOffline();
+    await Promise.race([this.refresh(), patience]);
+    if (this.status() !== 'starting') return;
+    if (this.last() === undefined) this.status.set('signed-out');
+    else this.goOnOffline();
   }
 
   private async renew(): Promise<string | undefined> {
     try {
-      const answer = await firstValueFrom(this.http.post<SessionAnswer>('/api/session/refresh', {}, outsideSession()));
-      await this.accept(answer);
+      const tablet = this.last()?.tablet;
+      const body = tablet === undefined ? {} : { tablet };
+      const answer = await firstValueFrom(
+        this.http.post<SessionAnswer>('/api/session/refresh', body, outsideSession()),
+      );
+      await this.accept(answer, tablet);
       return this.token?.text;
     } catch (error) {
       if (!(error instanceof ApiProblem)) throw error;
@@ -146,9 +146,9 @@ export class Session {
     }
   }
 
-  private async accept({ accessToken, expiresInS, person }: SessionAnswer): Promise<void> {
+  private async accept({ accessToken, expiresInS, person }: SessionAnswer, tablet: string | undefined): Promise<void> {
     this.token = { text: accessToken, until: this.now() + expiresInS * 1000 };
-    const remembered = { person, lastAt: this.now() };
+    const remembered = { person, lastAt: this.now(), tablet };
     this.current.set(person);
     this.last.set(remembered);
     this.status.set('signed-in');

@@ -121,4 +121,6 @@ export interface RememberedPerson {
   readonly person: Person;
   /** Device clock, milliseconds. */
   readonly lastAt: number;
+  /** The tablet's id that the session was opened with; a refresh must name the same. */
+  readonly tablet: string | undefined;
 }

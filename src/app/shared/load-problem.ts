@@ -30,7 +30,7 @@ import { ApiProblem } from '../core/api-problem';
       <h2>{{ words().title }}</h2>
       <p>{{ words().text }}</p>
       @if (detail(); as said) {
-        <p class="muted">The server says: {{ said }}</p>
+        <p class="muted">{{ said }}</p>
       }
       @if (words().canTryAgain) {
         <button type="button" class="plain" (click)="again.emit()">Try again</button>
@@ -65,7 +65,8 @@ export class LoadProblem {
   /** Only what says more than our own words. */
   protected readonly detail = computed(() => {
     const problem = this.problem();
-    return this.kind() === 'failed' && problem instanceof Error ? problem.message : undefined;
+    if (this.kind() !== 'failed' || !(problem instanceof Error)) return undefined;
+    return problem instanceof ApiProblem ? `The server says: ${problem.message}` : problem.message;
   });
 }
 

@@ -78,7 +78,10 @@ export async function registeredTablet(id = 't-1'): Promise<void> {
 
 /** Leaves a person behind as the last one of this tablet, as an earlier session does. */
 export async function rememberPerson(person: Person = okafor): Promise<void> {
-  await TestBed.inject(OfflineStore).settings.put({ key: 'last-person', value: { person, lastAt: startOfDay } });
+  await TestBed.inject(OfflineStore).settings.put({
+    key: 'last-person',
+    value: { person, lastAt: startOfDay, tablet: undefined },
+  });
 }
 
 /** Waits until the app asks the server for this, and gives the request to the spec. */

@@ -1,0 +1,141 @@
+import { computed, inject, Injectable, type Signal } from '@angular/core';
+import { liveRows } from '../core/live-rows';
+import { OfflineStore } from '../core/offline-store';
+import { Session } from '../core/session';
+import { fitsOf, isFit, startable } from '../core/procedure-fit';
+import type { RunRow, RunSummary } from '../core/stored-rows';
+import { clock } from '../core/time-and-ids';
+import { daysUntil } from '../core/time-words';
+import { carWords } from '../core/visit-book';
+import type { GearItem, PublishedProcedure, Visit } from '../core/wire';
+
+/** A run that is not closed. */
+export interface OpenRun {
+  readonly runId: string;
+  readonly summary: RunSummary;
+  readonly changedAt: number;
+  readonly isMine: boolean;
+}
+
+/** A run that was closed on this tablet. */
+export interface ClosedRun {
+  readonly runId: string;
+  readonly summary: RunSummary;
+  readonly changedAt: number;
+}
+
+/** A visit on which nothing was begun here, or only one half of a pair. */
+export interface WaitingVisit {
+  readonly visit: Visit;
+  readonly car: string;
+  /** `2 procedures fit`, `warm half of a pair`. */
+  readonly fits: string;
+}
+
+/** What is on the tablet, so that it works without a network. */
+export interface ReadyView {
+  readonly procedures: number;
+  /** When the newest was published, ISO 8601. */
+  readonly newestAt: string | undefined;
+  readonly instruments: number;
+  /** The instrument whose check ends first, with the days until then; negative once it is overdue. */
+  readonly nextDue: { readonly label: string; readonly days: number } | undefined;
+}
+
+/** How many closed runs the Bench still lists. */
+const closedShown = 5;
+
+/** What lies on the Bench: runs, visits, and what is ready without a network. */
+@Injectable({ providedIn: 'root' })
+export class BenchStore {
+  private readonly store = inject(OfflineStore);
+  private readonly session = inject(Session);
+  private readonly now = inject(clock);
+
+  private readonly runs = liveRows(() => this.store.runs.orderBy('changedAt').reverse().toArray());
+  private readonly visits = liveRows(() => this.store.visits.orderBy('changedAt').reverse().toArray());
+  private readonly procedures = liveRows(() => this.store.procedures.toArray());
+  private readonly gear = liveRows(() => this.store.gear.toArray());
+  private readonly sites = liveRows(() => this.store.sites.toArray());
+
+  /** Whether the tablet's store has answered. */
+  readonly isRead = computed(() => this.runs() !== undefined && this.visits() !== undefined);
+  /** Where the person works. */
+  readonly siteName = computed(() => this.sites()?.find(({ id }) => id === this.session.person()?.siteId)?.name);
+  /** Runs that are not closed, the person's own first, the latest first. */
+  readonly open: Signal<readonly OpenRun[]> = computed(() =>
+    summarised(this.runs())
+      .filter(({ summary }) => !isClosed(summary))
+      .map(({ runId, summary, changedAt, openedBy }) => ({
+        runId,
+        summary,
+        changedAt,
+        isMine: openedBy === this.session.person()?.id,
+      }))
+      .sort((a, b) => Number(b.isMine) - Number(a.isMine)),
+  );
+  /** The latest closed ones. */
+  readonly closed: Signal<readonly ClosedRun[]> = computed(() =>
+    summarised(this.runs())
+      .filter(({ summary }) => isClosed(summary))
+      .slice(0, closedShown),
+  );
+  readonly waiting: Signal<readonly WaitingVisit[]> = computed(() =>
+    waitingVisits(this.visits() ?? [], this.runs() ?? [], this.procedures() ?? []),
+  );
+  readonly ready: Signal<ReadyView> = computed(() => {
+    const usable = startable(this.procedures() ?? []);
+    const here = (this.gear() ?? []).filter(({ siteId, inUse }) => inUse && siteId === this.session.person()?.siteId);
+    return {
+      procedures: usable.length,
+      newestAt: usable.map(({ publishedAt }) => publishedAt).reduce((a, b) => (a > b ? a : b), '') || undefined,
+      instruments: here.length,
+      nextDue: nextDueOf(here, this.now()),
+    };
+  });
+}
+
+type Summarised = RunRow & { readonly summary: RunSummary };
+
+const summarised = (rows: readonly RunRow[] | undefined): readonly Summarised[] =>
+  (rows ?? []).filter((row): row is Summarised => row.summary !== undefined);
+
+const isClosed = ({ status }: RunSummary): boolean => status === 'closed' || status === 'signed';
+
+function nextDueOf(gear: readonly GearItem[], now: number): ReadyView['nextDue'] {
+  const [first] = [...gear].sort((a, b) => (a.dueOn < b.dueOn ? -1 : 1));
+  return first && { label: first.label, days: daysUntil(first.dueOn, now) };
+}
+
+function waitingVisits(
+  visits: readonly Visit[],
+  runs: readonly RunRow[],
+  procedures: readonly PublishedProcedure[],
+): readonly WaitingVisit[] {
+  return visits.flatMap((visit) => {
+    const own = runs.filter(({ visitId }) => visitId === visit.id);
+    const car = carWords(visit);
+    if (own.length === 0) return [{ visit, car, fits: fitWords(procedures, visit) }];
+    const half = missingHalf(own);
+    return half === undefined ? [] : [{ visit, car, fits: `${half} half of a pair` }];
+  });
+}
+
+/** The half that a closed run still lacks its partner for, unless anything on the car is open. */
+function missingHalf(runs: readonly RunRow[]): 'cold' | 'warm' | undefined {
+  if (runs.some(({ summary }) => summary !== undefined && !isClosed(summary))) return undefined;
+  const halves = new Map<string, Set<string>>();
+  for (const { header } of runs) {
+    if (header.pairId === undefined || header.half === undefined) continue;
+    halves.set(header.pairId, (halves.get(header.pairId) ?? new Set()).add(header.half));
+  }
+  const alone = [...halves.values()].find((pair) => pair.size === 1);
+  if (alone === undefined) return undefined;
+  return alone.has('cold') ? 'warm' : 'cold';
+}
+
+function fitWords(procedures: readonly PublishedProcedure[], visit: Visit): string {
+  const count = fitsOf(procedures, visit).filter(isFit).length;
+  if (count === 0) return 'choose a procedure';
+  return count === 1 ? '1 procedure fits' : `${count} procedures fit`;
+}

@@ -1,0 +1,72 @@
+import { checkVin, modelYear, vinCheckDigit } from '../../../procedures/calculations';
+
+/** World maker identifier, descriptor, indicator: the sections of a vehicle identification number (ISO 3779). */
+const sections = [3, 6, 8] as const;
+export const vinLength = 17;
+
+/** What is typed, as the number itself: upper case, without blanks and hyphens, no longer than a VIN is. */
+export function tidyVin(typed: string): string {
+  return typed
+    .toUpperCase()
+    .replace(/[^A-Z0-9]/g, '')
+    .slice(0, vinLength);
+}
+
+/** The number in its sections: `1ZZ BT4CK4 LR204817`. */
+export function groupVin(vin: string): string {
+  let start = 0;
+  return sections
+    .map((length) => vin.slice(start, (start += length)))
+    .filter((section) => section !== '')
+    .join(' ');
+}
+
+/** Where the caret belongs in the grouped text, so that as many characters lie before it as before. */
+export function caretIn(grouped: string, charactersBefore: number): number {
+  let seen = 0;
+  for (let index = 0; index < grouped.length; index += 1) {
+    if (seen === charactersBefore) return index;
+    if (grouped.charAt(index) !== ' ') seen += 1;
+  }
+  return grouped.length;
+}
+
+/**
+ * What the number says about itself while it is typed:
+ * - `empty`, or `short` by so many characters;
+ * - `wrong`: a character that no VIN has;
+ * - `second-look`: complete, but its check digit or year code does not fit; outside North America that proves nothing;
+ * - `fits`, with the model year where the code gives one.
+ */
+export type VinVerdict =
+  | { readonly is: 'empty' }
+  | { readonly is: 'short'; readonly words: string }
+  | { readonly is: 'wrong'; readonly words: string }
+  | { readonly is: 'second-look'; readonly words: string }
+  | { readonly is: 'fits'; readonly words: string; readonly year: number | undefined };
+
+/** `thisYear` bounds the model year: a car is not newer than next year's. */
+export function vinVerdict(vin: string, thisYear: number): VinVerdict {
+  if (vin === '') return { is: 'empty' };
+  const strange = /[IOQ]/.exec(vin);
+  if (strange) {
+    return { is: 'wrong', words: `A VIN has no ${strange[0]}. Look again: a ${looksLike[strange[0]] ?? 'digit'}?` };
+  }
+  if (vin.length < vinLength) {
+    return { is: 'short', words: `${vinLength - vin.length} more` };
+  }
+  const { problems } = checkVin(vin);
+  if (problems.includes('check-digit')) {
+    return {
+      is: 'second-look',
+      words: `The check digit does not fit: position 9 is ${vin.charAt(8)}, and the rest would make it ${vinCheckDigit(vin)}.`,
+    };
+  }
+  if (problems.includes('year-code')) {
+    return { is: 'second-look', words: `Position 10 is ${vin.charAt(9)}, which is no year code.` };
+  }
+  const year = modelYear(vin, { notAfter: thisYear + 1 });
+  return { is: 'fits', words: year === undefined ? 'check digit fits' : `check digit fits, model year ${year}`, year };
+}
+
+const looksLike: Readonly<Record<string, string>> = { I: '1', O: '0', Q: '0' };

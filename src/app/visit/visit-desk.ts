@@ -1,0 +1,63 @@
+import { inject, Injectable } from '@angular/core';
+import { Session } from '../core/session';
+import { SettingsBook } from '../core/settings-book';
+import { clock, newId } from '../core/time-and-ids';
+import { VisitBook } from '../core/visit-book';
+import type { Visit } from '../core/wire';
+import { draftOf, emptyDraft, visitOf, type VisitDraft } from './visit-draft';
+
+/** Opens and changes visits; what is typed is kept on the tablet until the visit is, so that a reload loses nothing. */
+@Injectable({ providedIn: 'root' })
+export class VisitDesk {
+  private readonly settings = inject(SettingsBook);
+  private readonly visits = inject(VisitBook);
+  private readonly session = inject(Session);
+  private readonly now = inject(clock);
+  private readonly makeId = inject(newId);
+
+  /** The draft of a visit: what was typed last, else the visit as it is kept, else an empty one. Undefined: no such visit. */
+  async draft(visitId: string | undefined): Promise<VisitDraft | undefined> {
+    const typed = await this.settings.read<VisitDraft>(this.keyOf(visitId));
+    if (typed !== undefined) return { ...emptyDraft, ...typed };
+    if (visitId === undefined) return emptyDraft;
+    const visit = await this.visits.find(visitId);
+    return visit && draftOf(visit);
+  }
+
+  /** Keeps what is typed so far. */
+  async keepDraft(visitId: string | undefined, draft: VisitDraft): Promise<void> {
+    await this.settings.write(this.keyOf(visitId), draft);
+  }
+
+  /** Forgets what is typed. */
+  async forgetDraft(visitId: string | undefined): Promise<void> {
+    await this.settings.forget(this.keyOf(visitId));
+  }
+
+  /** Keeps the visit that a draft without problems makes, and gives it back. */
+  async keep(visitId: string | undefined, draft: VisitDraft): Promise<Visit> {
+    const person = this.session.person();
+    if (!person) throw new Error('Nobody is signed in');
+    const before = visitId === undefined ? undefined : await this.visits.find(visitId);
+    const now = this.now();
+    const origin = {
+      id: before?.id ?? this.makeId(),
+      siteId: before?.siteId ?? person.siteId,
+      openedBy: before?.openedBy ?? person.id,
+      openedAt: before?.openedAt ?? now,
+      changedAt: now,
+    };
+    const visit = visitOf(draft, origin, this.thisYear());
+    await this.visits.keep(visit);
+    await this.forgetDraft(visitId);
+    return visit;
+  }
+
+  thisYear(): number {
+    return new Date(this.now()).getFullYear();
+  }
+
+  private keyOf(visitId: string | undefined): string {
+    return `visit-draft:${visitId ?? `new:${this.session.person()?.id ?? ''}`}`;
+  }
+}

@@ -1,0 +1,12 @@
+import type { Routes } from '@angular/router';
+
+/** One car, one repair order, one concern. */
+export const routes: Routes = [
+  { path: 'new', title: 'New visit', loadComponent: () => import('./visit-form-page').then((m) => m.VisitFormPage) },
+  {
+    path: ':id/edit',
+    title: 'Change a visit',
+    loadComponent: () => import('./visit-form-page').then((m) => m.VisitFormPage),
+  },
+  { path: ':id', title: 'Visit', loadComponent: () => import('./visit-page').then((m) => m.VisitPage) },
+];
