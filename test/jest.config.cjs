@@ -27,6 +27,8 @@ module.exports = {
       displayName: 'server',
       testMatch: ['<rootDir>/server/**/*.spec.ts', '<rootDir>/test/integration/**/*.spec.ts'],
       setupFiles: ['reflect-metadata'],
+      globalSetup: '<rootDir>/test/support/integration-begin.cjs',
+      globalTeardown: '<rootDir>/test/support/integration-end.cjs',
     },
     {
       ...createCjsPreset({ tsconfig: '<rootDir>/src/tsconfig.spec.json' }),

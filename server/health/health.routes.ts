@@ -16,10 +16,9 @@ export function healthRoutes(database: DataSource, isStopping: () => boolean): R
         if (isStopping()) throw new NotReady('The server is stopping.');
         try {
           await database.query('SELECT 1');
-        } catch (error) {
-          // Whatever the database's answer is, it is no answer to go on with.
-          if (error instanceof Error) throw new NotReady('The database does not answer.');
-          throw error;
+        } catch {
+          // Whatever the reason is, without the database there is nothing to serve.
+          throw new NotReady('The database does not answer.');
         }
         return { status: 200, json: { status: 'ready' } };
       },

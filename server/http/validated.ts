@@ -1,6 +1,6 @@
 import 'reflect-metadata';
 import { plainToInstance, Type } from 'class-transformer';
-import { ValidateNested, validateSync, type ValidationError } from 'class-validator';
+import { IsArray, IsDefined, ValidateNested, validateSync, type ValidationError } from 'class-validator';
 import { BadRequest, Invalid, InvalidQuery, type FieldProblem } from './problem';
 
 /** A DTO's class. */
@@ -26,6 +26,9 @@ const nestedClasses = new Map<object, Map<string | symbol, () => Dto<object>>>()
 export function Nested(dto: () => Dto<object>, options: { readonly each?: boolean } = {}): PropertyDecorator {
   return (target, property) => {
     Type(dto)(target, property);
+    // Alone, ValidateNested lets what is missing pass.
+    IsDefined()(target, property);
+    if (options.each) IsArray()(target, property);
     ValidateNested({ each: options.each ?? false })(target, property);
     const ofClass = nestedClasses.get(target.constructor) ?? new Map<string | symbol, () => Dto<object>>();
     nestedClasses.set(target.constructor, ofClass.set(property, dto));

@@ -11,6 +11,7 @@ import type { PullAnswer, PushAnswer, PushedDocument, PushedDocumentAnswer, Push
 export { countersignatureOnTheWire } from './countersigner';
 export { mainBranch } from './event-place';
 export { isCountersigned, ServerKeys } from './server-keys';
+export { rebuildRuns } from './rebuild-runs';
 export { RunRows } from './run-rows';
 export { CountersignatureDto } from './sync.dto';
 
