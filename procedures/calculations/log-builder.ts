@@ -21,6 +21,7 @@ const shortened = (text: string): string => (text.length > 40 ? `${text.slice(0,
 /** Puts a log together row by row, in the order of the file. */
 export class LogBuilder {
   private readonly channels = new Map<string, ChannelDraft>();
+  private readonly drafts: ChannelDraft[] = [];
   private readonly timesS: number[] = [];
   private readonly problems: LogProblem[] = [];
 
@@ -33,6 +34,11 @@ export class LogBuilder {
   /** The time of the last row, or undefined before the first. */
   get lastTimeS(): number | undefined {
     return this.timesS.at(-1);
+  }
+
+  /** Whether any channel has a number by now. */
+  get hasNumbers(): boolean {
+    return this.drafts.some(({ values }) => values.length > 0);
   }
 
   /** Opens a sample at this time, or goes back to it when it is that of the last one. Times never fall. */
@@ -60,7 +66,7 @@ export class LogBuilder {
   /** The log, with time from 0; channels without a single number are left out. */
   finish(): ScanLog {
     const startS = this.timesS[0] ?? 0;
-    const drafts = [...this.channels.values()];
+    const { drafts } = this;
     const kept = drafts.filter(({ values }) => values.some((value) => value !== undefined));
     for (const { name, values, refused, firstLine } of drafts) {
       if (values.some((value) => value !== undefined)) for (const problem of refused) this.problems.push(problem);
@@ -83,11 +89,15 @@ export class LogBuilder {
     return [...ordered.slice(0, toldProblems), { line: next.line, what: `and ${more} more from here on` }];
   }
 
+  /** One quantity may be logged in two units; a header that comes again without its units means the first of them. */
   private channelOf(name: string, unit: string | undefined, line: number): ChannelDraft {
-    const known = this.channels.get(name);
+    const key = unit === undefined ? name : `${name}\n${unit}`;
+    const known = this.channels.get(key);
     if (known !== undefined) return known;
     const channel: ChannelDraft = { name, unit, values: [], refused: [], firstLine: line };
-    this.channels.set(name, channel);
+    this.drafts.push(channel);
+    this.channels.set(key, channel);
+    if (!this.channels.has(name)) this.channels.set(name, channel);
     return channel;
   }
 

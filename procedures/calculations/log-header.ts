@@ -58,12 +58,20 @@ export function headerLine(lines: readonly string[], style: CellStyle): number |
   return undefined;
 }
 
-/** Names the columns of a header, with the units of the row below it where there is one. */
+/**
+ * Names the columns of a header, with the units of the row below it where there is one. A column that another one is
+ * named like, unit and all, gets a number behind its name.
+ */
 export function columnsOf(header: readonly string[], units: readonly string[] | undefined): Column[] {
+  const times = new Map<string, number>();
   return header.map((cell, index) => {
-    const { name, unit } = nameAndUnit(cell);
+    const { name, unit: glued } = nameAndUnit(cell);
     const below = units?.[index] ?? '';
-    return { name, unit: unit ?? (below === '' ? undefined : unitAsWritten(below)) };
+    const unit = glued ?? (below === '' ? undefined : unitAsWritten(below));
+    const key = `${name}\n${unit ?? ''}`;
+    const time = (times.get(key) ?? 0) + 1;
+    times.set(key, time);
+    return { name: time === 1 || name === '' ? name : `${name} (${time})`, unit };
   });
 }
 

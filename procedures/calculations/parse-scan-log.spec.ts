@@ -101,6 +101,27 @@ describe('parseScanLog', () => {
     expect(units('Time,A,B (mA)', '0,93.9 kPa,3', '1,94.0 kPa,3')).toEqual(['kPa', 'mA']);
   });
 
+  it('keeps columns of one name apart, by their units or by number', () => {
+    const { channels, values } = log(
+      'Time,MAP (kPa),MAP (inHg),B,B',
+      '0,94,27.8,1,2',
+      'Time,MAP (kPa),MAP (inHg),B,B',
+      '1,95,28.1,3,4',
+    );
+    expect(channels.map(({ name, unit }) => [name, unit])).toEqual([
+      ['MAP', 'kPa'],
+      ['MAP', 'inHg'],
+      ['B', undefined],
+      ['B (2)', undefined],
+    ]);
+    expect(values).toEqual([
+      [94, 95],
+      [27.8, 28.1],
+      [1, 3],
+      [2, 4],
+    ]);
+  });
+
   it('leaves blanks and words for nothing blank, without a word', () => {
     const { values, problems } = log('Time,A,B', '0,,1', '1,N/A,2', '2,---,3', '3,not supported,4', '4,7,NaN');
     expect(values).toEqual([
@@ -133,7 +154,7 @@ describe('parseScanLog', () => {
   });
 
   it('goes on under a header that comes again, with its own columns', () => {
-    const { channels, timeS, values, problems } = log('Time,A,B', '0,1,2', 'Time,B,C', 's,V,V', '1,3,4');
+    const { channels, timeS, values, problems } = log('Time,A,B', 's,V,V', '0,1,2', 'Time,B,C', 's,V,V', '1,3,4');
     expect(channels.map(({ name }) => name)).toEqual(['A', 'B', 'C']);
     expect(timeS).toEqual([0, 1]);
     expect(values).toEqual([
@@ -182,6 +203,10 @@ describe('parseScanLog', () => {
 
   it('says that nothing follows the header', () => {
     expect(log('', 'Time,A,B').problems).toEqual([{ line: 2, what: 'no row of readings follows the header' }]);
+  });
+
+  it('says that there are times and nothing else', () => {
+    expect(log('Time,A', '0,', '1,').problems).toEqual([{ line: 1, what: 'no channel holds a number' }]);
   });
 
   it('tells a hundred problems and sums up the rest', () => {

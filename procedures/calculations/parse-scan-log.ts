@@ -66,6 +66,7 @@ class LogReader {
     if (this.layout === undefined) return nothingRead(header + 1, 'no column holds the time');
     while (index < this.lines.length) index = this.takeLine(index);
     if (this.builder.lastTimeS === undefined) this.builder.report(header + 1, 'no row of readings follows the header');
+    else if (!this.builder.hasNumbers) this.builder.report(header + 1, 'no channel holds a number');
     return this.builder.finish();
   }
 
