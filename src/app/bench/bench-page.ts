@@ -71,6 +71,12 @@ export class BenchPage {
     return rooms.filter(({ roles }) => role !== undefined && roles.includes(role));
   });
   protected readonly worksAtCars = computed(() => this.home() === undefined);
+  /** With nothing on the car, the visit to take next is the loud thing of the Bench. */
+  protected readonly next = computed(() => (this.store.open().length > 0 ? undefined : this.store.waiting()[0]));
+  protected readonly listed = computed(() => {
+    const next = this.next();
+    return this.store.waiting().filter((item) => item !== next);
+  });
   protected readonly waiting = computed(() => this.sync.view().waiting);
   protected readonly photosLeft = this.storage.photosLeft;
   protected readonly isExpired = computed(() => this.session.state() === 'expired');

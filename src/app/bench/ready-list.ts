@@ -13,9 +13,9 @@ import type { ReadyView } from './bench-store';
         }}{{ newest() }}
       </li>
       <li>
-        <b class="num">{{ ready().instruments }}</b> {{ ready().instruments === 1 ? 'instrument' : 'instruments' }}
+        <b class="num">{{ ready().instruments }}</b> {{ instrumentWords() }}
         @if (due(); as says) {
-          <span [class.overdue]="says.isOverdue">, {{ says.words }}</span>
+          <span [class.overdue]="says.isOverdue">{{ says.words }}</span>
         }
       </li>
       <li>{{ unsent() }}</li>
@@ -51,6 +51,10 @@ export class ReadyList {
   protected readonly newest = computed(() => {
     const { newestAt } = this.ready();
     return newestAt === undefined ? '' : `, newest from ${dayTime(Date.parse(newestAt), this.now())}`;
+  });
+  protected readonly instrumentWords = computed(() => {
+    const word = this.ready().instruments === 1 ? 'instrument' : 'instruments';
+    return this.due() ? `${word},` : word;
   });
   protected readonly due = computed(() => {
     const next = this.ready().nextDue;

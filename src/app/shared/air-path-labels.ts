@@ -70,7 +70,7 @@ function bestPlace(
         sum(taken.map((other) => overlap(box, other))) * 1000 +
         sum(marked.map((other) => overlap(box, other))) * 20 +
         sum(airPathParts.map((other) => overlap(box, boxOf(other)))) +
-        distance(box, boxOf(part)) * 6 +
+        farness(distance(box, boxOf(part))) +
         wraps * 40 +
         index;
       return { box, cost, label: labelIn(part, lines, fontSize, box) };
@@ -114,7 +114,11 @@ function candidateBoxes(part: SheetPart, lines: readonly string[], fontSize: num
       [middleX - width / 2, target.left - width * 0.4, target.right - width * 0.6].map((left) => ({ left, top })),
     ),
   );
-  return [...near, ...far].map(({ left = 0, top = 0 }) => inside({ left, top, width, height }, view));
+  // Beside the drawing, where a wide place leaves room.
+  const margins = [0, -1.5, 1.5].flatMap((steps) =>
+    [view.left + 4, view.right - width - 4].map((left) => ({ left, top: middleY - height / 2 + steps * height })),
+  );
+  return [...near, ...far, ...margins].map(({ left = 0, top = 0 }) => inside({ left, top, width, height }, view));
 }
 
 function inside(box: { left: number; top: number; width: number; height: number }, view: SheetView): Box {
@@ -158,5 +162,7 @@ const boxOf = ({ box: [left, top, width, height] }: SheetPart): Box => ({
 const overlap = (a: Box, b: Box): number =>
   Math.max(0, Math.min(a.right, b.right) - Math.max(a.left, b.left)) *
   Math.max(0, Math.min(a.bottom, b.bottom) - Math.max(a.top, b.top));
+/** A label a little off is better than one on another part; a label far away is worse than both. */
+const farness = (away: number): number => away * 6 + Math.max(0, away - 90) ** 2 * 0.15;
 const distance = (a: Box, b: Box): number =>
   Math.hypot(Math.max(0, a.left - b.right, b.left - a.right), Math.max(0, a.top - b.bottom, b.top - a.bottom));

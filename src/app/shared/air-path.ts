@@ -4,7 +4,7 @@ import { airPathParts } from './air-path-parts';
 import { hostSize } from './element-size';
 
 /** The drawing's own bounds, with room for labels over the manifold and under the crankcase. */
-const drawing = { left: 10, top: 18, right: 686, bottom: 322 };
+const drawing = { left: 10, top: 18, right: 700, bottom: 322 };
 const labelPx = 18;
 
 /**

@@ -31,6 +31,9 @@ export interface PlotRequest {
 
 const font = '500 14px Inter, sans-serif';
 const markFont = '700 15px Inter, sans-serif';
+const columnPx = 74;
+const gapPx = 6;
+const sameColumn = { size: 0, gap: gapPx - columnPx };
 /** The sound's share of the height, at the bottom. */
 const soundShare = 0.32;
 const dashes: readonly (readonly number[])[] = [[], [10, 6], [3, 4]];
@@ -65,9 +68,17 @@ export function plotOptions(request: PlotRequest): uPlot.Options {
       sound: { range: (_plot, low, high) => stretched(low, high, 0, soundCeiling) },
     },
     axes: [
-      { ...axis, size: 34, values: (_plot, ticks) => ticks.map((tick, i) => (i === 0 ? `${tick} s` : String(tick))) },
+      {
+        ...axis,
+        grid: { show: false },
+        size: 34,
+        values: (_plot, ticks) => ticks.map((tick, i) => (i === 0 ? `${tick} s` : String(tick))),
+      },
       ...(hasPressure ? [sideAxis(axis, 'pressure', pressureUnit, extent(series, false))] : []),
-      ...(hasSound ? [sideAxis(axis, 'sound', 'dB', extent(series, true))] : []),
+      ...(hasSound
+        ? // Its figures stand in the pressures' column, lower down: it takes no room of its own.
+          [{ ...sideAxis(axis, 'sound', 'dB', extent(series, true)), ...(hasPressure ? sameColumn : {}) }]
+        : []),
     ],
     series: [
       {},
@@ -125,7 +136,8 @@ function sideAxis(
     ...axis,
     scale,
     side: 1,
-    size: 74,
+    size: columnPx,
+    gap: gapPx,
     space: 30,
     // Ticks in the other scale's part of the height would say nothing.
     filter: (_plot, ticks) => ticks.map((tick) => (tick >= low - step && tick <= high + step ? tick : null)),
@@ -170,9 +182,10 @@ function drawMarks(plot: uPlot, { marks, colours }: PlotRequest): void {
       ctx.stroke();
       ctx.setLineDash([]);
       const isLeft = x > bbox.left + bbox.width / 2;
-      ctx.textAlign = isLeft ? 'right' : 'left';
+      const room = ctx.measureText(mark.label).width;
       const y = bbox.top + (index % 3) * 20 * ratio + 22 * ratio;
-      const labelX = x + (isLeft ? -8 : 8) * ratio;
+      const wished = isLeft ? x - 8 * ratio - room : x + 8 * ratio;
+      const labelX = Math.max(bbox.left, Math.min(bbox.left + bbox.width - room, wished));
       ctx.lineWidth = 5 * ratio;
       ctx.strokeStyle = colours.sheet;
       ctx.lineJoin = 'round';

@@ -40,7 +40,7 @@ export interface WalkOptions {
   /** Where the noise is marked; the planted place where absent. */
   readonly noiseStopsS?: number;
   /** Called before each step's own command: may do more, or walk differently by doing the step itself. */
-  readonly before?: (step: Step, walk: Walk) => void;
+  readonly before?: ((step: Step, walk: Walk) => void) | undefined;
   /** Walk no further than this step. */
   readonly until?: string;
   readonly startedAt?: number;
