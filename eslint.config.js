@@ -28,7 +28,7 @@ module.exports = tseslint.config(
       '.angular/**',
       '.data/**',
       '.test/**',
-      'procedures/document/compiled/**',
+      'procedures/*/compiled/**',
       'test-results/**',
     ],
   },
