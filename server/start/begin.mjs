@@ -2,6 +2,7 @@
 import { ensureDataFolder } from './data-folder.mjs';
 import { portHindrance } from './free-port.mjs';
 import { keptSecrets } from './kept-secrets.mjs';
+import { ensurePostgres } from './postgres-programs.mjs';
 import { beTheOnlyStart } from './running-start.mjs';
 import { StartProblem } from './sentences.mjs';
 import { portProblem, startSettings } from './settings.mjs';
@@ -18,5 +19,7 @@ export async function begin(root) {
   const { noteServer } = await beTheOnlyStart(root, dataFolder);
   const hindrance = await portHindrance(settings.host, settings.port);
   if (hindrance !== undefined) throw new StartProblem(portProblem(hindrance, settings));
+  // Before anything slow: who may not install it should hear so at once.
+  if (settings.database === undefined) await ensurePostgres();
   return { settings, dataFolder, noteServer, secrets: await keptSecrets(dataFolder) };
 }

@@ -1,9 +1,8 @@
 // @ts-check
-import { mkdir } from 'node:fs/promises';
 import { clusterAccount } from './postgres-account.mjs';
 import { createCluster, runOffline, startCluster, versionOfCluster } from './postgres-cluster.mjs';
 import { choosePlace, knownPlace } from './postgres-place.mjs';
-import { ensurePostgres, programsFor } from './postgres-programs.mjs';
+import { programsFor } from './postgres-programs.mjs';
 import { sayingHowLong } from './sentences.mjs';
 
 /**
@@ -14,15 +13,13 @@ import { sayingHowLong } from './sentences.mjs';
 const access = ['host bayhand bayhand_owner,bayhand_app 127.0.0.1/32 scram-sha-256'];
 
 /**
- * Starts this checkout's own database, made at the first start. It is stopped when everything is, and its data is kept.
+ * Starts this checkout's own database, made at the first start, with the PostgreSQL that this machine has. It is stopped when everything is, and its data is kept.
  * @param {string} root the checkout
  * @param {string} dataFolder
  * @param {import('./kept-secrets.mjs').Secrets & { areNew: boolean }} secrets
  * @returns {Promise<DatabaseUrls>}
  */
 export async function startOwnDatabase(root, dataFolder, secrets) {
-  await ensurePostgres();
-  await mkdir(dataFolder, { recursive: true });
   const known = await knownPlace(root, dataFolder);
   const account = await clusterAccount(known);
   const place = known ?? (await choosePlace(root, dataFolder, account));

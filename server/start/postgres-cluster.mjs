@@ -1,11 +1,11 @@
 // @ts-check
-import { existsSync, realpathSync } from 'node:fs';
+import { existsSync, realpathSync, statfsSync } from 'node:fs';
 import { readFile, rename, rm, stat, writeFile } from 'node:fs/promises';
 import { join } from 'node:path';
 import { runCommand } from './commands.mjs';
 import { freePort } from './free-port.mjs';
 import { postgresFailure } from './postgres-failure.mjs';
-import { StartProblem } from './sentences.mjs';
+import { StartProblem, fileProblem } from './sentences.mjs';
 import { atStop } from './stopping.mjs';
 
 /**
@@ -115,6 +115,7 @@ export async function startCluster(cluster, settings = {}) {
     // Another program may have taken the port between the look and the start.
     if (!/Address already in use/.test(output)) break;
   }
+  if (isOnFullDisk(cluster)) throw new StartProblem(String(fileProblem('ENOSPC', cluster.place)));
   throw new StartProblem(postgresFailure(`The database in ${cluster.place} does not start`, output, cluster.place));
 }
 
@@ -180,6 +181,15 @@ async function beginLog(cluster) {
   if (size < 10_000_000) return size;
   await rename(log, `${log}.1`);
   return 0;
+}
+
+/**
+ * Whether the disk is full: PostgreSQL then can't even write into its log that it is.
+ * @param {Cluster} cluster
+ */
+function isOnFullDisk({ place }) {
+  const { bavail, bsize } = statfsSync(place);
+  return bavail * bsize < 1_000_000;
 }
 
 /** @param {Cluster} cluster */

@@ -9,13 +9,12 @@ import { lastLines } from './sentences.mjs';
  * @param {string} place the folder that holds the cluster
  */
 export function postgresFailure(what, output, place) {
+  const lines = output.split('\n');
   const found = causes.find(({ signs }) => signs.test(output));
-  if (found) return `${what}: ${found.told(place)}`;
-  const said = output
-    .split('\n')
-    .filter((line) => /FATAL|PANIC|error:/.test(line))
-    .at(-1);
-  return `${what}: ${said?.trim() ?? lastLines(output, 5)}\nIf it can't be mended, move ${place} away to begin with an empty database.`;
+  const why =
+    (found && lines.find((line) => found.signs.test(line))) ?? lines.findLast((line) => /ERROR|FATAL|PANIC/.test(line));
+  const told = found?.told(place) ?? `if it can't be mended, move ${place} away to begin with an empty database.`;
+  return `${what}: ${told} (PostgreSQL says: ${why?.trim() ?? lastLines(output, 3)})`;
 }
 
 /** @type {{ signs: RegExp, told: (place: string) => string }[]} */
@@ -29,20 +28,15 @@ const causes = [
     told: (place) => `another PostgreSQL already uses ${place}. Stop that one, then run the same command again.`,
   },
   {
-    signs: /is not a valid data directory|not a database cluster directory|directory ".*" does not exist/,
+    signs: /initialized by PostgreSQL version/,
     told: (place) =>
-      `its folder is damaged. Put ${place} back from a copy, or move it away to begin with an empty one.`,
+      `its files belong to another version of PostgreSQL. Install that version, or move ${place} away to begin with an empty database.`,
   },
   {
     signs:
-      /could not (open|read|access|locate|find)[^\n]*(No such file|checkpoint|control file)|incorrect checksum in control file|invalid (primary )?checkpoint|contains unrecognized|invalid page/,
+      /is not a (valid data directory|database cluster directory)|directory ".*" does not exist|No such file or directory|incorrect checksum in control file|incompatible with server|valid checkpoint record|invalid page/,
     told: (place) =>
       `its files are damaged. Put ${place} back from a copy, or move it away to begin with an empty one.`,
-  },
-  {
-    signs: /database files are incompatible with server|initialized by PostgreSQL version/,
-    told: (place) =>
-      `its files belong to another version of PostgreSQL. Install that version, or move ${place} away to begin with an empty database.`,
   },
   {
     signs: /has wrong ownership|has invalid permissions|Permission denied|must be owned by/,

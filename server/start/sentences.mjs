@@ -22,13 +22,41 @@ export function say(sentence) {
  */
 export async function tellAndExit(error) {
   if (isStopping()) return;
-  const told =
-    error instanceof StartProblem
-      ? error.message
-      : `Bayhand's start has a fault: ${error instanceof Error ? error.stack : String(error)}`;
-  process.stderr.write(`${told}\n`);
+  process.stderr.write(`${sentenceOf(error)}\n`);
   await stopAll();
   process.exit(1);
+}
+
+/** @param {unknown} error */
+function sentenceOf(error) {
+  if (error instanceof StartProblem) return error.message;
+  const { code, path, stack } = /** @type {NodeJS.ErrnoException} */ (error);
+  const problem = path === undefined ? undefined : fileProblem(code, path);
+  return problem ?? `Bayhand's start has a fault: ${stack ?? String(error)}`;
+}
+
+/**
+ * Why a file or folder can't be used, as a sentence with the way out; undefined for a code that a person can't mend.
+ * @param {string | undefined} code the system's error code
+ * @param {string} path
+ */
+export function fileProblem(code, path) {
+  switch (code) {
+    case 'EACCES':
+    case 'EPERM':
+      return `This account may not use ${path}: run the same command as the account that owns it.`;
+    case 'EROFS':
+      return `The disk that holds ${path} is read-only: put Bayhand's folder on one that can be written.`;
+    case 'ENOSPC':
+    case 'EDQUOT':
+      return `The disk that holds ${path} is full: make room, then run the same command again.`;
+    case 'EEXIST':
+    case 'EISDIR':
+    case 'ENOTDIR':
+      return `Something else is in the place of ${path}: move it away, then run the same command again.`;
+    default:
+      return undefined;
+  }
 }
 
 /**
