@@ -2,7 +2,7 @@
 // Made by build-validators.mjs from the schema; not to be edited.
 
 export const checkProcedureDocument = validate52;
-const schema19 = {"$schema":"https://json-schema.org/draft/2020-12/schema","$id":"procedure-document.schema.json","title":"Procedure document","description":"What a lead authors, a version freezes and a run walks. Agrees with procedure-document.ts; what lies between the parts (names, ways, restoring) is the lint's.","type":"object","properties":{"format":{"const":1},"id":{"$ref":"#/$defs/procedureId"},"title":{"$ref":"#/$defs/label"},"purpose":{"$ref":"#/$defs/paragraph"},"system":{"$ref":"#/$defs/label"},"appliesTo":{"$ref":"#/$defs/appliesTo"},"expectedMinutes":{"type":"integer","minimum":1,"maximum":1440},"useLevel":{"enum":["every-step","consulted"]},"pair":{"type":"boolean"},"gear":{"type":"array","items":{"$ref":"#/$defs/gearNeed"},"maxItems":30},"inputs":{"type":"array","items":{"$ref":"#/$defs/input"},"maxItems":100},"pictures":{"type":"array","items":{"$ref":"#/$defs/identifier"},"maxItems":30},"references":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":50},"deference":{"$ref":"#/$defs/paragraph"},"start":{"$ref":"#/$defs/startCard"},"limits":{"type":"array","items":{"$ref":"#/$defs/limit"},"maxItems":20},"stop":{"$ref":"#/$defs/stopSheet"},"steps":{"type":"array","items":{"$ref":"#/$defs/step"},"minItems":2,"maxItems":500}},"required":["format","id","title","purpose","system","appliesTo","expectedMinutes","useLevel","gear","inputs","pictures","references","deference","start","limits","stop","steps"],"additionalProperties":false,"$defs":{"unit":{"enum":["kPa","Pa","hPa","bar","psi","inHg","inH2O","mmHg","degC","degF","K","L/min","ft3/min","m3/s","g/s","kg/h","lb/min","L","cm3","m","km","mi","Nm","lbf.ft","V","mV","ohm","kohm","s","min","h","km/h","mph","%","1","rpm","dB"]},"sense":{"description":"Gauge and absolute are different kinds.","enum":["absolute","gauge"]},"name":{"description":"A name in expressions: letters and digits, first letter small.","type":"string","pattern":"^[a-z][A-Za-z0-9]*$","maxLength":60},"identifier":{"description":"Letters, digits and hyphens.","type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"procedureId":{"description":"Lower-case words joined by hyphens.","type":"string","pattern":"^[a-z0-9]+(-[a-z0-9]+)*$","maxLength":80},"decimal":{"description":"A figure as text, with the digits that it was given with.","type":"string","pattern":"^-?[0-9]+(\\.[0-9]+)?$","maxLength":20},"expression":{"description":"Text in the expression language.","type":"string","minLength":1,"maxLength":2000},"label":{"type":"string","minLength":1,"maxLength":120},"line":{"type":"string","minLength":1,"maxLength":300},"paragraph":{"description":"May be a template: {name} stands for a value of the run.","type":"string","minLength":1,"maxLength":1000},"range":{"type":"object","properties":{"low":{"type":"number"},"high":{"type":"number"}},"required":["low","high"],"additionalProperties":false},"caution":{"type":"object","properties":{"word":{"enum":["danger","warning","caution","notice"]},"text":{"$ref":"#/$defs/paragraph"}},"required":["word","text"],"additionalProperties":false},"appliesTo":{"type":"object","properties":{"codes":{"type":"array","items":{"type":"string","pattern":"^[PCBU][0-3][0-9A-F]{3}$"},"maxItems":100},"symptoms":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":30},"engine":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":30}},"required":["codes","symptoms","engine"],"additionalProperties":false},"instrumentKind":{"enum":["pressure-gauge","scan-tool","listening-probe","barometer","thermometer"]},"gearNeed":{"type":"object","properties":{"role":{"$ref":"#/$defs/name"},"kind":{"$ref":"#/$defs/instrumentKind"},"label":{"$ref":"#/$defs/label"},"optional":{"type":"boolean"},"shows":{"type":"object","properties":{"unit":{"$ref":"#/$defs/unit"},"low":{"type":"number"},"high":{"type":"number"},"resolution":{"type":"number","exclusiveMinimum":0}},"required":["unit","low","high","resolution"],"additionalProperties":false}},"required":["role","kind","label"],"additionalProperties":false},"input":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"from":{"enum":["site.elevation","visit.displacement","default"]},"default":{"$ref":"#/$defs/decimal"},"source":{"$ref":"#/$defs/line"}},"required":["name","label","unit","from","source"],"additionalProperties":false},"startCard":{"type":"object","properties":{"prerequisites":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":20},"stopActions":{"type":"array","items":{"$ref":"#/$defs/line"},"minItems":1,"maxItems":3},"people":{"$ref":"#/$defs/line"},"throughout":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12}},"required":["prerequisites","stopActions","people","throughout"],"additionalProperties":false},"limit":{"type":"object","properties":{"id":{"$ref":"#/$defs/identifier"},"holds":{"$ref":"#/$defs/expression"},"of":{"type":"array","items":{"$ref":"#/$defs/name"},"minItems":1,"maxItems":50},"says":{"$ref":"#/$defs/line"},"then":{"$ref":"#/$defs/line"}},"required":["id","holds","of","says","then"],"additionalProperties":false},"exit":{"type":"object","properties":{"to":{"description":"A step's id, or `verdict`.","type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"because":{"$ref":"#/$defs/line"},"verdict":{"$ref":"#/$defs/name"}},"required":["to","because"],"additionalProperties":false},"branch":{"type":"object","properties":{"to":{"description":"A step's id, or `verdict`.","type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"because":{"$ref":"#/$defs/line"},"verdict":{"$ref":"#/$defs/name"},"when":{"$ref":"#/$defs/expression"},"atMost":{"type":"integer","minimum":1,"maximum":20},"thenceforth":{"$ref":"#/$defs/exit"}},"required":["to","because","when"],"dependentRequired":{"atMost":["thenceforth"],"thenceforth":["atMost"]},"additionalProperties":false},"stopSheet":{"type":"object","properties":{"makeSafe":{"type":"array","items":{"$ref":"#/$defs/line"},"minItems":1,"maxItems":12},"exit":{"$ref":"#/$defs/exit"}},"required":["makeSafe","exit"],"additionalProperties":false},"band":{"type":"object","properties":{"low":{"$ref":"#/$defs/expression"},"high":{"$ref":"#/$defs/expression"},"when":{"$ref":"#/$defs/expression"},"unjudged":{"$ref":"#/$defs/line"},"source":{"$ref":"#/$defs/line"}},"required":["source"],"anyOf":[{"required":["low"]},{"required":["high"]}],"additionalProperties":false},"result":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"},"is":{"$ref":"#/$defs/expression"}},"required":["name","label","unit","is"],"additionalProperties":false},"entry":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"plausible":{"$ref":"#/$defs/range"},"gear":{"$ref":"#/$defs/name"}},"required":["name","label","unit","plausible"],"additionalProperties":false},"entryWay":{"type":"object","properties":{"id":{"$ref":"#/$defs/identifier"},"label":{"$ref":"#/$defs/label"},"hint":{"$ref":"#/$defs/line"},"entry":{"$ref":"#/$defs/entry"},"is":{"$ref":"#/$defs/expression"},"uncertainty":{"$ref":"#/$defs/expression"}},"required":["id","label","hint","is"],"additionalProperties":false},"readQuantity":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"},"gear":{"$ref":"#/$defs/name"},"plausible":{"$ref":"#/$defs/range"},"takes":{"type":"integer","minimum":1,"maximum":5},"ways":{"type":"array","items":{"$ref":"#/$defs/entryWay"},"minItems":1,"maxItems":10}},"required":["name","label","unit","plausible"],"additionalProperties":false},"picture":{"type":"object","properties":{"sheet":{"$ref":"#/$defs/identifier"},"marks":{"type":"array","items":{"$ref":"#/$defs/identifier"},"maxItems":30},"labels":{"type":"object","propertyNames":{"$ref":"#/$defs/identifier"},"maxProperties":30,"additionalProperties":{"$ref":"#/$defs/label"}}},"required":["sheet","marks"],"additionalProperties":false},"disturbed":{"type":"object","properties":{"item":{"$ref":"#/$defs/identifier"},"label":{"$ref":"#/$defs/label"},"restore":{"$ref":"#/$defs/line"}},"required":["item","label","restore"],"additionalProperties":false},"option":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"ask":{"$ref":"#/$defs/line"}},"required":["name","label"],"additionalProperties":false},"channel":{"type":"object","properties":{"name":{"enum":["gauge","manifold","boost","sound"]},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"gear":{"$ref":"#/$defs/name"},"needed":{"type":"boolean"}},"required":["name","label","unit","needed"],"additionalProperties":false},"foundTruth":{"type":"object","properties":{"what":{"enum":["noise-heard","noise-stopped"]},"name":{"$ref":"#/$defs/name"}},"required":["what","name"],"additionalProperties":false},"foundQuantity":{"type":"object","properties":{"what":{"enum":["seal-point","highest-gauge","manifold-gain","boost-gain","worst-gap"]},"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"}},"required":["what","name","label","unit"],"additionalProperties":false},"found":{"type":"object","discriminator":{"propertyName":"what"},"required":["what"],"oneOf":[{"$ref":"#/$defs/foundTruth"},{"$ref":"#/$defs/foundQuantity"}]},"driveWindow":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"what":{"$ref":"#/$defs/line"}},"required":["name","label","what"],"additionalProperties":false},"sentence":{"type":"object","properties":{"text":{"$ref":"#/$defs/paragraph"},"when":{"$ref":"#/$defs/expression"}},"required":["text"],"additionalProperties":false},"startStep":{"type":"object","properties":{"kind":{"const":"start"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"actionStep":{"type":"object","properties":{"kind":{"const":"action"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"readingStep":{"type":"object","properties":{"kind":{"const":"reading"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"reads":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","reads"],"additionalProperties":false},"choiceStep":{"type":"object","properties":{"kind":{"const":"choice"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"name":{"$ref":"#/$defs/name"},"several":{"type":"boolean"},"options":{"type":"array","items":{"$ref":"#/$defs/option"},"minItems":1,"maxItems":30},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","options"],"additionalProperties":false},"listenStep":{"type":"object","properties":{"kind":{"const":"listen"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"name":{"$ref":"#/$defs/name"},"channels":{"type":"array","items":{"$ref":"#/$defs/channel"},"minItems":1,"maxItems":4},"target":{"type":"number"},"finds":{"type":"array","items":{"$ref":"#/$defs/found"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","channels","target","finds"],"additionalProperties":false},"holdStep":{"type":"object","properties":{"kind":{"const":"hold"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"seconds":{"type":"integer","minimum":1,"maximum":86400},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","seconds"],"additionalProperties":false},"waitStep":{"type":"object","properties":{"kind":{"const":"wait"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"reads":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"until":{"$ref":"#/$defs/expression"},"meanwhile":{"$ref":"#/$defs/paragraph"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","reads","until","meanwhile"],"additionalProperties":false},"codesStep":{"type":"object","properties":{"kind":{"const":"codes"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"name":{"$ref":"#/$defs/name"},"comparedWith":{"$ref":"#/$defs/name"},"newCodes":{"$ref":"#/$defs/name"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name"],"additionalProperties":false},"driveStep":{"type":"object","properties":{"kind":{"const":"drive"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"name":{"$ref":"#/$defs/name"},"windows":{"type":"array","items":{"$ref":"#/$defs/driveWindow"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","windows"],"additionalProperties":false},"computeStep":{"type":"object","properties":{"kind":{"const":"compute"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"restoreStep":{"type":"object","properties":{"kind":{"const":"restore"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"findingStep":{"type":"object","properties":{"kind":{"const":"finding"},"id":{"$ref":"#/$defs/name"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"result":{"enum":["in","out","too-close"]},"verdict":{"$ref":"#/$defs/paragraph"},"cause":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"correction":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"customer":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"nextProcedure":{"$ref":"#/$defs/procedureId"}},"required":["id","number","title","action","kind","result","verdict","cause","correction","customer"],"additionalProperties":false},"step":{"type":"object","discriminator":{"propertyName":"kind"},"required":["kind"],"oneOf":[{"$ref":"#/$defs/startStep"},{"$ref":"#/$defs/actionStep"},{"$ref":"#/$defs/readingStep"},{"$ref":"#/$defs/choiceStep"},{"$ref":"#/$defs/listenStep"},{"$ref":"#/$defs/holdStep"},{"$ref":"#/$defs/waitStep"},{"$ref":"#/$defs/codesStep"},{"$ref":"#/$defs/driveStep"},{"$ref":"#/$defs/computeStep"},{"$ref":"#/$defs/restoreStep"},{"$ref":"#/$defs/findingStep"}]}}};
+const schema19 = {"$schema":"https://json-schema.org/draft/2020-12/schema","$id":"procedure-document.schema.json","title":"Procedure document","description":"What a lead authors, a version freezes and a run walks. Agrees with procedure-document.ts; what lies between the parts (names, ways, restoring) is the lint's.","type":"object","properties":{"format":{"const":1},"id":{"$ref":"#/$defs/procedureId"},"title":{"$ref":"#/$defs/label"},"purpose":{"$ref":"#/$defs/paragraph"},"system":{"$ref":"#/$defs/label"},"appliesTo":{"$ref":"#/$defs/appliesTo"},"expectedMinutes":{"type":"integer","minimum":1,"maximum":1440},"useLevel":{"enum":["every-step","consulted"]},"pair":{"type":"boolean"},"gear":{"type":"array","items":{"$ref":"#/$defs/gearNeed"},"maxItems":30},"inputs":{"type":"array","items":{"$ref":"#/$defs/input"},"maxItems":100},"pictures":{"type":"array","items":{"$ref":"#/$defs/identifier"},"maxItems":30},"references":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":50},"deference":{"$ref":"#/$defs/paragraph"},"start":{"$ref":"#/$defs/startCard"},"limits":{"type":"array","items":{"$ref":"#/$defs/limit"},"maxItems":20},"stop":{"$ref":"#/$defs/stopSheet"},"steps":{"type":"array","items":{"$ref":"#/$defs/step"},"minItems":2,"maxItems":500}},"required":["format","id","title","purpose","system","appliesTo","expectedMinutes","useLevel","gear","inputs","pictures","references","deference","start","limits","stop","steps"],"additionalProperties":false,"$defs":{"unit":{"enum":["kPa","Pa","hPa","bar","psi","inHg","inH2O","mmHg","degC","degF","K","L/min","ft3/min","m3/s","g/s","kg/h","lb/min","L","cm3","m","km","mi","Nm","lbf.ft","V","mV","ohm","kohm","s","min","h","km/h","mph","%","1","rpm","dB"]},"sense":{"description":"Gauge and absolute are different kinds.","enum":["absolute","gauge"]},"name":{"description":"A name in expressions: letters and digits, first letter small.","type":"string","pattern":"^[a-z][A-Za-z0-9]*$","maxLength":60},"identifier":{"description":"Letters, digits and hyphens.","type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"procedureId":{"description":"Lower-case words joined by hyphens.","type":"string","pattern":"^[a-z0-9]+(-[a-z0-9]+)*$","maxLength":80},"decimal":{"description":"A figure as text, with the digits that it was given with.","type":"string","pattern":"^-?[0-9]+(\\.[0-9]+)?$","maxLength":20},"expression":{"description":"Text in the expression language.","type":"string","minLength":1,"maxLength":2000},"label":{"type":"string","minLength":1,"maxLength":120},"line":{"type":"string","minLength":1,"maxLength":300},"paragraph":{"description":"May be a template: {name} stands for a value of the run.","type":"string","minLength":1,"maxLength":1000},"range":{"type":"object","properties":{"low":{"type":"number"},"high":{"type":"number"}},"required":["low","high"],"additionalProperties":false},"caution":{"type":"object","properties":{"word":{"enum":["danger","warning","caution","notice"]},"text":{"$ref":"#/$defs/paragraph"}},"required":["word","text"],"additionalProperties":false},"appliesTo":{"type":"object","properties":{"codes":{"type":"array","items":{"type":"string","pattern":"^[PCBU][0-3][0-9A-F]{3}$"},"maxItems":100},"symptoms":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":30},"engine":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":30}},"required":["codes","symptoms","engine"],"additionalProperties":false},"instrumentKind":{"enum":["pressure-gauge","scan-tool","listening-probe","barometer","thermometer"]},"gearNeed":{"type":"object","properties":{"role":{"$ref":"#/$defs/name"},"kind":{"$ref":"#/$defs/instrumentKind"},"label":{"$ref":"#/$defs/label"},"optional":{"type":"boolean"},"shows":{"type":"object","properties":{"unit":{"$ref":"#/$defs/unit"},"low":{"type":"number"},"high":{"type":"number"},"resolution":{"type":"number","exclusiveMinimum":0}},"required":["unit","low","high","resolution"],"additionalProperties":false}},"required":["role","kind","label"],"additionalProperties":false},"input":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"from":{"enum":["site.elevation","visit.displacement","default"]},"default":{"$ref":"#/$defs/decimal"},"source":{"$ref":"#/$defs/line"}},"required":["name","label","unit","from","source"],"additionalProperties":false},"startCard":{"type":"object","properties":{"prerequisites":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":20},"stopActions":{"type":"array","items":{"$ref":"#/$defs/line"},"minItems":1,"maxItems":3},"people":{"$ref":"#/$defs/line"},"throughout":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12}},"required":["prerequisites","stopActions","people","throughout"],"additionalProperties":false},"limit":{"type":"object","properties":{"id":{"$ref":"#/$defs/identifier"},"holds":{"$ref":"#/$defs/expression"},"of":{"type":"array","items":{"$ref":"#/$defs/name"},"minItems":1,"maxItems":50},"says":{"$ref":"#/$defs/line"},"then":{"$ref":"#/$defs/line"}},"required":["id","holds","of","says","then"],"additionalProperties":false},"exit":{"type":"object","properties":{"to":{"description":"A step's id, or `verdict`.","type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"because":{"$ref":"#/$defs/line"},"verdict":{"$ref":"#/$defs/name"}},"required":["to","because"],"additionalProperties":false},"branch":{"type":"object","properties":{"to":{"description":"A step's id, or `verdict`.","type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"because":{"$ref":"#/$defs/line"},"verdict":{"$ref":"#/$defs/name"},"when":{"$ref":"#/$defs/expression"},"atMost":{"type":"integer","minimum":1,"maximum":20},"thenceforth":{"$ref":"#/$defs/exit"}},"required":["to","because","when"],"dependentRequired":{"atMost":["thenceforth"],"thenceforth":["atMost"]},"additionalProperties":false},"stopSheet":{"type":"object","properties":{"makeSafe":{"type":"array","items":{"$ref":"#/$defs/line"},"minItems":1,"maxItems":12},"exit":{"$ref":"#/$defs/exit"}},"required":["makeSafe","exit"],"additionalProperties":false},"band":{"type":"object","properties":{"low":{"$ref":"#/$defs/expression"},"high":{"$ref":"#/$defs/expression"},"when":{"$ref":"#/$defs/expression"},"unjudged":{"$ref":"#/$defs/line"},"source":{"$ref":"#/$defs/line"}},"required":["source"],"anyOf":[{"required":["low"]},{"required":["high"]}],"additionalProperties":false},"result":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"},"is":{"$ref":"#/$defs/expression"}},"required":["name","label","unit","is"],"additionalProperties":false},"entry":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"plausible":{"$ref":"#/$defs/range"},"gear":{"$ref":"#/$defs/name"}},"required":["name","label","unit","plausible"],"additionalProperties":false},"entryWay":{"type":"object","properties":{"id":{"$ref":"#/$defs/identifier"},"label":{"$ref":"#/$defs/label"},"hint":{"$ref":"#/$defs/line"},"entry":{"$ref":"#/$defs/entry"},"is":{"$ref":"#/$defs/expression"},"uncertainty":{"$ref":"#/$defs/expression"}},"required":["id","label","hint","is"],"additionalProperties":false},"readQuantity":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"},"gear":{"$ref":"#/$defs/name"},"plausible":{"$ref":"#/$defs/range"},"takes":{"type":"integer","minimum":1,"maximum":5},"ways":{"type":"array","items":{"$ref":"#/$defs/entryWay"},"minItems":1,"maxItems":10}},"required":["name","label","unit","plausible"],"additionalProperties":false},"picture":{"type":"object","properties":{"sheet":{"$ref":"#/$defs/identifier"},"marks":{"type":"array","items":{"$ref":"#/$defs/identifier"},"maxItems":30},"labels":{"type":"object","propertyNames":{"pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"maxProperties":30,"additionalProperties":{"$ref":"#/$defs/label"}}},"required":["sheet","marks"],"additionalProperties":false},"disturbed":{"type":"object","properties":{"item":{"$ref":"#/$defs/identifier"},"label":{"$ref":"#/$defs/label"},"restore":{"$ref":"#/$defs/line"}},"required":["item","label","restore"],"additionalProperties":false},"option":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"ask":{"$ref":"#/$defs/line"}},"required":["name","label"],"additionalProperties":false},"channel":{"type":"object","properties":{"name":{"enum":["gauge","manifold","boost","sound"]},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"gear":{"$ref":"#/$defs/name"},"needed":{"type":"boolean"}},"required":["name","label","unit","needed"],"additionalProperties":false},"foundTruth":{"type":"object","properties":{"what":{"enum":["noise-heard","noise-stopped"]},"name":{"$ref":"#/$defs/name"}},"required":["what","name"],"additionalProperties":false},"foundQuantity":{"type":"object","properties":{"what":{"enum":["seal-point","highest-gauge","manifold-gain","boost-gain","worst-gap"]},"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"}},"required":["what","name","label","unit"],"additionalProperties":false},"found":{"type":"object","discriminator":{"propertyName":"what"},"required":["what"],"oneOf":[{"$ref":"#/$defs/foundTruth"},{"$ref":"#/$defs/foundQuantity"}]},"driveWindow":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"what":{"$ref":"#/$defs/line"}},"required":["name","label","what"],"additionalProperties":false},"sentence":{"type":"object","properties":{"text":{"$ref":"#/$defs/paragraph"},"when":{"$ref":"#/$defs/expression"}},"required":["text"],"additionalProperties":false},"startStep":{"type":"object","properties":{"kind":{"const":"start"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"actionStep":{"type":"object","properties":{"kind":{"const":"action"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"readingStep":{"type":"object","properties":{"kind":{"const":"reading"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"reads":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","reads"],"additionalProperties":false},"choiceStep":{"type":"object","properties":{"kind":{"const":"choice"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"name":{"$ref":"#/$defs/name"},"several":{"type":"boolean"},"options":{"type":"array","items":{"$ref":"#/$defs/option"},"minItems":1,"maxItems":30},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","options"],"additionalProperties":false},"listenStep":{"type":"object","properties":{"kind":{"const":"listen"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"name":{"$ref":"#/$defs/name"},"channels":{"type":"array","items":{"$ref":"#/$defs/channel"},"minItems":1,"maxItems":4},"target":{"type":"number"},"finds":{"type":"array","items":{"$ref":"#/$defs/found"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","channels","target","finds"],"additionalProperties":false},"holdStep":{"type":"object","properties":{"kind":{"const":"hold"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"seconds":{"type":"integer","minimum":1,"maximum":86400},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","seconds"],"additionalProperties":false},"waitStep":{"type":"object","properties":{"kind":{"const":"wait"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"reads":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"until":{"$ref":"#/$defs/expression"},"meanwhile":{"$ref":"#/$defs/paragraph"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","reads","until","meanwhile"],"additionalProperties":false},"codesStep":{"type":"object","properties":{"kind":{"const":"codes"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"name":{"$ref":"#/$defs/name"},"comparedWith":{"$ref":"#/$defs/name"},"newCodes":{"$ref":"#/$defs/name"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name"],"additionalProperties":false},"driveStep":{"type":"object","properties":{"kind":{"const":"drive"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"name":{"$ref":"#/$defs/name"},"windows":{"type":"array","items":{"$ref":"#/$defs/driveWindow"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","windows"],"additionalProperties":false},"computeStep":{"type":"object","properties":{"kind":{"const":"compute"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"restoreStep":{"type":"object","properties":{"kind":{"const":"restore"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"findingStep":{"type":"object","properties":{"kind":{"const":"finding"},"id":{"$ref":"#/$defs/name"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"result":{"enum":["in","out","too-close"]},"verdict":{"$ref":"#/$defs/paragraph"},"cause":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"correction":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"customer":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"nextProcedure":{"$ref":"#/$defs/procedureId"}},"required":["id","number","title","action","kind","result","verdict","cause","correction","customer"],"additionalProperties":false},"step":{"type":"object","discriminator":{"propertyName":"kind"},"required":["kind"],"oneOf":[{"$ref":"#/$defs/startStep"},{"$ref":"#/$defs/actionStep"},{"$ref":"#/$defs/readingStep"},{"$ref":"#/$defs/choiceStep"},{"$ref":"#/$defs/listenStep"},{"$ref":"#/$defs/holdStep"},{"$ref":"#/$defs/waitStep"},{"$ref":"#/$defs/codesStep"},{"$ref":"#/$defs/driveStep"},{"$ref":"#/$defs/computeStep"},{"$ref":"#/$defs/restoreStep"},{"$ref":"#/$defs/findingStep"}]}}};
 const func1 = Object.prototype.hasOwnProperty;
 const schema20 = {"description":"Lower-case words joined by hyphens.","type":"string","pattern":"^[a-z0-9]+(-[a-z0-9]+)*$","maxLength":80};
 const func2 = (text) => [...text].length;
@@ -1683,7 +1683,7 @@ validate104.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false}
 
 const schema39 = {"type":"object","discriminator":{"propertyName":"kind"},"required":["kind"],"oneOf":[{"$ref":"#/$defs/startStep"},{"$ref":"#/$defs/actionStep"},{"$ref":"#/$defs/readingStep"},{"$ref":"#/$defs/choiceStep"},{"$ref":"#/$defs/listenStep"},{"$ref":"#/$defs/holdStep"},{"$ref":"#/$defs/waitStep"},{"$ref":"#/$defs/codesStep"},{"$ref":"#/$defs/driveStep"},{"$ref":"#/$defs/computeStep"},{"$ref":"#/$defs/restoreStep"},{"$ref":"#/$defs/findingStep"}]};
 const schema40 = {"type":"object","properties":{"kind":{"const":"start"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false};
-const schema41 = {"type":"object","properties":{"sheet":{"$ref":"#/$defs/identifier"},"marks":{"type":"array","items":{"$ref":"#/$defs/identifier"},"maxItems":30},"labels":{"type":"object","propertyNames":{"$ref":"#/$defs/identifier"},"maxProperties":30,"additionalProperties":{"$ref":"#/$defs/label"}}},"required":["sheet","marks"],"additionalProperties":false};
+const schema41 = {"type":"object","properties":{"sheet":{"$ref":"#/$defs/identifier"},"marks":{"type":"array","items":{"$ref":"#/$defs/identifier"},"maxItems":30},"labels":{"type":"object","propertyNames":{"pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"maxProperties":30,"additionalProperties":{"$ref":"#/$defs/label"}}},"required":["sheet","marks"],"additionalProperties":false};
 
 function validate118(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
@@ -1781,18 +1781,36 @@ errors++;
 }
 for(const key1 in data3){
 const _errs8 = errors;
-if(!(validate84(key1, {instancePath:instancePath+"/labels",parentData:data3,parentDataProperty:"labels",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate84.errors : vErrors.concat(validate84.errors);
-errors = vErrors.length;
-}
-var valid3 = _errs8 === errors;
-if(!valid3){
-const err6 = {instancePath:instancePath+"/labels",schemaPath:"#/properties/labels/propertyNames",keyword:"propertyNames",params:{propertyName: key1},message:"property name must be valid"};
+if(typeof key1 === "string"){
+if(func2(key1) > 60){
+const err6 = {instancePath:instancePath+"/labels",schemaPath:"#/properties/labels/propertyNames/maxLength",keyword:"maxLength",params:{limit: 60},message:"must NOT have more than 60 characters",propertyName:key1};
 if(vErrors === null){
 vErrors = [err6];
 }
 else {
 vErrors.push(err6);
+}
+errors++;
+}
+if(!pattern7.test(key1)){
+const err7 = {instancePath:instancePath+"/labels",schemaPath:"#/properties/labels/propertyNames/pattern",keyword:"pattern",params:{pattern: "^[A-Za-z][A-Za-z0-9-]*$"},message:"must match pattern \""+"^[A-Za-z][A-Za-z0-9-]*$"+"\"",propertyName:key1};
+if(vErrors === null){
+vErrors = [err7];
+}
+else {
+vErrors.push(err7);
+}
+errors++;
+}
+}
+var valid3 = _errs8 === errors;
+if(!valid3){
+const err8 = {instancePath:instancePath+"/labels",schemaPath:"#/properties/labels/propertyNames",keyword:"propertyNames",params:{propertyName: key1},message:"property name must be valid"};
+if(vErrors === null){
+vErrors = [err8];
+}
+else {
+vErrors.push(err8);
 }
 errors++;
 }
@@ -1805,24 +1823,24 @@ errors = vErrors.length;
 }
 }
 else {
-const err7 = {instancePath:instancePath+"/labels",schemaPath:"#/properties/labels/type",keyword:"type",params:{type: "object"},message:"must be object"};
+const err9 = {instancePath:instancePath+"/labels",schemaPath:"#/properties/labels/type",keyword:"type",params:{type: "object"},message:"must be object"};
 if(vErrors === null){
-vErrors = [err7];
+vErrors = [err9];
 }
 else {
-vErrors.push(err7);
+vErrors.push(err9);
 }
 errors++;
 }
 }
 }
 else {
-const err8 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
+const err10 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
 if(vErrors === null){
-vErrors = [err8];
+vErrors = [err10];
 }
 else {
-vErrors.push(err8);
+vErrors.push(err10);
 }
 errors++;
 }
@@ -1833,10 +1851,10 @@ validate118.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false}
 
 const schema42 = {"type":"object","properties":{"item":{"$ref":"#/$defs/identifier"},"label":{"$ref":"#/$defs/label"},"restore":{"$ref":"#/$defs/line"}},"required":["item","label","restore"],"additionalProperties":false};
 
-function validate124(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate123(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate124.evaluated;
+const evaluated0 = validate123.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -1915,17 +1933,17 @@ vErrors.push(err4);
 }
 errors++;
 }
-validate124.errors = vErrors;
+validate123.errors = vErrors;
 return errors === 0;
 }
-validate124.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate123.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema43 = {"type":"object","properties":{"to":{"description":"A step's id, or `verdict`.","type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"because":{"$ref":"#/$defs/line"},"verdict":{"$ref":"#/$defs/name"},"when":{"$ref":"#/$defs/expression"},"atMost":{"type":"integer","minimum":1,"maximum":20},"thenceforth":{"$ref":"#/$defs/exit"}},"required":["to","because","when"],"dependentRequired":{"atMost":["thenceforth"],"thenceforth":["atMost"]},"additionalProperties":false};
 
-function validate129(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate128(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate129.evaluated;
+const evaluated0 = validate128.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -2110,18 +2128,18 @@ vErrors.push(err12);
 }
 errors++;
 }
-validate129.errors = vErrors;
+validate128.errors = vErrors;
 return errors === 0;
 }
-validate129.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate128.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema44 = {"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"},"is":{"$ref":"#/$defs/expression"}},"required":["name","label","unit","is"],"additionalProperties":false};
 const schema45 = {"type":"object","properties":{"low":{"$ref":"#/$defs/expression"},"high":{"$ref":"#/$defs/expression"},"when":{"$ref":"#/$defs/expression"},"unjudged":{"$ref":"#/$defs/line"},"source":{"$ref":"#/$defs/line"}},"required":["source"],"anyOf":[{"required":["low"]},{"required":["high"]}],"additionalProperties":false};
 
-function validate141(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate140(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate141.evaluated;
+const evaluated0 = validate140.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -2245,16 +2263,16 @@ vErrors.push(err5);
 }
 errors++;
 }
-validate141.errors = vErrors;
+validate140.errors = vErrors;
 return errors === 0;
 }
-validate141.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate140.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 
-function validate136(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate135(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate136.evaluated;
+const evaluated0 = validate135.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -2339,8 +2357,8 @@ errors = vErrors.length;
 }
 }
 if(data.band !== undefined){
-if(!(validate141(data.band, {instancePath:instancePath+"/band",parentData:data,parentDataProperty:"band",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate141.errors : vErrors.concat(validate141.errors);
+if(!(validate140(data.band, {instancePath:instancePath+"/band",parentData:data,parentDataProperty:"band",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate140.errors : vErrors.concat(validate140.errors);
 errors = vErrors.length;
 }
 }
@@ -2361,10 +2379,10 @@ vErrors.push(err5);
 }
 errors++;
 }
-validate136.errors = vErrors;
+validate135.errors = vErrors;
 return errors === 0;
 }
-validate136.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate135.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const pattern9 = new RegExp("^[A-Za-z0-9]+$", "u");
 
@@ -2585,8 +2603,8 @@ errors++;
 }
 const len1 = data9.length;
 for(let i1=0; i1<len1; i1++){
-if(!(validate124(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate124.errors : vErrors.concat(validate124.errors);
+if(!(validate123(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate123.errors : vErrors.concat(validate123.errors);
 errors = vErrors.length;
 }
 }
@@ -2617,8 +2635,8 @@ errors++;
 }
 const len2 = data11.length;
 for(let i2=0; i2<len2; i2++){
-if(!(validate129(data11[i2], {instancePath:instancePath+"/next/" + i2,parentData:data11,parentDataProperty:i2,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate129.errors : vErrors.concat(validate129.errors);
+if(!(validate128(data11[i2], {instancePath:instancePath+"/next/" + i2,parentData:data11,parentDataProperty:i2,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate128.errors : vErrors.concat(validate128.errors);
 errors = vErrors.length;
 }
 }
@@ -2655,8 +2673,8 @@ errors++;
 }
 const len3 = data14.length;
 for(let i3=0; i3<len3; i3++){
-if(!(validate136(data14[i3], {instancePath:instancePath+"/results/" + i3,parentData:data14,parentDataProperty:i3,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate136.errors : vErrors.concat(validate136.errors);
+if(!(validate135(data14[i3], {instancePath:instancePath+"/results/" + i3,parentData:data14,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate135.errors : vErrors.concat(validate135.errors);
 errors = vErrors.length;
 }
 }
@@ -2690,10 +2708,10 @@ validate112.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false}
 
 const schema46 = {"type":"object","properties":{"kind":{"const":"action"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false};
 
-function validate150(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate149(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate150.evaluated;
+const evaluated0 = validate149.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -2907,8 +2925,8 @@ errors++;
 }
 const len1 = data9.length;
 for(let i1=0; i1<len1; i1++){
-if(!(validate124(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate124.errors : vErrors.concat(validate124.errors);
+if(!(validate123(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate123.errors : vErrors.concat(validate123.errors);
 errors = vErrors.length;
 }
 }
@@ -2939,8 +2957,8 @@ errors++;
 }
 const len2 = data11.length;
 for(let i2=0; i2<len2; i2++){
-if(!(validate129(data11[i2], {instancePath:instancePath+"/next/" + i2,parentData:data11,parentDataProperty:i2,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate129.errors : vErrors.concat(validate129.errors);
+if(!(validate128(data11[i2], {instancePath:instancePath+"/next/" + i2,parentData:data11,parentDataProperty:i2,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate128.errors : vErrors.concat(validate128.errors);
 errors = vErrors.length;
 }
 }
@@ -2977,8 +2995,8 @@ errors++;
 }
 const len3 = data14.length;
 for(let i3=0; i3<len3; i3++){
-if(!(validate136(data14[i3], {instancePath:instancePath+"/results/" + i3,parentData:data14,parentDataProperty:i3,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate136.errors : vErrors.concat(validate136.errors);
+if(!(validate135(data14[i3], {instancePath:instancePath+"/results/" + i3,parentData:data14,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate135.errors : vErrors.concat(validate135.errors);
 errors = vErrors.length;
 }
 }
@@ -3005,19 +3023,19 @@ vErrors.push(err20);
 }
 errors++;
 }
-validate150.errors = vErrors;
+validate149.errors = vErrors;
 return errors === 0;
 }
-validate150.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate149.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema47 = {"type":"object","properties":{"kind":{"const":"reading"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"reads":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","reads"],"additionalProperties":false};
 const schema48 = {"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"},"gear":{"$ref":"#/$defs/name"},"plausible":{"$ref":"#/$defs/range"},"takes":{"type":"integer","minimum":1,"maximum":5},"ways":{"type":"array","items":{"$ref":"#/$defs/entryWay"},"minItems":1,"maxItems":10}},"required":["name","label","unit","plausible"],"additionalProperties":false};
 const schema49 = {"type":"object","properties":{"low":{"type":"number"},"high":{"type":"number"}},"required":["low","high"],"additionalProperties":false};
 
-function validate176(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate175(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate176.evaluated;
+const evaluated0 = validate175.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -3094,18 +3112,18 @@ vErrors.push(err5);
 }
 errors++;
 }
-validate176.errors = vErrors;
+validate175.errors = vErrors;
 return errors === 0;
 }
-validate176.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate175.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema50 = {"type":"object","properties":{"id":{"$ref":"#/$defs/identifier"},"label":{"$ref":"#/$defs/label"},"hint":{"$ref":"#/$defs/line"},"entry":{"$ref":"#/$defs/entry"},"is":{"$ref":"#/$defs/expression"},"uncertainty":{"$ref":"#/$defs/expression"}},"required":["id","label","hint","is"],"additionalProperties":false};
 const schema51 = {"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"plausible":{"$ref":"#/$defs/range"},"gear":{"$ref":"#/$defs/name"}},"required":["name","label","unit","plausible"],"additionalProperties":false};
 
-function validate182(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate181(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate182.evaluated;
+const evaluated0 = validate181.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -3190,8 +3208,8 @@ errors = vErrors.length;
 }
 }
 if(data.plausible !== undefined){
-if(!(validate176(data.plausible, {instancePath:instancePath+"/plausible",parentData:data,parentDataProperty:"plausible",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate176.errors : vErrors.concat(validate176.errors);
+if(!(validate175(data.plausible, {instancePath:instancePath+"/plausible",parentData:data,parentDataProperty:"plausible",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate175.errors : vErrors.concat(validate175.errors);
 errors = vErrors.length;
 }
 }
@@ -3212,16 +3230,16 @@ vErrors.push(err5);
 }
 errors++;
 }
-validate182.errors = vErrors;
+validate181.errors = vErrors;
 return errors === 0;
 }
-validate182.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate181.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 
-function validate178(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate177(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate178.evaluated;
+const evaluated0 = validate177.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -3300,8 +3318,8 @@ errors = vErrors.length;
 }
 }
 if(data.entry !== undefined){
-if(!(validate182(data.entry, {instancePath:instancePath+"/entry",parentData:data,parentDataProperty:"entry",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate182.errors : vErrors.concat(validate182.errors);
+if(!(validate181(data.entry, {instancePath:instancePath+"/entry",parentData:data,parentDataProperty:"entry",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate181.errors : vErrors.concat(validate181.errors);
 errors = vErrors.length;
 }
 }
@@ -3328,16 +3346,16 @@ vErrors.push(err5);
 }
 errors++;
 }
-validate178.errors = vErrors;
+validate177.errors = vErrors;
 return errors === 0;
 }
-validate178.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate177.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 
-function validate169(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate168(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate169.evaluated;
+const evaluated0 = validate168.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -3422,8 +3440,8 @@ errors = vErrors.length;
 }
 }
 if(data.band !== undefined){
-if(!(validate141(data.band, {instancePath:instancePath+"/band",parentData:data,parentDataProperty:"band",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate141.errors : vErrors.concat(validate141.errors);
+if(!(validate140(data.band, {instancePath:instancePath+"/band",parentData:data,parentDataProperty:"band",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate140.errors : vErrors.concat(validate140.errors);
 errors = vErrors.length;
 }
 }
@@ -3434,8 +3452,8 @@ errors = vErrors.length;
 }
 }
 if(data.plausible !== undefined){
-if(!(validate176(data.plausible, {instancePath:instancePath+"/plausible",parentData:data,parentDataProperty:"plausible",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate176.errors : vErrors.concat(validate176.errors);
+if(!(validate175(data.plausible, {instancePath:instancePath+"/plausible",parentData:data,parentDataProperty:"plausible",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate175.errors : vErrors.concat(validate175.errors);
 errors = vErrors.length;
 }
 }
@@ -3499,8 +3517,8 @@ errors++;
 }
 const len0 = data8.length;
 for(let i0=0; i0<len0; i0++){
-if(!(validate178(data8[i0], {instancePath:instancePath+"/ways/" + i0,parentData:data8,parentDataProperty:i0,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate178.errors : vErrors.concat(validate178.errors);
+if(!(validate177(data8[i0], {instancePath:instancePath+"/ways/" + i0,parentData:data8,parentDataProperty:i0,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate177.errors : vErrors.concat(validate177.errors);
 errors = vErrors.length;
 }
 }
@@ -3527,16 +3545,16 @@ vErrors.push(err11);
 }
 errors++;
 }
-validate169.errors = vErrors;
+validate168.errors = vErrors;
 return errors === 0;
 }
-validate169.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate168.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 
-function validate161(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate160(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate161.evaluated;
+const evaluated0 = validate160.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -3770,8 +3788,8 @@ errors++;
 }
 const len1 = data9.length;
 for(let i1=0; i1<len1; i1++){
-if(!(validate124(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate124.errors : vErrors.concat(validate124.errors);
+if(!(validate123(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate123.errors : vErrors.concat(validate123.errors);
 errors = vErrors.length;
 }
 }
@@ -3812,8 +3830,8 @@ errors++;
 }
 const len2 = data11.length;
 for(let i2=0; i2<len2; i2++){
-if(!(validate169(data11[i2], {instancePath:instancePath+"/reads/" + i2,parentData:data11,parentDataProperty:i2,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate169.errors : vErrors.concat(validate169.errors);
+if(!(validate168(data11[i2], {instancePath:instancePath+"/reads/" + i2,parentData:data11,parentDataProperty:i2,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate168.errors : vErrors.concat(validate168.errors);
 errors = vErrors.length;
 }
 }
@@ -3844,8 +3862,8 @@ errors++;
 }
 const len3 = data13.length;
 for(let i3=0; i3<len3; i3++){
-if(!(validate129(data13[i3], {instancePath:instancePath+"/next/" + i3,parentData:data13,parentDataProperty:i3,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate129.errors : vErrors.concat(validate129.errors);
+if(!(validate128(data13[i3], {instancePath:instancePath+"/next/" + i3,parentData:data13,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate128.errors : vErrors.concat(validate128.errors);
 errors = vErrors.length;
 }
 }
@@ -3882,8 +3900,8 @@ errors++;
 }
 const len4 = data16.length;
 for(let i4=0; i4<len4; i4++){
-if(!(validate136(data16[i4], {instancePath:instancePath+"/results/" + i4,parentData:data16,parentDataProperty:i4,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate136.errors : vErrors.concat(validate136.errors);
+if(!(validate135(data16[i4], {instancePath:instancePath+"/results/" + i4,parentData:data16,parentDataProperty:i4,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate135.errors : vErrors.concat(validate135.errors);
 errors = vErrors.length;
 }
 }
@@ -3916,18 +3934,18 @@ vErrors.push(err25);
 }
 errors++;
 }
-validate161.errors = vErrors;
+validate160.errors = vErrors;
 return errors === 0;
 }
-validate161.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate160.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema52 = {"type":"object","properties":{"kind":{"const":"choice"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"name":{"$ref":"#/$defs/name"},"several":{"type":"boolean"},"options":{"type":"array","items":{"$ref":"#/$defs/option"},"minItems":1,"maxItems":30},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","options"],"additionalProperties":false};
 const schema53 = {"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"ask":{"$ref":"#/$defs/line"}},"required":["name","label"],"additionalProperties":false};
 
-function validate207(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate206(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate207.evaluated;
+const evaluated0 = validate206.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -3996,16 +4014,16 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate207.errors = vErrors;
+validate206.errors = vErrors;
 return errors === 0;
 }
-validate207.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate206.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 
-function validate198(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate197(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate198.evaluated;
+const evaluated0 = validate197.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4249,8 +4267,8 @@ errors++;
 }
 const len1 = data9.length;
 for(let i1=0; i1<len1; i1++){
-if(!(validate124(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate124.errors : vErrors.concat(validate124.errors);
+if(!(validate123(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate123.errors : vErrors.concat(validate123.errors);
 errors = vErrors.length;
 }
 }
@@ -4309,8 +4327,8 @@ errors++;
 }
 const len2 = data13.length;
 for(let i2=0; i2<len2; i2++){
-if(!(validate207(data13[i2], {instancePath:instancePath+"/options/" + i2,parentData:data13,parentDataProperty:i2,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate207.errors : vErrors.concat(validate207.errors);
+if(!(validate206(data13[i2], {instancePath:instancePath+"/options/" + i2,parentData:data13,parentDataProperty:i2,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate206.errors : vErrors.concat(validate206.errors);
 errors = vErrors.length;
 }
 }
@@ -4341,8 +4359,8 @@ errors++;
 }
 const len3 = data15.length;
 for(let i3=0; i3<len3; i3++){
-if(!(validate129(data15[i3], {instancePath:instancePath+"/next/" + i3,parentData:data15,parentDataProperty:i3,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate129.errors : vErrors.concat(validate129.errors);
+if(!(validate128(data15[i3], {instancePath:instancePath+"/next/" + i3,parentData:data15,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate128.errors : vErrors.concat(validate128.errors);
 errors = vErrors.length;
 }
 }
@@ -4379,8 +4397,8 @@ errors++;
 }
 const len4 = data18.length;
 for(let i4=0; i4<len4; i4++){
-if(!(validate136(data18[i4], {instancePath:instancePath+"/results/" + i4,parentData:data18,parentDataProperty:i4,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate136.errors : vErrors.concat(validate136.errors);
+if(!(validate135(data18[i4], {instancePath:instancePath+"/results/" + i4,parentData:data18,parentDataProperty:i4,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate135.errors : vErrors.concat(validate135.errors);
 errors = vErrors.length;
 }
 }
@@ -4413,18 +4431,18 @@ vErrors.push(err27);
 }
 errors++;
 }
-validate198.errors = vErrors;
+validate197.errors = vErrors;
 return errors === 0;
 }
-validate198.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate197.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema54 = {"type":"object","properties":{"kind":{"const":"listen"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"name":{"$ref":"#/$defs/name"},"channels":{"type":"array","items":{"$ref":"#/$defs/channel"},"minItems":1,"maxItems":4},"target":{"type":"number"},"finds":{"type":"array","items":{"$ref":"#/$defs/found"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","channels","target","finds"],"additionalProperties":false};
 const schema55 = {"type":"object","properties":{"name":{"enum":["gauge","manifold","boost","sound"]},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"gear":{"$ref":"#/$defs/name"},"needed":{"type":"boolean"}},"required":["name","label","unit","needed"],"additionalProperties":false};
 
-function validate225(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate224(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate225.evaluated;
+const evaluated0 = validate224.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4544,18 +4562,18 @@ vErrors.push(err7);
 }
 errors++;
 }
-validate225.errors = vErrors;
+validate224.errors = vErrors;
 return errors === 0;
 }
-validate225.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate224.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema56 = {"type":"object","discriminator":{"propertyName":"what"},"required":["what"],"oneOf":[{"$ref":"#/$defs/foundTruth"},{"$ref":"#/$defs/foundQuantity"}]};
 const schema57 = {"type":"object","properties":{"what":{"enum":["noise-heard","noise-stopped"]},"name":{"$ref":"#/$defs/name"}},"required":["what","name"],"additionalProperties":false};
 
-function validate232(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate231(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate232.evaluated;
+const evaluated0 = validate231.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4625,17 +4643,17 @@ vErrors.push(err4);
 }
 errors++;
 }
-validate232.errors = vErrors;
+validate231.errors = vErrors;
 return errors === 0;
 }
-validate232.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate231.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema58 = {"type":"object","properties":{"what":{"enum":["seal-point","highest-gauge","manifold-gain","boost-gain","worst-gap"]},"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"}},"required":["what","name","label","unit"],"additionalProperties":false};
 
-function validate234(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate233(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate234.evaluated;
+const evaluated0 = validate233.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4733,8 +4751,8 @@ errors = vErrors.length;
 }
 }
 if(data.band !== undefined){
-if(!(validate141(data.band, {instancePath:instancePath+"/band",parentData:data,parentDataProperty:"band",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate141.errors : vErrors.concat(validate141.errors);
+if(!(validate140(data.band, {instancePath:instancePath+"/band",parentData:data,parentDataProperty:"band",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate140.errors : vErrors.concat(validate140.errors);
 errors = vErrors.length;
 }
 }
@@ -4749,16 +4767,16 @@ vErrors.push(err6);
 }
 errors++;
 }
-validate234.errors = vErrors;
+validate233.errors = vErrors;
 return errors === 0;
 }
-validate234.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate233.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 
-function validate231(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate230(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate231.evaluated;
+const evaluated0 = validate230.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4779,15 +4797,15 @@ errors++;
 const tag0 = data.what;
 if(typeof tag0 == "string"){
 if(tag0 === "noise-heard"){
-if(!(validate232(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate232.errors : vErrors.concat(validate232.errors);
+if(!(validate231(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate231.errors : vErrors.concat(validate231.errors);
 errors = vErrors.length;
 }
 var props0 = true;
 }
 else if(tag0 === "noise-stopped"){
-if(!(validate232(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate232.errors : vErrors.concat(validate232.errors);
+if(!(validate231(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate231.errors : vErrors.concat(validate231.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -4795,8 +4813,8 @@ props0 = true;
 }
 }
 else if(tag0 === "seal-point"){
-if(!(validate234(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate234.errors : vErrors.concat(validate234.errors);
+if(!(validate233(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate233.errors : vErrors.concat(validate233.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -4804,8 +4822,8 @@ props0 = true;
 }
 }
 else if(tag0 === "highest-gauge"){
-if(!(validate234(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate234.errors : vErrors.concat(validate234.errors);
+if(!(validate233(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate233.errors : vErrors.concat(validate233.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -4813,8 +4831,8 @@ props0 = true;
 }
 }
 else if(tag0 === "manifold-gain"){
-if(!(validate234(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate234.errors : vErrors.concat(validate234.errors);
+if(!(validate233(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate233.errors : vErrors.concat(validate233.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -4822,8 +4840,8 @@ props0 = true;
 }
 }
 else if(tag0 === "boost-gain"){
-if(!(validate234(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate234.errors : vErrors.concat(validate234.errors);
+if(!(validate233(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate233.errors : vErrors.concat(validate233.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -4831,8 +4849,8 @@ props0 = true;
 }
 }
 else if(tag0 === "worst-gap"){
-if(!(validate234(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate234.errors : vErrors.concat(validate234.errors);
+if(!(validate233(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate233.errors : vErrors.concat(validate233.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -4871,17 +4889,17 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate231.errors = vErrors;
+validate230.errors = vErrors;
 evaluated0.props = props0;
 return errors === 0;
 }
-validate231.evaluated = {"dynamicProps":true,"dynamicItems":false};
+validate230.evaluated = {"dynamicProps":true,"dynamicItems":false};
 
 
-function validate216(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate215(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate216.evaluated;
+const evaluated0 = validate215.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -5145,8 +5163,8 @@ errors++;
 }
 const len1 = data9.length;
 for(let i1=0; i1<len1; i1++){
-if(!(validate124(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate124.errors : vErrors.concat(validate124.errors);
+if(!(validate123(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate123.errors : vErrors.concat(validate123.errors);
 errors = vErrors.length;
 }
 }
@@ -5193,8 +5211,8 @@ errors++;
 }
 const len2 = data12.length;
 for(let i2=0; i2<len2; i2++){
-if(!(validate225(data12[i2], {instancePath:instancePath+"/channels/" + i2,parentData:data12,parentDataProperty:i2,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate225.errors : vErrors.concat(validate225.errors);
+if(!(validate224(data12[i2], {instancePath:instancePath+"/channels/" + i2,parentData:data12,parentDataProperty:i2,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate224.errors : vErrors.concat(validate224.errors);
 errors = vErrors.length;
 }
 }
@@ -5248,8 +5266,8 @@ errors++;
 }
 const len3 = data15.length;
 for(let i3=0; i3<len3; i3++){
-if(!(validate231(data15[i3], {instancePath:instancePath+"/finds/" + i3,parentData:data15,parentDataProperty:i3,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate231.errors : vErrors.concat(validate231.errors);
+if(!(validate230(data15[i3], {instancePath:instancePath+"/finds/" + i3,parentData:data15,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate230.errors : vErrors.concat(validate230.errors);
 errors = vErrors.length;
 }
 }
@@ -5280,8 +5298,8 @@ errors++;
 }
 const len4 = data17.length;
 for(let i4=0; i4<len4; i4++){
-if(!(validate129(data17[i4], {instancePath:instancePath+"/next/" + i4,parentData:data17,parentDataProperty:i4,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate129.errors : vErrors.concat(validate129.errors);
+if(!(validate128(data17[i4], {instancePath:instancePath+"/next/" + i4,parentData:data17,parentDataProperty:i4,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate128.errors : vErrors.concat(validate128.errors);
 errors = vErrors.length;
 }
 }
@@ -5318,8 +5336,8 @@ errors++;
 }
 const len5 = data20.length;
 for(let i5=0; i5<len5; i5++){
-if(!(validate136(data20[i5], {instancePath:instancePath+"/results/" + i5,parentData:data20,parentDataProperty:i5,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate136.errors : vErrors.concat(validate136.errors);
+if(!(validate135(data20[i5], {instancePath:instancePath+"/results/" + i5,parentData:data20,parentDataProperty:i5,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate135.errors : vErrors.concat(validate135.errors);
 errors = vErrors.length;
 }
 }
@@ -5352,17 +5370,17 @@ vErrors.push(err32);
 }
 errors++;
 }
-validate216.errors = vErrors;
+validate215.errors = vErrors;
 return errors === 0;
 }
-validate216.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate215.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema59 = {"type":"object","properties":{"kind":{"const":"hold"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"seconds":{"type":"integer","minimum":1,"maximum":86400},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","seconds"],"additionalProperties":false};
 
-function validate252(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate251(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate252.evaluated;
+const evaluated0 = validate251.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -5596,8 +5614,8 @@ errors++;
 }
 const len1 = data9.length;
 for(let i1=0; i1<len1; i1++){
-if(!(validate124(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate124.errors : vErrors.concat(validate124.errors);
+if(!(validate123(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate123.errors : vErrors.concat(validate123.errors);
 errors = vErrors.length;
 }
 }
@@ -5663,8 +5681,8 @@ errors++;
 }
 const len2 = data12.length;
 for(let i2=0; i2<len2; i2++){
-if(!(validate129(data12[i2], {instancePath:instancePath+"/next/" + i2,parentData:data12,parentDataProperty:i2,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate129.errors : vErrors.concat(validate129.errors);
+if(!(validate128(data12[i2], {instancePath:instancePath+"/next/" + i2,parentData:data12,parentDataProperty:i2,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate128.errors : vErrors.concat(validate128.errors);
 errors = vErrors.length;
 }
 }
@@ -5701,8 +5719,8 @@ errors++;
 }
 const len3 = data15.length;
 for(let i3=0; i3<len3; i3++){
-if(!(validate136(data15[i3], {instancePath:instancePath+"/results/" + i3,parentData:data15,parentDataProperty:i3,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate136.errors : vErrors.concat(validate136.errors);
+if(!(validate135(data15[i3], {instancePath:instancePath+"/results/" + i3,parentData:data15,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate135.errors : vErrors.concat(validate135.errors);
 errors = vErrors.length;
 }
 }
@@ -5735,17 +5753,17 @@ vErrors.push(err25);
 }
 errors++;
 }
-validate252.errors = vErrors;
+validate251.errors = vErrors;
 return errors === 0;
 }
-validate252.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate251.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema60 = {"type":"object","properties":{"kind":{"const":"wait"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"reads":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"until":{"$ref":"#/$defs/expression"},"meanwhile":{"$ref":"#/$defs/paragraph"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","reads","until","meanwhile"],"additionalProperties":false};
 
-function validate264(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate263(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate264.evaluated;
+const evaluated0 = validate263.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -5999,8 +6017,8 @@ errors++;
 }
 const len1 = data9.length;
 for(let i1=0; i1<len1; i1++){
-if(!(validate124(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate124.errors : vErrors.concat(validate124.errors);
+if(!(validate123(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate123.errors : vErrors.concat(validate123.errors);
 errors = vErrors.length;
 }
 }
@@ -6041,8 +6059,8 @@ errors++;
 }
 const len2 = data11.length;
 for(let i2=0; i2<len2; i2++){
-if(!(validate169(data11[i2], {instancePath:instancePath+"/reads/" + i2,parentData:data11,parentDataProperty:i2,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate169.errors : vErrors.concat(validate169.errors);
+if(!(validate168(data11[i2], {instancePath:instancePath+"/reads/" + i2,parentData:data11,parentDataProperty:i2,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate168.errors : vErrors.concat(validate168.errors);
 errors = vErrors.length;
 }
 }
@@ -6085,8 +6103,8 @@ errors++;
 }
 const len3 = data15.length;
 for(let i3=0; i3<len3; i3++){
-if(!(validate129(data15[i3], {instancePath:instancePath+"/next/" + i3,parentData:data15,parentDataProperty:i3,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate129.errors : vErrors.concat(validate129.errors);
+if(!(validate128(data15[i3], {instancePath:instancePath+"/next/" + i3,parentData:data15,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate128.errors : vErrors.concat(validate128.errors);
 errors = vErrors.length;
 }
 }
@@ -6123,8 +6141,8 @@ errors++;
 }
 const len4 = data18.length;
 for(let i4=0; i4<len4; i4++){
-if(!(validate136(data18[i4], {instancePath:instancePath+"/results/" + i4,parentData:data18,parentDataProperty:i4,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate136.errors : vErrors.concat(validate136.errors);
+if(!(validate135(data18[i4], {instancePath:instancePath+"/results/" + i4,parentData:data18,parentDataProperty:i4,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate135.errors : vErrors.concat(validate135.errors);
 errors = vErrors.length;
 }
 }
@@ -6157,17 +6175,17 @@ vErrors.push(err27);
 }
 errors++;
 }
-validate264.errors = vErrors;
+validate263.errors = vErrors;
 return errors === 0;
 }
-validate264.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate263.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema61 = {"type":"object","properties":{"kind":{"const":"codes"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"name":{"$ref":"#/$defs/name"},"comparedWith":{"$ref":"#/$defs/name"},"newCodes":{"$ref":"#/$defs/name"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name"],"additionalProperties":false};
 
-function validate279(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate278(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate279.evaluated;
+const evaluated0 = validate278.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -6401,8 +6419,8 @@ errors++;
 }
 const len1 = data9.length;
 for(let i1=0; i1<len1; i1++){
-if(!(validate124(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate124.errors : vErrors.concat(validate124.errors);
+if(!(validate123(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate123.errors : vErrors.concat(validate123.errors);
 errors = vErrors.length;
 }
 }
@@ -6451,8 +6469,8 @@ errors++;
 }
 const len2 = data14.length;
 for(let i2=0; i2<len2; i2++){
-if(!(validate129(data14[i2], {instancePath:instancePath+"/next/" + i2,parentData:data14,parentDataProperty:i2,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate129.errors : vErrors.concat(validate129.errors);
+if(!(validate128(data14[i2], {instancePath:instancePath+"/next/" + i2,parentData:data14,parentDataProperty:i2,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate128.errors : vErrors.concat(validate128.errors);
 errors = vErrors.length;
 }
 }
@@ -6489,8 +6507,8 @@ errors++;
 }
 const len3 = data17.length;
 for(let i3=0; i3<len3; i3++){
-if(!(validate136(data17[i3], {instancePath:instancePath+"/results/" + i3,parentData:data17,parentDataProperty:i3,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate136.errors : vErrors.concat(validate136.errors);
+if(!(validate135(data17[i3], {instancePath:instancePath+"/results/" + i3,parentData:data17,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate135.errors : vErrors.concat(validate135.errors);
 errors = vErrors.length;
 }
 }
@@ -6523,18 +6541,18 @@ vErrors.push(err22);
 }
 errors++;
 }
-validate279.errors = vErrors;
+validate278.errors = vErrors;
 return errors === 0;
 }
-validate279.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate278.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema62 = {"type":"object","properties":{"kind":{"const":"drive"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"name":{"$ref":"#/$defs/name"},"windows":{"type":"array","items":{"$ref":"#/$defs/driveWindow"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","windows"],"additionalProperties":false};
 const schema63 = {"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"what":{"$ref":"#/$defs/line"}},"required":["name","label","what"],"additionalProperties":false};
 
-function validate303(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate302(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate303.evaluated;
+const evaluated0 = validate302.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -6613,16 +6631,16 @@ vErrors.push(err4);
 }
 errors++;
 }
-validate303.errors = vErrors;
+validate302.errors = vErrors;
 return errors === 0;
 }
-validate303.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate302.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 
-function validate294(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate293(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate294.evaluated;
+const evaluated0 = validate293.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -6866,8 +6884,8 @@ errors++;
 }
 const len1 = data9.length;
 for(let i1=0; i1<len1; i1++){
-if(!(validate124(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate124.errors : vErrors.concat(validate124.errors);
+if(!(validate123(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate123.errors : vErrors.concat(validate123.errors);
 errors = vErrors.length;
 }
 }
@@ -6914,8 +6932,8 @@ errors++;
 }
 const len2 = data12.length;
 for(let i2=0; i2<len2; i2++){
-if(!(validate303(data12[i2], {instancePath:instancePath+"/windows/" + i2,parentData:data12,parentDataProperty:i2,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate303.errors : vErrors.concat(validate303.errors);
+if(!(validate302(data12[i2], {instancePath:instancePath+"/windows/" + i2,parentData:data12,parentDataProperty:i2,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate302.errors : vErrors.concat(validate302.errors);
 errors = vErrors.length;
 }
 }
@@ -6946,8 +6964,8 @@ errors++;
 }
 const len3 = data14.length;
 for(let i3=0; i3<len3; i3++){
-if(!(validate129(data14[i3], {instancePath:instancePath+"/next/" + i3,parentData:data14,parentDataProperty:i3,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate129.errors : vErrors.concat(validate129.errors);
+if(!(validate128(data14[i3], {instancePath:instancePath+"/next/" + i3,parentData:data14,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate128.errors : vErrors.concat(validate128.errors);
 errors = vErrors.length;
 }
 }
@@ -6984,8 +7002,8 @@ errors++;
 }
 const len4 = data17.length;
 for(let i4=0; i4<len4; i4++){
-if(!(validate136(data17[i4], {instancePath:instancePath+"/results/" + i4,parentData:data17,parentDataProperty:i4,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate136.errors : vErrors.concat(validate136.errors);
+if(!(validate135(data17[i4], {instancePath:instancePath+"/results/" + i4,parentData:data17,parentDataProperty:i4,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate135.errors : vErrors.concat(validate135.errors);
 errors = vErrors.length;
 }
 }
@@ -7018,17 +7036,17 @@ vErrors.push(err26);
 }
 errors++;
 }
-validate294.errors = vErrors;
+validate293.errors = vErrors;
 return errors === 0;
 }
-validate294.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate293.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema64 = {"type":"object","properties":{"kind":{"const":"compute"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false};
 
-function validate312(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate311(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate312.evaluated;
+const evaluated0 = validate311.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -7242,8 +7260,8 @@ errors++;
 }
 const len1 = data9.length;
 for(let i1=0; i1<len1; i1++){
-if(!(validate124(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate124.errors : vErrors.concat(validate124.errors);
+if(!(validate123(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate123.errors : vErrors.concat(validate123.errors);
 errors = vErrors.length;
 }
 }
@@ -7274,8 +7292,8 @@ errors++;
 }
 const len2 = data11.length;
 for(let i2=0; i2<len2; i2++){
-if(!(validate129(data11[i2], {instancePath:instancePath+"/next/" + i2,parentData:data11,parentDataProperty:i2,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate129.errors : vErrors.concat(validate129.errors);
+if(!(validate128(data11[i2], {instancePath:instancePath+"/next/" + i2,parentData:data11,parentDataProperty:i2,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate128.errors : vErrors.concat(validate128.errors);
 errors = vErrors.length;
 }
 }
@@ -7312,8 +7330,8 @@ errors++;
 }
 const len3 = data14.length;
 for(let i3=0; i3<len3; i3++){
-if(!(validate136(data14[i3], {instancePath:instancePath+"/results/" + i3,parentData:data14,parentDataProperty:i3,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate136.errors : vErrors.concat(validate136.errors);
+if(!(validate135(data14[i3], {instancePath:instancePath+"/results/" + i3,parentData:data14,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate135.errors : vErrors.concat(validate135.errors);
 errors = vErrors.length;
 }
 }
@@ -7340,17 +7358,17 @@ vErrors.push(err20);
 }
 errors++;
 }
-validate312.errors = vErrors;
+validate311.errors = vErrors;
 return errors === 0;
 }
-validate312.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate311.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema65 = {"type":"object","properties":{"kind":{"const":"restore"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false};
 
-function validate323(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate322(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate323.evaluated;
+const evaluated0 = validate322.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -7564,8 +7582,8 @@ errors++;
 }
 const len1 = data9.length;
 for(let i1=0; i1<len1; i1++){
-if(!(validate124(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate124.errors : vErrors.concat(validate124.errors);
+if(!(validate123(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate123.errors : vErrors.concat(validate123.errors);
 errors = vErrors.length;
 }
 }
@@ -7596,8 +7614,8 @@ errors++;
 }
 const len2 = data11.length;
 for(let i2=0; i2<len2; i2++){
-if(!(validate129(data11[i2], {instancePath:instancePath+"/next/" + i2,parentData:data11,parentDataProperty:i2,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate129.errors : vErrors.concat(validate129.errors);
+if(!(validate128(data11[i2], {instancePath:instancePath+"/next/" + i2,parentData:data11,parentDataProperty:i2,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate128.errors : vErrors.concat(validate128.errors);
 errors = vErrors.length;
 }
 }
@@ -7634,8 +7652,8 @@ errors++;
 }
 const len3 = data14.length;
 for(let i3=0; i3<len3; i3++){
-if(!(validate136(data14[i3], {instancePath:instancePath+"/results/" + i3,parentData:data14,parentDataProperty:i3,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate136.errors : vErrors.concat(validate136.errors);
+if(!(validate135(data14[i3], {instancePath:instancePath+"/results/" + i3,parentData:data14,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate135.errors : vErrors.concat(validate135.errors);
 errors = vErrors.length;
 }
 }
@@ -7662,18 +7680,18 @@ vErrors.push(err20);
 }
 errors++;
 }
-validate323.errors = vErrors;
+validate322.errors = vErrors;
 return errors === 0;
 }
-validate323.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate322.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema66 = {"type":"object","properties":{"kind":{"const":"finding"},"id":{"$ref":"#/$defs/name"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"result":{"enum":["in","out","too-close"]},"verdict":{"$ref":"#/$defs/paragraph"},"cause":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"correction":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"customer":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"nextProcedure":{"$ref":"#/$defs/procedureId"}},"required":["id","number","title","action","kind","result","verdict","cause","correction","customer"],"additionalProperties":false};
 const schema67 = {"type":"object","properties":{"text":{"$ref":"#/$defs/paragraph"},"when":{"$ref":"#/$defs/expression"}},"required":["text"],"additionalProperties":false};
 
-function validate343(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate342(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate343.evaluated;
+const evaluated0 = validate342.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -7726,16 +7744,16 @@ vErrors.push(err2);
 }
 errors++;
 }
-validate343.errors = vErrors;
+validate342.errors = vErrors;
 return errors === 0;
 }
-validate343.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate342.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 
-function validate334(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate333(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate334.evaluated;
+const evaluated0 = validate333.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -7989,8 +8007,8 @@ errors++;
 }
 const len1 = data9.length;
 for(let i1=0; i1<len1; i1++){
-if(!(validate124(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate124.errors : vErrors.concat(validate124.errors);
+if(!(validate123(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate123.errors : vErrors.concat(validate123.errors);
 errors = vErrors.length;
 }
 }
@@ -8040,8 +8058,8 @@ errors++;
 }
 const len2 = data13.length;
 for(let i2=0; i2<len2; i2++){
-if(!(validate343(data13[i2], {instancePath:instancePath+"/cause/" + i2,parentData:data13,parentDataProperty:i2,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate343.errors : vErrors.concat(validate343.errors);
+if(!(validate342(data13[i2], {instancePath:instancePath+"/cause/" + i2,parentData:data13,parentDataProperty:i2,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate342.errors : vErrors.concat(validate342.errors);
 errors = vErrors.length;
 }
 }
@@ -8072,8 +8090,8 @@ errors++;
 }
 const len3 = data15.length;
 for(let i3=0; i3<len3; i3++){
-if(!(validate343(data15[i3], {instancePath:instancePath+"/correction/" + i3,parentData:data15,parentDataProperty:i3,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate343.errors : vErrors.concat(validate343.errors);
+if(!(validate342(data15[i3], {instancePath:instancePath+"/correction/" + i3,parentData:data15,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate342.errors : vErrors.concat(validate342.errors);
 errors = vErrors.length;
 }
 }
@@ -8104,8 +8122,8 @@ errors++;
 }
 const len4 = data17.length;
 for(let i4=0; i4<len4; i4++){
-if(!(validate343(data17[i4], {instancePath:instancePath+"/customer/" + i4,parentData:data17,parentDataProperty:i4,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate343.errors : vErrors.concat(validate343.errors);
+if(!(validate342(data17[i4], {instancePath:instancePath+"/customer/" + i4,parentData:data17,parentDataProperty:i4,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate342.errors : vErrors.concat(validate342.errors);
 errors = vErrors.length;
 }
 }
@@ -8138,10 +8156,10 @@ vErrors.push(err27);
 }
 errors++;
 }
-validate334.errors = vErrors;
+validate333.errors = vErrors;
 return errors === 0;
 }
-validate334.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate333.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 
 function validate111(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
@@ -8175,8 +8193,8 @@ errors = vErrors.length;
 var props0 = true;
 }
 else if(tag0 === "action"){
-if(!(validate150(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate150.errors : vErrors.concat(validate150.errors);
+if(!(validate149(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate149.errors : vErrors.concat(validate149.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -8184,8 +8202,8 @@ props0 = true;
 }
 }
 else if(tag0 === "reading"){
-if(!(validate161(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate161.errors : vErrors.concat(validate161.errors);
+if(!(validate160(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate160.errors : vErrors.concat(validate160.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -8193,8 +8211,8 @@ props0 = true;
 }
 }
 else if(tag0 === "choice"){
-if(!(validate198(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate198.errors : vErrors.concat(validate198.errors);
+if(!(validate197(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate197.errors : vErrors.concat(validate197.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -8202,8 +8220,8 @@ props0 = true;
 }
 }
 else if(tag0 === "listen"){
-if(!(validate216(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate216.errors : vErrors.concat(validate216.errors);
+if(!(validate215(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate215.errors : vErrors.concat(validate215.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -8211,8 +8229,8 @@ props0 = true;
 }
 }
 else if(tag0 === "hold"){
-if(!(validate252(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate252.errors : vErrors.concat(validate252.errors);
+if(!(validate251(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate251.errors : vErrors.concat(validate251.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -8220,8 +8238,8 @@ props0 = true;
 }
 }
 else if(tag0 === "wait"){
-if(!(validate264(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate264.errors : vErrors.concat(validate264.errors);
+if(!(validate263(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate263.errors : vErrors.concat(validate263.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -8229,8 +8247,8 @@ props0 = true;
 }
 }
 else if(tag0 === "codes"){
-if(!(validate279(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate279.errors : vErrors.concat(validate279.errors);
+if(!(validate278(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate278.errors : vErrors.concat(validate278.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -8238,8 +8256,8 @@ props0 = true;
 }
 }
 else if(tag0 === "drive"){
-if(!(validate294(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate294.errors : vErrors.concat(validate294.errors);
+if(!(validate293(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate293.errors : vErrors.concat(validate293.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -8247,8 +8265,8 @@ props0 = true;
 }
 }
 else if(tag0 === "compute"){
-if(!(validate312(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate312.errors : vErrors.concat(validate312.errors);
+if(!(validate311(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate311.errors : vErrors.concat(validate311.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -8256,8 +8274,8 @@ props0 = true;
 }
 }
 else if(tag0 === "restore"){
-if(!(validate323(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate323.errors : vErrors.concat(validate323.errors);
+if(!(validate322(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate322.errors : vErrors.concat(validate322.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -8265,8 +8283,8 @@ props0 = true;
 }
 }
 else if(tag0 === "finding"){
-if(!(validate334(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate334.errors : vErrors.concat(validate334.errors);
+if(!(validate333(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate333.errors : vErrors.concat(validate333.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
