@@ -1,5 +1,5 @@
 import { In, type DataSource, type EntityManager } from 'typeorm';
-import { WrongNameOrPassword } from '../http/problem';
+import { SessionEnded, WrongNameOrPassword } from '../http/problem';
 import type { Principal } from '../http/route';
 import { Person } from './access.entity';
 import { accessTokenSeconds, type AccessTokens } from './access-token';
@@ -37,11 +37,11 @@ export class AccessService {
     return this.signedIn(person, refresh);
   }
 
-  /** Gives a new pair for a refresh token. Throws `NotSignedIn`. */
+  /** Gives a new pair for a refresh token. Throws `SessionEnded`. */
   async refresh(token: string | undefined, tablet: string | undefined): Promise<SignedIn> {
     const { personId, issued } = await this.refreshTokens.rotate(token, tablet);
     const person = await this.database.getRepository(Person).findOneBy({ id: personId, isActive: true });
-    if (person === null) throw new WrongNameOrPassword();
+    if (person === null) throw new SessionEnded('The session has ended. Sign in again.');
     return this.signedIn(person, issued);
   }
 

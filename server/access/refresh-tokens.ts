@@ -2,7 +2,7 @@ import { createHash, randomBytes } from 'node:crypto';
 import type { DataSource, EntityManager } from 'typeorm';
 import { IsNull, Not } from 'typeorm';
 import { v7 as uuidv7 } from 'uuid';
-import { NotSignedIn } from '../http/problem';
+import { SessionEnded } from '../http/problem';
 import { RefreshToken, Session } from './access.entity';
 
 export interface IssuedRefreshToken {
@@ -34,14 +34,14 @@ export class RefreshTokens {
     });
   }
 
-  /** Takes a token and gives its successor. Throws `NotSignedIn`. */
+  /** Takes a token and gives its successor. Throws `SessionEnded`. */
   async rotate(
     token: string | undefined,
     tabletId: string | undefined,
   ): Promise<{ personId: string; issued: IssuedRefreshToken }> {
     // A reuse ends the session: that must stay written, so the refusal is thrown after the transaction.
     const outcome = await this.database.transaction((manager) => this.tryRotate(manager, token, tabletId));
-    if (outcome === undefined) throw new NotSignedIn('The session has ended. Sign in again.');
+    if (outcome === undefined) throw new SessionEnded('The session has ended. Sign in again.');
     return outcome;
   }
 

@@ -62,6 +62,10 @@ export class WrongNameOrPassword extends NotSignedIn {
   }
 }
 
+export class SessionEnded extends NotSignedIn {
+  override readonly code = 'session-ended';
+}
+
 export class NotAllowed extends AppError {
   readonly status = 403;
   readonly code: string = 'not-allowed';
