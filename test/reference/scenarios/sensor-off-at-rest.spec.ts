@@ -39,8 +39,7 @@ describe('crankcase valve seal, cold half: boost pressure reads off at rest', ()
         'A pressure sensor reads off with the engine at rest.',
         'Boost pressure was 98.1 ± 0.6 kPa (step 6) where the air of the place was 93.9 ± 0.3 kPa (step 4).',
         'Manifold minus boost pressure was -3.9 ± 0.8 kPa (step 6a), where at most 1.5 kPa either way is usual.',
-        'A pressure that is read wrong sets the same codes as a leak.',
-        'The valve was not tested; nothing was opened.',
+        'A pressure that is read wrong sets the same codes as a leak, and the valve is not judged by it.',
       ].join(' '),
       correction: [
         'Check connector, reference voltage and ground of the sensor before the sensor itself.',
