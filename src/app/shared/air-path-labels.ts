@@ -66,14 +66,16 @@ function bestPlace(
 ): Candidate {
   const candidates = wrappings(text, (view.right - view.left) * 0.94, fontSize).flatMap((lines, wraps) =>
     candidateBoxes(part, lines, fontSize, view).map((box, index) => {
+      const label = labelIn(part, lines, fontSize, box);
       const cost =
+        sum(othersThan(part).map((other) => overlap(leaderBox(label), other))) * 3 +
         sum(taken.map((other) => overlap(box, other))) * 1000 +
         sum(marked.map((other) => overlap(box, other))) * 20 +
         sum(airPathParts.map((other) => overlap(box, boxOf(other)))) +
         farness(distance(box, boxOf(part))) +
         wraps * 40 +
         index;
-      return { box, cost, label: labelIn(part, lines, fontSize, box) };
+      return { box, cost, label };
     }),
   );
   return candidates.reduce((best, candidate) => (candidate.cost < best.cost ? candidate : best));
@@ -149,6 +151,14 @@ function labelIn(part: SheetPart, lines: readonly string[], fontSize: number, bo
   return { id: part.id, lines, x, y, anchor: 'middle', leader };
 }
 
+/** A leader crosses what it runs over. */
+function leaderBox({ leader }: PlacedLabel): Box {
+  if (!leader) return { left: 0, top: 0, right: 0, bottom: 0 };
+  const { x1, y1, x2, y2 } = leader;
+  return { left: Math.min(x1, x2) - 2, right: Math.max(x1, x2) + 2, top: Math.min(y1, y2), bottom: Math.max(y1, y2) };
+}
+
+const othersThan = (part: SheetPart): readonly Box[] => airPathParts.filter((other) => other !== part).map(boxOf);
 const sum = (figures: readonly number[]): number => figures.reduce((total, figure) => total + figure, 0);
 const middle = (a: number, b: number): number => (a + b) / 2;
 const clampTo = (x: number, low: number, high: number): number => Math.max(low, Math.min(high, x));
