@@ -1,5 +1,6 @@
 import { readFileSync } from 'node:fs';
 import { join } from 'node:path';
+import { gzipSync } from 'node:zlib';
 import { compileProcedure, type CompiledProcedure, type Step } from '../../../../procedures/document';
 import {
   applyEvent,
@@ -29,6 +30,8 @@ export interface WalkedRun {
   readonly events: readonly RunEvent[];
   readonly state: RunState;
   readonly series: Series;
+  /** The series as it is stored: what the record names by its hash. */
+  readonly bytes: Uint8Array;
 }
 
 export interface WalkOptions {
@@ -118,6 +121,7 @@ export function walkScenario(
 ): WalkedRun {
   const header = headerOf(procedure, scenario, options.kind ?? 'practice');
   const series = sampleRamp(scenario);
+  const bytes = new Uint8Array(gzipSync(encodeSeries(series)));
   const book = new Book(procedure, header, options.startedAt ?? Date.UTC(2026, 11, 2, 8, 0));
   const opening = openRun(procedure, {
     visit: scenario.visit,
@@ -132,10 +136,10 @@ export function walkScenario(
     const step = book.step;
     if (step === undefined || step.id === options.until) break;
     options.before?.(step, book);
-    if (book.step === step) doStep(book, step, scenario, series, options);
+    if (book.step === step) doStep(book, step, scenario, { series, bytes }, options);
   }
   if (options.until === undefined) book.do({ do: 'close' });
-  return { procedure, header, events: book.events, state: book.state, series };
+  return { procedure, header, events: book.events, state: book.state, series, bytes };
 }
 
 function headerOf(procedure: CompiledProcedure, scenario: PracticeScenario, kind: RunHeader['kind']): RunHeader {
@@ -201,7 +205,7 @@ class Book implements Walk {
   }
 }
 
-function doStep(book: Book, step: Step, scenario: PracticeScenario, series: Series, options: WalkOptions): void {
+function doStep(book: Book, step: Step, scenario: PracticeScenario, ramp: KeptRamp, options: WalkOptions): void {
   for (let caution = 0; caution < cautionCount(book.procedure, step); caution += 1) {
     book.do({ do: 'acknowledge-caution', caution });
   }
@@ -237,7 +241,7 @@ function doStep(book: Book, step: Step, scenario: PracticeScenario, series: Seri
       return book.do({ do: 'choose', options: chosen, text: options.text ?? 'as seen' });
     }
     case 'listen':
-      return listen(book, scenario, series, options);
+      return listen(book, scenario, ramp, options);
     case 'hold':
       book.do({ do: 'start-timer' });
       return book.do({ do: 'end-timer', certain: true });
@@ -249,8 +253,17 @@ function doStep(book: Book, step: Step, scenario: PracticeScenario, series: Seri
   }
 }
 
-function listen(book: Book, { ramp, planted }: PracticeScenario, series: Series, options: WalkOptions): void {
-  const bytes = encodeSeries(series);
+interface KeptRamp {
+  readonly series: Series;
+  readonly bytes: Uint8Array;
+}
+
+function listen(
+  book: Book,
+  { ramp, planted }: PracticeScenario,
+  { series, bytes }: KeptRamp,
+  options: WalkOptions,
+): void {
   const record = {
     sha256: sha256Hex(bytes),
     bytes: bytes.length,

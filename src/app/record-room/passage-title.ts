@@ -1,0 +1,51 @@
+import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
+import { ResultMark } from '../shared/result-mark';
+import type { Passage } from './story-line';
+
+/** Which step a claim was of, with its result where one was judged. */
+@Component({
+  selector: 'bay-passage-title',
+  imports: [ResultMark],
+  template: `
+    @if (passage().step; as step) {
+      <span class="number num">{{ isFinding() ? '' : step.number }}</span>
+      <span class="title">{{ isFinding() ? 'Finding: ' + step.title : step.title }}</span>
+    } @else {
+      <span class="title">Before the first step</span>
+    }
+    @if (shown(); as result) {
+      <bay-result-mark [result]="result" [size]="18" />
+    }
+    @if (passage().isLeft) {
+      <span class="muted">left behind</span>
+    }
+  `,
+  styles: `
+    :host {
+      display: inline-flex;
+      flex-wrap: wrap;
+      align-items: baseline;
+      gap: 0 8px;
+    }
+    .number:empty {
+      display: none;
+    }
+    .title {
+      font-weight: 600;
+    }
+    bay-result-mark {
+      align-self: center;
+    }
+  `,
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class PassageTitle {
+  readonly passage = input.required<Passage>();
+
+  protected readonly isFinding = computed(() => this.passage().step?.kind === 'finding');
+  /** A step that was only done needs no mark: its row says when. */
+  protected readonly shown = computed(() => {
+    const { result } = this.passage();
+    return result === 'done' ? undefined : result;
+  });
+}

@@ -1,0 +1,161 @@
+import type { CompiledProcedure, Step } from '../../../procedures/document';
+import { applyEvent, type NamedValue, type RunEvent, type RunHeader, type RunState } from '../../../procedures/engine';
+import { sayEvent } from './event-words';
+import type { Passage, SaidLine, Story, StoryLine, ValueLine } from './story-line';
+
+/** A run retold, with the state that the retelling ended in. */
+export interface ToldRun {
+  readonly story: Story;
+  readonly state: RunState | undefined;
+}
+
+/**
+ * Retells a run by replaying it: each event adds its line to the claim that was open, and each value is judged as the
+ * core judges it now. Where an event does not fit, the story says so and ends there.
+ */
+export function tellStory(procedure: CompiledProcedure, header: RunHeader, events: readonly RunEvent[]): ToldRun {
+  const passages: OpenPassage[] = [];
+  let state: RunState | undefined;
+  for (const event of events) {
+    const result = applyEvent(procedure, header, state, event);
+    if (!result.ok) {
+      const { seq, what } = result.refusal;
+      return { story: { passages: close(passages, state), brokenOff: { seq, what } }, state };
+    }
+    if (passages.length === 0 || begins(event)) passages.push(open(procedure, event));
+    const passage = passages.at(-1);
+    passage?.lines.push(...linesOf(procedure, event, state, result.state));
+    if (passage !== undefined) refreshMarks(passage, result.state);
+    state = result.state;
+  }
+  return { story: { passages: close(passages, state) }, state };
+}
+
+interface OpenPassage {
+  readonly seq: number;
+  readonly at: number;
+  readonly step: Step | undefined;
+  lines: StoryLine[];
+}
+
+function begins(event: RunEvent): boolean {
+  return event.type === 'step-claimed' || event.type === 'branch-overruled' || event.type === 'finding-reached';
+}
+
+function open(procedure: CompiledProcedure, event: RunEvent): OpenPassage {
+  const isOfStep = event.type === 'step-claimed' || event.type === 'branch-overruled';
+  const id = isOfStep ? event.data.step : event.type === 'finding-reached' ? event.data.finding : undefined;
+  return { seq: event.seq, at: event.at, step: id === undefined ? undefined : procedure.step(id), lines: [] };
+}
+
+function linesOf(
+  procedure: CompiledProcedure,
+  event: RunEvent,
+  before: RunState | undefined,
+  after: RunState,
+): readonly StoryLine[] {
+  const { seq, at } = event;
+  switch (event.type) {
+    case 'series-recorded':
+      return [{ kind: 'series', seq, at, record: event.data, marks: {} }];
+    case 'codes-recorded': {
+      const step = procedure.step(event.data.step);
+      const earlier =
+        step?.kind === 'codes' && step.comparedWith !== undefined ? before?.codes[step.comparedWith] : undefined;
+      return [
+        {
+          kind: 'codes',
+          seq,
+          at,
+          codes: event.data.codes,
+          ...(earlier === undefined ? {} : { before: earlier.codes }),
+        },
+      ];
+    }
+    case 'branch-taken': {
+      const to = procedure.step(event.data.to);
+      const overruled = before?.overruled === undefined ? undefined : before.walked.at(-1)?.way?.to;
+      const insteadOf = overruled === undefined ? undefined : procedure.step(overruled);
+      return [
+        {
+          kind: 'way',
+          seq,
+          at,
+          way: event.data,
+          ...(to === undefined ? {} : { to }),
+          ...(insteadOf === undefined ? {} : { insteadOf }),
+        },
+      ];
+    }
+    case 'step-done':
+      return [...endOfNoise(procedure.step(event.data.step), event, after), ...valuesOf(after, event)];
+    default: {
+      const said = sayEvent(procedure, event);
+      const values = valuesOf(after, event);
+      return said === undefined ? values : [{ kind: 'said', seq, at, type: event.type, ...said }, ...values];
+    }
+  }
+}
+
+/** A listen step that found no seal point says so: silence in the record could be taken for an oversight. */
+function endOfNoise(step: Step | undefined, { seq, at, type }: RunEvent, after: RunState): readonly SaidLine[] {
+  if (step?.kind !== 'listen') return [];
+  const sought = step.finds.find((found) => found.what === 'seal-point');
+  if (sought === undefined || after.values[sought.name] !== undefined) return [];
+  return [{ kind: 'said', seq, at, type, tone: 'live', what: 'No end of the noise was marked' }];
+}
+
+/** The values that this event gave: a take completed them, or the step's results were computed. */
+function valuesOf(after: RunState, { seq, at }: RunEvent): readonly ValueLine[] {
+  return Object.values(after.values)
+    .filter((value) => value.seq === seq)
+    .map((value) => ({ kind: 'value', seq, at, value, takes: takesOf(after, value) }));
+}
+
+function takesOf(state: RunState, value: NamedValue): readonly string[] {
+  if (value.takes < 2) return [];
+  const takes = state.current?.takes[value.name] ?? [];
+  return takes.slice(-value.takes).map((take) => take.text);
+}
+
+/** Marks may be placed before the series is kept and after it: the line shows those that stand now. */
+function refreshMarks(passage: OpenPassage, state: RunState): void {
+  passage.lines = passage.lines.map((line) => {
+    if (line.kind !== 'series') return line;
+    const series = state.series[line.record.name];
+    return series?.step === passage.step?.id && series !== undefined ? { ...line, marks: series.marks } : line;
+  });
+}
+
+function close(passages: readonly OpenPassage[], state: RunState | undefined): readonly Passage[] {
+  const later = new Map<string, number>();
+  const closed: Passage[] = [];
+  for (const passage of [...passages].reverse()) {
+    const lines = [...passage.lines]
+      .reverse()
+      .map((line) => (line.kind === 'value' ? withTakenAgain(line, later) : line));
+    closed.push(closePassage(passage, lines.reverse(), state));
+  }
+  return closed.reverse();
+}
+
+function withTakenAgain(line: ValueLine, later: Map<string, number>): ValueLine {
+  const takenAgainAt = later.get(line.value.name);
+  later.set(line.value.name, line.at);
+  return takenAgainAt === undefined ? line : { ...line, takenAgainAt };
+}
+
+function closePassage(passage: OpenPassage, lines: readonly StoryLine[], state: RunState | undefined): Passage {
+  const { seq, at, step } = passage;
+  const claim = state?.walked.find((candidate) => candidate.claimedSeq === seq);
+  const unjudged = claim?.notMeasured === true ? 'not-measured' : claim?.doneSeq === undefined ? undefined : 'done';
+  const result = claim?.result ?? unjudged;
+  return {
+    seq,
+    at,
+    lines,
+    isLeft: claim?.isLeft ?? false,
+    ...(step === undefined ? {} : { step }),
+    ...(result === undefined ? {} : { result }),
+  };
+}

@@ -1,0 +1,50 @@
+import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
+import { shownUnit, type DecisionInput } from '../../../procedures/engine';
+import type { WayLine } from './story-line';
+
+/** The way that was taken after a step: where it led and why, with the condition and its numbers on demand. */
+@Component({
+  selector: 'bay-way-taken',
+  template: `
+    <p>
+      <span class="to">{{ target() }}</span>
+      <span class="because">{{ line().way.because }}</span>
+    </p>
+    @if (line().insteadOf; as step) {
+      <p class="instead">Chosen by hand; the record led to {{ step.title }}</p>
+    }
+    @if (line().way.when; as when) {
+      <details>
+        <summary>How it was decided</summary>
+        <code>{{ when }}</code>
+        @if (inputs().length > 0) {
+          <dl>
+            @for (entry of inputs(); track entry.name) {
+              <dt>{{ entry.label }}</dt>
+              <dd class="num">{{ entry.text }}</dd>
+            }
+          </dl>
+        }
+      </details>
+    }
+  `,
+  styleUrl: './way-taken.css',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class WayTaken {
+  readonly line = input.required<WayLine>();
+
+  protected readonly target = computed(() => {
+    const { to, way } = this.line();
+    if (to === undefined) return `Went on to ${way.to}`;
+    return to.kind === 'finding' ? `Came to the finding: ${to.title}` : `Went on to ${to.number}, ${to.title}`;
+  });
+  protected readonly inputs = computed(() =>
+    this.line().way.inputs.map((entry) => ({ name: entry.name, label: entry.label, text: inputText(entry) })),
+  );
+}
+
+function inputText({ text, unit, uncertainty }: DecisionInput): string {
+  const spread = uncertainty === undefined || uncertainty === '0' ? '' : ` ± ${uncertainty}`;
+  return `${text}${spread} ${unit === undefined ? '' : shownUnit(unit)}`.trim();
+}
