@@ -5,6 +5,7 @@ import {
   computed,
   type ElementRef,
   input,
+  output,
   signal,
   viewChild,
 } from '@angular/core';
@@ -44,6 +45,10 @@ export class RouteRibbon {
   readonly live = input<string>();
   /** Main way first. */
   readonly ahead = input<readonly WayAhead[]>([]);
+  /** Whether a walked bead can be tapped to look back at its step. */
+  readonly canLook = input(false);
+  /** The place in `walked` of the bead that was tapped. */
+  readonly beadAsked = output<number>();
 
   private readonly scroller = viewChild<ElementRef<HTMLElement>>('scroller');
 

@@ -1,0 +1,80 @@
+import { ChangeDetectionStrategy, Component, computed, linkedSignal, signal } from '@angular/core';
+import { describeTroubleCode } from '../../../../procedures/calculations';
+import type { TroubleCodeEntry } from '../../../../procedures/engine';
+import { BigAction } from '../frame/big-action';
+import { HandSide } from '../frame/hand-side';
+import { WideSide } from '../frame/wide-side';
+import { PrimaryButton } from '../primary-action';
+import { StepEntry } from '../step-entry';
+import { CodePad } from './code-pad';
+import { isWholeCode, typeCode } from './code-text';
+
+type Status = TroubleCodeEntry['status'];
+
+/** Trouble codes with status and freeze frame, one by one, or none. */
+@Component({
+  selector: 'bay-codes-entry',
+  imports: [BigAction, CodePad, HandSide, PrimaryButton, WideSide],
+  templateUrl: './codes-entry.html',
+  styleUrl: './codes-entry.css',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class CodesEntry extends StepEntry<'codes'> {
+  private readonly claim = computed(() => this.run().state.current?.claimedSeq);
+  protected readonly codes = linkedSignal<number | undefined, readonly TroubleCodeEntry[]>({
+    source: this.claim,
+    computation: () => [],
+  });
+  /** The code that is being entered; undefined while the list is shown. */
+  protected readonly text = linkedSignal<number | undefined, string | undefined>({
+    source: this.claim,
+    computation: () => undefined,
+  });
+  protected readonly status = signal<Status>('stored');
+  protected readonly freezeFrame = signal('');
+  protected readonly isWhole = computed(() => isWholeCode(this.text() ?? ''));
+  protected readonly meaning = computed(() => describeTroubleCode(this.text() ?? ''));
+  protected readonly shown = computed(() => (this.text() ?? '').padEnd(5, '\u00b7'));
+  protected readonly statuses: readonly Status[] = ['stored', 'pending', 'permanent'];
+  /** Codes that are known of already: those of the visit, and those of the step that this one is compared with. */
+  protected readonly known = computed(() => {
+    const { state } = this.run();
+    const compared = this.step().comparedWith;
+    const earlier = compared === undefined ? [] : (state.codes[compared]?.codes ?? []).map(({ code }) => code);
+    const taken = this.codes().map(({ code }) => code);
+    return [...new Set([...earlier, ...state.visit.codes])].filter((code) => !taken.includes(code));
+  });
+
+  protected readonly meaningOf = (code: string): string => describeTroubleCode(code) ?? 'not in the generic list';
+
+  protected begin(code = ''): void {
+    this.status.set('stored');
+    this.freezeFrame.set('');
+    this.text.set(code);
+  }
+
+  protected type(key: string): void {
+    this.text.update((text) => typeCode(text ?? '', key));
+  }
+
+  protected erase(): void {
+    this.text.update((text) => (text === undefined || text === '' ? undefined : text.slice(0, -1)));
+  }
+
+  protected keep(): void {
+    const code = this.text();
+    if (code === undefined) return;
+    const freezeFrame = this.freezeFrame().trim();
+    const entry = { code, status: this.status(), ...(freezeFrame === '' ? {} : { freezeFrame }) };
+    this.codes.update((codes) => [...codes.filter((other) => other.code !== code), entry]);
+    this.text.set(undefined);
+  }
+
+  protected remove(code: string): void {
+    this.codes.update((codes) => codes.filter((other) => other.code !== code));
+  }
+
+  protected record(): void {
+    this.commanded.emit({ do: 'record-codes', codes: this.codes() });
+  }
+}

@@ -1,0 +1,80 @@
+import { ChangeDetectionStrategy, Component, computed, output, signal } from '@angular/core';
+import { renderTemplate } from '../../../../procedures/engine';
+import { ResultMark } from '../../shared/result-mark';
+import { BigAction } from '../frame/big-action';
+import { HandSide } from '../frame/hand-side';
+import { PrimaryButton } from '../primary-action';
+import { JudgedLine } from '../readings/judged-line';
+import { SheetWide } from '../sheets/sheet-wide';
+import { StepEntry } from '../step-entry';
+import { RestoreList } from '../steps/restore-list';
+import { draftOf, isKept, partWords, type WriteUpPartName } from './write-up-draft';
+
+type Stage = 'write-up' | 'close';
+
+/**
+ * The end of a path: the verdict and its numbers, the write-up to be read and mended, and then, apart, the closing with
+ * what is still open read back.
+ */
+@Component({
+  selector: 'bay-finding-entry',
+  imports: [BigAction, HandSide, JudgedLine, PrimaryButton, RestoreList, ResultMark, SheetWide],
+  templateUrl: './finding-entry.html',
+  styleUrl: './finding-entry.css',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class FindingEntry extends StepEntry<'finding'> {
+  readonly leftForBench = output();
+
+  protected readonly words = partWords;
+  protected readonly stage = signal<Stage>('write-up');
+  protected readonly editing = signal<WriteUpPartName | undefined>(undefined);
+  private readonly edits = signal<Readonly<Partial<Record<WriteUpPartName, string>>>>({});
+
+  protected readonly verdict = computed(() => {
+    const { procedure, state } = this.run();
+    return renderTemplate(procedure, state, this.step().verdict) ?? this.step().title;
+  });
+  /** The judged numbers, and those that have no band, in the order in which they were measured. */
+  protected readonly values = computed(() =>
+    Object.values(this.run().state.values)
+      .filter(({ judgement }) => judgement !== undefined)
+      .sort((a, b) => a.seq - b.seq),
+  );
+  protected readonly draft = computed(() => draftOf(this.run(), this.edits()));
+  protected readonly edited = computed(() => this.draft().find(({ name }) => name === this.editing()));
+  protected readonly isKept = computed(() => isKept(this.run(), this.draft()));
+  protected readonly disturbed = computed(() => this.run().state.disturbed);
+  protected readonly isClosed = computed(() => ['closed', 'signed'].includes(this.run().state.status));
+  /** What is read back before the run is closed. */
+  protected readonly readBack = computed(() => {
+    const { state, events } = this.run();
+    const count = (type: string): number => events.filter((event) => event.type === type).length;
+    const notMeasured = state.walked.filter((walked) => walked.notMeasured === true && walked.isLeft !== true).length;
+    return [
+      { what: 'Still disturbed', count: state.disturbed.length },
+      { what: 'Not measured', count: notMeasured },
+      { what: 'Ways overruled', count: count('branch-overruled') },
+      { what: 'Limits exceeded', count: count('limit-exceeded') },
+    ];
+  });
+
+  protected edit(name: WriteUpPartName, text: string): void {
+    this.edits.update((edits) => ({ ...edits, [name]: text }));
+  }
+
+  protected restoreComposed(name: WriteUpPartName, composed: string): void {
+    this.edit(name, composed);
+  }
+
+  protected keep(): void {
+    const text = (name: WriteUpPartName): string => this.draft().find((part) => part.name === name)?.text ?? '';
+    this.commanded.emit({
+      do: 'keep-write-up',
+      concern: text('concern'),
+      cause: text('cause'),
+      correction: text('correction'),
+      customer: text('customer'),
+    });
+  }
+}

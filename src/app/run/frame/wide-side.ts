@@ -1,0 +1,33 @@
+import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
+import type { Step } from '../../../../procedures/document';
+import { renderTemplate } from '../../../../procedures/engine';
+import { CautionPanel } from '../../shared/caution-panel';
+import type { RunView } from '../run-view';
+import { cautionsOf } from '../step-cautions';
+import { StepPictureView } from './step-picture-view';
+
+/**
+ * The wide side of a step: its cautions above its one sentence, above why, above the picture or whatever is given in
+ * its place. A text that is too long scrolls in here; the frame itself never does.
+ */
+@Component({
+  selector: 'bay-wide-side',
+  imports: [CautionPanel, StepPictureView],
+  templateUrl: './wide-side.html',
+  styleUrl: './wide-side.css',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class WideSide {
+  readonly run = input.required<RunView>();
+  readonly step = input.required<Step>();
+  /** Whether the step's own cautions are left out: the start card shows them one by one. */
+  readonly hasOwnCautions = input(false);
+
+  protected readonly cautions = computed(() => (this.hasOwnCautions() ? [] : cautionsOf(this.run(), this.step())));
+  protected readonly why = computed(() => {
+    const { why } = this.step();
+    if (why === undefined) return undefined;
+    const { procedure, state } = this.run();
+    return renderTemplate(procedure, state, why);
+  });
+}

@@ -1,0 +1,140 @@
+import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
+import { isUnit } from '../../../../procedures/calculations';
+import { previewListening, shownUnit, type RunCommand, type Series } from '../../../../procedures/engine';
+import { BigAction } from '../frame/big-action';
+import { JudgedLine } from '../readings/judged-line';
+import { ReadingDisplay } from '../readings/reading-display';
+import type { RunProblem, RunView } from '../run-view';
+import type { StepOf } from '../step-entry';
+import type { ListenDone } from './listen-requests';
+import { raised, riseRate, stepsFor, timeBase, type MarkName } from './live-series';
+
+/** What the gauge is raised to, and what it must never go over. */
+export interface Aim {
+  readonly label: string;
+  readonly unit: string;
+  readonly target: number;
+  readonly ceiling: string | undefined;
+}
+
+/**
+ * Typing a ramp while it happens: each tap on a step says what the gauge shows at that moment. The one large button
+ * marks where the noise begins and where it stops.
+ */
+@Component({
+  selector: 'bay-live-controls',
+  imports: [BigAction, JudgedLine, ReadingDisplay],
+  templateUrl: './live-controls.html',
+  styleUrl: './listen-controls.css',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class LiveControls {
+  readonly run = input.required<RunView>();
+  readonly step = input.required<StepOf<'listen'>>();
+  readonly series = input.required<Series>();
+  readonly aim = input.required<Aim>();
+  readonly elapsed = input.required<() => number>();
+  readonly problem = input<RunProblem>();
+  readonly isBusy = input(false);
+  readonly commanded = output<RunCommand>();
+  readonly finished = output<ListenDone>();
+  readonly fileAsked = output();
+
+  private readonly gauge = computed(() => this.step().channels.find(({ name }) => name === 'gauge'));
+  private readonly unit = computed(() => {
+    const unit = this.gauge()?.unit ?? 'kPa';
+    return isUnit(unit) ? unit : 'kPa';
+  });
+  private readonly resolution = computed(() => {
+    const gear = this.gauge()?.gear;
+    const range =
+      gear === undefined ? undefined : this.run().state.gear[gear]?.shows.find(({ unit }) => unit === this.unit());
+    return range?.resolution ?? 0.1;
+  });
+  protected readonly steps = computed(() => stepsFor(this.resolution()));
+  private readonly points = computed(() => this.run().state.current?.takes['gauge'] ?? []);
+  protected readonly hasBegun = computed(() => this.points().length > 0);
+  protected readonly now = computed(() => this.points().at(-1)?.text);
+  protected readonly marks = computed(() => this.run().state.series[this.step().name]?.marks ?? {});
+  protected readonly stopsAt = computed(() => this.marks()['noise-stops']?.timeS);
+  protected readonly beginsAt = computed(() => this.marks()['noise-begins']?.timeS);
+  /** The noise has stopped, and no point was typed since: without one nobody knows the pressure at that moment. */
+  protected readonly lacksPointAfter = computed(() => {
+    const stops = this.stopsAt();
+    return stops !== undefined && (this.series().timeS.at(-1) ?? 0) <= stops;
+  });
+  protected readonly preview = computed(() => {
+    if (this.stopsAt() === undefined || this.lacksPointAfter() || this.series().timeS.length < 3) return undefined;
+    const { procedure, state } = this.run();
+    return previewListening(procedure, state, this.series());
+  });
+  /** The quantity that the mark gives, judged. */
+  protected readonly found = computed(() => this.preview()?.values.find(({ judgement }) => judgement !== undefined));
+  protected readonly remark = computed(() => {
+    if (!this.hasBegun()) return 'One tap a point: raise slowly, and tap what the gauge has risen by.';
+    if (this.lacksPointAfter()) return 'Raise on, and tap one more point: it tells where the noise stopped.';
+    const problem = this.preview()?.problems[0];
+    if (problem !== undefined && this.found() === undefined) return problem;
+    const rate = riseRate(this.series());
+    const beginsAt = this.beginsAt();
+    return [
+      rate === undefined ? undefined : `rising ${rate.toFixed(2)} ${shownUnit(this.unit())} a second`,
+      beginsAt === undefined ? undefined : `noise since ${beginsAt.toFixed(0)} s`,
+    ]
+      .filter((words) => words !== undefined)
+      .join(', ');
+  });
+  protected readonly notes = computed(() => {
+    const { target, ceiling } = this.aim();
+    return [`towards ${target},${ceiling === undefined ? '' : ` never over ${ceiling}`}`];
+  });
+  protected readonly canFinish = computed(() => this.series().timeS.length >= 3);
+
+  protected begin(): void {
+    this.record(raised('0', 0, this.resolution()), 0);
+  }
+
+  protected raise(step: number): void {
+    this.record(raised(this.now() ?? '0', step, this.resolution()), this.seconds());
+  }
+
+  protected mark(mark: MarkName): void {
+    this.commanded.emit({ do: 'mark', mark, timeS: this.seconds(), by: 'tap' });
+  }
+
+  protected unmark(mark: MarkName): void {
+    this.commanded.emit({ do: 'unmark', mark });
+  }
+
+  /** Nothing was heard, or it never stopped: the marks as they are say so. */
+  protected finish(): void {
+    this.finished.emit({ series: this.series(), marks: [] });
+  }
+
+  protected finishNeverStopped(): void {
+    const timeS = this.series().timeS[0] ?? 0;
+    const marks = this.beginsAt() === undefined ? [{ mark: 'noise-begins' as const, timeS, by: 'tap' as const }] : [];
+    this.finished.emit({ series: this.series(), marks });
+  }
+
+  /** Moves the mark by half a second. */
+  protected move(byS: number): void {
+    const stops = this.stopsAt();
+    if (stops === undefined) return;
+    this.commanded.emit({ do: 'mark', mark: 'noise-stops', timeS: tenth(Math.max(0, stops + byS)), by: 'tap' });
+  }
+
+  private seconds(): number {
+    const { events, state } = this.run();
+    const base = timeBase(events, state.current?.claimedSeq ?? 0);
+    const last = this.series().timeS.at(-1);
+    const now = base === undefined ? 0 : (this.elapsed()() - base) / 1000;
+    return tenth(last === undefined ? Math.max(0, now) : Math.max(now, last + 0.1));
+  }
+
+  private record(text: string, timeS: number): void {
+    this.commanded.emit({ do: 'record', name: 'gauge', text, unit: this.unit(), timeS });
+  }
+}
+
+const tenth = (seconds: number): number => Math.round(seconds * 10) / 10;

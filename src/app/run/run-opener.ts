@@ -1,0 +1,52 @@
+import { inject, Injectable } from '@angular/core';
+import { replay } from '../../../procedures/engine';
+import { OfflineStore } from '../core/offline-store';
+import { RunJournal } from '../core/run-journal';
+import { procedureCompiler } from '../core/procedure-compiler';
+import type { RunView } from './run-view';
+
+/** A run as it was found on this tablet, or why it cannot be shown. */
+export type OpenedRun =
+  | {
+      readonly ok: true;
+      readonly view: RunView;
+      /** Whether another window writes it: then it is shown, and nothing can be entered. */
+      readonly isElsewhere: boolean;
+      /** By how much the device's clock stood before the last event's, milliseconds. */
+      readonly clockBackMs: number;
+    }
+  | { readonly ok: false; readonly why: 'missing' | 'no-procedure' | 'damaged'; readonly what: string };
+
+/** Takes a run from the store, with the very version of the procedure that it was begun under, and replays it. */
+@Injectable({ providedIn: 'root' })
+export class RunOpener {
+  private readonly journal = inject(RunJournal);
+  private readonly store = inject(OfflineStore);
+  private readonly compile = inject(procedureCompiler);
+
+  async open(runId: string): Promise<OpenedRun> {
+    const isHeld = await this.journal.hold(runId);
+    const stored = await this.journal.load(runId);
+    if (stored === undefined) return { ok: false, why: 'missing', what: runId };
+    const { header, events, clockBackMs } = stored;
+    const published = await this.store.procedures.get([header.procedureId, header.version]);
+    if (published === undefined) {
+      return { ok: false, why: 'no-procedure', what: `${header.procedureId}, version ${header.version}` };
+    }
+    const procedure = await this.compile(published.document);
+    const replayed = replay(procedure, header, events);
+    if (!replayed.ok) {
+      return { ok: false, why: 'damaged', what: `event ${replayed.refusal.seq}: ${replayed.refusal.what}` };
+    }
+    return {
+      ok: true,
+      view: { procedure, header, events, state: replayed.state },
+      isElsewhere: !isHeld,
+      clockBackMs,
+    };
+  }
+
+  close(runId: string): void {
+    this.journal.release(runId);
+  }
+}

@@ -1,0 +1,30 @@
+import { ChangeDetectionStrategy, Component } from '@angular/core';
+
+/** The wide side of a card that is laid over the step: text that may scroll. */
+@Component({
+  selector: 'bay-sheet-wide',
+  template: '<ng-content />',
+  styles: `
+    :host {
+      grid-area: wide;
+      z-index: 4;
+      min-width: 0;
+      min-height: 0;
+      display: flex;
+      flex-direction: column;
+      gap: 14px;
+      padding: 16px 20px 8px 24px;
+      background: var(--paper);
+      overflow: auto;
+      overscroll-behavior: contain;
+    }
+    @media (max-width: 640px) {
+      :host {
+        padding: 8px 12px 4px;
+        gap: 8px;
+      }
+    }
+  `,
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class SheetWide {}

@@ -1,0 +1,97 @@
+import { ChangeDetectionStrategy, Component, computed, input, output, signal } from '@angular/core';
+import type { Step } from '../../../../procedures/document';
+import { renderTemplate, type RunCommand } from '../../../../procedures/engine';
+import type { HonestWay } from '../frame/honest-ways';
+import { PrimaryButton } from '../primary-action';
+import type { RunProblem, RunView } from '../run-view';
+import { ReasonField } from './reason-field';
+import { SheetHand } from './sheet-hand';
+
+interface WayWords {
+  readonly title: string;
+  readonly label: string;
+  readonly usuals: readonly string[];
+  readonly primary: string;
+}
+
+const words: Readonly<Record<HonestWay, WayWords>> = {
+  'cannot-measure': {
+    title: 'Cannot measure',
+    label: 'Why not',
+    usuals: ['No access', 'The instrument fails', 'The reading does not settle', 'The car does not have it'],
+    primary: 'Cannot measure,\ngo on',
+  },
+  'not-sure': {
+    title: 'Not sure',
+    label: 'What the lead is asked',
+    usuals: [
+      'Is this the right part?',
+      'Does this step fit this car?',
+      'Is this reading to be believed?',
+      'Is it safe to go on?',
+    ],
+    primary: 'Make safe,\nask the lead',
+  },
+  'set-aside': {
+    title: 'Set aside',
+    label: 'Why',
+    usuals: ['Phone call', 'Another car first', 'A part is missing', 'End of shift'],
+    primary: 'Set aside',
+  },
+};
+
+/** One of the three honest ways out: what it leads to, a reason, and two controls, one of them back. */
+@Component({
+  selector: 'bay-way-out-sheet',
+  imports: [PrimaryButton, ReasonField, SheetHand],
+  templateUrl: './way-out-sheet.html',
+  styleUrl: './way-out-sheet.css',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class WayOutSheet {
+  readonly run = input.required<RunView>();
+  readonly step = input<Step>();
+  readonly way = input.required<HonestWay>();
+  readonly problem = input<RunProblem>();
+  readonly isBusy = input(false);
+  readonly commanded = output<RunCommand>();
+  readonly left = output();
+
+  protected readonly reason = signal('');
+  protected readonly words = computed(() => words[this.way()]);
+  /** Why the way is not open, where it is not. */
+  protected readonly closed = computed(() => {
+    const step = this.step();
+    if (this.way() !== 'cannot-measure' || (step !== undefined && 'cannotMeasure' in step)) return undefined;
+    return 'Nothing is measured in this step. If it cannot be done, ask the lead under Not sure, or stop the test.';
+  });
+  /** The exit that the author wrote for it. */
+  protected readonly exit = computed(() => {
+    const step = this.step();
+    if (this.way() !== 'cannot-measure' || step === undefined || !('cannotMeasure' in step)) return undefined;
+    const { procedure, state } = this.run();
+    const { to, because, verdict } = step.cannotMeasure;
+    const target = procedure.step(to === 'verdict' ? (verdict ?? state.verdict ?? to) : to);
+    const heading = verdict === undefined ? undefined : procedure.step(verdict)?.title;
+    return {
+      target: target === undefined ? to : `${target.kind === 'finding' ? 'Finding' : target.number}, ${target.title}`,
+      because: renderTemplate(procedure, state, because) ?? because,
+      heading: target?.kind === 'finding' ? undefined : heading,
+    };
+  });
+  protected readonly makeSafe = computed(() =>
+    this.way() === 'not-sure' ? this.run().procedure.document.stop.makeSafe : [],
+  );
+
+  protected confirm(): void {
+    const reason = this.reason();
+    switch (this.way()) {
+      case 'cannot-measure':
+        return this.commanded.emit({ do: 'cannot-measure', reason });
+      case 'not-sure':
+        return this.commanded.emit({ do: 'not-sure', question: reason });
+      case 'set-aside':
+        return this.commanded.emit({ do: 'set-aside', reason });
+    }
+  }
+}

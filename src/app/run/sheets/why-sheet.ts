@@ -1,0 +1,68 @@
+import { ChangeDetectionStrategy, Component, computed, input, output, signal } from '@angular/core';
+import { exitsOf, shownUnit, type DecisionInput, type NamedExit, type RunCommand } from '../../../../procedures/engine';
+import { PrimaryButton } from '../primary-action';
+import type { RunProblem, RunView } from '../run-view';
+import { lastDecision } from '../walked-steps';
+import { ReasonField } from './reason-field';
+import { SheetHand } from './sheet-hand';
+import { SheetWide } from './sheet-wide';
+
+/**
+ * Why this way: the rule, the numbers that it used and the author's reason for the step that was just left; and, with a
+ * reason, another of the ways that the author wrote there.
+ */
+@Component({
+  selector: 'bay-why-sheet',
+  imports: [PrimaryButton, ReasonField, SheetHand, SheetWide],
+  templateUrl: './why-sheet.html',
+  styleUrl: './why-sheet.css',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class WhySheet {
+  readonly run = input.required<RunView>();
+  readonly problem = input<RunProblem>();
+  readonly isBusy = input(false);
+  readonly commanded = output<RunCommand>();
+  readonly left = output();
+
+  protected readonly isOverruling = signal(false);
+  protected readonly chosen = signal<string | undefined>(undefined);
+  protected readonly reason = signal('');
+
+  protected readonly decision = computed(() => lastDecision(this.run()));
+  protected readonly way = computed(() => this.decision()?.walked.way);
+  protected readonly led = computed(() => {
+    const to = this.way()?.to;
+    return to === undefined ? undefined : this.run().procedure.step(to);
+  });
+  protected readonly here = computed(() => {
+    const { procedure, state } = this.run();
+    return state.current === undefined ? undefined : procedure.step(state.current.id)?.number;
+  });
+  /** The author's other ways from there. */
+  protected readonly others = computed(() => {
+    const decision = this.decision();
+    if (decision === undefined) return [];
+    const { procedure } = this.run();
+    return exitsOf(procedure, decision.step)
+      .filter(({ exit }) => exit !== 'stop' && exit !== decision.walked.way?.exit)
+      .map((exit) => ({ ...exit, title: this.titleOf(exit) }));
+  });
+
+  protected readonly figure = ({ text, unit, uncertainty }: DecisionInput): string =>
+    [text, uncertainty === undefined || uncertainty === '0' ? '' : `\u00b1 ${uncertainty}`, shownUnit(unit ?? '')]
+      .filter((part) => part !== '')
+      .join(' ');
+
+  protected overrule(): void {
+    const exit = this.chosen();
+    if (exit !== undefined) this.commanded.emit({ do: 'overrule', exit, reason: this.reason() });
+  }
+
+  private titleOf({ to, verdict }: NamedExit): string {
+    const { procedure, state } = this.run();
+    const target = procedure.step(to === 'verdict' ? (verdict ?? state.verdict ?? to) : to);
+    if (target === undefined) return to;
+    return target.kind === 'finding' ? `Finding: ${target.title}` : `${target.number}, ${target.title}`;
+  }
+}

@@ -1,0 +1,53 @@
+import { ChangeDetectionStrategy, Component, computed, input, linkedSignal, output, signal } from '@angular/core';
+import type { GearNeed } from '../../../../procedures/document';
+import type { InstrumentSnapshot, RunCommand } from '../../../../procedures/engine';
+import type { GearItem } from '../../core/wire';
+import { PrimaryButton } from '../primary-action';
+import type { RunProblem } from '../run-view';
+import { ReasonField } from '../sheets/reason-field';
+import { gearFor, type GearFacts } from './gear-facts';
+
+/** Takes one instrument for one role. An overdue one costs a reason; a coarse one says what that will mean. */
+@Component({
+  selector: 'bay-gear-choice',
+  imports: [PrimaryButton, ReasonField],
+  templateUrl: './gear-choice.html',
+  styleUrl: './gear-choice.css',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class GearChoice {
+  readonly need = input.required<GearNeed>();
+  readonly place = input.required<number>();
+  readonly of = input.required<number>();
+  readonly gear = input.required<readonly GearItem[]>();
+  readonly now = input.required<number>();
+  /** What is chosen already, when it is chosen again. */
+  readonly chosen = input<InstrumentSnapshot>();
+  readonly problem = input<RunProblem>();
+  readonly isBusy = input(false);
+  readonly commanded = output<RunCommand>();
+  /** Optional gear is done without. */
+  readonly goneWithout = output();
+
+  protected readonly facts = computed(() => gearFor(this.need(), this.gear(), this.now()));
+  protected readonly pickedId = linkedSignal<string, string | undefined>({
+    source: () => this.need().role,
+    computation: () => this.chosen()?.id,
+  });
+  protected readonly reason = signal('');
+  protected readonly picked = computed<GearFacts | undefined>(() =>
+    this.facts().find(({ item }) => item.id === this.pickedId()),
+  );
+
+  protected take(): void {
+    const picked = this.picked();
+    if (picked === undefined) return;
+    const overdueBecause = picked.isOverdue ? this.reason() : '';
+    this.commanded.emit({
+      do: 'choose-gear',
+      role: this.need().role,
+      instrument: picked.instrument,
+      ...(overdueBecause === '' ? {} : { overdueBecause }),
+    });
+  }
+}

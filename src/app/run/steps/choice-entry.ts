@@ -1,0 +1,51 @@
+import { ChangeDetectionStrategy, Component, computed, linkedSignal } from '@angular/core';
+import type { ChoiceOption } from '../../../../procedures/document';
+import { BigAction } from '../frame/big-action';
+import { HandSide } from '../frame/hand-side';
+import { LastReading } from '../frame/last-reading';
+import { WideSide } from '../frame/wide-side';
+import { StepEntry } from '../step-entry';
+
+/**
+ * An observation among options, as tiles. One tap chooses and a second, on the primary action, records it: what is
+ * recorded is read once more on the way there.
+ */
+@Component({
+  selector: 'bay-choice-entry',
+  imports: [BigAction, HandSide, LastReading, WideSide],
+  templateUrl: './choice-entry.html',
+  styleUrl: './choice-entry.css',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class ChoiceEntry extends StepEntry<'choice'> {
+  protected readonly chosen = linkedSignal<number | undefined, readonly string[]>({
+    source: () => this.run().state.current?.claimedSeq,
+    computation: () => [],
+  });
+  protected readonly text = linkedSignal<number | undefined, string>({
+    source: () => this.run().state.current?.claimedSeq,
+    computation: () => '',
+  });
+  protected readonly several = computed(() => this.step().several === true);
+  /** What is asked beside the chosen options. */
+  protected readonly asks = computed(() =>
+    this.step()
+      .options.filter(({ name }) => this.chosen().includes(name))
+      .flatMap(({ ask }) => ask ?? []),
+  );
+  protected readonly isReady = computed(
+    () => this.chosen().length > 0 && (this.asks().length === 0 || this.text().trim() !== ''),
+  );
+
+  protected toggle({ name }: ChoiceOption): void {
+    this.chosen.update((chosen) => {
+      if (chosen.includes(name)) return chosen.filter((other) => other !== name);
+      return this.several() ? [...chosen, name] : [name];
+    });
+  }
+
+  protected record(): void {
+    const text = this.asks().length > 0 ? this.text() : '';
+    this.commanded.emit({ do: 'choose', options: this.chosen(), ...(text === '' ? {} : { text }) });
+  }
+}
