@@ -131,6 +131,7 @@ export class NotReady extends AppError {
   readonly status = 503;
   readonly code = 'not-ready';
   readonly title = 'Not ready';
+  override readonly headers = { 'Retry-After': '5' };
 }
 
 /** The URI of a kind of problem. */

@@ -54,10 +54,6 @@ const whoMay: Readonly<Record<RunEventType, readonly Role[]>> = {
   transcribed: everyRole,
 };
 
-export function isEventType(type: unknown): type is RunEventType {
-  return typeof type === 'string' && Object.hasOwn(whoMay, type);
-}
-
 /** Why this event may not be its actor's; undefined when it may. `role` is undefined for a person whom nobody knows. */
 export function missingRight(event: RunEvent, role: Role | undefined): string | undefined {
   if (role === undefined) return `event ${event.seq} is by a person who has no account here`;

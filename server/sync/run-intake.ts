@@ -1,12 +1,12 @@
 import type { DataSource, EntityManager } from 'typeorm';
 import { canonicalJson, type RunEvent, type RunHeader } from '../../procedures/engine';
+import { validateRunEvent, type EventProblem } from '../../procedures/engine/validate-event';
 import { AppError } from '../http/problem';
 import { validated } from '../http/validated';
 import type { CompiledProcedures, PublishedVersion } from '../procedures/procedures.service';
 import { publishedVersion } from '../procedures/procedures.service';
 import { Site } from '../sites/sites.entity';
 import { type Countersigner } from './countersigner';
-import { envelopeProblem } from './event-envelope';
 import { mainBranch } from './event-place';
 import { problemOfItem, runProblem } from './push-problem';
 import { insertRun, updateRun } from './run-row';
@@ -149,15 +149,18 @@ function headerOf(sent: object): RunHeader | { readonly problem: PushProblem } {
 function soundEvents(sent: readonly object[]): { events: readonly RunEvent[]; problem?: PushProblem } {
   const events: RunEvent[] = [];
   for (const event of sent) {
-    const wrong = envelopeProblem(event);
-    if (wrong !== undefined) {
-      const { seq } = event as { seq?: unknown };
-      const which = typeof seq === 'number' ? seq : undefined;
-      return { events, problem: runProblem('malformed', `event ${which ?? 'without a number'}: ${wrong}`, which) };
-    }
-    events.push(event as RunEvent);
+    const validation = validateRunEvent(event);
+    if (!validation.ok) return { events, problem: malformed(event, validation.problems) };
+    events.push(validation.event);
   }
   return { events };
+}
+
+function malformed(event: object, problems: readonly EventProblem[]): PushProblem {
+  const { seq } = event as { seq?: unknown };
+  const which = Number.isSafeInteger(seq) ? (seq as number) : undefined;
+  const words = problems.map(({ pointer, message }) => `${pointer} ${message}`.trim()).join('; ');
+  return runProblem('malformed', `event ${which ?? 'without a number'}: ${words}`, which);
 }
 
 function nothingTaken({ header }: Pick<PushedRun, 'header' | 'events'>, problem: PushProblem): PushedRunAnswer {

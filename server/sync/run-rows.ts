@@ -1,6 +1,7 @@
 import type { EntityManager } from 'typeorm';
 import type { RunEvent, RunState } from '../../procedures/engine';
 import type { BranchEnds, KeptEvent } from './event-place';
+import { withoutNul } from '../http/plain-text';
 import { RunBranch } from './sync.entity';
 
 /** An event to be kept, with its canonical text. */
@@ -100,8 +101,8 @@ export class RunRows {
         at,
         found.map(({ seq }) => seq),
         found.map(({ what }) => what),
-        found.map(({ seq }) => written.get(seq) ?? ''),
-        found.map(({ recorded }) => recorded),
+        found.map(({ seq }) => withoutNul(written.get(seq) ?? '')),
+        found.map(({ recorded }) => withoutNul(recorded)),
         found.map(({ computed }) => computed),
       ],
     );

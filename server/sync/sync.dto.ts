@@ -59,7 +59,7 @@ export class PushedRun {
   @IsObject()
   declare header: object;
 
-  /** At most 20,000; checked one by one without decorators, since a push holds thousands. */
+  /** At most 20,000; checked one by one by the core's compiled schema. */
   @IsArray()
   declare events: object[];
 }

@@ -88,7 +88,7 @@ it('goes down again step by step to nothing, and up to the same', async () => {
   await withOwner(async (owner) => {
     await owner.runMigrations();
     const before = await schema(owner);
-    for (let step = 0; step < migrations.length; step += 1) await owner.undoLastMigration();
+    for (let left = migrations.length; left > 0; left -= 1) await owner.undoLastMigration();
     const left = await owner.query(
       `SELECT tablename FROM pg_tables WHERE schemaname = 'public' AND tablename <> 'migration'`,
     );

@@ -8,8 +8,6 @@ import { setTimeout as wait } from 'node:timers/promises';
 import { createEmptyDatabase, createTestDatabase, type TestDatabase } from '../support/test-database';
 
 const root = resolve(__dirname, '../..');
-// The first process translates the sources; on a busy machine that takes its time.
-jest.setTimeout(60_000);
 const children = new Set<ChildProcess>();
 let data: TestDatabase;
 

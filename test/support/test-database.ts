@@ -2,6 +2,9 @@ import { randomBytes } from 'node:crypto';
 import { Client } from 'pg';
 import { prepare } from '../../server/database/prepare';
 
+// Making the template and starting a server take their time where other work goes on beside.
+jest.setTimeout(60_000);
+
 /** A database of one spec file: a copy of the migrated and seeded one. */
 export interface TestDatabase {
   readonly name: string;
