@@ -3,6 +3,7 @@ import { spawn } from 'node:child_process';
 import { once } from 'node:events';
 import { closeSync, openSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
+import { stripVTControlCharacters } from 'node:util';
 import { endGroup } from '../../server/start/commands.mjs';
 import { lastLines, say } from '../../server/start/sentences.mjs';
 import { atStop, isStopping } from '../../server/start/stopping.mjs';
@@ -38,7 +39,7 @@ export async function runPart(part, { root, results, env }, missing) {
   const seconds = (performance.now() - beganMs) / 1000;
   const result = { name, seconds, ...countsOf(part, code) };
   if (result.failed > 0 && !isStopping()) {
-    say(`\n--- ${name} failed; its output (${log}):\n${lastLines(readFileSync(log, 'utf8'), linesShown)}\n---`);
+    say(`\n--- ${name} failed; its output (${log}):\n${lastLines(plainText(log), linesShown)}\n---`);
   }
   return told(result);
 }
@@ -63,6 +64,12 @@ export function countsOf({ kind, report }, code) {
     return { ...oneFailure, note: `gave no result: ${error instanceof Error ? error.message : String(error)}` };
   }
 }
+
+/**
+ * What stands in a log, without the colours that some tools write even into a file.
+ * @param {string} log
+ */
+const plainText = (log) => stripVTControlCharacters(readFileSync(log, 'utf8'));
 
 /** @param {PartResult} result */
 function told(result) {
