@@ -124,7 +124,6 @@ export class VisitFormPage {
       () => {
         const first = this.formElement()?.nativeElement.querySelector<HTMLElement>('[aria-invalid="true"]');
         first?.focus();
-        first?.scrollIntoView({ block: 'center' });
       },
       { injector: this.injector },
     );

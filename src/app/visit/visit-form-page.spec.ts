@@ -1,0 +1,176 @@
+import 'fake-indexeddb/auto';
+import { ChangeDetectionStrategy, Component } from '@angular/core';
+import { TestBed } from '@angular/core/testing';
+import { provideRouter, Router } from '@angular/router';
+import { OfflineStore } from '../core/offline-store';
+import { Session } from '../core/session';
+import { closeStores, coreForSpecs, registeredTablet, rememberPerson } from '../core/testing/core-for-specs';
+import { VisitFormPage } from './visit-form-page';
+
+@Component({ selector: 'bay-blank', template: '', changeDetection: ChangeDetectionStrategy.OnPush })
+class Blank {}
+
+const settled = (ms = 30) => new Promise((resolve) => setTimeout(resolve, ms));
+
+async function form(id?: string) {
+  const fixture = TestBed.createComponent(VisitFormPage);
+  if (id !== undefined) fixture.componentRef.setInput('id', id);
+  await settled();
+  await fixture.whenStable();
+  const root = fixture.nativeElement as HTMLElement;
+  document.body.append(root);
+  const type = async (field: string, text: string) => {
+    const input = root.querySelector<HTMLInputElement>(`#${field}`)!;
+    input.value = text;
+    input.dispatchEvent(new Event('input', { bubbles: true }));
+    await fixture.whenStable();
+  };
+  const keep = async () => {
+    root.querySelector('form')!.dispatchEvent(new Event('submit', { cancelable: true }));
+    await settled();
+    await fixture.whenStable();
+  };
+  const errors = () =>
+    [...root.querySelectorAll('.error')].map((error) => error.textContent?.trim()).filter((text) => text !== '');
+  const valueOf = (field: string) => root.querySelector<HTMLInputElement>(`#${field}`)!.value;
+  return { fixture, root, type, keep, errors, valueOf };
+}
+
+async function signedIn() {
+  coreForSpecs([provideRouter([{ path: '**', component: Blank }])]);
+  await registeredTablet();
+  await rememberPerson();
+  const session = TestBed.inject(Session);
+  void session.start();
+  await settled(20);
+  session.goOnOffline();
+  return TestBed.inject(OfflineStore);
+}
+
+async function fill(type: (field: string, text: string) => Promise<void>) {
+  const typed: [string, string][] = [
+    ['vin', '1zz bt4ck4 lr204817'],
+    ['make', 'Merrow'],
+    ['model', 'Heron'],
+    ['displacement', '1,6'],
+    ['repair-order', '4417'],
+    ['odometer', '84 210'],
+    ['concern', 'Whistle at idle'],
+    ['codes', 'p0068'],
+  ];
+  for (const [field, text] of typed) await type(field, text);
+}
+
+describe('VisitFormPage', () => {
+  afterEach(() => {
+    document.body.replaceChildren();
+    return settled().then(closeStores);
+  });
+
+  it('keeps the visit on the tablet, queues it, and goes to it', async () => {
+    const store = await signedIn();
+    const { type, keep } = await form();
+    await fill(type);
+    await keep();
+    const [visit] = await store.visits.toArray();
+    expect(visit).toMatchObject({
+      vin: '1ZZBT4CK4LR204817',
+      repairOrder: '4417',
+      odometer: { text: '84210', unit: 'km' },
+      codes: ['P0068'],
+      car: { make: 'Merrow', model: 'Heron', displacementL: '1.6' },
+      openedBy: 'p-okafor',
+      siteId: 's-ossenholt',
+    });
+    expect(await store.outbox.toArray()).toMatchObject([{ kind: 'document', documentId: visit!.id }]);
+    expect(TestBed.inject(Router).url).toBe(`/visit/${visit!.id}`);
+  });
+
+  it('says every mistake beside its field, and goes to the first', async () => {
+    const store = await signedIn();
+    const { root, keep, errors } = await form();
+    expect(errors()).toEqual([]);
+    await keep();
+    expect(errors()).toEqual([
+      'Type the VIN.',
+      'Type the make.',
+      'Type the model.',
+      'Type the number of the repair order.',
+      'Type what the odometer shows.',
+      "Type the customer's concern in a few words.",
+    ]);
+    expect(document.activeElement).toBe(root.querySelector('#vin'));
+    expect(await store.visits.count()).toBe(0);
+  });
+
+  it('loses nothing of what was typed when the page is loaded again', async () => {
+    await signedIn();
+    const first = await form();
+    await first.type('vin', '1zzbt4ck');
+    await first.type('concern', 'Whistle at');
+    await settled(350);
+    first.fixture.destroy();
+    document.body.replaceChildren();
+
+    const second = await form();
+    expect([second.valueOf('vin'), second.valueOf('concern')]).toEqual(['1ZZ BT4CK', 'Whistle at']);
+  });
+
+  it('forgets what was typed once the visit is kept', async () => {
+    const store = await signedIn();
+    const { type, keep } = await form();
+    await fill(type);
+    await settled(350);
+    await keep();
+    await settled(350);
+    expect((await store.settings.toArray()).filter(({ key }) => key.startsWith('visit-draft'))).toEqual([]);
+  });
+
+  it('keeps a VIN whose check digit does not fit only after a second look', async () => {
+    const store = await signedIn();
+    const { fixture, root, type, keep, errors } = await form();
+    await fill(type);
+    await type('vin', '1ZZBT4CK7LR204817');
+    await keep();
+    expect(errors()).toEqual(['Look again, or keep it as it is.']);
+    root.querySelector<HTMLInputElement>('input[type=checkbox]')!.click();
+    await fixture.whenStable();
+    await keep();
+    expect((await store.visits.toArray())[0]).toMatchObject({ vinKept: 'after a second look' });
+  });
+
+  it('takes no code that is none, and keeps it in its field', async () => {
+    const store = await signedIn();
+    const { type, keep, errors, valueOf } = await form();
+    await fill(type);
+    await type('codes', 'P0068 P9X');
+    await keep();
+    expect(errors()).toEqual(['P9X is no trouble code: a letter P, C, B or U and four digits, such as P0068.']);
+    expect(valueOf('codes')).toBe('P9X');
+    expect(await store.visits.count()).toBe(0);
+  });
+
+  it('changes a visit in place, under its own id', async () => {
+    const store = await signedIn();
+    const first = await form();
+    await fill(first.type);
+    await first.keep();
+    const [before] = await store.visits.toArray();
+    first.fixture.destroy();
+    document.body.replaceChildren();
+
+    const second = await form(before!.id);
+    await second.type('odometer', '84,300');
+    await second.keep();
+    const after = await store.visits.toArray();
+    expect(after).toHaveLength(1);
+    expect(after[0]).toMatchObject({ id: before!.id, openedAt: before!.openedAt, odometer: { text: '84300' } });
+    expect(await store.outbox.count()).toBe(1);
+  });
+
+  it('says when a visit is not on this tablet', async () => {
+    await signedIn();
+    const { root } = await form('nowhere');
+    expect(root.textContent).toContain('This visit is not on the tablet');
+  });
+});
