@@ -49,12 +49,14 @@ export interface App {
 /** Wires the whole server together. No side effects. */
 export function createApp({ config, database, log, clock, build, isStopping }: AppDeps): App {
   const accessTokens = new AccessTokens(config.tokenSecret, clock);
+  const isHttps = config.tls !== undefined || config.publicUrl?.protocol === 'https:';
+  const reached = { isDemo: config.isDemo, isHttps };
   const tablets = new Tablets(database, clock);
   const countersigner = new Countersigner(new ServerKeys(config.tokenSecret, clock), clock);
   const runs = new RunIntake(database, new CompiledProcedures(), countersigner, clock, build);
   const routes = withOpenApi([
     ...healthRoutes(database, isStopping),
-    ...accessRoutes(new AccessService(database, accessTokens, clock), tablets, config),
+    ...accessRoutes(new AccessService(database, accessTokens, clock), tablets, reached),
     ...syncRoutes(new SyncService(database, tablets, new VisitsService(database, clock), runs)),
     ...attachmentsRoutes(new AttachmentsService(database, clock)),
     ...proceduresRoutes(new ProceduresService(database, clock)),
@@ -62,8 +64,7 @@ export function createApp({ config, database, log, clock, build, isStopping }: A
   ]);
   const app = express();
   app.disable('x-powered-by');
-  const isHttps = config.tls !== undefined || config.publicUrl?.protocol === 'https:';
-  app.use(logRequests(log), ...securityHeaders({ isHttps }), compression(), cookieParser());
+  app.use(logRequests(log), ...securityHeaders(reached), compression(), cookieParser());
   mountRoutes(app, routes, (authorization) => accessTokens.read(authorization));
   app.use(serveApp(config.appDir));
   app.use(answerUnknownAddress);

@@ -2,14 +2,14 @@ import type { Request } from 'express';
 import { everyRole, openRoute, route, type Reply, type Route } from '../http/route';
 import { RefreshRequest, SessionAnswer, SignInRequest, TabletAnswer, TabletRequest } from './access.dto';
 import type { AccessService, SignedIn } from './access.service';
-import { clearRefreshCookie, readRefreshCookie, setRefreshCookie } from './refresh-cookie';
+import { clearRefreshCookie, readRefreshCookie, setRefreshCookie, type Reached } from './refresh-cookie';
 import type { Tablets } from './tablets';
 
 const small = 16 * 1024;
 
-export function accessRoutes(access: AccessService, tablets: Tablets, options: { readonly isDemo: boolean }): Route[] {
+export function accessRoutes(access: AccessService, tablets: Tablets, reached: Reached): Route[] {
   const answer = (req: Request, signedIn: SignedIn): Reply => {
-    setRefreshCookie(req, signedIn.refresh, options.isDemo);
+    setRefreshCookie(req, signedIn.refresh, reached);
     return { status: 200, json: sessionAnswer(signedIn) };
   };
   return [
@@ -35,14 +35,14 @@ export function accessRoutes(access: AccessService, tablets: Tablets, options: {
     ),
     openRoute('delete', '/api/session', { summary: 'Sign out.', answers: { 204: 'Signed out.' } }, async ({ req }) => {
       await access.signOut(readRefreshCookie(req));
-      clearRefreshCookie(req, options.isDemo);
+      clearRefreshCookie(req, reached);
       return { status: 204 };
     }),
     route(
       'post',
       '/api/tablets',
       // In the demo anyone may try it on a tablet of their own.
-      options.isDemo ? everyRole : ['lead', 'manager'],
+      reached.isDemo ? everyRole : ['lead', 'manager'],
       {
         summary: 'Enrol a tablet by its public key.',
         body: { kind: 'json', dto: TabletRequest, limitBytes: small },

@@ -20,7 +20,10 @@ export async function beginEpoch(database: DataSource, now: Date): Promise<strin
 
 async function main(): Promise<void> {
   try {
-    const database = await createDataSource(loadPrepareConfig(process.env).ownerUrl, { poolSize: 2 }).initialize();
+    const database = await createDataSource(loadPrepareConfig(process.env).ownerUrl, {
+      poolSize: 2,
+      statementTimeoutMs: 0,
+    }).initialize();
     try {
       await beginEpoch(database, new Date());
       const runs = await rebuildRuns(database, new CompiledProcedures(), coreBuild());

@@ -5,6 +5,9 @@ import { seedLibrary } from './demo/seed-library';
 import { grantToApp } from './grants';
 import { databaseSentence } from './database-sentence';
 
+/** Any number that no other advisory lock of ours has. */
+const prepareLock = 4_310_002;
+
 /** What `prepare` did. */
 export interface Prepared {
   readonly migrated: readonly string[];
@@ -14,16 +17,20 @@ export interface Prepared {
 
 /** Brings the database to what this build needs, as its owner; gives the serving role its rights; seeds the demo once. */
 export async function prepare(config: PrepareConfig, now: Date): Promise<Prepared> {
-  const database = createDataSource(config.ownerUrl, { poolSize: 2 });
+  const database = createDataSource(config.ownerUrl, { poolSize: 3, statementTimeoutMs: 0 });
   await database.initialize();
+  // Two that prepare at once would both run the same migrations: the second waits for the first.
+  const lock = database.createQueryRunner();
   try {
-    // Migrations may build an index on much data.
+    await lock.query('SELECT pg_advisory_lock($1)', [prepareLock]);
     const migrated = await database.runMigrations();
     await grantToApp(database, config.appRole);
     const isSeeded = config.isDemo && (await seedDemo(database, now));
     const publishedProcedures = config.isDemo ? await seedLibrary(database, now) : [];
     return { migrated: migrated.map(({ name }) => name), isSeeded, publishedProcedures };
   } finally {
+    // Ending the connection gives the lock back.
+    await lock.release();
     await database.destroy();
   }
 }

@@ -104,6 +104,17 @@ describe('every answer', () => {
     },
   );
 
+  it('promises https where the address is one, and sends its cookie over nothing else', async () => {
+    const plain = await server.signIn('okafor');
+    expect(plain.headers.get('set-cookie')).toMatch(/HttpOnly; Secure; SameSite=Strict/);
+    const known = await TestServer.start({ isDemo: true, publicUrl: new URL('https://bayhand.example') });
+    const signedIn = await known.signIn('okafor');
+    await known.stop();
+    expect(signedIn.headers.get('set-cookie')).toMatch(/HttpOnly; Secure; SameSite=Strict/);
+    expect(signedIn.headers.get('strict-transport-security')).toBe('max-age=15552000');
+    expect(signedIn.headers.get('content-security-policy')).toMatch(/upgrade-insecure-requests/);
+  });
+
   it('has a request id, the one in the log', async () => {
     const id = (await get('/api/nothing')).headers.get('x-request-id');
     expect(id).toMatch(/^[0-9a-f-]{36}$/);

@@ -48,6 +48,13 @@ it('migrates an empty database all the way up, and a second time does nothing', 
   expect(await prepare(config, now)).toEqual({ migrated: [], isSeeded: false, publishedProcedures: [] });
 });
 
+it('lets two that prepare at the same time follow each other', async () => {
+  const config = { ownerUrl: data.ownerUrl, appRole: data.appRole, isDemo: true };
+  const done = await Promise.all([prepare(config, now), prepare(config, now)]);
+  expect(done.map(({ migrated }) => migrated.length).sort()).toEqual([0, migrations.length]);
+  expect(done.filter(({ isSeeded }) => isSeeded)).toHaveLength(1);
+});
+
 it('seeds nothing outside of the demo', async () => {
   const done = await prepare({ ownerUrl: data.ownerUrl, appRole: data.appRole, isDemo: false }, now);
   expect(done).toMatchObject({ isSeeded: false, publishedProcedures: [] });

@@ -42,7 +42,9 @@ export class TestServer {
     private readonly close: () => Promise<void>,
   ) {}
 
-  static async start(options: { readonly isDemo?: boolean; readonly appDir?: string } = {}): Promise<TestServer> {
+  static async start(
+    options: { readonly isDemo?: boolean; readonly appDir?: string; readonly publicUrl?: URL } = {},
+  ): Promise<TestServer> {
     const data = await createTestDatabase();
     const database = await createDataSource(data.appUrl).initialize();
     const logged: string[] = [];
@@ -62,7 +64,7 @@ export class TestServer {
         isDemo: options.isDemo ?? false,
         appDir: options.appDir ?? '/nonexistent',
         tls: undefined,
-        publicUrl: undefined,
+        publicUrl: options.publicUrl,
       },
       database,
       log,

@@ -3,6 +3,7 @@ import { join } from 'node:path';
 import type { DataSource } from 'typeorm';
 import { Person } from '../../access/access.entity';
 import type { ProcedureDocument } from '../../../procedures/document';
+import { checkedDocument } from '../../procedures/checked-document';
 import { canonicalJson, sha256Hex } from '../../../procedures/engine';
 import { ProcedureVersion } from '../../procedures/procedures.entity';
 import { noteChange } from '../change-log';
@@ -41,6 +42,5 @@ function authoredDocuments(folder: string): readonly ProcedureDocument[] {
   return readdirSync(folder)
     .filter((name) => name.endsWith('.json'))
     .sort()
-    .map((name) => JSON.parse(readFileSync(join(folder, name), 'utf8')) as ProcedureDocument)
-    .filter(({ id, steps }) => typeof id === 'string' && Array.isArray(steps));
+    .map((name) => checkedDocument(JSON.parse(readFileSync(join(folder, name), 'utf8'))));
 }
