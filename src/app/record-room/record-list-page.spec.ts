@@ -47,7 +47,7 @@ describe('the Record room’s list', () => {
     harness = await RouterTestingHarness.create();
   });
   afterEach(async () => {
-    await settle(harness.fixture);
+    await settle();
     harness.fixture.destroy();
     closeStores();
     jest.restoreAllMocks();
@@ -56,7 +56,7 @@ describe('the Record room’s list', () => {
   const root = (): HTMLElement => harness.routeNativeElement as HTMLElement;
   async function answer(url: string, body: object, status = 200): Promise<void> {
     (await asked(server, 'GET', url)).flush(body, { status, statusText: String(status) });
-    await settle(harness.fixture);
+    await settle();
   }
   const newest = '/api/records?sort=-openedAt&page=1';
 

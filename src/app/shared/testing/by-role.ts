@@ -12,6 +12,11 @@ const implicitRoles: Readonly<Record<string, string>> = {
   listitem: 'li, [role="listitem"]',
   table: 'table, [role="grid"]',
   columnheader: 'th[scope="col"], [role="columnheader"]',
+  list: 'ul, ol, [role="list"]',
+  navigation: 'nav, [role="navigation"]',
+  region: 'section[aria-label], section[aria-labelledby], [role="region"]',
+  contentinfo: 'footer, [role="contentinfo"]',
+  dialog: 'dialog, [role="dialog"]',
   img: '[role="img"]',
 };
 

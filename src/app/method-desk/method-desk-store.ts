@@ -1,0 +1,125 @@
+import { computed, inject, Injectable, signal } from '@angular/core';
+import { ApiProblem } from '../core/api-problem';
+import { Sync } from '../core/sync';
+import { problemsOf } from './import-problems';
+import { ImportKeeper, type KeptImport } from './kept-import';
+import { MethodShelf, procedureListResource } from './method-shelf';
+import { readProcedureFile } from './read-procedure-file';
+
+/** What was last done, for the person to see. */
+export interface DeskNotice {
+  readonly tone: 'done' | 'failed';
+  readonly text: string;
+}
+
+/** The Method desk's list, and the file that is being brought in. */
+@Injectable()
+export class MethodDeskStore {
+  private readonly shelf = inject(MethodShelf);
+  private readonly keeper = inject(ImportKeeper);
+  private readonly sync = inject(Sync);
+
+  private readonly list = procedureListResource();
+  private readonly kept = signal<KeptImport | undefined>(undefined);
+  private readonly said = signal<DeskNotice | undefined>(undefined);
+  private readonly working = signal(false);
+
+  /** Undefined until the server has answered; the earlier answer stands while it is asked again. */
+  readonly procedures = computed(() => (this.list.hasValue() ? this.list.value() : undefined));
+  readonly problem = computed(() => this.list.error());
+  /** The file that could not become a draft; undefined when there is none. */
+  readonly unfinished = this.kept.asReadonly();
+  readonly notice = this.said.asReadonly();
+  /** Whether something is under way that must not be started twice. */
+  readonly isBusy = this.working.asReadonly();
+
+  /** Finds the file that an earlier visit left unfinished. */
+  async recall(): Promise<void> {
+    this.kept.set(await this.keeper.read());
+  }
+
+  again(): void {
+    this.list.reload();
+  }
+
+  /** Brings a file in. What cannot become a draft is kept with its problems. */
+  async bringIn(fileName: string, text: string): Promise<void> {
+    const read = readProcedureFile(text);
+    if (!read.ok) return this.keep({ fileName, text, problems: [read.problem], isWaiting: false });
+    await this.during(async () => {
+      try {
+        await this.shelf.importDraft(read.document);
+      } catch (error) {
+        if (!(error instanceof ApiProblem)) throw error;
+        return this.keep(refusedImport(fileName, text, error));
+      }
+      await this.putAway();
+      this.said.set({ tone: 'done', text: `${fileName} is a draft now.` });
+      this.list.reload();
+    });
+  }
+
+  /** Tries the kept file again, as it is. */
+  async tryAgain(): Promise<void> {
+    const kept = this.kept();
+    if (kept !== undefined) await this.bringIn(kept.fileName, kept.text);
+  }
+
+  /** Lets go of the kept file. */
+  async putAway(): Promise<void> {
+    await this.keeper.putAway();
+    this.kept.set(undefined);
+  }
+
+  /** Publishes a draft; tells the tablets soon. */
+  publish(draftId: string, title: string): Promise<void> {
+    return this.change(async () => {
+      const { version } = await this.shelf.publish(draftId);
+      return `${title} is published as version ${version}.`;
+    });
+  }
+
+  /** Withdraws a version with a reason. */
+  withdraw(procedureId: string, version: number, reason: string): Promise<void> {
+    return this.change(async () => {
+      await this.shelf.withdraw(procedureId, version, reason);
+      return `Version ${version} is withdrawn. No new run starts on it.`;
+    });
+  }
+
+  /** Says something that was found out elsewhere on the page. */
+  say(notice: DeskNotice): void {
+    this.said.set(notice);
+  }
+
+  private async change(act: () => Promise<string>): Promise<void> {
+    await this.during(async () => {
+      try {
+        this.said.set({ tone: 'done', text: await act() });
+        this.list.reload();
+        this.sync.soon();
+      } catch (error) {
+        if (!(error instanceof ApiProblem)) throw error;
+        const text = error.isUnavailable ? 'No network: nothing was changed. Try again with one.' : error.message;
+        this.said.set({ tone: 'failed', text });
+      }
+    });
+  }
+
+  private async keep(kept: KeptImport): Promise<void> {
+    this.kept.set(kept);
+    await this.keeper.keep(kept);
+  }
+
+  private async during(work: () => Promise<void>): Promise<void> {
+    if (this.working()) return;
+    this.working.set(true);
+    this.said.set(undefined);
+    await work().finally(() => this.working.set(false));
+  }
+}
+
+function refusedImport(fileName: string, text: string, refusal: ApiProblem): KeptImport {
+  const isWaiting = refusal.isUnavailable;
+  return { fileName, text, problems: isWaiting ? [] : problemsOf(refusal), isWaiting };
+}

@@ -1,0 +1,65 @@
+import {
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  effect,
+  inject,
+  input,
+  linkedSignal,
+  untracked,
+} from '@angular/core';
+import { RouterLink } from '@angular/router';
+import { LoadProblem } from '../shared/load-problem';
+import { TopBar } from '../shared/top-bar';
+import { Outline } from './outline';
+import { ReadingStore } from './reading-store';
+import { StepReading } from './step-reading';
+
+/** A draft or a version, to be read step by step: the outline on one side, the step with its ways on beside it. */
+@Component({
+  selector: 'bay-reading-page',
+  imports: [LoadProblem, Outline, RouterLink, StepReading, TopBar],
+  templateUrl: './reading-page.html',
+  styleUrl: './reading-page.css',
+  providers: [ReadingStore],
+  host: { class: 'desk' },
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class ReadingPage {
+  protected readonly store = inject(ReadingStore);
+
+  /** Of the address: either a draft's id, or a procedure's with its version. */
+  readonly draftId = input<string>();
+  readonly procedureId = input<string>();
+  readonly version = input<string>();
+
+  /** The step that is read; the first one of another document. */
+  protected readonly selected = linkedSignal(() => this.store.document()?.steps[0]?.id ?? '');
+  protected readonly step = computed(() => this.store.document()?.steps.find(({ id }) => id === this.selected()));
+  protected readonly stepProblems = computed(() =>
+    this.store.problems().filter(({ step }) => step !== undefined && step === this.selected()),
+  );
+  protected readonly counts = computed(() => {
+    const steps = this.store.document()?.steps ?? [];
+    const findings = steps.filter(({ kind }) => kind === 'finding').length;
+    return `${steps.length - findings} steps, ${findings} findings`;
+  });
+
+  constructor() {
+    // The store lives outside the template: it follows the address.
+    effect(() => {
+      const draftId = this.draftId();
+      const procedureId = this.procedureId();
+      const version = Number(this.version());
+      untracked(() => {
+        if (draftId !== undefined) this.store.readDraft(draftId);
+        else if (procedureId !== undefined) void this.store.readVersion(procedureId, version);
+      });
+    });
+  }
+
+  protected read(stepId: string): void {
+    this.selected.set(stepId);
+    document.getElementById(`outline-${stepId}`)?.scrollIntoView({ block: 'nearest' });
+  }
+}
