@@ -1,3 +1,4 @@
+import { createHash } from 'node:crypto';
 import { canonicalJson, type RunEvent } from '../../procedures/engine';
 import { closedRun, continued, lindqvistId, okaforId, openedRun, publishSmallProcedure } from '../support/test-run';
 import { TestServer } from '../support/test-server';
@@ -195,14 +196,45 @@ describe('a push', () => {
     expect(answer.json.runs[0]).toMatchObject({ acceptedThrough: 0, problem: { code: 'other-header', status: 409 } });
   });
 
+  it('takes a value that it computes differently, and notes the difference with both builds', async () => {
+    const run = closedRun({ device: tablet.id });
+    const taken = run.events.findIndex((event) => event.type === 'branch-taken' && event.data.exit === 'next-0');
+    const way = {
+      step: 'manifold',
+      to: 'dipstick',
+      exit: 'otherwise',
+      inputs: [],
+      because: 'manifold pressure agrees',
+    };
+    const older = { device: tablet.id, build: 'older-app' };
+    const other = continued(run, { type: 'branch-taken', data: way }, older, taken);
+    const answer = await tablet.push({ runs: [other] });
+    expect(answer.json.runs[0]).toMatchObject({ acceptedThrough: taken + 1 });
+    expect(answer.json.runs[0].problem).toBeUndefined();
+    const { json } = await server.ask('GET', `/api/records/${run.header.runId}`, { as: 'lindqvist' });
+    expect(json.discrepancies).toEqual([
+      {
+        seq: taken + 1,
+        what: 'way on from step 3',
+        recorded: 'otherwise',
+        computed: 'next-0',
+        recordedBy: 'older-app',
+        computedBy: 'spec-core',
+      },
+    ]);
+  });
+
   it('says which attachments it lacks until they are there', async () => {
     const run = openedRun({ device: tablet.id });
     const bytes = Buffer.from('a photo, for this test');
-    const sha256 = 'c93fd5a3a4cb7c1e6f8a2b6d3b2e1f0a9d8c7b6a59483726150f1e2d3c4b5a69';
+    const sha256 = createHash('sha256').update(bytes).digest('hex');
     const photo = { step: 'start', sha256, bytes: bytes.length, mediaType: 'image/jpeg' };
     const withPhoto = continued(run, { type: 'photo-attached', data: photo }, { device: tablet.id });
     const answer = await tablet.push({ runs: [withPhoto] });
     expect(answer.json.runs[0]).toMatchObject({ acceptedThrough: 3, missingAttachments: [sha256] });
+    await server.ask('PUT', `/api/attachments/${sha256}`, { as: 'okafor', bytes });
+    const again = await tablet.push({ runs: [withPhoto] });
+    expect(again.json.runs[0].missingAttachments).toEqual([]);
   });
 });
 
