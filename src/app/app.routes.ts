@@ -31,7 +31,7 @@ export const routes: Routes = [
       {
         path: 'run',
         title: 'Run',
-        canMatch: [roleGuard('technician', 'lead')],
+        canMatch: [roleGuard('apprentice', 'technician', 'lead')],
         loadChildren: () => import('./run/run.routes').then((m) => m.routes),
       },
       {

@@ -1,11 +1,12 @@
 import {
   airOfThePlace,
+  besideTheWay,
   coldTemperatures,
-  gaugeBackAtZero,
   lists,
   practicePlace,
   seen,
   sensorsAtRest,
+  shutValve,
 } from './practice-bench';
 import type { PracticeScenario } from './practice-scenario';
 
@@ -31,13 +32,15 @@ export const afterTheRepair: PracticeScenario = {
   place: practicePlace,
   ramp: { path: 'practice/after-the-repair.csv', fileName: 'after-the-repair.csv' },
   bench: {
+    ...besideTheWay,
+    ...shutValve,
     'cold-enough': coldTemperatures,
     'codes-before': [lists(permanent)],
     'station-pressure': airOfThePlace,
     ...sensorsAtRest('94.0', '93.7'),
-    'gauge-zero': gaugeBackAtZero,
     look: [seen('Through the borescope: the valve is in its seat, new and bright, without a trace of carbon.')],
     'codes-after': [lists(permanent)],
+    'codes-after-drive': [lists(permanent)],
     'clear-codes': [seen('The scan tool says: codes cleared; the permanent one stays until its own monitor has run.')],
     'other-half': [seen('The warm half is still to come.')],
   },

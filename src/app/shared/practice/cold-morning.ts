@@ -1,7 +1,7 @@
 import {
   airOfThePlace,
+  besideTheWay,
   coldTemperatures,
-  gaugeBackAtZero,
   lists,
   practicePlace,
   seen,
@@ -32,19 +32,21 @@ export const coldMorning: PracticeScenario = {
   place: practicePlace,
   ramp: { path: 'practice/cold-morning.csv', fileName: 'cold-morning.csv' },
   bench: {
+    ...besideTheWay,
     'cold-enough': coldTemperatures,
     'codes-before': [lists(stored, pending)],
     'station-pressure': airOfThePlace,
     ...sensorsAtRest('94.0', '93.7'),
+    'still-quiet': [seen('The hiss is there for all of the thirty seconds.')],
     'where-it-comes-out': [
       seen('With the probe at the manifold valve the hiss is loud.'),
       seen('Dipstick tube, inlet-side vent and every joint are quiet.'),
     ],
-    'gauge-zero': gaugeBackAtZero,
     look: [
       seen('Through the borescope: the valve is in its seat, and a black, hard crust sits on one side of its plate.'),
     ],
     'codes-after': [lists(stored, pending)],
+    'codes-after-drive': [lists(stored, pending)],
     'clear-codes': [seen('The scan tool says: codes cleared.')],
     'other-half': [seen('The warm half is still to come.')],
   },

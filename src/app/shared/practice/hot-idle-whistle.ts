@@ -1,4 +1,13 @@
-import { airOfThePlace, gaugeBackAtZero, lists, practicePlace, seen, sensorsAtRest, shows } from './practice-bench';
+import {
+  airOfThePlace,
+  besideTheWay,
+  lists,
+  practicePlace,
+  seen,
+  sensorsAtRest,
+  shows,
+  shutValve,
+} from './practice-bench';
 import type { PracticeScenario } from './practice-scenario';
 
 const stored = { code: 'P0101', status: 'stored', freezeFrame: 'idle, coolant 96 degC' } as const;
@@ -23,14 +32,15 @@ export const hotIdleWhistle: PracticeScenario = {
   place: practicePlace,
   ramp: { path: 'practice/hot-idle-whistle.csv', fileName: 'hot-idle-whistle.csv' },
   bench: {
+    ...besideTheWay,
+    ...shutValve,
     'warm-up': [shows('coolantTemperature', 'Scan tool, coolant', '88', 'degC')],
     'codes-before': [lists(stored)],
     'station-pressure': airOfThePlace,
     ...sensorsAtRest('94.0', '93.7'),
     'still-warm': [shows('coolantAtMark', 'Scan tool, coolant', '81', 'degC')],
-    'still-quiet': [seen('Thirty seconds at 10 kPa, and the probe gives no sound.')],
-    'gauge-zero': gaugeBackAtZero,
     'codes-after': [lists(stored)],
+    'codes-after-drive': [lists(stored)],
     'clear-codes': [seen('The scan tool says: codes cleared.')],
     'other-half': [seen('The cold half waits for tomorrow morning.')],
   },

@@ -36,7 +36,29 @@ export function sensorsAtRest(manifold: string, boost: string): Readonly<Record<
   };
 }
 
-export const gaugeBackAtZero: readonly BenchEntry[] = [shows('gaugeLeft', 'Gauge of the supply', '0.0', 'kPa')];
+const gaugeBackAtZero: readonly BenchEntry[] = [shows('gaugeLeft', 'Gauge of the supply', '0.0', 'kPa')];
+
+/** Off the plain way the bench has something to show too: whoever takes another turn is not left with guessing. */
+export const besideTheWay: Readonly<Record<string, readonly BenchEntry[]>> = {
+  'rewarm-zero': gaugeBackAtZero,
+  'isolate-zero': gaugeBackAtZero,
+  'gauge-zero': gaugeBackAtZero,
+  'listen-elsewhere': [seen('Along the manifold and the duct the probe gives no sound.')],
+  pulse: [seen('The inlet-side port is quiet before the pulse and after it.')],
+  'mend-joint': [seen('Every clamp and joint is tight: there is nothing to mend.')],
+  'turn-crankshaft': [seen('The crankshaft turns by hand; no intake valve stands open.')],
+  'look-over': [seen('Brakes, steering, tyres, lights and fluids: nothing forbids driving.')],
+  'road-test': [seen('Every window of the route was visited.')],
+};
+
+/** A valve that has shut: quiet above its seal point, and clean. */
+export const shutValve: Readonly<Record<string, readonly BenchEntry[]>> = {
+  'still-quiet': [seen('Thirty seconds at 10 kPa, and the probe gives no sound.')],
+  'where-it-comes-out': [
+    seen('At 10 kPa the probe is quiet at the valve, the dipstick tube, the vent and every joint.'),
+  ],
+  look: [seen('Through the borescope: the valve is in its seat, without a trace of carbon.')],
+};
 
 /** The place of every practice run. */
 export const practicePlace = { name: 'Practice bay', elevationM: '640' } as const;

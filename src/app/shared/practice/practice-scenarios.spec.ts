@@ -52,6 +52,18 @@ describe('practice scenarios', () => {
     expect(practiceScenarios.map(({ visit }) => checkVin(visit.vin).valid)).toEqual(practiceScenarios.map(() => true));
   });
 
+  it.each(practiceScenarios.map((scenario) => [scenario.title, scenario] as const))(
+    '%s shows something at every step that asks for something to be seen',
+    (_title, { half, bench }) => {
+      const asks = new Set(['reading', 'wait', 'choice', 'codes', 'drive']);
+      const ofTheOtherHalf = half === 'cold' ? ['warm-up', 'still-warm', 'rewarm-zero'] : ['cold-enough'];
+      const silent = procedure.document.steps.filter(
+        ({ id, kind }) => asks.has(kind) && !ofTheOtherHalf.includes(id) && bench[id] === undefined,
+      );
+      expect(silent.map(({ id }) => id)).toEqual([]);
+    },
+  );
+
   it('show something only at steps that the procedure has', () => {
     const strange = practiceScenarios.flatMap(({ bench }) => Object.keys(bench).filter((id) => !procedure.step(id)));
     expect(strange).toEqual([]);

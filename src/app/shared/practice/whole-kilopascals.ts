@@ -1,4 +1,13 @@
-import { airOfThePlace, gaugeBackAtZero, lists, practicePlace, seen, sensorsAtRest, shows } from './practice-bench';
+import {
+  airOfThePlace,
+  besideTheWay,
+  lists,
+  practicePlace,
+  seen,
+  sensorsAtRest,
+  shows,
+  shutValve,
+} from './practice-bench';
 import type { PracticeScenario } from './practice-scenario';
 
 const stored = { code: 'P0236', status: 'stored' } as const;
@@ -23,14 +32,15 @@ export const wholeKilopascals: PracticeScenario = {
   place: practicePlace,
   ramp: { path: 'practice/whole-kilopascals.csv', fileName: 'whole-kilopascals.csv' },
   bench: {
+    ...besideTheWay,
+    ...shutValve,
     'warm-up': [shows('coolantTemperature', 'Scan tool, coolant', '90', 'degC')],
     'codes-before': [lists(stored)],
     'station-pressure': airOfThePlace,
     ...sensorsAtRest('94', '94'),
     'still-warm': [shows('coolantAtMark', 'Scan tool, coolant', '79', 'degC')],
-    'still-quiet': [seen('Thirty seconds at 10 kPa, and the probe gives no sound.')],
-    'gauge-zero': gaugeBackAtZero,
     'codes-after': [lists(stored)],
+    'codes-after-drive': [lists(stored)],
     'clear-codes': [seen('The scan tool says: codes cleared.')],
     'other-half': [seen('The cold half waits for tomorrow morning.')],
   },

@@ -246,6 +246,7 @@ function doStep(book: Book, step: Step, scenario: PracticeScenario, ramp: KeptRa
       book.do({ do: 'start-timer' });
       return book.do({ do: 'end-timer', certain: true });
     case 'restore':
+      if (book.state.disturbed.length === 0) return book.do({ do: 'confirm' });
       for (const { item } of book.state.disturbed) book.do({ do: 'restore', item });
       return;
     default:
