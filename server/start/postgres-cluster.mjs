@@ -21,17 +21,21 @@ import { atStop } from './stopping.mjs';
  * @typedef {Record<string, string | number>} Settings server settings by name
  */
 
+/** Names inside the cluster's place. */
+const filesName = 'cluster';
+const logName = 'postgres.log';
+
 const portTries = 5;
 const startLimitS = 300;
 
 /** @param {Cluster} cluster */
-const filesOf = ({ place }) => join(place, 'cluster');
+const filesOf = ({ place }) => join(place, filesName);
 
 /** @param {Cluster} cluster */
 const noteOf = (cluster) => join(filesOf(cluster), 'postmaster.pid');
 
 /** @param {Cluster} cluster */
-const logOf = ({ place }) => join(place, 'postgres.log');
+const logOf = ({ place }) => join(place, logName);
 
 /**
  * The PostgreSQL version that made the cluster in this folder; undefined when there is none.
@@ -39,7 +43,7 @@ const logOf = ({ place }) => join(place, 'postgres.log');
  * @returns {Promise<number | undefined>}
  */
 export async function versionOfCluster(place) {
-  const folder = join(place, 'cluster');
+  const folder = join(place, filesName);
   if (!existsSync(folder)) return undefined;
   const text = await readFile(join(folder, 'PG_VERSION'), 'utf8').catch(() => '');
   const version = Number(text.trim());
@@ -55,15 +59,16 @@ export async function versionOfCluster(place) {
  * @param {string[]} contents.statements SQL run once, offline, as the superuser
  */
 export async function createCluster(cluster, { access, statements }) {
-  const halfMade = join(cluster.place, 'cluster.half-made');
+  const halfMadeName = 'cluster.half-made';
+  const halfMade = join(cluster.place, halfMadeName);
   const failed = `The database can't be made in ${cluster.place}`;
   await rm(halfMade, { recursive: true, force: true });
   await must(cluster, failed, 'initdb', [
-    ...['--pgdata', halfMade, '--encoding', 'UTF8', '--locale', 'C.UTF-8', '--username', 'postgres'],
+    ...['--pgdata', halfMadeName, '--encoding', 'UTF8', '--locale', 'C.UTF-8', '--username', 'postgres'],
     ...['--auth', 'reject', '--data-checksums', '--no-instructions'],
   ]);
   await writeFile(join(halfMade, 'pg_hba.conf'), `${access.join('\n')}\n`);
-  await runOffline(cluster, statements, halfMade);
+  await runOffline(cluster, statements, halfMadeName);
   await rename(halfMade, filesOf(cluster));
 }
 
@@ -71,9 +76,9 @@ export async function createCluster(cluster, { access, statements }) {
  * Runs SQL as the superuser while the cluster is stopped. So the superuser needs no password and no way in from outside.
  * @param {Cluster} cluster
  * @param {string[]} statements each on one line
- * @param {string} [files]
+ * @param {string} [files] the name of the folder inside the cluster's place
  */
-export async function runOffline(cluster, statements, files = filesOf(cluster)) {
+export async function runOffline(cluster, statements, files = filesName) {
   const failed = `The database in ${cluster.place} can't be set up`;
   const input = statements.map((statement) => `${statement}\n`).join('');
   const output = await must(cluster, failed, 'postgres', ['--single', '-D', files, 'postgres'], input);
@@ -99,7 +104,7 @@ export async function startCluster(cluster, settings = {}) {
     const all = { listen_addresses: '127.0.0.1', port, unix_socket_directories: '', ...settings };
     const options = Object.entries(all).map(([name, value]) => `-c ${name}=${value}`);
     const start = await run(cluster, 'pg_ctl', [
-      ...['start', '-D', filesOf(cluster), '-l', logOf(cluster), '-w', '-t', String(startLimitS)],
+      ...['start', '-D', filesName, '-l', logName, '-w', '-t', String(startLimitS)],
       ...['-o', options.join(' ')],
     ]);
     if (start.code === 0) {
@@ -125,7 +130,7 @@ export async function startCluster(cluster, settings = {}) {
  */
 export async function stopCluster(cluster) {
   if (!(await isRunning(cluster))) return;
-  const stop = ['stop', '-D', filesOf(cluster), '-w', '-t', '60'];
+  const stop = ['stop', '-D', filesName, '-w', '-t', '60'];
   const fast = await run(cluster, 'pg_ctl', [...stop, '-m', 'fast']);
   if (fast.code === 0 || !(await isRunning(cluster))) return;
   // Files stay whole: the next start recovers from the log as after a power cut.
@@ -209,12 +214,14 @@ async function must(cluster, failed, program, args, input) {
 }
 
 /**
+ * Runs one of PostgreSQL's programs inside the cluster's place, where names need no path: some of the programs hand
+ * paths to a shell, which stumbles over a checkout with a dollar sign or a quote in its path.
  * @param {Cluster} cluster
  * @param {string} program
  * @param {string[]} args
  * @param {string} [input]
  */
-function run({ programs, account }, program, args, input) {
+function run({ place, programs, account }, program, args, input) {
   const env = Object.fromEntries(Object.entries(process.env).filter(([name]) => !name.startsWith('PG')));
-  return runCommand(join(programs, program), args, { account, env: { ...env, LC_ALL: 'C' }, input });
+  return runCommand(join(programs, program), args, { account, cwd: place, env: { ...env, LC_ALL: 'C' }, input });
 }

@@ -30,6 +30,9 @@ export async function startBayhand(root) {
     isUp = true;
     atStop(() => say('Stopping Bayhand ...'));
     say(`Bayhand is at ${address}`);
+    if (settings.isDemo && !isLoopback(settings.host)) {
+      say("The network can reach it, and the demo's password is known to everyone: for real work, BAYHAND_DEMO=0.");
+    }
     say(`Stop it with Ctrl-C; what was recorded stays. The server's log is ${log}.`);
     const code = await ended;
     if (!isStopping()) {
@@ -47,3 +50,6 @@ function addressOf({ host, port, tls }) {
   const reachable = host === '0.0.0.0' || host === '::' ? '127.0.0.1' : host;
   return `${tls ? 'https' : 'http'}://${reachable.includes(':') ? `[${reachable}]` : reachable}:${port}/`;
 }
+
+/** @param {string} host */
+const isLoopback = (host) => /^(127\.|::1$|localhost$)/.test(host);

@@ -6,7 +6,7 @@ export default defineConfig({
   testDir: '.',
   testMatch: '**/*.spec.ts',
   outputDir: '../../test-results/browser',
-  globalSetup: './support/ensure-database.mjs',
+  globalSetup: './support/begin.mjs',
   // Two tablets at a time: as many as there are cores.
   workers: 2,
   fullyParallel: false,

@@ -1,4 +1,4 @@
-import { appendFileSync, readFileSync, readdirSync, rmSync, statSync, writeFileSync } from 'node:fs';
+import { appendFileSync, existsSync, readFileSync, rmSync, statSync, writeFileSync } from 'node:fs';
 import { createServer } from 'node:net';
 import { join } from 'node:path';
 import { StartCheckout } from '../support/start-checkout';
@@ -18,17 +18,12 @@ describe('npm start', () => {
 
   const inFolder = (...path: string[]) => join(checkout.folder, ...path);
   const prepared = () => readFileSync(inFolder('prepared.txt'), 'utf8').trim().split('\n');
-  /** The id of the process that runs the database; undefined when none does. */
+  /** The id of the process that runs the database, by its own note; undefined when none does. */
   const databaseProcess = () => {
-    const [id] = readdirSync('/proc').filter((name) => {
-      if (!/^\d+$/.test(name)) return false;
-      try {
-        return readFileSync(`/proc/${name}/cmdline`, 'utf8').includes(inFolder('.data/postgres/cluster'));
-      } catch {
-        return false; // gone since the folder was read
-      }
-    });
-    return id;
+    const note = inFolder('.data/postgres/cluster/postmaster.pid');
+    if (!existsSync(note)) return undefined;
+    const id = readFileSync(note, 'utf8').split('\n')[0];
+    return existsSync(`/proc/${id}`) ? id : undefined;
   };
 
   it('builds, makes a database, serves, and on Ctrl-C stops all of it', async () => {

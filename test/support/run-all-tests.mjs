@@ -2,11 +2,11 @@
 import { mkdir, rm } from 'node:fs/promises';
 import { join } from 'node:path';
 import { ensureDataFolder } from '../../server/start/data-folder.mjs';
-import { ensureDebianPackages, isExecutable } from '../../server/start/debian-packages.mjs';
 import { toolEnv } from '../../server/start/npm.mjs';
 import { ensurePackages } from '../../server/start/packages.mjs';
 import { say, tellAndExit } from '../../server/start/sentences.mjs';
 import { isStopping, stopAll, stopOnSignals } from '../../server/start/stopping.mjs';
+import { ensureChromium } from './ensure-chromium.mjs';
 import { closingLine, ledgerOf, sum } from './ledger.mjs';
 import { runPart } from './run-part.mjs';
 import { runSideBySide } from './side-by-side.mjs';
@@ -52,14 +52,6 @@ export async function runAllTests(root) {
     process.on('exit', () => say(closingLine({ passed: 0, failed: 1, skipped: 0 })));
     await tellAndExit(error);
   }
-}
-
-async function ensureChromium() {
-  await ensureDebianPackages({
-    what: 'Chromium',
-    packages: ['chromium'],
-    isThere: () => isExecutable('/usr/bin/chromium'),
-  });
 }
 
 /**

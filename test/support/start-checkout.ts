@@ -20,7 +20,8 @@ require('node:fs').appendFileSync('prepared.txt', process.env.DATABASE_OWNER_URL
 
 /** A checkout with the real start and nothing else of ours: what it builds and serves is a stub, built by copying. */
 export class StartCheckout {
-  readonly folder = mkdtempSync(join(tmpdir(), 'bayhand-checkout-'));
+  /** Under a name that a shell would trip over. */
+  readonly folder = mkdtempSync(join(tmpdir(), "bayhand's $HOME checkout-"));
   private readonly running = new Set<ChildProcess>();
 
   private constructor(readonly port: number) {}
@@ -31,7 +32,7 @@ export class StartCheckout {
     return checkout;
   }
 
-  /** Runs `npm start`'s own command; resolves when it says where Bayhand is, or when it ends. */
+  /** Runs `npm start`'s own command; resolves when it has said how to stop it, or when it ends. */
   async start(env: NodeJS.ProcessEnv = {}): Promise<Started> {
     const child = spawn(process.execPath, ['server/start/start.mjs'], {
       cwd: this.folder,
@@ -48,7 +49,7 @@ export class StartCheckout {
       for (const stream of [child.stdout, child.stderr]) {
         stream.setEncoding('utf8').on('data', (text: string) => {
           started.said += text;
-          if (/^Bayhand is at /m.test(started.said)) up();
+          if (/^Stop it with Ctrl-C.*\n/m.test(started.said)) up();
         });
       }
     });

@@ -1,0 +1,162 @@
+import { join } from 'node:path';
+import type { Page } from '@playwright/test';
+import { canonicalJson, verifyChain, type RunEvent, type RunHeader } from '../../procedures/engine';
+import { shownStep, walkTo, type Answers } from './support/at-the-car';
+import { expect, test } from './support/test';
+import { openVisit, readyWithoutNetwork, signIn } from './support/visits';
+import { eventsInDatabase, eventsOnTablet, rowsOf } from './support/what-is-kept';
+
+const ramp = join(__dirname, '../reference/ramps/demo-warm-seals.csv');
+
+/** Takes the scan tool's file, takes the mark that is offered, and goes on. */
+async function listenByFile(page: Page): Promise<void> {
+  await page.getByRole('button', { name: 'Take a log of the scan tool instead' }).click();
+  await page.locator('input[type=file]').setInputFiles(ramp);
+  await expect(page.getByText('381 samples')).toBeVisible();
+  await page.getByRole('button', { name: 'Take this series' }).click();
+  await expect(page.getByText('Gauge at the mark')).toBeVisible();
+  await page.getByRole('button', { name: /Keep the mark/ }).click();
+}
+
+const warmCar: Answers = {
+  gear: { gauge: 'G-12', scanTool: 'S-3', probe: 'L-2', barometer: 'B-1', thermometer: 'T-4' },
+  read: { '2b': ['61', '86'], '4': ['1014'], '5': ['94.2'], '6': ['93.9'], '11a': ['78'], '15b': ['0.0'] },
+  way: { '4': 'Altimeter setting' },
+  codes: { '3': ['P0068 stored'], '18a': ['P0068 stored', 'P0106 pending'], '19c': [] },
+  choose: {
+    '12b': ['It stayed quiet'],
+    '18b': ['They are cleared'],
+    '19': ['Both halves are done'],
+    '19a': ['Nothing forbids driving'],
+    '19b': ['Idle', 'Steady ride'],
+  },
+  listen: listenByFile,
+};
+
+test('one job from the visit to the record, with the network cut and the browser killed in the middle', async ({
+  product,
+  switchOn,
+}) => {
+  test.setTimeout(240_000);
+  let tablet = await switchOn();
+  let { page } = tablet;
+
+  // The technician signs in and opens a visit; a wrong check digit is said beside the field, nothing is lost.
+  await signIn(page, 'okafor');
+  await readyWithoutNetwork(page);
+  await openVisit(page, {
+    VIN: '7ZZFD9HA0NP301446',
+    Make: 'Merrow',
+    Model: 'Heron',
+    'Repair order (RO)': '4431',
+    Odometer: '61240',
+    "Concern, in the customer's words": 'Whistle at idle',
+    'Trouble codes': 'P0068',
+  });
+  await page.getByRole('button', { name: 'Add', exact: true }).click();
+  await expect(page.locator('#vin-says')).toContainText('check digit');
+  await page.getByLabel('VIN').fill('7ZZFD9HA0NP310446');
+  await page.getByRole('button', { name: 'Keep the visit' }).click();
+  await expect(page.getByText('Procedures that fit')).toBeVisible();
+
+  // The network goes away: Chromium is offline and the port is closed.
+  await tablet.context.setOffline(true);
+  await product.stop();
+  await page.getByRole('button', { name: /Start the warm half/ }).click();
+  await expect(page.locator('.frame h1').first()).toBeVisible();
+  const runId = new URL(page.url()).pathname.split('/').at(-1) ?? '';
+
+  // Up to the middle of the ramp's preparation, then the browser is killed.
+  await walkTo(page, '9a', warmCar);
+  const before = await eventsOnTablet(page, runId);
+  await tablet.kill();
+
+  // Opened again, still offline: the same step, everything in place.
+  tablet = await switchOn();
+  page = tablet.page;
+  await tablet.context.setOffline(true);
+  await page.goto(`/run/${runId}`);
+  await expect(page.getByText('Now: step 9a')).toBeVisible();
+  await expect(page.getByText('dipstick').first()).toBeVisible();
+  expect(await eventsOnTablet(page, runId)).toEqual(before);
+  await page.getByRole('button', { name: /Go on with step 9a/ }).click();
+  expect((await shownStep(page)).number).toBe('9a');
+  await expect(page.getByRole('button', { name: '3 disturbed' })).toBeVisible();
+
+  // To the finding, the write-up, and closed: all without the network.
+  await walkTo(page, 'the end', warmCar);
+  await expect(page.getByRole('heading', { name: /The manifold valve seals at 3\.\d ± 0\.\d kPa/ })).toBeVisible();
+  await page.getByRole('button', { name: 'Keep the write-up' }).click();
+  await page.getByRole('button', { name: /To the closing/ }).click();
+  await page.getByRole('button', { name: 'Close the run' }).click();
+  await page.getByRole('button', { name: 'To the Bench' }).click();
+  const onTablet = (await eventsOnTablet(page, runId)) as unknown as RunEvent[];
+  expect(await rowsOf(product.databaseUrl, 'SELECT run_id FROM run')).toEqual([]);
+
+  // Back on the network it syncs by itself.
+  await product.start();
+  await tablet.context.setOffline(false);
+  await expect(page.getByText(/All sent/)).toBeVisible({ timeout: 60_000 });
+
+  // The record in PostgreSQL equals, event for event and hash for hash, what the tablet held.
+  const inDatabase = await eventsInDatabase(product.databaseUrl, runId);
+  expect(inDatabase).toEqual(onTablet.map((event) => canonicalJson(event)));
+  const [run] = await rowsOf<{ header: string; status: string; finding: string }>(
+    product.databaseUrl,
+    'SELECT header, status, finding FROM run WHERE run_id = $1',
+    [runId],
+  );
+  expect(run).toMatchObject({ status: 'closed', finding: 'seals' });
+  const header = JSON.parse(run?.header ?? '{}') as RunHeader;
+  expect(
+    verifyChain(
+      header,
+      inDatabase.map((text) => JSON.parse(text) as RunEvent),
+    ),
+  ).toEqual({
+    ok: true,
+    head: onTablet.at(-1)?.hash,
+  });
+  expect(await rowsOf(product.databaseUrl, 'SELECT what FROM discrepancy WHERE run_id = $1', [runId])).toEqual([]);
+  await tablet.close();
+});
+
+test('the manager reads the whole story of that kind of run in the Record room', async ({ product, switchOn }) => {
+  test.setTimeout(240_000);
+  const tablet = await switchOn();
+  const { page } = tablet;
+  await signIn(page, 'okafor');
+  await page
+    .getByRole('button', { name: /Take it/ })
+    .or(page.getByRole('link', { name: /Take it/ }))
+    .click();
+  await page.getByRole('button', { name: /Start the warm half/ }).click();
+  await walkTo(page, 'the end', warmCar);
+  await page.getByRole('button', { name: 'Keep the write-up' }).click();
+  await page.getByRole('button', { name: /To the closing/ }).click();
+  await page.getByRole('button', { name: 'Close the run' }).click();
+  await page.getByRole('button', { name: 'To the Bench' }).click();
+  await expect(page.getByText(/All sent/)).toBeVisible({ timeout: 30_000 });
+  const [run] = await rowsOf<{ run_id: string }>(
+    product.databaseUrl,
+    `SELECT run_id FROM run WHERE repair_order = '4417'`,
+  );
+
+  await page.getByRole('button', { name: 'I. Okafor' }).click();
+  await page
+    .getByRole('menuitem', { name: 'Sign out' })
+    .or(page.getByRole('button', { name: 'Sign out' }))
+    .click();
+  await signIn(page, 'lindqvist');
+  await page.goto('/records');
+  await page.getByText('4417').first().click();
+  await expect(page).toHaveURL(new RegExp(run?.run_id ?? 'none'));
+  await expect(page.getByText(/Chain whole/)).toBeVisible();
+  const story = page.locator('bay-story-table');
+  await expect(story).toContainText('94.2');
+  await expect(story).toContainText('in band');
+  await expect(story).toContainText('noiseStopped and inBand(sealPoint)');
+  await expect(page.locator('bay-series-view')).toContainText(/noise stops/i);
+  await expect(page.getByText(/seals at 3\.\d/).first()).toBeVisible();
+  await tablet.close();
+});
