@@ -21,6 +21,8 @@ export class HandSetting {
   private readonly chosenHand = signal<Hand>('right');
   private readonly measured = signal<number | undefined>(undefined);
 
+  /** Resolves once what this tablet keeps has been read. */
+  readonly recalled: Promise<void>;
   /** The hand that taps; what it taps stands on its side. */
   readonly hand = this.chosenHand.asReadonly();
   /** CSS pixels in a millimetre of this screen; undefined until a card was laid on it. */
@@ -34,7 +36,7 @@ export class HandSetting {
       if (size === undefined) this.root.style.removeProperty('--mm');
       else this.root.style.setProperty('--mm', `${size}px`);
     });
-    void this.recall();
+    this.recalled = this.recall();
   }
 
   async chooseHand(hand: Hand): Promise<void> {

@@ -16,12 +16,21 @@ describe('Session', () => {
 
   it('asks nobody to sign in again while the cookie holds', async () => {
     const { server } = coreForSpecs();
+    await rememberPerson();
     const session = TestBed.inject(Session);
     const started = session.start();
     (await asked(server, 'POST', refresh)).flush(answer);
     await started;
     expect(session.state()).toBe('signed-in');
     expect(session.person()).toEqual(okafor);
+  });
+
+  it('asks for no session where nobody ever signed in', async () => {
+    const { server } = coreForSpecs();
+    const session = TestBed.inject(Session);
+    await session.start();
+    expect(session.state()).toBe('signed-out');
+    server.expectNone(refresh);
   });
 
   it('goes on as the last person when nobody can be asked, and not as nobody', async () => {

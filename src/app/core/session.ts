@@ -116,11 +116,11 @@ export class Session {
       return;
     }
     this.last.set(await this.settings.read<RememberedPerson>(rememberedKey));
+    // Where nobody ever signed in there is no session to renew: asking would only be refused.
+    if (this.last() === undefined) return this.status.set('signed-out');
     const patience = new Promise<'late'>((resolve) => setTimeout(() => resolve('late'), startPatienceMs));
     await Promise.race([this.refresh(), patience]);
-    if (this.status() !== 'starting') return;
-    if (this.last() === undefined) this.status.set('signed-out');
-    else this.goOnOffline();
+    if (this.status() === 'starting') this.goOnOffline();
   }
 
   private async renew(): Promise<string | undefined> {

@@ -4,7 +4,7 @@ import { Component, ChangeDetectionStrategy } from '@angular/core';
 import { provideRouter, Router } from '@angular/router';
 import { Session } from './session';
 import { roleGuard, signedInGuard } from './signed-in-guard';
-import { asked, closeStores, coreForSpecs, okafor } from './testing/core-for-specs';
+import { asked, closeStores, coreForSpecs, okafor, rememberPerson } from './testing/core-for-specs';
 import type { Role } from './wire';
 
 @Component({ selector: 'bay-blank', template: '', changeDetection: ChangeDetectionStrategy.OnPush })
@@ -25,6 +25,7 @@ const routes = [
 
 async function whereTo(url: string, role: Role | undefined): Promise<string> {
   const { server } = coreForSpecs([provideRouter(routes)]);
+  await rememberPerson();
   const started = TestBed.inject(Session).start();
   const request = await asked(server, 'POST', '/api/session/refresh');
   if (role) request.flush({ accessToken: 'a', expiresInS: 600, person: { ...okafor, role } });

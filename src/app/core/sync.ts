@@ -129,7 +129,7 @@ export class Sync {
     }
     await this.registerIfAllowed();
     if ((await this.tablet.registeredId()) === undefined) {
-      this.blocked.set('tablet');
+      this.blocked.set(this.missesTablet() ? 'tablet' : undefined);
     } else {
       this.blocked.set(undefined);
       await this.sendAll();
@@ -160,6 +160,11 @@ export class Sync {
     if (person === undefined || person.role === 'manager' || this.refusedTo === person.id) return;
     if ((await this.tablet.registeredId()) !== undefined) return;
     if ((await this.tablet.register()) === 'refused') this.refusedTo = person.id;
+  }
+
+  /** Who only reads at a desk needs no registered tablet, unless something of others waits on this one. */
+  private missesTablet(): boolean {
+    return this.session.person()?.role !== 'manager' || this.waitedLast > 0;
   }
 
   private async inOneWindow(work: () => Promise<void>): Promise<boolean> {

@@ -7,12 +7,17 @@ import { browserStorage, StorageRoom } from './storage-room';
 import { asked, closeStores, coreForSpecs, okafor } from './testing/core-for-specs';
 import { Theme } from './theme';
 
-const settled = () => new Promise((resolve) => setTimeout(resolve, 30));
+/** What was begun to be read ends before the store is closed under it. */
+async function closeAfterReading(): Promise<void> {
+  TestBed.tick();
+  await TestBed.inject(Theme).recalled();
+  await TestBed.inject(HandSetting).recalled;
+  closeStores();
+}
 const root = document.documentElement;
 
 describe('Theme', () => {
-  // What was begun to be read ends before the store is closed under it.
-  afterEach(() => settled().then(closeStores));
+  afterEach(closeAfterReading);
 
   it('shows the choice on the page and keeps it with the person', async () => {
     const { server } = coreForSpecs();
@@ -38,14 +43,13 @@ describe('Theme', () => {
     (await asked(server, 'POST', '/api/session')).flush({ accessToken: 'a', expiresInS: 600, person: okafor });
     await outcome;
     TestBed.tick();
-    await settled();
+    await theme.recalled();
     expect(theme.name()).toBe('night');
   });
 });
 
 describe('HandSetting', () => {
-  // What was begun to be read ends before the store is closed under it.
-  afterEach(() => settled().then(closeStores));
+  afterEach(closeAfterReading);
 
   it('carries hand and millimetre to the page, and back again', async () => {
     coreForSpecs();
@@ -66,8 +70,7 @@ describe('HandSetting', () => {
 });
 
 describe('StorageRoom', () => {
-  // What was begun to be read ends before the store is closed under it.
-  afterEach(() => settled().then(closeStores));
+  afterEach(closeAfterReading);
 
   const withStorage = (storage: Partial<StorageManager> | undefined) => {
     coreForSpecs([{ provide: browserStorage, useValue: storage }]);

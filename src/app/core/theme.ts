@@ -16,12 +16,19 @@ export class Theme {
 
   private readonly chosen = signal<ThemeName>('day');
 
+  private recalling: Promise<void> = Promise.resolve();
+
   readonly name = this.chosen.asReadonly();
 
   constructor() {
     // The page itself carries the theme, and the browser's own bars their colour.
     effect(() => this.show(this.chosen()));
-    effect(() => void this.recall(this.session.person()?.id));
+    effect(() => (this.recalling = this.recall(this.session.person()?.id)));
+  }
+
+  /** Resolves once the choice of the person at hand has been read. */
+  recalled(): Promise<void> {
+    return this.recalling;
   }
 
   /** Chooses a theme and keeps it for this person. */
