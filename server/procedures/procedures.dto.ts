@@ -36,6 +36,15 @@ export class DraftSummary {
   declare problems: never[];
 }
 
+/** A draft with its document. */
+export class DraftDetail extends DraftSummary {
+  @IsString()
+  declare procedureId: string;
+
+  @IsObject()
+  declare document: ProcedureDocument;
+}
+
 export class ProcedureSummary {
   @IsString()
   declare id: string;

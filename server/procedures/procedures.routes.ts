@@ -1,6 +1,6 @@
 import { matchingParam, uuidParam } from '../http/path-params';
 import { everyRole, route, type Route } from '../http/route';
-import { DraftAnswer, ProcedureSummary, PublicationAnswer, WithdrawalRequest } from './procedures.dto';
+import { DraftAnswer, DraftDetail, ProcedureSummary, PublicationAnswer, WithdrawalRequest } from './procedures.dto';
 import type { ProceduresService } from './procedures.service';
 
 const draftLimitBytes = 2 * 1024 * 1024;
@@ -25,6 +25,13 @@ export function proceduresRoutes(procedures: ProceduresService): Route[] {
         answers: { 201: DraftAnswer },
       },
       async ({ body }, person) => ({ status: 201, json: await procedures.importDraft(body, person) }),
+    ),
+    route(
+      'get',
+      '/api/procedures/drafts/:id',
+      ['lead'],
+      { summary: 'A draft with its document.', answers: { 200: DraftDetail } },
+      async ({ params }) => ({ status: 200, json: await procedures.draft(uuidParam(params, 'id')) }),
     ),
     route(
       'post',

@@ -1,12 +1,13 @@
 import { IsNull, type DataSource, type EntityManager } from 'typeorm';
 import { v7 as uuidv7 } from 'uuid';
+import type { ProcedureDocument } from '../../procedures/document';
 import { canonicalJson, sha256Hex } from '../../procedures/engine';
 import { Person } from '../access/access.entity';
 import { noteChange } from '../database/change-log';
 import { Conflict, NotFound } from '../http/problem';
 import type { Principal } from '../http/route';
 import { checkedDocument } from './checked-document';
-import type { DraftAnswer, ProcedureSummary, PublicationAnswer } from './procedures.dto';
+import type { DraftAnswer, DraftDetail, ProcedureSummary, PublicationAnswer } from './procedures.dto';
 import { ProcedureDraft, ProcedureVersion, ProcedureWithdrawal } from './procedures.entity';
 import { summariesOf } from './summaries';
 
@@ -44,6 +45,22 @@ export class ProceduresService {
       await manager.insert(ProcedureDraft, draft);
     });
     return { id: draft.id, procedureId: document.id, problems: [] };
+  }
+
+  /** A draft that waits, with its document. Throws `NotFound`. */
+  async draft(draftId: string): Promise<DraftDetail> {
+    const { manager } = this.database;
+    const draft = await manager.findOneBy(ProcedureDraft, { id: draftId, publishedVersion: IsNull() });
+    if (draft === null) throw new NotFound('There is no such draft.');
+    const importer = await manager.findOneBy(Person, { id: draft.importedBy });
+    return {
+      id: draft.id,
+      procedureId: draft.procedureId,
+      importedAt: draft.importedAt.toISOString(),
+      importedBy: importer?.displayName ?? '',
+      problems: [],
+      document: JSON.parse(draft.document) as ProcedureDocument,
+    };
   }
 
   /** Publishes a draft as the next version. Throws `NotFound`, or `Conflict` when it, or just that, is published. */

@@ -54,6 +54,21 @@ it('keeps a document as a draft, publishes it once, then as a further version', 
   expect(listed.draft).toBeUndefined();
 });
 
+it('gives the lead a draft to read, until it is published', async () => {
+  const { json } = await importDraft(smallProcedure);
+  const read = () => server.ask('GET', `/api/procedures/drafts/${json.id}`, { as: 'adeyemi' });
+  expect((await read()).json).toEqual({
+    id: json.id,
+    procedureId: 'small-check',
+    importedAt: server.now.toISOString(),
+    importedBy: 'R. Adeyemi',
+    problems: [],
+    document: smallProcedure,
+  });
+  await publish(json.id);
+  expect((await read()).status).toBe(404);
+});
+
 it('does not publish the very same once more, unless it was withdrawn', async () => {
   await publishSmallProcedure(server);
   const same = await importDraft(smallProcedure);

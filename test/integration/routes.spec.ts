@@ -26,6 +26,7 @@ const allowed: Readonly<Record<string, readonly Role[] | 'anyone'>> = {
   'get /api/attachments/:sha256': all,
   'get /api/procedures': all,
   'post /api/procedures/drafts': ['lead'],
+  'get /api/procedures/drafts/:id': ['lead'],
   'post /api/procedures/drafts/:id/publication': ['lead'],
   'post /api/procedures/:id/versions/:version/withdrawal': ['lead'],
   'get /api/records': ['lead', 'manager'],

@@ -83,21 +83,26 @@ describe('the Method desk', () => {
 
   it('lists what is to be mended by step and place, and keeps the file', async () => {
     await showList();
-    await choose('{"format":1}');
+    await choose('{"format":1,"steps":[{"id":"start"},{"id":"look","kind":"stare"}]}');
     await answer(
       'POST',
       '/api/procedures/drafts',
       {
         title: 'Invalid',
         errors: [
-          { pointer: 'branch 2', detail: 'Step what-was-heard: sealPiont is not a name of this procedure' },
+          {
+            pointer: '/steps/0/next/1/when',
+            detail: 'Step what-was-heard: branch 2: sealPiont is not a name: mend it',
+          },
+          { pointer: '/steps/1/kind', detail: 'no such kind of step' },
           { pointer: '/title', detail: 'must be there' },
         ],
       },
       422,
     );
-    expect(alerts()).toContain('2 problems must be mended');
-    expect(alerts()).toMatch(/Step what-was-heard\s*branch 2\s*sealPiont is not a name/);
+    expect(alerts()).toContain('3 problems must be mended');
+    expect(alerts()).toMatch(/Step what-was-heard\s*branch 2\s*sealPiont is not a name: mend it/);
+    expect(alerts()).toMatch(/Step look\s*\/steps\/1\/kind\s*no such kind of step/);
     expect(alerts()).toMatch(/The document\s*\/title\s*must be there/);
   });
 

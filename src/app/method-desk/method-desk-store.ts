@@ -51,7 +51,7 @@ export class MethodDeskStore {
         await this.shelf.importDraft(read.document);
       } catch (error) {
         if (!(error instanceof ApiProblem)) throw error;
-        return this.keep(refusedImport(fileName, text, error));
+        return this.keep(refusedImport({ fileName, text }, read.document, error));
       }
       await this.putAway();
       this.said.set({ tone: 'done', text: `${fileName} is a draft now.` });
@@ -119,7 +119,7 @@ export class MethodDeskStore {
   }
 }
 
-function refusedImport(fileName: string, text: string, refusal: ApiProblem): KeptImport {
+function refusedImport(file: Pick<KeptImport, 'fileName' | 'text'>, document: object, refusal: ApiProblem): KeptImport {
   const isWaiting = refusal.isUnavailable;
-  return { fileName, text, problems: isWaiting ? [] : problemsOf(refusal), isWaiting };
+  return { ...file, problems: isWaiting ? [] : problemsOf(refusal, document), isWaiting };
 }
