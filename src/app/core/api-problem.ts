@@ -20,6 +20,8 @@ export class ApiProblem extends Error {
     readonly fields: readonly FieldProblem[],
     /** Seconds until a new try makes sense, where the server says so. */
     readonly retryAfterS: number | undefined,
+    /** The server's name for this kind of failure, `unknown-tablet`; undefined where it gave none. */
+    readonly code: string | undefined,
   ) {
     super(detail ?? title);
   }

@@ -19,6 +19,7 @@ function problemOf(error: HttpErrorResponse): ApiProblem {
     detail,
     Array.isArray(body['errors']) ? body['errors'].filter(isFieldProblem) : [],
     Number.isFinite(retryAfter) ? retryAfter : undefined,
+    typeof body['code'] === 'string' ? body['code'] : undefined,
   );
 }
 

@@ -18,12 +18,14 @@ export async function takeAnswer(
   answer: PushAnswer,
   { now, epoch }: AnswerMoment,
 ): Promise<void> {
-  await store.transaction('rw', [store.outbox, store.receipts], async () => {
+  await store.transaction('rw', [store.outbox, store.receipts, store.runs], async () => {
     for (const { runId, acceptedThrough, countersigned, problem } of answer.runs) {
       if (!items.some((item) => item.kind === 'run' && item.id === runId)) continue;
-      await store.receipts.put({ runId, acceptedThrough, countersigned, receivedAt: now, epoch });
+      const said = problem === undefined ? {} : { problem: wordsOf(problem) };
+      await store.receipts.put({ runId, acceptedThrough, countersigned, receivedAt: now, epoch, ...said });
       await giveUpThrough(store, runId, acceptedThrough);
-      if (problem !== undefined) await refuse(store, 'run', runId, wordsOf(problem));
+      if (isGap(problem)) await offerFrom(store, runId, acceptedThrough + 1, now);
+      else if (problem !== undefined) await refuse(store, 'run', runId, wordsOf(problem));
     }
     for (const { id, problem } of answer.documents) {
       const item = items.find((candidate) => candidate.kind === 'document' && candidate.id === id);
@@ -51,6 +53,19 @@ async function giveUpThrough(store: OfflineStore, runId: string, acceptedThrough
     else await store.outbox.put({ ...row, fromSeq: acceptedThrough + 1 });
   }
 }
+
+/** The server lacks earlier events than the ones it was sent: they are all on this tablet, so they go again. */
+async function offerFrom(store: OfflineStore, runId: string, fromSeq: number, now: number): Promise<void> {
+  const run = await store.runs.get(runId);
+  const rows = await store.outbox.where('runId').equals(runId).toArray();
+  await store.outbox.bulkDelete(rows.flatMap((row) => (row.kind === 'events' ? [row.id ?? 0] : [])));
+  if (run && run.seq >= fromSeq) {
+    await store.outbox.add({ kind: 'events', runId, fromSeq, toSeq: run.seq, since: rows[0]?.since ?? now });
+  }
+}
+
+const isGap = (problem: PushProblem | string | undefined): boolean =>
+  typeof problem === 'object' && problem.code === 'gap';
 
 /** What a refusal says, in whichever shape it came. */
 export const wordsOf = (problem: PushProblem | string): string =>

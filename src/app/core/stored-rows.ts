@@ -98,6 +98,8 @@ export interface ReceiptRow {
   readonly receivedAt: number;
   /** The server database's epoch at that time. */
   readonly epoch: string | undefined;
+  /** What the server said about the run, such as that it has two tails; absent when it took it silently. */
+  readonly problem?: string;
 }
 
 /** One named value: a setting of the tablet or of a person, a cursor, a draft of a form. */

@@ -194,6 +194,48 @@ describe('Sync', () => {
     expect((await store.receipts.toArray()).map(({ runId }) => runId)).toEqual(['r-1', 'r-3']);
   });
 
+  it('sends everything again from where the server lacks events', async () => {
+    const { server, store, journal, sync } = await signedInTablet();
+    await journal.open(header, [...drafts, { type: 'step-done', data: { step: 'start' } }]);
+    await store.outbox.clear();
+    await journal.append('r-1', [{ type: 'step-claimed', data: { step: 'codes' } }]);
+    const done = sync.again();
+    const first = await pushed(server);
+    expect(first.body.runs[0]!.events.map(({ seq }) => seq)).toEqual([3]);
+    const problem = { code: 'gap', title: 'Events are missing' };
+    first.request.flush({
+      runs: [{ runId: 'r-1', acceptedThrough: 0, missingAttachments: [], problem }],
+      documents: [],
+    });
+    const second = await pushed(server);
+    expect(second.body.runs[0]!.events.map(({ seq }) => seq)).toEqual([1, 2, 3]);
+    second.request.flush(accept(second.body));
+    (await asked(server, 'GET', '/api/sync/pull')).flush(nothing);
+    await done;
+    expect(await store.outbox.count()).toBe(0);
+  });
+
+  it('registers anew when the server does not know the tablet any more, under the same key', async () => {
+    const { server, store, journal, sync } = await signedInTablet();
+    await journal.open(header, drafts);
+    const before = await store.keys.get('tablet');
+    let done = sync.again();
+    (await pushed(server)).request.flush({ code: 'unknown-tablet' }, { status: 403, statusText: 'Forbidden' });
+    await done;
+    expect(await store.outbox.count()).toBe(1);
+
+    done = sync.again();
+    const request = await asked(server, 'POST', '/api/tablets');
+    expect(request.request.body.publicKey).toEqual(before!.publicKey);
+    request.flush({ id: 't-2', label: 'x' });
+    const again = await pushed(server);
+    expect(again.body.device).toBe('t-2');
+    again.request.flush(accept(again.body));
+    (await asked(server, 'GET', '/api/sync/pull')).flush(nothing);
+    await done;
+    expect(await store.outbox.count()).toBe(0);
+  });
+
   it('sends no practice', async () => {
     const { server, journal, sync } = await signedInTablet();
     await journal.open({ ...header, kind: 'practice' }, drafts);

@@ -112,6 +112,7 @@ export class Sync {
     } catch (error) {
       if (!(error instanceof ApiProblem)) throw error;
       this.failures += 1;
+      if (error.code === 'unknown-tablet') await this.tablet.forgetRegistration();
       if (error.isUnavailable) this.noteUnreached();
       else this.noteReached();
       this.schedule(Math.max(1000, retryDelayMs(this.failures, this.draw())));

@@ -70,6 +70,18 @@ export class Tablet {
     return this.state();
   }
 
+  /**
+   * The server does not know this tablet (any more): its database was made anew. The key stays; registering asks
+   * again.
+   */
+  async forgetRegistration(): Promise<void> {
+    const row = this.row();
+    if (!row) return;
+    const unregistered = { ...row, tabletId: undefined };
+    await this.store.keys.put(unregistered);
+    this.row.set(unregistered);
+  }
+
   /** Signs bytes with the tablet's key: ECDSA P-256 with SHA-256, r and s side by side, base64url. */
   async sign(bytes: Uint8Array<ArrayBuffer>): Promise<string> {
     await this.read();

@@ -120,6 +120,8 @@ export interface Countersignature {
 
 /** Why one item of a push was refused. */
 export interface PushProblem {
+  /** `gap`, `fork`, `not-allowed` and so on. */
+  readonly code?: string;
   readonly status?: number;
   readonly title?: string;
   readonly detail?: string;

@@ -2,17 +2,18 @@ import { ChangeDetectionStrategy, Component, computed, effect, inject, linkedSig
 import { ApiProblem } from '../core/api-problem';
 import { buildId } from '../core/build-id';
 import { assumedPxPerMm, cardWidthMm, HandSetting, pxPerMmRange } from '../core/hand-setting';
-import { Outbox } from '../core/outbox';
 import { Session } from '../core/session';
 import { StorageRoom } from '../core/storage-room';
 import { Sync } from '../core/sync';
 import { Tablet } from '../core/tablet';
 import { TopBar } from '../shared/top-bar';
+import { RefusedList } from './refused-list';
+import { RefusedStore } from './refused-store';
 
 /** This tablet: its registration, how it is held, how large its pixels are, its room, and what the server refused. */
 @Component({
   selector: 'bay-tablet-page',
-  imports: [TopBar],
+  imports: [RefusedList, TopBar],
   templateUrl: './tablet-page.html',
   styleUrl: './tablet-page.css',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -20,7 +21,7 @@ import { TopBar } from '../shared/top-bar';
 export class TabletPage {
   private readonly session = inject(Session);
   private readonly sync = inject(Sync);
-  private readonly outbox = inject(Outbox);
+  protected readonly refused = inject(RefusedStore);
   protected readonly tablet = inject(Tablet);
   protected readonly holding = inject(HandSetting);
   protected readonly storage = inject(StorageRoom);
@@ -77,8 +78,8 @@ export class TabletPage {
     this.pxPerMm.set(Math.min(pxPerMmRange.high, Math.max(pxPerMmRange.low, size)));
   }
 
-  protected async offerAgain(): Promise<void> {
-    await this.outbox.offerAgain();
+  protected async offerAgain(id: string): Promise<void> {
+    await this.refused.offerAgain(id);
     await this.sync.again();
   }
 
