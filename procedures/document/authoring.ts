@@ -3,3 +3,5 @@
  * the compiled schema is large.
  */
 export { validateDocument, type DocumentProblem, type Validation } from './validate-document';
+export { lintProcedure, type LintOptions, type LintReport } from './lint';
+export { type LintFinding, type LintRule } from './lint/lint-finding';

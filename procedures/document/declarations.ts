@@ -5,7 +5,14 @@ import type { PressureSense, ProcedureDocument, Quantity, Step } from './procedu
 
 /** What a name of a document stands for. */
 export type Declaration =
-  | { readonly kind: 'truth'; readonly name: string; readonly label: string; readonly step?: string }
+  | {
+      readonly kind: 'truth';
+      readonly name: string;
+      readonly label: string;
+      readonly step?: string;
+      /** Whether it is a finding: true while the run heads for it. */
+      readonly isFinding?: boolean;
+    }
   | {
       readonly kind: 'quantity';
       readonly name: string;
@@ -82,7 +89,7 @@ function ownDeclarations(step: Step): readonly Declaration[] {
         'unit' in found ? quantity(found, step.id) : truthNamed(found.name, found.what, step.id),
       );
     case 'finding':
-      return [truthNamed(step.id, step.title, step.id)];
+      return [{ ...truthNamed(step.id, step.title, step.id), isFinding: true }];
     default:
       return [];
   }
@@ -101,7 +108,7 @@ function quantity(declared: Pick<Quantity, 'name' | 'label' | 'unit' | 'sense' |
   };
 }
 
-function truthNamed(name: string, label: string, step?: string): Declaration {
+function truthNamed(name: string, label: string, step?: string): Extract<Declaration, { kind: 'truth' }> {
   return { kind: 'truth', name, label, ...(step === undefined ? {} : { step }) };
 }
 
@@ -115,7 +122,9 @@ function isWord(name: string): boolean {
 }
 
 function isSameMeaning(a: Declaration, b: Declaration): boolean {
-  if (a.kind === 'truth' || b.kind === 'truth') return a.kind === b.kind;
+  // A finding's truth follows the verdict, so nothing else may set it.
+  if (a.kind === 'truth' && b.kind === 'truth') return a.isFinding !== true && b.isFinding !== true;
+  if (a.kind === 'truth' || b.kind === 'truth') return false;
   return a.unit === b.unit && a.sense === b.sense;
 }
 

@@ -1,0 +1,96 @@
+import { compileProcedure } from './compile-procedure';
+import { expressionPlaces } from './expression-places';
+import type { Expression } from './expression/expression';
+import { parseExpression } from './expression/parse';
+import { narrowBands } from './lint/band-and-gear';
+import { unboundedLoops } from './lint/bounded-loops';
+import { piledUpCautions } from './lint/cautions';
+import { mixedConnectives } from './lint/conditions';
+import { bandsBeyondLimits } from './lint/limit-and-band';
+import type { LintFinding, LintSubject } from './lint/lint-finding';
+import { missingParts } from './lint/pictures';
+import { endlessSteps, unnamedVerdicts, unreachableSteps, waysToFindings } from './lint/reachable';
+import { brokenReferences } from './lint/references';
+import { neverRestored } from './lint/restored';
+import { runGraphs } from './lint/run-graph';
+import { startCardPlace } from './lint/start';
+import { unknownTemplateNames } from './lint/template-names';
+import { valuesBeforeUse } from './lint/value-before-use';
+import type { ProcedureDocument } from './procedure-document';
+import { validateDocument } from './validate-document';
+
+export interface LintReport {
+  /** What publishing refuses. */
+  readonly errors: readonly LintFinding[];
+  /** What the author should know. */
+  readonly warnings: readonly LintFinding[];
+  /** For each finding that a run can reach, the ids of the steps on one shortest way to it. */
+  readonly waysToFindings: Readonly<Record<string, readonly string[]>>;
+}
+
+export interface LintOptions {
+  /** The parts that each drawn sheet has; without it pictures are not held against the drawings. */
+  readonly parts?: Readonly<Record<string, readonly string[]>>;
+}
+
+const errorRules: readonly ((subject: LintSubject) => readonly LintFinding[])[] = [
+  startCardPlace,
+  brokenReferences,
+  unknownTemplateNames,
+  unreachableSteps,
+  endlessSteps,
+  unnamedVerdicts,
+  unboundedLoops,
+  valuesBeforeUse,
+  neverRestored,
+  bandsBeyondLimits,
+  missingParts,
+  mixedConnectives,
+  piledUpCautions,
+];
+
+/**
+ * Reads a document as its publisher would: shape, expressions, ways, values, restoring, cautions. Every way is
+ * explored with its readings left open, so a way that is shown may need readings that no car has. Never throws on a
+ * document's content; time grows with the steps times the findings.
+ */
+export function lintProcedure(document: ProcedureDocument, options: LintOptions = {}): LintReport {
+  const validation = validateDocument(document);
+  if (!validation.ok) {
+    const errors = validation.problems.map((problem): LintFinding => ({ rule: 'schema', ...problem }));
+    return { errors, warnings: [], waysToFindings: {} };
+  }
+  const trees = treesOf(document);
+  const subject: LintSubject = { document, trees, graphs: runGraphs(document, trees), ...options };
+  return {
+    errors: [...expressionFindings(document), ...errorRules.flatMap((rule) => rule(subject))],
+    warnings: narrowBands(subject),
+    waysToFindings: waysToFindings(subject),
+  };
+}
+
+/** What can be read; the rest is among the expression findings and counts as open. */
+function treesOf(document: ProcedureDocument): ReadonlyMap<string, Expression> {
+  const trees = new Map<string, Expression>();
+  for (const { source } of expressionPlaces(document)) {
+    if (trees.has(source)) continue;
+    const parsed = parseExpression(source);
+    if (parsed.ok) trees.set(source, parsed.expression);
+  }
+  return trees;
+}
+
+function expressionFindings(document: ProcedureDocument): readonly LintFinding[] {
+  const compiled = compileProcedure(document);
+  if (compiled.ok) return [];
+  const numbers = new Map(document.steps.map(({ id, number }) => [id, number]));
+  return compiled.problems.map(({ step, where, pointer, message }): LintFinding => {
+    const place = step === undefined ? '' : `Step ${numbers.get(step) ?? step}, `;
+    return {
+      rule: pointer === undefined ? 'names' : 'expression',
+      ...(step === undefined ? {} : { step }),
+      ...(pointer === undefined ? {} : { pointer }),
+      message: `${place}${where}: ${message}`,
+    };
+  });
+}
