@@ -24,10 +24,10 @@ function wayWithoutRestoring(graph: RunGraph, item: string): readonly Step[] | u
   const queue = [...disturbing];
   for (const place of queue) {
     if (place.step.kind === 'finding') return wholeWay(graph, place, cameBy);
+    // A restore step is left with nothing open; stopped in it, the run takes the way that every stop takes.
+    if (place.step.kind === 'restore') continue;
     for (const edge of place.out) {
-      // A restore step is left with nothing open, unless the run is stopped in it.
-      const isRestored = place.step.kind === 'restore' && edge.way.kind !== 'stop';
-      if (isRestored || cameBy.has(edge.to)) continue;
+      if (cameBy.has(edge.to)) continue;
       cameBy.set(edge.to, edge);
       queue.push(edge.to);
     }
