@@ -1,20 +1,47 @@
 import type { Step } from '../procedure-document';
 import { wayWords, type LintFinding, type LintSubject } from './lint-finding';
+import { NameBits } from './name-bits';
 import type { RunEdge, RunGraph, RunPlace } from './run-graph';
 
 /** What is taken apart on some way, stopping included, and not put back before the finding. */
 export function neverRestored({ document, graphs }: LintSubject): readonly LintFinding[] {
-  const items = new Map<string, string>();
+  const labels = new Map<string, string>();
   for (const { disturbs } of document.steps) {
-    for (const { item, label } of disturbs ?? []) if (!items.has(item)) items.set(item, label);
+    for (const { item, label } of disturbs ?? []) if (!labels.has(item)) labels.set(item, label);
   }
-  return [...items].flatMap(([item, label]): LintFinding[] => {
-    for (const graph of graphs) {
+  const bits = new NameBits(labels.keys());
+  const findings = new Map<string, LintFinding>();
+  for (const graph of graphs) {
+    const left = leftAtFindings(graph, bits);
+    for (const [item, label] of labels) {
+      if (findings.has(item) || !bits.has(left, item)) continue;
       const way = wayWithoutRestoring(graph, item);
-      if (way !== undefined) return [finding(item, label, way)];
+      if (way !== undefined) findings.set(item, finding(item, label, way));
     }
-    return [];
-  });
+  }
+  return [...findings.values()];
+}
+
+/** The items that can be open when a finding is reached: for all at once, so that a way is sought only where one is. */
+function leftAtFindings({ places }: RunGraph, bits: NameBits): bigint {
+  const open = new Map<RunPlace, bigint>();
+  let left = 0n;
+  for (let isChanged = true; isChanged;) {
+    isChanged = false;
+    for (const place of places) {
+      const before = open.get(place) ?? 0n;
+      if (place.step.kind === 'finding') left |= before;
+      const after =
+        place.step.kind === 'restore' ? 0n : before | bits.of((place.step.disturbs ?? []).map(({ item }) => item));
+      for (const { to } of place.out) {
+        const known = open.get(to) ?? 0n;
+        if ((known | after) === known) continue;
+        open.set(to, known | after);
+        isChanged = true;
+      }
+    }
+  }
+  return left;
 }
 
 /** Breadth first from every step that disturbs the item, not beyond a finished restore step, to a finding. */
