@@ -107,6 +107,12 @@ describe('expressions and references: what publishing refuses', () => {
       changes: [[place('manifold'), (step) => (step['why'] = 'It must show {stationPresure}.')]],
     },
     {
+      what: 'a text that names a truth',
+      rule: 'references',
+      message: /^Step 4: the text names \{stillQuiet\}/,
+      changes: [[place('manifold'), (step) => (step['why'] = 'It is {stillQuiet}.')]],
+    },
+    {
       what: 'a reason that names nothing',
       rule: 'references',
       message: /^Step 5: the text names \{whistle\}/,
@@ -116,4 +122,12 @@ describe('expressions and references: what publishing refuses', () => {
     const errors = errorsOf(changedDocument(everyKind, ...changes));
     expect(errors).toContainEqual(expect.objectContaining({ rule, message: expect.stringMatching(message) }));
   });
+});
+
+it('lets a text name a finding for its title, and what the visit gives', () => {
+  const document = changedDocument(everyKind, [
+    `${place('hold')}/otherwise`,
+    (exit) => (exit['because'] = '{car} heads for {seals}'),
+  ]);
+  expect(errorsOf(document)).toEqual([]);
 });

@@ -8,8 +8,12 @@ import { waysOf } from './ways';
 export function unknownTemplateNames({ document }: LintSubject): readonly LintFinding[] {
   const known = new Set([
     ...visitNames,
-    ...[...declarationsOf(document).declarations.values()].map(({ name }) => name),
+    ...[...declarationsOf(document).declarations.values()].flatMap(({ kind, name }) =>
+      kind === 'quantity' ? name : [],
+    ),
     ...document.steps.flatMap(askedFor),
+    // A step's id stands for its title; a truth has no words.
+    ...document.steps.map(({ id }) => id),
   ]);
   return document.steps.flatMap((step, place) =>
     templatesOf(step)

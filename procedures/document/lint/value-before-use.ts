@@ -15,10 +15,11 @@ import { wayName } from './ways';
 export function valuesBeforeUse(subject: LintSubject): readonly LintFinding[] {
   const findings = new Map<string, LintFinding>();
   const uses = usesByStep(subject);
+  const titles = new Set(subject.document.steps.map(({ id }) => id));
   for (const graph of subject.graphs) {
     const known = new KnownValues(graph, subject);
     for (const place of graph.places.filter((candidate) => known.isReached(candidate))) {
-      for (const use of [...(uses.get(place.step.id) ?? []), ...templateUses(place)]) {
+      for (const use of [...(uses.get(place.step.id) ?? []), ...templateUses(place, titles)]) {
         for (const name of missingFor(use, place, known, subject)) {
           const key = `${use.pointer} ${name}`;
           if (!findings.has(key)) findings.set(key, finding(use, name, place, wayWithout(graph, place, name)));
@@ -64,9 +65,11 @@ function usesByStep(subject: LintSubject): ReadonlyMap<string, readonly Use[]> {
 const isSentence = ({ pointer }: ExpressionPlace): boolean => /\/(cause|correction|customer)\/\d+\/when$/.test(pointer);
 const isBranch = ({ pointer }: ExpressionPlace): boolean => /\/next\/\d+\/when$/.test(pointer);
 
-/** The reasons of the ways that the run can take here, and a finding's verdict. */
-function templateUses(place: RunPlace): readonly Use[] {
+/** The reasons of the ways that the run can take here, and a finding's verdict; a step's id stands for its title. */
+function templateUses(place: RunPlace, titles: ReadonlySet<string>): readonly Use[] {
   const { step } = place;
+  const valueNames = (template: string): readonly string[] =>
+    namesInTemplate(template).filter((name) => !visitNames.includes(name) && !titles.has(name));
   if (step.kind === 'finding') {
     const names = valueNames(step.verdict);
     return [{ where: 'the verdict', pointer: `/steps/${place.place}/verdict`, when: 'before', names }];
@@ -80,9 +83,6 @@ function templateUses(place: RunPlace): readonly Use[] {
       names: valueNames(way.exit.because),
     }));
 }
-
-const valueNames = (template: string): readonly string[] =>
-  namesInTemplate(template).filter((name) => !visitNames.includes(name));
 
 function missingFor(use: Use, place: RunPlace, known: KnownValues, { trees }: LintSubject): readonly string[] {
   const tree = use.condition === undefined ? undefined : trees.get(use.condition);
