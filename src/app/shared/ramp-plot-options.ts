@@ -132,15 +132,18 @@ function sideAxis(
   [low, high]: readonly [number, number],
 ): uPlot.Axis {
   const step = (high - low) / 20;
+  // Ticks in the other scale's part of the height would say nothing.
+  const inPart: uPlot.Axis.Filter = (_plot, ticks) =>
+    ticks.map((tick) => (tick >= low - step && tick <= high + step ? tick : null));
   return {
     ...axis,
+    grid: { ...axis.grid, filter: inPart },
     scale,
     side: 1,
     size: columnPx,
     gap: gapPx,
     space: 30,
-    // Ticks in the other scale's part of the height would say nothing.
-    filter: (_plot, ticks) => ticks.map((tick) => (tick >= low - step && tick <= high + step ? tick : null)),
+    filter: inPart,
     values: (_plot, ticks) => {
       const last = ticks.findLastIndex((tick) => tick !== null);
       return ticks.map((tick, index) => (tick === null ? null : index === last ? `${tick} ${unit}` : String(tick)));
