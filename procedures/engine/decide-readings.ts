@@ -99,6 +99,13 @@ function recordDerived(
   if (isComplete(drafting, step)) completeStep(drafting, step);
 }
 
+/** The newest take of this claim no longer counts: it was a slip of the finger, or read wrongly. */
+export function takeBack(drafting: Drafting, { name, reason }: Extract<RunCommand, { do: 'take-back' }>): void {
+  const seq = own(drafting.state.current?.takes ?? {}, name)?.at(-1)?.seq;
+  if (seq === undefined) throw new CannotDo('nothing-taken', 'Nothing is recorded here yet that could be taken back.');
+  drafting.add({ type: 'undone', data: { seq, reason: reason.trim() } });
+}
+
 /** Whether everything that the step reads has its value, and what it waits for is true. */
 export function isComplete(drafting: Drafting, step: Step): boolean {
   const reads = readsOf(step);

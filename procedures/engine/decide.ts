@@ -1,5 +1,5 @@
 import type { CompiledProcedure, Step } from '../document';
-import { isComplete, recordTake } from './decide-readings';
+import { isComplete, recordTake, takeBack } from './decide-readings';
 import { finishListening, importSeries, placeMark, takeMarkAway } from './decide-listening';
 import { close, keepWriteUp, leavePause, leaveStop, overrule, pause, redo } from './decide-run';
 import { chooseGear, requireGear } from './decide-gear';
@@ -109,6 +109,8 @@ function performInStep(drafting: Drafting, command: RunCommand): void {
       return confirm(drafting, step);
     case 'record':
       return recordTake(drafting, step, command);
+    case 'take-back':
+      return takeBack(drafting, command);
     case 'choose':
       return choose(drafting, step, command);
     case 'record-codes':

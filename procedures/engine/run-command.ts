@@ -23,6 +23,8 @@ export type RunCommand =
       readonly source?: ReadingSource;
       readonly timeS?: number;
     }
+  /** The newest take of a quantity or channel in this claim no longer counts; it stays visible. */
+  | { readonly do: 'take-back'; readonly name: string; readonly reason: string }
   /** Options of a choice, or windows of a road test; goes on. */
   | { readonly do: 'choose'; readonly options: readonly string[]; readonly text?: string }
   | {
