@@ -172,6 +172,15 @@ export class RefusedEventFound {
   declare receivedAt: string;
 }
 
+/** A tablet that wrote on the run, as people call it. */
+export class WritingTablet {
+  @IsString()
+  declare id: string;
+
+  @IsString()
+  declare label: string;
+}
+
 export class RecordDetail {
   @IsObject()
   declare header: RunHeader;
@@ -191,6 +200,10 @@ export class RecordDetail {
 
   @Nested(() => PublishedProcedure)
   declare procedure: PublishedProcedure;
+
+  /** The enrolled tablets among those that wrote, in the order in which they did. */
+  @Nested(() => WritingTablet, { each: true })
+  declare tablets: WritingTablet[];
 
   @Nested(() => ChainFound)
   declare chain: ChainFound;

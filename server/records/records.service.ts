@@ -1,12 +1,13 @@
-import type { DataSource } from 'typeorm';
-import { In } from 'typeorm';
+import { In, type DataSource, type EntityManager } from 'typeorm';
+import { validate as isUuid } from 'uuid';
 import { verifyChain, type RunEvent, type RunHeader } from '../../procedures/engine';
+import { Tablet } from '../access/access.entity';
 import { NotFound } from '../http/problem';
 import { publishedProcedures } from '../procedures/procedures.service';
 import { countersignatureOnTheWire, isCountersigned, mainBranch, RunRows } from '../sync/sync.service';
 import { Countersignature, DiscrepancyRow, RefusedEventRow, Run, RunBranch, ServerKey } from '../sync/sync.entity';
 import { recordPage } from './record-page';
-import type { ChainFound, RecordDetail, RecordPage, RecordsQuery } from './records.dto';
+import type { ChainFound, RecordDetail, RecordPage, RecordsQuery, WritingTablet } from './records.dto';
 
 /** The archive: read only. */
 export class RecordsService {
@@ -46,6 +47,7 @@ export class RecordsService {
         countersigned: signed.map(countersignatureOnTheWire),
         receivedAt: run.receivedAt.toISOString(),
         procedure,
+        tablets: await tabletsOf(manager, lines.get(mainBranch) ?? []),
         chain: chainFound(header, lines, signed, keys),
         discrepancies: discrepancies
           .filter(({ branch }) => branch === mainBranch)
@@ -58,6 +60,15 @@ export class RecordsService {
       };
     });
   }
+}
+
+async function tabletsOf(manager: EntityManager, events: readonly RunEvent[]): Promise<WritingTablet[]> {
+  const devices = [...new Set(events.map(({ device }) => device))].filter((device) => isUuid(device));
+  const tablets = await manager.findBy(Tablet, { id: In(devices) });
+  return devices.flatMap((id) => {
+    const label = tablets.find((tablet) => tablet.id === id)?.label;
+    return label === undefined ? [] : [{ id, label }];
+  });
 }
 
 /** Checks every line of the run from its header on, and every word that the server gave on it. */

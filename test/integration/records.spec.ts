@@ -112,6 +112,7 @@ describe('one record', () => {
     expect(json.events.map(canonicalJson)).toEqual(closed.events.map((event) => canonicalJson(event)));
     expect(json.chain).toEqual({ whole: true, events: closed.events.length });
     expect(json.countersigned).toEqual([expect.objectContaining({ branch: 'main', seq: closed.events.length })]);
+    expect(json.tablets).toEqual([{ id: closed.events[0]!.device, label: 'B2' }]);
     expect(json).toMatchObject({ branches: [], discrepancies: [], refused: [], receivedAt: server.now.toISOString() });
     const compiled = compileProcedure(json.procedure.document);
     if (!compiled.ok) throw new Error('the document does not compile');

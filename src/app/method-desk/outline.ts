@@ -9,6 +9,22 @@ import { kindWords } from './kind-words';
   imports: [KindGlyph],
   template: `
     <ol>
+      <li>
+        <button
+          type="button"
+          class="step"
+          id="outline-"
+          [class.current]="selected() === ''"
+          [attr.aria-current]="selected() === '' ? 'step' : null"
+          [attr.tabindex]="selected() === '' ? 0 : -1"
+          (click)="selectedChange.emit('')"
+          (keydown)="move($event, -1)"
+        >
+          <b></b>
+          <svg viewBox="0 0 22 22" aria-hidden="true"><path d="M5 3h9l4 4v12H5zM8 10h6M8 14h6" /></svg>
+          <span>What it is for</span>
+        </button>
+      </li>
       @for (entry of entries(); track entry.step.id) {
         <li>
           <button
@@ -43,7 +59,7 @@ import { kindWords } from './kind-words';
 })
 export class Outline {
   readonly document = input.required<ProcedureDocument>();
-  /** The step that is read now. */
+  /** The id of the step that is read now; empty for what stands before the steps. */
   readonly selected = input.required<string>();
   /** Step id -> how many problems it has. */
   readonly problems = input<ReadonlyMap<string, number>>(new Map());
@@ -63,11 +79,11 @@ export class Outline {
   /** One tab stop: arrows, Home and End go through the steps. */
   protected move(event: KeyboardEvent, index: number): void {
     const last = this.entries().length - 1;
-    const target = { ArrowDown: index + 1, ArrowUp: index - 1, Home: 0, End: last }[event.key];
-    const entry = target === undefined ? undefined : this.entries()[Math.min(last, Math.max(0, target))];
-    if (entry === undefined) return;
+    const target = { ArrowDown: index + 1, ArrowUp: index - 1, Home: -1, End: last }[event.key];
+    if (target === undefined) return;
     event.preventDefault();
-    this.selectedChange.emit(entry.step.id);
-    document.getElementById(`outline-${entry.step.id}`)?.focus();
+    const id = this.entries()[Math.min(last, target)]?.step.id ?? '';
+    this.selectedChange.emit(id);
+    document.getElementById(`outline-${id}`)?.focus();
   }
 }

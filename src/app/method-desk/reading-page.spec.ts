@@ -41,10 +41,20 @@ describe('reading a procedure', () => {
   it('outlines every step with its kind, and what it opens and closes', async () => {
     await showDraft(crankcaseValveSeal);
     const entries = allByRole(outline(), 'button').map(textOf);
-    expect(entries).toHaveLength(crankcaseValveSeal.steps.length);
+    expect(entries).toHaveLength(crankcaseValveSeal.steps.length + 1);
     expect(entries.find((text) => text.includes('Dipstick out'))).toMatch(/^7.*Do and confirm.*opens$/);
     expect(entries.find((text) => text.includes('Back together') && text.startsWith('16'))).toMatch(/closes$/);
     expect(textOf(root())).toContain('Every expression can be read and computed');
+  });
+
+  it('begins with what the procedure is for, its limits, how it is stopped and what it needs', async () => {
+    await showDraft(crankcaseValveSeal);
+    const head = textOf(byRole(root(), 'region', 'Step'));
+    expect(head).toContain('about 25 min a half; run as a pair, cold and warm');
+    expect(head).toContain('gauge <= 34.5 kPa');
+    expect(head).toContain('Let the gauge fall to zero.');
+    expect(head).toMatch(/Seal point at most\s*5\.0 kPa\s*common practice, no source/);
+    expect(head).toMatch(/Elevation of the site\s*from the site/);
   });
 
   it('reads the chosen step: its sentence, cautions, what it finds, and where it goes on', async () => {
@@ -71,10 +81,13 @@ describe('reading a procedure', () => {
   it('is walked by arrows as one tab stop', async () => {
     await showDraft(crankcaseValveSeal);
     const stops = allByRole(outline(), 'button').filter((button) => button.tabIndex === 0);
-    expect(stops.map(textOf)).toEqual([expect.stringContaining('Start card')]);
+    expect(stops.map(textOf)).toEqual(['What it is for']);
     stops[0]!.dispatchEvent(new KeyboardEvent('keydown', { key: 'ArrowDown', bubbles: true }));
     await settle();
-    expect(document.activeElement?.textContent).toContain('Warm the engine');
+    expect(document.activeElement?.textContent).toContain('Start card');
+    document.activeElement?.dispatchEvent(new KeyboardEvent('keydown', { key: 'Home', bubbles: true }));
+    await settle();
+    expect(document.activeElement?.textContent).toContain('What it is for');
   });
 
   it('lists what must be mended with its step and place', async () => {

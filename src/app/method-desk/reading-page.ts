@@ -12,13 +12,14 @@ import { RouterLink } from '@angular/router';
 import { LoadProblem } from '../shared/load-problem';
 import { TopBar } from '../shared/top-bar';
 import { Outline } from './outline';
+import { ProcedureHead } from './procedure-head';
 import { ReadingStore } from './reading-store';
 import { StepReading } from './step-reading';
 
 /** A draft or a version, to be read step by step: the outline on one side, the step with its ways on beside it. */
 @Component({
   selector: 'bay-reading-page',
-  imports: [LoadProblem, Outline, RouterLink, StepReading, TopBar],
+  imports: [LoadProblem, Outline, ProcedureHead, RouterLink, StepReading, TopBar],
   templateUrl: './reading-page.html',
   styleUrl: './reading-page.css',
   providers: [ReadingStore],
@@ -33,8 +34,8 @@ export class ReadingPage {
   readonly procedureId = input<string>();
   readonly version = input<string>();
 
-  /** The step that is read; the first one of another document. */
-  protected readonly selected = linkedSignal(() => this.store.document()?.steps[0]?.id ?? '');
+  /** The id of the step that is read; empty for what stands before the steps, where another document begins. */
+  protected readonly selected = linkedSignal({ source: () => this.store.document(), computation: () => '' });
   protected readonly step = computed(() => this.store.document()?.steps.find(({ id }) => id === this.selected()));
   protected readonly stepProblems = computed(() =>
     this.store.problems().filter(({ step }) => step !== undefined && step === this.selected()),

@@ -22,10 +22,10 @@ import type { Passage } from './story-line';
   `,
   styles: `
     :host {
-      display: inline-flex;
-      flex-wrap: wrap;
-      align-items: baseline;
-      gap: 0 8px;
+      line-height: 1.25;
+    }
+    .number {
+      margin-right: 6px;
     }
     .number:empty {
       display: none;
@@ -33,8 +33,9 @@ import type { Passage } from './story-line';
     .title {
       font-weight: 600;
     }
-    bay-result-mark {
-      align-self: center;
+    bay-result-mark,
+    .muted {
+      margin-left: 8px;
     }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,

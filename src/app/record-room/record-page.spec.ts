@@ -32,6 +32,7 @@ describe('the page of one record', () => {
     header,
     events,
     branches: [],
+    tablets: [{ id: 't-1', label: 'B2' }],
     countersigned: [{ branch: 'main', seq: last.seq, head: last.hash, at: last.at, signature: 'c2ln' }],
     receivedAt: '2026-12-02T10:00:00Z',
     procedure: {
@@ -97,6 +98,7 @@ describe('the page of one record', () => {
     expect(text).toContain('Does not seal');
     expect(text).toContain('The manifold valve does not seal.');
     expect(text).toContain('1ZZBT4CK1MR118236');
+    expect(text).toContain('tablet B2');
     expect(text).toContain('118,240 km');
     expect(text).toContain('G-12 due 10 Mar 2027');
     expect(text).toContain('published 12 Nov 2026 by R. Adeyemi');

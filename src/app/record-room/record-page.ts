@@ -44,9 +44,12 @@ export class RecordPage {
   protected readonly names = computed(
     () => new Map((this.people() ?? []).map(({ id, displayName }) => [id, displayName])),
   );
-  protected readonly devices = computed(() => [
-    ...new Set((this.store.record()?.events ?? []).map(({ device }) => device)),
-  ]);
+  /** The tablets that wrote, by their labels where the server has them. */
+  protected readonly tablets = computed(() => {
+    const record = this.store.record();
+    const devices = [...new Set((record?.events ?? []).map(({ device }) => device))];
+    return devices.map((device) => record?.tablets.find(({ id }) => id === device)?.label ?? device);
+  });
   protected readonly replay = computed(() => {
     const retold = this.store.retold();
     return retold?.ok === true ? retold : undefined;
@@ -54,6 +57,10 @@ export class RecordPage {
   protected readonly refusal = computed(() => {
     const retold = this.store.retold();
     return retold?.ok === false ? retold.why : undefined;
+  });
+  protected readonly stationKpa = computed(() => {
+    const station = this.replay()?.state.values['stationPressure'];
+    return station === undefined ? undefined : station.value / 1000;
   });
   protected readonly finding = computed(() => {
     const replay = this.replay();

@@ -15,8 +15,8 @@ import { statusWords } from './record-words';
 export class RecordSummary {
   readonly state = input.required<RunState>();
   readonly procedure = input.required<PublishedProcedure>();
-  /** The tablets' ids, in the order in which they wrote. */
-  readonly devices = input.required<readonly string[]>();
+  /** The tablets that wrote, in their order. */
+  readonly tablets = input.required<readonly string[]>();
   /** When the server got the first of it. */
   readonly receivedAt = input<string | number>();
 

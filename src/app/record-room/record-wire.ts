@@ -36,6 +36,8 @@ export interface RecordDetail {
   readonly countersigned: readonly BranchCountersignature[];
   readonly receivedAt?: string | number;
   readonly procedure: PublishedProcedure;
+  /** The tablets that wrote, as people call them. */
+  readonly tablets: readonly { readonly id: string; readonly label: string }[];
   /** What the server or an earlier build computed differently. */
   readonly discrepancies: readonly FoundDiscrepancy[];
   /** What was done without the right to do it; kept, and not part of the run. */
@@ -82,6 +84,7 @@ export function readRecordDetail(body: unknown): RecordDetail {
     return {
       ...(body as unknown as RecordDetail),
       branches: listOf(body['branches']),
+      tablets: listOf(body['tablets']),
       countersigned: listOf(body['countersigned']),
       discrepancies: listOf(body['discrepancies']),
       refused: listOf(body['refused']),

@@ -15,6 +15,8 @@ import type { SeriesLine } from './story-line';
 export class SeriesView {
   readonly line = input.required<SeriesLine>();
   readonly step = input<Step>();
+  /** The air of the place, kilopascals; absent where it was not known. */
+  readonly stationKpa = input<number>();
   /** Absent until someone starts to fetch it. */
   readonly load = input<SeriesLoad>();
 
@@ -40,9 +42,32 @@ export class SeriesView {
       ...(stops === undefined ? [] : [{ label: 'noise stops', timeS: stops.timeS, isMain: true }]),
     ];
   });
+  /** What the lines are, in words: the drawing alone tells them apart by dashes. */
+  protected readonly legend = computed(() => {
+    const names = this.names();
+    const channels = this.series()?.channels ?? [];
+    const pressures = channels.filter(({ name }) => name !== 'sound');
+    const lines = pressures.map(
+      ({ name }, index) => `${dashes[index] ?? 'dotted'}: ${lowerFirst(names[name] ?? name)}`,
+    );
+    const station = this.stationKpa();
+    const above = station === undefined ? '' : `, above the air of the place (${station.toFixed(1)} kPa)`;
+    const sound = channels.some(({ name }) => name === 'sound') ? ['below them: the level of the sound'] : [];
+    return lines.length === 0 ? '' : [`${capital(lines.join(', '))}${above}`, ...sound].join('; ');
+  });
   protected readonly names = computed(() => {
     const step = this.step();
     const channels = step?.kind === 'listen' ? step.channels : [];
     return Object.fromEntries(channels.map((channel) => [channel.name, channel.label]));
   });
+}
+
+const dashes = ['solid', 'dashed', 'dotted'];
+
+function lowerFirst(text: string): string {
+  return /^[A-Z][a-z]/.test(text) ? text.charAt(0).toLowerCase() + text.slice(1) : text;
+}
+
+function capital(text: string): string {
+  return text.charAt(0).toUpperCase() + text.slice(1);
 }

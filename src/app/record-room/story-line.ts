@@ -58,6 +58,8 @@ export interface WayLine extends LineBase {
   readonly way: RunEventData['branch-taken'];
   /** The step or finding that it leads to. */
   readonly to?: Step;
+  /** The finding that the run heads for from here on, where this way says so. */
+  readonly verdict?: Step;
   /** Where the conditions led, when a person chose this way instead. */
   readonly insteadOf?: Step;
 }

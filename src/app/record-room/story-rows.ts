@@ -1,7 +1,7 @@
 import { shownUnit, type NamedValue } from '../../../procedures/engine';
 import type { JudgedResult, Step } from '../../../procedures/document';
 import { resultWords } from '../shared/result-words';
-import type { Passage, SaidLine, StoryLine, ValueLine } from './story-line';
+import type { Passage, SaidLine, StoryLine, ValueLine, WayLine } from './story-line';
 
 /** A row of the table: the step's own, a value's, or any other line's. */
 export type StoryRow =
@@ -18,6 +18,8 @@ export interface CautionsRow {
 export interface HeadRow {
   readonly kind: 'head';
   readonly at: number;
+  /** Why it went on as the author wrote: said beside the step, since the next row is where it led. */
+  readonly aside: string | undefined;
 }
 
 export interface ValueRow {
@@ -48,10 +50,13 @@ export interface ValueRow {
 export function rowsOf(passage: Passage): readonly StoryRow[] {
   const values = passage.lines.filter((line) => line.kind === 'value');
   const lone = values.length === 1 ? values[0] : undefined;
+  const plainWay = lone === undefined ? passage.lines.find(isPlainWay) : undefined;
   const head: StoryRow =
-    lone === undefined ? { kind: 'head', at: passage.at } : valueRow(lone, passage.step, { isHead: true });
+    lone === undefined
+      ? { kind: 'head', at: passage.at, aside: plainWay?.way.because }
+      : valueRow(lone, passage.step, { isHead: true });
   const rest = passage.lines
-    .filter((line) => line !== lone)
+    .filter((line) => line !== lone && line !== plainWay)
     .reduce<StoryRow[]>((rows, line) => {
       const last = rows.at(-1);
       if (line.kind === 'value') return [...rows, valueRow(line, passage.step, { isHead: false })];
@@ -60,6 +65,12 @@ export function rowsOf(passage: Passage): readonly StoryRow[] {
       return [...rows.slice(0, -1), { ...last, lines: [...last.lines, line] }];
     }, []);
   return [head, ...rest];
+}
+
+/** A way that no condition decided, that no person chose, and that says nothing of a finding. */
+export function isPlainWay(line: StoryLine): line is WayLine {
+  if (line.kind !== 'way' || line.insteadOf !== undefined || line.verdict !== undefined) return false;
+  return line.way.exit === 'otherwise' && line.to?.kind !== 'finding';
 }
 
 function valueRow(line: ValueLine, step: Step | undefined, { isHead }: { readonly isHead: boolean }): ValueRow {

@@ -6,7 +6,7 @@ import { clockTime } from '../core/time-words';
 import type { SeriesLoad } from './series-load';
 import { SeriesView } from './series-view';
 import type { Passage } from './story-line';
-import { rowsOf } from './story-rows';
+import { rowsOf, type StoryRow } from './story-rows';
 import { WayTaken } from './way-taken';
 
 /** A run as it happened: a table with a body for each claim of a step. */
@@ -22,8 +22,22 @@ export class StoryTable {
   /** The loaded series by the hash of their bytes. */
   readonly series = input<ReadonlyMap<string, SeriesLoad>>(new Map());
 
+  /** The air of the place, kilopascals; absent where it was not known. */
+  readonly stationKpa = input<number>();
+
   protected readonly clock = clockTime;
   protected readonly cautionsText = (count: number): string =>
     count === 1 ? '1 caution acknowledged' : `${count} cautions acknowledged`;
-  protected readonly entries = computed(() => this.passages().map((passage) => ({ passage, rows: rowsOf(passage) })));
+  protected readonly entries = computed(() =>
+    this.passages().map((passage) => {
+      const rows = rowsOf(passage);
+      return { passage, rows, times: timesOf(rows) };
+    }),
+  );
+}
+
+/** The time of day of each row, once a minute: what happened in the same minute has none of its own. */
+function timesOf(rows: readonly StoryRow[]): readonly string[] {
+  const times = rows.map((row) => clockTime(row.kind === 'line' ? row.line.at : row.at));
+  return times.map((time, index) => (time === times[index - 1] ? '' : time));
 }

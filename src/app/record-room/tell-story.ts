@@ -76,6 +76,7 @@ function linesOf(
       const to = procedure.step(event.data.to);
       const overruled = before?.overruled === undefined ? undefined : before.walked.at(-1)?.way?.to;
       const insteadOf = overruled === undefined ? undefined : procedure.step(overruled);
+      const verdict = event.data.verdict === undefined ? undefined : procedure.step(event.data.verdict);
       return [
         {
           kind: 'way',
@@ -84,6 +85,7 @@ function linesOf(
           way: event.data,
           ...(to === undefined ? {} : { to }),
           ...(insteadOf === undefined ? {} : { insteadOf }),
+          ...(verdict === undefined ? {} : { verdict }),
         },
       ];
     }

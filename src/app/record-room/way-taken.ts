@@ -1,15 +1,23 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { shownUnit, type DecisionInput } from '../../../procedures/engine';
 import type { WayLine } from './story-line';
+import { isPlainWay } from './story-rows';
 
 /** The way that was taken after a step: where it led and why, with the condition and its numbers on demand. */
 @Component({
   selector: 'bay-way-taken',
   template: `
-    <p>
-      <span class="to">{{ target() }}</span>
-      <span class="because">{{ line().way.because }}</span>
-    </p>
+    @if (isPlain()) {
+      <p class="because">{{ line().way.because }}</p>
+    } @else {
+      <p>
+        <span class="to">{{ target() }}</span>
+        <span class="because">{{ line().way.because }}</span>
+      </p>
+    }
+    @if (line().verdict; as step) {
+      <p class="because">Heads for the finding: {{ step.title }}</p>
+    }
     @if (line().insteadOf; as step) {
       <p class="instead">Chosen by hand; the record led to {{ step.title }}</p>
     }
@@ -34,6 +42,7 @@ import type { WayLine } from './story-line';
 export class WayTaken {
   readonly line = input.required<WayLine>();
 
+  protected readonly isPlain = computed(() => isPlainWay(this.line()));
   protected readonly target = computed(() => {
     const { to, way } = this.line();
     if (to === undefined) return `Went on to ${way.to}`;

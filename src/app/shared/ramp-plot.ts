@@ -14,6 +14,7 @@ import type uPlot from 'uplot';
 import type { Series } from '../../../procedures/engine';
 import { hostSize } from './element-size';
 import { describeRamp } from './ramp-description';
+import { risesAbove } from './ramp-rises';
 import { plotData, plotOptions, type PlotColours, type PlotMark } from './ramp-plot-options';
 
 /** A stretch of the time axis that is washed: the uncertainty round a mark. */
@@ -58,11 +59,17 @@ export class RampPlot {
   /** Marks with the words beside them; `isMain` is drawn solid, the others dotted. */
   readonly marks = input<readonly PlotMark[]>([]);
   readonly strip = input<PlotStrip>();
+  /**
+   * The air of the place, kilopascals: absolute pressures are drawn as rises above it, on the gauge's own scale. As
+   * they are where it is not known.
+   */
+  readonly stationKpa = input<number>();
   /** Channel name -> how it is called; the channel's own name where absent. */
   readonly names = input<Readonly<Record<string, string>>>({});
 
   private readonly place = viewChild.required<ElementRef<HTMLElement>>('place');
 
+  private readonly drawn = computed(() => risesAbove(this.series(), this.stationKpa()));
   private readonly size = hostSize({ width: 600, height: 300 });
   private readonly library = signal<typeof uPlot | undefined>(undefined);
   private readonly theme = signal(0);
@@ -84,7 +91,7 @@ export class RampPlot {
     const { width, height } = this.size();
     const element = this.place().nativeElement;
     const options = plotOptions({
-      series: this.series(),
+      series: this.drawn(),
       marks: this.marks(),
       strip: this.strip(),
       names: this.names(),
@@ -94,7 +101,7 @@ export class RampPlot {
     });
     if (!Plot) return;
     this.plot?.destroy();
-    this.plot = new Plot(options, plotData(this.series()), element);
+    this.plot = new Plot(options, plotData(this.drawn()), element);
   }
 
   private redrawOnThemeChange(): void {

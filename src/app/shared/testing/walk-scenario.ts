@@ -47,6 +47,16 @@ export interface WalkOptions {
   /** Walk no further than this step. */
   readonly until?: string;
   readonly startedAt?: number;
+  /** What the header says otherwise than a practice run's. */
+  readonly header?: Partial<RunHeader>;
+  /** Who walks it, on which tablet. */
+  readonly by?: WalkedBy;
+}
+
+export interface WalkedBy {
+  readonly personId: string;
+  readonly displayName: string;
+  readonly tabletId: string;
 }
 
 export interface Walk {
@@ -113,20 +123,23 @@ export const bench: readonly InstrumentSnapshot[] = [
   },
 ];
 
+const okaforOnTablet: WalkedBy = { personId: 'p-okafor', displayName: 'I. Okafor', tabletId: 't-1' };
+
 /** Walks a scenario from its first step with what its bench shows, until its finding and the close. */
 export function walkScenario(
   procedure: CompiledProcedure,
   scenario: PracticeScenario,
   options: WalkOptions,
 ): WalkedRun {
-  const header = headerOf(procedure, scenario, options.kind ?? 'practice');
+  const header = { ...headerOf(procedure, scenario, options.kind ?? 'practice'), ...options.header };
+  const by = options.by ?? okaforOnTablet;
   const series = sampleRamp(scenario);
   const bytes = new Uint8Array(gzipSync(encodeSeries(series)));
-  const book = new Book(procedure, header, options.startedAt ?? Date.UTC(2026, 11, 2, 8, 0));
+  const book = new Book(procedure, header, by, options.startedAt ?? Date.UTC(2026, 11, 2, 8, 0));
   const opening = openRun(procedure, {
     visit: scenario.visit,
     siteName: scenario.place.name,
-    person: 'I. Okafor',
+    person: by.displayName,
     elevationM: scenario.place.elevationM,
     displacementL: scenario.displacementL,
   });
@@ -163,6 +176,7 @@ class Book implements Walk {
   constructor(
     readonly procedure: CompiledProcedure,
     readonly header: RunHeader,
+    private readonly by: WalkedBy,
     private readonly startedAt: number,
   ) {}
 
@@ -189,11 +203,11 @@ class Book implements Walk {
       const event = sealEvent(draft, {
         runId: this.header.runId,
         seq,
-        id: `0193b0a0-2000-7000-8000-${String(seq).padStart(12, '0')}`,
+        id: `${this.header.runId.slice(0, 23)}-${String(seq).padStart(12, '0')}`,
         at: this.startedAt + elapsed,
         elapsed,
-        actor: 'p-okafor',
-        device: 't-1',
+        actor: this.by.personId,
+        device: this.by.tabletId,
         build: '0.1.0+spec',
         prev: this.events.at(-1)?.hash ?? headerHash(this.header),
       });

@@ -1,0 +1,50 @@
+import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
+import { shownUnit } from '../../../procedures/engine';
+import type { ProcedureDocument } from '../../../procedures/document';
+
+/** What a procedure is for, what it needs, what holds throughout and how it is stopped, to be read before its steps. */
+@Component({
+  selector: 'bay-procedure-head',
+  templateUrl: './procedure-head.html',
+  styleUrl: './procedure-head.css',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class ProcedureHead {
+  readonly document = input.required<ProcedureDocument>();
+
+  protected readonly facts = computed(() => {
+    const { system, expectedMinutes, useLevel, pair, appliesTo } = this.document();
+    return [
+      { label: 'System', text: system },
+      {
+        label: 'Time',
+        text: `about ${expectedMinutes} min${pair === true ? ' a half; run as a pair, cold and warm' : ''}`,
+      },
+      { label: 'Use', text: useLevel === 'every-step' ? 'every step is marked' : 'consulted' },
+      { label: 'Codes', text: appliesTo.codes.join(', ') },
+      { label: 'Seen as', text: appliesTo.symptoms.join('; ') },
+      { label: 'Engine', text: appliesTo.engine.join('; ') },
+    ].filter(({ text }) => text !== '');
+  });
+  protected readonly gear = computed(() =>
+    this.document().gear.map(({ role, label, optional, shows }) => ({
+      role,
+      label,
+      need: optional === true ? 'optional' : 'needed',
+      shows:
+        shows === undefined
+          ? ''
+          : `${shows.low} to ${shows.high} ${shownUnit(shows.unit)}, ${shows.resolution} ${shownUnit(shows.unit)} steps or finer`,
+    })),
+  );
+  protected readonly inputs = computed(() =>
+    this.document().inputs.map(({ name, label, unit, from, default: usual, source }) => ({
+      name,
+      label,
+      text: from === 'default' ? `${usual ?? ''} ${shownUnit(unit)}`.trim() : origins[from],
+      source,
+    })),
+  );
+}
+
+const origins = { 'site.elevation': 'from the site', 'visit.displacement': 'from the visit' } as const;
