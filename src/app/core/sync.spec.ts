@@ -156,6 +156,23 @@ describe('Sync', () => {
     expect(await store.blobs.count()).toBe(2);
   });
 
+  it('sends no evidence of a run whose events the server did not take', async () => {
+    const { server, store, journal, sync } = await signedInTablet();
+    await journal.open(header, drafts, {
+      blobs: [{ sha256: 'aa', bytes: Uint8Array.of(1), mediaType: 'application/octet-stream' }],
+    });
+    const done = sync.again();
+    const problem = { code: 'structure', title: 'Refused' };
+    (await pushed(server)).request.flush({
+      runs: [{ runId: 'r-1', acceptedThrough: 0, missingAttachments: ['aa'], problem }],
+      documents: [],
+    });
+    (await asked(server, 'GET', '/api/sync/pull')).flush(nothing);
+    await done;
+    server.expectNone('/api/attachments/aa');
+    expect((await store.outbox.toArray()).map(({ kind }) => kind)).toEqual(['events', 'blob']);
+  });
+
   it('keeps a refused run, visible and with the reason, and lets the others through', async () => {
     const { server, store, journal, sync } = await signedInTablet();
     await journal.open(header, drafts);

@@ -1,4 +1,14 @@
-import { ApplicationRef, computed, DestroyRef, DOCUMENT, effect, inject, Injectable, signal } from '@angular/core';
+import {
+  ApplicationRef,
+  computed,
+  DestroyRef,
+  DOCUMENT,
+  effect,
+  ErrorHandler,
+  inject,
+  Injectable,
+  signal,
+} from '@angular/core';
 import { ApiProblem } from './api-problem';
 import { AttachmentSender } from './attachment-sender';
 import { Outbox } from './outbox';
@@ -36,6 +46,7 @@ export class Sync {
   private readonly draw = inject(chance);
   private readonly document = inject(DOCUMENT);
   private readonly application = inject(ApplicationRef);
+  private readonly errors = inject(ErrorHandler);
 
   private readonly reached = signal<{ readonly isReached: boolean; readonly since: number } | undefined>(undefined);
   private readonly lastSyncAt = signal<number | undefined>(undefined);
@@ -110,15 +121,20 @@ export class Sync {
       if (await this.inOneWindow(() => this.exchange())) this.failures = 0;
       this.schedule(everyMs);
     } catch (error) {
-      if (!(error instanceof ApiProblem)) throw error;
       this.failures += 1;
-      if (error.code === 'unknown-tablet') await this.tablet.forgetRegistration();
-      if (error.isUnavailable) this.noteUnreached();
-      else this.noteReached();
       this.schedule(Math.max(1000, retryDelayMs(this.failures, this.draw())));
+      await this.noteFailure(error);
     } finally {
       this.progress.set(undefined);
     }
+  }
+
+  /** A network may fail in all sorts of ways; anything else is a fault, which is reported and does not end syncing. */
+  private async noteFailure(error: unknown): Promise<void> {
+    if (!(error instanceof ApiProblem)) return this.errors.handleError(error);
+    if (error.isUnavailable) this.noteUnreached();
+    else this.noteReached();
+    if (error.code === 'unknown-tablet') await this.tablet.forgetRegistration();
   }
 
   private async exchange(): Promise<void> {
