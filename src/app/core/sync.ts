@@ -100,7 +100,9 @@ export class Sync {
 
   /** Syncs soon: call it after a change that others should see. */
   soon(): void {
-    if (this.hasStarted && this.failures === 0) this.schedule(soonMs);
+    // Without a network the next try comes by itself: taps at the car do not each start one.
+    const isUnreached = this.reached()?.isReached === false;
+    if (this.hasStarted && this.failures === 0 && !isUnreached) this.schedule(soonMs);
   }
 
   /** Syncs now, unless a sync is under way; ends when it has ended. Never throws for what a network may do. */
