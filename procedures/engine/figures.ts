@@ -2,6 +2,14 @@ import { fromBase, differenceFromBase, type UnitName } from '../calculations';
 
 const decimalText = /^-?\d{1,7}(\.\d{1,6})?$/;
 
+/**
+ * A base-unit value in `unit`. A kelvin is its own base and may stand for a difference, which may be negative; every
+ * other unit of temperature stands on its scale.
+ */
+export function shownIn(value: number, unit: UnitName): number {
+  return unit === 'K' ? value : fromBase(value, unit);
+}
+
 /** The number of a decimal text such as `12.60` or `-3`; undefined for anything else. */
 export function parseDecimal(text: string): number | undefined {
   return decimalText.test(text) ? Number(text) : undefined;
@@ -36,7 +44,7 @@ export interface FigureText {
 
 /** Value and uncertainty (both in base units) as texts in `unit`, rounded to what the uncertainty carries. */
 export function figureText(value: number, uncertainty: number, unit: UnitName): FigureText {
-  const shown = fromBase(value, unit);
+  const shown = shownIn(value, unit);
   const spread = differenceFromBase(uncertainty, unit);
   const decimals = spread > 0 ? decimalsOfUncertainty(spread) : 3;
   return {

@@ -1,6 +1,6 @@
-import { fromBase, judge } from '../calculations';
+import { judge } from '../calculations';
 import type { CompiledProcedure, Environment, Quantity } from '../document';
-import { decimalsOf, fixed } from './figures';
+import { decimalsOf, fixed, shownIn } from './figures';
 import type { Judgement } from './run-state';
 
 /**
@@ -54,7 +54,7 @@ export function truthOf(procedure: CompiledProcedure, source: string, environmen
 
 /** A band's end as people read it: as many decimals as needed, at most two, at least one where it is not whole. */
 function endText(end: number, quantity: Quantity): string {
-  const shown = fromBase(end, quantity.unit);
+  const shown = shownIn(end, quantity.unit);
   const text = String(Number(shown.toFixed(2)));
   return decimalsOf(text) === 0 && !Number.isInteger(shown) ? fixed(shown, 1) : text;
 }

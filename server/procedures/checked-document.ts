@@ -1,5 +1,6 @@
 import { compileProcedure, type CompileProblem, type ProcedureDocument } from '../../procedures/document';
-import { validateDocument } from '../../procedures/document/authoring';
+import { lintProcedure, validateDocument } from '../../procedures/document/authoring';
+import { pictureParts } from '../../procedures/library/picture-parts';
 import { Invalid, type FieldProblem } from '../http/problem';
 
 /** A document that this build can run. Throws `Invalid` naming the step and the place of everything that is wrong. */
@@ -11,6 +12,20 @@ export function checkedDocument(sent: unknown): ProcedureDocument {
   const compilation = compileProcedure(validation.document);
   if (!compilation.ok) throw refusal(compilation.problems.map(fieldProblem));
   return validation.document;
+}
+
+/** What would keep a document from being published, in words: the errors of its lint. */
+export function publishingProblems(document: ProcedureDocument): FieldProblem[] {
+  return lintProcedure(document, { parts: pictureParts }).errors.map(({ step, pointer = '', message }) => ({
+    pointer,
+    detail: step === undefined ? message : `Step ${step}: ${message}`,
+  }));
+}
+
+/** Throws `Invalid` while something keeps the document from being published. */
+export function requirePublishable(document: ProcedureDocument): void {
+  const problems = publishingProblems(document);
+  if (problems.length > 0) throw refusal(problems);
 }
 
 function fieldProblem({ step, where, message, pointer = '' }: CompileProblem): FieldProblem {

@@ -1,4 +1,4 @@
-import { IsArray, IsIn, IsInt, IsISO8601, IsObject, IsOptional, IsString, IsUUID } from 'class-validator';
+import { IsIn, IsInt, IsISO8601, IsObject, IsOptional, IsString, IsUUID } from 'class-validator';
 import type { ProcedureDocument } from '../../procedures/document';
 import { PlainText } from '../http/plain-text';
 import { Nested } from '../http/validated';
@@ -21,6 +21,16 @@ export class VersionSummary {
   declare contentHash: string;
 }
 
+/** What keeps a draft from being published. */
+export class DraftProblem {
+  /** JSON pointer into the document; empty for the whole of it. */
+  @IsString()
+  declare pointer: string;
+
+  @IsString()
+  declare detail: string;
+}
+
 export class DraftSummary {
   @IsUUID()
   declare id: string;
@@ -31,9 +41,9 @@ export class DraftSummary {
   @IsString()
   declare importedBy: string;
 
-  /** Always empty: a document with problems is not kept. */
-  @IsArray()
-  declare problems: never[];
+  /** What has to be mended before it can be published. */
+  @Nested(() => DraftProblem, { each: true })
+  declare problems: DraftProblem[];
 }
 
 /** A draft with its document. */
@@ -67,8 +77,8 @@ export class DraftAnswer {
   @IsString()
   declare procedureId: string;
 
-  @IsArray()
-  declare problems: never[];
+  @Nested(() => DraftProblem, { each: true })
+  declare problems: DraftProblem[];
 }
 
 /** A published version without its document. */

@@ -6,7 +6,7 @@ import { Person } from '../access/access.entity';
 import { noteChange } from '../database/change-log';
 import { Conflict, NotFound } from '../http/problem';
 import type { Principal } from '../http/route';
-import { checkedDocument } from './checked-document';
+import { checkedDocument, publishingProblems, requirePublishable } from './checked-document';
 import type { DraftAnswer, DraftDetail, ProcedureSummary, PublicationAnswer } from './procedures.dto';
 import { ProcedureDraft, ProcedureVersion, ProcedureWithdrawal } from './procedures.entity';
 import { summariesOf } from './summaries';
@@ -44,7 +44,7 @@ export class ProceduresService {
       await manager.delete(ProcedureDraft, { procedureId: document.id, publishedVersion: IsNull() });
       await manager.insert(ProcedureDraft, draft);
     });
-    return { id: draft.id, procedureId: document.id, problems: [] };
+    return { id: draft.id, procedureId: document.id, problems: publishingProblems(document) };
   }
 
   /** A draft that waits, with its document. Throws `NotFound`. */
@@ -53,17 +53,18 @@ export class ProceduresService {
     const draft = await manager.findOneBy(ProcedureDraft, { id: draftId, publishedVersion: IsNull() });
     if (draft === null) throw new NotFound('There is no such draft.');
     const importer = await manager.findOneBy(Person, { id: draft.importedBy });
+    const document = JSON.parse(draft.document) as ProcedureDocument;
     return {
       id: draft.id,
       procedureId: draft.procedureId,
       importedAt: draft.importedAt.toISOString(),
       importedBy: importer?.displayName ?? '',
-      problems: [],
-      document: JSON.parse(draft.document) as ProcedureDocument,
+      problems: publishingProblems(document),
+      document,
     };
   }
 
-  /** Publishes a draft as the next version. Throws `NotFound`, or `Conflict` when it, or just that, is published. */
+  /** Publishes a draft as the next version. Throws `NotFound`, `Invalid` while its lint has errors, or `Conflict` when it, or just that, is published. */
   async publish(draftId: string, person: Principal): Promise<PublicationAnswer> {
     return this.database.transaction(async (manager) => {
       const draft = await manager.findOne(ProcedureDraft, {
@@ -73,6 +74,7 @@ export class ProceduresService {
       if (draft === null) throw new NotFound('There is no such draft.');
       if (draft.publishedVersion !== null)
         throw new Conflict(`This draft is version ${draft.publishedVersion} already.`);
+      requirePublishable(JSON.parse(draft.document) as ProcedureDocument);
       // Two drafts of one procedure at once would both take the same number.
       await manager.query('SELECT pg_advisory_xact_lock(hashtextextended($1, 0))', [`procedure/${draft.procedureId}`]);
       const version = await this.nextVersion(manager, draft);

@@ -1,4 +1,6 @@
 import type { EntityManager } from 'typeorm';
+import type { ProcedureDocument } from '../../procedures/document';
+import { publishingProblems } from './checked-document';
 import type { ProcedureSummary, VersionSummary } from './procedures.dto';
 
 interface VersionRow {
@@ -15,6 +17,7 @@ interface DraftRow {
   id: string;
   procedure_id: string;
   title: string;
+  document: string;
   imported_at: Date;
   imported_by: string;
 }
@@ -29,7 +32,7 @@ export async function summariesOf(manager: EntityManager): Promise<readonly Proc
      ORDER BY v.procedure_id, v.version DESC`,
   );
   const drafts = await manager.query<DraftRow[]>(
-    `SELECT d.id, d.procedure_id, d.title, d.imported_at, p.display_name AS imported_by
+    `SELECT d.id, d.procedure_id, d.title, d.document, d.imported_at, p.display_name AS imported_by
      FROM procedure_draft d JOIN person p ON p.id = d.imported_by
      WHERE d.published_version IS NULL ORDER BY d.imported_at`,
   );
@@ -57,5 +60,6 @@ function versionSummary(row: VersionRow): VersionSummary {
 }
 
 function draftSummary(row: DraftRow): NonNullable<ProcedureSummary['draft']> {
-  return { id: row.id, importedAt: row.imported_at.toISOString(), importedBy: row.imported_by, problems: [] };
+  const problems = publishingProblems(JSON.parse(row.document) as ProcedureDocument);
+  return { id: row.id, importedAt: row.imported_at.toISOString(), importedBy: row.imported_by, problems };
 }

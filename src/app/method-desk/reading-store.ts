@@ -1,3 +1,4 @@
+import { pictureParts } from '../../../procedures/library/picture-parts';
 import { computed, inject, Injectable, resource, signal } from '@angular/core';
 import type { ProcedureDocument } from '../../../procedures/document';
 import { OfflineStore } from '../core/offline-store';
@@ -62,13 +63,11 @@ export class ReadingStore {
   }
 }
 
-/** Reads every expression of the document, as a tablet would before a run; the reader of expressions comes lazily. */
+/** What would keep the document from being published; the reader of expressions and the lint come lazily. */
 async function check(document: ProcedureDocument): Promise<readonly FileProblem[]> {
-  const { compileProcedure } = await import('../../../procedures/document');
-  const compiled = compileProcedure(document);
-  if (compiled.ok) return [];
-  return compiled.problems.map(({ step, where, message }) => ({
-    where,
+  const { lintProcedure } = await import('../../../procedures/document/authoring');
+  return lintProcedure(document, { parts: pictureParts }).errors.map(({ step, pointer, message }) => ({
+    where: step ?? pointer ?? 'the document',
     message,
     ...(step === undefined ? {} : { step }),
   }));

@@ -1,6 +1,8 @@
+import type { AirPathPart } from '../../../procedures/library/picture-parts';
+
 /** A part of the air path sheet: where its label points, and the room that the drawn part takes. */
 export interface SheetPart {
-  readonly id: string;
+  readonly id: AirPathPart;
   /** What the part is called where a step gives no words of its own. */
   readonly name: string;
   /** Left, top, width, height in the sheet's units. */
