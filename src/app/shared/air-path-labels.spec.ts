@@ -71,7 +71,7 @@ describe('placeLabels', () => {
   });
 
   it('knows every part that a step of the library marks', () => {
-    const known = new Set(airPathParts.map(({ id }) => id));
+    const known = new Set<string>(airPathParts.map(({ id }) => id));
     const marked = library.flatMap(({ steps }) =>
       steps.flatMap(({ picture }) => (picture?.sheet === 'air-path' ? picture.marks : [])),
     );
