@@ -43,10 +43,13 @@ import type { Passage } from './story-line';
 export class PassageTitle {
   readonly passage = input.required<Passage>();
 
+  /** Whether the result is drawn here: not where the row beside it says it. */
+  readonly isMarked = input(true);
+
   protected readonly isFinding = computed(() => this.passage().step?.kind === 'finding');
   /** A step that was only done needs no mark: its row says when. */
   protected readonly shown = computed(() => {
     const { result } = this.passage();
-    return result === 'done' ? undefined : result;
+    return result === 'done' || !this.isMarked() ? undefined : result;
   });
 }

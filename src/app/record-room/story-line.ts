@@ -60,8 +60,8 @@ export interface WayLine extends LineBase {
   readonly to?: Step;
   /** The finding that the run heads for from here on, where this way says so. */
   readonly verdict?: Step;
-  /** Where the conditions led, when a person chose this way instead. */
-  readonly insteadOf?: Step;
+  /** Where the conditions led, in words, when a person chose this way instead. */
+  readonly insteadOf?: string;
 }
 
 /** How loud a line is: `out` something went wrong, `live` something is or was open, `plain` the rest. */

@@ -103,7 +103,7 @@ describe('the story of a run', () => {
     const [, overruled] = passages(story, 'where-it-comes-out');
     expect(said(overruled)).toEqual(['Way overruled by hand: it was at the joint beside it']);
     expect(overruled?.lines.find((line) => line.kind === 'way')).toMatchObject({
-      insteadOf: { id: 'sensors-under-pressure' },
+      insteadOf: 'Sensors under pressure, heading for Does not seal',
       way: { exit: 'otherwise', verdict: 'placeNotFound' },
     });
     expect(passages(story, 'sensors-under-pressure')[0]?.isLeft).toBe(true);

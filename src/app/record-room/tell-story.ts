@@ -74,8 +74,7 @@ function linesOf(
     }
     case 'branch-taken': {
       const to = procedure.step(event.data.to);
-      const overruled = before?.overruled === undefined ? undefined : before.walked.at(-1)?.way?.to;
-      const insteadOf = overruled === undefined ? undefined : procedure.step(overruled);
+      const insteadOf = before?.overruled === undefined ? undefined : overruledWords(procedure, before);
       const verdict = event.data.verdict === undefined ? undefined : procedure.step(event.data.verdict);
       return [
         {
@@ -97,6 +96,14 @@ function linesOf(
       return said === undefined ? values : [{ kind: 'said', seq, at, type: event.type, ...said }, ...values];
     }
   }
+}
+
+/** The way that the conditions had led to before a person chose another. */
+function overruledWords(procedure: CompiledProcedure, state: RunState): string | undefined {
+  const way = state.walked.at(-1)?.way;
+  if (way === undefined) return undefined;
+  const title = (id: string): string => procedure.step(id)?.title ?? id;
+  return way.verdict === undefined ? title(way.to) : `${title(way.to)}, heading for ${title(way.verdict)}`;
 }
 
 /** A listen step that found no seal point says so: silence in the record could be taken for an oversight. */

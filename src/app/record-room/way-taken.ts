@@ -18,8 +18,8 @@ import { isPlainWay } from './story-rows';
     @if (line().verdict; as step) {
       <p class="because">Heads for the finding: {{ step.title }}</p>
     }
-    @if (line().insteadOf; as step) {
-      <p class="instead">Chosen by hand; the record led to {{ step.title }}</p>
+    @if (line().insteadOf; as words) {
+      <p class="instead">Chosen by hand; the record led to {{ words }}</p>
     }
     @if (line().way.when; as when) {
       <details>
