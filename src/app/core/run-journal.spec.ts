@@ -4,9 +4,8 @@ import { verifyChain, type EventDraft, type RunHeader } from '../../../procedure
 import { OfflineStore, PracticeStore } from './offline-store';
 import { NobodyToSign, RunJournal, RunWrittenElsewhere } from './run-journal';
 import { webLocks } from './run-locks';
-import { Session } from './session';
 import type { RunSummary } from './stored-rows';
-import { closeStores, coreForSpecs, type HeldTime, registeredTablet, rememberPerson } from './testing/core-for-specs';
+import { closeStores, coreForSpecs, type HeldTime, registeredTablet, workOffline } from './testing/core-for-specs';
 
 const header: RunHeader = {
   runId: '018f0000-0000-7000-8000-00000000aaaa',
@@ -37,13 +36,9 @@ const summary: RunSummary = {
 };
 
 async function journalOf(person = true): Promise<{ journal: RunJournal; store: OfflineStore; time: HeldTime }> {
-  const { time } = coreForSpecs();
+  const { server, time } = coreForSpecs();
   await registeredTablet();
-  if (person) await rememberPerson();
-  const session = TestBed.inject(Session);
-  void session.start();
-  await new Promise((resolve) => setTimeout(resolve, 20));
-  session.goOnOffline();
+  if (person) await workOffline(server);
   return { journal: TestBed.inject(RunJournal), store: TestBed.inject(OfflineStore), time };
 }
 

@@ -5,7 +5,15 @@ import { firstValueFrom } from 'rxjs';
 import { ApiProblem } from './api-problem';
 import { OfflineStore } from './offline-store';
 import { Session } from './session';
-import { asked, closeStores, coreForSpecs, okafor, registeredTablet, rememberPerson } from './testing/core-for-specs';
+import {
+  asked,
+  closeStores,
+  coreForSpecs,
+  eventually,
+  okafor,
+  registeredTablet,
+  rememberPerson,
+} from './testing/core-for-specs';
 
 const answer = { accessToken: 'a-1', expiresInS: 600, person: okafor };
 const unauthorised = { status: 401, statusText: 'Unauthorized' };
@@ -51,8 +59,7 @@ describe('Session', () => {
     await session.start();
     expect(session.state()).toBe('unavailable');
     (await asked(server, 'POST', refresh)).flush(answer);
-    await new Promise((resolve) => setTimeout(resolve, 20));
-    expect(session.state()).toBe('signed-in');
+    await eventually(() => expect(session.state()).toBe('signed-in'));
   });
 
   it('lets nobody in when the server says no, although someone is remembered', async () => {

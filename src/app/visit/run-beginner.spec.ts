@@ -4,8 +4,7 @@ import { contentHash, verifyChain } from '../../../procedures/engine';
 import { crankcaseValveSeal } from '../../../procedures/library';
 import { OfflineStore } from '../core/offline-store';
 import { RunJournal } from '../core/run-journal';
-import { Session } from '../core/session';
-import { closeStores, coreForSpecs, registeredTablet, rememberPerson } from '../core/testing/core-for-specs';
+import { closeStores, coreForSpecs, registeredTablet, workOffline } from '../core/testing/core-for-specs';
 import type { PublishedProcedure, Visit } from '../core/wire';
 import { RunBeginner } from './run-beginner';
 
@@ -33,15 +32,11 @@ const visit: Visit = {
 };
 
 async function ready({ hasSite = true, isRegistered = true } = {}) {
-  coreForSpecs();
+  const { server } = coreForSpecs();
   const store = TestBed.inject(OfflineStore);
   if (isRegistered) await registeredTablet();
   if (hasSite) await store.sites.put({ id: 's-ossenholt', name: 'Ossenholt', elevationM: 640 });
-  await rememberPerson();
-  const session = TestBed.inject(Session);
-  void session.start();
-  await new Promise((resolve) => setTimeout(resolve, 20));
-  session.goOnOffline();
+  await workOffline(server);
   return { store, beginner: TestBed.inject(RunBeginner), journal: TestBed.inject(RunJournal) };
 }
 

@@ -3,22 +3,18 @@ import { ChangeDetectionStrategy, Component } from '@angular/core';
 import { TestBed } from '@angular/core/testing';
 import { provideRouter, Router } from '@angular/router';
 import { OfflineStore } from '../core/offline-store';
-import { Session } from '../core/session';
-import { closeStores, coreForSpecs, registeredTablet, rememberPerson } from '../core/testing/core-for-specs';
+import { coreForSpecs, eventually, registeredTablet, workOffline } from '../core/testing/core-for-specs';
 import { VisitFormPage } from './visit-form-page';
 
 @Component({ selector: 'bay-blank', template: '', changeDetection: ChangeDetectionStrategy.OnPush })
 class Blank {}
 
-const settled = (ms = 30) => new Promise((resolve) => setTimeout(resolve, ms));
-
 async function form(id?: string) {
   const fixture = TestBed.createComponent(VisitFormPage);
   if (id !== undefined) fixture.componentRef.setInput('id', id);
-  await settled();
-  await fixture.whenStable();
   const root = fixture.nativeElement as HTMLElement;
   document.body.append(root);
+  await eventually(() => expect(root.querySelector('form, .state h1')).not.toBeNull());
   const type = async (field: string, text: string) => {
     const input = root.querySelector<HTMLInputElement>(`#${field}`)!;
     input.value = text;
@@ -27,7 +23,6 @@ async function form(id?: string) {
   };
   const keep = async () => {
     root.querySelector('form')!.dispatchEvent(new Event('submit', { cancelable: true }));
-    await settled();
     await fixture.whenStable();
   };
   const errors = () =>
@@ -37,13 +32,9 @@ async function form(id?: string) {
 }
 
 async function signedIn() {
-  coreForSpecs([provideRouter([{ path: '**', component: Blank }])]);
+  const { server } = coreForSpecs([provideRouter([{ path: '**', component: Blank }])]);
   await registeredTablet();
-  await rememberPerson();
-  const session = TestBed.inject(Session);
-  void session.start();
-  await settled(20);
-  session.goOnOffline();
+  await workOffline(server);
   return TestBed.inject(OfflineStore);
 }
 
@@ -62,16 +53,14 @@ async function fill(type: (field: string, text: string) => Promise<void>) {
 }
 
 describe('VisitFormPage', () => {
-  afterEach(() => {
-    document.body.replaceChildren();
-    return settled().then(closeStores);
-  });
+  afterEach(() => document.body.replaceChildren());
 
   it('keeps the visit on the tablet, queues it, and goes to it', async () => {
     const store = await signedIn();
     const { type, keep } = await form();
     await fill(type);
     await keep();
+    await eventually(() => expect(TestBed.inject(Router).url).toMatch(/^\/visit\//));
     const [visit] = await store.visits.toArray();
     expect(visit).toMatchObject({
       vin: '1ZZBT4CK4LR204817',
@@ -91,14 +80,16 @@ describe('VisitFormPage', () => {
     const { root, keep, errors } = await form();
     expect(errors()).toEqual([]);
     await keep();
-    expect(errors()).toEqual([
-      'Type the VIN.',
-      'Type the make.',
-      'Type the model.',
-      'Type the number of the repair order.',
-      'Type what the odometer shows.',
-      "Type the customer's concern in a few words.",
-    ]);
+    await eventually(() =>
+      expect(errors()).toEqual([
+        'Type the VIN.',
+        'Type the make.',
+        'Type the model.',
+        'Type the number of the repair order.',
+        'Type what the odometer shows.',
+        "Type the customer's concern in a few words.",
+      ]),
+    );
     expect(document.activeElement).toBe(root.querySelector('#vin'));
     expect(await store.visits.count()).toBe(0);
   });
@@ -108,7 +99,8 @@ describe('VisitFormPage', () => {
     const first = await form();
     await first.type('vin', '1zzbt4ck');
     await first.type('concern', 'Whistle at');
-    await settled(350);
+    const drafts = () => TestBed.inject(OfflineStore).settings.filter(({ key }) => key.startsWith('visit-draft'));
+    await eventually(async () => expect(JSON.stringify(await drafts().toArray())).toContain('Whistle at'));
     first.fixture.destroy();
     document.body.replaceChildren();
 
@@ -120,10 +112,13 @@ describe('VisitFormPage', () => {
     const store = await signedIn();
     const { type, keep } = await form();
     await fill(type);
-    await settled(350);
+    const drafts = () => store.settings.filter(({ key }) => key.startsWith('visit-draft')).count();
+    await eventually(async () => expect(await drafts()).toBe(1));
     await keep();
-    await settled(350);
-    expect((await store.settings.toArray()).filter(({ key }) => key.startsWith('visit-draft'))).toEqual([]);
+    await eventually(async () => expect(await drafts()).toBe(0));
+    // What is typed is kept 250 ms after the last key: nothing of that may come after.
+    await new Promise((resolve) => setTimeout(resolve, 400));
+    expect(await drafts()).toBe(0);
   });
 
   it('keeps a VIN whose check digit does not fit only after a second look', async () => {
@@ -132,11 +127,13 @@ describe('VisitFormPage', () => {
     await fill(type);
     await type('vin', '1ZZBT4CK7LR204817');
     await keep();
-    expect(errors()).toEqual(['Look again, or keep it as it is.']);
+    await eventually(() => expect(errors()).toEqual(['Look again, or keep it as it is.']));
     root.querySelector<HTMLInputElement>('input[type=checkbox]')!.click();
     await fixture.whenStable();
     await keep();
-    expect((await store.visits.toArray())[0]).toMatchObject({ vinKept: 'after a second look' });
+    await eventually(async () =>
+      expect(await store.visits.toArray()).toMatchObject([{ vinKept: 'after a second look' }]),
+    );
   });
 
   it('takes no code that is none, and keeps it in its field', async () => {
@@ -145,6 +142,7 @@ describe('VisitFormPage', () => {
     await fill(type);
     await type('codes', 'P0068 P9X');
     await keep();
+    await eventually(() => expect(errors()).toHaveLength(1));
     expect(errors()).toEqual(['P9X is no trouble code: a letter P, C, B or U and four digits, such as P0068.']);
     expect(valueOf('codes')).toBe('P9X');
     expect(await store.visits.count()).toBe(0);
@@ -155,6 +153,7 @@ describe('VisitFormPage', () => {
     const first = await form();
     await fill(first.type);
     await first.keep();
+    await eventually(async () => expect(await store.visits.count()).toBe(1));
     const [before] = await store.visits.toArray();
     first.fixture.destroy();
     document.body.replaceChildren();
@@ -162,9 +161,11 @@ describe('VisitFormPage', () => {
     const second = await form(before!.id);
     await second.type('odometer', '84,300');
     await second.keep();
-    const after = await store.visits.toArray();
-    expect(after).toHaveLength(1);
-    expect(after[0]).toMatchObject({ id: before!.id, openedAt: before!.openedAt, odometer: { text: '84300' } });
+    await eventually(async () =>
+      expect(await store.visits.toArray()).toMatchObject([
+        { id: before!.id, openedAt: before!.openedAt, odometer: { text: '84300' } },
+      ]),
+    );
     expect(await store.outbox.count()).toBe(1);
   });
 

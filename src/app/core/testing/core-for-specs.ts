@@ -5,6 +5,7 @@ import { TestBed } from '@angular/core/testing';
 import { buildId } from '../build-id';
 import { OfflineStore, PracticeStore, storeNames } from '../offline-store';
 import { problemInterceptor } from '../problem-interceptor';
+import { Session } from '../session';
 import { sessionInterceptor } from '../session-interceptor';
 import { chance, clock, monotonicClock, newId } from '../time-and-ids';
 import type { Person } from '../wire';
@@ -84,6 +85,14 @@ export async function rememberPerson(person: Person = okafor): Promise<void> {
   });
 }
 
+/** Lets a person go on without a network, as after a reload at the car. */
+export async function workOffline(server: HttpTestingController, person: Person = okafor): Promise<void> {
+  await rememberPerson(person);
+  const started = TestBed.inject(Session).start();
+  (await asked(server, 'POST', '/api/session/refresh')).error(new ProgressEvent('error'));
+  await started;
+}
+
 /** Waits until the app asks the server for this, and gives the request to the spec. */
 export async function asked(server: HttpTestingController, method: string, url: string) {
   for (let tries = 0; tries < 200; tries += 1) {
@@ -92,6 +101,20 @@ export async function asked(server: HttpTestingController, method: string, url: 
     await new Promise((resolve) => setTimeout(resolve, 5));
   }
   throw new Error(`Nobody asked ${method} ${url}`);
+}
+
+/** Waits until a check holds: what a page shows comes from the store, in its own time. Fails as the check fails. */
+export async function eventually(check: () => unknown, withinMs = 4000): Promise<void> {
+  const until = Date.now() + withinMs;
+  for (;;) {
+    try {
+      await check();
+      return;
+    } catch (error) {
+      if (Date.now() > until) throw error;
+      await new Promise((resolve) => setTimeout(resolve, 15));
+    }
+  }
 }
 
 /** Ends what a spec left open. */
