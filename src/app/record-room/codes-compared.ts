@@ -58,6 +58,16 @@ import { compareCodes, type ComparedCode } from './code-comparison';
       padding: 4px 12px 4px 0;
       font-size: inherit;
     }
+    @media (max-width: 480px) {
+      table {
+        table-layout: fixed;
+      }
+      th,
+      td {
+        padding-right: 6px;
+        font-size: 15px;
+      }
+    }
     .new .change {
       color: var(--out);
       font-weight: 600;

@@ -42,7 +42,7 @@ export class RecordListPage {
   protected readonly form = this.forms.group({ text: '', finding: '' });
   protected readonly findings = this.known.groups;
   protected readonly rowHeight = toSignal(
-    this.breakpoints.observe(narrow).pipe(map(({ matches }) => (matches ? 104 : 60))),
+    this.breakpoints.observe(narrow).pipe(map(({ matches }) => (matches ? 84 : 60))),
     { initialValue: 60 },
   );
   protected readonly countText = computed(() => {
