@@ -13,15 +13,27 @@ export function pause(drafting: Drafting, command: Pause): void {
   switch (command.do) {
     case 'stop':
       if (drafting.state.status === 'stopped') return;
-      return drafting.add({ type: 'stopped', data: { step, reason: command.reason.trim() } });
+      drafting.add({ type: 'stopped', data: { step, reason: command.reason.trim() } });
+      return listWhatMayBeApart(drafting);
     case 'set-aside':
       if (drafting.state.status !== 'open') throw new CannotDo('not-open', 'The run is not open.');
       return drafting.add({ type: 'set-aside', data: { reason: command.reason.trim() } });
     case 'not-sure': {
       const question = command.question.trim();
       if (question === '') throw new CannotDo('ask', 'Say in a few words what you are not sure of.', 'question');
-      return drafting.add({ type: 'lead-called', data: { step, question } });
+      drafting.add({ type: 'lead-called', data: { step, question } });
+      return listWhatMayBeApart(drafting);
     }
+  }
+}
+
+/** The current step's action may be done though nobody confirmed it: what it takes apart goes on the open list. */
+function listWhatMayBeApart(drafting: Drafting): void {
+  const { current, disturbed } = drafting.state;
+  const step = current === undefined || current.isDone ? undefined : drafting.procedure.step(current.id);
+  for (const { item, label } of step?.disturbs ?? []) {
+    if (disturbed.some((open) => open.item === item)) continue;
+    drafting.add({ type: 'disturbed', data: { step: step?.id ?? '', item, label } });
   }
 }
 

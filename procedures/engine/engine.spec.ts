@@ -1,4 +1,5 @@
-import { compileProcedure, type CompiledProcedure } from '../document';
+import { compileProcedure, type CompiledProcedure, type ListenStep } from '../document';
+import { analyseListening } from './listening';
 import {
   applyEvent,
   composeWriteUp,
@@ -182,6 +183,15 @@ describe('a reading', () => {
     });
   });
 
+  it('is guarded by what its band rests on too: the 0.3 kPa of the altimeter setting', () => {
+    const walk = atManifold().cautions(1).do({ do: 'record', name: 'manifoldPressure', text: '95.25', unit: 'kPa' });
+    const value = walk.state.values['manifoldPressure'] ?? walk.state.values['offset'];
+    // U = 2 sqrt((0.5 / sqrt 3)^2 + (0.05 / sqrt 3)^2) = 0.580 kPa; with the band's 0.300 kPa: 0.653 kPa (JCGM 100, 5.1.2).
+    // 95.25 lies 0.62 kPa inside the upper end 95.87: within the reading's own U it would be in.
+    expect(walk.state.walked.find((claim) => claim.step === 'manifold')?.result).toBe('too-close');
+    expect(value?.judgement?.guard ?? 653).toBeCloseTo(653, -1);
+  });
+
   it('is judged with the uncertainty of the instrument that was chosen: a coarser one changes the judgement', () => {
     const coarse = {
       ...scanTool,
@@ -241,6 +251,31 @@ describe('listening', () => {
     expect(sealPoint?.uncertainty).toBeLessThan(500);
     expect(walk.state.verdict).toBe('seals');
     expect(walk.state.current?.id).toBe('restore');
+  });
+
+  it('tells the gain of one sensor without the other', () => {
+    const gauge = series.channels[0]?.values ?? [];
+    const tracked: Series = {
+      ...series,
+      channels: [
+        ...series.channels,
+        { name: 'manifold', unit: 'kPa', values: gauge.map((value) => 93.9 + 0.9 * (value ?? 0)) },
+      ],
+    };
+    const walk = atListen().do({ do: 'import-series', record, series: tracked });
+    const step = { ...procedure.document.steps.find(({ id }) => id === 'listen')! } as ListenStep;
+    const gains: ListenStep = {
+      ...step,
+      finds: [
+        { what: 'manifold-gain', name: 'manifoldGain', label: 'Manifold gain', unit: '1' },
+        { what: 'boost-gain', name: 'boostGain', label: 'Boost gain', unit: '1' },
+      ],
+    };
+    const { found, problems } = analyseListening(walk.state, gains, tracked);
+    expect(found.map(({ quantity, figure }) => [quantity.name, Number(figure.text).toFixed(3)])).toEqual([
+      ['manifoldGain', '0.900'],
+    ]);
+    expect(problems).toHaveLength(1);
   });
 
   it('without a mark that it stopped gives no seal point and another way', () => {
@@ -330,6 +365,15 @@ describe('stop, pause and what is disturbed', () => {
     expect(walk.state.finding).toBe('notCompleted');
     walk.do({ do: 'close' });
     expect(walk.state.status).toBe('closed');
+  });
+
+  it('puts on the open list what the stopped step may have taken apart already', () => {
+    const walk = atManifold().cautions(1).do({ do: 'record', name: 'manifoldPressure', text: '94.2', unit: 'kPa' });
+    walk.do({ do: 'stop', reason: '' });
+    expect(walk.state.current?.id).toBe('dipstick');
+    expect(walk.state.disturbed.map(({ item }) => item)).toEqual(['dipstick']);
+    walk.do({ do: 'leave-stop', how: 'go-back' }, { do: 'confirm' });
+    expect(walk.state.disturbed).toHaveLength(1);
   });
 
   it('sets aside and resumes at the same step', () => {

@@ -5,7 +5,7 @@ import type { Judgement } from './run-state';
 
 /**
  * Judges a value (base units, expanded uncertainty k = 2) against its quantity's band: in, out or too close to call,
- * guarded on both sides. Undefined where the quantity has no band. A band whose condition does not hold, or whose
+ * guarded on both sides by the uncertainty of the value and of the band's ends together. Undefined where the quantity has no band. A band whose condition does not hold, or whose
  * ends need a value that was never measured, is not judged, and says so.
  */
 export function judgeQuantity(
@@ -19,9 +19,12 @@ export function judgeQuantity(
   if (band === undefined) return undefined;
   const low = endOf(procedure, band.low, environment);
   const high = endOf(procedure, band.high, environment);
+  // The ends may rest on readings of their own: the verdict is about the difference from them (JCGM 100:2008, 5.1.2).
+  const guard = Math.hypot(uncertainty, Math.max(low?.uncertainty ?? 0, high?.uncertainty ?? 0));
   const ends = {
-    ...(low === undefined ? {} : { low, lowText: endText(low, quantity) }),
-    ...(high === undefined ? {} : { high, highText: endText(high, quantity) }),
+    ...(low === undefined ? {} : { low: low.value, lowText: endText(low.value, quantity) }),
+    ...(high === undefined ? {} : { high: high.value, highText: endText(high.value, quantity) }),
+    guard,
     source: band.source,
   };
   const isMissing = (band.low !== undefined && low === undefined) || (band.high !== undefined && high === undefined);
@@ -33,17 +36,24 @@ export function judgeQuantity(
     ...ends,
     result: judge({
       value,
-      uncertainty,
-      ...(low === undefined ? {} : { low }),
-      ...(high === undefined ? {} : { high }),
+      uncertainty: guard,
+      ...(low === undefined ? {} : { low: low.value }),
+      ...(high === undefined ? {} : { high: high.value }),
     }),
   };
 }
 
-function endOf(procedure: CompiledProcedure, source: string | undefined, environment: Environment): number | undefined {
+/** A band's end with its own expanded uncertainty, base units; undefined where it needs what was never measured. */
+function endOf(
+  procedure: CompiledProcedure,
+  source: string | undefined,
+  environment: Environment,
+): { readonly value: number; readonly uncertainty: number } | undefined {
   if (source === undefined) return undefined;
-  const outcome = procedure.expression(source).evaluate(environment);
-  return outcome.ok && typeof outcome.value === 'number' ? outcome.value : undefined;
+  const expression = procedure.expression(source);
+  const outcome = expression.evaluate(environment);
+  if (!outcome.ok || typeof outcome.value !== 'number') return undefined;
+  return { value: outcome.value, uncertainty: expression.expandedUncertainty(environment) };
 }
 
 /** Whether the condition holds; undefined where it needs something that was never measured. */

@@ -187,17 +187,23 @@ function tracked(
   what: 'manifold-gain' | 'boost-gain' | 'worst-gap',
   { samples, stationKpa, hasManifold }: Search,
 ): Sought {
-  if (!hasManifold) return 'The sensors cannot be compared: the series has no manifold pressure.';
-  const complete = samples.flatMap(({ gaugeKpa, mapKpa, boostKpa }) =>
-    gaugeKpa === undefined || mapKpa === undefined || boostKpa === undefined ? [] : [{ gaugeKpa, mapKpa, boostKpa }],
-  );
+  if (!hasManifold && what !== 'boost-gain') {
+    return 'The sensors cannot be compared: the series has no manifold pressure.';
+  }
+  // A gain needs its own sensor and the gauge alone; the gap needs both sensors.
+  const complete = samples.flatMap(({ gaugeKpa, mapKpa, boostKpa }) => {
+    const first = what === 'boost-gain' ? boostKpa : mapKpa;
+    const second = what === 'manifold-gain' ? mapKpa : boostKpa;
+    return gaugeKpa === undefined || first === undefined || second === undefined ? [] : [{ gaugeKpa, first, second }];
+  });
   const isRamp = new Set(complete.map(({ gaugeKpa }) => gaugeKpa)).size > 2;
-  if (complete.length < 3 || !isRamp)
+  if (complete.length < 3 || !isRamp) {
     return 'The sensors cannot be compared: the series has too few samples with all pressures.';
+  }
   const tracking: SensorTracking = trackSensors({
     gaugeKpa: complete.map(({ gaugeKpa }) => gaugeKpa),
-    firstKpa: complete.map(({ mapKpa }) => mapKpa),
-    secondKpa: complete.map(({ boostKpa }) => boostKpa),
+    firstKpa: complete.map(({ first }) => first),
+    secondKpa: complete.map(({ second }) => second),
     stationKpa,
   });
   if (what === 'worst-gap') {
@@ -206,6 +212,5 @@ function tracked(
       uncertainty: toBase(tracking.between.worstGapUncertaintyKpa, 'kPa'),
     };
   }
-  const { gain, gainUncertainty } = what === 'manifold-gain' ? tracking.first : tracking.second;
-  return { value: gain, uncertainty: gainUncertainty };
+  return { value: tracking.first.gain, uncertainty: tracking.first.gainUncertainty };
 }

@@ -5,7 +5,7 @@ import { own } from './environment';
 import { analyseListening, currentListenStep, suggestMark, type MarkSuggestion } from './listening';
 import { computedValue } from './measure-quantity';
 import type { RunCommand } from './run-command';
-import type { RunEventData } from './run-event';
+import type { RunEventData, RunHeader } from './run-event';
 import type { NamedValue, RunState } from './run-state';
 import type { Series } from './series';
 
@@ -83,7 +83,7 @@ export interface WayAhead {
 export function routeAhead(procedure: CompiledProcedure, state: RunState): readonly WayAhead[] {
   const step = state.current === undefined ? undefined : procedure.step(state.current.id);
   if (step === undefined) return [];
-  return targetsOf(procedure, step, state.verdict).map((target, index) => ({
+  return targetsOf(procedure, step, state.header.half, state.verdict).map((target, index) => ({
     to: target.id,
     label: wayLabel(target),
     isMain: index === 0,
@@ -95,13 +95,22 @@ function wayLabel({ kind, number, title }: Step): string {
   return kind === 'finding' ? words : `${number}, ${words}`;
 }
 
-/** The steps that a step's exits name, the nearest later one in the document's order first. */
-function targetsOf(procedure: CompiledProcedure, step: Step, verdict: string | undefined): readonly Step[] {
+/**
+ * The steps that a step's exits name, the nearest later one in the document's order first. An exit for one half alone
+ * counts in that half only, and is then the whole way on.
+ */
+function targetsOf(
+  procedure: CompiledProcedure,
+  step: Step,
+  half: RunHeader['half'],
+  verdict: string | undefined,
+): readonly Step[] {
   if (step.kind === 'finding') return [];
   const { steps } = procedure.document;
-  const ids = [...(step.next ?? []), step.otherwise].map(({ to, verdict: named }) =>
-    to === 'verdict' ? (named ?? verdict ?? to) : to,
-  );
+  const forHalf = (step.next ?? []).find(({ when }) => when === half);
+  const branches = (step.next ?? []).filter(({ when }) => when !== 'cold' && when !== 'warm');
+  const exits = forHalf === undefined ? [...branches, step.otherwise] : [forHalf];
+  const ids = exits.map(({ to, verdict: named }) => (to === 'verdict' ? (named ?? verdict ?? to) : to));
   const targets = steps.filter(({ id }) => id !== step.id && ids.includes(id));
   const here = steps.findIndex(({ id }) => id === step.id);
   const isLater = (target: Step): boolean => steps.indexOf(target) > here && target.kind !== 'finding';
@@ -109,12 +118,12 @@ function targetsOf(procedure: CompiledProcedure, step: Step, verdict: string | u
 }
 
 /** About how many steps a run of the procedure has: as many as the author's plain way has from the first to its end. */
-export function expectedSteps(procedure: CompiledProcedure): number {
+export function expectedSteps(procedure: CompiledProcedure, half?: RunHeader['half']): number {
   const seen = new Set<Step>();
   let step = procedure.document.steps[0];
   while (step !== undefined && step.kind !== 'finding' && !seen.has(step)) {
     seen.add(step);
-    step = targetsOf(procedure, step, undefined)[0];
+    step = targetsOf(procedure, step, half, undefined)[0];
   }
   return seen.size;
 }

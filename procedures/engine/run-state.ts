@@ -144,6 +144,8 @@ export interface Judgement {
   readonly lowText?: string;
   readonly highText?: string;
   readonly unjudged?: string;
+  /** What the verdict was guarded by, base units: the value's uncertainty and that of the band's ends together. */
+  readonly guard: number;
   readonly source: string;
 }
 

@@ -1,6 +1,7 @@
 import type { CompiledProcedure, FindingStep, Sentence } from '../document';
 import { environmentOf } from './environment';
 import { truthOf } from './judge-quantity';
+import { readQuantity, wayOf } from './quantities';
 import type { RunState } from './run-state';
 import { renderCited, type Citation } from './template';
 
@@ -51,9 +52,24 @@ function codesOf(procedure: CompiledProcedure): readonly Sentence[] {
 }
 
 function testedBy(procedure: CompiledProcedure, state: RunState): readonly Sentence[] {
-  const instruments = Object.values(state.gear).map(({ label }) => label);
+  const instruments = Object.entries(state.gear).flatMap(([role, { label }]) =>
+    isUsed(procedure, state, role) ? [label] : [],
+  );
   const gear = instruments.length === 0 ? '' : ` with ${instruments.join(', ')}`;
   return [{ text: `Tested by ${procedure.document.title}, version ${state.header.version}${gear}.` }];
+}
+
+/** Whether the run was done with the gear of a role: it needs it, or a value was read with it. */
+function isUsed(procedure: CompiledProcedure, state: RunState, role: string): boolean {
+  const need = procedure.document.gear.find((candidate) => candidate.role === role);
+  if (need?.optional !== true) return true;
+  return Object.values(state.values).some(({ step: id, name, way: wayId }) => {
+    const step = procedure.step(id);
+    const quantity = step === undefined ? undefined : readQuantity(step, name);
+    if (quantity === undefined) return false;
+    const way = wayOf(quantity, wayId);
+    return way === undefined ? quantity.gear === role : way.entry?.gear === role;
+  });
 }
 
 function part(

@@ -85,7 +85,7 @@ describe('crankcase valve seal, warm half, coarse gauge and coarse bus: too clos
         'A gauge with finer steps can tell whether the seal point lies inside the band.',
         'Codes after the test: P0068 stored, P0106 pending (step 18a); they were cleared.',
         'The other half, cold, is still to be run.',
-        'Tested by Crankcase valve seal under regulated pressure, version 1 with G-7, S-1, L-2, B-1, T-4.',
+        'Tested by Crankcase valve seal under regulated pressure, version 1 with G-7, S-1, L-2.',
       ].join(' '),
       customer:
         'Tested warm, the crankcase valve closed, but too near the end of its range to be sure; a finer gauge will tell.',

@@ -56,7 +56,7 @@ describe('crankcase valve seal, cold half: the inlet-side check valve stays open
         'Replace the inlet-side check valve.',
         'Codes after the test: P0068 stored, P0106 pending (step 18a); they were cleared.',
         'After the repair both halves are run again, then clear, drive and prove.',
-        'Tested by Crankcase valve seal under regulated pressure, version 1 with G-12, S-3, L-2, B-1, T-4.',
+        'Tested by Crankcase valve seal under regulated pressure, version 1 with G-12, S-3, L-2, T-4.',
       ].join(' '),
       customer:
         'The check valve between crankcase and inlet duct stays open and needs replacing; the test goes on after that.',

@@ -64,7 +64,7 @@ describe('crankcase valve seal, cold half: a joint leaks that cannot be mended',
         'Mend the leak, and run this half again.',
         'Codes after the test: P0068 stored, P0106 pending (step 18a); they were cleared.',
         'After the repair both halves are run again, then clear, drive and prove.',
-        'Tested by Crankcase valve seal under regulated pressure, version 1 with G-12, S-3, L-2, B-1, T-4.',
+        'Tested by Crankcase valve seal under regulated pressure, version 1 with G-12, S-3, L-2, T-4.',
       ].join(' '),
       customer:
         'The intake leaks air at a joint, at the dipstick tube: hose at the charge cooler, split; that is mended first, then the crankcase valve is tested again.',

@@ -60,7 +60,7 @@ describe('crankcase valve seal, cold half: the noise goes on with the other rout
         'Codes after the test: P0068 stored, P0106 pending (step 18a); they were cleared.',
         'The other half, warm, is still to be run.',
         'After the repair both halves are run again, then clear, drive and prove.',
-        'Tested by Crankcase valve seal under regulated pressure, version 1 with G-12, S-3, L-2, B-1, T-4.',
+        'Tested by Crankcase valve seal under regulated pressure, version 1 with G-12, S-3, L-2, T-4.',
       ].join(' '),
       customer:
         "Tested cold, the crankcase valve does not close, so boost leaks into the engine's crankcase; the valve needs replacing.",

@@ -50,7 +50,7 @@ describe('crankcase valve seal, cold half: nothing is heard anywhere', () => {
         'Clear the crankcase passage as its maker says, and run this half again.',
         'Codes after the test: P0068 stored, P0106 pending (step 18a); they were cleared.',
         'After the repair both halves are run again, then clear, drive and prove.',
-        'Tested by Crankcase valve seal under regulated pressure, version 1 with G-12, S-3, L-2, B-1, T-4.',
+        'Tested by Crankcase valve seal under regulated pressure, version 1 with G-12, S-3, L-2, T-4.',
       ].join(' '),
       customer:
         'No air could be heard through the crankcase passage, up to 11.8 ± 0.3 kPa; it has to be opened and looked at.',

@@ -45,7 +45,7 @@ describe('crankcase valve seal, cold half: the noise never stops and no place is
         'Nothing was replaced.',
         'What was taken apart is back in its place.',
         'Codes after the test: P0068 stored (step 18a); they are left standing: the inspection is tomorrow (step 18b).',
-        'Tested by Crankcase valve seal under regulated pressure, version 1 with G-12, S-3, L-2, B-1, T-4.',
+        'Tested by Crankcase valve seal under regulated pressure, version 1 with G-12, S-3, L-2, T-4.',
       ].join(' '),
       customer:
         'The test lost air and the place could not be found, so nothing was replaced and the cause is still open.',

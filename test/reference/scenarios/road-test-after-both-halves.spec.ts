@@ -52,7 +52,7 @@ describe('crankcase valve seal, cold half, the later one: sealed, cleared and dr
         'Nothing was replaced.',
         'Codes after the test: P0068 stored, P0106 pending (step 18a); they were cleared.',
         'Driven: idle, steady ride (step 19b); codes after the road test: no code (step 19c).',
-        'Tested by Crankcase valve seal under regulated pressure, version 1 with G-12, S-3, L-2, B-1, T-4.',
+        'Tested by Crankcase valve seal under regulated pressure, version 1 with G-12, S-3, L-2, T-4.',
       ].join(' '),
       customer:
         'The crankcase valve was tested cold and closed as it should, at 3.4 ± 0.3 kPa; no part was replaced for it.',

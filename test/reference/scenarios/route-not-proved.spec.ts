@@ -50,7 +50,7 @@ describe('crankcase valve seal, cold half: the noise stops once the other routes
       correction: [
         "Measure cylinder leak-down and look at the turbo's seals before a part is replaced.",
         'Codes after the test: P0068 stored, P0106 pending (step 18a); they were cleared.',
-        'Tested by Crankcase valve seal under regulated pressure, version 1 with G-12, S-3, L-2, B-1, T-4.',
+        'Tested by Crankcase valve seal under regulated pressure, version 1 with G-12, S-3, L-2, T-4.',
       ].join(' '),
       customer:
         'Boost pressure reaches the crankcase, but not by a way that this test could prove; the engine is measured further before a part is replaced.',

@@ -70,7 +70,7 @@ describe('crankcase valve seal, warm half: the noise stops outside the band', ()
         'Replace the manifold valve.',
         'Codes after the test: P0068 stored, P0106 pending (step 18a); they were cleared.',
         'After the repair both halves are run again, then clear, drive and prove.',
-        'Tested by Crankcase valve seal under regulated pressure, version 1 with G-12, S-3, L-2, B-1, T-4.',
+        'Tested by Crankcase valve seal under regulated pressure, version 1 with G-12, S-3, L-2.',
       ].join(' '),
       customer:
         'Tested warm, the crankcase valve closes only at 6.2 ± 0.3 kPa, outside its usual range, and should be replaced.',

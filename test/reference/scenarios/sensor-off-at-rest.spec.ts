@@ -45,7 +45,7 @@ describe('crankcase valve seal, cold half: boost pressure reads off at rest', ()
         'Check connector, reference voltage and ground of the sensor before the sensor itself.',
         'The codes were left standing.',
         'After the repair both halves are run again, then clear, drive and prove.',
-        'Tested by Crankcase valve seal under regulated pressure, version 1 with G-12, S-3, L-2, B-1, T-4.',
+        'Tested by Crankcase valve seal under regulated pressure, version 1 with G-12, S-3, L-2, T-4.',
       ].join(' '),
       customer:
         'The boost pressure sensor reads wrong with the engine off; its wiring is checked first, then the sensor.',

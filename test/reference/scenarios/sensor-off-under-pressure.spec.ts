@@ -49,7 +49,7 @@ describe('crankcase valve seal, cold half: boost pressure does not follow the ga
         'Check connector, reference voltage and ground of the sensor before the sensor itself.',
         'Codes after the test: P0068 stored, P0106 pending (step 18a); they were cleared.',
         'After the repair both halves are run again, then clear, drive and prove.',
-        'Tested by Crankcase valve seal under regulated pressure, version 1 with G-12, S-3, L-2, B-1, T-4.',
+        'Tested by Crankcase valve seal under regulated pressure, version 1 with G-12, S-3, L-2, T-4.',
       ].join(' '),
       customer:
         'A pressure sensor does not follow the pressure as it should; its wiring is checked first, then the sensor.',

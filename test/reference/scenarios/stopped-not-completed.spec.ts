@@ -59,7 +59,7 @@ describe('crankcase valve seal, cold half: stopped while the pressure is raised'
         'Nothing was replaced.',
         'What was taken apart is back in its place.',
         'No code was cleared.',
-        'Tested by Crankcase valve seal under regulated pressure, version 1 with G-12, S-3, L-2, B-1, T-4.',
+        'Tested by Crankcase valve seal under regulated pressure, version 1 with G-12, S-3, L-2, T-4.',
       ].join(' '),
       customer:
         'The test of the crankcase valve could not be completed, so nothing was replaced and the cause is still open.',

@@ -11,28 +11,29 @@ import type { RunView } from '../run-view';
 })
 export class RunHeaderBar {
   readonly run = input.required<RunView>();
-  /** `Offline`, `Sent` or what else there is to say about the network. */
+  /** Where sending stands, in two or three words. */
   readonly connection = input.required<string>();
-  /** Events that wait to be sent. */
-  readonly waiting = input(0);
   readonly openListAsked = output();
   readonly viewAsked = output();
 
   protected readonly isPractice = computed(() => this.run().header.kind === 'practice');
   protected readonly car = computed(() => this.run().state.visit);
-  protected readonly half = computed(() => this.run().header.half);
-  protected readonly version = computed(() => this.run().header.version);
   protected readonly title = computed(() => this.run().procedure.document.title);
-  private readonly about = computed(() => expectedSteps(this.run().procedure));
+  protected readonly version = computed(() => {
+    const { half, version } = this.run().header;
+    return `, ${half === undefined ? '' : `${half} half, `}version ${version}`;
+  });
+  private readonly expected = computed(() => expectedSteps(this.run().procedure, this.run().state.header.half));
   protected readonly place = computed(() => {
     const { procedure, state } = this.run();
     const step = state.current === undefined ? undefined : procedure.step(state.current.id);
-    if (step !== undefined) return { before: 'Step ', number: step.number, about: this.about() };
-    return {
-      before: state.status === 'closed' || state.status === 'signed' ? 'Closed' : 'Finding',
-      number: '',
-      about: 0,
-    };
+    if (step === undefined) {
+      const isClosed = state.status === 'closed' || state.status === 'signed';
+      const words = isClosed ? 'Closed' : 'Finding';
+      return { words, briefly: words };
+    }
+    const expected = this.expected();
+    return { words: `Step ${step.number} of about ${expected}`, briefly: `Step ${step.number} of ${expected}` };
   });
   protected readonly disturbed = computed(() => this.run().state.disturbed.length);
 }

@@ -33,7 +33,7 @@ import { resultWords } from '../../shared/result-words';
           [highText]="judgement.highText"
           [value]="value().value"
           [valueText]="value().text"
-          [uncertainty]="value().uncertainty"
+          [uncertainty]="value().judgement?.guard ?? value().uncertainty"
           [result]="judgement.result"
           [unit]="unit()"
         />

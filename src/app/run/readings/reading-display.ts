@@ -20,7 +20,9 @@ export class ReadingDisplay {
   /** The figure as typed or measured; empty while there is none. */
   readonly text = input.required<string>();
   readonly unit = input.required<string>();
-  /** Small words beside the label: which take, what was read before, with what. */
+  /** The figure that was read before, in view while the new one is judged. */
+  readonly before = input<string>();
+  /** Small words under the label: which take, with what. */
   readonly notes = input<readonly (string | undefined)[]>([]);
   /** The value that the figure gives: the quantity itself, or what follows from it. */
   readonly value = input<NamedValue>();
@@ -34,14 +36,22 @@ export class ReadingDisplay {
   readonly remark = input<string>();
 
   protected readonly words = resultWords;
-  protected readonly said = computed(() => this.notes().filter((note) => note !== undefined && note !== ''));
+  protected readonly said = computed(() =>
+    [...this.notes(), this.before()].filter((note) => note !== undefined && note !== ''),
+  );
   protected readonly result = computed(() => this.value()?.judgement?.result);
   protected readonly gauge = computed(() => {
     const value = this.value();
     const band: Omit<Judgement, 'result'> | undefined = value?.judgement ?? this.band();
     if (band === undefined || (band.low === undefined && band.high === undefined)) return undefined;
     const unit = value?.unit ?? this.unit();
-    return { ...band, value: value?.value, uncertainty: value?.uncertainty, text: value?.text, unit: shownUnit(unit) };
+    return {
+      ...band,
+      value: value?.value,
+      uncertainty: value?.judgement?.guard ?? value?.uncertainty,
+      text: value?.text,
+      unit: shownUnit(unit),
+    };
   });
   protected readonly unjudged = computed(() => (this.value()?.judgement ?? this.band())?.unjudged);
   /** What the figure gives where that has another name or unit than what was typed. */
