@@ -1,7 +1,7 @@
 import { join } from 'node:path';
 import type { Page } from '@playwright/test';
 import { canonicalJson, verifyChain, type RunEvent, type RunHeader } from '../../procedures/engine';
-import { shownStep, walkTo, type Answers } from './support/at-the-car';
+import { shownStep, tap, walkTo, type Answers } from './support/at-the-car';
 import { expect, test } from './support/test';
 import { openVisit, readyWithoutNetwork, signIn } from './support/visits';
 import { eventsInDatabase, eventsOnTablet, rowsOf } from './support/what-is-kept';
@@ -13,9 +13,16 @@ async function listenByFile(page: Page): Promise<void> {
   await page.getByRole('button', { name: 'Take a log of the scan tool instead' }).click();
   await page.locator('input[type=file]').setInputFiles(ramp);
   await expect(page.getByText('381 samples')).toBeVisible();
-  await page.getByRole('button', { name: 'Take this series' }).click();
+  await tap(page.getByRole('button', { name: 'Take this series' }));
   await expect(page.getByText('Gauge at the mark')).toBeVisible();
-  await page.getByRole('button', { name: /Keep the mark/ }).click();
+  await tap(page.getByRole('button', { name: /Keep the mark/ }));
+}
+
+/** Keeps the write-up as composed, reads back and closes. */
+async function closeRun(page: Page): Promise<void> {
+  for (const name of [/Keep the write-up/, /To the closing/, 'Close the run', 'To the Bench']) {
+    await tap(page.getByRole('button', { name }));
+  }
 }
 
 const warmCar: Answers = {
@@ -79,17 +86,14 @@ test('one job from the visit to the record, with the network cut and the browser
   await expect(page.getByText('Now: step 9a')).toBeVisible();
   await expect(page.getByText('dipstick').first()).toBeVisible();
   expect(await eventsOnTablet(page, runId)).toEqual(before);
-  await page.getByRole('button', { name: /Go on with step 9a/ }).click();
+  await tap(page.getByRole('button', { name: /Go on with step 9a/ }));
   expect((await shownStep(page)).number).toBe('9a');
   await expect(page.getByRole('button', { name: '3 disturbed' })).toBeVisible();
 
   // To the finding, the write-up, and closed: all without the network.
   await walkTo(page, 'the end', warmCar);
   await expect(page.getByRole('heading', { name: /The manifold valve seals at 3\.\d ± 0\.\d kPa/ })).toBeVisible();
-  await page.getByRole('button', { name: 'Keep the write-up' }).click();
-  await page.getByRole('button', { name: /To the closing/ }).click();
-  await page.getByRole('button', { name: 'Close the run' }).click();
-  await page.getByRole('button', { name: 'To the Bench' }).click();
+  await closeRun(page);
   const onTablet = (await eventsOnTablet(page, runId)) as unknown as RunEvent[];
   expect(await rowsOf(product.databaseUrl, 'SELECT run_id FROM run')).toEqual([]);
 
@@ -132,10 +136,7 @@ test('the manager reads the whole story of that kind of run in the Record room',
     .click();
   await page.getByRole('button', { name: /Start the warm half/ }).click();
   await walkTo(page, 'the end', warmCar);
-  await page.getByRole('button', { name: 'Keep the write-up' }).click();
-  await page.getByRole('button', { name: /To the closing/ }).click();
-  await page.getByRole('button', { name: 'Close the run' }).click();
-  await page.getByRole('button', { name: 'To the Bench' }).click();
+  await closeRun(page);
   await expect(page.getByText(/All sent/)).toBeVisible({ timeout: 30_000 });
   const [run] = await rowsOf<{ run_id: string }>(
     product.databaseUrl,

@@ -18,6 +18,7 @@ export default defineConfig({
   use: {
     browserName: 'chromium',
     headless: true,
+    actionTimeout: 15_000,
     launchOptions: { executablePath: chromiumPath, args: [...chromiumSwitches] },
     // A tablet that lies on the fender.
     viewport: { width: 1280, height: 800 },

@@ -1,6 +1,7 @@
-import type { Page } from '@playwright/test';
+import type { Locator, Page } from '@playwright/test';
 import type { Step } from '../../../procedures/document';
 import { crankcaseValveSeal } from '../../../procedures/library';
+import { tapGuardMs } from '../../../src/app/run/tap-guard';
 import { expect } from './test';
 
 /** What a person enters at a step, by the step's number; steps that ask for nothing have none. */
@@ -18,12 +19,18 @@ export interface Answers {
   readonly listen?: (page: Page) => Promise<void>;
 }
 
-/** The step that the screen shows, told by its sentence. */
+/** The step that the screen shows, told by its number in the header; its sentence must be the step's own. */
 export async function shownStep(page: Page): Promise<Step> {
-  const sentence = await page.locator('.frame h1').first().innerText();
-  const step = crankcaseValveSeal.steps.find(({ action }) => action === sentence);
-  if (step === undefined) throw new Error(`no step says "${sentence}"`);
+  const number = await shownNumber(page);
+  const step = crankcaseValveSeal.steps.find((candidate) => candidate.number === number);
+  if (step === undefined) throw new Error(`there is no step ${number}`);
+  await expect(page.locator('.frame h1').first()).toHaveText(step.action);
   return step;
+}
+
+async function shownNumber(page: Page): Promise<string> {
+  const chip = await page.locator('bay-run-header .chip').first().innerText();
+  return /Step\s+(\S+)/.exec(chip)?.[1] ?? chip;
 }
 
 /** Goes on from step to step as a technician does, until the step with this number, or a finding, is on the screen. */
@@ -33,25 +40,31 @@ export async function walkTo(page: Page, number: string, answers: Answers): Prom
     codes: Record<string, string[]>;
   };
   for (let taken = 0; taken < 120; taken += 1) {
-    if (await page.getByText('Finding', { exact: true }).first().isVisible()) return;
+    if (await page.locator('bay-finding-entry').isVisible()) return;
     const step = await shownStep(page);
     if (step.number === number) return;
-    await acknowledge(page);
+    if (step.kind !== 'start') await acknowledge(page, step.cautions?.length ?? 0);
     await answer(page, step, answers, left);
     await leftStep(page, step);
   }
   throw new Error(`step ${number} was not reached`);
 }
 
-/** Taps away the cautions that stand before the current step's entry. */
-export async function acknowledge(page: Page): Promise<void> {
-  const read = page.getByRole('button', { name: 'I have read it' });
-  while (await read.isVisible()) {
-    const before = await page.locator('bay-caution-gate').innerText();
-    await read.click();
-    await expect
-      .poll(async () => ((await read.isVisible()) ? page.locator('bay-caution-gate').innerText() : 'none'))
-      .not.toBe(before);
+/** Taps at a hand's pace: a second tap inside the guard time is a bounce to the app, and would do nothing. */
+export async function tap(target: Locator): Promise<void> {
+  await target.waitFor();
+  await target.page().waitForTimeout(tapGuardMs + 20);
+  await target.click();
+}
+
+/** Taps away the cautions that stand before the current step's entry, one by one. */
+export async function acknowledge(page: Page, count: number): Promise<void> {
+  const gate = page.locator('bay-caution-gate');
+  for (let left = count; left > 0; left -= 1) {
+    const words = await gate.locator('bay-caution').innerText();
+    await tap(page.getByRole('button', { name: 'I have read it' }));
+    if (left > 1) await expect(gate.locator('bay-caution')).not.toHaveText(words);
+    else await expect(gate).toBeHidden();
   }
 }
 
@@ -61,14 +74,11 @@ export async function enter(page: Page, digits: string): Promise<void> {
     const name = { '-': 'minus', '.': 'decimal point' }[digit] ?? digit;
     await page.locator('bay-number-pad').getByRole('button', { name, exact: true }).click();
   }
-  await page.locator('bay-number-pad .go').click();
+  await tap(page.locator('bay-number-pad .go'));
 }
 
 async function leftStep(page: Page, step: Step): Promise<void> {
-  if (step.kind === 'wait') return;
-  await expect
-    .poll(async () => (await page.locator('.frame h1').first().innerText()) !== step.action, { timeout: 15_000 })
-    .toBe(true);
+  await expect.poll(() => shownNumber(page), { timeout: 15_000 }).not.toBe(step.number);
 }
 
 async function answer(
@@ -84,7 +94,7 @@ async function answer(
     case 'reading':
     case 'wait': {
       const way = answers.way?.[step.number];
-      if (way !== undefined) await page.getByRole('button', { name: way }).click();
+      if (way !== undefined) await tap(page.getByRole('button', { name: way }));
       const digits = left.read[step.number]?.shift();
       if (digits === undefined) throw new Error(`nothing to read at step ${step.number}`);
       const before = await page.locator('bay-hand-side').innerText();
@@ -98,44 +108,44 @@ async function answer(
         await page.locator('bay-choice-entry').getByText(label, { exact: true }).click();
       }
       if (answers.text?.[step.number] !== undefined) await page.locator('#asked').fill(answers.text[step.number] ?? '');
-      return primary.click();
+      return tap(primary);
     case 'drive':
-      await page.getByRole('button', { name: 'Parked again' }).click();
+      await tap(page.getByRole('button', { name: 'Parked again' }));
       for (const label of answers.choose?.[step.number] ?? [])
         await page.getByRole('checkbox', { name: label }).click();
-      return primary.click();
+      return tap(primary);
     case 'codes':
       for (const code of left.codes[step.number] ?? []) await enterCode(page, code);
-      return primary.click();
+      return tap(primary);
     case 'listen':
       if (answers.listen === undefined) throw new Error('nothing to listen to');
       return answers.listen(page);
     case 'hold':
-      await primary.click();
-      await page.getByRole('button', { name: /Held/ }).click({ timeout: 60_000 });
+      await tap(primary);
+      await page.getByRole('button', { name: /Held/ }).click({ timeout: 45_000 });
       return;
     case 'restore':
       return restoreAll(page);
     default:
-      return primary.click();
+      return tap(primary);
   }
 }
 
 /** The start card: what must be ready, the cautions that hold throughout, the gear. */
 async function begin(page: Page, gear: Readonly<Record<string, string>>): Promise<void> {
-  await page.getByRole('button', { name: /All of this\s+is ready/ }).click();
-  await page.getByRole('button', { name: 'I know them' }).click();
-  await acknowledge(page);
+  await tap(page.getByRole('button', { name: /All of this\s+is ready/ }));
+  await tap(page.getByRole('button', { name: 'I know them' }));
+  await acknowledge(page, crankcaseValveSeal.start.throughout.length);
   for (const { role, label } of crankcaseValveSeal.gear) {
     await expect(page.getByRole('radiogroup', { name: label })).toBeVisible();
     const instrument = gear[role];
-    if (instrument === undefined) await page.getByRole('button', { name: 'Without it' }).click();
+    if (instrument === undefined) await tap(page.getByRole('button', { name: 'Without it' }));
     else {
       await page.getByRole('radio', { name: new RegExp(`^${instrument}`) }).click();
-      await page.getByRole('button', { name: `Take ${instrument}` }).click();
+      await tap(page.getByRole('button', { name: `Take ${instrument}` }));
     }
   }
-  await page.getByRole('button', { name: 'Begin' }).click();
+  await tap(page.getByRole('button', { name: 'Begin' }));
 }
 
 async function enterCode(page: Page, entry: string): Promise<void> {
@@ -145,7 +155,10 @@ async function enterCode(page: Page, entry: string): Promise<void> {
   else {
     await page.getByRole('button', { name: /Enter (a|another) code/ }).click();
     for (const sign of code)
-      await page.locator('bay-code-pad').getByRole('button', { name: sign, exact: true }).click();
+      await page
+        .locator('bay-code-pad')
+        .getByRole('button', { name: new RegExp(`^${sign}`) })
+        .click();
   }
   await page.getByRole('radio', { name: status }).click();
   await page.getByRole('button', { name: `Keep ${code}` }).click();
@@ -154,9 +167,9 @@ async function enterCode(page: Page, entry: string): Promise<void> {
 async function restoreAll(page: Page): Promise<void> {
   const open = page.locator('bay-restore-list button');
   for (let count = await open.count(); count > 0; count = await open.count()) {
-    await open.first().click();
+    await tap(open.first());
     await expect.poll(async () => open.count()).toBeLessThan(count);
   }
   const back = page.getByRole('button', { name: /All is back/ });
-  if (await back.isVisible()) await back.click();
+  if (await back.isVisible()) await tap(back);
 }

@@ -35,6 +35,7 @@ export async function launchTablet(options: TabletOptions): Promise<Tablet> {
     timezoneId: 'UTC',
     ...(options.baseUrl === undefined ? {} : { baseURL: options.baseUrl }),
   });
+  context.setDefaultTimeout(20_000);
   const page = context.pages()[0] ?? (await context.newPage());
   return {
     context,

@@ -7,7 +7,7 @@ export async function signIn(page: Page, name: string, password = 'ossenholt-dem
   await page.getByLabel('Name').fill(name);
   await page.getByLabel('Password', { exact: true }).fill(password);
   await page.getByRole('button', { name: 'Sign in' }).click();
-  await expect(page.getByRole('button', { name: 'Sign in' })).toBeHidden();
+  await expect(page.locator('bay-top-bar')).toBeVisible();
 }
 
 /** Waits until the page's service worker controls it and everything is cached, so that the network may go. */
@@ -29,5 +29,5 @@ export async function openVisit(page: Page, fields: Readonly<Record<string, stri
     .getByRole('link', { name: 'New visit' })
     .or(page.getByRole('button', { name: 'New visit' }))
     .click();
-  for (const [label, text] of Object.entries(fields)) await page.getByLabel(label).fill(text);
+  for (const [label, text] of Object.entries(fields)) await page.getByRole('textbox', { name: label }).fill(text);
 }
