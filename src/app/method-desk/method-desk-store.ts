@@ -47,14 +47,15 @@ export class MethodDeskStore {
     const read = readProcedureFile(text);
     if (!read.ok) return this.keep({ fileName, text, problems: [read.problem], isWaiting: false });
     await this.during(async () => {
+      let problems = 0;
       try {
-        await this.shelf.importDraft(read.document);
+        problems = (await this.shelf.importDraft(read.document)).problems.length;
       } catch (error) {
         if (!(error instanceof ApiProblem)) throw error;
         return this.keep(refusedImport({ fileName, text }, read.document, error));
       }
       await this.putAway();
-      this.said.set({ tone: 'done', text: `${fileName} is a draft now.` });
+      this.said.set({ tone: 'done', text: `${fileName} is a draft now. ${publishingWords(problems)}` });
       this.list.reload();
     });
   }
@@ -117,6 +118,11 @@ export class MethodDeskStore {
     this.said.set(undefined);
     await work().finally(() => this.working.set(false));
   }
+}
+
+function publishingWords(problems: number): string {
+  if (problems === 0) return 'Nothing keeps it from being published.';
+  return `${problems === 1 ? '1 problem keeps' : `${problems} problems keep`} it from being published: read it to see them.`;
 }
 
 function refusedImport(file: Pick<KeptImport, 'fileName' | 'text'>, document: object, refusal: ApiProblem): KeptImport {

@@ -3,14 +3,17 @@ import { inject, Injectable } from '@angular/core';
 import { firstValueFrom } from 'rxjs';
 import { readDraft, readProcedureList, type DraftDetail, type ProcedureSummary } from './method-wire';
 
+/** What became of an import: the draft, with what keeps it from being published. */
+export type ImportedDraft = Pick<DraftDetail, 'id' | 'procedureId' | 'problems'>;
+
 /** The server's procedures: every write fails with `ApiProblem`, and then nothing has changed. */
 @Injectable({ providedIn: 'root' })
 export class MethodShelf {
   private readonly http = inject(HttpClient);
 
   /** Brings a document in as a draft, in place of an earlier draft of the same procedure. 422 names what is wrong. */
-  async importDraft(document: object): Promise<{ readonly id: string; readonly procedureId: string }> {
-    return firstValueFrom(this.http.post<{ id: string; procedureId: string }>('/api/procedures/drafts', document));
+  async importDraft(document: object): Promise<ImportedDraft> {
+    return firstValueFrom(this.http.post<ImportedDraft>('/api/procedures/drafts', document));
   }
 
   /** Makes a draft the next version, which never changes again. */

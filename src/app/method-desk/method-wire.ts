@@ -16,7 +16,8 @@ export interface DraftSummary {
   /** ISO 8601. */
   readonly importedAt: string;
   readonly importedBy: string;
-  readonly problems: readonly unknown[];
+  /** What keeps it from being published. */
+  readonly problems: readonly { readonly pointer: string; readonly detail: string }[];
 }
 
 /** A procedure with all its versions, newest first, and the draft that waits. */

@@ -1,6 +1,7 @@
-import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
 import { shownUnit } from '../../../procedures/engine';
 import type { ProcedureDocument } from '../../../procedures/document';
+import type { FileProblem } from './read-procedure-file';
 
 /** What a procedure is for, what it needs, what holds throughout and how it is stopped, to be read before its steps. */
 @Component({
@@ -11,7 +12,26 @@ import type { ProcedureDocument } from '../../../procedures/document';
 })
 export class ProcedureHead {
   readonly document = input.required<ProcedureDocument>();
+  /** What must be mended in the document as a whole. */
+  readonly problems = input<readonly FileProblem[]>([]);
+  /** Finding's id -> the ids of the steps on one shortest way to it. */
+  readonly ways = input<Readonly<Record<string, readonly string[]>>>({});
 
+  /** The person wants to read a step. */
+  readonly goTo = output<string>();
+
+  /** Each finding with one shortest way to it. */
+  protected readonly findings = computed(() => {
+    const { steps } = this.document();
+    const numbers = new Map(steps.map(({ id, number }) => [id, number]));
+    return steps
+      .filter(({ kind }) => kind === 'finding')
+      .map(({ id, title }) => ({
+        id,
+        title,
+        way: (this.ways()[id] ?? []).filter((step) => step !== id).map((step) => numbers.get(step) ?? step),
+      }));
+  });
   protected readonly facts = computed(() => {
     const { system, expectedMinutes, useLevel, pair, appliesTo } = this.document();
     return [

@@ -40,6 +40,11 @@ export class ReadingPage {
   protected readonly stepProblems = computed(() =>
     this.store.problems().filter(({ step }) => step !== undefined && step === this.selected()),
   );
+  protected readonly stepWarnings = computed(
+    () => this.store.report()?.warnings.filter(({ step }) => step !== undefined && step === this.selected()) ?? [],
+  );
+  /** Problems of the document as a whole. */
+  protected readonly ownProblems = computed(() => this.store.problems().filter(({ step }) => step === undefined));
   protected readonly counts = computed(() => {
     const steps = this.store.document()?.steps ?? [];
     const findings = steps.filter(({ kind }) => kind === 'finding').length;

@@ -1,6 +1,6 @@
-import { pictureParts } from '../../../procedures/library/picture-parts';
 import { computed, inject, Injectable, resource, signal } from '@angular/core';
 import type { ProcedureDocument } from '../../../procedures/document';
+import { pictureParts } from '../../../procedures/library/picture-parts';
 import { OfflineStore } from '../core/offline-store';
 import type { PublishedProcedure } from '../core/wire';
 import { draftResource } from './method-shelf';
@@ -38,9 +38,10 @@ export class ReadingStore {
     this.draftId() === undefined ? 'The steps of this version' : 'The steps of this draft',
   );
   readonly problem = computed(() => this.draft.error() ?? this.versionProblem());
-  /** What must be mended, as this build sees it; empty until it has looked. */
-  readonly problems = computed<readonly FileProblem[]>(() => (this.checked.hasValue() ? this.checked.value() : []));
-  readonly isChecked = computed(() => this.checked.hasValue());
+  /** What the lint says; undefined until it has looked. */
+  readonly report = computed(() => (this.checked.hasValue() ? this.checked.value() : undefined));
+  /** What must be mended before it can be published. */
+  readonly problems = computed(() => this.report()?.problems ?? []);
   readonly problemCounts = computed(() => {
     const counts = new Map<string, number>();
     for (const { step } of this.problems()) if (step !== undefined) counts.set(step, (counts.get(step) ?? 0) + 1);
@@ -63,12 +64,31 @@ export class ReadingStore {
   }
 }
 
-/** What would keep the document from being published; the reader of expressions and the lint come lazily. */
-async function check(document: ProcedureDocument): Promise<readonly FileProblem[]> {
+/** What the lint says of a document. */
+export interface ReadingReport {
+  /** What must be mended before it can be published. */
+  readonly problems: readonly FileProblem[];
+  /** What the author should think about. */
+  readonly warnings: readonly FileProblem[];
+  /** Finding's id -> the ids of the steps on one shortest way to it. */
+  readonly ways: Readonly<Record<string, readonly string[]>>;
+  /** Whether everything that a step opens is closed again on every way. */
+  readonly isAllRestored: boolean;
+}
+
+/** Looks at a document as its publisher would; the reader of expressions and the lint come lazily. */
+async function check(document: ProcedureDocument): Promise<ReadingReport> {
   const { lintProcedure } = await import('../../../procedures/document/authoring');
-  return lintProcedure(document, { parts: pictureParts }).errors.map(({ step, pointer, message }) => ({
-    where: step ?? pointer ?? 'the document',
+  const { errors, warnings, waysToFindings } = lintProcedure(document, { parts: pictureParts });
+  const inWords = ({ step, pointer, message }: (typeof errors)[number]): FileProblem => ({
+    where: pointer ?? 'the document',
     message,
     ...(step === undefined ? {} : { step }),
-  }));
+  });
+  return {
+    problems: errors.map(inWords),
+    warnings: warnings.map(inWords),
+    ways: waysToFindings,
+    isAllRestored: errors.every(({ rule }) => rule !== 'restored'),
+  };
 }

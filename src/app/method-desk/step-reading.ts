@@ -22,6 +22,9 @@ export class StepReading {
   /** What must be mended in this step. */
   readonly problems = input<readonly FileProblem[]>([]);
 
+  /** What to think about in this step. */
+  readonly warnings = input<readonly FileProblem[]>([]);
+
   /** The person wants to read another step. */
   readonly goTo = output<string>();
 
