@@ -1,10 +1,12 @@
 // @ts-check
-import { existsSync, realpathSync, statfsSync } from 'node:fs';
+import { existsSync, statfsSync } from 'node:fs';
 import { readFile, rename, rm, stat, writeFile } from 'node:fs/promises';
 import { join } from 'node:path';
+import { setTimeout as wait } from 'node:timers/promises';
 import { runCommand } from './commands.mjs';
 import { freePort } from './free-port.mjs';
 import { postgresFailure } from './postgres-failure.mjs';
+import { clearEarlierRun, isRunning } from './postgres-process.mjs';
 import { StartProblem, fileProblem } from './sentences.mjs';
 import { atStop } from './stopping.mjs';
 
@@ -25,14 +27,11 @@ import { atStop } from './stopping.mjs';
 const filesName = 'cluster';
 const logName = 'postgres.log';
 
-const portTries = 5;
+const startTries = 5;
 const startLimitS = 300;
 
 /** @param {Cluster} cluster */
 const filesOf = ({ place }) => join(place, filesName);
-
-/** @param {Cluster} cluster */
-const noteOf = (cluster) => join(filesOf(cluster), 'postmaster.pid');
 
 /** @param {Cluster} cluster */
 const logOf = ({ place }) => join(place, logName);
@@ -94,12 +93,13 @@ export async function runOffline(cluster, statements, files = filesName) {
  * @returns {Promise<{ port: number, stop: () => Promise<void> }>}
  */
 export async function startCluster(cluster, settings = {}) {
-  await forgetEarlierRun(cluster);
+  // A start that was killed may have left its cluster running, or the note of one.
+  if ((await clearEarlierRun(filesOf(cluster), cluster.account)) === 'running') await stopCluster(cluster);
   const stop = () => stopCluster(cluster);
   const forget = atStop(stop);
   const logFrom = await beginLog(cluster);
   let output = '';
-  for (let tries = 0; tries < portTries; tries += 1) {
+  for (let tries = 0; tries < startTries; tries += 1) {
     const port = await freePort();
     const all = { listen_addresses: '127.0.0.1', port, unix_socket_directories: '', ...settings };
     const options = Object.entries(all).map(([name, value]) => `-c ${name}=${value}`);
@@ -117,8 +117,10 @@ export async function startCluster(cluster, settings = {}) {
       };
     }
     output = start.output + (await readLog(cluster)).slice(logFrom);
-    // Another program may have taken the port between the look and the start.
-    if (!/Address already in use/.test(output)) break;
+    // Another program may have taken the port between the look and the start; the last processes of a killed cluster
+    // may take a moment to go.
+    if (/pre-existing shared memory block/.test(output)) await wait(1000);
+    else if (!/Address already in use/.test(output)) break;
   }
   if (isOnFullDisk(cluster)) throw new StartProblem(String(fileProblem('ENOSPC', cluster.place)));
   throw new StartProblem(postgresFailure(`The database in ${cluster.place} does not start`, output, cluster.place));
@@ -129,51 +131,13 @@ export async function startCluster(cluster, settings = {}) {
  * @param {Cluster} cluster
  */
 export async function stopCluster(cluster) {
-  if (!(await isRunning(cluster))) return;
+  if (!(await isRunning(filesOf(cluster), cluster.account))) return;
   const stop = ['stop', '-D', filesName, '-w', '-t', '60'];
   const fast = await run(cluster, 'pg_ctl', [...stop, '-m', 'fast']);
-  if (fast.code === 0 || !(await isRunning(cluster))) return;
+  if (fast.code === 0 || !(await isRunning(filesOf(cluster), cluster.account))) return;
   // Files stay whole: the next start recovers from the log as after a power cut.
   const immediate = await run(cluster, 'pg_ctl', [...stop, '-m', 'immediate']);
   if (immediate.code !== 0) throw new StartProblem(`The database in ${cluster.place} does not stop: ${fast.output}`);
-}
-
-/**
- * Gets rid of what a killed start left behind: a cluster that still runs, or a note whose process id now belongs to
- * another program. Every other note is left to PostgreSQL's own judgement.
- * @param {Cluster} cluster
- */
-async function forgetEarlierRun(cluster) {
-  const noted = await notedProcess(cluster);
-  if (noted === undefined) return;
-  if (noted.home === realpathSync(filesOf(cluster))) await stopCluster(cluster);
-  else if (noted.home !== undefined || noted.isDead) await rm(noteOf(cluster), { force: true });
-}
-
-/**
- * Whether this cluster runs. The note alone proves nothing: after a restart of the machine its process id may be
- * anybody's, so the process must also be at home in the cluster's folder.
- * @param {Cluster} cluster
- */
-async function isRunning(cluster) {
-  const noted = await notedProcess(cluster);
-  return noted !== undefined && noted.home === realpathSync(filesOf(cluster));
-}
-
-/**
- * The process that PostgreSQL's own note names: the folder it works in (undefined: no such process, or not ours to see),
- * and whether it is dead but not yet collected, as in a container whose first process collects nothing. PostgreSQL would
- * take such a one for alive.
- * @param {Cluster} cluster
- */
-async function notedProcess(cluster) {
-  const note = await readFile(noteOf(cluster), 'utf8').catch(() => '');
-  const pid = Number(note.split('\n', 1)[0]);
-  if (!Number.isInteger(pid) || pid <= 0) return undefined;
-  // Asked as the cluster's account: a container's root may not look into another account's processes.
-  const { code, output } = await runCommand('readlink', [`/proc/${pid}/cwd`], { account: cluster.account });
-  const state = await readFile(`/proc/${pid}/stat`, 'utf8').catch(() => '');
-  return { home: code === 0 ? output.trim() : undefined, isDead: /\) Z /.test(state) };
 }
 
 /** @param {Cluster} cluster */
