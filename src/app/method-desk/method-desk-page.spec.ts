@@ -83,7 +83,9 @@ describe('the Method desk', () => {
 
   it('lists what is to be mended by step and place, and keeps the file', async () => {
     await showList();
-    await choose('{"format":1,"steps":[{"id":"start"},{"id":"look","kind":"stare"}]}');
+    await choose(
+      '{"format":1,"steps":[{"id":"heard","number":"11b","title":"What was heard"},{"id":"look","number":"17b","kind":"stare"}]}',
+    );
     await answer(
       'POST',
       '/api/procedures/drafts',
@@ -92,18 +94,18 @@ describe('the Method desk', () => {
         errors: [
           {
             pointer: '/steps/0/next/1/when',
-            detail: 'Step what-was-heard: branch 2: sealPiont is not a name: mend it',
+            detail: 'Step heard: branch 2: sealPiont is not a name: mend it',
           },
-          { pointer: '/steps/1/kind', detail: 'no such kind of step' },
+          { pointer: '/steps/1/kind', detail: 'Step 17b: no such kind of step' },
           { pointer: '/title', detail: 'must be there' },
         ],
       },
       422,
     );
     expect(alerts()).toContain('3 problems must be mended');
-    expect(alerts()).toMatch(/Step what-was-heard\s*branch 2\s*sealPiont is not a name: mend it/);
-    expect(alerts()).toMatch(/Step look\s*\/steps\/1\/kind\s*no such kind of step/);
-    expect(alerts()).toMatch(/The document\s*\/title\s*must be there/);
+    expect(alerts()).toMatch(/Step 11b, What was heard\s*branch 2\s*sealPiont is not a name: mend it/);
+    expect(alerts()).toMatch(/Step 17b\s*no such kind of step/);
+    expect(alerts()).toMatch(/The document\s*must be there/);
   });
 
   it('still has the file after a reload', async () => {

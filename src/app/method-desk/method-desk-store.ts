@@ -122,7 +122,7 @@ export class MethodDeskStore {
 
 function publishingWords(problems: number): string {
   if (problems === 0) return 'Nothing keeps it from being published.';
-  return `${problems === 1 ? '1 problem keeps' : `${problems} problems keep`} it from being published: read it to see them.`;
+  return `${problems === 1 ? '1 problem keeps' : `${problems} problems keep`} it from being published: read it to see which.`;
 }
 
 function refusedImport(file: Pick<KeptImport, 'fileName' | 'text'>, document: object, refusal: ApiProblem): KeptImport {

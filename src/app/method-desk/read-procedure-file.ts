@@ -2,6 +2,8 @@
 export interface FileProblem {
   /** The step's id; absent where it is not about one step. */
   readonly step?: string;
+  /** The step as people say it, `5, Manifold pressure`. */
+  readonly stepName?: string;
   /** The place: `branch 2`, `line 40`, `/steps/3/kind`. */
   readonly where: string;
   readonly message: string;

@@ -36,6 +36,11 @@ export class StepReading {
   protected readonly quantities = computed(() =>
     quantitiesOf(this.step(), (text) => conditionWords(text, this.names())),
   );
+  protected readonly quantitiesTitle = computed(() => {
+    const { kind } = this.step();
+    if (kind === 'listen') return 'What it finds';
+    return kind === 'reading' || kind === 'wait' ? 'What it takes' : 'What it computes';
+  });
   /** The start card's own cautions hold throughout. */
   protected readonly cautions = computed(() => {
     const step = this.step();

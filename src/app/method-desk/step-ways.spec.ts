@@ -20,8 +20,8 @@ describe('where a step goes on', () => {
   });
 
   it('says how often a way back may be taken, and what then', () => {
-    expect(waysFrom('manifold-pressure')[0]?.bound).toBe('at most 2 times, then 6');
-    expect(waysFrom('what-was-heard')[3]?.bound).toBe('at most 2 times, then 12a, as Seals, too close to call');
+    expect(waysFrom('manifold-pressure')[0]?.bound).toBe('At most 2 times, then 6');
+    expect(waysFrom('what-was-heard')[3]?.bound).toBe('At most 2 times, then 12a, as Seals, too close to call');
   });
 
   it('names the finding that a way heads for', () => {

@@ -48,7 +48,7 @@ function boundOf(
   { atMost, thenceforth }: { readonly atMost?: number; readonly thenceforth?: Exit },
 ): string | undefined {
   if (atMost === undefined) return undefined;
-  const times = `at most ${atMost === 1 ? 'once' : `${atMost} times`}`;
+  const times = `At most ${atMost === 1 ? 'once' : `${atMost} times`}`;
   if (thenceforth === undefined) return times;
   const verdict = thenceforth.verdict === undefined ? '' : `, as ${titleOf(document, thenceforth.verdict)}`;
   return `${times}, then ${targetOf(document, step, thenceforth.to).label}${verdict}`;
