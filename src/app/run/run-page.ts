@@ -232,8 +232,10 @@ export class RunPage {
     this.sheet.set(undefined);
   }
 
+  /** Back to where the run came from: practice to its bay, and once it is closed to its debrief. */
   protected async toBench(): Promise<void> {
-    await this.router.navigateByUrl('/');
+    const practice = this.isClosed() ? `/practice/${this.runId()}` : '/practice';
+    await this.router.navigateByUrl(this.isPractice() ? practice : '/');
   }
 
   protected soundHoldOver(): void {

@@ -45,6 +45,7 @@ export class FindingEntry extends StepEntry<'finding'> {
   protected readonly edited = computed(() => this.draft().find(({ name }) => name === this.editing()));
   protected readonly isKept = computed(() => isKept(this.run(), this.draft()));
   protected readonly disturbed = computed(() => this.run().state.disturbed);
+  protected readonly isPractice = computed(() => this.run().header.kind === 'practice');
   protected readonly isClosed = computed(() => ['closed', 'signed'].includes(this.run().state.status));
   /** What is read back before the run is closed. */
   protected readonly readBack = computed(() => {

@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, computed, linkedSignal, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, effect, linkedSignal, output, signal } from '@angular/core';
 import type { UnitName } from '../../../../procedures/calculations';
 import {
   parseDecimal,
@@ -31,6 +31,9 @@ import { WayTiles } from './way-tiles';
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class ReadingEntry extends StepEntry<'reading' | 'wait'> {
+  /** Where the step would lead if what is typed were recorded; undefined while that is not known. */
+  readonly wouldGoTo = output<string | undefined>();
+
   /** The quantity that is asked for now: the first that has not all its takes in this claim. */
   protected readonly quantity = computed(() => {
     const reads = readsOf(this.step());
@@ -121,13 +124,33 @@ export class ReadingEntry extends StepEntry<'reading' | 'wait'> {
     return isRead ? `Not yet. ${step.meanwhile}` : undefined;
   });
 
+  /** What the key beside the digits does: with nothing typed it leads back to the ways, or takes back the last take. */
+  protected readonly eraseLabel = computed(() => {
+    if (this.text() !== '') return 'Erase';
+    if (this.wayId() !== undefined) return 'Other way';
+    return this.takes().length > 0 ? 'Take back' : 'Erase';
+  });
+
+  constructor() {
+    super();
+    // Towards the Route: while a figure is typed it shows where that figure leads.
+    effect(() => {
+      const preview = this.preview();
+      this.wouldGoTo.emit(preview?.ok === true ? preview.way?.to : undefined);
+    });
+  }
+
   protected press(key: PadKey): void {
     this.text.update((text) => pressKey(text, key));
   }
 
   protected erase(): void {
-    if (this.text() === '' && this.wayId() !== undefined) this.wayId.set(undefined);
-    else this.press('erase');
+    const name = this.quantity()?.name;
+    if (this.text() !== '') this.press('erase');
+    else if (this.wayId() !== undefined) this.wayId.set(undefined);
+    else if (name !== undefined && this.takes().length > 0) {
+      this.commanded.emit({ do: 'take-back', name, reason: 'read wrongly' });
+    }
   }
 
   protected record(): void {
