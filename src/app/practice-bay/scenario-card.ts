@@ -20,7 +20,7 @@ import type { OfferedScenario } from './practice-book';
         (click)="started.emit()"
       >
         {{ isStarting() ? 'Opening' : offer().tries > 0 ? 'Try again' : 'Start' }}
-        <span class="visually-hidden">: {{ offer().scenario.title }}</span>
+        <span class="visually-hidden">{{ offer().scenario.title }}</span>
       </button>
     </article>
   `,
