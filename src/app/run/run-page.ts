@@ -7,11 +7,12 @@ import {
   effect,
   inject,
   input,
+  linkedSignal,
   signal,
 } from '@angular/core';
 import { Router } from '@angular/router';
 import type { Step } from '../../../procedures/document';
-import { routeAhead, type RunCommand } from '../../../procedures/engine';
+import type { RunCommand } from '../../../procedures/engine';
 import { HandSetting } from '../core/hand-setting';
 import { Sync } from '../core/sync';
 import { Theme } from '../core/theme';
@@ -19,6 +20,7 @@ import { clock, monotonicClock } from '../core/time-and-ids';
 import { BenchSheet } from '../shared/practice/bench-sheet';
 import { RouteRibbon } from '../shared/route-ribbon';
 import { syncWords } from '../shared/sync-words';
+import { briefConnection } from './brief-connection';
 import { CodesEntry } from './codes/codes-entry';
 import { FindingEntry } from './finding/finding-entry';
 import { CautionGate } from './frame/caution-gate';
@@ -42,6 +44,7 @@ import { LimitTakeover } from './sheets/limit-takeover';
 import { LookBackSheet } from './sheets/look-back-sheet';
 import { OpenListSheet } from './sheets/open-list-sheet';
 import { ResumeCard } from './sheets/resume-card';
+import { SheetBody } from './sheets/sheet-body';
 import { SheetHand } from './sheets/sheet-hand';
 import { StopSheet } from './sheets/stop-sheet';
 import { ViewSheet } from './sheets/view-sheet';
@@ -59,6 +62,7 @@ import { TapGuard } from './tap-guard';
 import { Tones } from './tones';
 import { AwakeScreen } from './wake-lock';
 import { beadResult, lastDecision, walkedBefore } from './walked-steps';
+import { waysAhead } from './ways-ahead';
 
 /** A card laid over the step. */
 type Sheet =
@@ -94,6 +98,7 @@ const placeLostMs = 30_000;
     ResumeCard,
     RouteRibbon,
     RunHeaderBar,
+    SheetBody,
     SheetHand,
     StartEntry,
     StopRow,
@@ -161,9 +166,14 @@ export class RunPage {
     const step = this.step();
     return step === undefined || step.kind === 'finding' ? undefined : step.number;
   });
+  /** Where the step would lead by what is typed in it now; undefined while nothing is. */
+  protected readonly predicted = linkedSignal<number | undefined, string | undefined>({
+    source: () => this.run()?.state.seq,
+    computation: () => undefined,
+  });
   protected readonly ahead = computed(() => {
     const run = this.run();
-    return run === undefined ? [] : routeAhead(run.procedure, run.state);
+    return run === undefined ? [] : waysAhead(run, this.predicted());
   });
   protected readonly hasWay = computed(() => {
     const run = this.run();
@@ -172,6 +182,7 @@ export class RunPage {
   protected readonly connection = computed(() =>
     this.isPractice() ? 'Practice is not sent' : syncWords(this.sync.view()).text,
   );
+  protected readonly briefly = computed(() => (this.isPractice() ? 'not sent' : briefConnection(this.sync.view())));
   /** What lies over the step by the run's own state: it goes only when it is answered. */
   protected readonly takeover = computed<'limit' | 'stopped' | 'resume' | 'elsewhere' | undefined>(() => {
     const state = this.run()?.state;

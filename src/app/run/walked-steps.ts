@@ -34,3 +34,11 @@ export function lastDecision(run: Pick<RunView, 'procedure' | 'state'>): WalkedP
 export function valuesOf(state: Pick<RunState, 'values'>, stepId: string): readonly NamedValue[] {
   return Object.values(state.values).filter(({ step }) => step === stepId);
 }
+
+/** The value that was recorded last in the whole run. */
+export function latestValue(state: Pick<RunState, 'values'>): NamedValue | undefined {
+  return Object.values(state.values).reduce<NamedValue | undefined>(
+    (latest, value) => (latest === undefined || value.seq >= latest.seq ? value : latest),
+    undefined,
+  );
+}

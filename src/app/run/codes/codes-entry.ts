@@ -4,7 +4,6 @@ import type { TroubleCodeEntry } from '../../../../procedures/engine';
 import { BigAction } from '../frame/big-action';
 import { HandSide } from '../frame/hand-side';
 import { WideSide } from '../frame/wide-side';
-import { PrimaryButton } from '../primary-action';
 import { StepEntry } from '../step-entry';
 import { CodePad } from './code-pad';
 import { isWholeCode, typeCode } from './code-text';
@@ -14,7 +13,7 @@ type Status = TroubleCodeEntry['status'];
 /** Trouble codes with status and freeze frame, one by one, or none. */
 @Component({
   selector: 'bay-codes-entry',
-  imports: [BigAction, CodePad, HandSide, PrimaryButton, WideSide],
+  imports: [BigAction, CodePad, HandSide, WideSide],
   templateUrl: './codes-entry.html',
   styleUrl: './codes-entry.css',
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -33,7 +33,9 @@ import { PrimaryButton } from '../primary-action';
       white-space: pre-line;
     }
     button[aria-disabled='true'] {
-      border-style: solid;
+      background: var(--shade);
+      border-color: var(--edge);
+      color: var(--ink-2);
     }
     @media (max-width: 640px) {
       :host {

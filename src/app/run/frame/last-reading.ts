@@ -2,6 +2,7 @@ import { ChangeDetectionStrategy, Component, computed, input } from '@angular/co
 import { shownUnit } from '../../../../procedures/engine';
 import { ResultMark } from '../../shared/result-mark';
 import type { RunView } from '../run-view';
+import { latestValue } from '../walked-steps';
 
 /** The value that was recorded last, so that it is in sight on steps that read nothing. */
 @Component({
@@ -77,12 +78,7 @@ import type { RunView } from '../run-view';
 export class LastReading {
   readonly run = input.required<RunView>();
 
-  protected readonly last = computed(() =>
-    Object.values(this.run().state.values).reduce<RunView['state']['values'][string] | undefined>(
-      (latest, value) => (latest === undefined || value.seq >= latest.seq ? value : latest),
-      undefined,
-    ),
-  );
+  protected readonly last = computed(() => latestValue(this.run().state));
   protected readonly number = computed(() => {
     const step = this.last()?.step;
     return step === undefined ? '' : (this.run().procedure.step(step)?.number ?? step);

@@ -23,10 +23,13 @@ export class WideSide {
   /** Whether the step's own cautions are left out: the start card shows them one by one. */
   readonly hasOwnCautions = input(false);
 
+  /** Whether the room is needed for what happens now: the sentence stays, why gives way. */
+  readonly isUnderWay = input(false);
+
   protected readonly cautions = computed(() => (this.hasOwnCautions() ? [] : cautionsOf(this.run(), this.step())));
   protected readonly why = computed(() => {
     const { why } = this.step();
-    if (why === undefined) return undefined;
+    if (why === undefined || this.isUnderWay()) return undefined;
     const { procedure, state } = this.run();
     return renderTemplate(procedure, state, why);
   });

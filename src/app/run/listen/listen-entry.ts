@@ -10,7 +10,7 @@ import { StepEntry } from '../step-entry';
 import { FileTaking } from './file-taking';
 import { LiveControls } from './live-controls';
 import { MarkControls } from './mark-controls';
-import { seriesOfTakes } from './live-series';
+import { risesOf, seriesOfTakes } from './live-series';
 import { plotMarks } from './plot-marks';
 import type { ListenDone, SeriesTaken } from './listen-requests';
 
@@ -54,10 +54,14 @@ export class ListenEntry extends StepEntry<'listen'> {
       ? (this.kept() ?? { timeS: [], channels: [] })
       : seriesOfTakes(this.step(), this.run().state.current?.takes ?? {}),
   );
+  /** As it is drawn: absolute pressures by how far they rose, on one scale with the gauge. */
+  protected readonly drawn = computed(() => risesOf(this.series(), this.step()));
   protected readonly hasPlot = computed(() => this.series().timeS.length > 1);
   protected readonly marks = computed(() => plotMarks(this.run().state, this.step()));
   protected readonly names = computed(() =>
-    Object.fromEntries(this.step().channels.map(({ name, label }) => [name, label])),
+    Object.fromEntries(
+      this.step().channels.map(({ name, label, sense }) => [name, sense === 'absolute' ? `${label}, risen by` : label]),
+    ),
   );
   /** `towards 10 kPa, never over 34.5`: the target and the limit are told apart. */
   protected readonly aim = computed(() => {

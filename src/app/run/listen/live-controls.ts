@@ -98,6 +98,10 @@ export class LiveControls {
     this.record(raised(this.now() ?? '0', step, this.resolution()), this.seconds());
   }
 
+  protected takeBack(): void {
+    this.commanded.emit({ do: 'take-back', name: 'gauge', reason: 'slip of the finger' });
+  }
+
   protected mark(mark: MarkName): void {
     this.commanded.emit({ do: 'mark', mark, timeS: this.seconds(), by: 'tap' });
   }

@@ -1,6 +1,6 @@
 import type { ListenStep } from '../../../../procedures/document';
 import type { RunEvent, Take } from '../../../../procedures/engine';
-import { raised, riseRate, seriesOfTakes, stepsFor, timeBase, valueAt } from './live-series';
+import { raised, riseRate, risesOf, seriesOfTakes, stepsFor, timeBase, valueAt } from './live-series';
 
 const step: ListenStep = {
   id: 'raise',
@@ -39,6 +39,22 @@ describe('seriesOfTakes', () => {
 
   it('has no channel that was never typed', () => {
     expect(seriesOfTakes(step, {})).toEqual({ timeS: [], channels: [] });
+  });
+});
+
+describe('risesOf', () => {
+  it('counts absolute pressures from their first value, and leaves the gauge and gaps as they are', () => {
+    const series = {
+      timeS: [0, 1, 2],
+      channels: [
+        { name: 'gauge' as const, unit: 'kPa', values: [0, 0.5, 1] },
+        { name: 'manifold' as const, unit: 'kPa', values: [94, undefined, 95] },
+      ],
+    };
+    expect(risesOf(series, step).channels.map(({ values }) => values)).toEqual([
+      [0, 0.5, 1],
+      [0, undefined, 1],
+    ]);
   });
 });
 

@@ -39,6 +39,19 @@ export function seriesOfTakes(step: ListenStep, takes: Readonly<Record<string, r
   };
 }
 
+/** The series with each absolute channel counted from its own first value, so that all pressures are rises. */
+export function risesOf(series: Series, step: ListenStep): Series {
+  const absolute = new Set(step.channels.filter(({ sense }) => sense === 'absolute').map(({ name }) => name));
+  return {
+    ...series,
+    channels: series.channels.map((channel) => {
+      const first = channel.values.find((value) => value !== undefined);
+      if (first === undefined || !absolute.has(channel.name)) return channel;
+      return { ...channel, values: channel.values.map((value) => (value === undefined ? undefined : value - first)) };
+    }),
+  };
+}
+
 /** How much the tiles add to the gauge: its display's own step, about a half, and about a whole of its unit. */
 export function stepsFor(resolution: number): readonly number[] {
   if (resolution >= 1) return [resolution, 2 * resolution, 5 * resolution];

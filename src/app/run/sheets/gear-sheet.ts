@@ -4,12 +4,13 @@ import type { GearItem } from '../../core/wire';
 import { PrimaryButton } from '../primary-action';
 import type { RunProblem, RunView } from '../run-view';
 import { GearChoice } from '../start/gear-choice';
+import { SheetBody } from './sheet-body';
 import { SheetHand } from './sheet-hand';
 
 /** The run's instruments, each of which can be chosen anew: what was read before stays with the one it was read with. */
 @Component({
   selector: 'bay-gear-sheet',
-  imports: [GearChoice, PrimaryButton, SheetHand],
+  imports: [GearChoice, PrimaryButton, SheetBody, SheetHand],
   template: `
     <bay-sheet-hand>
       @if (need(); as need) {
@@ -26,15 +27,17 @@ import { SheetHand } from './sheet-hand';
           (goneWithout)="role.set(undefined)"
         />
       } @else {
-        <h2>Gear for this run</h2>
-        @if (problem(); as problem) {
-          <p class="error" role="alert">{{ problem.message }}</p>
-        }
-        @for (need of needs(); track need.role) {
-          <button type="button" class="need" (click)="role.set(need.role)">
-            <span>{{ need.label }}</span><b>{{ run().state.gear[need.role]?.label ?? 'none' }}</b>
-          </button>
-        }
+        <bay-sheet-body>
+          <h2>Gear for this run</h2>
+          @if (problem(); as problem) {
+            <p class="error" role="alert">{{ problem.message }}</p>
+          }
+          @for (need of needs(); track need.role) {
+            <button type="button" class="need" (click)="role.set(need.role)">
+              <span>{{ need.label }}</span><b>{{ run().state.gear[need.role]?.label ?? 'none' }}</b>
+            </button>
+          }
+        </bay-sheet-body>
         <button type="button" bayPrimary class="back" (click)="left.emit()">Back to the step</button>
       }
     </bay-sheet-hand>

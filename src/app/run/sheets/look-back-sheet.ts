@@ -9,13 +9,14 @@ import type { RunProblem, RunView } from '../run-view';
 import { beadResult, walkedBefore } from '../walked-steps';
 import { ReasonField } from './reason-field';
 import { recordedIn } from './recorded-in-step';
+import { SheetBody } from './sheet-body';
 import { SheetHand } from './sheet-hand';
 import { SheetWide } from './sheet-wide';
 
 /** An earlier step as it was left: nothing can be entered, and one control leads back. */
 @Component({
   selector: 'bay-look-back-sheet',
-  imports: [JudgedLine, PrimaryButton, ReasonField, ResultMark, SheetHand, SheetWide],
+  imports: [JudgedLine, PrimaryButton, ReasonField, ResultMark, SheetBody, SheetHand, SheetWide],
   templateUrl: './look-back-sheet.html',
   styleUrl: './look-back-sheet.css',
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -2,26 +2,29 @@ import { ChangeDetectionStrategy, Component, computed, input, output } from '@an
 import { clockTime } from '../../core/time-words';
 import { PrimaryButton } from '../primary-action';
 import type { RunView } from '../run-view';
+import { SheetBody } from './sheet-body';
 import { SheetHand } from './sheet-hand';
 
 /** What was taken apart or blocked in this run and is not yet put back. */
 @Component({
   selector: 'bay-open-list-sheet',
-  imports: [PrimaryButton, SheetHand],
+  imports: [PrimaryButton, SheetBody, SheetHand],
   template: `
     <bay-sheet-hand>
-      <h2>{{ items().length === 0 ? 'Nothing is disturbed' : 'Disturbed, not yet put back' }}</h2>
-      <ul>
-        @for (item of items(); track item.item) {
-          <li>
-            <b>{{ item.label }}</b>
-            <span>since step {{ item.number }}, {{ item.time }}</span>
-            <span>{{ item.restore }}</span>
-          </li>
-        } @empty {
-          <li class="none">Whatever a step takes apart or blocks stands here until it is back in its place.</li>
-        }
-      </ul>
+      <bay-sheet-body>
+        <h2>{{ items().length === 0 ? 'Nothing is disturbed' : 'Disturbed, not yet put back' }}</h2>
+        <ul>
+          @for (item of items(); track item.item) {
+            <li>
+              <b>{{ item.label }}</b>
+              <span>since step {{ item.number }}, {{ item.time }}</span>
+              <span>{{ item.restore }}</span>
+            </li>
+          } @empty {
+            <li class="none">Whatever a step takes apart or blocks stands here until it is back in its place.</li>
+          }
+        </ul>
+      </bay-sheet-body>
       <button type="button" bayPrimary (click)="left.emit()">Back to the step</button>
     </bay-sheet-hand>
   `,

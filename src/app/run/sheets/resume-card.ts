@@ -5,6 +5,7 @@ import { ResultMark } from '../../shared/result-mark';
 import { clockText, readHold, type ClocksNow } from '../hold-clock';
 import { PrimaryButton } from '../primary-action';
 import type { RunProblem, RunView } from '../run-view';
+import { latestValue, valuesOf } from '../walked-steps';
 import { SheetHand } from './sheet-hand';
 import { SheetWide } from './sheet-wide';
 
@@ -52,6 +53,13 @@ export class ResumeCard {
     if (walked === undefined || step === undefined) return undefined;
     return { step, walked, said: saidBy(this.state(), walked) };
   });
+  /** The value that was recorded last, where the step done last gave none. */
+  protected readonly lastValue = computed(() => {
+    const value = (this.last()?.said.values.length ?? 0) > 0 ? undefined : latestValue(this.state());
+    return value === undefined
+      ? undefined
+      : { value, number: this.run().procedure.step(value.step)?.number ?? value.step };
+  });
   protected readonly timer = computed(() => {
     const timer = this.state().current?.timer;
     if (timer === undefined || timer.ended) return undefined;
@@ -77,7 +85,7 @@ function lastDone(state: RunState): WalkedStep | undefined {
 /** What a walked step left behind: its values, or what was chosen in it. */
 function saidBy(state: RunState, { step }: WalkedStep): { values: readonly NamedValue[]; words: readonly string[] } {
   return {
-    values: Object.values(state.values).filter((value) => value.step === step),
+    values: valuesOf(state, step),
     words: [
       ...Object.values(state.choices).flatMap((choice) => (choice.step === step ? choice.labels : [])),
       ...Object.values(state.codes).flatMap((entry) =>

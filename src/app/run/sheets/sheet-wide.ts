@@ -8,12 +8,14 @@ import { ChangeDetectionStrategy, Component } from '@angular/core';
     :host {
       grid-area: wide;
       z-index: 4;
+      position: absolute;
+      inset: 0 0 14px;
       min-width: 0;
       min-height: 0;
       display: flex;
       flex-direction: column;
       gap: 14px;
-      padding: 16px 20px 8px 24px;
+      padding: 16px 20px 0 24px;
       background: var(--paper);
       overflow: auto;
       overscroll-behavior: contain;

@@ -4,12 +4,13 @@ import type { ThemeName } from '../../core/theme';
 import { ThemeSwitch } from '../../shared/theme-switch';
 import { PrimaryButton } from '../primary-action';
 import type { RunPreferencesRow } from '../run-preferences';
+import { SheetBody } from './sheet-body';
 import { SheetHand } from './sheet-hand';
 
 /** How the screens look and sound to this person, what is kept and sent, and the way to the Bench. */
 @Component({
   selector: 'bay-view-sheet',
-  imports: [PrimaryButton, SheetHand, ThemeSwitch],
+  imports: [PrimaryButton, SheetBody, SheetHand, ThemeSwitch],
   templateUrl: './view-sheet.html',
   styleUrl: './view-sheet.css',
   changeDetection: ChangeDetectionStrategy.OnPush,

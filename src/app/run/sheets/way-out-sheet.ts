@@ -5,6 +5,7 @@ import type { HonestWay } from '../frame/honest-ways';
 import { PrimaryButton } from '../primary-action';
 import type { RunProblem, RunView } from '../run-view';
 import { ReasonField } from './reason-field';
+import { SheetBody } from './sheet-body';
 import { SheetHand } from './sheet-hand';
 
 interface WayWords {
@@ -43,7 +44,7 @@ const words: Readonly<Record<HonestWay, WayWords>> = {
 /** One of the three honest ways out: what it leads to, a reason, and two controls, one of them back. */
 @Component({
   selector: 'bay-way-out-sheet',
-  imports: [PrimaryButton, ReasonField, SheetHand],
+  imports: [PrimaryButton, ReasonField, SheetBody, SheetHand],
   templateUrl: './way-out-sheet.html',
   styleUrl: './way-out-sheet.css',
   changeDetection: ChangeDetectionStrategy.OnPush,

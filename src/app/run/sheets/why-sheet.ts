@@ -4,6 +4,7 @@ import { PrimaryButton } from '../primary-action';
 import type { RunProblem, RunView } from '../run-view';
 import { lastDecision } from '../walked-steps';
 import { ReasonField } from './reason-field';
+import { SheetBody } from './sheet-body';
 import { SheetHand } from './sheet-hand';
 import { SheetWide } from './sheet-wide';
 
@@ -13,7 +14,7 @@ import { SheetWide } from './sheet-wide';
  */
 @Component({
   selector: 'bay-why-sheet',
-  imports: [PrimaryButton, ReasonField, SheetHand, SheetWide],
+  imports: [PrimaryButton, ReasonField, SheetBody, SheetHand, SheetWide],
   templateUrl: './why-sheet.html',
   styleUrl: './why-sheet.css',
   changeDetection: ChangeDetectionStrategy.OnPush,

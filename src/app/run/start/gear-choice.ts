@@ -39,6 +39,16 @@ export class GearChoice {
     this.facts().find(({ item }) => item.id === this.pickedId()),
   );
 
+  /** An overdue one that is picked stands alone with its reason; a second tap on it brings the others back. */
+  protected readonly offered = computed(() => {
+    const picked = this.picked();
+    return picked?.isOverdue === true ? [picked] : this.facts();
+  });
+
+  protected pick({ item, isOverdue }: GearFacts): void {
+    this.pickedId.update((id) => (isOverdue && id === item.id ? undefined : item.id));
+  }
+
   protected take(): void {
     const picked = this.picked();
     if (picked === undefined) return;

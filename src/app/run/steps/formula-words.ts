@@ -14,10 +14,20 @@ export function formulaParts(
   const names = new Set(procedure.expression(source).names);
   return source.split(/([A-Za-z][A-Za-z0-9]*)/).flatMap((text): readonly FormulaPart[] => {
     if (text === '') return [];
-    if (!names.has(text)) return [{ kind: 'text', text }];
+    if (!names.has(text)) return [{ kind: 'text', text: withRealSigns(text) }];
     const label = procedure.declared(text)?.label ?? text;
     const known = state.values[text] ?? state.inputs[text];
     const value = known === undefined ? undefined : `${known.text} ${shownUnit(known.unit)}`.trim();
     return [{ kind: 'value', name: text, label, value }];
   });
 }
+
+const signs: Readonly<Record<string, string>> = {
+  '-': '\u2212',
+  '*': '\u00d7',
+  '/': '\u00f7',
+  '<=': '\u2264',
+  '>=': '\u2265',
+};
+
+const withRealSigns = (text: string): string => text.replace(/<=|>=|[-*/]/g, (sign) => signs[sign] ?? sign);
