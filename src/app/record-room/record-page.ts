@@ -48,7 +48,7 @@ export class RecordPage {
   protected readonly tablets = computed(() => {
     const record = this.store.record();
     const devices = [...new Set((record?.events ?? []).map(({ device }) => device))];
-    return devices.map((device) => record?.tablets.find(({ id }) => id === device)?.label ?? device);
+    return devices.map((device) => tabletWords(record?.tablets.find(({ id }) => id === device)?.label ?? device));
   });
   protected readonly replay = computed(() => {
     const retold = this.store.retold();
@@ -88,3 +88,6 @@ export class RecordPage {
     element?.focus({ preventScroll: true });
   }
 }
+
+/** A label may say already that it is a tablet's. */
+const tabletWords = (label: string): string => (/^tablet\b/i.test(label) ? label : `tablet ${label}`);

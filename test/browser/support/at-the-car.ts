@@ -17,6 +17,8 @@ export interface Answers {
   /** Codes to be entered one by one: `P0068 stored`. */
   readonly codes?: Readonly<Record<string, readonly string[]>>;
   readonly listen?: (page: Page) => Promise<void>;
+  /** Called when a step is on the screen, its cautions acknowledged, before it is answered. */
+  readonly look?: (step: Step) => Promise<void>;
 }
 
 /** The step that the screen shows, told by its number in the header; its sentence must be the step's own. */
@@ -44,6 +46,7 @@ export async function walkTo(page: Page, number: string, answers: Answers): Prom
     const step = await shownStep(page);
     if (step.number === number) return;
     if (step.kind !== 'start') await acknowledge(page, step.cautions?.length ?? 0);
+    await answers.look?.(step);
     await answer(page, step, answers, left);
     await leftStep(page, step);
   }

@@ -10,7 +10,7 @@ export async function signIn(page: Page, name: string, password = 'ossenholt-dem
   await expect(page.locator('bay-top-bar')).toBeVisible();
 }
 
-/** Waits until the page's service worker controls it and everything is cached, so that the network may go. */
+/** Waits until the page's service worker controls it, all is cached and the procedures are there: the network may go. */
 export async function readyWithoutNetwork(page: Page): Promise<void> {
   await page.evaluate(async () => {
     await navigator.serviceWorker.ready;
@@ -21,6 +21,7 @@ export async function readyWithoutNetwork(page: Page): Promise<void> {
   await page.reload();
   await expect.poll(() => page.evaluate(() => navigator.serviceWorker.controller !== null)).toBe(true);
   await expect(page.getByText('Ready without network')).toBeVisible();
+  await expect(page.locator('bay-ready-list')).toContainText(/[1-9]\d* procedure/);
 }
 
 /** The typed part of a new visit; every field by its label. */
