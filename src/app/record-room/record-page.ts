@@ -4,6 +4,7 @@ import { RouterLink } from '@angular/router';
 import { liveRows } from '../core/live-rows';
 import { OfflineStore } from '../core/offline-store';
 import { LoadProblem } from '../shared/load-problem';
+import { unbroken } from '../shared/unbroken';
 import { ResultMark } from '../shared/result-mark';
 import { TopBar } from '../shared/top-bar';
 import { EventList } from './event-list';
@@ -68,7 +69,11 @@ export class RecordPage {
     if (replay === undefined || step?.kind !== 'finding') return undefined;
     const passage = [...replay.story.passages].reverse().find((candidate) => candidate.step === step);
     const said = passage?.lines.find((line) => line.kind === 'said' && line.type === 'finding-reached');
-    return { result: step.result, title: step.title, verdict: said?.kind === 'said' ? said.words : undefined };
+    return {
+      result: step.result,
+      title: step.title,
+      verdict: said?.kind === 'said' && said.words ? unbroken(said.words) : undefined,
+    };
   });
 
   constructor() {

@@ -2,6 +2,7 @@ import { ChangeDetectionStrategy, Component, computed, output, signal } from '@a
 import { renderTemplate } from '../../../../procedures/engine';
 import { ResultMark } from '../../shared/result-mark';
 import { BigAction } from '../frame/big-action';
+import { unbroken } from '../../shared/unbroken';
 import { HandSide } from '../frame/hand-side';
 import { PrimaryButton } from '../primary-action';
 import { JudgedLine } from '../readings/judged-line';
@@ -33,7 +34,7 @@ export class FindingEntry extends StepEntry<'finding'> {
 
   protected readonly verdict = computed(() => {
     const { procedure, state } = this.run();
-    return renderTemplate(procedure, state, this.step().verdict) ?? this.step().title;
+    return unbroken(renderTemplate(procedure, state, this.step().verdict) ?? this.step().title);
   });
   /** The judged numbers, and those that have no band, in the order in which they were measured. */
   protected readonly values = computed(() =>
