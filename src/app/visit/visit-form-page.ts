@@ -77,7 +77,7 @@ export class VisitFormPage {
       const id = this.id();
       untracked(() => void this.open(id));
     });
-    inject(DestroyRef).onDestroy(() => clearTimeout(this.timer));
+    inject(DestroyRef).onDestroy(() => void this.keepNow());
     this.form.valueChanges.subscribe(() => this.keepSoon());
   }
 
@@ -89,15 +89,18 @@ export class VisitFormPage {
     event.preventDefault();
     const areCodesTaken = this.codesField()?.take() ?? true;
     this.wantsAll.set(true);
-    if (!areCodesTaken || Object.keys(this.allProblems()).length > 0) return this.showFirstProblem();
+    if (!areCodesTaken || Object.keys(this.allProblems()).length > 0) {
+      await this.keepNow();
+      return this.showFirstProblem();
+    }
     this.phase.set('keeping');
-    clearTimeout(this.timer);
+    this.dropTimer();
     const visit = await this.desk.keep(this.id(), this.typed());
     await this.router.navigate(['/visit', visit.id], { replaceUrl: true });
   }
 
   protected async giveUp(): Promise<void> {
-    clearTimeout(this.timer);
+    this.dropTimer();
     await this.desk.forgetDraft(this.id());
     await this.router.navigateByUrl(this.id() === undefined ? '/' : `/visit/${this.id()}`);
   }
@@ -106,7 +109,7 @@ export class VisitFormPage {
     const draft = await this.desk.draft(id);
     if (draft === undefined) return this.phase.set('missing');
     this.form.setValue({ ...draft }, { emitEvent: true });
-    clearTimeout(this.timer);
+    this.dropTimer();
     this.phase.set('ready');
   }
 
@@ -116,7 +119,19 @@ export class VisitFormPage {
 
   private keepSoon(): void {
     clearTimeout(this.timer);
-    this.timer = setTimeout(() => void this.desk.keepDraft(this.id(), this.typed()), keepAfterMs);
+    this.timer = setTimeout(() => void this.keepNow(), keepAfterMs);
+  }
+
+  /** Keeps what was typed since it was last kept. */
+  private async keepNow(): Promise<void> {
+    if (this.timer === undefined) return;
+    this.dropTimer();
+    await this.desk.keepDraft(this.id(), this.typed());
+  }
+
+  private dropTimer(): void {
+    clearTimeout(this.timer);
+    this.timer = undefined;
   }
 
   private showFirstProblem(): void {
