@@ -16,7 +16,7 @@ import { compareCodes, type ComparedCode } from './code-comparison';
             <th>Code</th>
             <th>Before</th>
             <th>After</th>
-            <th></th>
+            <th><span class="visually-hidden">What changed</span></th>
           </tr>
         </thead>
         <tbody>

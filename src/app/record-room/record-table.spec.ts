@@ -39,7 +39,7 @@ describe('the table of records', () => {
   afterEach(() => jest.restoreAllMocks());
 
   const root = (): HTMLElement => fixture.nativeElement as HTMLElement;
-  const list = (): HTMLElement => byRole(root(), 'rowgroup');
+  const list = (): HTMLElement => byRole(root(), 'grid');
   async function press(...keys: string[]): Promise<void> {
     for (const key of keys)
       list().dispatchEvent(new KeyboardEvent('keydown', { key, bubbles: true, cancelable: true }));
@@ -82,6 +82,13 @@ describe('the table of records', () => {
     byRole(root(), 'button', 'Car').click();
     expect(sorts).toEqual(['car', 'openedAt', '-car']);
     expect(byRole(root(), 'columnheader', 'Car').getAttribute('aria-sort')).toBe('ascending');
+  });
+
+  it('leaves the keys of a column’s button to the button', async () => {
+    const button = byRole(root(), 'button', 'Car');
+    button.dispatchEvent(new KeyboardEvent('keydown', { key: 'Enter', bubbles: true, cancelable: true }));
+    await fixture.whenStable();
+    expect(opened).toEqual([]);
   });
 
   it('starts from the top again with a new question, not with a page that comes', async () => {

@@ -6,6 +6,7 @@ import {
   Component,
   computed,
   DestroyRef,
+  type ElementRef,
   inject,
   input,
   linkedSignal,
@@ -62,6 +63,7 @@ export class RecordTable {
   readonly sortChange = output<RecordSort>();
   readonly shown = output<ShownRange>();
 
+  private readonly grid = viewChild.required<ElementRef<HTMLElement>>('grid');
   private readonly viewport = viewChild.required(CdkVirtualScrollViewport);
 
   protected readonly current = linkedSignal<unknown, number>({ source: this.question, computation: () => 0 });
@@ -96,7 +98,7 @@ export class RecordTable {
 
   /** Puts the keyboard on the list. */
   focus(): void {
-    this.viewport().elementRef.nativeElement.focus();
+    this.grid().nativeElement.focus();
   }
 
   protected sortBy(column: RecordColumn): void {
@@ -108,6 +110,8 @@ export class RecordTable {
   }
 
   protected move(event: KeyboardEvent): void {
+    // The columns' buttons lie in here too, and have keys of their own.
+    if (event.target instanceof Element && event.target.closest('button') !== null) return;
     const last = this.rows().length - 1;
     const page = Math.max(1, Math.floor(this.viewport().getViewportSize() / this.rowHeight()) - 1);
     const current = this.current();
