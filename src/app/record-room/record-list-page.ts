@@ -47,6 +47,7 @@ export class RecordListPage {
   );
   protected readonly countText = computed(() => {
     const total = this.store.total();
+    if (this.store.status() === 'failed') return '';
     if (total === undefined) return 'Looking';
     return `${total.toLocaleString('en-GB')} ${total === 1 ? 'record' : 'records'}`;
   });

@@ -157,6 +157,8 @@ describe('the page of one record', () => {
     await show({ ...detail, events: changed });
     expect(textOf(root())).toContain('Chain broken at event 31');
     expect(allByRole(root(), 'alert').map(textOf).join(' ')).toContain('The replay ends before event 31');
+    expect(textOf(root())).toContain('told up to event 30 only');
+    expect(textOf(root())).not.toContain('No finding yet');
   });
 
   it('refuses to replay on another procedure than the one that the run was opened on', async () => {

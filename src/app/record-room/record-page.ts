@@ -59,6 +59,11 @@ export class RecordPage {
     const retold = this.store.retold();
     return retold?.ok === false ? retold.why : undefined;
   });
+  /** The last event that could be replayed, where the replay broke off. */
+  protected readonly toldThrough = computed(() => {
+    const end = this.replay()?.story.brokenOff;
+    return end === undefined ? undefined : end.seq - 1;
+  });
   protected readonly stationKpa = computed(() => {
     const station = this.replay()?.state.values['stationPressure'];
     return station === undefined ? undefined : station.value / 1000;

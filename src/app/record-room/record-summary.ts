@@ -17,6 +17,8 @@ export class RecordSummary {
   readonly procedure = input.required<PublishedProcedure>();
   /** The tablets that wrote, in their order. */
   readonly tablets = input.required<readonly string[]>();
+  /** The last event that could be replayed, where the replay broke off before the end. */
+  readonly toldThrough = input<number>();
   /** When the server got the first of it. */
   readonly receivedAt = input<string | number>();
 
@@ -30,6 +32,10 @@ export class RecordSummary {
   });
   protected readonly when = computed(() => {
     const { openedAt, lastAt, status } = this.state();
+    const told = this.toldThrough();
+    if (told !== undefined) {
+      return { day: dayText(openedAt), opened: `opened ${clockTime(openedAt)}`, end: `told up to event ${told} only` };
+    }
     const isOver = status === 'closed' || status === 'signed';
     const end = isOver ? `closed ${clockTime(lastAt)}, ${durationText(lastAt - openedAt)}` : statusWords[status];
     return { day: dayText(openedAt), opened: `opened ${clockTime(openedAt)}`, end };
