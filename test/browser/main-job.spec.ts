@@ -98,7 +98,7 @@ test('one job from the visit to the Record room, with the network cut and the br
   await expect(page.getByRole('heading', { name: /The manifold valve seals at 3\.\d ± 0\.\d kPa/ })).toBeVisible();
   await closeRun(page);
   const onTablet = (await eventsOnTablet(page, runId)) as unknown as RunEvent[];
-  expect(await rowsOf(product.databaseUrl, 'SELECT run_id FROM run')).toEqual([]);
+  expect(await rowsOf(product.databaseUrl, 'SELECT run_id FROM run WHERE run_id = $1', [runId])).toEqual([]);
 
   // Back on the network it syncs by itself.
   await product.start();

@@ -1,8 +1,11 @@
 import type { Page } from '@playwright/test';
+import { headerHash, type RunHeader } from '../../procedures/engine';
 import { tap, walkTo, type Answers } from './support/at-the-car';
+import { practiceSeen, watchPractice } from './support/practice-edge';
+import { pushByHand } from './support/push-by-hand';
 import { expect, test } from './support/test';
-import { readyWithoutNetwork, signIn } from './support/visits';
-import { rowsOf } from './support/what-is-kept';
+import { readyWithoutNetwork, signIn, signOut } from './support/visits';
+import { eventsOnTablet, rowsOf, storedOnTablet } from './support/what-is-kept';
 
 /** Takes the ramp that the bench offers, and says that the noise never stopped. */
 async function listenToTheBench(page: Page): Promise<void> {
@@ -43,10 +46,15 @@ test('an apprentice finds a planted fault without a network, is told so, and not
   await expect(page.locator('bay-practice-bay-page')).toHaveClass(/practice-edge/);
   await page.getByRole('button', { name: /Start\s+A cold morning, hissing somewhere/ }).click();
   await expect(page.locator('bay-run-header')).toContainText('Practice');
-  await expect(page.locator('.practice-edge')).toBeVisible();
+  await watchPractice(page);
+  const runId = new URL(page.url()).pathname.split('/').at(-1) ?? '';
 
   await walkTo(page, '5', coldMorning);
   await expect(page.getByRole('region', { name: 'What the bench shows' })).toContainText('94.0 kPa');
+  await tap(page.getByRole('button', { name: 'nothing disturbed' }));
+  await tap(page.getByRole('button', { name: 'Back to the step' }));
+  await tap(page.getByRole('button', { name: 'Stop, supply off' }));
+  await tap(page.getByRole('button', { name: 'Back to step 5' }));
   await walkTo(page, 'the end', coldMorning);
   for (const name of [/Keep the write-up/, /To the closing/, 'Close the run', 'To the debrief']) {
     await tap(page.getByRole('button', { name }));
@@ -58,8 +66,38 @@ test('an apprentice finds a planted fault without a network, is told so, and not
   await page.getByRole('link', { name: 'Back to the Practice bay' }).click();
   await expect(page.getByText('tried once, found once')).toBeVisible();
 
+  const { screens, unmarked } = await practiceSeen(page);
+  expect(unmarked).toEqual([]);
+  for (const seen of [/^Step 2d.* bay-caution-gate$/, /^Step 5.* bay-stop-sheet$/, /^Step 11 /, /^Step 17b /]) {
+    expect(screens).toContainEqual(expect.stringMatching(seen));
+  }
+
   await context.setOffline(false);
   await page.goto('/');
   await expect(page.getByText(/All sent/)).toBeVisible({ timeout: 30_000 });
-  expect(await rowsOf(product.databaseUrl, 'SELECT run_id FROM run')).toEqual([]);
+  await nothingOfItIsWork(page, product.databaseUrl, runId);
 });
+
+/** Its own store holds it, as practice; the outbox, the server and the Record room do not, not even by hand. */
+async function nothingOfItIsWork(page: Page, databaseUrl: string, runId: string): Promise<void> {
+  const rows = await storedOnTablet(page, 'runs', 'bayhand-practice');
+  const header = rows.find((row) => row['runId'] === runId)?.['header'] as RunHeader;
+  const events = await eventsOnTablet(page, runId, 'bayhand-practice');
+  expect(header.kind).toBe('practice');
+  expect(events[0]?.['prev']).toBe(headerHash(header));
+  for (const store of ['outbox', 'runs', 'events', 'blobs']) expect(await storedOnTablet(page, store)).toEqual([]);
+
+  const [refused] = await pushByHand(page, 'brandt', { header, events });
+  expect(refused).toMatchObject({ runId, acceptedThrough: 0, problem: { code: 'practice', status: 422 } });
+  const [disguised] = await pushByHand(page, 'brandt', { header: { ...header, kind: 'real' }, events });
+  expect(disguised).toMatchObject({ runId, acceptedThrough: 0, problem: { code: 'broken-chain' } });
+  for (const table of ['run', 'run_event']) {
+    expect(await rowsOf(databaseUrl, `SELECT run_id FROM ${table} WHERE run_id = $1`, [runId])).toEqual([]);
+  }
+
+  await signOut(page, 'T. Brandt');
+  await signIn(page, 'lindqvist');
+  await page.goto('/records');
+  await page.getByRole('searchbox', { name: /^Find by order/ }).fill('PRACTICE-2');
+  await expect(page.getByRole('heading', { name: 'No record fits' })).toBeVisible();
+}

@@ -10,6 +10,13 @@ export async function signIn(page: Page, name: string, password = 'ossenholt-dem
   await expect(page.locator('bay-top-bar')).toBeVisible();
 }
 
+/** Signs out from the person's menu, which every page but a run's has. */
+export async function signOut(page: Page, displayName: string): Promise<void> {
+  await page.getByRole('button', { name: displayName }).click();
+  await page.getByRole('button', { name: 'Sign out' }).click();
+  await expect(page.getByRole('heading', { name: 'Sign in' })).toBeVisible();
+}
+
 /** Waits until the page's service worker controls it, all is cached and the procedures are there: the network may go. */
 export async function readyWithoutNetwork(page: Page): Promise<void> {
   await page.evaluate(async () => {

@@ -1,25 +1,38 @@
 import type { Page } from '@playwright/test';
 import { Client } from 'pg';
 
-/** What the tablet's own store holds of a run, read past the app. */
-export async function eventsOnTablet(page: Page, runId: string): Promise<readonly Record<string, unknown>[]> {
+/** What the tablet's own store holds of a run, read past the app; a practice run is in `bayhand-practice`. */
+export async function eventsOnTablet(
+  page: Page,
+  runId: string,
+  database = 'bayhand',
+): Promise<readonly Record<string, unknown>[]> {
+  const events = await storedOnTablet(page, 'events', database);
+  return events.filter((event) => event['runId'] === runId).sort((a, b) => Number(a['seq']) - Number(b['seq']));
+}
+
+/** Every row of one of the tablet's own stores, read past the app. */
+export async function storedOnTablet(
+  page: Page,
+  store: string,
+  database = 'bayhand',
+): Promise<Record<string, unknown>[]> {
   return page.evaluate(
-    async ({ database, id }) => {
+    async ({ database, store }) => {
       const open = indexedDB.open(database);
-      const store = await new Promise<IDBDatabase>((resolve, reject) => {
+      const opened = await new Promise<IDBDatabase>((resolve, reject) => {
         open.onsuccess = () => resolve(open.result);
         open.onerror = () => reject(open.error);
       });
-      const range = IDBKeyRange.bound([id, 0], [id, Number.MAX_SAFE_INTEGER]);
-      const request = store.transaction('events').objectStore('events').getAll(range);
+      const request = opened.transaction(store).objectStore(store).getAll();
       const rows = await new Promise<Record<string, unknown>[]>((resolve, reject) => {
         request.onsuccess = () => resolve(request.result as Record<string, unknown>[]);
         request.onerror = () => reject(request.error);
       });
-      store.close();
+      opened.close();
       return rows;
     },
-    { database: 'bayhand', id: runId },
+    { database, store },
   );
 }
 
