@@ -25,6 +25,10 @@ import { ChangeDetectionStrategy, Component, input, output } from '@angular/core
       min-width: 0;
       padding: 0 20px var(--foot-edge) 24px;
     }
+    /* Always at the far side of the hand that taps. */
+    :host-context([data-hand='left']) {
+      flex-direction: row-reverse;
+    }
     button {
       min-height: var(--touch);
     }
