@@ -19,7 +19,12 @@ export function hasButton(fixture: ComponentFixture<unknown>, name: string): boo
   );
 }
 
-/** All text, blanks folded. */
-export const textOf = (fixture: ComponentFixture<unknown>): string => tidy(elementOf(fixture).textContent);
+/** All text, piece by piece with one blank between. */
+export function textOf(fixture: ComponentFixture<unknown>): string {
+  const walker = document.createTreeWalker(elementOf(fixture), NodeFilter.SHOW_TEXT);
+  const pieces: string[] = [];
+  while (walker.nextNode()) pieces.push(tidy(walker.currentNode.textContent));
+  return pieces.filter((piece) => piece !== '').join(' ');
+}
 
 const tidy = (text: string | null): string => (text ?? '').replace(/\s+/g, ' ').trim();

@@ -1,0 +1,116 @@
+import { TestBed, type ComponentFixture } from '@angular/core/testing';
+import type { RunCommand } from '../../../../procedures/engine';
+import type { RunWalk } from '../../../../procedures/engine/testing/run-walk';
+import { stepOf, viewOf, walkedTo } from '../testing/run-for-specs';
+import { buttonNamed, elementOf, hasButton, textOf } from '../testing/shown-page';
+import type { ListenDone } from './listen-requests';
+import { LiveControls } from './live-controls';
+import { seriesOfTakes } from './live-series';
+
+interface Shown {
+  readonly walk: RunWalk;
+  readonly fixture: ComponentFixture<LiveControls>;
+  readonly commands: RunCommand[];
+  readonly done: ListenDone[];
+  /** Sets the run's monotonic time, seconds after the first point. */
+  at(seconds: number): void;
+}
+
+async function shown(): Promise<Shown> {
+  const walk = walkedTo('raise-and-listen');
+  const fixture = TestBed.createComponent(LiveControls);
+  const commands: RunCommand[] = [];
+  const done: ListenDone[] = [];
+  let seconds = 0;
+  fixture.componentInstance.commanded.subscribe((command) => commands.push(command));
+  fixture.componentInstance.finished.subscribe((request) => done.push(request));
+  fixture.componentRef.setInput('aim', { label: 'Gauge', unit: 'kPa', target: 10, ceiling: '34.5' });
+  fixture.componentRef.setInput('elapsed', () => (walk.events.length + 1) * 1000 + seconds * 1000);
+  await refresh(fixture, walk);
+  const first = walk.events.length + 1;
+  fixture.componentRef.setInput('elapsed', () => first * 1000 + seconds * 1000);
+  return { walk, fixture, commands, done, at: (s) => (seconds = s) };
+}
+
+async function refresh(fixture: ComponentFixture<LiveControls>, walk: RunWalk): Promise<void> {
+  const step = stepOf(walk, 'listen');
+  fixture.componentRef.setInput('run', viewOf(walk));
+  fixture.componentRef.setInput('step', step);
+  fixture.componentRef.setInput('series', seriesOfTakes(step, walk.state.current?.takes ?? {}));
+  await fixture.whenStable();
+}
+
+/** Taps a button and lets the run do what it asks for. */
+async function tap({ walk, fixture, commands }: Shown, name: string): Promise<void> {
+  buttonNamed(fixture, name).click();
+  const command = commands.at(-1);
+  if (command !== undefined) walk.do(command);
+  await refresh(fixture, walk);
+}
+
+describe('LiveControls', () => {
+  it('begins at zero, and then takes one point a tap with its time', async () => {
+    const page = await shown();
+    await tap(page, 'Gauge at zero: begin to raise');
+    expect(page.commands.at(-1)).toEqual({ do: 'record', name: 'gauge', text: '0.0', unit: 'kPa', timeS: 0 });
+    page.at(4.2);
+    await tap(page, '+ 0.5');
+    expect(page.commands.at(-1)).toEqual({ do: 'record', name: 'gauge', text: '0.5', unit: 'kPa', timeS: 4.2 });
+    expect(elementOf(page.fixture).querySelector('.figure .num')?.textContent).toBe('0.5');
+  });
+
+  it('marks where the noise begins and where it stops, then judges the seal point', async () => {
+    const page = await shown();
+    await tap(page, 'Gauge at zero: begin to raise');
+    page.at(5);
+    await tap(page, '+ 1');
+    await tap(page, 'The noise begins');
+    for (const second of [10, 15, 20]) {
+      page.at(second);
+      await tap(page, '+ 1');
+    }
+    page.at(22);
+    await tap(page, 'The noise stopped');
+    expect(page.commands.at(-1)).toEqual({ do: 'mark', mark: 'noise-stops', timeS: 22, by: 'tap' });
+    expect(textOf(page.fixture)).toContain('Raise on, and tap one more point');
+    expect(buttonNamed(page.fixture, 'Keep the mark and go on').getAttribute('aria-disabled')).toBe('true');
+    page.at(25);
+    await tap(page, '+ 1');
+    expect(textOf(page.fixture)).toMatch(/Seal point 4\.\d ± \d\.\d kPa/);
+    buttonNamed(page.fixture, 'Keep the mark and go on').click();
+    expect(page.done).toMatchObject([{ marks: [], series: { timeS: [0, 5, 10, 15, 20, 25] } }]);
+  });
+
+  it('takes a mark away again', async () => {
+    const page = await shown();
+    await tap(page, 'Gauge at zero: begin to raise');
+    page.at(3);
+    await tap(page, 'The noise begins');
+    await tap(page, 'Take the mark away');
+    expect(page.walk.state.series['listening']?.marks ?? {}).toEqual({});
+    expect(hasButton(page.fixture, 'The noise begins')).toBe(true);
+  });
+
+  it('takes the last point back', async () => {
+    const page = await shown();
+    await tap(page, 'Gauge at zero: begin to raise');
+    page.at(4);
+    await tap(page, '+ 1');
+    await tap(page, 'Take back');
+    expect(page.commands.at(-1)).toMatchObject({ do: 'take-back', name: 'gauge' });
+    expect(elementOf(page.fixture).querySelector('.figure .num')?.textContent).toBe('0.0');
+  });
+
+  it('does not take no noise, or one that never stopped, before there is a ramp', async () => {
+    const page = await shown();
+    await tap(page, 'Gauge at zero: begin to raise');
+    expect(buttonNamed(page.fixture, 'No noise at all').disabled).toBe(true);
+    page.at(4);
+    await tap(page, '+ 1');
+    page.at(8);
+    await tap(page, '+ 1');
+    buttonNamed(page.fixture, 'No noise at all').click();
+    buttonNamed(page.fixture, 'It never stopped').click();
+    expect(page.done).toMatchObject([{ marks: [] }, { marks: [{ mark: 'noise-begins', timeS: 0, by: 'tap' }] }]);
+  });
+});
