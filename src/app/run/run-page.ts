@@ -22,6 +22,7 @@ import { RouteRibbon } from '../shared/route-ribbon';
 import { syncWords } from '../shared/sync-words';
 import { briefConnection } from './brief-connection';
 import { CodesEntry } from './codes/codes-entry';
+import { EntryDraft } from './entry-draft';
 import { FindingEntry } from './finding/finding-entry';
 import { CautionGate } from './frame/caution-gate';
 import { HandSide } from './frame/hand-side';
@@ -108,7 +109,7 @@ const placeLostMs = 30_000;
     WhySheet,
     WideSide,
   ],
-  providers: [AwakeScreen, ListenFlow, PrimaryAction, RunGear, RunStore],
+  providers: [AwakeScreen, EntryDraft, ListenFlow, PrimaryAction, RunGear, RunStore],
   templateUrl: './run-page.html',
   styleUrl: './run-page.css',
   host: { '(window:keydown)': 'pedal($event)' },
@@ -122,6 +123,7 @@ export class RunPage {
   protected readonly holding = inject(HandSetting);
   protected readonly theme = inject(Theme);
   protected readonly gear = inject(RunGear);
+  protected readonly draft = inject(EntryDraft);
   private readonly primary = inject(PrimaryAction);
   private readonly tones = inject(Tones);
   private readonly sync = inject(Sync);
@@ -286,7 +288,10 @@ export class RunPage {
     this.sheet.set(undefined);
     const tone = after === undefined ? undefined : toneAfter(before, after);
     if (tone !== undefined) this.tones.play(tone);
-    if (after?.status === 'closed') void this.sync.soon();
+    if (after?.status === 'closed') {
+      this.sync.soon();
+      void this.draft.forget();
+    }
   }
 
   private noteVisibility(): void {

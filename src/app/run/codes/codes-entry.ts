@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, computed, linkedSignal, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, input, linkedSignal, output, signal } from '@angular/core';
 import { describeTroubleCode } from '../../../../procedures/calculations';
 import type { TroubleCodeEntry } from '../../../../procedures/engine';
 import { BigAction } from '../frame/big-action';
@@ -19,11 +19,13 @@ type Status = TroubleCodeEntry['status'];
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class CodesEntry extends StepEntry<'codes'> {
+  /** The list as it was left by a reload in the midst of it. */
+  readonly draft = input<unknown>();
+  /** The list as it stands now. */
+  readonly drafted = output<readonly TroubleCodeEntry[]>();
+
   private readonly claim = computed(() => this.run().state.current?.claimedSeq);
-  protected readonly codes = linkedSignal<number | undefined, readonly TroubleCodeEntry[]>({
-    source: this.claim,
-    computation: () => [],
-  });
+  protected readonly codes = computed<readonly TroubleCodeEntry[]>(() => codesIn(this.draft()));
   /** The code that is being entered; undefined while the list is shown. */
   protected readonly text = linkedSignal<number | undefined, string | undefined>({
     source: this.claim,
@@ -65,15 +67,19 @@ export class CodesEntry extends StepEntry<'codes'> {
     if (code === undefined) return;
     const freezeFrame = this.freezeFrame().trim();
     const entry = { code, status: this.status(), ...(freezeFrame === '' ? {} : { freezeFrame }) };
-    this.codes.update((codes) => [...codes.filter((other) => other.code !== code), entry]);
+    this.drafted.emit([...this.codes().filter((other) => other.code !== code), entry]);
     this.text.set(undefined);
   }
 
   protected remove(code: string): void {
-    this.codes.update((codes) => codes.filter((other) => other.code !== code));
+    this.drafted.emit(this.codes().filter((other) => other.code !== code));
   }
 
   protected record(): void {
     this.commanded.emit({ do: 'record-codes', codes: this.codes() });
   }
+}
+
+function codesIn(draft: unknown): readonly TroubleCodeEntry[] {
+  return Array.isArray(draft) ? (draft as readonly TroubleCodeEntry[]) : [];
 }

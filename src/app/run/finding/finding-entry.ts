@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, computed, output, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, input, output, signal } from '@angular/core';
 import { renderTemplate } from '../../../../procedures/engine';
 import { ResultMark } from '../../shared/result-mark';
 import { BigAction } from '../frame/big-action';
@@ -9,7 +9,7 @@ import { JudgedLine } from '../readings/judged-line';
 import { SheetWide } from '../sheets/sheet-wide';
 import { StepEntry } from '../step-entry';
 import { RestoreList } from '../steps/restore-list';
-import { draftOf, isKept, partWords, type WriteUpPartName } from './write-up-draft';
+import { draftOf, editsIn, isKept, partWords, type WriteUpEdits, type WriteUpPartName } from './write-up-draft';
 
 type Stage = 'write-up' | 'close';
 
@@ -25,12 +25,16 @@ type Stage = 'write-up' | 'close';
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class FindingEntry extends StepEntry<'finding'> {
+  /** What was edited before a reload. */
+  readonly draft = input<unknown>();
+  /** What is edited now. */
+  readonly drafted = output<WriteUpEdits>();
   readonly leftForBench = output();
 
   protected readonly words = partWords;
   protected readonly stage = signal<Stage>('write-up');
   protected readonly editing = signal<WriteUpPartName | undefined>(undefined);
-  private readonly edits = signal<Readonly<Partial<Record<WriteUpPartName, string>>>>({});
+  private readonly edits = computed<WriteUpEdits>(() => editsIn(this.draft()));
 
   protected readonly verdict = computed(() => {
     const { procedure, state } = this.run();
@@ -42,9 +46,9 @@ export class FindingEntry extends StepEntry<'finding'> {
       .filter(({ judgement }) => judgement !== undefined)
       .sort((a, b) => a.seq - b.seq),
   );
-  protected readonly draft = computed(() => draftOf(this.run(), this.edits()));
-  protected readonly edited = computed(() => this.draft().find(({ name }) => name === this.editing()));
-  protected readonly isKept = computed(() => isKept(this.run(), this.draft()));
+  protected readonly parts = computed(() => draftOf(this.run(), this.edits()));
+  protected readonly edited = computed(() => this.parts().find(({ name }) => name === this.editing()));
+  protected readonly isKept = computed(() => isKept(this.run(), this.parts()));
   protected readonly disturbed = computed(() => this.run().state.disturbed);
   protected readonly isPractice = computed(() => this.run().header.kind === 'practice');
   protected readonly isClosed = computed(() => ['closed', 'signed'].includes(this.run().state.status));
@@ -62,7 +66,7 @@ export class FindingEntry extends StepEntry<'finding'> {
   });
 
   protected edit(name: WriteUpPartName, text: string): void {
-    this.edits.update((edits) => ({ ...edits, [name]: text }));
+    this.drafted.emit({ ...this.edits(), [name]: text });
   }
 
   protected restoreComposed(name: WriteUpPartName, composed: string): void {
@@ -70,7 +74,7 @@ export class FindingEntry extends StepEntry<'finding'> {
   }
 
   protected keep(): void {
-    const text = (name: WriteUpPartName): string => this.draft().find((part) => part.name === name)?.text ?? '';
+    const text = (name: WriteUpPartName): string => this.parts().find((part) => part.name === name)?.text ?? '';
     this.commanded.emit({
       do: 'keep-write-up',
       concern: text('concern'),

@@ -11,6 +11,14 @@ export const partWords: Readonly<Record<WriteUpPartName, string>> = {
   customer: 'For the customer',
 };
 
+/** What a person wrote instead of what the record composes. */
+export type WriteUpEdits = Readonly<Partial<Record<WriteUpPartName, string>>>;
+
+/** The edits of a kept draft, or none. */
+export function editsIn(draft: unknown): WriteUpEdits {
+  return typeof draft === 'object' && draft !== null && !Array.isArray(draft) ? (draft as WriteUpEdits) : {};
+}
+
 /** One part as it stands: the text, what the record itself gives, and whether the two differ. */
 export interface DraftPart {
   readonly name: WriteUpPartName;
@@ -22,7 +30,7 @@ export interface DraftPart {
 /** The write-up: what was edited here over what was kept over what the record composes. */
 export function draftOf(
   { procedure, state }: Pick<RunView, 'procedure' | 'state'>,
-  edits: Readonly<Partial<Record<WriteUpPartName, string>>>,
+  edits: WriteUpEdits,
 ): readonly DraftPart[] {
   const composed = composeWriteUp(procedure, state);
   return writeUpParts.map((name) => {

@@ -2,6 +2,7 @@ import { ChangeDetectionStrategy, Component, computed, input } from '@angular/co
 import type { Step } from '../../../../procedures/document';
 import { renderTemplate } from '../../../../procedures/engine';
 import { CautionPanel } from '../../shared/caution-panel';
+import { BenchSheet } from '../../shared/practice/bench-sheet';
 import type { RunView } from '../run-view';
 import { cautionsOf } from '../step-cautions';
 import { StepPictureView } from './step-picture-view';
@@ -12,7 +13,7 @@ import { StepPictureView } from './step-picture-view';
  */
 @Component({
   selector: 'bay-wide-side',
-  imports: [CautionPanel, StepPictureView],
+  imports: [BenchSheet, CautionPanel, StepPictureView],
   templateUrl: './wide-side.html',
   styleUrl: './wide-side.css',
   changeDetection: ChangeDetectionStrategy.OnPush,
