@@ -35,6 +35,10 @@ export class DraftSummary {
   @IsUUID()
   declare id: string;
 
+  /** The document's own, which may be another than that of the versions. */
+  @IsString()
+  declare title: string;
+
   @IsISO8601()
   declare importedAt: string;
 

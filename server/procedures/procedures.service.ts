@@ -56,6 +56,7 @@ export class ProceduresService {
     const document = JSON.parse(draft.document) as ProcedureDocument;
     return {
       id: draft.id,
+      title: draft.title,
       procedureId: draft.procedureId,
       importedAt: draft.importedAt.toISOString(),
       importedBy: importer?.displayName ?? '',

@@ -61,5 +61,11 @@ function versionSummary(row: VersionRow): VersionSummary {
 
 function draftSummary(row: DraftRow): NonNullable<ProcedureSummary['draft']> {
   const problems = publishingProblems(JSON.parse(row.document) as ProcedureDocument);
-  return { id: row.id, importedAt: row.imported_at.toISOString(), importedBy: row.imported_by, problems };
+  return {
+    id: row.id,
+    title: row.title,
+    importedAt: row.imported_at.toISOString(),
+    importedBy: row.imported_by,
+    problems,
+  };
 }

@@ -34,7 +34,10 @@ it('lists what the demo begins with', async () => {
 it('keeps a document as a draft, publishes it once, then as a further version', async () => {
   const draft = await importDraft(smallProcedure);
   expect(draft).toMatchObject({ status: 201, json: { procedureId: 'small-check', problems: [] } });
-  expect(await summary()).toMatchObject({ versions: [], draft: { id: draft.json.id, importedBy: 'R. Adeyemi' } });
+  expect(await summary()).toMatchObject({
+    versions: [],
+    draft: { id: draft.json.id, title: smallProcedure.title, importedBy: 'R. Adeyemi' },
+  });
   const published = await publish(draft.json.id);
   expect(published.status).toBe(201);
   expect(published.json).toEqual({
@@ -59,6 +62,7 @@ it('gives the lead a draft to read, until it is published', async () => {
   const read = () => server.ask('GET', `/api/procedures/drafts/${json.id}`, { as: 'adeyemi' });
   expect((await read()).json).toEqual({
     id: json.id,
+    title: smallProcedure.title,
     procedureId: 'small-check',
     importedAt: server.now.toISOString(),
     importedBy: 'R. Adeyemi',

@@ -19,7 +19,13 @@ const version = (number: number, status: 'published' | 'withdrawn') => ({
   publishedBy: 'R. Adeyemi',
   contentHash: hash,
 });
-const draft = { id: 'draft-1', importedAt: new Date(startOfDay).toISOString(), importedBy: 'R. Adeyemi', problems: [] };
+const draft = {
+  id: 'draft-1',
+  title: 'Crankcase valve seal, better',
+  importedAt: new Date(startOfDay).toISOString(),
+  importedBy: 'R. Adeyemi',
+  problems: [],
+};
 const listed = {
   id,
   title: 'Crankcase valve seal',
@@ -142,7 +148,7 @@ describe('the Method desk', () => {
     await settle();
     await answer('POST', '/api/procedures/drafts/draft-1/publication', { id, version: 5 }, 201);
     await showList();
-    expect(textOf(byRole(root(), 'status', 'published as version 5'))).toContain('Crankcase valve seal');
+    expect(textOf(byRole(root(), 'status', 'published as version 5'))).toContain('Crankcase valve seal, better');
   });
 
   it('publishes nothing when it is not confirmed', async () => {

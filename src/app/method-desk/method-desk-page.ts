@@ -37,8 +37,9 @@ export class MethodDeskPage {
     return this.store.bringIn(fileName, text);
   }
 
-  protected async publish({ title, versions }: ProcedureSummary, draft: DraftSummary): Promise<void> {
+  protected async publish({ versions }: ProcedureSummary, draft: DraftSummary): Promise<void> {
     const version = versions.reduce((highest, entry) => Math.max(highest, entry.version), 0) + 1;
+    const { title } = draft;
     const data: PublishQuestion = { title, version };
     const opened = this.dialog.open<boolean>(PublishDialog, { data, ariaLabelledBy: 'publish-title' });
     if ((await firstValueFrom(opened.closed)) === true) await this.store.publish(draft.id, title);

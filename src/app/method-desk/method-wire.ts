@@ -13,6 +13,8 @@ export interface VersionSummary {
 
 export interface DraftSummary {
   readonly id: string;
+  /** The document's own, which may be another than that of the versions. */
+  readonly title: string;
   /** ISO 8601. */
   readonly importedAt: string;
   readonly importedBy: string;

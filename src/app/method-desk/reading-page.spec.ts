@@ -32,7 +32,15 @@ describe('reading a procedure', () => {
   async function showDraft(document: object): Promise<void> {
     fixture.componentRef.setInput('draftId', 'draft-1');
     fixture.autoDetectChanges();
-    const body = { id: 'draft-1', procedureId: 'x', importedAt: '', importedBy: '', problems: [], document };
+    const body = {
+      id: 'draft-1',
+      title: 'x',
+      procedureId: 'x',
+      importedAt: '',
+      importedBy: '',
+      problems: [],
+      document,
+    };
     (await asked(server, 'GET', '/api/procedures/drafts/draft-1')).flush(body);
     await settle();
     // The lint comes as a chunk of its own and walks every way.
