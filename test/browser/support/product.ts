@@ -15,6 +15,8 @@ export interface Product {
   readonly baseUrl: string;
   /** The database as its owner sees it, for looking at what the server kept. */
   readonly databaseUrl: string;
+  /** The same database with the rights of the role that serves. */
+  readonly servingUrl: string;
   /** Closes the port: to a tablet, the network is gone. */
   stop(): Promise<void>;
   /** Opens the same port again, over the same database. */
@@ -54,6 +56,7 @@ export async function startProduct(): Promise<Product> {
   return {
     baseUrl,
     databaseUrl: database.ownerUrl,
+    servingUrl: database.appUrl,
     start,
     stop,
     remove: async () => {

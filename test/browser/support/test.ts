@@ -9,11 +9,13 @@ import { launchTablet, type Tablet } from './tablet';
 export type SwitchOn = (options?: { viewport?: ViewportSize; switches?: readonly string[] }) => Promise<Tablet>;
 
 /**
- * The browser tests' `test`: `product` is one per worker, `page` and `switchOn` are each test's own.
+ * The browser tests' `test`: `product` is one per worker, `page` and `switchOn` are each test's own. A file that changes
+ * what all others rely on names a product of its own with `test.use({ productName })`.
  *
  *     test('keeps a reading that was typed offline', async ({ product, switchOn }) => { ... });
  */
-export const test = base.extend<{ switchOn: SwitchOn }, { product: Product }>({
+export const test = base.extend<{ switchOn: SwitchOn }, { productName: string; product: Product }>({
+  productName: ['shared', { scope: 'worker', option: true }],
   product: [
     // Playwright reads the parameters' text, so an empty pattern has to stand here.
     async ({}, use) => {
