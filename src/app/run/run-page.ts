@@ -21,21 +21,15 @@ import { BenchSheet } from '../shared/practice/bench-sheet';
 import { RouteRibbon } from '../shared/route-ribbon';
 import { syncWords } from '../shared/sync-words';
 import { briefConnection } from './brief-connection';
-import { CodesEntry } from './codes/codes-entry';
+import { CurrentStepView } from './current-step';
 import { EntryDraft } from './entry-draft';
-import { FindingEntry } from './finding/finding-entry';
-import { CautionGate } from './frame/caution-gate';
-import { HandSide } from './frame/hand-side';
 import { HonestWays, type HonestWay } from './frame/honest-ways';
 import { RunHeaderBar } from './frame/run-header';
 import { StopRow } from './frame/stop-row';
-import { WideSide } from './frame/wide-side';
-import { ListenEntry } from './listen/listen-entry';
 import { ListenFlow } from './listen/listen-flow';
 import { pedalAct } from './pedal-keys';
 import { practiceRamp } from './practice-ramp';
 import { PrimaryAction } from './primary-action';
-import { ReadingEntry } from './readings/reading-entry';
 import { RunGear } from './run-gear';
 import { RunPreferences } from './run-preferences';
 import { RunStore } from './run-store';
@@ -51,14 +45,6 @@ import { StopSheet } from './sheets/stop-sheet';
 import { ViewSheet } from './sheets/view-sheet';
 import { WayOutSheet } from './sheets/way-out-sheet';
 import { WhySheet } from './sheets/why-sheet';
-import { cautionToRead } from './step-cautions';
-import { StartEntry } from './start/start-entry';
-import { ActionEntry } from './steps/action-entry';
-import { ChoiceEntry } from './steps/choice-entry';
-import { ComputeEntry } from './steps/compute-entry';
-import { DriveEntry } from './steps/drive-entry';
-import { HoldEntry } from './steps/hold-entry';
-import { RestoreEntry } from './steps/restore-entry';
 import { TapGuard } from './tap-guard';
 import { Tones } from './tones';
 import { AwakeScreen } from './wake-lock';
@@ -78,36 +64,23 @@ const placeLostMs = 30_000;
 @Component({
   selector: 'bay-run-page',
   imports: [
-    ActionEntry,
     BenchSheet,
-    CautionGate,
-    ChoiceEntry,
-    CodesEntry,
-    ComputeEntry,
-    DriveEntry,
-    FindingEntry,
+    CurrentStepView,
     GearSheet,
-    HandSide,
-    HoldEntry,
     HonestWays,
     LimitTakeover,
-    ListenEntry,
     LookBackSheet,
     OpenListSheet,
-    ReadingEntry,
-    RestoreEntry,
     ResumeCard,
     RouteRibbon,
     RunHeaderBar,
     SheetBody,
     SheetHand,
-    StartEntry,
     StopRow,
     StopSheet,
     ViewSheet,
     WayOutSheet,
     WhySheet,
-    WideSide,
   ],
   providers: [AwakeScreen, EntryDraft, ListenFlow, PrimaryAction, RunGear, RunStore],
   templateUrl: './run-page.html',
@@ -144,13 +117,6 @@ export class RunPage {
     const id = run?.state.current?.id ?? run?.state.finding;
     return run === undefined || id === undefined ? undefined : run.procedure.step(id);
   });
-  /** The caution that has to be acknowledged before the step's entry unlocks. */
-  protected readonly caution = computed(() => {
-    const run = this.run();
-    const step = this.step();
-    if (run === undefined || step === undefined || step.kind === 'start' || step.kind === 'finding') return undefined;
-    return cautionToRead(run, step);
-  });
   protected readonly canMeasure = computed(() => {
     const step = this.step();
     return step !== undefined && 'cannotMeasure' in step;
@@ -184,7 +150,10 @@ export class RunPage {
   protected readonly connection = computed(() =>
     this.isPractice() ? 'Practice is not sent' : syncWords(this.sync.view()).text,
   );
-  protected readonly briefly = computed(() => (this.isPractice() ? 'not sent' : briefConnection(this.sync.view())));
+  protected readonly briefly = computed(() => {
+    const kept = this.isPractice() ? 'not sent' : briefConnection(this.sync.view());
+    return this.awake.isAwake() === false ? `${kept}, may go dark` : kept;
+  });
   /** What lies over the step by the run's own state: it goes only when it is answered. */
   protected readonly takeover = computed<'limit' | 'stopped' | 'resume' | 'elsewhere' | undefined>(() => {
     const state = this.run()?.state;
@@ -199,7 +168,6 @@ export class RunPage {
   protected readonly ramp = computed(() => practiceRamp(this.run()?.header));
 
   protected readonly readClocks = () => this.store.clocks();
-  protected readonly readElapsed = () => this.store.clocks().elapsed;
 
   private hiddenAt: number | undefined;
 

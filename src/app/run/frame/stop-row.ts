@@ -23,7 +23,7 @@ import { ChangeDetectionStrategy, Component, input, output } from '@angular/core
       justify-content: space-between;
       gap: var(--clear);
       min-width: 0;
-      padding: 0 20px var(--foot-edge) 24px;
+      padding: 0 20px var(--below-stop) 24px;
     }
     /* Always at the far side of the hand that taps. */
     :host-context([data-hand='left']) {
@@ -44,7 +44,7 @@ import { ChangeDetectionStrategy, Component, input, output } from '@angular/core
     }
     @media (max-width: 640px) {
       :host {
-        padding: 0 12px var(--foot-edge);
+        padding: 0 12px var(--below-stop);
         gap: calc(3 * var(--mm));
       }
       .stop {

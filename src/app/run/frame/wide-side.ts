@@ -3,6 +3,7 @@ import type { Step } from '../../../../procedures/document';
 import { renderTemplate } from '../../../../procedures/engine';
 import { CautionPanel } from '../../shared/caution-panel';
 import { BenchSheet } from '../../shared/practice/bench-sheet';
+import { unbroken } from '../../shared/unbroken';
 import type { RunView } from '../run-view';
 import { cautionsOf } from '../step-cautions';
 import { StepPictureView } from './step-picture-view';
@@ -32,6 +33,7 @@ export class WideSide {
     const { why } = this.step();
     if (why === undefined || this.isUnderWay()) return undefined;
     const { procedure, state } = this.run();
-    return renderTemplate(procedure, state, why);
+    const text = renderTemplate(procedure, state, why);
+    return text === undefined ? undefined : unbroken(text);
   });
 }
