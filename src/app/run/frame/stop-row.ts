@@ -42,6 +42,16 @@ import { ChangeDetectionStrategy, Component, input, output } from '@angular/core
       padding: 0 22px;
       font-weight: 500;
     }
+    @media (max-width: 1100px) and (orientation: landscape) {
+      .stop {
+        padding: 0 16px 0 12px;
+        font-size: 18px;
+      }
+      .why {
+        padding: 0 10px;
+        line-height: 1.1;
+      }
+    }
     @media (max-width: 640px) {
       :host {
         padding: 0 12px var(--below-stop);
