@@ -6,7 +6,7 @@ import { OfflineStore, PracticeStore } from './offline-store';
 import { RunJournal } from './run-journal';
 import { Session } from './session';
 import { Sync } from './sync';
-import { asked, closeStores, coreForSpecs, okafor, registeredTablet } from './testing/core-for-specs';
+import { asked, closeStores, coreForSpecs, okafor, registeredTablet, workOffline } from './testing/core-for-specs';
 import { VisitBook } from './visit-book';
 import type { PullAnswer, Visit } from './wire';
 
@@ -274,5 +274,27 @@ describe('Sync', () => {
     expect(await store.outbox.count()).toBe(1);
     await sync.again();
     server.expectNone('/api/sync/push');
+  });
+
+  it('tries again soon while nobody answers, then later and later, and soon again once there is a network', async () => {
+    const { server } = coreForSpecs();
+    await workOffline(server);
+    const sync = TestBed.inject(Sync);
+    const timers = jest.spyOn(window, 'setTimeout');
+    const wait = () => timers.mock.calls.map(([, ms]) => ms ?? 0).findLast((ms) => ms >= 1000);
+    const unanswered = async (trying: Promise<void>) => {
+      (await asked(server, 'POST', '/api/session/refresh')).error(new ProgressEvent('error'));
+      await trying;
+    };
+    await unanswered(sync.start());
+    expect(wait()).toBe(1000);
+    await unanswered(sync.again());
+    await unanswered(sync.again());
+    expect(wait()).toBe(4000);
+    expect(sync.view().isReached).toBe(false);
+    window.dispatchEvent(new Event('online'));
+    await unanswered(sync.again());
+    expect(wait()).toBe(1000);
+    timers.mockRestore();
   });
 });

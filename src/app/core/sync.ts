@@ -88,7 +88,11 @@ export class Sync {
     this.hasStarted = true;
     this.lastSyncAt.set(await this.settings.read<number>(lastSyncKey));
     const window = this.document.defaultView;
-    window?.addEventListener('online', () => void this.again());
+    // It is often said a moment before the first request gets through: the tries begin anew, close together.
+    window?.addEventListener('online', () => {
+      this.failures = 0;
+      void this.again();
+    });
     window?.addEventListener('offline', () => this.noteUnreached());
     this.document.addEventListener('visibilitychange', () => {
       if (this.document.visibilityState === 'visible') void this.again();
@@ -143,7 +147,7 @@ export class Sync {
     const state = this.session.state();
     if (state === 'signed-out' || state === 'starting' || state === 'expired') return;
     if ((await this.session.usableToken()) === undefined) {
-      if (this.session.state() === 'unavailable') this.noteUnreached();
+      if (this.session.state() === 'unavailable') throw unanswered();
       return;
     }
     await this.registerIfAllowed();
@@ -211,3 +215,7 @@ export class Sync {
     if (this.reached()?.isReached !== false) this.reached.set({ isReached: false, since: this.now() });
   }
 }
+
+/** The session could not be renewed because nobody answered: for the next try that is a failure like any other. */
+const unanswered = (): ApiProblem =>
+  new ApiProblem(0, 'The server cannot be reached', undefined, [], undefined, undefined);
