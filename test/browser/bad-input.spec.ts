@@ -5,7 +5,7 @@ import { gzipSync } from 'node:zlib';
 import type { Page } from '@playwright/test';
 import { enter, shownStep, tap, walkTo, type Answers } from './support/at-the-car';
 import { expect, test } from './support/test';
-import { openVisit, signIn } from './support/visits';
+import { openVisit, signIn, signOut } from './support/visits';
 import { eventsOnTablet } from './support/what-is-kept';
 
 const ramps = join(__dirname, '../reference/ramps');
@@ -174,9 +174,9 @@ function written(path: string, content: string | Buffer | number): string {
 }
 
 test('who may not enter a room is told so on the screen, and by the server as well', async ({ page, request }) => {
-  for (const [name, room] of [
-    ['okafor', '/method'],
-    ['brandt', '/records'],
+  for (const [name, displayName, room] of [
+    ['okafor', 'I. Okafor', '/method'],
+    ['brandt', 'T. Brandt', '/records'],
   ] as const) {
     await signIn(page, name);
     await page.goto(room);
@@ -184,9 +184,7 @@ test('who may not enter a room is told so on the screen, and by the server as we
     await expect(page.getByRole('heading', { name: 'This room is not yours' })).toBeVisible();
     await expect(page.getByText('Your role has no key to it. A lead or a manager can open it for you.')).toBeVisible();
     await page.getByRole('link', { name: 'Back to the Bench' }).click();
-    await page.getByRole('button', { name: /Okafor|Brandt/ }).click();
-    await page.getByRole('button', { name: 'Sign out' }).click();
-    await expect(page.getByRole('heading', { name: 'Sign in' })).toBeVisible();
+    await signOut(page, displayName);
   }
 
   const asked = async (name: string, method: string, path: string, data?: object) => {

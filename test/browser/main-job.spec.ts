@@ -3,7 +3,7 @@ import type { Page } from '@playwright/test';
 import { canonicalJson, verifyChain, type RunEvent, type RunHeader } from '../../procedures/engine';
 import { shownStep, tap, walkTo, type Answers } from './support/at-the-car';
 import { expect, test } from './support/test';
-import { openVisit, readyWithoutNetwork, signIn } from './support/visits';
+import { openVisit, readyWithoutNetwork, signIn, signOut } from './support/visits';
 import { eventsInDatabase, eventsOnTablet, rowsOf } from './support/what-is-kept';
 
 const ramp = join(__dirname, '../reference/ramps/demo-warm-seals.csv');
@@ -127,11 +127,7 @@ test('one job from the visit to the Record room, with the network cut and the br
   expect(await rowsOf(product.databaseUrl, 'SELECT what FROM discrepancy WHERE run_id = $1', [runId])).toEqual([]);
 
   // The manager finds it in the Record room and reads the whole story.
-  await page.getByRole('button', { name: 'I. Okafor' }).click();
-  await page
-    .getByRole('button', { name: 'Sign out' })
-    .or(page.getByRole('menuitem', { name: 'Sign out' }))
-    .click();
+  await signOut(page, 'I. Okafor');
   await signIn(page, 'lindqvist');
   await page.goto('/records');
   await page.locator('bay-record-table').getByRole('link').first().click();
@@ -148,7 +144,7 @@ test('one job from the visit to the Record room, with the network cut and the br
   ]) {
     await expect(story).toContainText(told);
   }
-  await expect(page.locator('bay-series-view')).toContainText(/noise stops/i);
+  await expect(page.locator('bay-series-view').getByRole('img')).toHaveAccessibleName(/noise stops at/i);
   await expect(page.getByText(/seals at 3\.\d ± 0\.\d kPa/).first()).toBeVisible();
   await tablet.close();
 });
