@@ -49,7 +49,7 @@ test('a lead brings in and publishes version 2: tablets take it for new runs, an
     [1, contentHash(crankcaseValveSeal)],
   ]);
 
-  // A technician is at the car, on version 1.
+  // A technician is at the car, on version 1, and out of reach while the second one is published.
   await signIn(page, 'okafor');
   await readyWithoutNetwork(page);
   await page.getByRole('link', { name: /^Take it/ }).click();
@@ -58,6 +58,7 @@ test('a lead brings in and publishes version 2: tablets take it for new runs, an
   await page.getByRole('button', { name: /Start the cold half/ }).click();
   await walkTo(page, '2d', coldCar);
   const run = page.url();
+  await page.context().setOffline(true);
 
   const lead = await openMethodDesk(browser);
   await bringInBroken(lead);
@@ -76,7 +77,6 @@ test('a lead brings in and publishes version 2: tablets take it for new runs, an
   // With the next sync the tablet has both, and offers the newer one.
   const onTablet = async () => (await storedOnTablet(page, 'procedures')).map((row) => row['version']).sort();
   expect(await onTablet()).toEqual([1]);
-  await page.context().setOffline(true);
   await page.context().setOffline(false);
   await expect.poll(onTablet, { timeout: 20_000 }).toEqual([1, 2]);
   await page.goto(visit);
