@@ -17,7 +17,7 @@ import { AirPath } from '../../shared/air-path';
     :host {
       display: flex;
       flex: 1 1 0 !important;
-      min-height: 130px;
+      min-height: 96px;
       border: var(--rule-width) solid var(--rule);
       border-radius: var(--r);
       background: var(--sheet);

@@ -5,7 +5,7 @@ import { CautionPanel } from '../../shared/caution-panel';
 import { BenchSheet } from '../../shared/practice/bench-sheet';
 import { unbroken } from '../../shared/unbroken';
 import type { RunView } from '../run-view';
-import { cautionsOf } from '../step-cautions';
+import { cautionsOf, cautionToRead } from '../step-cautions';
 import { StepPictureView } from './step-picture-view';
 
 /**
@@ -29,6 +29,10 @@ export class WideSide {
   readonly isUnderWay = input(false);
 
   protected readonly cautions = computed(() => (this.hasOwnCautions() ? [] : cautionsOf(this.run(), this.step())));
+  /** Several that were read in full give the room back: their words stay, their panels go. */
+  protected readonly isCompact = computed(
+    () => this.isUnderWay() || (this.cautions().length > 1 && cautionToRead(this.run(), this.step()) === undefined),
+  );
   protected readonly why = computed(() => {
     const { why } = this.step();
     if (why === undefined || this.isUnderWay()) return undefined;
