@@ -16,8 +16,8 @@ export interface WithdrawQuestion {
     <h2 id="withdraw-title">Withdraw version {{ question.version }}?</h2>
     <p>{{ question.title }}</p>
     <ul>
-      <li>No new run starts on it on any tablet that has heard of it.</li>
-      <li>Runs under way are told, and their person decides.</li>
+      <li>No new run starts with it on any tablet that has heard of it.</li>
+      <li>Runs under way go on with it, and their record names it.</li>
       <li>It cannot be taken back: publish a new version instead.</li>
     </ul>
     <form (submit)="withdraw($event)">
