@@ -99,7 +99,7 @@ export class LiveControls {
   }
 
   protected takeBack(): void {
-    this.commanded.emit({ do: 'take-back', name: 'gauge', reason: 'slip of the finger' });
+    this.commanded.emit({ do: 'take-back', name: 'gauge', reason: 'taken back' });
   }
 
   protected mark(mark: MarkName): void {

@@ -149,7 +149,7 @@ export class ReadingEntry extends StepEntry<'reading' | 'wait'> {
     if (this.text() !== '') this.press('erase');
     else if (this.wayId() !== undefined) this.wayId.set(undefined);
     else if (name !== undefined && this.takes().length > 0) {
-      this.commanded.emit({ do: 'take-back', name, reason: 'read wrongly' });
+      this.commanded.emit({ do: 'take-back', name, reason: 'taken back' });
     }
   }
 
