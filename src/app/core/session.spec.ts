@@ -130,6 +130,27 @@ describe('Session', () => {
     expect(session.person()?.name).toBe('okafor');
   });
 
+  it('shows that one is signed out only once a reload would find nobody', async () => {
+    const { server } = coreForSpecs();
+    const session = TestBed.inject(Session);
+    const outcome = session.signIn('okafor', 'right');
+    (await asked(server, 'POST', '/api/session')).flush(answer);
+    await outcome;
+    const { settings } = TestBed.inject(OfflineStore);
+    const shownAtWrite: string[] = [];
+    const note = (): void => void shownAtWrite.push(session.state());
+    settings.hook('creating', note);
+    settings.hook('deleting', note);
+    const ended = session.signOut();
+    const request = await asked(server, 'DELETE', '/api/session');
+    expect(shownAtWrite).toEqual(['signed-in', 'signed-in']);
+    expect(session.state()).toBe('signed-out');
+    expect(await settings.get('last-person')).toBeUndefined();
+    expect(await settings.get('sign-out-waits')).toMatchObject({ value: true });
+    request.flush(null, { status: 204, statusText: 'No Content' });
+    await ended;
+  });
+
   it('makes a sign-out without a network good before it uses the cookie again', async () => {
     const { server } = coreForSpecs();
     await TestBed.inject(OfflineStore).settings.put({ key: 'sign-out-waits', value: true });

@@ -100,12 +100,13 @@ export class Session {
 
   /** Ends the session. Work that waits stays on the tablet and is sent by whoever signs in next. */
   async signOut(): Promise<void> {
+    // Whoever sees the sign-in page may reload or walk away at once: by then nothing may still name them.
+    await this.settings.write(signedOutKey, true);
+    await this.settings.forget(rememberedKey);
     this.token = undefined;
     this.current.set(undefined);
     this.last.set(undefined);
     this.status.set('signed-out');
-    await this.settings.forget(rememberedKey);
-    await this.settings.write(signedOutKey, true);
     await this.endOnServer();
   }
 
