@@ -109,8 +109,56 @@ describe('LiveControls', () => {
     await tap(page, '+ 1');
     page.at(8);
     await tap(page, '+ 1');
-    buttonNamed(page.fixture, 'No noise at all').click();
-    buttonNamed(page.fixture, 'It never stopped').click();
+    for (const ending of ['No noise at all', 'It never stopped']) {
+      const before = page.done.length;
+      buttonNamed(page.fixture, ending).click();
+      await page.fixture.whenStable();
+      expect(page.done).toHaveLength(before);
+      buttonNamed(page.fixture, `Sure? ${ending}`).click();
+      await page.fixture.whenStable();
+    }
     expect(page.done).toMatchObject([{ marks: [] }, { marks: [{ mark: 'noise-begins', timeS: 0, by: 'tap' }] }]);
+  });
+
+  it('asks before it ends the ramp, and goes back from the question', async () => {
+    const page = await shown();
+    await tap(page, 'Gauge at zero: begin to raise');
+    for (const second of [4, 8]) {
+      page.at(second);
+      await tap(page, '+ 1');
+    }
+    buttonNamed(page.fixture, 'It never stopped').click();
+    await page.fixture.whenStable();
+    buttonNamed(page.fixture, 'Back').click();
+    await page.fixture.whenStable();
+    expect(hasButton(page.fixture, 'Sure? It never stopped')).toBe(false);
+    buttonNamed(page.fixture, 'It never stopped').click();
+    await page.fixture.whenStable();
+    page.at(12);
+    await tap(page, '+ 1');
+    expect(hasButton(page.fixture, 'Sure? It never stopped')).toBe(false);
+    expect(page.done).toEqual([]);
+  });
+
+  it('begins the ramp anew, after a limit was exceeded as well', async () => {
+    const page = await shown();
+    await tap(page, 'Gauge at zero: begin to raise');
+    page.at(4);
+    await tap(page, '+ 1');
+    page.walk.do({ do: 'record', name: 'gauge', text: '40', unit: 'kPa', timeS: 8 });
+    expect(page.walk.state.alarm).toBeDefined();
+    page.walk.do({ do: 'acknowledge-limit' });
+    await refresh(page.fixture, page.walk);
+    buttonNamed(page.fixture, 'Begin anew').click();
+    await page.fixture.whenStable();
+    await tap(page, 'Sure? Begin anew');
+    expect(page.commands.at(-1)).toEqual({
+      do: 'redo',
+      step: 'raise-and-listen',
+      reason: 'the ramp is begun anew',
+    });
+    expect(page.walk.state.current?.id).toBe('raise-and-listen');
+    expect(page.walk.state.current?.takes['gauge'] ?? []).toEqual([]);
+    expect(page.walk.state.series['listening']).toBeUndefined();
   });
 });

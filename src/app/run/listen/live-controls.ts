@@ -7,6 +7,7 @@ import { ReadingDisplay } from '../readings/reading-display';
 import type { RunProblem, RunView } from '../run-view';
 import type { StepOf } from '../step-entry';
 import type { ListenDone } from './listen-requests';
+import { SureButton } from './sure-button';
 import { raised, riseRate, stepsFor, timeBase, type MarkName } from './live-series';
 
 /** What the gauge is raised to, and what it must never go over. */
@@ -23,7 +24,7 @@ export interface Aim {
  */
 @Component({
   selector: 'bay-live-controls',
-  imports: [BigAction, JudgedLine, ReadingDisplay],
+  imports: [BigAction, JudgedLine, ReadingDisplay, SureButton],
   templateUrl: './live-controls.html',
   styleUrl: './listen-controls.css',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -108,6 +109,11 @@ export class LiveControls {
 
   protected unmark(mark: MarkName): void {
     this.commanded.emit({ do: 'unmark', mark });
+  }
+
+  /** The whole ramp once more; what was typed stays in the record as left behind. */
+  protected beginAnew(): void {
+    this.commanded.emit({ do: 'redo', step: this.step().id, reason: 'the ramp is begun anew' });
   }
 
   /** Nothing was heard, or it never stopped: the marks as they are say so. */

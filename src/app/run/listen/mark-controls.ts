@@ -7,6 +7,7 @@ import { ReadingDisplay } from '../readings/reading-display';
 import type { RunProblem, RunView } from '../run-view';
 import type { StepOf } from '../step-entry';
 import type { ListenDone } from './listen-requests';
+import { SureButton } from './sure-button';
 import { valueAt, withMark } from './live-series';
 import { plotMarks } from './plot-marks';
 
@@ -16,7 +17,7 @@ import { plotMarks } from './plot-marks';
  */
 @Component({
   selector: 'bay-mark-controls',
-  imports: [BigAction, JudgedLine, ReadingDisplay],
+  imports: [BigAction, JudgedLine, ReadingDisplay, SureButton],
   templateUrl: './mark-controls.html',
   styleUrl: './listen-controls.css',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -111,6 +112,11 @@ export class MarkControls {
       series: this.series(),
       marks: timeS === this.recorded() ? [] : [{ mark: 'noise-stops', timeS, by }],
     });
+  }
+
+  /** The step once more, for another log; the one that is left behind stays in the record. */
+  protected takeAnotherFile(): void {
+    this.commanded.emit({ do: 'redo', step: this.step().id, reason: 'another file is taken' });
   }
 
   protected finishSilent(): void {
