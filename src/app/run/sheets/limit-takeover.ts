@@ -17,6 +17,9 @@ import type { RunProblem, RunView } from '../run-view';
         </p>
         <p class="then">{{ alarm().then }}</p>
         <p class="says">{{ alarm().says }}</p>
+        @if (isStopped()) {
+          <p class="says" role="status">Stopped. What makes the car safe comes next.</p>
+        }
         @if (problem(); as problem) {
           <p class="error" role="alert">{{ problem.message }}</p>
         }
@@ -31,6 +34,11 @@ import type { RunProblem, RunView } from '../run-view';
         >
           {{ done() }}
         </button>
+        @if (!isStopped()) {
+          <button type="button" class="stop" [disabled]="isBusy()" (click)="commanded.emit({ do: 'stop', reason: '' })">
+            Stop, supply off
+          </button>
+        }
       </div>
     </section>
   `,
@@ -46,7 +54,10 @@ export class LimitTakeover {
 
   protected readonly text = computed(() => shownFigure(this.alarm().figure.text));
   protected readonly unit = computed(() => shownUnit(this.alarm().figure.unit));
+  /** Stopped under the alarm: the alarm is answered first, then the make-safe sheet shows itself. */
+  protected readonly isStopped = computed(() => this.run().state.status === 'stopped');
   protected readonly done = computed(() => {
+    if (this.isStopped()) return 'It is done: make the car safe';
     const { procedure } = this.run();
     return `It is done: back to step ${procedure.step(this.alarm().step)?.number ?? ''}`;
   });
