@@ -78,7 +78,7 @@ describe('FindingEntry', () => {
     expect(hasButton(fixture, 'Close the run')).toBe(false);
     await tap('Keep the write-up');
     await tap('Kept. To the closing');
-    expect(textOf(fixture)).toContain('Read back Still disturbed none Not measured 1 Ways overruled none');
+    expect(textOf(fixture)).toContain('Read back Still disturbed none Steps not measured 1 Ways overruled none');
     await tap('Close the run');
     expect(walk.state.status).toBe('closed');
     expect(textOf(fixture)).toContain('The run is closed');

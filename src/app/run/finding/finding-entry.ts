@@ -59,7 +59,7 @@ export class FindingEntry extends StepEntry<'finding'> {
     const notMeasured = state.walked.filter((walked) => walked.notMeasured === true && walked.isLeft !== true).length;
     return [
       { what: 'Still disturbed', count: state.disturbed.length },
-      { what: 'Not measured', count: notMeasured },
+      { what: 'Steps not measured', count: notMeasured },
       { what: 'Ways overruled', count: count('branch-overruled') },
       { what: 'Limits exceeded', count: count('limit-exceeded') },
     ];
