@@ -275,6 +275,8 @@ export interface ChoiceOption {
   readonly label: string;
   /** What to write down when it is chosen. */
   readonly ask?: string;
+  /** Whether it contradicts every other option: where several may be true, it stands alone. */
+  readonly alone?: boolean;
 }
 
 /** A logged series with the marks `noise begins` and `noise stops`, and what is found in it. */

@@ -52,7 +52,19 @@ export function exceedLimit(procedure: CompiledProcedure, state: RunState, event
   if (limit === undefined) throw new RefusedEvent('unknown-name', `the procedure has no limit ${event.data.limit}`);
   const { step: stepId, name, figure } = event.data;
   const alarm = { seq: event.seq, step: stepId, limit: limit.id, name, figure, says: limit.says, then: limit.then };
-  return { ...dropLastTake(state, name), alarm };
+  return {
+    ...dropLastTake(withoutSeries(procedure, state, stepId), name),
+    alarm,
+    exceeded: [...state.exceeded, alarm],
+  };
+}
+
+/** A series that went over a limit is evidence, but nothing is found in it: the ramp is taken again. */
+function withoutSeries(procedure: CompiledProcedure, state: RunState, stepId: string): RunState {
+  const step = requireStep(procedure, stepId);
+  if (step.kind !== 'listen') return state;
+  const { [step.name]: _gone, ...series } = state.series;
+  return { ...state, series };
 }
 
 export function reachFinding(

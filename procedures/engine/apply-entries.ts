@@ -77,5 +77,11 @@ export function disturb(procedure: CompiledProcedure, state: RunState, event: Ev
   const declared = requireStep(procedure, stepId).disturbs?.find((candidate) => candidate.item === item);
   if (declared === undefined) throw new RefusedEvent('unknown-name', `${item} is not disturbed by that step`);
   const rest = state.disturbed.filter((candidate) => candidate.item !== item);
-  return { ...state, disturbed: [...rest, { item, label, restore: declared.restore, step: stepId, seq: event.seq }] };
+  return { ...state, disturbed: [{ item, label, restore: declared.restore, step: stepId, seq: event.seq }, ...rest] };
+}
+
+export function chooseGear(state: RunState, event: EventOf<'gear-chosen'>): RunState {
+  const { role, instrument, overdueBecause } = event.data;
+  const chosen = { ...instrument, seq: event.seq, ...(overdueBecause === undefined ? {} : { overdueBecause }) };
+  return { ...state, gear: { ...state.gear, [role]: chosen } };
 }

@@ -1,7 +1,7 @@
 import type { CompiledProcedure } from '../document';
 import { brokenLink, contentHash, headerHash } from './chain';
 import { exceedLimit, overrule, reachFinding, redo } from './apply-detours';
-import { acknowledge, disturb, makeChoice, recordCodes, runTimer } from './apply-entries';
+import { acknowledge, chooseGear, disturb, makeChoice, recordCodes, runTimer } from './apply-entries';
 import { placeMark, recordReading, recordSeries, undo } from './apply-readings';
 import { amendClaim, claimStep, finishStep, requireCurrent, takeBranch } from './apply-walk';
 import { RefusedEvent, type ReplayResult } from './refusal';
@@ -64,6 +64,7 @@ function open(procedure: CompiledProcedure, header: RunHeader, event: RunEvent):
     choices: {},
     overruled: undefined,
     branchCounts: {},
+    exceeded: [],
     alarm: undefined,
     pause: undefined,
     writeUp: undefined,
@@ -82,7 +83,7 @@ export function reduceEvent(procedure: CompiledProcedure, state: RunState, event
     case 'opened':
       throw new RefusedEvent('opened-twice', 'the run was opened already');
     case 'gear-chosen':
-      return { ...state, gear: { ...state.gear, [event.data.role]: { ...event.data.instrument, seq: event.seq } } };
+      return chooseGear(state, event);
     case 'step-claimed':
       return claimStep(procedure, state, event);
     case 'step-done':

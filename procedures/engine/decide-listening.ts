@@ -1,15 +1,19 @@
-import { isUnit } from '../calculations';
+import { convert, isUnit } from '../calculations';
 import type { ListenStep } from '../document';
 import { CannotDo, type Drafting } from './drafting';
 import { own } from './environment';
 import { completeStep } from './go-on';
 import { brokenLimit } from './limits';
-import { analyseListening } from './listening';
+import { trimmed } from './figures';
+import { analyseListening, gaugeRange } from './listening';
 import type { RunCommand } from './run-command';
 import type { Series } from './series';
 
 type Import = Extract<RunCommand, { do: 'import-series' }>;
 type Mark = Extract<RunCommand, { do: 'mark' }>;
+
+/** So much of the beginning tells where the gauge rests. */
+const restS = 1;
 
 /** Keeps a series with the step and holds every sample against the limits. */
 export function importSeries(drafting: Drafting, step: ListenStep, { record, series }: Import): void {
@@ -26,8 +30,9 @@ export function importSeries(drafting: Drafting, step: ListenStep, { record, ser
   }
   if (series.timeS.length < 3)
     throw new CannotDo('too-short', 'The series has fewer than three samples. Take another file.', 'file');
-  drafting.add({ type: 'series-recorded', data: { ...record, step: step.id, name: step.name } });
   const worst = worstSample(drafting, step, series);
+  if (worst === undefined) requireRestAtZero(drafting, step, series);
+  drafting.add({ type: 'series-recorded', data: { ...record, step: step.id, name: step.name } });
   if (worst !== undefined) {
     drafting.add({
       type: 'limit-exceeded',
@@ -60,6 +65,30 @@ function worstSample(
     if (broken !== undefined) return { limit: broken.id, name: channel.name, text: highest.toFixed(1) };
   }
   return undefined;
+}
+
+/**
+ * Refuses a series whose gauge does not begin at zero, by more than its accuracy and its step allow: every figure of
+ * the ramp would carry that offset, and a log that begins under pressure has no rest to measure a rise from.
+ */
+function requireRestAtZero(drafting: Drafting, step: ListenStep, series: Series): void {
+  const channel = series.channels.find(({ name }) => name === 'gauge');
+  const range = gaugeRange(drafting.state, step);
+  if (channel === undefined || range === undefined || !isUnit(channel.unit)) return;
+  const begin = series.timeS[0] ?? 0;
+  const first = channel.values.filter(
+    (value, index): value is number => value !== undefined && (series.timeS[index] ?? begin) <= begin + restS,
+  );
+  const rest = [...first].sort((a, b) => a - b)[Math.floor(first.length / 2)];
+  if (rest === undefined) return;
+  const allowed = 2 * range.accuracy + range.resolution;
+  const shown = convert(rest, channel.unit, range.unit);
+  if (Math.abs(shown) <= allowed) return;
+  throw new CannotDo(
+    'not-at-zero',
+    `The gauge begins at ${trimmed(shown, 2)} ${range.unit}, not at zero (${trimmed(allowed, 2)} ${range.unit} either way is allowed). Let it fall to zero, begin the log at rest, and take that one.`,
+    'file',
+  );
 }
 
 /** Places one of the two marks; the noise cannot stop before it began. */

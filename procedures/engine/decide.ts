@@ -206,6 +206,10 @@ function choose(drafting: Drafting, step: Step, { options, text }: Extract<RunCo
     if (options.length === 0)
       throw new CannotDo('choose-one', 'Choose what you see. If it cannot be seen, say so below.', 'options');
     if (options.length > 1 && step.several !== true) throw new CannotDo('choose-one', 'Choose one only.', 'options');
+    const alone = step.options.find((option) => option.alone === true && options.includes(option.name));
+    if (alone !== undefined && options.length > 1) {
+      throw new CannotDo('choose-one', `"${alone.label}" cannot be true beside another one: choose again.`, 'options');
+    }
     const asked = step.options.find((option) => options.includes(option.name) && option.ask !== undefined);
     if (asked?.ask !== undefined && (text ?? '').trim() === '') throw new CannotDo('say-which', asked.ask, 'text');
   }

@@ -317,6 +317,49 @@ describe('listening', () => {
   });
 });
 
+describe('a series that does not begin at zero', () => {
+  const lifted = (by: number): Series => ({
+    ...series,
+    channels: series.channels.map((channel) => ({
+      ...channel,
+      values: channel.values.map((value) => (value ?? 0) + by),
+    })),
+  });
+
+  it.each([
+    [1.2, '1.3'],
+    [-2, '-1.9'],
+  ])('is refused: the gauge off by %d kPa would move the seal point by as much', (by, shown) => {
+    const outcome = atListen().ask({ do: 'import-series', record, series: lifted(by) });
+    expect(outcome).toMatchObject({ ok: false, code: 'not-at-zero', field: 'file' });
+    expect(outcome.ok ? '' : outcome.message).toContain(`begins at ${shown} kPa, not at zero (0.6 kPa`);
+  });
+
+  it('is taken where the gauge is off by no more than its accuracy and step allow', () => {
+    expect(atListen().ask({ do: 'import-series', record, series: lifted(0.5) })).toMatchObject({ ok: true });
+  });
+});
+
+describe('an overdue instrument', () => {
+  it('costs a reason, which stands in the write-up', () => {
+    const overdue = { ...fineGauge, id: 'g-3', label: 'G-3', dueOn: '2026-01-01' };
+    const walk = new RunWalk(procedure).cautions(1);
+    expect(walk.ask({ do: 'choose-gear', role: 'gauge', instrument: overdue })).toMatchObject({
+      ok: false,
+      code: 'overdue',
+    });
+    walk.do(
+      { do: 'choose-gear', role: 'gauge', instrument: overdue, overdueBecause: 'no other one is here' },
+      { do: 'choose-gear', role: 'scanTool', instrument: scanTool },
+      { do: 'confirm' },
+    );
+    const { correction } = composeWriteUp(procedure, walk.state);
+    expect(correction.text).toContain(
+      'with G-3 (its check ran out on 2026-01-01; used because: no other one is here), S-3.',
+    );
+  });
+});
+
 describe('a limit', () => {
   it('that a typed value exceeds takes the run until it is acknowledged, and the value does not count', () => {
     const walk = atListen().do({ do: 'record', name: 'gauge', text: '36.0', unit: 'kPa', timeS: 4 });
@@ -340,6 +383,11 @@ describe('a limit', () => {
     };
     const walk = atListen().do({ do: 'import-series', record, series: over });
     expect(walk.state.alarm).toMatchObject({ name: 'manifold', figure: { text: '130.0' } });
+    // Acknowledged, it is still no series to find anything in: the ramp is taken again.
+    walk.do({ do: 'acknowledge-limit' });
+    expect(walk.state.series['ramp']).toBeUndefined();
+    expect(walk.ask({ do: 'finish-listening', series: over })).toMatchObject({ ok: false, code: 'no-series' });
+    expect(walk.state.exceeded).toHaveLength(1);
   });
 });
 

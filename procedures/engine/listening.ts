@@ -72,7 +72,7 @@ function kilopascals(series: Series, name: string): (index: number) => number | 
 }
 
 /** The step of the gauge channel: the chosen instrument's display. */
-function gaugeRange(state: RunState, step: ListenStep): InstrumentRange | undefined {
+export function gaugeRange(state: RunState, step: ListenStep): InstrumentRange | undefined {
   const channel = step.channels.find((candidate) => candidate.name === 'gauge');
   if (channel?.gear === undefined || !isUnit(channel.unit)) return undefined;
   return rangeFor(state.gear[channel.gear], channel.unit, 'gauge');

@@ -37,7 +37,8 @@ export interface RunState {
   readonly verdict: string | undefined;
   /** The finding that was reached. */
   readonly finding: string | undefined;
-  readonly gear: Readonly<Record<string, InstrumentSnapshot & { readonly seq: number }>>;
+  readonly gear: Readonly<Record<string, ChosenInstrument>>;
+  /** What is apart, the latest first: the order in which it goes back. */
   readonly disturbed: readonly DisturbedItem[];
   readonly series: Readonly<Record<string, SeriesState>>;
   readonly codes: Readonly<Record<string, CodesState>>;
@@ -46,6 +47,8 @@ export interface RunState {
   readonly overruled: string | undefined;
   /** How often each bounded branch was taken: `step/next-N` -> count. */
   readonly branchCounts: Readonly<Record<string, number>>;
+  /** Every limit that was exceeded, in order; what broke it does not count as a reading. */
+  readonly exceeded: readonly LimitAlarm[];
   /** A limit was exceeded and not yet acknowledged. */
   readonly alarm: LimitAlarm | undefined;
   /** Set while the run is stopped or set aside: when, by whom, why. */
@@ -154,6 +157,12 @@ export interface NamedTruth {
   readonly step: string;
   readonly seq: number;
 }
+
+export type ChosenInstrument = InstrumentSnapshot & {
+  readonly seq: number;
+  /** Why it was used though its check had run out. */
+  readonly overdueBecause?: string;
+};
 
 export interface DisturbedItem {
   readonly item: string;

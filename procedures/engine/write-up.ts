@@ -2,8 +2,8 @@ import type { CompiledProcedure, FindingStep, Sentence } from '../document';
 import { environmentOf } from './environment';
 import { truthOf } from './judge-quantity';
 import { readQuantity, wayOf } from './quantities';
-import type { RunState } from './run-state';
-import { renderCited, type Citation } from './template';
+import type { ChosenInstrument, RunState } from './run-state';
+import { renderCited, shownUnit, type Citation } from './template';
 
 /** One part of a write-up, sentence by sentence with what each one rests on. */
 export interface WriteUpPart {
@@ -32,7 +32,7 @@ export function composeWriteUp(procedure: CompiledProcedure, state: RunState): W
   const verdict: Sentence[] = finding?.kind === 'finding' ? [{ text: finding.verdict }] : [];
   return {
     concern: part(procedure, state, [...concernOf(state), ...codesOf(procedure)], true),
-    cause: part(procedure, state, [...verdict, ...authored.cause], true),
+    cause: part(procedure, state, [...verdict, ...authored.cause, ...limitsOf(procedure, state)], true),
     correction: part(procedure, state, [...authored.correction, ...testedBy(procedure, state)], true),
     customer: part(procedure, state, authored.customer, false),
     deference: procedure.document.deference,
@@ -52,11 +52,24 @@ function codesOf(procedure: CompiledProcedure): readonly Sentence[] {
 }
 
 function testedBy(procedure: CompiledProcedure, state: RunState): readonly Sentence[] {
-  const instruments = Object.entries(state.gear).flatMap(([role, { label }]) =>
-    isUsed(procedure, state, role) ? [label] : [],
+  const instruments = Object.entries(state.gear).flatMap(([role, instrument]) =>
+    isUsed(procedure, state, role) ? [instrumentWords(instrument)] : [],
   );
   const gear = instruments.length === 0 ? '' : ` with ${instruments.join(', ')}`;
   return [{ text: `Tested by ${procedure.document.title}, version ${state.header.version}${gear}.` }];
+}
+
+function instrumentWords({ label, dueOn, overdueBecause }: ChosenInstrument): string {
+  return overdueBecause === undefined
+    ? label
+    : `${label} (its check ran out on ${dueOn}; used because: ${overdueBecause})`;
+}
+
+/** Each limit that was exceeded: what went over it is kept in the record and was not used. */
+function limitsOf(procedure: CompiledProcedure, state: RunState): readonly Sentence[] {
+  return state.exceeded.map(({ step, figure }) => ({
+    text: `At step ${procedure.step(step)?.number ?? step} the limit was exceeded, ${figure.text} ${shownUnit(figure.unit)}; that was not used.`,
+  }));
 }
 
 /** Whether the run was done with the gear of a role: it needs it, or a value was read with it. */

@@ -1,3 +1,4 @@
+import { composeWriteUp } from '../../../procedures/engine';
 import { compiledValveSeal } from '../../support/compiled-valve-seal';
 import { fineGear } from '../../support/ossenholt-gear';
 import { importOf, readRamp, withChannel } from '../../support/ramp-file';
@@ -40,6 +41,14 @@ describe('crankcase valve seal, cold half: the series went over the ceiling', ()
   it('reaches its finding with nothing left apart', () => {
     expect(walk.state.finding).toBe('notCompleted');
     expect(walk.state.disturbed).toEqual([]);
+  });
+
+  it('says in the write-up what went over the ceiling, and finds nothing in that series', () => {
+    expect(composeWriteUp(walk.procedure, walk.state).cause.text).toMatch(
+      /At step 11 the limit was exceeded, 35\.4 kPa; that was not used\.$/,
+    );
+    expect(walk.state.series['ramp']).toBeUndefined();
+    expect(walk.state.values['sealPoint']).toBeUndefined();
   });
 
   it('keeps the highest value with the limit that it broke', () => {

@@ -39,6 +39,7 @@ describe('crankcase valve seal, cold half: the inlet-side valve shuts on a pulse
     const disturbed = walk.events.flatMap((event) => (event.type === 'disturbed' ? [event.data.item] : []));
     const restored = walk.events.flatMap((event) => (event.type === 'restored' ? [event.data.item] : []));
     expect(disturbed).toEqual(['dipstick', 'inlet-duct', 'inlet-plug', 'vent-plug']);
-    expect(restored).toEqual(disturbed);
+    // What was opened last goes back first.
+    expect(restored).toEqual([...disturbed].reverse());
   });
 });
