@@ -44,11 +44,20 @@ describe('WhySheet', () => {
     expect(walk.events.find(({ type }) => type === 'branch-overruled')).toBeDefined();
   });
 
-  it('sends nothing while no way is chosen', async () => {
+  it('says what is missing beside what cannot be taken yet', async () => {
     const { fixture, commands } = await shown(tooClose());
     buttonNamed(fixture, 'This does not fit: take another way').click();
     await fixture.whenStable();
     buttonNamed(fixture, 'Take it').click();
+    await fixture.whenStable();
+    expect(elementOf(fixture).querySelector('[role=alert]')?.textContent).toBe('Choose one of the ways above first.');
+    elementOf(fixture).querySelector<HTMLButtonElement>('[role=radio]')?.click();
+    await fixture.whenStable();
+    expect(elementOf(fixture).querySelector('[role=alert]')?.textContent).toBe('Say why this is right first.');
+    buttonNamed(fixture, 'Take it').click();
     expect(commands).toEqual([]);
+    buttonNamed(fixture, 'The rule does not fit this car').click();
+    await fixture.whenStable();
+    expect(elementOf(fixture).querySelector('[role=alert]')).toBeNull();
   });
 });

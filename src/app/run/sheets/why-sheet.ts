@@ -30,6 +30,15 @@ export class WhySheet {
   protected readonly chosen = signal<string | undefined>(undefined);
   protected readonly reason = signal('');
 
+  /** What was missing at the last tap on *Take it*, and is missing still. */
+  protected readonly missing = computed(() => {
+    if (!this.wasTried()) return undefined;
+    if (this.chosen() === undefined) return 'Choose one of the ways above first.';
+    return this.reason().trim() === '' ? 'Say why this is right first.' : undefined;
+  });
+  protected readonly isComplete = computed(() => this.chosen() !== undefined && this.reason().trim() !== '');
+  private readonly wasTried = signal(false);
+
   protected readonly decision = computed(() => lastDecision(this.run()));
   protected readonly way = computed(() => this.decision()?.walked.way);
   protected readonly led = computed(() => {
@@ -57,7 +66,8 @@ export class WhySheet {
 
   protected overrule(): void {
     const exit = this.chosen();
-    if (exit !== undefined) this.commanded.emit({ do: 'overrule', exit, reason: this.reason() });
+    this.wasTried.set(true);
+    if (exit !== undefined && this.isComplete()) this.commanded.emit({ do: 'overrule', exit, reason: this.reason() });
   }
 
   private titleOf({ to, verdict }: NamedExit): string {
