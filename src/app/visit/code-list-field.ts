@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, model, signal } from '@angular/core';
-import { codeProblem, codesIn, codeWords } from './trouble-code-words';
+import { codeProblem, codesIn, codeWords } from '../shared/trouble-code-words';
 
 /** Trouble codes, one after another or pasted together; each is checked before it is taken. */
 @Component({

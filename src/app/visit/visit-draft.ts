@@ -1,5 +1,5 @@
 import type { Visit } from '../core/wire';
-import { codeProblem } from './trouble-code-words';
+import { codeProblem } from '../shared/trouble-code-words';
 import { vinVerdict } from './vin-words';
 
 /** A visit as it is being typed: all text, nothing lost. */
@@ -38,16 +38,16 @@ export const emptyDraft: VisitDraft = {
   year: '',
 };
 
+/** What the server takes, for both. */
+const mostOdometerDigits = 7;
+const firstCarYear = 1886;
+
 /** What must be mended before the visit can be kept. */
 export function draftProblems(draft: VisitDraft, thisYear: number): DraftProblems {
   const problems: Partial<Record<keyof VisitDraft, string | undefined>> = {
     vin: vinProblem(draft, thisYear),
     repairOrder: lengthProblem(draft.repairOrder, 40, 'Type the number of the repair order.'),
-    odometer: /^\d{1,7}$/.test(tidyOdometer(draft.odometer))
-      ? undefined
-      : draft.odometer.trim() === ''
-        ? 'Type what the odometer shows.'
-        : 'Type whole digits, as the odometer shows them.',
+    odometer: odometerProblem(draft.odometer),
     concern: lengthProblem(draft.concern, 4000, "Type the customer's concern in a few words."),
     codes: draft.codes.map(codeProblem).find((problem) => problem !== undefined),
     make: lengthProblem(draft.make, 100, 'Type the make.'),
@@ -132,6 +132,13 @@ function lengthProblem(text: string, most: number, whenEmpty: string): string | 
   return length > most ? `Use at most ${most} characters.` : undefined;
 }
 
+function odometerProblem(text: string): string | undefined {
+  const tidy = tidyOdometer(text);
+  if (tidy === '') return 'Type what the odometer shows.';
+  if (!/^\d+$/.test(tidy)) return 'Type whole digits, as the odometer shows them.';
+  return tidy.length > mostOdometerDigits ? `Type at most ${mostOdometerDigits} digits.` : undefined;
+}
+
 function displacementProblem(text: string): string | undefined {
   const tidy = tidyDisplacement(text);
   return tidy === '' || /^\d{1,2}(\.\d{1,3})?$/.test(tidy) ? undefined : 'Type litres, such as 1.6.';
@@ -141,7 +148,8 @@ function yearProblem(text: string, thisYear: number): string | undefined {
   const tidy = text.trim();
   if (tidy === '') return undefined;
   const year = /^\d{4}$/.test(tidy) ? Number(tidy) : 0;
-  return year >= 1886 && year <= thisYear + 1 ? undefined : `Type a year up to ${thisYear + 1}.`;
+  const last = thisYear + 1;
+  return year >= firstCarYear && year <= last ? undefined : `Type a year from ${firstCarYear} to ${last}.`;
 }
 
 /** Thousands may be set apart by blanks, commas or apostrophes. */

@@ -8,7 +8,7 @@ import type { PublishedProcedure } from '../core/wire';
 import { TopBar } from '../shared/top-bar';
 import { ProcedureCard } from './procedure-card';
 import { RunBeginner, type Half } from './run-beginner';
-import { codeWords } from './trouble-code-words';
+import { codeWords } from '../shared/trouble-code-words';
 import { groupVin } from './vin-words';
 import { VisitStore } from './visit-store';
 

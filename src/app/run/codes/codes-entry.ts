@@ -1,6 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, input, linkedSignal, output, signal } from '@angular/core';
-import { describeTroubleCode } from '../../../../procedures/calculations';
 import type { TroubleCodeEntry } from '../../../../procedures/engine';
+import { codeWords } from '../../shared/trouble-code-words';
 import { BigAction } from '../frame/big-action';
 import { HandSide } from '../frame/hand-side';
 import { WideSide } from '../frame/wide-side';
@@ -34,7 +34,7 @@ export class CodesEntry extends StepEntry<'codes'> {
   protected readonly status = signal<Status>('stored');
   protected readonly freezeFrame = signal('');
   protected readonly isWhole = computed(() => isWholeCode(this.text() ?? ''));
-  protected readonly meaning = computed(() => describeTroubleCode(this.text() ?? ''));
+  protected readonly meaning = computed(() => codeWords(this.text() ?? ''));
   protected readonly shown = computed(() => (this.text() ?? '').padEnd(5, '\u00b7'));
   protected readonly statuses: readonly Status[] = ['stored', 'pending', 'permanent'];
   /** Codes that are known of already: those of the visit, and those of the step that this one is compared with. */
@@ -46,7 +46,7 @@ export class CodesEntry extends StepEntry<'codes'> {
     return [...new Set([...earlier, ...state.visit.codes])].filter((code) => !taken.includes(code));
   });
 
-  protected readonly meaningOf = (code: string): string => describeTroubleCode(code) ?? 'not in the generic list';
+  protected readonly meaningOf = codeWords;
 
   protected begin(code = ''): void {
     this.status.set('stored');
