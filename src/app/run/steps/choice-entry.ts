@@ -1,4 +1,12 @@
-import { ChangeDetectionStrategy, Component, computed, linkedSignal } from '@angular/core';
+import {
+  afterRenderEffect,
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  type ElementRef,
+  linkedSignal,
+  viewChild,
+} from '@angular/core';
 import type { ChoiceOption } from '../../../../procedures/document';
 import { BigAction } from '../frame/big-action';
 import { HandSide } from '../frame/hand-side';
@@ -36,6 +44,19 @@ export class ChoiceEntry extends StepEntry<'choice'> {
   protected readonly isReady = computed(
     () => this.chosen().length > 0 && (this.asks().length === 0 || this.text().trim() !== ''),
   );
+
+  private readonly field = viewChild<ElementRef<HTMLTextAreaElement>>('asked');
+
+  constructor() {
+    super();
+    // What an option asks for may appear below the fold: the field comes into sight, ready to be written in.
+    afterRenderEffect(() => {
+      const field = this.field()?.nativeElement;
+      if (field === undefined) return;
+      field.focus({ preventScroll: true });
+      field.closest('.field')?.scrollIntoView({ block: 'nearest' });
+    });
+  }
 
   protected toggle({ name }: ChoiceOption): void {
     this.chosen.update((chosen) => {
