@@ -46,12 +46,41 @@ export class CodesEntry extends StepEntry<'codes'> {
     return [...new Set([...earlier, ...state.visit.codes])].filter((code) => !taken.includes(code));
   });
 
+  /** Known codes that were looked for and are not there, in this claim. */
+  protected readonly absent = linkedSignal<number | undefined, readonly string[]>({
+    source: this.claim,
+    computation: () => [],
+  });
+  private readonly unanswered = computed(() => this.known().filter((code) => !this.absent().includes(code)));
+  protected readonly isAnswered = computed(() => this.unanswered().length === 0);
+  protected readonly primaryLabel = computed(() => {
+    const [first, ...more] = this.unanswered();
+    if (first !== undefined)
+      return more.length === 0 ? `First say above:\nis ${first} there?` : 'First answer\nthe codes above';
+    if (this.codes().length > 0) return 'These are all,\ngo on';
+    return this.known().length > 0 ? 'None of them is there:\nno code, go on' : 'No code at all,\ngo on';
+  });
+  /** What the primary action points at while known codes are unanswered, once it was tapped. */
+  protected readonly pointer = computed(() =>
+    this.wasTried() && !this.isAnswered()
+      ? `Say of ${this.unanswered().join(', ')} whether it is there or not.`
+      : undefined,
+  );
+  private readonly wasTried = linkedSignal<number | undefined, boolean>({
+    source: this.claim,
+    computation: () => false,
+  });
+
   protected readonly meaningOf = codeWords;
 
   protected begin(code = ''): void {
     this.status.set('stored');
     this.freezeFrame.set('');
     this.text.set(code);
+  }
+
+  protected setAbsent(code: string, isAbsent: boolean): void {
+    this.absent.update((absent) => [...absent.filter((other) => other !== code), ...(isAbsent ? [code] : [])]);
   }
 
   protected type(key: string): void {
@@ -76,6 +105,8 @@ export class CodesEntry extends StepEntry<'codes'> {
   }
 
   protected record(): void {
+    this.wasTried.set(true);
+    if (!this.isAnswered()) return;
     this.commanded.emit({ do: 'record-codes', codes: this.codes() });
   }
 }
