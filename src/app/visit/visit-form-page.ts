@@ -90,8 +90,9 @@ export class VisitFormPage {
     const areCodesTaken = this.codesField()?.take() ?? true;
     this.wantsAll.set(true);
     if (!areCodesTaken || Object.keys(this.allProblems()).length > 0) {
-      await this.keepNow();
-      return this.showFirstProblem();
+      // The page may be left while the store still writes: what it shows does not wait for that.
+      this.showFirstProblem();
+      return this.keepNow();
     }
     this.phase.set('keeping');
     this.dropTimer();
