@@ -33,7 +33,10 @@ describe('draftProblems', () => {
     ['vin', { vin: '1ZZBT4' }, 'A VIN has 17 characters: 11 more.'],
     ['odometer', { odometer: '84.2k' }, 'Type whole digits, as the odometer shows them.'],
     ['displacementL', { displacementL: 'big' }, 'Type litres, such as 1.6.'],
-    ['year', { year: '2031' }, 'Type a year up to 2027.'],
+    ['odometer', { odometer: '84210842108' }, 'Type at most 7 digits.'],
+    ['odometer', { odometer: " '" }, 'Type what the odometer shows.'],
+    ['year', { year: '2031' }, 'Type a year from 1886 to 2027.'],
+    ['year', { year: '1850' }, 'Type a year from 1886 to 2027.'],
   ])('says of %s what is wrong', (field, change, words) => {
     expect(draftProblems({ ...draft, ...change }, 2026)).toEqual({ [field]: words });
   });
