@@ -1,12 +1,13 @@
 import type { RunEvent, RunEventType } from '../../procedures/engine';
-import { everyRole, type Role } from '../http/route';
+import type { Role } from '../http/route';
 
-const atTheCar: readonly Role[] = ['technician', 'lead', 'apprentice'];
+const atTheCar: readonly Role[] = ['technician', 'lead'];
+const atWork: readonly Role[] = ['technician', 'lead', 'manager'];
 const leads: readonly Role[] = ['lead'];
 
 /**
- * Whose event each type may be. A manager reads records and makes none; releasing and deciding about a new version are
- * the lead's.
+ * Whose event of a real run each type may be. An apprentice practises only; a manager reads records and makes none;
+ * releasing and deciding about a new version are the lead's.
  */
 const whoMay: Readonly<Record<RunEventType, readonly Role[]>> = {
   opened: atTheCar,
@@ -25,7 +26,7 @@ const whoMay: Readonly<Record<RunEventType, readonly Role[]>> = {
   'timer-ended': atTheCar,
   'choice-made': atTheCar,
   'photo-attached': atTheCar,
-  'note-written': everyRole,
+  'note-written': atWork,
   'margin-note-written': atTheCar,
   disturbed: atTheCar,
   restored: atTheCar,
@@ -47,16 +48,19 @@ const whoMay: Readonly<Record<RunEventType, readonly Role[]>> = {
   'write-up-written': atTheCar,
   closed: atTheCar,
   verified: atTheCar,
-  signed: everyRole,
-  amended: everyRole,
-  joined: everyRole,
-  'clock-jumped': everyRole,
-  transcribed: everyRole,
+  signed: atWork,
+  amended: atWork,
+  joined: atWork,
+  'clock-jumped': atWork,
+  transcribed: atWork,
 };
 
-/** Why this event may not be its actor's; undefined when it may. `role` is undefined for a person whom nobody knows. */
+/** Why this event of a real run may not be its actor's; undefined when it may. `role` is undefined for a person whom nobody knows. */
 export function missingRight(event: RunEvent, role: Role | undefined): string | undefined {
   if (role === undefined) return `event ${event.seq} is by a person who has no account here`;
+  if (role === 'apprentice') {
+    return `event ${event.seq} (${event.type}) is by an apprentice: apprentices practise only, and make no real run`;
+  }
   const isReview = event.type === 'signed' && event.data.meaning === 'reviewed';
   const mayDo = isReview ? (['lead', 'manager'] as const) : whoMay[event.type];
   return mayDo.some((allowed) => allowed === role)

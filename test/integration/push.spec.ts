@@ -1,6 +1,14 @@
 import { createHash } from 'node:crypto';
 import { canonicalJson, type RunEvent } from '../../procedures/engine';
-import { closedRun, continued, lindqvistId, okaforId, openedRun, publishSmallProcedure } from '../support/test-run';
+import {
+  brandtId,
+  closedRun,
+  continued,
+  lindqvistId,
+  okaforId,
+  openedRun,
+  publishSmallProcedure,
+} from '../support/test-run';
 import { TestServer } from '../support/test-server';
 import { TestTablet } from '../support/test-tablet';
 
@@ -252,6 +260,22 @@ describe('rights in a push', () => {
     const { refused } = (await stored(run.header.runId)) as { refused: { event: string; reason: string }[] };
     expect(refused).toEqual([expect.objectContaining({ seq: 3, event: canonicalJson(wrong.events[2]) })]);
     expect(refused[0]!.reason).toMatch(/manager/);
+  });
+
+  it('refuses a real run by an apprentice, and an apprentice in the run of another', async () => {
+    const own = openedRun({ device: tablet.id, actor: brandtId });
+    const answer = await tablet.push({ runs: [own] }, { as: 'brandt' });
+    const words = /apprentices practise only/;
+    expect(answer.json.runs[0]).toMatchObject({
+      acceptedThrough: 0,
+      problem: { code: 'not-allowed', status: 403, seq: 1, detail: expect.stringMatching(words) },
+    });
+    expect(await stored(own.header.runId)).toMatchObject({ run: [], events: [] });
+    const run = openedRun({ device: tablet.id });
+    const note = { type: 'note-written', data: { step: 'start', text: 'Not mine to write.' } } as const;
+    const others = await tablet.push({ runs: [continued(run, note, { device: tablet.id, actor: brandtId })] });
+    expect(others.json.runs[0]).toMatchObject({ acceptedThrough: 2, problem: { code: 'not-allowed', seq: 3 } });
+    expect(await storedEvents(run.header.runId)).toHaveLength(2);
   });
 
   it('refuses a person without an account, but takes a colleague along', async () => {

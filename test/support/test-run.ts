@@ -24,6 +24,7 @@ export interface Writer {
 
 export const okaforId = demoPeople[0]!.id;
 export const adeyemiId = demoPeople[1]!.id;
+export const brandtId = demoPeople[2]!.id;
 export const lindqvistId = demoPeople[3]!.id;
 
 /** Publishes the procedure that the specs run; gives its version. */
