@@ -87,6 +87,38 @@ describe('the Method desk', () => {
     expect(textOf(byRole(root(), 'status', 'is a draft now'))).toContain('seal.json');
   });
 
+  it('asks before a file takes the place of the draft that waits', async () => {
+    await showList();
+    await choose(fileText(crankcaseValveSeal));
+    expect(textOf(byRole(root(), 'dialog'))).toMatch(
+      /Crankcase valve seal, better.*brought in by R\. Adeyemi, today .*seal\.json takes its place/,
+    );
+    server.expectNone('/api/procedures/drafts');
+    byRole(root(), 'button', 'Replace it').click();
+    await settle();
+    const sent = await answer('POST', '/api/procedures/drafts', { id: 'd', procedureId: id, problems: [] }, 201);
+    expect(sent).toEqual(crankcaseValveSeal);
+    await showList();
+    expect(textOf(byRole(root(), 'status', 'is a draft now'))).toContain('seal.json');
+  });
+
+  it('leaves the draft that waits when it is not to be replaced, and says so', async () => {
+    await showList();
+    await choose(fileText(crankcaseValveSeal));
+    byRole(root(), 'button', 'Leave the earlier draft').click();
+    await settle();
+    server.expectNone('/api/procedures/drafts');
+    expect(textOf(byRole(root(), 'status', 'was not brought in'))).toContain('The earlier draft stays as it is.');
+  });
+
+  it('asks nothing where another procedure has a draft', async () => {
+    await showList([{ ...listed, id: 'another' }]);
+    await choose(fileText(crankcaseValveSeal));
+    expect(allByRole(root(), 'dialog')).toEqual([]);
+    await answer('POST', '/api/procedures/drafts', { id: 'd', procedureId: id, problems: [] }, 201);
+    await showList();
+  });
+
   it('lists what is to be mended by step and place, and keeps the file', async () => {
     await showList();
     await choose(

@@ -2,6 +2,7 @@ import { Dialog } from '@angular/cdk/dialog';
 import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
 import { firstValueFrom } from 'rxjs';
 import { clock } from '../core/time-and-ids';
+import { dayTime } from '../core/time-words';
 import { LoadProblem } from '../shared/load-problem';
 import { TopBar } from '../shared/top-bar';
 import { VersionExporter } from './export-version';
@@ -10,6 +11,7 @@ import { MethodDeskStore } from './method-desk-store';
 import type { DraftSummary, ProcedureSummary } from './method-wire';
 import { ProcedureVersions } from './procedure-versions';
 import { PublishDialog, type PublishQuestion } from './publish-dialog';
+import { ReplaceDraftDialog, type ReplaceDraftQuestion } from './replace-draft-dialog';
 import { WithdrawDialog, type WithdrawQuestion } from './withdraw-dialog';
 
 /** The Method desk: every procedure with its versions, and the way from a file to a published version. */
@@ -33,8 +35,18 @@ export class MethodDeskPage {
     void this.store.recall();
   }
 
-  protected bringIn({ fileName, text }: ChosenFile): Promise<void> {
-    return this.store.bringIn(fileName, text);
+  protected async bringIn({ fileName, text }: ChosenFile): Promise<void> {
+    const waiting = this.store.draftInPlaceOf(text);
+    if (waiting === undefined || (await this.mayReplace(waiting, fileName))) {
+      return this.store.bringIn(fileName, text);
+    }
+    this.store.say({ tone: 'done', text: `${fileName} was not brought in. The earlier draft stays as it is.` });
+  }
+
+  /** Tries the kept file again, as it is. */
+  protected async tryAgain(): Promise<void> {
+    const kept = this.store.unfinished();
+    if (kept !== undefined) await this.bringIn(kept);
   }
 
   protected async publish({ versions }: ProcedureSummary, draft: DraftSummary): Promise<void> {
@@ -65,5 +77,11 @@ export class MethodDeskPage {
       tone: 'failed',
       text: `${fileName} could not be read: it was moved or changed. Choose it again.`,
     });
+  }
+
+  private async mayReplace({ title, importedAt, importedBy }: DraftSummary, fileName: string): Promise<boolean> {
+    const data: ReplaceDraftQuestion = { title, when: dayTime(Date.parse(importedAt), this.now), importedBy, fileName };
+    const opened = this.dialog.open<boolean>(ReplaceDraftDialog, { data, ariaLabelledBy: 'replace-draft-title' });
+    return (await firstValueFrom(opened.closed)) === true;
   }
 }

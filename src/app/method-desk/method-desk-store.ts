@@ -4,6 +4,7 @@ import { Sync } from '../core/sync';
 import { problemsOf } from './import-problems';
 import { ImportKeeper, type KeptImport } from './kept-import';
 import { MethodShelf, procedureListResource } from './method-shelf';
+import type { DraftSummary } from './method-wire';
 import { readProcedureFile } from './read-procedure-file';
 
 /** What was last done, for the person to see. */
@@ -60,10 +61,12 @@ export class MethodDeskStore {
     });
   }
 
-  /** Tries the kept file again, as it is. */
-  async tryAgain(): Promise<void> {
-    const kept = this.kept();
-    if (kept !== undefined) await this.bringIn(kept.fileName, kept.text);
+  /** The draft whose place a file would take, by the list as it was last fetched. */
+  draftInPlaceOf(text: string): DraftSummary | undefined {
+    const read = readProcedureFile(text);
+    if (!read.ok || !('id' in read.document)) return undefined;
+    const { id } = read.document;
+    return this.procedures()?.find((procedure) => procedure.id === id)?.draft ?? undefined;
   }
 
   /** Lets go of the kept file. */
