@@ -99,7 +99,7 @@ function recordDerived(
   if (isComplete(drafting, step)) completeStep(drafting, step);
 }
 
-/** The newest take of this claim no longer counts: it was a slip of the finger, or read wrongly. */
+/** The newest take of this claim no longer counts; the record keeps it, with the reason that the person gave. */
 export function takeBack(drafting: Drafting, { name, reason }: Extract<RunCommand, { do: 'take-back' }>): void {
   const seq = own(drafting.state.current?.takes ?? {}, name)?.at(-1)?.seq;
   if (seq === undefined) throw new CannotDo('nothing-taken', 'Nothing is recorded here yet that could be taken back.');

@@ -14,6 +14,7 @@ async function listenToTheBench(page: Page): Promise<void> {
   await expect(page.getByText('421 samples')).toBeVisible();
   await tap(page.getByRole('button', { name: 'Take this series' }));
   await tap(page.getByRole('button', { name: 'It never stopped' }));
+  await tap(page.getByRole('button', { name: 'Sure? It never stopped' }));
 }
 
 /** What a careful apprentice enters, told by the bench alone. */

@@ -7,12 +7,13 @@ import { ChangeDetectionStrategy, Component, input, linkedSignal, output } from 
 @Component({
   selector: 'bay-sure-button',
   template: `
+    @if (isAsked()) {
+      <!-- Where the first tap was stands the way back: a bounce of the finger undoes, and does not confirm. -->
+      <button type="button" (click)="isAsked.set(false)">Back</button>
+    }
     <button type="button" [class.asked]="isAsked()" [disabled]="isBusy() || !isReady()" (click)="press()">
       {{ isAsked() ? 'Sure? ' + label() : label() }}
     </button>
-    @if (isAsked()) {
-      <button type="button" (click)="isAsked.set(false)">Back</button>
-    }
   `,
   styles: `
     :host {
