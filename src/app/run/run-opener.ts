@@ -2,6 +2,7 @@ import { inject, Injectable } from '@angular/core';
 import { replay } from '../../../procedures/engine';
 import { OfflineStore } from '../core/offline-store';
 import { RunJournal } from '../core/run-journal';
+import { Session } from '../core/session';
 import { procedureCompiler } from '../core/procedure-compiler';
 import type { RunView } from './run-view';
 
@@ -15,7 +16,7 @@ export type OpenedRun =
       /** By how much the device's clock stood before the last event's, milliseconds. */
       readonly clockBackMs: number;
     }
-  | { readonly ok: false; readonly why: 'missing' | 'no-procedure' | 'damaged'; readonly what: string };
+  | { readonly ok: false; readonly why: 'missing' | 'not-allowed' | 'no-procedure' | 'damaged'; readonly what: string };
 
 /** Takes a run from the store, with the very version of the procedure that it was begun under, and replays it. */
 @Injectable({ providedIn: 'root' })
@@ -23,12 +24,19 @@ export class RunOpener {
   private readonly journal = inject(RunJournal);
   private readonly store = inject(OfflineStore);
   private readonly compile = inject(procedureCompiler);
+  private readonly session = inject(Session);
 
   async open(runId: string): Promise<OpenedRun> {
     const isHeld = await this.journal.hold(runId);
     const stored = await this.journal.load(runId);
     if (stored === undefined) return { ok: false, why: 'missing', what: runId };
     const { header, events, clockBackMs } = stored;
+    const role = this.session.person()?.role;
+    // What the server would refuse from this person must not be written on the tablet either.
+    if (header.kind === 'real' && role !== 'technician' && role !== 'lead') {
+      this.journal.release(runId);
+      return { ok: false, why: 'not-allowed', what: role ?? '' };
+    }
     const published = await this.store.procedures.get([header.procedureId, header.version]);
     if (published === undefined) {
       return { ok: false, why: 'no-procedure', what: `${header.procedureId}, version ${header.version}` };

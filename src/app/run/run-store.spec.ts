@@ -5,6 +5,7 @@ import { openingFacts } from '../../../procedures/engine/testing/run-walk';
 import { contentHash } from '../../../procedures/engine';
 import { OfflineStore } from '../core/offline-store';
 import { RunJournal } from '../core/run-journal';
+import type { Person } from '../core/wire';
 import {
   closeStores,
   coreForSpecs,
@@ -27,10 +28,10 @@ const header: RunHeader = {
   half: 'cold',
 };
 
-async function openedRun(): Promise<{ store: RunStore; time: HeldTime; journal: RunJournal }> {
+async function openedRun(person?: Person): Promise<{ store: RunStore; time: HeldTime; journal: RunJournal }> {
   const { server, time } = coreForSpecs([RunStore]);
   await registeredTablet();
-  await workOffline(server);
+  await workOffline(server, person);
   await TestBed.inject(OfflineStore).procedures.put({
     id: header.procedureId,
     version: header.version,
@@ -64,6 +65,15 @@ describe('RunStore', () => {
     expect(store.phase()).toBe('ready');
     expect(store.state()?.current?.id).toBe('start');
     expect(store.needsResume()).toBe(false);
+  });
+
+  it.each(['apprentice', 'manager'] as const)('keeps the %s out of a real run, and writes nothing', async (role) => {
+    const person: Person = { id: 'p-other', name: 'other', displayName: 'T. Brandt', role, siteId: 's-ossenholt' };
+    const { store, journal } = await openedRun(person);
+    await store.load(header.runId);
+    expect(store.phase()).toBe('not-allowed');
+    expect(await store.act({ do: 'acknowledge-caution', caution: 0 })).toBe(false);
+    expect((await journal.load(header.runId))?.events).toHaveLength(2);
   });
 
   it('says that a run is not on this tablet', async () => {
