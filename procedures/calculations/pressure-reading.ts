@@ -23,6 +23,12 @@ export interface EndReading {
 export function readPressureAt(pressure: Series, timeS: number, gapS: number, resolutionKpa: number): EndReading {
   const { timeS: times, value } = pressure;
   const end = Math.max(1, indexAt(times, timeS + 1e-9));
+  const before = value[end - 1];
+  const after = value[end];
+  // Typed points stand seconds apart: a line through them would take a pause for a rise. The truth lies between the two.
+  if (before !== undefined && after !== undefined && timeS - (times[end - 1] ?? timeS) > readingS + 1e-9) {
+    return { valueKpa: before, scatterKpa: 0, unseenRiseKpa: Math.max(0, after - before) };
+  }
   const start = Math.max(0, Math.min(indexAt(times, timeS - readingS), end - fewestReadingSamples));
   const x = times.subarray(start, end).map((time) => time - timeS);
   const y = value.subarray(start, end);
