@@ -30,11 +30,15 @@ export class FileTaking {
   readonly problem = input<RunProblem>();
   readonly isBusy = input(false);
   readonly seriesTaken = output<SeriesTaken>();
+  /** Another file or another column was chosen: what was refused before is no longer about what stands here. */
+  readonly changed = output();
   readonly left = output();
 
   protected readonly file = signal<ScanFile | undefined>(undefined);
   protected readonly isReading = signal(false);
   protected readonly choice = signal<ColumnChoice>({});
+  /** Counts the files, so that a slow one does not take the place of a later one. */
+  private taken = 0;
   protected readonly log = computed(() => {
     const file = this.file();
     return file?.ok === true ? file : undefined;
@@ -62,8 +66,9 @@ export class FileTaking {
     input.value = '';
     if (file === undefined) return;
     const refused = refusedBySize(file.name, file.size);
-    if (refused !== undefined) return this.file.set({ ok: false, message: refused });
-    await this.read(file.name, () => file.arrayBuffer());
+    if (refused === undefined) return this.read(file.name, () => file.arrayBuffer());
+    this.clear();
+    this.file.set({ ok: false, message: refused });
   }
 
   protected async takeOffered({ fileName, path }: { fileName: string; path: string }): Promise<void> {
@@ -73,6 +78,7 @@ export class FileTaking {
   protected choose(channel: Channel, column: string): void {
     const index = column === '' ? undefined : Number(column);
     this.choice.update((choice) => ({ ...choice, [channel.name]: index }));
+    this.changed.emit();
   }
 
   protected keep(): void {
@@ -96,17 +102,31 @@ export class FileTaking {
   }
 
   private async read(fileName: string, bytes: () => Promise<ArrayBuffer>): Promise<void> {
+    const mine = this.clear();
     this.isReading.set(true);
-    try {
-      const file = readScanFile(fileName, new Uint8Array(await bytes()));
-      this.file.set(file);
-      if (file.ok) this.choice.set(guessColumns(this.step(), file.log));
-    } catch (error) {
-      // NotReadableError and its like: the file was moved or its medium taken out meanwhile. TypeError: not fetched.
-      if (!(error instanceof DOMException || error instanceof TypeError)) throw error;
-      this.file.set({ ok: false, message: `${fileName} could not be read. Choose it again.` });
-    } finally {
-      this.isReading.set(false);
-    }
+    const file = await fileFrom(fileName, bytes);
+    if (mine !== this.taken) return;
+    this.isReading.set(false);
+    this.file.set(file);
+    if (file.ok) this.choice.set(guessColumns(this.step(), file.log));
+  }
+
+  /** Takes away the file that stood here and what was said about it; gives the number of the one that comes. */
+  private clear(): number {
+    this.file.set(undefined);
+    this.isReading.set(false);
+    this.changed.emit();
+    this.taken += 1;
+    return this.taken;
+  }
+}
+
+async function fileFrom(fileName: string, bytes: () => Promise<ArrayBuffer>): Promise<ScanFile> {
+  try {
+    return readScanFile(fileName, new Uint8Array(await bytes()));
+  } catch (error) {
+    // NotReadableError and its like: the file was moved or its medium taken out meanwhile. TypeError: not fetched.
+    if (!(error instanceof DOMException || error instanceof TypeError)) throw error;
+    return { ok: false, message: `${fileName} could not be read. Choose it again.` };
   }
 }

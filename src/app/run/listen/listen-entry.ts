@@ -37,6 +37,8 @@ export class ListenEntry extends StepEntry<'listen'> {
 
   /** Whether a file is being chosen. */
   protected readonly taking = signal(false);
+  /** What was refused, until what it was about is changed. */
+  protected readonly standing = linkedSignal(() => this.problem());
   /** The marks as they are being moved, before they are recorded. */
   protected readonly moved = linkedSignal<number, readonly PlotMark[] | undefined>({
     source: () => this.run().state.seq,
@@ -74,4 +76,10 @@ export class ListenEntry extends StepEntry<'listen'> {
     const limit = this.run().procedure.document.limits.find(({ of }) => of.includes('gauge'));
     return limit === undefined ? undefined : /(\d+(?:\.\d+)?)/.exec(limit.holds)?.[1];
   });
+
+  /** What was refused on one page is not said again on the other. */
+  protected show(page: 'typing' | 'file'): void {
+    this.taking.set(page === 'file');
+    this.standing.set(undefined);
+  }
 }
