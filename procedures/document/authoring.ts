@@ -4,4 +4,5 @@
  */
 export { validateDocument, type DocumentProblem, type Validation } from './validate-document';
 export { lintProcedure, type LintOptions, type LintReport } from './lint';
+export { type CalledVersion, type PublishedVersions } from './lint/called';
 export { type LintFinding, type LintRule } from './lint/lint-finding';

@@ -1,3 +1,4 @@
+import { expandCalls, type CallBlock, type Expansion, type ProcedureLibrary } from './call/expand-calls';
 import { declarationsOf, kindOfDeclaration, type Declaration } from './declarations';
 import { expressionPlaces, type ExpressionPlace } from './expression-places';
 import type { Environment, Evaluation } from './expression/environment';
@@ -13,10 +14,13 @@ import type { ProcedureDocument, Step } from './procedure-document';
 
 /** A document whose every expression was read, checked and compiled once. */
 export interface CompiledProcedure {
+  /** With the steps of the procedures that it calls written in. */
   readonly document: ProcedureDocument;
   readonly step: (id: string) => Step | undefined;
   /** The expression with exactly this text. Throws RangeError on a text that the document does not hold. */
   readonly expression: (source: string) => CompiledExpression;
+  /** The called procedure that a step or finding belongs to, the innermost one. */
+  readonly blockOf: (id: string) => CallBlock | undefined;
   /** What a name stands for; undefined where no input, quantity, option or finding has it. */
   readonly declared: (name: string) => Declaration | undefined;
 }
@@ -53,9 +57,13 @@ export type Compilation =
 
 /**
  * Reads every expression of a document once, checks what it gives against where it stands, and compiles it. The
- * document has the schema's shape already (`validateDocument`). All problems come back together.
+ * document has the schema's shape already (`validateDocument`). All problems come back together. With a library the steps
+ * of called procedures are written in first, which a run needs; without one a call stays one step.
  */
-export function compileProcedure(document: ProcedureDocument): Compilation {
+export function compileProcedure(authored: ProcedureDocument, library?: ProcedureLibrary): Compilation {
+  const expanded = library === undefined ? standingAlone(authored) : expandCalls(authored, library);
+  if (!expanded.ok) return expanded;
+  const { document, blocks } = expanded;
   const { declarations, problems: nameProblems } = declarationsOf(document);
   const problems: CompileProblem[] = [...nameProblems];
   const expressions = new Map<string, CompiledExpression>();
@@ -71,6 +79,7 @@ export function compileProcedure(document: ProcedureDocument): Compilation {
     procedure: {
       document,
       step: (id) => steps.get(id),
+      blockOf: (id) => blocks.find((block) => block.steps.has(id)),
       expression: (source) => {
         const known = expressions.get(source);
         if (known === undefined) throw new RangeError(`expression is ${source}; allowed: one of the document's own`);
@@ -79,6 +88,10 @@ export function compileProcedure(document: ProcedureDocument): Compilation {
       declared: (name) => declarations.get(name),
     },
   };
+}
+
+function standingAlone(document: ProcedureDocument): Expansion {
+  return { ok: true, document, blocks: [] };
 }
 
 type Compiled =

@@ -2,6 +2,7 @@ import type { UnitName } from '../calculations';
 import { declaredKind, truth, type Kind } from './expression/kinds';
 import { isCalculation, isQuestion } from './expression/vocabulary';
 import type { PressureSense, ProcedureDocument, Quantity, Step } from './procedure-document';
+import { findsOf, isFoundQuantity, readsOf, resultsOf, takenOf } from './step-parts';
 
 /** What a name of a document stands for. */
 export type Declaration =
@@ -66,28 +67,30 @@ function allDeclarations(document: ProcedureDocument): readonly Declaration[] {
 }
 
 function stepDeclarations(step: Step): readonly Declaration[] {
-  const results = step.kind === 'finding' ? [] : (step.results ?? []).map((result) => quantity(result, step.id));
-  return [...ownDeclarations(step), ...results];
+  return [
+    ...readsOf(step).flatMap((read) => [
+      quantity(read, step.id),
+      ...(read.ways ?? []).flatMap(({ entry }) => (entry === undefined ? [] : [quantity(entry, step.id)])),
+    ]),
+    ...findsOf(step).map((found) =>
+      isFoundQuantity(found) ? quantity(found, step.id) : truthNamed(found.name, found.what, step.id),
+    ),
+    ...takenOf(step).map((taken) => quantity(taken, step.id)),
+    ...ownTruths(step),
+    ...resultsOf(step).map((result) => quantity(result, step.id)),
+  ];
 }
 
-function ownDeclarations(step: Step): readonly Declaration[] {
+function ownTruths(step: Step): readonly Declaration[] {
   switch (step.kind) {
-    case 'reading':
-    case 'wait':
-      return step.reads.flatMap((read) => [
-        quantity(read, step.id),
-        ...(read.ways ?? []).flatMap(({ entry }) => (entry === undefined ? [] : [quantity(entry, step.id)])),
-      ]);
     case 'choice':
       return step.options.map(({ name, label }) => truthNamed(name, label, step.id));
     case 'drive':
       return step.windows.map(({ name, label }) => truthNamed(name, label, step.id));
     case 'codes':
       return step.newCodes === undefined ? [] : [truthNamed(step.newCodes, 'a new trouble code', step.id)];
-    case 'listen':
-      return step.finds.map((found) =>
-        'unit' in found ? quantity(found, step.id) : truthNamed(found.name, found.what, step.id),
-      );
+    case 'call':
+      return step.finds.map(({ name, finding }) => truthNamed(name, `${step.title}: ${finding}`, step.id));
     case 'finding':
       return [{ ...truthNamed(step.id, step.title, step.id), isFinding: true }];
     default:

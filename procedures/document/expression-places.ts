@@ -1,4 +1,5 @@
-import type { Band, EntryWay, ProcedureDocument, Quantity, Sentence, Step } from './procedure-document';
+import type { Band, EntryWay, ProcedureDocument, Quantity, ReadQuantity, Sentence, Step } from './procedure-document';
+import { findsOf, isFoundQuantity, placedReadsOf, takenOf } from './step-parts';
 
 /** An expression of a document: where it stands, and what it has to give there. */
 export interface ExpressionPlace {
@@ -38,34 +39,33 @@ function stepPlaces(step: Step, pointer: string): readonly ExpressionPlace[] {
 }
 
 function ownPlaces(step: Step, pointer: string): readonly Place[] {
+  const quantities = [
+    ...placedReadsOf(step).flatMap(({ part, pointer: place }) => readPlaces(part, `${pointer}/${place}`)),
+    ...findsOf(step).flatMap((found, index) =>
+      isFoundQuantity(found) ? bandPlaces(found, `${pointer}/finds/${index}`) : [],
+    ),
+    ...takenOf(step).flatMap((taken, index) => bandPlaces(taken, `${pointer}/takes/${index}`)),
+  ];
   switch (step.kind) {
-    case 'reading':
-      return readPlaces(step.reads, pointer);
     case 'wait':
       return [
-        ...readPlaces(step.reads, pointer),
+        ...quantities,
         { source: step.until, pointer: `${pointer}/until`, where: 'what is waited for', gives: truth },
       ];
-    case 'listen':
-      return step.finds.flatMap((found, index) =>
-        'unit' in found ? bandPlaces(found, `${pointer}/finds/${index}`) : [],
-      );
     case 'finding':
       return (['cause', 'correction', 'customer'] as const).flatMap((part) =>
         sentencePlaces(step[part], `${pointer}/${part}`, part),
       );
     default:
-      return [];
+      return quantities;
   }
 }
 
-function readPlaces(reads: Extract<Step, { kind: 'reading' }>['reads'], pointer: string): readonly Place[] {
-  return reads.flatMap((quantity, index) => [
-    ...(quantity.ways ?? []).flatMap((way, place) =>
-      wayPlaces(way, quantity, `${pointer}/reads/${index}/ways/${place}`),
-    ),
-    ...bandPlaces(quantity, `${pointer}/reads/${index}`),
-  ]);
+function readPlaces(quantity: ReadQuantity, pointer: string): readonly Place[] {
+  return [
+    ...(quantity.ways ?? []).flatMap((way, place) => wayPlaces(way, quantity, `${pointer}/ways/${place}`)),
+    ...bandPlaces(quantity, pointer),
+  ];
 }
 
 function wayPlaces(way: EntryWay, of: Quantity, pointer: string): readonly Place[] {

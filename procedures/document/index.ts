@@ -10,6 +10,8 @@ export {
   type CompiledProcedure,
   type CompileProblem,
 } from './compile-procedure';
+export { channelsOf, findsOf, isFoundQuantity, isFoundTruth, readsOf, resultsOf, takenOf } from './step-parts';
+export { type CallBlock, type ProcedureLibrary } from './call/expand-calls';
 export { type Declaration } from './declarations';
 export { type Environment, type Evaluation, type EvaluationProblem } from './expression/environment';
 export { type Expression, type ExpressionProblem, type Span } from './expression/expression';

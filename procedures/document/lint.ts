@@ -4,6 +4,7 @@ import type { Expression } from './expression/expression';
 import { parseExpression } from './expression/parse';
 import { narrowBands } from './lint/band-and-gear';
 import { unboundedLoops } from './lint/bounded-loops';
+import { unsoundCalls, type PublishedVersions } from './lint/called';
 import { piledUpCautions } from './lint/cautions';
 import { mixedConnectives } from './lint/conditions';
 import { bandsBeyondLimits } from './lint/limit-and-band';
@@ -31,6 +32,8 @@ export interface LintReport {
 export interface LintOptions {
   /** The parts that each drawn sheet has; without it pictures are not held against the drawings. */
   readonly parts?: Readonly<Record<string, readonly string[]>>;
+  /** The published versions that may be called; without it calls are not held against them. */
+  readonly published?: PublishedVersions;
 }
 
 const errorRules: readonly ((subject: LintSubject) => readonly LintFinding[])[] = [
@@ -47,6 +50,7 @@ const errorRules: readonly ((subject: LintSubject) => readonly LintFinding[])[] 
   missingParts,
   mixedConnectives,
   piledUpCautions,
+  unsoundCalls,
 ];
 
 /**

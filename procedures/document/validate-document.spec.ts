@@ -47,6 +47,17 @@ describe('each field of each part', () => {
     'gear',
     'takes',
     'ways',
+    'validity',
+    'minutes',
+    'until',
+    'short',
+    'notes',
+    'stay',
+    'release',
+    'verify',
+    'begins',
+    'ends',
+    'atLeastSeconds',
     'entry',
     'uncertainty',
     'why',
@@ -68,6 +79,9 @@ describe('each field of each part', () => {
     /\/(shows|plausible)\/(low|high)$/,
     /\/next\/\d+\/when$/,
     /^\/steps\/1[3-6]\/verdict$/, // a finding's verdict
+    /^\/steps\/9\/until$/, // what is waited for
+    /^\/steps\/19\/takes$/, // what a call takes over
+    /^\/steps\/17\/shows$/, // what a photo must show
     /\/(atMost|thenceforth)$/, // each needs the other
   ];
   const isOptional = (pointer: string, field: string): boolean =>

@@ -1,31 +1,25 @@
-import type { Channel, EntryWay, Found, Quantity, ReadQuantity, Result, Step } from '../document';
+import {
+  findsOf,
+  isFoundQuantity,
+  isFoundTruth,
+  readsOf,
+  type EntryWay,
+  type FoundQuantity,
+  type FoundTruth,
+  type ReadQuantity,
+  type Step,
+} from '../document';
 
-/** What a step takes as readings. */
-export function readsOf(step: Step): readonly ReadQuantity[] {
-  return step.kind === 'reading' || step.kind === 'wait' ? step.reads : [];
-}
+export { channelsOf, readsOf, resultsOf } from '../document';
 
-/** What a step computes when it is done. */
-export function resultsOf(step: Step): readonly Result[] {
-  return step.kind === 'finding' ? [] : (step.results ?? []);
-}
-
-/** What a listen step looks for as quantities. */
-export function foundQuantitiesOf(step: Step): readonly Extract<Found, Quantity>[] {
-  return step.kind === 'listen' ? step.finds.filter((found): found is Extract<Found, Quantity> => 'unit' in found) : [];
+/** What a step looks for in its series as quantities. */
+export function foundQuantitiesOf(step: Step): readonly FoundQuantity[] {
+  return findsOf(step).filter(isFoundQuantity);
 }
 
 /** The listen step's names for `noise heard` and `noise stopped`. */
-export function noiseTruthsOf(step: Step): readonly Extract<Found, { what: 'noise-heard' | 'noise-stopped' }>[] {
-  return step.kind === 'listen'
-    ? step.finds.filter(
-        (found): found is Extract<Found, { what: 'noise-heard' | 'noise-stopped' }> => !('unit' in found),
-      )
-    : [];
-}
-
-export function channelsOf(step: Step): readonly Channel[] {
-  return step.kind === 'listen' ? step.channels : [];
+export function noiseTruthsOf(step: Step): readonly FoundTruth[] {
+  return findsOf(step).filter(isFoundTruth);
 }
 
 export function readQuantity(step: Step, name: string): ReadQuantity | undefined {

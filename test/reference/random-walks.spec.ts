@@ -47,6 +47,7 @@ function answersAt(step: Step, walk: RunWalk, choose: Choose): readonly RunComma
       ];
     case 'action':
     case 'compute':
+    case 'call':
       return [{ do: 'confirm' }];
     case 'reading':
     case 'wait':
@@ -72,6 +73,7 @@ function answersAt(step: Step, walk: RunWalk, choose: Choose): readonly RunComma
       return [
         { do: 'choose', options: step.windows.slice(0, choose(step.windows.length + 1)).map(({ name }) => name) },
       ];
+    case 'ramp':
     case 'listen': {
       const marks: RunCommand[] = [
         { do: 'mark', mark: 'noise-begins', timeS: 2, by: 'tap' },
@@ -87,6 +89,7 @@ function answersAt(step: Step, walk: RunWalk, choose: Choose): readonly RunComma
       return walk.state.disturbed.length === 0
         ? [{ do: 'confirm' }]
         : walk.state.disturbed.map(({ item }) => ({ do: 'restore', item }));
+    case 'photo':
     case 'finding':
       return [];
   }

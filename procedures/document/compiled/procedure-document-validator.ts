@@ -2,7 +2,7 @@
 // Made by build-validators.mjs from the schema; not to be edited.
 
 export const checkProcedureDocument = validate52;
-const schema19 = {"$schema":"https://json-schema.org/draft/2020-12/schema","$id":"procedure-document.schema.json","title":"Procedure document","description":"What a lead authors, a version freezes and a run walks. Agrees with procedure-document.ts; what lies between the parts (names, ways, restoring) is the lint's.","type":"object","properties":{"format":{"const":1},"id":{"$ref":"#/$defs/procedureId"},"title":{"$ref":"#/$defs/label"},"purpose":{"$ref":"#/$defs/paragraph"},"system":{"$ref":"#/$defs/label"},"appliesTo":{"$ref":"#/$defs/appliesTo"},"expectedMinutes":{"type":"integer","minimum":1,"maximum":1440},"useLevel":{"enum":["every-step","consulted"]},"pair":{"type":"boolean"},"gear":{"type":"array","items":{"$ref":"#/$defs/gearNeed"},"maxItems":30},"inputs":{"type":"array","items":{"$ref":"#/$defs/input"},"maxItems":100},"pictures":{"type":"array","items":{"$ref":"#/$defs/identifier"},"maxItems":30},"references":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":50},"deference":{"$ref":"#/$defs/paragraph"},"start":{"$ref":"#/$defs/startCard"},"limits":{"type":"array","items":{"$ref":"#/$defs/limit"},"maxItems":20},"stop":{"$ref":"#/$defs/stopSheet"},"steps":{"type":"array","items":{"$ref":"#/$defs/step"},"minItems":2,"maxItems":500}},"required":["format","id","title","purpose","system","appliesTo","expectedMinutes","useLevel","gear","inputs","pictures","references","deference","start","limits","stop","steps"],"additionalProperties":false,"$defs":{"unit":{"enum":["kPa","Pa","hPa","bar","psi","inHg","inH2O","mmHg","degC","degF","K","L/min","ft3/min","m3/s","g/s","kg/h","lb/min","L","cm3","m","km","mi","Nm","lbf.ft","V","mV","ohm","kohm","s","min","h","km/h","mph","%","1","rpm","dB"]},"sense":{"description":"Gauge and absolute are different kinds.","enum":["absolute","gauge"]},"name":{"description":"A name in expressions: letters and digits, first letter small.","type":"string","pattern":"^[a-z][A-Za-z0-9]*$","maxLength":60},"identifier":{"description":"Letters, digits and hyphens.","type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"procedureId":{"description":"Lower-case words joined by hyphens.","type":"string","pattern":"^[a-z0-9]+(-[a-z0-9]+)*$","maxLength":80},"decimal":{"description":"A figure as text, with the digits that it was given with.","type":"string","pattern":"^-?[0-9]+(\\.[0-9]+)?$","maxLength":20},"expression":{"description":"Text in the expression language.","type":"string","minLength":1,"maxLength":2000},"label":{"type":"string","minLength":1,"maxLength":120},"line":{"type":"string","minLength":1,"maxLength":300},"paragraph":{"description":"May be a template: {name} stands for a value of the run.","type":"string","minLength":1,"maxLength":1000},"range":{"type":"object","properties":{"low":{"type":"number"},"high":{"type":"number"}},"required":["low","high"],"additionalProperties":false},"caution":{"type":"object","properties":{"word":{"enum":["danger","warning","caution","notice"]},"text":{"$ref":"#/$defs/paragraph"}},"required":["word","text"],"additionalProperties":false},"appliesTo":{"type":"object","properties":{"codes":{"type":"array","items":{"type":"string","pattern":"^[PCBU][0-3][0-9A-F]{3}$"},"maxItems":100},"symptoms":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":30},"engine":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":30}},"required":["codes","symptoms","engine"],"additionalProperties":false},"instrumentKind":{"enum":["pressure-gauge","scan-tool","listening-probe","barometer","thermometer"]},"gearNeed":{"type":"object","properties":{"role":{"$ref":"#/$defs/name"},"kind":{"$ref":"#/$defs/instrumentKind"},"label":{"$ref":"#/$defs/label"},"optional":{"type":"boolean"},"shows":{"type":"object","properties":{"unit":{"$ref":"#/$defs/unit"},"low":{"type":"number"},"high":{"type":"number"},"resolution":{"type":"number","exclusiveMinimum":0}},"required":["unit","low","high","resolution"],"additionalProperties":false}},"required":["role","kind","label"],"additionalProperties":false},"input":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"from":{"enum":["site.elevation","visit.displacement","default"]},"default":{"$ref":"#/$defs/decimal"},"source":{"$ref":"#/$defs/line"}},"required":["name","label","unit","from","source"],"additionalProperties":false},"startCard":{"type":"object","properties":{"prerequisites":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":20},"stopActions":{"type":"array","items":{"$ref":"#/$defs/line"},"minItems":1,"maxItems":3},"people":{"$ref":"#/$defs/line"},"throughout":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12}},"required":["prerequisites","stopActions","people","throughout"],"additionalProperties":false},"limit":{"type":"object","properties":{"id":{"$ref":"#/$defs/identifier"},"holds":{"$ref":"#/$defs/expression"},"of":{"type":"array","items":{"$ref":"#/$defs/name"},"minItems":1,"maxItems":50},"says":{"$ref":"#/$defs/line"},"then":{"$ref":"#/$defs/line"}},"required":["id","holds","of","says","then"],"additionalProperties":false},"exit":{"type":"object","properties":{"to":{"description":"A step's id, or `verdict`.","type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"because":{"$ref":"#/$defs/line"},"verdict":{"$ref":"#/$defs/name"}},"required":["to","because"],"additionalProperties":false},"branch":{"type":"object","properties":{"to":{"description":"A step's id, or `verdict`.","type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"because":{"$ref":"#/$defs/line"},"verdict":{"$ref":"#/$defs/name"},"when":{"$ref":"#/$defs/expression"},"atMost":{"type":"integer","minimum":1,"maximum":20},"thenceforth":{"$ref":"#/$defs/exit"}},"required":["to","because","when"],"dependentRequired":{"atMost":["thenceforth"],"thenceforth":["atMost"]},"additionalProperties":false},"stopSheet":{"type":"object","properties":{"makeSafe":{"type":"array","items":{"$ref":"#/$defs/line"},"minItems":1,"maxItems":12},"exit":{"$ref":"#/$defs/exit"}},"required":["makeSafe","exit"],"additionalProperties":false},"band":{"type":"object","properties":{"low":{"$ref":"#/$defs/expression"},"high":{"$ref":"#/$defs/expression"},"when":{"$ref":"#/$defs/expression"},"unjudged":{"$ref":"#/$defs/line"},"source":{"$ref":"#/$defs/line"}},"required":["source"],"anyOf":[{"required":["low"]},{"required":["high"]}],"additionalProperties":false},"result":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"},"is":{"$ref":"#/$defs/expression"}},"required":["name","label","unit","is"],"additionalProperties":false},"entry":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"plausible":{"$ref":"#/$defs/range"},"gear":{"$ref":"#/$defs/name"}},"required":["name","label","unit","plausible"],"additionalProperties":false},"entryWay":{"type":"object","properties":{"id":{"$ref":"#/$defs/identifier"},"label":{"$ref":"#/$defs/label"},"hint":{"$ref":"#/$defs/line"},"entry":{"$ref":"#/$defs/entry"},"is":{"$ref":"#/$defs/expression"},"uncertainty":{"$ref":"#/$defs/expression"}},"required":["id","label","hint","is"],"additionalProperties":false},"readQuantity":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"},"gear":{"$ref":"#/$defs/name"},"plausible":{"$ref":"#/$defs/range"},"takes":{"type":"integer","minimum":1,"maximum":5},"ways":{"type":"array","items":{"$ref":"#/$defs/entryWay"},"minItems":1,"maxItems":10}},"required":["name","label","unit","plausible"],"additionalProperties":false},"picture":{"type":"object","properties":{"sheet":{"$ref":"#/$defs/identifier"},"marks":{"type":"array","items":{"$ref":"#/$defs/identifier"},"maxItems":30},"labels":{"type":"object","propertyNames":{"pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"maxProperties":30,"additionalProperties":{"$ref":"#/$defs/label"}}},"required":["sheet","marks"],"additionalProperties":false},"disturbed":{"type":"object","properties":{"item":{"$ref":"#/$defs/identifier"},"label":{"$ref":"#/$defs/label"},"restore":{"$ref":"#/$defs/line"}},"required":["item","label","restore"],"additionalProperties":false},"option":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"ask":{"$ref":"#/$defs/line"},"alone":{"type":"boolean"}},"required":["name","label"],"additionalProperties":false},"channel":{"type":"object","properties":{"name":{"enum":["gauge","manifold","boost","sound"]},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"gear":{"$ref":"#/$defs/name"},"needed":{"type":"boolean"}},"required":["name","label","unit","needed"],"additionalProperties":false},"foundTruth":{"type":"object","properties":{"what":{"enum":["noise-heard","noise-stopped"]},"name":{"$ref":"#/$defs/name"}},"required":["what","name"],"additionalProperties":false},"foundQuantity":{"type":"object","properties":{"what":{"enum":["seal-point","highest-gauge","manifold-gain","boost-gain","worst-gap"]},"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"}},"required":["what","name","label","unit"],"additionalProperties":false},"found":{"type":"object","discriminator":{"propertyName":"what"},"required":["what"],"oneOf":[{"$ref":"#/$defs/foundTruth"},{"$ref":"#/$defs/foundQuantity"}]},"driveWindow":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"what":{"$ref":"#/$defs/line"}},"required":["name","label","what"],"additionalProperties":false},"sentence":{"type":"object","properties":{"text":{"$ref":"#/$defs/paragraph"},"when":{"$ref":"#/$defs/expression"}},"required":["text"],"additionalProperties":false},"startStep":{"type":"object","properties":{"kind":{"const":"start"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"actionStep":{"type":"object","properties":{"kind":{"const":"action"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"readingStep":{"type":"object","properties":{"kind":{"const":"reading"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"reads":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","reads"],"additionalProperties":false},"choiceStep":{"type":"object","properties":{"kind":{"const":"choice"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"name":{"$ref":"#/$defs/name"},"several":{"type":"boolean"},"options":{"type":"array","items":{"$ref":"#/$defs/option"},"minItems":1,"maxItems":30},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","options"],"additionalProperties":false},"listenStep":{"type":"object","properties":{"kind":{"const":"listen"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"name":{"$ref":"#/$defs/name"},"channels":{"type":"array","items":{"$ref":"#/$defs/channel"},"minItems":1,"maxItems":4},"target":{"type":"number"},"finds":{"type":"array","items":{"$ref":"#/$defs/found"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","channels","target","finds"],"additionalProperties":false},"holdStep":{"type":"object","properties":{"kind":{"const":"hold"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"seconds":{"type":"integer","minimum":1,"maximum":86400},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","seconds"],"additionalProperties":false},"waitStep":{"type":"object","properties":{"kind":{"const":"wait"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"reads":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"until":{"$ref":"#/$defs/expression"},"meanwhile":{"$ref":"#/$defs/paragraph"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","reads","until","meanwhile"],"additionalProperties":false},"codesStep":{"type":"object","properties":{"kind":{"const":"codes"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"name":{"$ref":"#/$defs/name"},"comparedWith":{"$ref":"#/$defs/name"},"newCodes":{"$ref":"#/$defs/name"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name"],"additionalProperties":false},"driveStep":{"type":"object","properties":{"kind":{"const":"drive"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"name":{"$ref":"#/$defs/name"},"windows":{"type":"array","items":{"$ref":"#/$defs/driveWindow"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","windows"],"additionalProperties":false},"computeStep":{"type":"object","properties":{"kind":{"const":"compute"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"restoreStep":{"type":"object","properties":{"kind":{"const":"restore"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"findingStep":{"type":"object","properties":{"kind":{"const":"finding"},"id":{"$ref":"#/$defs/name"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"result":{"enum":["in","out","too-close"]},"verdict":{"$ref":"#/$defs/paragraph"},"cause":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"correction":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"customer":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"nextProcedure":{"$ref":"#/$defs/procedureId"}},"required":["id","number","title","action","kind","result","verdict","cause","correction","customer"],"additionalProperties":false},"step":{"type":"object","discriminator":{"propertyName":"kind"},"required":["kind"],"oneOf":[{"$ref":"#/$defs/startStep"},{"$ref":"#/$defs/actionStep"},{"$ref":"#/$defs/readingStep"},{"$ref":"#/$defs/choiceStep"},{"$ref":"#/$defs/listenStep"},{"$ref":"#/$defs/holdStep"},{"$ref":"#/$defs/waitStep"},{"$ref":"#/$defs/codesStep"},{"$ref":"#/$defs/driveStep"},{"$ref":"#/$defs/computeStep"},{"$ref":"#/$defs/restoreStep"},{"$ref":"#/$defs/findingStep"}]}}};
+const schema19 = {"$schema":"https://json-schema.org/draft/2020-12/schema","$id":"procedure-document.schema.json","title":"Procedure document","description":"What a lead authors, a version freezes and a run walks. Agrees with procedure-document.ts; what lies between the parts (names, ways, restoring) is the lint's.","type":"object","properties":{"format":{"const":1},"id":{"$ref":"#/$defs/procedureId"},"title":{"$ref":"#/$defs/label"},"purpose":{"$ref":"#/$defs/paragraph"},"system":{"$ref":"#/$defs/label"},"appliesTo":{"$ref":"#/$defs/appliesTo"},"expectedMinutes":{"type":"integer","minimum":1,"maximum":1440},"useLevel":{"enum":["every-step","consulted"]},"pair":{"type":"boolean"},"gear":{"type":"array","items":{"$ref":"#/$defs/gearNeed"},"maxItems":30},"inputs":{"type":"array","items":{"$ref":"#/$defs/input"},"maxItems":100},"pictures":{"type":"array","items":{"$ref":"#/$defs/identifier"},"maxItems":30},"references":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":50},"deference":{"$ref":"#/$defs/paragraph"},"start":{"$ref":"#/$defs/startCard"},"limits":{"type":"array","items":{"$ref":"#/$defs/limit"},"maxItems":20},"stop":{"$ref":"#/$defs/stopSheet"},"steps":{"type":"array","items":{"$ref":"#/$defs/step"},"minItems":2,"maxItems":500}},"required":["format","id","title","purpose","system","appliesTo","expectedMinutes","useLevel","gear","inputs","pictures","references","deference","start","limits","stop","steps"],"additionalProperties":false,"$defs":{"unit":{"enum":["kPa","Pa","hPa","bar","psi","inHg","inH2O","mmHg","degC","degF","K","L/min","ft3/min","m3/s","g/s","kg/h","lb/min","L","cm3","m","km","mi","Nm","lbf.ft","V","mV","ohm","kohm","s","min","h","km/h","mph","%","1","rpm","dB"]},"sense":{"description":"Gauge and absolute are different kinds.","enum":["absolute","gauge"]},"name":{"description":"A name in expressions: letters and digits, first letter small.","type":"string","pattern":"^[a-z][A-Za-z0-9]*$","maxLength":60},"identifier":{"description":"Letters, digits and hyphens.","type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"procedureId":{"description":"Lower-case words joined by hyphens.","type":"string","pattern":"^[a-z0-9]+(-[a-z0-9]+)*$","maxLength":80},"decimal":{"description":"A figure as text, with the digits that it was given with.","type":"string","pattern":"^-?[0-9]+(\\.[0-9]+)?$","maxLength":20},"expression":{"description":"Text in the expression language.","type":"string","minLength":1,"maxLength":2000},"label":{"type":"string","minLength":1,"maxLength":120},"line":{"type":"string","minLength":1,"maxLength":300},"paragraph":{"description":"May be a template: {name} stands for a value of the run.","type":"string","minLength":1,"maxLength":1000},"range":{"type":"object","properties":{"low":{"type":"number"},"high":{"type":"number"}},"required":["low","high"],"additionalProperties":false},"caution":{"type":"object","properties":{"word":{"enum":["danger","warning","caution","notice"]},"text":{"$ref":"#/$defs/paragraph"}},"required":["word","text"],"additionalProperties":false},"appliesTo":{"type":"object","properties":{"codes":{"type":"array","items":{"type":"string","pattern":"^[PCBU][0-3][0-9A-F]{3}$"},"maxItems":100},"symptoms":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":30},"engine":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":30}},"required":["codes","symptoms","engine"],"additionalProperties":false},"instrumentKind":{"enum":["pressure-gauge","scan-tool","listening-probe","barometer","thermometer"]},"gearNeed":{"type":"object","properties":{"role":{"$ref":"#/$defs/name"},"kind":{"$ref":"#/$defs/instrumentKind"},"label":{"$ref":"#/$defs/label"},"optional":{"type":"boolean"},"shows":{"type":"object","properties":{"unit":{"$ref":"#/$defs/unit"},"low":{"type":"number"},"high":{"type":"number"},"resolution":{"type":"number","exclusiveMinimum":0}},"required":["unit","low","high","resolution"],"additionalProperties":false}},"required":["role","kind","label"],"additionalProperties":false},"input":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"from":{"enum":["site.elevation","visit.displacement","default"]},"default":{"$ref":"#/$defs/decimal"},"source":{"$ref":"#/$defs/line"}},"required":["name","label","unit","from","source"],"additionalProperties":false},"startCard":{"type":"object","properties":{"prerequisites":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":20},"stopActions":{"type":"array","items":{"$ref":"#/$defs/line"},"minItems":1,"maxItems":3},"people":{"$ref":"#/$defs/line"},"throughout":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12}},"required":["prerequisites","stopActions","people","throughout"],"additionalProperties":false},"limit":{"type":"object","properties":{"id":{"$ref":"#/$defs/identifier"},"holds":{"$ref":"#/$defs/expression"},"of":{"type":"array","items":{"$ref":"#/$defs/name"},"minItems":1,"maxItems":50},"says":{"$ref":"#/$defs/line"},"then":{"$ref":"#/$defs/line"}},"required":["id","holds","of","says","then"],"additionalProperties":false},"exit":{"type":"object","properties":{"to":{"description":"A step's id, or `verdict`.","type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"because":{"$ref":"#/$defs/line"},"verdict":{"$ref":"#/$defs/name"}},"required":["to","because"],"additionalProperties":false},"branch":{"type":"object","properties":{"to":{"description":"A step's id, or `verdict`.","type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"because":{"$ref":"#/$defs/line"},"verdict":{"$ref":"#/$defs/name"},"when":{"$ref":"#/$defs/expression"},"atMost":{"type":"integer","minimum":1,"maximum":20},"thenceforth":{"$ref":"#/$defs/exit"}},"required":["to","because","when"],"dependentRequired":{"atMost":["thenceforth"],"thenceforth":["atMost"]},"additionalProperties":false},"stopSheet":{"type":"object","properties":{"makeSafe":{"type":"array","items":{"$ref":"#/$defs/line"},"minItems":1,"maxItems":12},"exit":{"$ref":"#/$defs/exit"}},"required":["makeSafe","exit"],"additionalProperties":false},"band":{"type":"object","properties":{"low":{"$ref":"#/$defs/expression"},"high":{"$ref":"#/$defs/expression"},"when":{"$ref":"#/$defs/expression"},"unjudged":{"$ref":"#/$defs/line"},"source":{"$ref":"#/$defs/line"}},"required":["source"],"anyOf":[{"required":["low"]},{"required":["high"]}],"additionalProperties":false},"result":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"},"is":{"$ref":"#/$defs/expression"}},"required":["name","label","unit","is"],"additionalProperties":false},"entry":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"plausible":{"$ref":"#/$defs/range"},"gear":{"$ref":"#/$defs/name"}},"required":["name","label","unit","plausible"],"additionalProperties":false},"entryWay":{"type":"object","properties":{"id":{"$ref":"#/$defs/identifier"},"label":{"$ref":"#/$defs/label"},"hint":{"$ref":"#/$defs/line"},"entry":{"$ref":"#/$defs/entry"},"is":{"$ref":"#/$defs/expression"},"uncertainty":{"$ref":"#/$defs/expression"}},"required":["id","label","hint","is"],"additionalProperties":false},"readQuantity":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"},"gear":{"$ref":"#/$defs/name"},"plausible":{"$ref":"#/$defs/range"},"takes":{"type":"integer","minimum":1,"maximum":5},"ways":{"type":"array","items":{"$ref":"#/$defs/entryWay"},"minItems":1,"maxItems":10},"validity":{"$ref":"#/$defs/validity"}},"required":["name","label","unit","plausible"],"additionalProperties":false},"picture":{"type":"object","properties":{"sheet":{"$ref":"#/$defs/identifier"},"marks":{"type":"array","items":{"$ref":"#/$defs/identifier"},"maxItems":30},"labels":{"type":"object","propertyNames":{"pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"maxProperties":30,"additionalProperties":{"$ref":"#/$defs/label"}}},"required":["sheet","marks"],"additionalProperties":false},"disturbed":{"type":"object","properties":{"item":{"$ref":"#/$defs/identifier"},"label":{"$ref":"#/$defs/label"},"restore":{"$ref":"#/$defs/line"}},"required":["item","label","restore"],"additionalProperties":false},"option":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"ask":{"$ref":"#/$defs/line"},"alone":{"type":"boolean"},"picture":{"$ref":"#/$defs/picture"}},"required":["name","label"],"additionalProperties":false},"channel":{"type":"object","properties":{"name":{"enum":["gauge","manifold","boost","sound"]},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"gear":{"$ref":"#/$defs/name"},"needed":{"type":"boolean"}},"required":["name","label","unit","needed"],"additionalProperties":false},"foundTruth":{"type":"object","properties":{"what":{"enum":["noise-heard","noise-stopped"]},"name":{"$ref":"#/$defs/name"}},"required":["what","name"],"additionalProperties":false},"foundQuantity":{"type":"object","properties":{"what":{"enum":["seal-point","highest-gauge","manifold-gain","boost-gain","worst-gap"]},"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"}},"required":["what","name","label","unit"],"additionalProperties":false},"found":{"type":"object","discriminator":{"propertyName":"what"},"required":["what"],"oneOf":[{"$ref":"#/$defs/foundTruth"},{"$ref":"#/$defs/foundQuantity"}]},"driveWindow":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"what":{"$ref":"#/$defs/line"}},"required":["name","label","what"],"additionalProperties":false},"sentence":{"type":"object","properties":{"text":{"$ref":"#/$defs/paragraph"},"when":{"$ref":"#/$defs/expression"}},"required":["text"],"additionalProperties":false},"startStep":{"type":"object","properties":{"kind":{"const":"start"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"actionStep":{"type":"object","properties":{"kind":{"const":"action"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"readingStep":{"type":"object","properties":{"kind":{"const":"reading"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"reads":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","reads"],"additionalProperties":false},"choiceStep":{"type":"object","properties":{"kind":{"const":"choice"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"several":{"type":"boolean"},"options":{"type":"array","items":{"$ref":"#/$defs/option"},"minItems":1,"maxItems":30},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","options"],"additionalProperties":false},"listenStep":{"type":"object","properties":{"kind":{"const":"listen"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"channels":{"type":"array","items":{"$ref":"#/$defs/channel"},"minItems":1,"maxItems":4},"target":{"type":"number"},"finds":{"type":"array","items":{"$ref":"#/$defs/found"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","channels","target","finds"],"additionalProperties":false},"holdStep":{"type":"object","properties":{"kind":{"const":"hold"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"seconds":{"type":"integer","minimum":1,"maximum":86400},"begins":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"ends":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","seconds"],"additionalProperties":false},"waitStep":{"type":"object","properties":{"kind":{"const":"wait"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"reads":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"until":{"$ref":"#/$defs/expression"},"atLeastSeconds":{"type":"integer","minimum":1,"maximum":86400},"meanwhile":{"$ref":"#/$defs/paragraph"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","reads","until","meanwhile"],"additionalProperties":false},"codesStep":{"type":"object","properties":{"kind":{"const":"codes"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"comparedWith":{"$ref":"#/$defs/name"},"newCodes":{"$ref":"#/$defs/name"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name"],"additionalProperties":false},"driveStep":{"type":"object","properties":{"kind":{"const":"drive"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"windows":{"type":"array","items":{"$ref":"#/$defs/driveWindow"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","windows"],"additionalProperties":false},"computeStep":{"type":"object","properties":{"kind":{"const":"compute"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"restoreStep":{"type":"object","properties":{"kind":{"const":"restore"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"findingStep":{"type":"object","properties":{"kind":{"const":"finding"},"id":{"$ref":"#/$defs/name"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"result":{"enum":["in","out","too-close"]},"verdict":{"$ref":"#/$defs/paragraph"},"cause":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"correction":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"customer":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"nextProcedure":{"$ref":"#/$defs/procedureId"}},"required":["id","number","title","action","kind","result","verdict","cause","correction","customer"],"additionalProperties":false},"validity":{"type":"object","description":"Ends after minutes, or when one of the steps is done.","properties":{"minutes":{"type":"number","exclusiveMinimum":0,"maximum":1440},"until":{"type":"array","items":{"$ref":"#/$defs/identifier"},"minItems":1,"maxItems":30},"because":{"$ref":"#/$defs/line"}},"required":["because"],"anyOf":[{"required":["minutes"]},{"required":["until"]}],"additionalProperties":false},"releasePoint":{"type":"object","properties":{"by":{"enum":["lead","manager"]},"evidence":{"$ref":"#/$defs/line"}},"required":["by","evidence"],"additionalProperties":false},"verification":{"type":"object","properties":{"how":{"enum":["independent","concurrent"]},"what":{"$ref":"#/$defs/line"}},"required":["how","what"],"additionalProperties":false},"takenResult":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"},"from":{"$ref":"#/$defs/name"}},"required":["name","label","unit","from"],"additionalProperties":false},"calledFinding":{"type":"object","properties":{"finding":{"$ref":"#/$defs/name"},"name":{"$ref":"#/$defs/name"}},"required":["finding","name"],"additionalProperties":false},"rampStep":{"type":"object","properties":{"kind":{"const":"ramp"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"channels":{"type":"array","items":{"$ref":"#/$defs/channel"},"minItems":1,"maxItems":4},"target":{"type":"number"},"finds":{"type":"array","items":{"$ref":"#/$defs/foundQuantity"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","channels","target","finds"],"additionalProperties":false},"photoStep":{"type":"object","properties":{"kind":{"const":"photo"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"},"name":{"$ref":"#/$defs/name"},"shows":{"type":"array","items":{"$ref":"#/$defs/line"},"minItems":1,"maxItems":10}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","shows"],"additionalProperties":false},"callStep":{"type":"object","properties":{"kind":{"const":"call"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"procedure":{"$ref":"#/$defs/procedureId"},"version":{"type":"integer","minimum":1,"maximum":100000},"takes":{"type":"array","items":{"$ref":"#/$defs/takenResult"},"maxItems":30},"finds":{"type":"array","items":{"$ref":"#/$defs/calledFinding"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise","procedure","version","takes","finds"],"additionalProperties":false},"step":{"type":"object","discriminator":{"propertyName":"kind"},"required":["kind"],"oneOf":[{"$ref":"#/$defs/startStep"},{"$ref":"#/$defs/actionStep"},{"$ref":"#/$defs/readingStep"},{"$ref":"#/$defs/choiceStep"},{"$ref":"#/$defs/listenStep"},{"$ref":"#/$defs/holdStep"},{"$ref":"#/$defs/waitStep"},{"$ref":"#/$defs/codesStep"},{"$ref":"#/$defs/driveStep"},{"$ref":"#/$defs/computeStep"},{"$ref":"#/$defs/restoreStep"},{"$ref":"#/$defs/findingStep"},{"$ref":"#/$defs/rampStep"},{"$ref":"#/$defs/photoStep"},{"$ref":"#/$defs/callStep"}]}}};
 const func1 = Object.prototype.hasOwnProperty;
 const schema20 = {"description":"Lower-case words joined by hyphens.","type":"string","pattern":"^[a-z0-9]+(-[a-z0-9]+)*$","maxLength":80};
 const func2 = (text) => [...text].length;
@@ -1681,14 +1681,14 @@ return errors === 0;
 }
 validate104.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema39 = {"type":"object","discriminator":{"propertyName":"kind"},"required":["kind"],"oneOf":[{"$ref":"#/$defs/startStep"},{"$ref":"#/$defs/actionStep"},{"$ref":"#/$defs/readingStep"},{"$ref":"#/$defs/choiceStep"},{"$ref":"#/$defs/listenStep"},{"$ref":"#/$defs/holdStep"},{"$ref":"#/$defs/waitStep"},{"$ref":"#/$defs/codesStep"},{"$ref":"#/$defs/driveStep"},{"$ref":"#/$defs/computeStep"},{"$ref":"#/$defs/restoreStep"},{"$ref":"#/$defs/findingStep"}]};
-const schema40 = {"type":"object","properties":{"kind":{"const":"start"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false};
+const schema39 = {"type":"object","discriminator":{"propertyName":"kind"},"required":["kind"],"oneOf":[{"$ref":"#/$defs/startStep"},{"$ref":"#/$defs/actionStep"},{"$ref":"#/$defs/readingStep"},{"$ref":"#/$defs/choiceStep"},{"$ref":"#/$defs/listenStep"},{"$ref":"#/$defs/holdStep"},{"$ref":"#/$defs/waitStep"},{"$ref":"#/$defs/codesStep"},{"$ref":"#/$defs/driveStep"},{"$ref":"#/$defs/computeStep"},{"$ref":"#/$defs/restoreStep"},{"$ref":"#/$defs/findingStep"},{"$ref":"#/$defs/rampStep"},{"$ref":"#/$defs/photoStep"},{"$ref":"#/$defs/callStep"}]};
+const schema40 = {"type":"object","properties":{"kind":{"const":"start"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false};
 const schema41 = {"type":"object","properties":{"sheet":{"$ref":"#/$defs/identifier"},"marks":{"type":"array","items":{"$ref":"#/$defs/identifier"},"maxItems":30},"labels":{"type":"object","propertyNames":{"pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"maxProperties":30,"additionalProperties":{"$ref":"#/$defs/label"}}},"required":["sheet","marks"],"additionalProperties":false};
 
-function validate118(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate120(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate118.evaluated;
+const evaluated0 = validate120.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -1844,17 +1844,17 @@ vErrors.push(err10);
 }
 errors++;
 }
-validate118.errors = vErrors;
+validate120.errors = vErrors;
 return errors === 0;
 }
-validate118.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate120.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema42 = {"type":"object","properties":{"item":{"$ref":"#/$defs/identifier"},"label":{"$ref":"#/$defs/label"},"restore":{"$ref":"#/$defs/line"}},"required":["item","label","restore"],"additionalProperties":false};
 
-function validate123(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate125(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate123.evaluated;
+const evaluated0 = validate125.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -1933,17 +1933,177 @@ vErrors.push(err4);
 }
 errors++;
 }
-validate123.errors = vErrors;
+validate125.errors = vErrors;
 return errors === 0;
 }
-validate123.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate125.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema43 = {"type":"object","properties":{"to":{"description":"A step's id, or `verdict`.","type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"because":{"$ref":"#/$defs/line"},"verdict":{"$ref":"#/$defs/name"},"when":{"$ref":"#/$defs/expression"},"atMost":{"type":"integer","minimum":1,"maximum":20},"thenceforth":{"$ref":"#/$defs/exit"}},"required":["to","because","when"],"dependentRequired":{"atMost":["thenceforth"],"thenceforth":["atMost"]},"additionalProperties":false};
+const schema43 = {"type":"object","properties":{"by":{"enum":["lead","manager"]},"evidence":{"$ref":"#/$defs/line"}},"required":["by","evidence"],"additionalProperties":false};
 
-function validate128(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate130(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate128.evaluated;
+const evaluated0 = validate130.evaluated;
+if(evaluated0.dynamicProps){
+evaluated0.props = undefined;
+}
+if(evaluated0.dynamicItems){
+evaluated0.items = undefined;
+}
+if(data && typeof data == "object" && !Array.isArray(data)){
+if(data.by === undefined){
+const err0 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "by"},message:"must have required property '"+"by"+"'"};
+if(vErrors === null){
+vErrors = [err0];
+}
+else {
+vErrors.push(err0);
+}
+errors++;
+}
+if(data.evidence === undefined){
+const err1 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "evidence"},message:"must have required property '"+"evidence"+"'"};
+if(vErrors === null){
+vErrors = [err1];
+}
+else {
+vErrors.push(err1);
+}
+errors++;
+}
+for(const key0 in data){
+if(!((key0 === "by") || (key0 === "evidence"))){
+const err2 = {instancePath,schemaPath:"#/additionalProperties",keyword:"additionalProperties",params:{additionalProperty: key0},message:"must NOT have additional properties"};
+if(vErrors === null){
+vErrors = [err2];
+}
+else {
+vErrors.push(err2);
+}
+errors++;
+}
+}
+if(data.by !== undefined){
+let data0 = data.by;
+if(!((data0 === "lead") || (data0 === "manager"))){
+const err3 = {instancePath:instancePath+"/by",schemaPath:"#/properties/by/enum",keyword:"enum",params:{allowedValues: schema43.properties.by.enum},message:"must be equal to one of the allowed values"};
+if(vErrors === null){
+vErrors = [err3];
+}
+else {
+vErrors.push(err3);
+}
+errors++;
+}
+}
+if(data.evidence !== undefined){
+if(!(validate61(data.evidence, {instancePath:instancePath+"/evidence",parentData:data,parentDataProperty:"evidence",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate61.errors : vErrors.concat(validate61.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err4 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
+if(vErrors === null){
+vErrors = [err4];
+}
+else {
+vErrors.push(err4);
+}
+errors++;
+}
+validate130.errors = vErrors;
+return errors === 0;
+}
+validate130.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+
+const schema44 = {"type":"object","properties":{"how":{"enum":["independent","concurrent"]},"what":{"$ref":"#/$defs/line"}},"required":["how","what"],"additionalProperties":false};
+
+function validate133(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+let vErrors = null;
+let errors = 0;
+const evaluated0 = validate133.evaluated;
+if(evaluated0.dynamicProps){
+evaluated0.props = undefined;
+}
+if(evaluated0.dynamicItems){
+evaluated0.items = undefined;
+}
+if(data && typeof data == "object" && !Array.isArray(data)){
+if(data.how === undefined){
+const err0 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "how"},message:"must have required property '"+"how"+"'"};
+if(vErrors === null){
+vErrors = [err0];
+}
+else {
+vErrors.push(err0);
+}
+errors++;
+}
+if(data.what === undefined){
+const err1 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "what"},message:"must have required property '"+"what"+"'"};
+if(vErrors === null){
+vErrors = [err1];
+}
+else {
+vErrors.push(err1);
+}
+errors++;
+}
+for(const key0 in data){
+if(!((key0 === "how") || (key0 === "what"))){
+const err2 = {instancePath,schemaPath:"#/additionalProperties",keyword:"additionalProperties",params:{additionalProperty: key0},message:"must NOT have additional properties"};
+if(vErrors === null){
+vErrors = [err2];
+}
+else {
+vErrors.push(err2);
+}
+errors++;
+}
+}
+if(data.how !== undefined){
+let data0 = data.how;
+if(!((data0 === "independent") || (data0 === "concurrent"))){
+const err3 = {instancePath:instancePath+"/how",schemaPath:"#/properties/how/enum",keyword:"enum",params:{allowedValues: schema44.properties.how.enum},message:"must be equal to one of the allowed values"};
+if(vErrors === null){
+vErrors = [err3];
+}
+else {
+vErrors.push(err3);
+}
+errors++;
+}
+}
+if(data.what !== undefined){
+if(!(validate61(data.what, {instancePath:instancePath+"/what",parentData:data,parentDataProperty:"what",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate61.errors : vErrors.concat(validate61.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err4 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
+if(vErrors === null){
+vErrors = [err4];
+}
+else {
+vErrors.push(err4);
+}
+errors++;
+}
+validate133.errors = vErrors;
+return errors === 0;
+}
+validate133.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+
+const schema45 = {"type":"object","properties":{"to":{"description":"A step's id, or `verdict`.","type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"because":{"$ref":"#/$defs/line"},"verdict":{"$ref":"#/$defs/name"},"when":{"$ref":"#/$defs/expression"},"atMost":{"type":"integer","minimum":1,"maximum":20},"thenceforth":{"$ref":"#/$defs/exit"}},"required":["to","because","when"],"dependentRequired":{"atMost":["thenceforth"],"thenceforth":["atMost"]},"additionalProperties":false};
+
+function validate136(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+let vErrors = null;
+let errors = 0;
+const evaluated0 = validate136.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -2128,18 +2288,18 @@ vErrors.push(err12);
 }
 errors++;
 }
-validate128.errors = vErrors;
+validate136.errors = vErrors;
 return errors === 0;
 }
-validate128.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate136.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema44 = {"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"},"is":{"$ref":"#/$defs/expression"}},"required":["name","label","unit","is"],"additionalProperties":false};
-const schema45 = {"type":"object","properties":{"low":{"$ref":"#/$defs/expression"},"high":{"$ref":"#/$defs/expression"},"when":{"$ref":"#/$defs/expression"},"unjudged":{"$ref":"#/$defs/line"},"source":{"$ref":"#/$defs/line"}},"required":["source"],"anyOf":[{"required":["low"]},{"required":["high"]}],"additionalProperties":false};
+const schema46 = {"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"},"is":{"$ref":"#/$defs/expression"}},"required":["name","label","unit","is"],"additionalProperties":false};
+const schema47 = {"type":"object","properties":{"low":{"$ref":"#/$defs/expression"},"high":{"$ref":"#/$defs/expression"},"when":{"$ref":"#/$defs/expression"},"unjudged":{"$ref":"#/$defs/line"},"source":{"$ref":"#/$defs/line"}},"required":["source"],"anyOf":[{"required":["low"]},{"required":["high"]}],"additionalProperties":false};
 
-function validate140(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate148(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate140.evaluated;
+const evaluated0 = validate148.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -2263,16 +2423,16 @@ vErrors.push(err5);
 }
 errors++;
 }
-validate140.errors = vErrors;
+validate148.errors = vErrors;
 return errors === 0;
 }
-validate140.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate148.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 
-function validate135(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate143(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate135.evaluated;
+const evaluated0 = validate143.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -2357,8 +2517,8 @@ errors = vErrors.length;
 }
 }
 if(data.band !== undefined){
-if(!(validate140(data.band, {instancePath:instancePath+"/band",parentData:data,parentDataProperty:"band",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate140.errors : vErrors.concat(validate140.errors);
+if(!(validate148(data.band, {instancePath:instancePath+"/band",parentData:data,parentDataProperty:"band",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate148.errors : vErrors.concat(validate148.errors);
 errors = vErrors.length;
 }
 }
@@ -2379,10 +2539,10 @@ vErrors.push(err5);
 }
 errors++;
 }
-validate135.errors = vErrors;
+validate143.errors = vErrors;
 return errors === 0;
 }
-validate135.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate143.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const pattern9 = new RegExp("^[A-Za-z0-9]+$", "u");
 
@@ -2534,17 +2694,17 @@ vErrors = vErrors === null ? validate61.errors : vErrors.concat(validate61.error
 errors = vErrors.length;
 }
 }
-if(data.why !== undefined){
-if(!(validate57(data.why, {instancePath:instancePath+"/why",parentData:data,parentDataProperty:"why",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
+if(data.short !== undefined){
+if(!(validate55(data.short, {instancePath:instancePath+"/short",parentData:data,parentDataProperty:"short",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate55.errors : vErrors.concat(validate55.errors);
 errors = vErrors.length;
 }
 }
-if(data.cautions !== undefined){
-let data6 = data.cautions;
+if(data.notes !== undefined){
+let data6 = data.notes;
 if(Array.isArray(data6)){
-if(data6.length > 12){
-const err11 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+if(data6.length > 10){
+const err11 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/maxItems",keyword:"maxItems",params:{limit: 10},message:"must NOT have more than 10 items"};
 if(vErrors === null){
 vErrors = [err11];
 }
@@ -2553,16 +2713,8 @@ vErrors.push(err11);
 }
 errors++;
 }
-const len0 = data6.length;
-for(let i0=0; i0<len0; i0++){
-if(!(validate92(data6[i0], {instancePath:instancePath+"/cautions/" + i0,parentData:data6,parentDataProperty:i0,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
-errors = vErrors.length;
-}
-}
-}
-else {
-const err12 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(data6.length < 1){
+const err12 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
 if(vErrors === null){
 vErrors = [err12];
 }
@@ -2571,18 +2723,16 @@ vErrors.push(err12);
 }
 errors++;
 }
-}
-if(data.picture !== undefined){
-if(!(validate118(data.picture, {instancePath:instancePath+"/picture",parentData:data,parentDataProperty:"picture",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate118.errors : vErrors.concat(validate118.errors);
+const len0 = data6.length;
+for(let i0=0; i0<len0; i0++){
+if(!(validate57(data6[i0], {instancePath:instancePath+"/notes/" + i0,parentData:data6,parentDataProperty:i0,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
 errors = vErrors.length;
 }
 }
-if(data.disturbs !== undefined){
-let data9 = data.disturbs;
-if(Array.isArray(data9)){
-if(data9.length > 12){
-const err13 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+}
+else {
+const err13 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err13];
 }
@@ -2591,8 +2741,18 @@ vErrors.push(err13);
 }
 errors++;
 }
-if(data9.length < 1){
-const err14 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+}
+if(data.why !== undefined){
+if(!(validate57(data.why, {instancePath:instancePath+"/why",parentData:data,parentDataProperty:"why",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
+errors = vErrors.length;
+}
+}
+if(data.cautions !== undefined){
+let data9 = data.cautions;
+if(Array.isArray(data9)){
+if(data9.length > 12){
+const err14 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
 if(vErrors === null){
 vErrors = [err14];
 }
@@ -2603,14 +2763,14 @@ errors++;
 }
 const len1 = data9.length;
 for(let i1=0; i1<len1; i1++){
-if(!(validate123(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate123.errors : vErrors.concat(validate123.errors);
+if(!(validate92(data9[i1], {instancePath:instancePath+"/cautions/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err15 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err15 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err15];
 }
@@ -2620,11 +2780,17 @@ vErrors.push(err15);
 errors++;
 }
 }
-if(data.next !== undefined){
-let data11 = data.next;
-if(Array.isArray(data11)){
-if(data11.length > 30){
-const err16 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+if(data.picture !== undefined){
+if(!(validate120(data.picture, {instancePath:instancePath+"/picture",parentData:data,parentDataProperty:"picture",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate120.errors : vErrors.concat(validate120.errors);
+errors = vErrors.length;
+}
+}
+if(data.disturbs !== undefined){
+let data12 = data.disturbs;
+if(Array.isArray(data12)){
+if(data12.length > 12){
+const err16 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
 if(vErrors === null){
 vErrors = [err16];
 }
@@ -2633,21 +2799,87 @@ vErrors.push(err16);
 }
 errors++;
 }
-const len2 = data11.length;
-for(let i2=0; i2<len2; i2++){
-if(!(validate128(data11[i2], {instancePath:instancePath+"/next/" + i2,parentData:data11,parentDataProperty:i2,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate128.errors : vErrors.concat(validate128.errors);
-errors = vErrors.length;
-}
-}
-}
-else {
-const err17 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(data12.length < 1){
+const err17 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
 if(vErrors === null){
 vErrors = [err17];
 }
 else {
 vErrors.push(err17);
+}
+errors++;
+}
+const len2 = data12.length;
+for(let i2=0; i2<len2; i2++){
+if(!(validate125(data12[i2], {instancePath:instancePath+"/disturbs/" + i2,parentData:data12,parentDataProperty:i2,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate125.errors : vErrors.concat(validate125.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err18 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err18];
+}
+else {
+vErrors.push(err18);
+}
+errors++;
+}
+}
+if(data.stay !== undefined){
+if(typeof data.stay !== "boolean"){
+const err19 = {instancePath:instancePath+"/stay",schemaPath:"#/properties/stay/type",keyword:"type",params:{type: "boolean"},message:"must be boolean"};
+if(vErrors === null){
+vErrors = [err19];
+}
+else {
+vErrors.push(err19);
+}
+errors++;
+}
+}
+if(data.release !== undefined){
+if(!(validate130(data.release, {instancePath:instancePath+"/release",parentData:data,parentDataProperty:"release",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate130.errors : vErrors.concat(validate130.errors);
+errors = vErrors.length;
+}
+}
+if(data.verify !== undefined){
+if(!(validate133(data.verify, {instancePath:instancePath+"/verify",parentData:data,parentDataProperty:"verify",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate133.errors : vErrors.concat(validate133.errors);
+errors = vErrors.length;
+}
+}
+if(data.next !== undefined){
+let data17 = data.next;
+if(Array.isArray(data17)){
+if(data17.length > 30){
+const err20 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+if(vErrors === null){
+vErrors = [err20];
+}
+else {
+vErrors.push(err20);
+}
+errors++;
+}
+const len3 = data17.length;
+for(let i3=0; i3<len3; i3++){
+if(!(validate136(data17[i3], {instancePath:instancePath+"/next/" + i3,parentData:data17,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate136.errors : vErrors.concat(validate136.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err21 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err21];
+}
+else {
+vErrors.push(err21);
 }
 errors++;
 }
@@ -2659,45 +2891,45 @@ errors = vErrors.length;
 }
 }
 if(data.results !== undefined){
-let data14 = data.results;
-if(Array.isArray(data14)){
-if(data14.length > 30){
-const err18 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+let data20 = data.results;
+if(Array.isArray(data20)){
+if(data20.length > 30){
+const err22 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
 if(vErrors === null){
-vErrors = [err18];
+vErrors = [err22];
 }
 else {
-vErrors.push(err18);
+vErrors.push(err22);
 }
 errors++;
 }
-const len3 = data14.length;
-for(let i3=0; i3<len3; i3++){
-if(!(validate135(data14[i3], {instancePath:instancePath+"/results/" + i3,parentData:data14,parentDataProperty:i3,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate135.errors : vErrors.concat(validate135.errors);
+const len4 = data20.length;
+for(let i4=0; i4<len4; i4++){
+if(!(validate143(data20[i4], {instancePath:instancePath+"/results/" + i4,parentData:data20,parentDataProperty:i4,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate143.errors : vErrors.concat(validate143.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err19 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err23 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
-vErrors = [err19];
+vErrors = [err23];
 }
 else {
-vErrors.push(err19);
+vErrors.push(err23);
 }
 errors++;
 }
 }
 }
 else {
-const err20 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
+const err24 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
 if(vErrors === null){
-vErrors = [err20];
+vErrors = [err24];
 }
 else {
-vErrors.push(err20);
+vErrors.push(err24);
 }
 errors++;
 }
@@ -2706,12 +2938,12 @@ return errors === 0;
 }
 validate112.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema46 = {"type":"object","properties":{"kind":{"const":"action"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false};
+const schema48 = {"type":"object","properties":{"kind":{"const":"action"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false};
 
-function validate149(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate157(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate149.evaluated;
+const evaluated0 = validate157.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -2780,7 +3012,7 @@ vErrors.push(err5);
 errors++;
 }
 for(const key0 in data){
-if(!(func1.call(schema46.properties, key0))){
+if(!(func1.call(schema48.properties, key0))){
 const err6 = {instancePath,schemaPath:"#/additionalProperties",keyword:"additionalProperties",params:{additionalProperty: key0},message:"must NOT have additional properties"};
 if(vErrors === null){
 vErrors = [err6];
@@ -2856,17 +3088,17 @@ vErrors = vErrors === null ? validate61.errors : vErrors.concat(validate61.error
 errors = vErrors.length;
 }
 }
-if(data.why !== undefined){
-if(!(validate57(data.why, {instancePath:instancePath+"/why",parentData:data,parentDataProperty:"why",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
+if(data.short !== undefined){
+if(!(validate55(data.short, {instancePath:instancePath+"/short",parentData:data,parentDataProperty:"short",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate55.errors : vErrors.concat(validate55.errors);
 errors = vErrors.length;
 }
 }
-if(data.cautions !== undefined){
-let data6 = data.cautions;
+if(data.notes !== undefined){
+let data6 = data.notes;
 if(Array.isArray(data6)){
-if(data6.length > 12){
-const err11 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+if(data6.length > 10){
+const err11 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/maxItems",keyword:"maxItems",params:{limit: 10},message:"must NOT have more than 10 items"};
 if(vErrors === null){
 vErrors = [err11];
 }
@@ -2875,16 +3107,8 @@ vErrors.push(err11);
 }
 errors++;
 }
-const len0 = data6.length;
-for(let i0=0; i0<len0; i0++){
-if(!(validate92(data6[i0], {instancePath:instancePath+"/cautions/" + i0,parentData:data6,parentDataProperty:i0,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
-errors = vErrors.length;
-}
-}
-}
-else {
-const err12 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(data6.length < 1){
+const err12 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
 if(vErrors === null){
 vErrors = [err12];
 }
@@ -2893,18 +3117,16 @@ vErrors.push(err12);
 }
 errors++;
 }
-}
-if(data.picture !== undefined){
-if(!(validate118(data.picture, {instancePath:instancePath+"/picture",parentData:data,parentDataProperty:"picture",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate118.errors : vErrors.concat(validate118.errors);
+const len0 = data6.length;
+for(let i0=0; i0<len0; i0++){
+if(!(validate57(data6[i0], {instancePath:instancePath+"/notes/" + i0,parentData:data6,parentDataProperty:i0,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
 errors = vErrors.length;
 }
 }
-if(data.disturbs !== undefined){
-let data9 = data.disturbs;
-if(Array.isArray(data9)){
-if(data9.length > 12){
-const err13 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+}
+else {
+const err13 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err13];
 }
@@ -2913,8 +3135,18 @@ vErrors.push(err13);
 }
 errors++;
 }
-if(data9.length < 1){
-const err14 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+}
+if(data.why !== undefined){
+if(!(validate57(data.why, {instancePath:instancePath+"/why",parentData:data,parentDataProperty:"why",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
+errors = vErrors.length;
+}
+}
+if(data.cautions !== undefined){
+let data9 = data.cautions;
+if(Array.isArray(data9)){
+if(data9.length > 12){
+const err14 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
 if(vErrors === null){
 vErrors = [err14];
 }
@@ -2925,14 +3157,14 @@ errors++;
 }
 const len1 = data9.length;
 for(let i1=0; i1<len1; i1++){
-if(!(validate123(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate123.errors : vErrors.concat(validate123.errors);
+if(!(validate92(data9[i1], {instancePath:instancePath+"/cautions/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err15 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err15 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err15];
 }
@@ -2942,11 +3174,17 @@ vErrors.push(err15);
 errors++;
 }
 }
-if(data.next !== undefined){
-let data11 = data.next;
-if(Array.isArray(data11)){
-if(data11.length > 30){
-const err16 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+if(data.picture !== undefined){
+if(!(validate120(data.picture, {instancePath:instancePath+"/picture",parentData:data,parentDataProperty:"picture",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate120.errors : vErrors.concat(validate120.errors);
+errors = vErrors.length;
+}
+}
+if(data.disturbs !== undefined){
+let data12 = data.disturbs;
+if(Array.isArray(data12)){
+if(data12.length > 12){
+const err16 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
 if(vErrors === null){
 vErrors = [err16];
 }
@@ -2955,21 +3193,87 @@ vErrors.push(err16);
 }
 errors++;
 }
-const len2 = data11.length;
-for(let i2=0; i2<len2; i2++){
-if(!(validate128(data11[i2], {instancePath:instancePath+"/next/" + i2,parentData:data11,parentDataProperty:i2,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate128.errors : vErrors.concat(validate128.errors);
-errors = vErrors.length;
-}
-}
-}
-else {
-const err17 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(data12.length < 1){
+const err17 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
 if(vErrors === null){
 vErrors = [err17];
 }
 else {
 vErrors.push(err17);
+}
+errors++;
+}
+const len2 = data12.length;
+for(let i2=0; i2<len2; i2++){
+if(!(validate125(data12[i2], {instancePath:instancePath+"/disturbs/" + i2,parentData:data12,parentDataProperty:i2,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate125.errors : vErrors.concat(validate125.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err18 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err18];
+}
+else {
+vErrors.push(err18);
+}
+errors++;
+}
+}
+if(data.stay !== undefined){
+if(typeof data.stay !== "boolean"){
+const err19 = {instancePath:instancePath+"/stay",schemaPath:"#/properties/stay/type",keyword:"type",params:{type: "boolean"},message:"must be boolean"};
+if(vErrors === null){
+vErrors = [err19];
+}
+else {
+vErrors.push(err19);
+}
+errors++;
+}
+}
+if(data.release !== undefined){
+if(!(validate130(data.release, {instancePath:instancePath+"/release",parentData:data,parentDataProperty:"release",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate130.errors : vErrors.concat(validate130.errors);
+errors = vErrors.length;
+}
+}
+if(data.verify !== undefined){
+if(!(validate133(data.verify, {instancePath:instancePath+"/verify",parentData:data,parentDataProperty:"verify",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate133.errors : vErrors.concat(validate133.errors);
+errors = vErrors.length;
+}
+}
+if(data.next !== undefined){
+let data17 = data.next;
+if(Array.isArray(data17)){
+if(data17.length > 30){
+const err20 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+if(vErrors === null){
+vErrors = [err20];
+}
+else {
+vErrors.push(err20);
+}
+errors++;
+}
+const len3 = data17.length;
+for(let i3=0; i3<len3; i3++){
+if(!(validate136(data17[i3], {instancePath:instancePath+"/next/" + i3,parentData:data17,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate136.errors : vErrors.concat(validate136.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err21 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err21];
+}
+else {
+vErrors.push(err21);
 }
 errors++;
 }
@@ -2981,61 +3285,61 @@ errors = vErrors.length;
 }
 }
 if(data.results !== undefined){
-let data14 = data.results;
-if(Array.isArray(data14)){
-if(data14.length > 30){
-const err18 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+let data20 = data.results;
+if(Array.isArray(data20)){
+if(data20.length > 30){
+const err22 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
 if(vErrors === null){
-vErrors = [err18];
+vErrors = [err22];
 }
 else {
-vErrors.push(err18);
+vErrors.push(err22);
 }
 errors++;
 }
-const len3 = data14.length;
-for(let i3=0; i3<len3; i3++){
-if(!(validate135(data14[i3], {instancePath:instancePath+"/results/" + i3,parentData:data14,parentDataProperty:i3,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate135.errors : vErrors.concat(validate135.errors);
+const len4 = data20.length;
+for(let i4=0; i4<len4; i4++){
+if(!(validate143(data20[i4], {instancePath:instancePath+"/results/" + i4,parentData:data20,parentDataProperty:i4,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate143.errors : vErrors.concat(validate143.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err19 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err23 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
-vErrors = [err19];
+vErrors = [err23];
 }
 else {
-vErrors.push(err19);
+vErrors.push(err23);
 }
 errors++;
 }
 }
 }
 else {
-const err20 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
+const err24 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
 if(vErrors === null){
-vErrors = [err20];
+vErrors = [err24];
 }
 else {
-vErrors.push(err20);
+vErrors.push(err24);
 }
 errors++;
 }
-validate149.errors = vErrors;
+validate157.errors = vErrors;
 return errors === 0;
 }
-validate149.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate157.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema47 = {"type":"object","properties":{"kind":{"const":"reading"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"reads":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","reads"],"additionalProperties":false};
-const schema48 = {"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"},"gear":{"$ref":"#/$defs/name"},"plausible":{"$ref":"#/$defs/range"},"takes":{"type":"integer","minimum":1,"maximum":5},"ways":{"type":"array","items":{"$ref":"#/$defs/entryWay"},"minItems":1,"maxItems":10}},"required":["name","label","unit","plausible"],"additionalProperties":false};
-const schema49 = {"type":"object","properties":{"low":{"type":"number"},"high":{"type":"number"}},"required":["low","high"],"additionalProperties":false};
+const schema49 = {"type":"object","properties":{"kind":{"const":"reading"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"reads":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","reads"],"additionalProperties":false};
+const schema50 = {"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"},"gear":{"$ref":"#/$defs/name"},"plausible":{"$ref":"#/$defs/range"},"takes":{"type":"integer","minimum":1,"maximum":5},"ways":{"type":"array","items":{"$ref":"#/$defs/entryWay"},"minItems":1,"maxItems":10},"validity":{"$ref":"#/$defs/validity"}},"required":["name","label","unit","plausible"],"additionalProperties":false};
+const schema51 = {"type":"object","properties":{"low":{"type":"number"},"high":{"type":"number"}},"required":["low","high"],"additionalProperties":false};
 
-function validate175(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate191(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate175.evaluated;
+const evaluated0 = validate191.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -3112,18 +3416,18 @@ vErrors.push(err5);
 }
 errors++;
 }
-validate175.errors = vErrors;
+validate191.errors = vErrors;
 return errors === 0;
 }
-validate175.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate191.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema50 = {"type":"object","properties":{"id":{"$ref":"#/$defs/identifier"},"label":{"$ref":"#/$defs/label"},"hint":{"$ref":"#/$defs/line"},"entry":{"$ref":"#/$defs/entry"},"is":{"$ref":"#/$defs/expression"},"uncertainty":{"$ref":"#/$defs/expression"}},"required":["id","label","hint","is"],"additionalProperties":false};
-const schema51 = {"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"plausible":{"$ref":"#/$defs/range"},"gear":{"$ref":"#/$defs/name"}},"required":["name","label","unit","plausible"],"additionalProperties":false};
+const schema52 = {"type":"object","properties":{"id":{"$ref":"#/$defs/identifier"},"label":{"$ref":"#/$defs/label"},"hint":{"$ref":"#/$defs/line"},"entry":{"$ref":"#/$defs/entry"},"is":{"$ref":"#/$defs/expression"},"uncertainty":{"$ref":"#/$defs/expression"}},"required":["id","label","hint","is"],"additionalProperties":false};
+const schema53 = {"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"plausible":{"$ref":"#/$defs/range"},"gear":{"$ref":"#/$defs/name"}},"required":["name","label","unit","plausible"],"additionalProperties":false};
 
-function validate181(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate197(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate181.evaluated;
+const evaluated0 = validate197.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -3208,8 +3512,8 @@ errors = vErrors.length;
 }
 }
 if(data.plausible !== undefined){
-if(!(validate175(data.plausible, {instancePath:instancePath+"/plausible",parentData:data,parentDataProperty:"plausible",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate175.errors : vErrors.concat(validate175.errors);
+if(!(validate191(data.plausible, {instancePath:instancePath+"/plausible",parentData:data,parentDataProperty:"plausible",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate191.errors : vErrors.concat(validate191.errors);
 errors = vErrors.length;
 }
 }
@@ -3230,16 +3534,16 @@ vErrors.push(err5);
 }
 errors++;
 }
-validate181.errors = vErrors;
+validate197.errors = vErrors;
 return errors === 0;
 }
-validate181.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate197.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 
-function validate177(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate193(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate177.evaluated;
+const evaluated0 = validate193.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -3318,8 +3622,8 @@ errors = vErrors.length;
 }
 }
 if(data.entry !== undefined){
-if(!(validate181(data.entry, {instancePath:instancePath+"/entry",parentData:data,parentDataProperty:"entry",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate181.errors : vErrors.concat(validate181.errors);
+if(!(validate197(data.entry, {instancePath:instancePath+"/entry",parentData:data,parentDataProperty:"entry",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate197.errors : vErrors.concat(validate197.errors);
 errors = vErrors.length;
 }
 }
@@ -3346,16 +3650,203 @@ vErrors.push(err5);
 }
 errors++;
 }
-validate177.errors = vErrors;
+validate193.errors = vErrors;
 return errors === 0;
 }
-validate177.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate193.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
+const schema54 = {"type":"object","description":"Ends after minutes, or when one of the steps is done.","properties":{"minutes":{"type":"number","exclusiveMinimum":0,"maximum":1440},"until":{"type":"array","items":{"$ref":"#/$defs/identifier"},"minItems":1,"maxItems":30},"because":{"$ref":"#/$defs/line"}},"required":["because"],"anyOf":[{"required":["minutes"]},{"required":["until"]}],"additionalProperties":false};
 
-function validate168(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate208(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate168.evaluated;
+const evaluated0 = validate208.evaluated;
+if(evaluated0.dynamicProps){
+evaluated0.props = undefined;
+}
+if(evaluated0.dynamicItems){
+evaluated0.items = undefined;
+}
+const _errs1 = errors;
+let valid0 = false;
+const _errs2 = errors;
+if(data && typeof data == "object" && !Array.isArray(data)){
+if(data.minutes === undefined){
+const err0 = {instancePath,schemaPath:"#/anyOf/0/required",keyword:"required",params:{missingProperty: "minutes"},message:"must have required property '"+"minutes"+"'"};
+if(vErrors === null){
+vErrors = [err0];
+}
+else {
+vErrors.push(err0);
+}
+errors++;
+}
+}
+var _valid0 = _errs2 === errors;
+valid0 = valid0 || _valid0;
+const _errs3 = errors;
+if(data && typeof data == "object" && !Array.isArray(data)){
+if(data.until === undefined){
+const err1 = {instancePath,schemaPath:"#/anyOf/1/required",keyword:"required",params:{missingProperty: "until"},message:"must have required property '"+"until"+"'"};
+if(vErrors === null){
+vErrors = [err1];
+}
+else {
+vErrors.push(err1);
+}
+errors++;
+}
+}
+var _valid0 = _errs3 === errors;
+valid0 = valid0 || _valid0;
+if(!valid0){
+const err2 = {instancePath,schemaPath:"#/anyOf",keyword:"anyOf",params:{},message:"must match a schema in anyOf"};
+if(vErrors === null){
+vErrors = [err2];
+}
+else {
+vErrors.push(err2);
+}
+errors++;
+}
+else {
+errors = _errs1;
+if(vErrors !== null){
+if(_errs1){
+vErrors.length = _errs1;
+}
+else {
+vErrors = null;
+}
+}
+}
+if(data && typeof data == "object" && !Array.isArray(data)){
+if(data.because === undefined){
+const err3 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "because"},message:"must have required property '"+"because"+"'"};
+if(vErrors === null){
+vErrors = [err3];
+}
+else {
+vErrors.push(err3);
+}
+errors++;
+}
+for(const key0 in data){
+if(!(((key0 === "minutes") || (key0 === "until")) || (key0 === "because"))){
+const err4 = {instancePath,schemaPath:"#/additionalProperties",keyword:"additionalProperties",params:{additionalProperty: key0},message:"must NOT have additional properties"};
+if(vErrors === null){
+vErrors = [err4];
+}
+else {
+vErrors.push(err4);
+}
+errors++;
+}
+}
+if(data.minutes !== undefined){
+let data0 = data.minutes;
+if((typeof data0 == "number") && (isFinite(data0))){
+if(data0 > 1440 || isNaN(data0)){
+const err5 = {instancePath:instancePath+"/minutes",schemaPath:"#/properties/minutes/maximum",keyword:"maximum",params:{comparison: "<=", limit: 1440},message:"must be <= 1440"};
+if(vErrors === null){
+vErrors = [err5];
+}
+else {
+vErrors.push(err5);
+}
+errors++;
+}
+if(data0 <= 0 || isNaN(data0)){
+const err6 = {instancePath:instancePath+"/minutes",schemaPath:"#/properties/minutes/exclusiveMinimum",keyword:"exclusiveMinimum",params:{comparison: ">", limit: 0},message:"must be > 0"};
+if(vErrors === null){
+vErrors = [err6];
+}
+else {
+vErrors.push(err6);
+}
+errors++;
+}
+}
+else {
+const err7 = {instancePath:instancePath+"/minutes",schemaPath:"#/properties/minutes/type",keyword:"type",params:{type: "number"},message:"must be number"};
+if(vErrors === null){
+vErrors = [err7];
+}
+else {
+vErrors.push(err7);
+}
+errors++;
+}
+}
+if(data.until !== undefined){
+let data1 = data.until;
+if(Array.isArray(data1)){
+if(data1.length > 30){
+const err8 = {instancePath:instancePath+"/until",schemaPath:"#/properties/until/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+if(vErrors === null){
+vErrors = [err8];
+}
+else {
+vErrors.push(err8);
+}
+errors++;
+}
+if(data1.length < 1){
+const err9 = {instancePath:instancePath+"/until",schemaPath:"#/properties/until/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+if(vErrors === null){
+vErrors = [err9];
+}
+else {
+vErrors.push(err9);
+}
+errors++;
+}
+const len0 = data1.length;
+for(let i0=0; i0<len0; i0++){
+if(!(validate84(data1[i0], {instancePath:instancePath+"/until/" + i0,parentData:data1,parentDataProperty:i0,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate84.errors : vErrors.concat(validate84.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err10 = {instancePath:instancePath+"/until",schemaPath:"#/properties/until/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err10];
+}
+else {
+vErrors.push(err10);
+}
+errors++;
+}
+}
+if(data.because !== undefined){
+if(!(validate61(data.because, {instancePath:instancePath+"/because",parentData:data,parentDataProperty:"because",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate61.errors : vErrors.concat(validate61.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err11 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
+if(vErrors === null){
+vErrors = [err11];
+}
+else {
+vErrors.push(err11);
+}
+errors++;
+}
+validate208.errors = vErrors;
+return errors === 0;
+}
+validate208.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+
+
+function validate184(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+let vErrors = null;
+let errors = 0;
+const evaluated0 = validate184.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -3404,7 +3895,7 @@ vErrors.push(err3);
 errors++;
 }
 for(const key0 in data){
-if(!(func1.call(schema48.properties, key0))){
+if(!(func1.call(schema50.properties, key0))){
 const err4 = {instancePath,schemaPath:"#/additionalProperties",keyword:"additionalProperties",params:{additionalProperty: key0},message:"must NOT have additional properties"};
 if(vErrors === null){
 vErrors = [err4];
@@ -3440,8 +3931,8 @@ errors = vErrors.length;
 }
 }
 if(data.band !== undefined){
-if(!(validate140(data.band, {instancePath:instancePath+"/band",parentData:data,parentDataProperty:"band",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate140.errors : vErrors.concat(validate140.errors);
+if(!(validate148(data.band, {instancePath:instancePath+"/band",parentData:data,parentDataProperty:"band",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate148.errors : vErrors.concat(validate148.errors);
 errors = vErrors.length;
 }
 }
@@ -3452,8 +3943,8 @@ errors = vErrors.length;
 }
 }
 if(data.plausible !== undefined){
-if(!(validate175(data.plausible, {instancePath:instancePath+"/plausible",parentData:data,parentDataProperty:"plausible",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate175.errors : vErrors.concat(validate175.errors);
+if(!(validate191(data.plausible, {instancePath:instancePath+"/plausible",parentData:data,parentDataProperty:"plausible",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate191.errors : vErrors.concat(validate191.errors);
 errors = vErrors.length;
 }
 }
@@ -3517,8 +4008,8 @@ errors++;
 }
 const len0 = data8.length;
 for(let i0=0; i0<len0; i0++){
-if(!(validate177(data8[i0], {instancePath:instancePath+"/ways/" + i0,parentData:data8,parentDataProperty:i0,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate177.errors : vErrors.concat(validate177.errors);
+if(!(validate193(data8[i0], {instancePath:instancePath+"/ways/" + i0,parentData:data8,parentDataProperty:i0,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate193.errors : vErrors.concat(validate193.errors);
 errors = vErrors.length;
 }
 }
@@ -3534,6 +4025,12 @@ vErrors.push(err10);
 errors++;
 }
 }
+if(data.validity !== undefined){
+if(!(validate208(data.validity, {instancePath:instancePath+"/validity",parentData:data,parentDataProperty:"validity",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate208.errors : vErrors.concat(validate208.errors);
+errors = vErrors.length;
+}
+}
 }
 else {
 const err11 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
@@ -3545,16 +4042,16 @@ vErrors.push(err11);
 }
 errors++;
 }
-validate168.errors = vErrors;
+validate184.errors = vErrors;
 return errors === 0;
 }
-validate168.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate184.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 
-function validate160(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate172(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate160.evaluated;
+const evaluated0 = validate172.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -3643,7 +4140,7 @@ vErrors.push(err7);
 errors++;
 }
 for(const key0 in data){
-if(!(func1.call(schema47.properties, key0))){
+if(!(func1.call(schema49.properties, key0))){
 const err8 = {instancePath,schemaPath:"#/additionalProperties",keyword:"additionalProperties",params:{additionalProperty: key0},message:"must NOT have additional properties"};
 if(vErrors === null){
 vErrors = [err8];
@@ -3719,17 +4216,17 @@ vErrors = vErrors === null ? validate61.errors : vErrors.concat(validate61.error
 errors = vErrors.length;
 }
 }
-if(data.why !== undefined){
-if(!(validate57(data.why, {instancePath:instancePath+"/why",parentData:data,parentDataProperty:"why",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
+if(data.short !== undefined){
+if(!(validate55(data.short, {instancePath:instancePath+"/short",parentData:data,parentDataProperty:"short",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate55.errors : vErrors.concat(validate55.errors);
 errors = vErrors.length;
 }
 }
-if(data.cautions !== undefined){
-let data6 = data.cautions;
+if(data.notes !== undefined){
+let data6 = data.notes;
 if(Array.isArray(data6)){
-if(data6.length > 12){
-const err13 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+if(data6.length > 10){
+const err13 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/maxItems",keyword:"maxItems",params:{limit: 10},message:"must NOT have more than 10 items"};
 if(vErrors === null){
 vErrors = [err13];
 }
@@ -3738,16 +4235,8 @@ vErrors.push(err13);
 }
 errors++;
 }
-const len0 = data6.length;
-for(let i0=0; i0<len0; i0++){
-if(!(validate92(data6[i0], {instancePath:instancePath+"/cautions/" + i0,parentData:data6,parentDataProperty:i0,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
-errors = vErrors.length;
-}
-}
-}
-else {
-const err14 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(data6.length < 1){
+const err14 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
 if(vErrors === null){
 vErrors = [err14];
 }
@@ -3756,18 +4245,16 @@ vErrors.push(err14);
 }
 errors++;
 }
-}
-if(data.picture !== undefined){
-if(!(validate118(data.picture, {instancePath:instancePath+"/picture",parentData:data,parentDataProperty:"picture",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate118.errors : vErrors.concat(validate118.errors);
+const len0 = data6.length;
+for(let i0=0; i0<len0; i0++){
+if(!(validate57(data6[i0], {instancePath:instancePath+"/notes/" + i0,parentData:data6,parentDataProperty:i0,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
 errors = vErrors.length;
 }
 }
-if(data.disturbs !== undefined){
-let data9 = data.disturbs;
-if(Array.isArray(data9)){
-if(data9.length > 12){
-const err15 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+}
+else {
+const err15 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err15];
 }
@@ -3776,8 +4263,18 @@ vErrors.push(err15);
 }
 errors++;
 }
-if(data9.length < 1){
-const err16 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+}
+if(data.why !== undefined){
+if(!(validate57(data.why, {instancePath:instancePath+"/why",parentData:data,parentDataProperty:"why",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
+errors = vErrors.length;
+}
+}
+if(data.cautions !== undefined){
+let data9 = data.cautions;
+if(Array.isArray(data9)){
+if(data9.length > 12){
+const err16 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
 if(vErrors === null){
 vErrors = [err16];
 }
@@ -3788,14 +4285,14 @@ errors++;
 }
 const len1 = data9.length;
 for(let i1=0; i1<len1; i1++){
-if(!(validate123(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate123.errors : vErrors.concat(validate123.errors);
+if(!(validate92(data9[i1], {instancePath:instancePath+"/cautions/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err17 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err17 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err17];
 }
@@ -3805,11 +4302,17 @@ vErrors.push(err17);
 errors++;
 }
 }
-if(data.reads !== undefined){
-let data11 = data.reads;
-if(Array.isArray(data11)){
-if(data11.length > 20){
-const err18 = {instancePath:instancePath+"/reads",schemaPath:"#/properties/reads/maxItems",keyword:"maxItems",params:{limit: 20},message:"must NOT have more than 20 items"};
+if(data.picture !== undefined){
+if(!(validate120(data.picture, {instancePath:instancePath+"/picture",parentData:data,parentDataProperty:"picture",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate120.errors : vErrors.concat(validate120.errors);
+errors = vErrors.length;
+}
+}
+if(data.disturbs !== undefined){
+let data12 = data.disturbs;
+if(Array.isArray(data12)){
+if(data12.length > 12){
+const err18 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
 if(vErrors === null){
 vErrors = [err18];
 }
@@ -3818,8 +4321,8 @@ vErrors.push(err18);
 }
 errors++;
 }
-if(data11.length < 1){
-const err19 = {instancePath:instancePath+"/reads",schemaPath:"#/properties/reads/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+if(data12.length < 1){
+const err19 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
 if(vErrors === null){
 vErrors = [err19];
 }
@@ -3828,16 +4331,16 @@ vErrors.push(err19);
 }
 errors++;
 }
-const len2 = data11.length;
+const len2 = data12.length;
 for(let i2=0; i2<len2; i2++){
-if(!(validate168(data11[i2], {instancePath:instancePath+"/reads/" + i2,parentData:data11,parentDataProperty:i2,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate168.errors : vErrors.concat(validate168.errors);
+if(!(validate125(data12[i2], {instancePath:instancePath+"/disturbs/" + i2,parentData:data12,parentDataProperty:i2,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate125.errors : vErrors.concat(validate125.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err20 = {instancePath:instancePath+"/reads",schemaPath:"#/properties/reads/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err20 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err20];
 }
@@ -3847,11 +4350,9 @@ vErrors.push(err20);
 errors++;
 }
 }
-if(data.next !== undefined){
-let data13 = data.next;
-if(Array.isArray(data13)){
-if(data13.length > 30){
-const err21 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+if(data.stay !== undefined){
+if(typeof data.stay !== "boolean"){
+const err21 = {instancePath:instancePath+"/stay",schemaPath:"#/properties/stay/type",keyword:"type",params:{type: "boolean"},message:"must be boolean"};
 if(vErrors === null){
 vErrors = [err21];
 }
@@ -3860,21 +4361,89 @@ vErrors.push(err21);
 }
 errors++;
 }
-const len3 = data13.length;
-for(let i3=0; i3<len3; i3++){
-if(!(validate128(data13[i3], {instancePath:instancePath+"/next/" + i3,parentData:data13,parentDataProperty:i3,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate128.errors : vErrors.concat(validate128.errors);
+}
+if(data.release !== undefined){
+if(!(validate130(data.release, {instancePath:instancePath+"/release",parentData:data,parentDataProperty:"release",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate130.errors : vErrors.concat(validate130.errors);
 errors = vErrors.length;
 }
 }
+if(data.verify !== undefined){
+if(!(validate133(data.verify, {instancePath:instancePath+"/verify",parentData:data,parentDataProperty:"verify",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate133.errors : vErrors.concat(validate133.errors);
+errors = vErrors.length;
 }
-else {
-const err22 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/type",keyword:"type",params:{type: "array"},message:"must be array"};
+}
+if(data.reads !== undefined){
+let data17 = data.reads;
+if(Array.isArray(data17)){
+if(data17.length > 20){
+const err22 = {instancePath:instancePath+"/reads",schemaPath:"#/properties/reads/maxItems",keyword:"maxItems",params:{limit: 20},message:"must NOT have more than 20 items"};
 if(vErrors === null){
 vErrors = [err22];
 }
 else {
 vErrors.push(err22);
+}
+errors++;
+}
+if(data17.length < 1){
+const err23 = {instancePath:instancePath+"/reads",schemaPath:"#/properties/reads/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+if(vErrors === null){
+vErrors = [err23];
+}
+else {
+vErrors.push(err23);
+}
+errors++;
+}
+const len3 = data17.length;
+for(let i3=0; i3<len3; i3++){
+if(!(validate184(data17[i3], {instancePath:instancePath+"/reads/" + i3,parentData:data17,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate184.errors : vErrors.concat(validate184.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err24 = {instancePath:instancePath+"/reads",schemaPath:"#/properties/reads/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err24];
+}
+else {
+vErrors.push(err24);
+}
+errors++;
+}
+}
+if(data.next !== undefined){
+let data19 = data.next;
+if(Array.isArray(data19)){
+if(data19.length > 30){
+const err25 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+if(vErrors === null){
+vErrors = [err25];
+}
+else {
+vErrors.push(err25);
+}
+errors++;
+}
+const len4 = data19.length;
+for(let i4=0; i4<len4; i4++){
+if(!(validate136(data19[i4], {instancePath:instancePath+"/next/" + i4,parentData:data19,parentDataProperty:i4,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate136.errors : vErrors.concat(validate136.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err26 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err26];
+}
+else {
+vErrors.push(err26);
 }
 errors++;
 }
@@ -3886,33 +4455,33 @@ errors = vErrors.length;
 }
 }
 if(data.results !== undefined){
-let data16 = data.results;
-if(Array.isArray(data16)){
-if(data16.length > 30){
-const err23 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+let data22 = data.results;
+if(Array.isArray(data22)){
+if(data22.length > 30){
+const err27 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
 if(vErrors === null){
-vErrors = [err23];
+vErrors = [err27];
 }
 else {
-vErrors.push(err23);
+vErrors.push(err27);
 }
 errors++;
 }
-const len4 = data16.length;
-for(let i4=0; i4<len4; i4++){
-if(!(validate135(data16[i4], {instancePath:instancePath+"/results/" + i4,parentData:data16,parentDataProperty:i4,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate135.errors : vErrors.concat(validate135.errors);
+const len5 = data22.length;
+for(let i5=0; i5<len5; i5++){
+if(!(validate143(data22[i5], {instancePath:instancePath+"/results/" + i5,parentData:data22,parentDataProperty:i5,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate143.errors : vErrors.concat(validate143.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err24 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err28 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
-vErrors = [err24];
+vErrors = [err28];
 }
 else {
-vErrors.push(err24);
+vErrors.push(err28);
 }
 errors++;
 }
@@ -3925,27 +4494,27 @@ errors = vErrors.length;
 }
 }
 else {
-const err25 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
+const err29 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
 if(vErrors === null){
-vErrors = [err25];
+vErrors = [err29];
 }
 else {
-vErrors.push(err25);
+vErrors.push(err29);
 }
 errors++;
 }
-validate160.errors = vErrors;
+validate172.errors = vErrors;
 return errors === 0;
 }
-validate160.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate172.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema52 = {"type":"object","properties":{"kind":{"const":"choice"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"name":{"$ref":"#/$defs/name"},"several":{"type":"boolean"},"options":{"type":"array","items":{"$ref":"#/$defs/option"},"minItems":1,"maxItems":30},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","options"],"additionalProperties":false};
-const schema53 = {"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"ask":{"$ref":"#/$defs/line"},"alone":{"type":"boolean"}},"required":["name","label"],"additionalProperties":false};
+const schema55 = {"type":"object","properties":{"kind":{"const":"choice"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"several":{"type":"boolean"},"options":{"type":"array","items":{"$ref":"#/$defs/option"},"minItems":1,"maxItems":30},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","options"],"additionalProperties":false};
+const schema56 = {"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"ask":{"$ref":"#/$defs/line"},"alone":{"type":"boolean"},"picture":{"$ref":"#/$defs/picture"}},"required":["name","label"],"additionalProperties":false};
 
-function validate206(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate230(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate206.evaluated;
+const evaluated0 = validate230.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -3974,7 +4543,7 @@ vErrors.push(err1);
 errors++;
 }
 for(const key0 in data){
-if(!((((key0 === "name") || (key0 === "label")) || (key0 === "ask")) || (key0 === "alone"))){
+if(!(((((key0 === "name") || (key0 === "label")) || (key0 === "ask")) || (key0 === "alone")) || (key0 === "picture"))){
 const err2 = {instancePath,schemaPath:"#/additionalProperties",keyword:"additionalProperties",params:{additionalProperty: key0},message:"must NOT have additional properties"};
 if(vErrors === null){
 vErrors = [err2];
@@ -4015,6 +4584,12 @@ vErrors.push(err3);
 errors++;
 }
 }
+if(data.picture !== undefined){
+if(!(validate120(data.picture, {instancePath:instancePath+"/picture",parentData:data,parentDataProperty:"picture",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate120.errors : vErrors.concat(validate120.errors);
+errors = vErrors.length;
+}
+}
 }
 else {
 const err4 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
@@ -4026,16 +4601,16 @@ vErrors.push(err4);
 }
 errors++;
 }
-validate206.errors = vErrors;
+validate230.errors = vErrors;
 return errors === 0;
 }
-validate206.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate230.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 
-function validate197(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate217(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate197.evaluated;
+const evaluated0 = validate217.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4134,7 +4709,7 @@ vErrors.push(err8);
 errors++;
 }
 for(const key0 in data){
-if(!(func1.call(schema52.properties, key0))){
+if(!(func1.call(schema55.properties, key0))){
 const err9 = {instancePath,schemaPath:"#/additionalProperties",keyword:"additionalProperties",params:{additionalProperty: key0},message:"must NOT have additional properties"};
 if(vErrors === null){
 vErrors = [err9];
@@ -4210,17 +4785,17 @@ vErrors = vErrors === null ? validate61.errors : vErrors.concat(validate61.error
 errors = vErrors.length;
 }
 }
-if(data.why !== undefined){
-if(!(validate57(data.why, {instancePath:instancePath+"/why",parentData:data,parentDataProperty:"why",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
+if(data.short !== undefined){
+if(!(validate55(data.short, {instancePath:instancePath+"/short",parentData:data,parentDataProperty:"short",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate55.errors : vErrors.concat(validate55.errors);
 errors = vErrors.length;
 }
 }
-if(data.cautions !== undefined){
-let data6 = data.cautions;
+if(data.notes !== undefined){
+let data6 = data.notes;
 if(Array.isArray(data6)){
-if(data6.length > 12){
-const err14 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+if(data6.length > 10){
+const err14 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/maxItems",keyword:"maxItems",params:{limit: 10},message:"must NOT have more than 10 items"};
 if(vErrors === null){
 vErrors = [err14];
 }
@@ -4229,16 +4804,8 @@ vErrors.push(err14);
 }
 errors++;
 }
-const len0 = data6.length;
-for(let i0=0; i0<len0; i0++){
-if(!(validate92(data6[i0], {instancePath:instancePath+"/cautions/" + i0,parentData:data6,parentDataProperty:i0,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
-errors = vErrors.length;
-}
-}
-}
-else {
-const err15 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(data6.length < 1){
+const err15 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
 if(vErrors === null){
 vErrors = [err15];
 }
@@ -4247,18 +4814,16 @@ vErrors.push(err15);
 }
 errors++;
 }
-}
-if(data.picture !== undefined){
-if(!(validate118(data.picture, {instancePath:instancePath+"/picture",parentData:data,parentDataProperty:"picture",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate118.errors : vErrors.concat(validate118.errors);
+const len0 = data6.length;
+for(let i0=0; i0<len0; i0++){
+if(!(validate57(data6[i0], {instancePath:instancePath+"/notes/" + i0,parentData:data6,parentDataProperty:i0,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
 errors = vErrors.length;
 }
 }
-if(data.disturbs !== undefined){
-let data9 = data.disturbs;
-if(Array.isArray(data9)){
-if(data9.length > 12){
-const err16 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+}
+else {
+const err16 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err16];
 }
@@ -4267,8 +4832,18 @@ vErrors.push(err16);
 }
 errors++;
 }
-if(data9.length < 1){
-const err17 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+}
+if(data.why !== undefined){
+if(!(validate57(data.why, {instancePath:instancePath+"/why",parentData:data,parentDataProperty:"why",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
+errors = vErrors.length;
+}
+}
+if(data.cautions !== undefined){
+let data9 = data.cautions;
+if(Array.isArray(data9)){
+if(data9.length > 12){
+const err17 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
 if(vErrors === null){
 vErrors = [err17];
 }
@@ -4279,14 +4854,14 @@ errors++;
 }
 const len1 = data9.length;
 for(let i1=0; i1<len1; i1++){
-if(!(validate123(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate123.errors : vErrors.concat(validate123.errors);
+if(!(validate92(data9[i1], {instancePath:instancePath+"/cautions/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err18 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err18 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err18];
 }
@@ -4294,6 +4869,78 @@ else {
 vErrors.push(err18);
 }
 errors++;
+}
+}
+if(data.picture !== undefined){
+if(!(validate120(data.picture, {instancePath:instancePath+"/picture",parentData:data,parentDataProperty:"picture",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate120.errors : vErrors.concat(validate120.errors);
+errors = vErrors.length;
+}
+}
+if(data.disturbs !== undefined){
+let data12 = data.disturbs;
+if(Array.isArray(data12)){
+if(data12.length > 12){
+const err19 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+if(vErrors === null){
+vErrors = [err19];
+}
+else {
+vErrors.push(err19);
+}
+errors++;
+}
+if(data12.length < 1){
+const err20 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+if(vErrors === null){
+vErrors = [err20];
+}
+else {
+vErrors.push(err20);
+}
+errors++;
+}
+const len2 = data12.length;
+for(let i2=0; i2<len2; i2++){
+if(!(validate125(data12[i2], {instancePath:instancePath+"/disturbs/" + i2,parentData:data12,parentDataProperty:i2,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate125.errors : vErrors.concat(validate125.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err21 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err21];
+}
+else {
+vErrors.push(err21);
+}
+errors++;
+}
+}
+if(data.stay !== undefined){
+if(typeof data.stay !== "boolean"){
+const err22 = {instancePath:instancePath+"/stay",schemaPath:"#/properties/stay/type",keyword:"type",params:{type: "boolean"},message:"must be boolean"};
+if(vErrors === null){
+vErrors = [err22];
+}
+else {
+vErrors.push(err22);
+}
+errors++;
+}
+}
+if(data.release !== undefined){
+if(!(validate130(data.release, {instancePath:instancePath+"/release",parentData:data,parentDataProperty:"release",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate130.errors : vErrors.concat(validate130.errors);
+errors = vErrors.length;
+}
+}
+if(data.verify !== undefined){
+if(!(validate133(data.verify, {instancePath:instancePath+"/verify",parentData:data,parentDataProperty:"verify",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate133.errors : vErrors.concat(validate133.errors);
+errors = vErrors.length;
 }
 }
 if(data.name !== undefined){
@@ -4304,63 +4951,7 @@ errors = vErrors.length;
 }
 if(data.several !== undefined){
 if(typeof data.several !== "boolean"){
-const err19 = {instancePath:instancePath+"/several",schemaPath:"#/properties/several/type",keyword:"type",params:{type: "boolean"},message:"must be boolean"};
-if(vErrors === null){
-vErrors = [err19];
-}
-else {
-vErrors.push(err19);
-}
-errors++;
-}
-}
-if(data.options !== undefined){
-let data13 = data.options;
-if(Array.isArray(data13)){
-if(data13.length > 30){
-const err20 = {instancePath:instancePath+"/options",schemaPath:"#/properties/options/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
-if(vErrors === null){
-vErrors = [err20];
-}
-else {
-vErrors.push(err20);
-}
-errors++;
-}
-if(data13.length < 1){
-const err21 = {instancePath:instancePath+"/options",schemaPath:"#/properties/options/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
-if(vErrors === null){
-vErrors = [err21];
-}
-else {
-vErrors.push(err21);
-}
-errors++;
-}
-const len2 = data13.length;
-for(let i2=0; i2<len2; i2++){
-if(!(validate206(data13[i2], {instancePath:instancePath+"/options/" + i2,parentData:data13,parentDataProperty:i2,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate206.errors : vErrors.concat(validate206.errors);
-errors = vErrors.length;
-}
-}
-}
-else {
-const err22 = {instancePath:instancePath+"/options",schemaPath:"#/properties/options/type",keyword:"type",params:{type: "array"},message:"must be array"};
-if(vErrors === null){
-vErrors = [err22];
-}
-else {
-vErrors.push(err22);
-}
-errors++;
-}
-}
-if(data.next !== undefined){
-let data15 = data.next;
-if(Array.isArray(data15)){
-if(data15.length > 30){
-const err23 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+const err23 = {instancePath:instancePath+"/several",schemaPath:"#/properties/several/type",keyword:"type",params:{type: "boolean"},message:"must be boolean"};
 if(vErrors === null){
 vErrors = [err23];
 }
@@ -4369,21 +4960,77 @@ vErrors.push(err23);
 }
 errors++;
 }
-const len3 = data15.length;
-for(let i3=0; i3<len3; i3++){
-if(!(validate128(data15[i3], {instancePath:instancePath+"/next/" + i3,parentData:data15,parentDataProperty:i3,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate128.errors : vErrors.concat(validate128.errors);
-errors = vErrors.length;
 }
-}
-}
-else {
-const err24 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(data.options !== undefined){
+let data19 = data.options;
+if(Array.isArray(data19)){
+if(data19.length > 30){
+const err24 = {instancePath:instancePath+"/options",schemaPath:"#/properties/options/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
 if(vErrors === null){
 vErrors = [err24];
 }
 else {
 vErrors.push(err24);
+}
+errors++;
+}
+if(data19.length < 1){
+const err25 = {instancePath:instancePath+"/options",schemaPath:"#/properties/options/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+if(vErrors === null){
+vErrors = [err25];
+}
+else {
+vErrors.push(err25);
+}
+errors++;
+}
+const len3 = data19.length;
+for(let i3=0; i3<len3; i3++){
+if(!(validate230(data19[i3], {instancePath:instancePath+"/options/" + i3,parentData:data19,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate230.errors : vErrors.concat(validate230.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err26 = {instancePath:instancePath+"/options",schemaPath:"#/properties/options/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err26];
+}
+else {
+vErrors.push(err26);
+}
+errors++;
+}
+}
+if(data.next !== undefined){
+let data21 = data.next;
+if(Array.isArray(data21)){
+if(data21.length > 30){
+const err27 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+if(vErrors === null){
+vErrors = [err27];
+}
+else {
+vErrors.push(err27);
+}
+errors++;
+}
+const len4 = data21.length;
+for(let i4=0; i4<len4; i4++){
+if(!(validate136(data21[i4], {instancePath:instancePath+"/next/" + i4,parentData:data21,parentDataProperty:i4,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate136.errors : vErrors.concat(validate136.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err28 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err28];
+}
+else {
+vErrors.push(err28);
 }
 errors++;
 }
@@ -4395,33 +5042,33 @@ errors = vErrors.length;
 }
 }
 if(data.results !== undefined){
-let data18 = data.results;
-if(Array.isArray(data18)){
-if(data18.length > 30){
-const err25 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+let data24 = data.results;
+if(Array.isArray(data24)){
+if(data24.length > 30){
+const err29 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
 if(vErrors === null){
-vErrors = [err25];
+vErrors = [err29];
 }
 else {
-vErrors.push(err25);
+vErrors.push(err29);
 }
 errors++;
 }
-const len4 = data18.length;
-for(let i4=0; i4<len4; i4++){
-if(!(validate135(data18[i4], {instancePath:instancePath+"/results/" + i4,parentData:data18,parentDataProperty:i4,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate135.errors : vErrors.concat(validate135.errors);
+const len5 = data24.length;
+for(let i5=0; i5<len5; i5++){
+if(!(validate143(data24[i5], {instancePath:instancePath+"/results/" + i5,parentData:data24,parentDataProperty:i5,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate143.errors : vErrors.concat(validate143.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err26 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err30 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
-vErrors = [err26];
+vErrors = [err30];
 }
 else {
-vErrors.push(err26);
+vErrors.push(err30);
 }
 errors++;
 }
@@ -4434,27 +5081,27 @@ errors = vErrors.length;
 }
 }
 else {
-const err27 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
+const err31 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
 if(vErrors === null){
-vErrors = [err27];
+vErrors = [err31];
 }
 else {
-vErrors.push(err27);
+vErrors.push(err31);
 }
 errors++;
 }
-validate197.errors = vErrors;
+validate217.errors = vErrors;
 return errors === 0;
 }
-validate197.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate217.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema54 = {"type":"object","properties":{"kind":{"const":"listen"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"name":{"$ref":"#/$defs/name"},"channels":{"type":"array","items":{"$ref":"#/$defs/channel"},"minItems":1,"maxItems":4},"target":{"type":"number"},"finds":{"type":"array","items":{"$ref":"#/$defs/found"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","channels","target","finds"],"additionalProperties":false};
-const schema55 = {"type":"object","properties":{"name":{"enum":["gauge","manifold","boost","sound"]},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"gear":{"$ref":"#/$defs/name"},"needed":{"type":"boolean"}},"required":["name","label","unit","needed"],"additionalProperties":false};
+const schema57 = {"type":"object","properties":{"kind":{"const":"listen"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"channels":{"type":"array","items":{"$ref":"#/$defs/channel"},"minItems":1,"maxItems":4},"target":{"type":"number"},"finds":{"type":"array","items":{"$ref":"#/$defs/found"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","channels","target","finds"],"additionalProperties":false};
+const schema58 = {"type":"object","properties":{"name":{"enum":["gauge","manifold","boost","sound"]},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"gear":{"$ref":"#/$defs/name"},"needed":{"type":"boolean"}},"required":["name","label","unit","needed"],"additionalProperties":false};
 
-function validate224(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate253(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate224.evaluated;
+const evaluated0 = validate253.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4517,7 +5164,7 @@ errors++;
 if(data.name !== undefined){
 let data0 = data.name;
 if(!((((data0 === "gauge") || (data0 === "manifold")) || (data0 === "boost")) || (data0 === "sound"))){
-const err5 = {instancePath:instancePath+"/name",schemaPath:"#/properties/name/enum",keyword:"enum",params:{allowedValues: schema55.properties.name.enum},message:"must be equal to one of the allowed values"};
+const err5 = {instancePath:instancePath+"/name",schemaPath:"#/properties/name/enum",keyword:"enum",params:{allowedValues: schema58.properties.name.enum},message:"must be equal to one of the allowed values"};
 if(vErrors === null){
 vErrors = [err5];
 }
@@ -4574,18 +5221,18 @@ vErrors.push(err7);
 }
 errors++;
 }
-validate224.errors = vErrors;
+validate253.errors = vErrors;
 return errors === 0;
 }
-validate224.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate253.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema56 = {"type":"object","discriminator":{"propertyName":"what"},"required":["what"],"oneOf":[{"$ref":"#/$defs/foundTruth"},{"$ref":"#/$defs/foundQuantity"}]};
-const schema57 = {"type":"object","properties":{"what":{"enum":["noise-heard","noise-stopped"]},"name":{"$ref":"#/$defs/name"}},"required":["what","name"],"additionalProperties":false};
+const schema59 = {"type":"object","discriminator":{"propertyName":"what"},"required":["what"],"oneOf":[{"$ref":"#/$defs/foundTruth"},{"$ref":"#/$defs/foundQuantity"}]};
+const schema60 = {"type":"object","properties":{"what":{"enum":["noise-heard","noise-stopped"]},"name":{"$ref":"#/$defs/name"}},"required":["what","name"],"additionalProperties":false};
 
-function validate231(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate260(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate231.evaluated;
+const evaluated0 = validate260.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4628,7 +5275,7 @@ errors++;
 if(data.what !== undefined){
 let data0 = data.what;
 if(!((data0 === "noise-heard") || (data0 === "noise-stopped"))){
-const err3 = {instancePath:instancePath+"/what",schemaPath:"#/properties/what/enum",keyword:"enum",params:{allowedValues: schema57.properties.what.enum},message:"must be equal to one of the allowed values"};
+const err3 = {instancePath:instancePath+"/what",schemaPath:"#/properties/what/enum",keyword:"enum",params:{allowedValues: schema60.properties.what.enum},message:"must be equal to one of the allowed values"};
 if(vErrors === null){
 vErrors = [err3];
 }
@@ -4655,17 +5302,17 @@ vErrors.push(err4);
 }
 errors++;
 }
-validate231.errors = vErrors;
+validate260.errors = vErrors;
 return errors === 0;
 }
-validate231.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate260.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema58 = {"type":"object","properties":{"what":{"enum":["seal-point","highest-gauge","manifold-gain","boost-gain","worst-gap"]},"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"}},"required":["what","name","label","unit"],"additionalProperties":false};
+const schema61 = {"type":"object","properties":{"what":{"enum":["seal-point","highest-gauge","manifold-gain","boost-gain","worst-gap"]},"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"}},"required":["what","name","label","unit"],"additionalProperties":false};
 
-function validate233(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate262(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate233.evaluated;
+const evaluated0 = validate262.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4728,7 +5375,7 @@ errors++;
 if(data.what !== undefined){
 let data0 = data.what;
 if(!(((((data0 === "seal-point") || (data0 === "highest-gauge")) || (data0 === "manifold-gain")) || (data0 === "boost-gain")) || (data0 === "worst-gap"))){
-const err5 = {instancePath:instancePath+"/what",schemaPath:"#/properties/what/enum",keyword:"enum",params:{allowedValues: schema58.properties.what.enum},message:"must be equal to one of the allowed values"};
+const err5 = {instancePath:instancePath+"/what",schemaPath:"#/properties/what/enum",keyword:"enum",params:{allowedValues: schema61.properties.what.enum},message:"must be equal to one of the allowed values"};
 if(vErrors === null){
 vErrors = [err5];
 }
@@ -4763,8 +5410,8 @@ errors = vErrors.length;
 }
 }
 if(data.band !== undefined){
-if(!(validate140(data.band, {instancePath:instancePath+"/band",parentData:data,parentDataProperty:"band",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate140.errors : vErrors.concat(validate140.errors);
+if(!(validate148(data.band, {instancePath:instancePath+"/band",parentData:data,parentDataProperty:"band",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate148.errors : vErrors.concat(validate148.errors);
 errors = vErrors.length;
 }
 }
@@ -4779,16 +5426,16 @@ vErrors.push(err6);
 }
 errors++;
 }
-validate233.errors = vErrors;
+validate262.errors = vErrors;
 return errors === 0;
 }
-validate233.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate262.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 
-function validate230(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate259(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate230.evaluated;
+const evaluated0 = validate259.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4809,15 +5456,15 @@ errors++;
 const tag0 = data.what;
 if(typeof tag0 == "string"){
 if(tag0 === "noise-heard"){
-if(!(validate231(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate231.errors : vErrors.concat(validate231.errors);
+if(!(validate260(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate260.errors : vErrors.concat(validate260.errors);
 errors = vErrors.length;
 }
 var props0 = true;
 }
 else if(tag0 === "noise-stopped"){
-if(!(validate231(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate231.errors : vErrors.concat(validate231.errors);
+if(!(validate260(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate260.errors : vErrors.concat(validate260.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -4825,8 +5472,8 @@ props0 = true;
 }
 }
 else if(tag0 === "seal-point"){
-if(!(validate233(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate233.errors : vErrors.concat(validate233.errors);
+if(!(validate262(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate262.errors : vErrors.concat(validate262.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -4834,8 +5481,8 @@ props0 = true;
 }
 }
 else if(tag0 === "highest-gauge"){
-if(!(validate233(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate233.errors : vErrors.concat(validate233.errors);
+if(!(validate262(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate262.errors : vErrors.concat(validate262.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -4843,8 +5490,8 @@ props0 = true;
 }
 }
 else if(tag0 === "manifold-gain"){
-if(!(validate233(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate233.errors : vErrors.concat(validate233.errors);
+if(!(validate262(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate262.errors : vErrors.concat(validate262.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -4852,8 +5499,8 @@ props0 = true;
 }
 }
 else if(tag0 === "boost-gain"){
-if(!(validate233(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate233.errors : vErrors.concat(validate233.errors);
+if(!(validate262(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate262.errors : vErrors.concat(validate262.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -4861,8 +5508,8 @@ props0 = true;
 }
 }
 else if(tag0 === "worst-gap"){
-if(!(validate233(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate233.errors : vErrors.concat(validate233.errors);
+if(!(validate262(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate262.errors : vErrors.concat(validate262.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -4901,17 +5548,17 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate230.errors = vErrors;
+validate259.errors = vErrors;
 evaluated0.props = props0;
 return errors === 0;
 }
-validate230.evaluated = {"dynamicProps":true,"dynamicItems":false};
+validate259.evaluated = {"dynamicProps":true,"dynamicItems":false};
 
 
-function validate215(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate240(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate215.evaluated;
+const evaluated0 = validate240.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -5030,7 +5677,7 @@ vErrors.push(err10);
 errors++;
 }
 for(const key0 in data){
-if(!(func1.call(schema54.properties, key0))){
+if(!(func1.call(schema57.properties, key0))){
 const err11 = {instancePath,schemaPath:"#/additionalProperties",keyword:"additionalProperties",params:{additionalProperty: key0},message:"must NOT have additional properties"};
 if(vErrors === null){
 vErrors = [err11];
@@ -5106,17 +5753,17 @@ vErrors = vErrors === null ? validate61.errors : vErrors.concat(validate61.error
 errors = vErrors.length;
 }
 }
-if(data.why !== undefined){
-if(!(validate57(data.why, {instancePath:instancePath+"/why",parentData:data,parentDataProperty:"why",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
+if(data.short !== undefined){
+if(!(validate55(data.short, {instancePath:instancePath+"/short",parentData:data,parentDataProperty:"short",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate55.errors : vErrors.concat(validate55.errors);
 errors = vErrors.length;
 }
 }
-if(data.cautions !== undefined){
-let data6 = data.cautions;
+if(data.notes !== undefined){
+let data6 = data.notes;
 if(Array.isArray(data6)){
-if(data6.length > 12){
-const err16 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+if(data6.length > 10){
+const err16 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/maxItems",keyword:"maxItems",params:{limit: 10},message:"must NOT have more than 10 items"};
 if(vErrors === null){
 vErrors = [err16];
 }
@@ -5125,16 +5772,8 @@ vErrors.push(err16);
 }
 errors++;
 }
-const len0 = data6.length;
-for(let i0=0; i0<len0; i0++){
-if(!(validate92(data6[i0], {instancePath:instancePath+"/cautions/" + i0,parentData:data6,parentDataProperty:i0,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
-errors = vErrors.length;
-}
-}
-}
-else {
-const err17 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(data6.length < 1){
+const err17 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
 if(vErrors === null){
 vErrors = [err17];
 }
@@ -5143,18 +5782,16 @@ vErrors.push(err17);
 }
 errors++;
 }
-}
-if(data.picture !== undefined){
-if(!(validate118(data.picture, {instancePath:instancePath+"/picture",parentData:data,parentDataProperty:"picture",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate118.errors : vErrors.concat(validate118.errors);
+const len0 = data6.length;
+for(let i0=0; i0<len0; i0++){
+if(!(validate57(data6[i0], {instancePath:instancePath+"/notes/" + i0,parentData:data6,parentDataProperty:i0,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
 errors = vErrors.length;
 }
 }
-if(data.disturbs !== undefined){
-let data9 = data.disturbs;
-if(Array.isArray(data9)){
-if(data9.length > 12){
-const err18 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+}
+else {
+const err18 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err18];
 }
@@ -5163,8 +5800,18 @@ vErrors.push(err18);
 }
 errors++;
 }
-if(data9.length < 1){
-const err19 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+}
+if(data.why !== undefined){
+if(!(validate57(data.why, {instancePath:instancePath+"/why",parentData:data,parentDataProperty:"why",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
+errors = vErrors.length;
+}
+}
+if(data.cautions !== undefined){
+let data9 = data.cautions;
+if(Array.isArray(data9)){
+if(data9.length > 12){
+const err19 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
 if(vErrors === null){
 vErrors = [err19];
 }
@@ -5175,14 +5822,14 @@ errors++;
 }
 const len1 = data9.length;
 for(let i1=0; i1<len1; i1++){
-if(!(validate123(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate123.errors : vErrors.concat(validate123.errors);
+if(!(validate92(data9[i1], {instancePath:instancePath+"/cautions/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err20 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err20 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err20];
 }
@@ -5192,17 +5839,17 @@ vErrors.push(err20);
 errors++;
 }
 }
-if(data.name !== undefined){
-if(!(validate66(data.name, {instancePath:instancePath+"/name",parentData:data,parentDataProperty:"name",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate66.errors : vErrors.concat(validate66.errors);
+if(data.picture !== undefined){
+if(!(validate120(data.picture, {instancePath:instancePath+"/picture",parentData:data,parentDataProperty:"picture",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate120.errors : vErrors.concat(validate120.errors);
 errors = vErrors.length;
 }
 }
-if(data.channels !== undefined){
-let data12 = data.channels;
+if(data.disturbs !== undefined){
+let data12 = data.disturbs;
 if(Array.isArray(data12)){
-if(data12.length > 4){
-const err21 = {instancePath:instancePath+"/channels",schemaPath:"#/properties/channels/maxItems",keyword:"maxItems",params:{limit: 4},message:"must NOT have more than 4 items"};
+if(data12.length > 12){
+const err21 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
 if(vErrors === null){
 vErrors = [err21];
 }
@@ -5212,7 +5859,7 @@ vErrors.push(err21);
 errors++;
 }
 if(data12.length < 1){
-const err22 = {instancePath:instancePath+"/channels",schemaPath:"#/properties/channels/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+const err22 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
 if(vErrors === null){
 vErrors = [err22];
 }
@@ -5223,14 +5870,14 @@ errors++;
 }
 const len2 = data12.length;
 for(let i2=0; i2<len2; i2++){
-if(!(validate224(data12[i2], {instancePath:instancePath+"/channels/" + i2,parentData:data12,parentDataProperty:i2,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate224.errors : vErrors.concat(validate224.errors);
+if(!(validate125(data12[i2], {instancePath:instancePath+"/disturbs/" + i2,parentData:data12,parentDataProperty:i2,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate125.errors : vErrors.concat(validate125.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err23 = {instancePath:instancePath+"/channels",schemaPath:"#/properties/channels/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err23 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err23];
 }
@@ -5240,10 +5887,9 @@ vErrors.push(err23);
 errors++;
 }
 }
-if(data.target !== undefined){
-let data14 = data.target;
-if(!((typeof data14 == "number") && (isFinite(data14)))){
-const err24 = {instancePath:instancePath+"/target",schemaPath:"#/properties/target/type",keyword:"type",params:{type: "number"},message:"must be number"};
+if(data.stay !== undefined){
+if(typeof data.stay !== "boolean"){
+const err24 = {instancePath:instancePath+"/stay",schemaPath:"#/properties/stay/type",keyword:"type",params:{type: "boolean"},message:"must be boolean"};
 if(vErrors === null){
 vErrors = [err24];
 }
@@ -5253,11 +5899,29 @@ vErrors.push(err24);
 errors++;
 }
 }
-if(data.finds !== undefined){
-let data15 = data.finds;
-if(Array.isArray(data15)){
-if(data15.length > 20){
-const err25 = {instancePath:instancePath+"/finds",schemaPath:"#/properties/finds/maxItems",keyword:"maxItems",params:{limit: 20},message:"must NOT have more than 20 items"};
+if(data.release !== undefined){
+if(!(validate130(data.release, {instancePath:instancePath+"/release",parentData:data,parentDataProperty:"release",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate130.errors : vErrors.concat(validate130.errors);
+errors = vErrors.length;
+}
+}
+if(data.verify !== undefined){
+if(!(validate133(data.verify, {instancePath:instancePath+"/verify",parentData:data,parentDataProperty:"verify",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate133.errors : vErrors.concat(validate133.errors);
+errors = vErrors.length;
+}
+}
+if(data.name !== undefined){
+if(!(validate66(data.name, {instancePath:instancePath+"/name",parentData:data,parentDataProperty:"name",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate66.errors : vErrors.concat(validate66.errors);
+errors = vErrors.length;
+}
+}
+if(data.channels !== undefined){
+let data18 = data.channels;
+if(Array.isArray(data18)){
+if(data18.length > 4){
+const err25 = {instancePath:instancePath+"/channels",schemaPath:"#/properties/channels/maxItems",keyword:"maxItems",params:{limit: 4},message:"must NOT have more than 4 items"};
 if(vErrors === null){
 vErrors = [err25];
 }
@@ -5266,8 +5930,8 @@ vErrors.push(err25);
 }
 errors++;
 }
-if(data15.length < 1){
-const err26 = {instancePath:instancePath+"/finds",schemaPath:"#/properties/finds/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+if(data18.length < 1){
+const err26 = {instancePath:instancePath+"/channels",schemaPath:"#/properties/channels/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
 if(vErrors === null){
 vErrors = [err26];
 }
@@ -5276,16 +5940,16 @@ vErrors.push(err26);
 }
 errors++;
 }
-const len3 = data15.length;
+const len3 = data18.length;
 for(let i3=0; i3<len3; i3++){
-if(!(validate230(data15[i3], {instancePath:instancePath+"/finds/" + i3,parentData:data15,parentDataProperty:i3,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate230.errors : vErrors.concat(validate230.errors);
+if(!(validate253(data18[i3], {instancePath:instancePath+"/channels/" + i3,parentData:data18,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate253.errors : vErrors.concat(validate253.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err27 = {instancePath:instancePath+"/finds",schemaPath:"#/properties/finds/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err27 = {instancePath:instancePath+"/channels",schemaPath:"#/properties/channels/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err27];
 }
@@ -5295,11 +5959,10 @@ vErrors.push(err27);
 errors++;
 }
 }
-if(data.next !== undefined){
-let data17 = data.next;
-if(Array.isArray(data17)){
-if(data17.length > 30){
-const err28 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+if(data.target !== undefined){
+let data20 = data.target;
+if(!((typeof data20 == "number") && (isFinite(data20)))){
+const err28 = {instancePath:instancePath+"/target",schemaPath:"#/properties/target/type",keyword:"type",params:{type: "number"},message:"must be number"};
 if(vErrors === null){
 vErrors = [err28];
 }
@@ -5308,21 +5971,77 @@ vErrors.push(err28);
 }
 errors++;
 }
-const len4 = data17.length;
-for(let i4=0; i4<len4; i4++){
-if(!(validate128(data17[i4], {instancePath:instancePath+"/next/" + i4,parentData:data17,parentDataProperty:i4,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate128.errors : vErrors.concat(validate128.errors);
-errors = vErrors.length;
 }
-}
-}
-else {
-const err29 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(data.finds !== undefined){
+let data21 = data.finds;
+if(Array.isArray(data21)){
+if(data21.length > 20){
+const err29 = {instancePath:instancePath+"/finds",schemaPath:"#/properties/finds/maxItems",keyword:"maxItems",params:{limit: 20},message:"must NOT have more than 20 items"};
 if(vErrors === null){
 vErrors = [err29];
 }
 else {
 vErrors.push(err29);
+}
+errors++;
+}
+if(data21.length < 1){
+const err30 = {instancePath:instancePath+"/finds",schemaPath:"#/properties/finds/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+if(vErrors === null){
+vErrors = [err30];
+}
+else {
+vErrors.push(err30);
+}
+errors++;
+}
+const len4 = data21.length;
+for(let i4=0; i4<len4; i4++){
+if(!(validate259(data21[i4], {instancePath:instancePath+"/finds/" + i4,parentData:data21,parentDataProperty:i4,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate259.errors : vErrors.concat(validate259.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err31 = {instancePath:instancePath+"/finds",schemaPath:"#/properties/finds/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err31];
+}
+else {
+vErrors.push(err31);
+}
+errors++;
+}
+}
+if(data.next !== undefined){
+let data23 = data.next;
+if(Array.isArray(data23)){
+if(data23.length > 30){
+const err32 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+if(vErrors === null){
+vErrors = [err32];
+}
+else {
+vErrors.push(err32);
+}
+errors++;
+}
+const len5 = data23.length;
+for(let i5=0; i5<len5; i5++){
+if(!(validate136(data23[i5], {instancePath:instancePath+"/next/" + i5,parentData:data23,parentDataProperty:i5,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate136.errors : vErrors.concat(validate136.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err33 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err33];
+}
+else {
+vErrors.push(err33);
 }
 errors++;
 }
@@ -5334,33 +6053,33 @@ errors = vErrors.length;
 }
 }
 if(data.results !== undefined){
-let data20 = data.results;
-if(Array.isArray(data20)){
-if(data20.length > 30){
-const err30 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+let data26 = data.results;
+if(Array.isArray(data26)){
+if(data26.length > 30){
+const err34 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
 if(vErrors === null){
-vErrors = [err30];
+vErrors = [err34];
 }
 else {
-vErrors.push(err30);
+vErrors.push(err34);
 }
 errors++;
 }
-const len5 = data20.length;
-for(let i5=0; i5<len5; i5++){
-if(!(validate135(data20[i5], {instancePath:instancePath+"/results/" + i5,parentData:data20,parentDataProperty:i5,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate135.errors : vErrors.concat(validate135.errors);
+const len6 = data26.length;
+for(let i6=0; i6<len6; i6++){
+if(!(validate143(data26[i6], {instancePath:instancePath+"/results/" + i6,parentData:data26,parentDataProperty:i6,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate143.errors : vErrors.concat(validate143.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err31 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err35 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
-vErrors = [err31];
+vErrors = [err35];
 }
 else {
-vErrors.push(err31);
+vErrors.push(err35);
 }
 errors++;
 }
@@ -5373,26 +6092,26 @@ errors = vErrors.length;
 }
 }
 else {
-const err32 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
+const err36 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
 if(vErrors === null){
-vErrors = [err32];
+vErrors = [err36];
 }
 else {
-vErrors.push(err32);
+vErrors.push(err36);
 }
 errors++;
 }
-validate215.errors = vErrors;
+validate240.errors = vErrors;
 return errors === 0;
 }
-validate215.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate240.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema59 = {"type":"object","properties":{"kind":{"const":"hold"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"seconds":{"type":"integer","minimum":1,"maximum":86400},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","seconds"],"additionalProperties":false};
+const schema62 = {"type":"object","properties":{"kind":{"const":"hold"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"seconds":{"type":"integer","minimum":1,"maximum":86400},"begins":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"ends":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","seconds"],"additionalProperties":false};
 
-function validate251(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate280(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate251.evaluated;
+const evaluated0 = validate280.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -5481,7 +6200,7 @@ vErrors.push(err7);
 errors++;
 }
 for(const key0 in data){
-if(!(func1.call(schema59.properties, key0))){
+if(!(func1.call(schema62.properties, key0))){
 const err8 = {instancePath,schemaPath:"#/additionalProperties",keyword:"additionalProperties",params:{additionalProperty: key0},message:"must NOT have additional properties"};
 if(vErrors === null){
 vErrors = [err8];
@@ -5557,17 +6276,17 @@ vErrors = vErrors === null ? validate61.errors : vErrors.concat(validate61.error
 errors = vErrors.length;
 }
 }
-if(data.why !== undefined){
-if(!(validate57(data.why, {instancePath:instancePath+"/why",parentData:data,parentDataProperty:"why",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
+if(data.short !== undefined){
+if(!(validate55(data.short, {instancePath:instancePath+"/short",parentData:data,parentDataProperty:"short",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate55.errors : vErrors.concat(validate55.errors);
 errors = vErrors.length;
 }
 }
-if(data.cautions !== undefined){
-let data6 = data.cautions;
+if(data.notes !== undefined){
+let data6 = data.notes;
 if(Array.isArray(data6)){
-if(data6.length > 12){
-const err13 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+if(data6.length > 10){
+const err13 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/maxItems",keyword:"maxItems",params:{limit: 10},message:"must NOT have more than 10 items"};
 if(vErrors === null){
 vErrors = [err13];
 }
@@ -5576,16 +6295,8 @@ vErrors.push(err13);
 }
 errors++;
 }
-const len0 = data6.length;
-for(let i0=0; i0<len0; i0++){
-if(!(validate92(data6[i0], {instancePath:instancePath+"/cautions/" + i0,parentData:data6,parentDataProperty:i0,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
-errors = vErrors.length;
-}
-}
-}
-else {
-const err14 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(data6.length < 1){
+const err14 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
 if(vErrors === null){
 vErrors = [err14];
 }
@@ -5594,18 +6305,16 @@ vErrors.push(err14);
 }
 errors++;
 }
-}
-if(data.picture !== undefined){
-if(!(validate118(data.picture, {instancePath:instancePath+"/picture",parentData:data,parentDataProperty:"picture",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate118.errors : vErrors.concat(validate118.errors);
+const len0 = data6.length;
+for(let i0=0; i0<len0; i0++){
+if(!(validate57(data6[i0], {instancePath:instancePath+"/notes/" + i0,parentData:data6,parentDataProperty:i0,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
 errors = vErrors.length;
 }
 }
-if(data.disturbs !== undefined){
-let data9 = data.disturbs;
-if(Array.isArray(data9)){
-if(data9.length > 12){
-const err15 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+}
+else {
+const err15 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err15];
 }
@@ -5614,8 +6323,18 @@ vErrors.push(err15);
 }
 errors++;
 }
-if(data9.length < 1){
-const err16 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+}
+if(data.why !== undefined){
+if(!(validate57(data.why, {instancePath:instancePath+"/why",parentData:data,parentDataProperty:"why",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
+errors = vErrors.length;
+}
+}
+if(data.cautions !== undefined){
+let data9 = data.cautions;
+if(Array.isArray(data9)){
+if(data9.length > 12){
+const err16 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
 if(vErrors === null){
 vErrors = [err16];
 }
@@ -5626,14 +6345,14 @@ errors++;
 }
 const len1 = data9.length;
 for(let i1=0; i1<len1; i1++){
-if(!(validate123(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate123.errors : vErrors.concat(validate123.errors);
+if(!(validate92(data9[i1], {instancePath:instancePath+"/cautions/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err17 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err17 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err17];
 }
@@ -5643,10 +6362,17 @@ vErrors.push(err17);
 errors++;
 }
 }
-if(data.seconds !== undefined){
-let data11 = data.seconds;
-if(!(((typeof data11 == "number") && (!(data11 % 1) && !isNaN(data11))) && (isFinite(data11)))){
-const err18 = {instancePath:instancePath+"/seconds",schemaPath:"#/properties/seconds/type",keyword:"type",params:{type: "integer"},message:"must be integer"};
+if(data.picture !== undefined){
+if(!(validate120(data.picture, {instancePath:instancePath+"/picture",parentData:data,parentDataProperty:"picture",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate120.errors : vErrors.concat(validate120.errors);
+errors = vErrors.length;
+}
+}
+if(data.disturbs !== undefined){
+let data12 = data.disturbs;
+if(Array.isArray(data12)){
+if(data12.length > 12){
+const err18 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
 if(vErrors === null){
 vErrors = [err18];
 }
@@ -5655,9 +6381,8 @@ vErrors.push(err18);
 }
 errors++;
 }
-if((typeof data11 == "number") && (isFinite(data11))){
-if(data11 > 86400 || isNaN(data11)){
-const err19 = {instancePath:instancePath+"/seconds",schemaPath:"#/properties/seconds/maximum",keyword:"maximum",params:{comparison: "<=", limit: 86400},message:"must be <= 86400"};
+if(data12.length < 1){
+const err19 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
 if(vErrors === null){
 vErrors = [err19];
 }
@@ -5666,8 +6391,16 @@ vErrors.push(err19);
 }
 errors++;
 }
-if(data11 < 1 || isNaN(data11)){
-const err20 = {instancePath:instancePath+"/seconds",schemaPath:"#/properties/seconds/minimum",keyword:"minimum",params:{comparison: ">=", limit: 1},message:"must be >= 1"};
+const len2 = data12.length;
+for(let i2=0; i2<len2; i2++){
+if(!(validate125(data12[i2], {instancePath:instancePath+"/disturbs/" + i2,parentData:data12,parentDataProperty:i2,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate125.errors : vErrors.concat(validate125.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err20 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err20];
 }
@@ -5677,12 +6410,9 @@ vErrors.push(err20);
 errors++;
 }
 }
-}
-if(data.next !== undefined){
-let data12 = data.next;
-if(Array.isArray(data12)){
-if(data12.length > 30){
-const err21 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+if(data.stay !== undefined){
+if(typeof data.stay !== "boolean"){
+const err21 = {instancePath:instancePath+"/stay",schemaPath:"#/properties/stay/type",keyword:"type",params:{type: "boolean"},message:"must be boolean"};
 if(vErrors === null){
 vErrors = [err21];
 }
@@ -5691,21 +6421,166 @@ vErrors.push(err21);
 }
 errors++;
 }
-const len2 = data12.length;
-for(let i2=0; i2<len2; i2++){
-if(!(validate128(data12[i2], {instancePath:instancePath+"/next/" + i2,parentData:data12,parentDataProperty:i2,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate128.errors : vErrors.concat(validate128.errors);
+}
+if(data.release !== undefined){
+if(!(validate130(data.release, {instancePath:instancePath+"/release",parentData:data,parentDataProperty:"release",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate130.errors : vErrors.concat(validate130.errors);
 errors = vErrors.length;
 }
 }
+if(data.verify !== undefined){
+if(!(validate133(data.verify, {instancePath:instancePath+"/verify",parentData:data,parentDataProperty:"verify",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate133.errors : vErrors.concat(validate133.errors);
+errors = vErrors.length;
 }
-else {
-const err22 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/type",keyword:"type",params:{type: "array"},message:"must be array"};
+}
+if(data.seconds !== undefined){
+let data17 = data.seconds;
+if(!(((typeof data17 == "number") && (!(data17 % 1) && !isNaN(data17))) && (isFinite(data17)))){
+const err22 = {instancePath:instancePath+"/seconds",schemaPath:"#/properties/seconds/type",keyword:"type",params:{type: "integer"},message:"must be integer"};
 if(vErrors === null){
 vErrors = [err22];
 }
 else {
 vErrors.push(err22);
+}
+errors++;
+}
+if((typeof data17 == "number") && (isFinite(data17))){
+if(data17 > 86400 || isNaN(data17)){
+const err23 = {instancePath:instancePath+"/seconds",schemaPath:"#/properties/seconds/maximum",keyword:"maximum",params:{comparison: "<=", limit: 86400},message:"must be <= 86400"};
+if(vErrors === null){
+vErrors = [err23];
+}
+else {
+vErrors.push(err23);
+}
+errors++;
+}
+if(data17 < 1 || isNaN(data17)){
+const err24 = {instancePath:instancePath+"/seconds",schemaPath:"#/properties/seconds/minimum",keyword:"minimum",params:{comparison: ">=", limit: 1},message:"must be >= 1"};
+if(vErrors === null){
+vErrors = [err24];
+}
+else {
+vErrors.push(err24);
+}
+errors++;
+}
+}
+}
+if(data.begins !== undefined){
+let data18 = data.begins;
+if(Array.isArray(data18)){
+if(data18.length > 20){
+const err25 = {instancePath:instancePath+"/begins",schemaPath:"#/properties/begins/maxItems",keyword:"maxItems",params:{limit: 20},message:"must NOT have more than 20 items"};
+if(vErrors === null){
+vErrors = [err25];
+}
+else {
+vErrors.push(err25);
+}
+errors++;
+}
+if(data18.length < 1){
+const err26 = {instancePath:instancePath+"/begins",schemaPath:"#/properties/begins/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+if(vErrors === null){
+vErrors = [err26];
+}
+else {
+vErrors.push(err26);
+}
+errors++;
+}
+const len3 = data18.length;
+for(let i3=0; i3<len3; i3++){
+if(!(validate184(data18[i3], {instancePath:instancePath+"/begins/" + i3,parentData:data18,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate184.errors : vErrors.concat(validate184.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err27 = {instancePath:instancePath+"/begins",schemaPath:"#/properties/begins/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err27];
+}
+else {
+vErrors.push(err27);
+}
+errors++;
+}
+}
+if(data.ends !== undefined){
+let data20 = data.ends;
+if(Array.isArray(data20)){
+if(data20.length > 20){
+const err28 = {instancePath:instancePath+"/ends",schemaPath:"#/properties/ends/maxItems",keyword:"maxItems",params:{limit: 20},message:"must NOT have more than 20 items"};
+if(vErrors === null){
+vErrors = [err28];
+}
+else {
+vErrors.push(err28);
+}
+errors++;
+}
+if(data20.length < 1){
+const err29 = {instancePath:instancePath+"/ends",schemaPath:"#/properties/ends/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+if(vErrors === null){
+vErrors = [err29];
+}
+else {
+vErrors.push(err29);
+}
+errors++;
+}
+const len4 = data20.length;
+for(let i4=0; i4<len4; i4++){
+if(!(validate184(data20[i4], {instancePath:instancePath+"/ends/" + i4,parentData:data20,parentDataProperty:i4,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate184.errors : vErrors.concat(validate184.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err30 = {instancePath:instancePath+"/ends",schemaPath:"#/properties/ends/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err30];
+}
+else {
+vErrors.push(err30);
+}
+errors++;
+}
+}
+if(data.next !== undefined){
+let data22 = data.next;
+if(Array.isArray(data22)){
+if(data22.length > 30){
+const err31 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+if(vErrors === null){
+vErrors = [err31];
+}
+else {
+vErrors.push(err31);
+}
+errors++;
+}
+const len5 = data22.length;
+for(let i5=0; i5<len5; i5++){
+if(!(validate136(data22[i5], {instancePath:instancePath+"/next/" + i5,parentData:data22,parentDataProperty:i5,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate136.errors : vErrors.concat(validate136.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err32 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err32];
+}
+else {
+vErrors.push(err32);
 }
 errors++;
 }
@@ -5717,33 +6592,33 @@ errors = vErrors.length;
 }
 }
 if(data.results !== undefined){
-let data15 = data.results;
-if(Array.isArray(data15)){
-if(data15.length > 30){
-const err23 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+let data25 = data.results;
+if(Array.isArray(data25)){
+if(data25.length > 30){
+const err33 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
 if(vErrors === null){
-vErrors = [err23];
+vErrors = [err33];
 }
 else {
-vErrors.push(err23);
+vErrors.push(err33);
 }
 errors++;
 }
-const len3 = data15.length;
-for(let i3=0; i3<len3; i3++){
-if(!(validate135(data15[i3], {instancePath:instancePath+"/results/" + i3,parentData:data15,parentDataProperty:i3,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate135.errors : vErrors.concat(validate135.errors);
+const len6 = data25.length;
+for(let i6=0; i6<len6; i6++){
+if(!(validate143(data25[i6], {instancePath:instancePath+"/results/" + i6,parentData:data25,parentDataProperty:i6,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate143.errors : vErrors.concat(validate143.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err24 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err34 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
-vErrors = [err24];
+vErrors = [err34];
 }
 else {
-vErrors.push(err24);
+vErrors.push(err34);
 }
 errors++;
 }
@@ -5756,26 +6631,26 @@ errors = vErrors.length;
 }
 }
 else {
-const err25 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
+const err35 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
 if(vErrors === null){
-vErrors = [err25];
+vErrors = [err35];
 }
 else {
-vErrors.push(err25);
+vErrors.push(err35);
 }
 errors++;
 }
-validate251.errors = vErrors;
+validate280.errors = vErrors;
 return errors === 0;
 }
-validate251.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate280.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema60 = {"type":"object","properties":{"kind":{"const":"wait"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"reads":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"until":{"$ref":"#/$defs/expression"},"meanwhile":{"$ref":"#/$defs/paragraph"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","reads","until","meanwhile"],"additionalProperties":false};
+const schema63 = {"type":"object","properties":{"kind":{"const":"wait"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"reads":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"until":{"$ref":"#/$defs/expression"},"atLeastSeconds":{"type":"integer","minimum":1,"maximum":86400},"meanwhile":{"$ref":"#/$defs/paragraph"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","reads","until","meanwhile"],"additionalProperties":false};
 
-function validate263(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate298(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate263.evaluated;
+const evaluated0 = validate298.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -5884,7 +6759,7 @@ vErrors.push(err9);
 errors++;
 }
 for(const key0 in data){
-if(!(func1.call(schema60.properties, key0))){
+if(!(func1.call(schema63.properties, key0))){
 const err10 = {instancePath,schemaPath:"#/additionalProperties",keyword:"additionalProperties",params:{additionalProperty: key0},message:"must NOT have additional properties"};
 if(vErrors === null){
 vErrors = [err10];
@@ -5960,17 +6835,17 @@ vErrors = vErrors === null ? validate61.errors : vErrors.concat(validate61.error
 errors = vErrors.length;
 }
 }
-if(data.why !== undefined){
-if(!(validate57(data.why, {instancePath:instancePath+"/why",parentData:data,parentDataProperty:"why",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
+if(data.short !== undefined){
+if(!(validate55(data.short, {instancePath:instancePath+"/short",parentData:data,parentDataProperty:"short",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate55.errors : vErrors.concat(validate55.errors);
 errors = vErrors.length;
 }
 }
-if(data.cautions !== undefined){
-let data6 = data.cautions;
+if(data.notes !== undefined){
+let data6 = data.notes;
 if(Array.isArray(data6)){
-if(data6.length > 12){
-const err15 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+if(data6.length > 10){
+const err15 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/maxItems",keyword:"maxItems",params:{limit: 10},message:"must NOT have more than 10 items"};
 if(vErrors === null){
 vErrors = [err15];
 }
@@ -5979,16 +6854,8 @@ vErrors.push(err15);
 }
 errors++;
 }
-const len0 = data6.length;
-for(let i0=0; i0<len0; i0++){
-if(!(validate92(data6[i0], {instancePath:instancePath+"/cautions/" + i0,parentData:data6,parentDataProperty:i0,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
-errors = vErrors.length;
-}
-}
-}
-else {
-const err16 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(data6.length < 1){
+const err16 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
 if(vErrors === null){
 vErrors = [err16];
 }
@@ -5997,18 +6864,16 @@ vErrors.push(err16);
 }
 errors++;
 }
-}
-if(data.picture !== undefined){
-if(!(validate118(data.picture, {instancePath:instancePath+"/picture",parentData:data,parentDataProperty:"picture",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate118.errors : vErrors.concat(validate118.errors);
+const len0 = data6.length;
+for(let i0=0; i0<len0; i0++){
+if(!(validate57(data6[i0], {instancePath:instancePath+"/notes/" + i0,parentData:data6,parentDataProperty:i0,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
 errors = vErrors.length;
 }
 }
-if(data.disturbs !== undefined){
-let data9 = data.disturbs;
-if(Array.isArray(data9)){
-if(data9.length > 12){
-const err17 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+}
+else {
+const err17 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err17];
 }
@@ -6017,8 +6882,18 @@ vErrors.push(err17);
 }
 errors++;
 }
-if(data9.length < 1){
-const err18 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+}
+if(data.why !== undefined){
+if(!(validate57(data.why, {instancePath:instancePath+"/why",parentData:data,parentDataProperty:"why",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
+errors = vErrors.length;
+}
+}
+if(data.cautions !== undefined){
+let data9 = data.cautions;
+if(Array.isArray(data9)){
+if(data9.length > 12){
+const err18 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
 if(vErrors === null){
 vErrors = [err18];
 }
@@ -6029,14 +6904,14 @@ errors++;
 }
 const len1 = data9.length;
 for(let i1=0; i1<len1; i1++){
-if(!(validate123(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate123.errors : vErrors.concat(validate123.errors);
+if(!(validate92(data9[i1], {instancePath:instancePath+"/cautions/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err19 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err19 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err19];
 }
@@ -6046,11 +6921,17 @@ vErrors.push(err19);
 errors++;
 }
 }
-if(data.reads !== undefined){
-let data11 = data.reads;
-if(Array.isArray(data11)){
-if(data11.length > 20){
-const err20 = {instancePath:instancePath+"/reads",schemaPath:"#/properties/reads/maxItems",keyword:"maxItems",params:{limit: 20},message:"must NOT have more than 20 items"};
+if(data.picture !== undefined){
+if(!(validate120(data.picture, {instancePath:instancePath+"/picture",parentData:data,parentDataProperty:"picture",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate120.errors : vErrors.concat(validate120.errors);
+errors = vErrors.length;
+}
+}
+if(data.disturbs !== undefined){
+let data12 = data.disturbs;
+if(Array.isArray(data12)){
+if(data12.length > 12){
+const err20 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
 if(vErrors === null){
 vErrors = [err20];
 }
@@ -6059,8 +6940,8 @@ vErrors.push(err20);
 }
 errors++;
 }
-if(data11.length < 1){
-const err21 = {instancePath:instancePath+"/reads",schemaPath:"#/properties/reads/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+if(data12.length < 1){
+const err21 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
 if(vErrors === null){
 vErrors = [err21];
 }
@@ -6069,21 +6950,87 @@ vErrors.push(err21);
 }
 errors++;
 }
-const len2 = data11.length;
+const len2 = data12.length;
 for(let i2=0; i2<len2; i2++){
-if(!(validate168(data11[i2], {instancePath:instancePath+"/reads/" + i2,parentData:data11,parentDataProperty:i2,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate168.errors : vErrors.concat(validate168.errors);
+if(!(validate125(data12[i2], {instancePath:instancePath+"/disturbs/" + i2,parentData:data12,parentDataProperty:i2,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate125.errors : vErrors.concat(validate125.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err22 = {instancePath:instancePath+"/reads",schemaPath:"#/properties/reads/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err22 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err22];
 }
 else {
 vErrors.push(err22);
+}
+errors++;
+}
+}
+if(data.stay !== undefined){
+if(typeof data.stay !== "boolean"){
+const err23 = {instancePath:instancePath+"/stay",schemaPath:"#/properties/stay/type",keyword:"type",params:{type: "boolean"},message:"must be boolean"};
+if(vErrors === null){
+vErrors = [err23];
+}
+else {
+vErrors.push(err23);
+}
+errors++;
+}
+}
+if(data.release !== undefined){
+if(!(validate130(data.release, {instancePath:instancePath+"/release",parentData:data,parentDataProperty:"release",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate130.errors : vErrors.concat(validate130.errors);
+errors = vErrors.length;
+}
+}
+if(data.verify !== undefined){
+if(!(validate133(data.verify, {instancePath:instancePath+"/verify",parentData:data,parentDataProperty:"verify",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate133.errors : vErrors.concat(validate133.errors);
+errors = vErrors.length;
+}
+}
+if(data.reads !== undefined){
+let data17 = data.reads;
+if(Array.isArray(data17)){
+if(data17.length > 20){
+const err24 = {instancePath:instancePath+"/reads",schemaPath:"#/properties/reads/maxItems",keyword:"maxItems",params:{limit: 20},message:"must NOT have more than 20 items"};
+if(vErrors === null){
+vErrors = [err24];
+}
+else {
+vErrors.push(err24);
+}
+errors++;
+}
+if(data17.length < 1){
+const err25 = {instancePath:instancePath+"/reads",schemaPath:"#/properties/reads/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+if(vErrors === null){
+vErrors = [err25];
+}
+else {
+vErrors.push(err25);
+}
+errors++;
+}
+const len3 = data17.length;
+for(let i3=0; i3<len3; i3++){
+if(!(validate184(data17[i3], {instancePath:instancePath+"/reads/" + i3,parentData:data17,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate184.errors : vErrors.concat(validate184.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err26 = {instancePath:instancePath+"/reads",schemaPath:"#/properties/reads/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err26];
+}
+else {
+vErrors.push(err26);
 }
 errors++;
 }
@@ -6094,6 +7041,41 @@ vErrors = vErrors === null ? validate98.errors : vErrors.concat(validate98.error
 errors = vErrors.length;
 }
 }
+if(data.atLeastSeconds !== undefined){
+let data20 = data.atLeastSeconds;
+if(!(((typeof data20 == "number") && (!(data20 % 1) && !isNaN(data20))) && (isFinite(data20)))){
+const err27 = {instancePath:instancePath+"/atLeastSeconds",schemaPath:"#/properties/atLeastSeconds/type",keyword:"type",params:{type: "integer"},message:"must be integer"};
+if(vErrors === null){
+vErrors = [err27];
+}
+else {
+vErrors.push(err27);
+}
+errors++;
+}
+if((typeof data20 == "number") && (isFinite(data20))){
+if(data20 > 86400 || isNaN(data20)){
+const err28 = {instancePath:instancePath+"/atLeastSeconds",schemaPath:"#/properties/atLeastSeconds/maximum",keyword:"maximum",params:{comparison: "<=", limit: 86400},message:"must be <= 86400"};
+if(vErrors === null){
+vErrors = [err28];
+}
+else {
+vErrors.push(err28);
+}
+errors++;
+}
+if(data20 < 1 || isNaN(data20)){
+const err29 = {instancePath:instancePath+"/atLeastSeconds",schemaPath:"#/properties/atLeastSeconds/minimum",keyword:"minimum",params:{comparison: ">=", limit: 1},message:"must be >= 1"};
+if(vErrors === null){
+vErrors = [err29];
+}
+else {
+vErrors.push(err29);
+}
+errors++;
+}
+}
+}
 if(data.meanwhile !== undefined){
 if(!(validate57(data.meanwhile, {instancePath:instancePath+"/meanwhile",parentData:data,parentDataProperty:"meanwhile",rootData,dynamicAnchors}))){
 vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
@@ -6101,33 +7083,33 @@ errors = vErrors.length;
 }
 }
 if(data.next !== undefined){
-let data15 = data.next;
-if(Array.isArray(data15)){
-if(data15.length > 30){
-const err23 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+let data22 = data.next;
+if(Array.isArray(data22)){
+if(data22.length > 30){
+const err30 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
 if(vErrors === null){
-vErrors = [err23];
+vErrors = [err30];
 }
 else {
-vErrors.push(err23);
+vErrors.push(err30);
 }
 errors++;
 }
-const len3 = data15.length;
-for(let i3=0; i3<len3; i3++){
-if(!(validate128(data15[i3], {instancePath:instancePath+"/next/" + i3,parentData:data15,parentDataProperty:i3,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate128.errors : vErrors.concat(validate128.errors);
+const len4 = data22.length;
+for(let i4=0; i4<len4; i4++){
+if(!(validate136(data22[i4], {instancePath:instancePath+"/next/" + i4,parentData:data22,parentDataProperty:i4,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate136.errors : vErrors.concat(validate136.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err24 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err31 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
-vErrors = [err24];
+vErrors = [err31];
 }
 else {
-vErrors.push(err24);
+vErrors.push(err31);
 }
 errors++;
 }
@@ -6139,33 +7121,33 @@ errors = vErrors.length;
 }
 }
 if(data.results !== undefined){
-let data18 = data.results;
-if(Array.isArray(data18)){
-if(data18.length > 30){
-const err25 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+let data25 = data.results;
+if(Array.isArray(data25)){
+if(data25.length > 30){
+const err32 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
 if(vErrors === null){
-vErrors = [err25];
+vErrors = [err32];
 }
 else {
-vErrors.push(err25);
+vErrors.push(err32);
 }
 errors++;
 }
-const len4 = data18.length;
-for(let i4=0; i4<len4; i4++){
-if(!(validate135(data18[i4], {instancePath:instancePath+"/results/" + i4,parentData:data18,parentDataProperty:i4,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate135.errors : vErrors.concat(validate135.errors);
+const len5 = data25.length;
+for(let i5=0; i5<len5; i5++){
+if(!(validate143(data25[i5], {instancePath:instancePath+"/results/" + i5,parentData:data25,parentDataProperty:i5,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate143.errors : vErrors.concat(validate143.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err26 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err33 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
-vErrors = [err26];
+vErrors = [err33];
 }
 else {
-vErrors.push(err26);
+vErrors.push(err33);
 }
 errors++;
 }
@@ -6178,26 +7160,26 @@ errors = vErrors.length;
 }
 }
 else {
-const err27 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
+const err34 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
 if(vErrors === null){
-vErrors = [err27];
+vErrors = [err34];
 }
 else {
-vErrors.push(err27);
+vErrors.push(err34);
 }
 errors++;
 }
-validate263.errors = vErrors;
+validate298.errors = vErrors;
 return errors === 0;
 }
-validate263.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate298.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema61 = {"type":"object","properties":{"kind":{"const":"codes"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"name":{"$ref":"#/$defs/name"},"comparedWith":{"$ref":"#/$defs/name"},"newCodes":{"$ref":"#/$defs/name"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name"],"additionalProperties":false};
+const schema64 = {"type":"object","properties":{"kind":{"const":"codes"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"comparedWith":{"$ref":"#/$defs/name"},"newCodes":{"$ref":"#/$defs/name"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name"],"additionalProperties":false};
 
-function validate278(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate317(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate278.evaluated;
+const evaluated0 = validate317.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -6286,7 +7268,7 @@ vErrors.push(err7);
 errors++;
 }
 for(const key0 in data){
-if(!(func1.call(schema61.properties, key0))){
+if(!(func1.call(schema64.properties, key0))){
 const err8 = {instancePath,schemaPath:"#/additionalProperties",keyword:"additionalProperties",params:{additionalProperty: key0},message:"must NOT have additional properties"};
 if(vErrors === null){
 vErrors = [err8];
@@ -6362,17 +7344,17 @@ vErrors = vErrors === null ? validate61.errors : vErrors.concat(validate61.error
 errors = vErrors.length;
 }
 }
-if(data.why !== undefined){
-if(!(validate57(data.why, {instancePath:instancePath+"/why",parentData:data,parentDataProperty:"why",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
+if(data.short !== undefined){
+if(!(validate55(data.short, {instancePath:instancePath+"/short",parentData:data,parentDataProperty:"short",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate55.errors : vErrors.concat(validate55.errors);
 errors = vErrors.length;
 }
 }
-if(data.cautions !== undefined){
-let data6 = data.cautions;
+if(data.notes !== undefined){
+let data6 = data.notes;
 if(Array.isArray(data6)){
-if(data6.length > 12){
-const err13 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+if(data6.length > 10){
+const err13 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/maxItems",keyword:"maxItems",params:{limit: 10},message:"must NOT have more than 10 items"};
 if(vErrors === null){
 vErrors = [err13];
 }
@@ -6381,16 +7363,8 @@ vErrors.push(err13);
 }
 errors++;
 }
-const len0 = data6.length;
-for(let i0=0; i0<len0; i0++){
-if(!(validate92(data6[i0], {instancePath:instancePath+"/cautions/" + i0,parentData:data6,parentDataProperty:i0,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
-errors = vErrors.length;
-}
-}
-}
-else {
-const err14 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(data6.length < 1){
+const err14 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
 if(vErrors === null){
 vErrors = [err14];
 }
@@ -6399,18 +7373,16 @@ vErrors.push(err14);
 }
 errors++;
 }
-}
-if(data.picture !== undefined){
-if(!(validate118(data.picture, {instancePath:instancePath+"/picture",parentData:data,parentDataProperty:"picture",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate118.errors : vErrors.concat(validate118.errors);
+const len0 = data6.length;
+for(let i0=0; i0<len0; i0++){
+if(!(validate57(data6[i0], {instancePath:instancePath+"/notes/" + i0,parentData:data6,parentDataProperty:i0,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
 errors = vErrors.length;
 }
 }
-if(data.disturbs !== undefined){
-let data9 = data.disturbs;
-if(Array.isArray(data9)){
-if(data9.length > 12){
-const err15 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+}
+else {
+const err15 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err15];
 }
@@ -6419,8 +7391,18 @@ vErrors.push(err15);
 }
 errors++;
 }
-if(data9.length < 1){
-const err16 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+}
+if(data.why !== undefined){
+if(!(validate57(data.why, {instancePath:instancePath+"/why",parentData:data,parentDataProperty:"why",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
+errors = vErrors.length;
+}
+}
+if(data.cautions !== undefined){
+let data9 = data.cautions;
+if(Array.isArray(data9)){
+if(data9.length > 12){
+const err16 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
 if(vErrors === null){
 vErrors = [err16];
 }
@@ -6431,14 +7413,14 @@ errors++;
 }
 const len1 = data9.length;
 for(let i1=0; i1<len1; i1++){
-if(!(validate123(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate123.errors : vErrors.concat(validate123.errors);
+if(!(validate92(data9[i1], {instancePath:instancePath+"/cautions/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err17 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err17 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err17];
 }
@@ -6446,6 +7428,78 @@ else {
 vErrors.push(err17);
 }
 errors++;
+}
+}
+if(data.picture !== undefined){
+if(!(validate120(data.picture, {instancePath:instancePath+"/picture",parentData:data,parentDataProperty:"picture",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate120.errors : vErrors.concat(validate120.errors);
+errors = vErrors.length;
+}
+}
+if(data.disturbs !== undefined){
+let data12 = data.disturbs;
+if(Array.isArray(data12)){
+if(data12.length > 12){
+const err18 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+if(vErrors === null){
+vErrors = [err18];
+}
+else {
+vErrors.push(err18);
+}
+errors++;
+}
+if(data12.length < 1){
+const err19 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+if(vErrors === null){
+vErrors = [err19];
+}
+else {
+vErrors.push(err19);
+}
+errors++;
+}
+const len2 = data12.length;
+for(let i2=0; i2<len2; i2++){
+if(!(validate125(data12[i2], {instancePath:instancePath+"/disturbs/" + i2,parentData:data12,parentDataProperty:i2,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate125.errors : vErrors.concat(validate125.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err20 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err20];
+}
+else {
+vErrors.push(err20);
+}
+errors++;
+}
+}
+if(data.stay !== undefined){
+if(typeof data.stay !== "boolean"){
+const err21 = {instancePath:instancePath+"/stay",schemaPath:"#/properties/stay/type",keyword:"type",params:{type: "boolean"},message:"must be boolean"};
+if(vErrors === null){
+vErrors = [err21];
+}
+else {
+vErrors.push(err21);
+}
+errors++;
+}
+}
+if(data.release !== undefined){
+if(!(validate130(data.release, {instancePath:instancePath+"/release",parentData:data,parentDataProperty:"release",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate130.errors : vErrors.concat(validate130.errors);
+errors = vErrors.length;
+}
+}
+if(data.verify !== undefined){
+if(!(validate133(data.verify, {instancePath:instancePath+"/verify",parentData:data,parentDataProperty:"verify",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate133.errors : vErrors.concat(validate133.errors);
+errors = vErrors.length;
 }
 }
 if(data.name !== undefined){
@@ -6467,33 +7521,33 @@ errors = vErrors.length;
 }
 }
 if(data.next !== undefined){
-let data14 = data.next;
-if(Array.isArray(data14)){
-if(data14.length > 30){
-const err18 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+let data20 = data.next;
+if(Array.isArray(data20)){
+if(data20.length > 30){
+const err22 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
 if(vErrors === null){
-vErrors = [err18];
+vErrors = [err22];
 }
 else {
-vErrors.push(err18);
+vErrors.push(err22);
 }
 errors++;
 }
-const len2 = data14.length;
-for(let i2=0; i2<len2; i2++){
-if(!(validate128(data14[i2], {instancePath:instancePath+"/next/" + i2,parentData:data14,parentDataProperty:i2,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate128.errors : vErrors.concat(validate128.errors);
+const len3 = data20.length;
+for(let i3=0; i3<len3; i3++){
+if(!(validate136(data20[i3], {instancePath:instancePath+"/next/" + i3,parentData:data20,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate136.errors : vErrors.concat(validate136.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err19 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err23 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
-vErrors = [err19];
+vErrors = [err23];
 }
 else {
-vErrors.push(err19);
+vErrors.push(err23);
 }
 errors++;
 }
@@ -6505,33 +7559,33 @@ errors = vErrors.length;
 }
 }
 if(data.results !== undefined){
-let data17 = data.results;
-if(Array.isArray(data17)){
-if(data17.length > 30){
-const err20 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+let data23 = data.results;
+if(Array.isArray(data23)){
+if(data23.length > 30){
+const err24 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
 if(vErrors === null){
-vErrors = [err20];
+vErrors = [err24];
 }
 else {
-vErrors.push(err20);
+vErrors.push(err24);
 }
 errors++;
 }
-const len3 = data17.length;
-for(let i3=0; i3<len3; i3++){
-if(!(validate135(data17[i3], {instancePath:instancePath+"/results/" + i3,parentData:data17,parentDataProperty:i3,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate135.errors : vErrors.concat(validate135.errors);
+const len4 = data23.length;
+for(let i4=0; i4<len4; i4++){
+if(!(validate143(data23[i4], {instancePath:instancePath+"/results/" + i4,parentData:data23,parentDataProperty:i4,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate143.errors : vErrors.concat(validate143.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err21 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err25 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
-vErrors = [err21];
+vErrors = [err25];
 }
 else {
-vErrors.push(err21);
+vErrors.push(err25);
 }
 errors++;
 }
@@ -6544,27 +7598,27 @@ errors = vErrors.length;
 }
 }
 else {
-const err22 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
+const err26 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
 if(vErrors === null){
-vErrors = [err22];
+vErrors = [err26];
 }
 else {
-vErrors.push(err22);
+vErrors.push(err26);
 }
 errors++;
 }
-validate278.errors = vErrors;
+validate317.errors = vErrors;
 return errors === 0;
 }
-validate278.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate317.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema62 = {"type":"object","properties":{"kind":{"const":"drive"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"name":{"$ref":"#/$defs/name"},"windows":{"type":"array","items":{"$ref":"#/$defs/driveWindow"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","windows"],"additionalProperties":false};
-const schema63 = {"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"what":{"$ref":"#/$defs/line"}},"required":["name","label","what"],"additionalProperties":false};
+const schema65 = {"type":"object","properties":{"kind":{"const":"drive"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"windows":{"type":"array","items":{"$ref":"#/$defs/driveWindow"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","windows"],"additionalProperties":false};
+const schema66 = {"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"what":{"$ref":"#/$defs/line"}},"required":["name","label","what"],"additionalProperties":false};
 
-function validate302(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate349(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate302.evaluated;
+const evaluated0 = validate349.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -6643,16 +7697,16 @@ vErrors.push(err4);
 }
 errors++;
 }
-validate302.errors = vErrors;
+validate349.errors = vErrors;
 return errors === 0;
 }
-validate302.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate349.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 
-function validate293(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate336(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate293.evaluated;
+const evaluated0 = validate336.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -6751,7 +7805,7 @@ vErrors.push(err8);
 errors++;
 }
 for(const key0 in data){
-if(!(func1.call(schema62.properties, key0))){
+if(!(func1.call(schema65.properties, key0))){
 const err9 = {instancePath,schemaPath:"#/additionalProperties",keyword:"additionalProperties",params:{additionalProperty: key0},message:"must NOT have additional properties"};
 if(vErrors === null){
 vErrors = [err9];
@@ -6827,17 +7881,17 @@ vErrors = vErrors === null ? validate61.errors : vErrors.concat(validate61.error
 errors = vErrors.length;
 }
 }
-if(data.why !== undefined){
-if(!(validate57(data.why, {instancePath:instancePath+"/why",parentData:data,parentDataProperty:"why",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
+if(data.short !== undefined){
+if(!(validate55(data.short, {instancePath:instancePath+"/short",parentData:data,parentDataProperty:"short",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate55.errors : vErrors.concat(validate55.errors);
 errors = vErrors.length;
 }
 }
-if(data.cautions !== undefined){
-let data6 = data.cautions;
+if(data.notes !== undefined){
+let data6 = data.notes;
 if(Array.isArray(data6)){
-if(data6.length > 12){
-const err14 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+if(data6.length > 10){
+const err14 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/maxItems",keyword:"maxItems",params:{limit: 10},message:"must NOT have more than 10 items"};
 if(vErrors === null){
 vErrors = [err14];
 }
@@ -6846,16 +7900,8 @@ vErrors.push(err14);
 }
 errors++;
 }
-const len0 = data6.length;
-for(let i0=0; i0<len0; i0++){
-if(!(validate92(data6[i0], {instancePath:instancePath+"/cautions/" + i0,parentData:data6,parentDataProperty:i0,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
-errors = vErrors.length;
-}
-}
-}
-else {
-const err15 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(data6.length < 1){
+const err15 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
 if(vErrors === null){
 vErrors = [err15];
 }
@@ -6864,18 +7910,16 @@ vErrors.push(err15);
 }
 errors++;
 }
-}
-if(data.picture !== undefined){
-if(!(validate118(data.picture, {instancePath:instancePath+"/picture",parentData:data,parentDataProperty:"picture",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate118.errors : vErrors.concat(validate118.errors);
+const len0 = data6.length;
+for(let i0=0; i0<len0; i0++){
+if(!(validate57(data6[i0], {instancePath:instancePath+"/notes/" + i0,parentData:data6,parentDataProperty:i0,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
 errors = vErrors.length;
 }
 }
-if(data.disturbs !== undefined){
-let data9 = data.disturbs;
-if(Array.isArray(data9)){
-if(data9.length > 12){
-const err16 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+}
+else {
+const err16 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err16];
 }
@@ -6884,8 +7928,18 @@ vErrors.push(err16);
 }
 errors++;
 }
-if(data9.length < 1){
-const err17 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+}
+if(data.why !== undefined){
+if(!(validate57(data.why, {instancePath:instancePath+"/why",parentData:data,parentDataProperty:"why",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
+errors = vErrors.length;
+}
+}
+if(data.cautions !== undefined){
+let data9 = data.cautions;
+if(Array.isArray(data9)){
+if(data9.length > 12){
+const err17 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
 if(vErrors === null){
 vErrors = [err17];
 }
@@ -6896,14 +7950,14 @@ errors++;
 }
 const len1 = data9.length;
 for(let i1=0; i1<len1; i1++){
-if(!(validate123(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate123.errors : vErrors.concat(validate123.errors);
+if(!(validate92(data9[i1], {instancePath:instancePath+"/cautions/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err18 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err18 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err18];
 }
@@ -6913,17 +7967,17 @@ vErrors.push(err18);
 errors++;
 }
 }
-if(data.name !== undefined){
-if(!(validate66(data.name, {instancePath:instancePath+"/name",parentData:data,parentDataProperty:"name",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate66.errors : vErrors.concat(validate66.errors);
+if(data.picture !== undefined){
+if(!(validate120(data.picture, {instancePath:instancePath+"/picture",parentData:data,parentDataProperty:"picture",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate120.errors : vErrors.concat(validate120.errors);
 errors = vErrors.length;
 }
 }
-if(data.windows !== undefined){
-let data12 = data.windows;
+if(data.disturbs !== undefined){
+let data12 = data.disturbs;
 if(Array.isArray(data12)){
-if(data12.length > 20){
-const err19 = {instancePath:instancePath+"/windows",schemaPath:"#/properties/windows/maxItems",keyword:"maxItems",params:{limit: 20},message:"must NOT have more than 20 items"};
+if(data12.length > 12){
+const err19 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
 if(vErrors === null){
 vErrors = [err19];
 }
@@ -6933,7 +7987,7 @@ vErrors.push(err19);
 errors++;
 }
 if(data12.length < 1){
-const err20 = {instancePath:instancePath+"/windows",schemaPath:"#/properties/windows/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+const err20 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
 if(vErrors === null){
 vErrors = [err20];
 }
@@ -6944,14 +7998,14 @@ errors++;
 }
 const len2 = data12.length;
 for(let i2=0; i2<len2; i2++){
-if(!(validate302(data12[i2], {instancePath:instancePath+"/windows/" + i2,parentData:data12,parentDataProperty:i2,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate302.errors : vErrors.concat(validate302.errors);
+if(!(validate125(data12[i2], {instancePath:instancePath+"/disturbs/" + i2,parentData:data12,parentDataProperty:i2,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate125.errors : vErrors.concat(validate125.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err21 = {instancePath:instancePath+"/windows",schemaPath:"#/properties/windows/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err21 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err21];
 }
@@ -6961,11 +8015,9 @@ vErrors.push(err21);
 errors++;
 }
 }
-if(data.next !== undefined){
-let data14 = data.next;
-if(Array.isArray(data14)){
-if(data14.length > 30){
-const err22 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+if(data.stay !== undefined){
+if(typeof data.stay !== "boolean"){
+const err22 = {instancePath:instancePath+"/stay",schemaPath:"#/properties/stay/type",keyword:"type",params:{type: "boolean"},message:"must be boolean"};
 if(vErrors === null){
 vErrors = [err22];
 }
@@ -6974,21 +8026,95 @@ vErrors.push(err22);
 }
 errors++;
 }
-const len3 = data14.length;
-for(let i3=0; i3<len3; i3++){
-if(!(validate128(data14[i3], {instancePath:instancePath+"/next/" + i3,parentData:data14,parentDataProperty:i3,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate128.errors : vErrors.concat(validate128.errors);
+}
+if(data.release !== undefined){
+if(!(validate130(data.release, {instancePath:instancePath+"/release",parentData:data,parentDataProperty:"release",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate130.errors : vErrors.concat(validate130.errors);
 errors = vErrors.length;
 }
 }
+if(data.verify !== undefined){
+if(!(validate133(data.verify, {instancePath:instancePath+"/verify",parentData:data,parentDataProperty:"verify",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate133.errors : vErrors.concat(validate133.errors);
+errors = vErrors.length;
 }
-else {
-const err23 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/type",keyword:"type",params:{type: "array"},message:"must be array"};
+}
+if(data.name !== undefined){
+if(!(validate66(data.name, {instancePath:instancePath+"/name",parentData:data,parentDataProperty:"name",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate66.errors : vErrors.concat(validate66.errors);
+errors = vErrors.length;
+}
+}
+if(data.windows !== undefined){
+let data18 = data.windows;
+if(Array.isArray(data18)){
+if(data18.length > 20){
+const err23 = {instancePath:instancePath+"/windows",schemaPath:"#/properties/windows/maxItems",keyword:"maxItems",params:{limit: 20},message:"must NOT have more than 20 items"};
 if(vErrors === null){
 vErrors = [err23];
 }
 else {
 vErrors.push(err23);
+}
+errors++;
+}
+if(data18.length < 1){
+const err24 = {instancePath:instancePath+"/windows",schemaPath:"#/properties/windows/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+if(vErrors === null){
+vErrors = [err24];
+}
+else {
+vErrors.push(err24);
+}
+errors++;
+}
+const len3 = data18.length;
+for(let i3=0; i3<len3; i3++){
+if(!(validate349(data18[i3], {instancePath:instancePath+"/windows/" + i3,parentData:data18,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate349.errors : vErrors.concat(validate349.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err25 = {instancePath:instancePath+"/windows",schemaPath:"#/properties/windows/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err25];
+}
+else {
+vErrors.push(err25);
+}
+errors++;
+}
+}
+if(data.next !== undefined){
+let data20 = data.next;
+if(Array.isArray(data20)){
+if(data20.length > 30){
+const err26 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+if(vErrors === null){
+vErrors = [err26];
+}
+else {
+vErrors.push(err26);
+}
+errors++;
+}
+const len4 = data20.length;
+for(let i4=0; i4<len4; i4++){
+if(!(validate136(data20[i4], {instancePath:instancePath+"/next/" + i4,parentData:data20,parentDataProperty:i4,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate136.errors : vErrors.concat(validate136.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err27 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err27];
+}
+else {
+vErrors.push(err27);
 }
 errors++;
 }
@@ -7000,33 +8126,33 @@ errors = vErrors.length;
 }
 }
 if(data.results !== undefined){
-let data17 = data.results;
-if(Array.isArray(data17)){
-if(data17.length > 30){
-const err24 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+let data23 = data.results;
+if(Array.isArray(data23)){
+if(data23.length > 30){
+const err28 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
 if(vErrors === null){
-vErrors = [err24];
+vErrors = [err28];
 }
 else {
-vErrors.push(err24);
+vErrors.push(err28);
 }
 errors++;
 }
-const len4 = data17.length;
-for(let i4=0; i4<len4; i4++){
-if(!(validate135(data17[i4], {instancePath:instancePath+"/results/" + i4,parentData:data17,parentDataProperty:i4,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate135.errors : vErrors.concat(validate135.errors);
+const len5 = data23.length;
+for(let i5=0; i5<len5; i5++){
+if(!(validate143(data23[i5], {instancePath:instancePath+"/results/" + i5,parentData:data23,parentDataProperty:i5,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate143.errors : vErrors.concat(validate143.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err25 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err29 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
-vErrors = [err25];
+vErrors = [err29];
 }
 else {
-vErrors.push(err25);
+vErrors.push(err29);
 }
 errors++;
 }
@@ -7039,26 +8165,26 @@ errors = vErrors.length;
 }
 }
 else {
-const err26 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
+const err30 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
 if(vErrors === null){
-vErrors = [err26];
+vErrors = [err30];
 }
 else {
-vErrors.push(err26);
+vErrors.push(err30);
 }
 errors++;
 }
-validate293.errors = vErrors;
+validate336.errors = vErrors;
 return errors === 0;
 }
-validate293.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate336.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema64 = {"type":"object","properties":{"kind":{"const":"compute"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false};
+const schema67 = {"type":"object","properties":{"kind":{"const":"compute"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false};
 
-function validate311(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate358(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate311.evaluated;
+const evaluated0 = validate358.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -7127,7 +8253,7 @@ vErrors.push(err5);
 errors++;
 }
 for(const key0 in data){
-if(!(func1.call(schema64.properties, key0))){
+if(!(func1.call(schema67.properties, key0))){
 const err6 = {instancePath,schemaPath:"#/additionalProperties",keyword:"additionalProperties",params:{additionalProperty: key0},message:"must NOT have additional properties"};
 if(vErrors === null){
 vErrors = [err6];
@@ -7203,17 +8329,17 @@ vErrors = vErrors === null ? validate61.errors : vErrors.concat(validate61.error
 errors = vErrors.length;
 }
 }
-if(data.why !== undefined){
-if(!(validate57(data.why, {instancePath:instancePath+"/why",parentData:data,parentDataProperty:"why",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
+if(data.short !== undefined){
+if(!(validate55(data.short, {instancePath:instancePath+"/short",parentData:data,parentDataProperty:"short",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate55.errors : vErrors.concat(validate55.errors);
 errors = vErrors.length;
 }
 }
-if(data.cautions !== undefined){
-let data6 = data.cautions;
+if(data.notes !== undefined){
+let data6 = data.notes;
 if(Array.isArray(data6)){
-if(data6.length > 12){
-const err11 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+if(data6.length > 10){
+const err11 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/maxItems",keyword:"maxItems",params:{limit: 10},message:"must NOT have more than 10 items"};
 if(vErrors === null){
 vErrors = [err11];
 }
@@ -7222,16 +8348,8 @@ vErrors.push(err11);
 }
 errors++;
 }
-const len0 = data6.length;
-for(let i0=0; i0<len0; i0++){
-if(!(validate92(data6[i0], {instancePath:instancePath+"/cautions/" + i0,parentData:data6,parentDataProperty:i0,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
-errors = vErrors.length;
-}
-}
-}
-else {
-const err12 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(data6.length < 1){
+const err12 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
 if(vErrors === null){
 vErrors = [err12];
 }
@@ -7240,18 +8358,16 @@ vErrors.push(err12);
 }
 errors++;
 }
-}
-if(data.picture !== undefined){
-if(!(validate118(data.picture, {instancePath:instancePath+"/picture",parentData:data,parentDataProperty:"picture",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate118.errors : vErrors.concat(validate118.errors);
+const len0 = data6.length;
+for(let i0=0; i0<len0; i0++){
+if(!(validate57(data6[i0], {instancePath:instancePath+"/notes/" + i0,parentData:data6,parentDataProperty:i0,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
 errors = vErrors.length;
 }
 }
-if(data.disturbs !== undefined){
-let data9 = data.disturbs;
-if(Array.isArray(data9)){
-if(data9.length > 12){
-const err13 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+}
+else {
+const err13 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err13];
 }
@@ -7260,8 +8376,18 @@ vErrors.push(err13);
 }
 errors++;
 }
-if(data9.length < 1){
-const err14 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+}
+if(data.why !== undefined){
+if(!(validate57(data.why, {instancePath:instancePath+"/why",parentData:data,parentDataProperty:"why",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
+errors = vErrors.length;
+}
+}
+if(data.cautions !== undefined){
+let data9 = data.cautions;
+if(Array.isArray(data9)){
+if(data9.length > 12){
+const err14 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
 if(vErrors === null){
 vErrors = [err14];
 }
@@ -7272,14 +8398,14 @@ errors++;
 }
 const len1 = data9.length;
 for(let i1=0; i1<len1; i1++){
-if(!(validate123(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate123.errors : vErrors.concat(validate123.errors);
+if(!(validate92(data9[i1], {instancePath:instancePath+"/cautions/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err15 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err15 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err15];
 }
@@ -7289,11 +8415,17 @@ vErrors.push(err15);
 errors++;
 }
 }
-if(data.next !== undefined){
-let data11 = data.next;
-if(Array.isArray(data11)){
-if(data11.length > 30){
-const err16 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+if(data.picture !== undefined){
+if(!(validate120(data.picture, {instancePath:instancePath+"/picture",parentData:data,parentDataProperty:"picture",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate120.errors : vErrors.concat(validate120.errors);
+errors = vErrors.length;
+}
+}
+if(data.disturbs !== undefined){
+let data12 = data.disturbs;
+if(Array.isArray(data12)){
+if(data12.length > 12){
+const err16 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
 if(vErrors === null){
 vErrors = [err16];
 }
@@ -7302,21 +8434,87 @@ vErrors.push(err16);
 }
 errors++;
 }
-const len2 = data11.length;
-for(let i2=0; i2<len2; i2++){
-if(!(validate128(data11[i2], {instancePath:instancePath+"/next/" + i2,parentData:data11,parentDataProperty:i2,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate128.errors : vErrors.concat(validate128.errors);
-errors = vErrors.length;
-}
-}
-}
-else {
-const err17 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(data12.length < 1){
+const err17 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
 if(vErrors === null){
 vErrors = [err17];
 }
 else {
 vErrors.push(err17);
+}
+errors++;
+}
+const len2 = data12.length;
+for(let i2=0; i2<len2; i2++){
+if(!(validate125(data12[i2], {instancePath:instancePath+"/disturbs/" + i2,parentData:data12,parentDataProperty:i2,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate125.errors : vErrors.concat(validate125.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err18 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err18];
+}
+else {
+vErrors.push(err18);
+}
+errors++;
+}
+}
+if(data.stay !== undefined){
+if(typeof data.stay !== "boolean"){
+const err19 = {instancePath:instancePath+"/stay",schemaPath:"#/properties/stay/type",keyword:"type",params:{type: "boolean"},message:"must be boolean"};
+if(vErrors === null){
+vErrors = [err19];
+}
+else {
+vErrors.push(err19);
+}
+errors++;
+}
+}
+if(data.release !== undefined){
+if(!(validate130(data.release, {instancePath:instancePath+"/release",parentData:data,parentDataProperty:"release",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate130.errors : vErrors.concat(validate130.errors);
+errors = vErrors.length;
+}
+}
+if(data.verify !== undefined){
+if(!(validate133(data.verify, {instancePath:instancePath+"/verify",parentData:data,parentDataProperty:"verify",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate133.errors : vErrors.concat(validate133.errors);
+errors = vErrors.length;
+}
+}
+if(data.next !== undefined){
+let data17 = data.next;
+if(Array.isArray(data17)){
+if(data17.length > 30){
+const err20 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+if(vErrors === null){
+vErrors = [err20];
+}
+else {
+vErrors.push(err20);
+}
+errors++;
+}
+const len3 = data17.length;
+for(let i3=0; i3<len3; i3++){
+if(!(validate136(data17[i3], {instancePath:instancePath+"/next/" + i3,parentData:data17,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate136.errors : vErrors.concat(validate136.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err21 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err21];
+}
+else {
+vErrors.push(err21);
 }
 errors++;
 }
@@ -7328,59 +8526,59 @@ errors = vErrors.length;
 }
 }
 if(data.results !== undefined){
-let data14 = data.results;
-if(Array.isArray(data14)){
-if(data14.length > 30){
-const err18 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+let data20 = data.results;
+if(Array.isArray(data20)){
+if(data20.length > 30){
+const err22 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
 if(vErrors === null){
-vErrors = [err18];
+vErrors = [err22];
 }
 else {
-vErrors.push(err18);
+vErrors.push(err22);
 }
 errors++;
 }
-const len3 = data14.length;
-for(let i3=0; i3<len3; i3++){
-if(!(validate135(data14[i3], {instancePath:instancePath+"/results/" + i3,parentData:data14,parentDataProperty:i3,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate135.errors : vErrors.concat(validate135.errors);
+const len4 = data20.length;
+for(let i4=0; i4<len4; i4++){
+if(!(validate143(data20[i4], {instancePath:instancePath+"/results/" + i4,parentData:data20,parentDataProperty:i4,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate143.errors : vErrors.concat(validate143.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err19 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err23 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
-vErrors = [err19];
+vErrors = [err23];
 }
 else {
-vErrors.push(err19);
+vErrors.push(err23);
 }
 errors++;
 }
 }
 }
 else {
-const err20 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
+const err24 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
 if(vErrors === null){
-vErrors = [err20];
+vErrors = [err24];
 }
 else {
-vErrors.push(err20);
+vErrors.push(err24);
 }
 errors++;
 }
-validate311.errors = vErrors;
+validate358.errors = vErrors;
 return errors === 0;
 }
-validate311.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate358.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema65 = {"type":"object","properties":{"kind":{"const":"restore"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false};
+const schema68 = {"type":"object","properties":{"kind":{"const":"restore"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false};
 
-function validate322(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate373(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate322.evaluated;
+const evaluated0 = validate373.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -7449,7 +8647,7 @@ vErrors.push(err5);
 errors++;
 }
 for(const key0 in data){
-if(!(func1.call(schema65.properties, key0))){
+if(!(func1.call(schema68.properties, key0))){
 const err6 = {instancePath,schemaPath:"#/additionalProperties",keyword:"additionalProperties",params:{additionalProperty: key0},message:"must NOT have additional properties"};
 if(vErrors === null){
 vErrors = [err6];
@@ -7525,17 +8723,17 @@ vErrors = vErrors === null ? validate61.errors : vErrors.concat(validate61.error
 errors = vErrors.length;
 }
 }
-if(data.why !== undefined){
-if(!(validate57(data.why, {instancePath:instancePath+"/why",parentData:data,parentDataProperty:"why",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
+if(data.short !== undefined){
+if(!(validate55(data.short, {instancePath:instancePath+"/short",parentData:data,parentDataProperty:"short",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate55.errors : vErrors.concat(validate55.errors);
 errors = vErrors.length;
 }
 }
-if(data.cautions !== undefined){
-let data6 = data.cautions;
+if(data.notes !== undefined){
+let data6 = data.notes;
 if(Array.isArray(data6)){
-if(data6.length > 12){
-const err11 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+if(data6.length > 10){
+const err11 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/maxItems",keyword:"maxItems",params:{limit: 10},message:"must NOT have more than 10 items"};
 if(vErrors === null){
 vErrors = [err11];
 }
@@ -7544,16 +8742,8 @@ vErrors.push(err11);
 }
 errors++;
 }
-const len0 = data6.length;
-for(let i0=0; i0<len0; i0++){
-if(!(validate92(data6[i0], {instancePath:instancePath+"/cautions/" + i0,parentData:data6,parentDataProperty:i0,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
-errors = vErrors.length;
-}
-}
-}
-else {
-const err12 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(data6.length < 1){
+const err12 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
 if(vErrors === null){
 vErrors = [err12];
 }
@@ -7562,18 +8752,16 @@ vErrors.push(err12);
 }
 errors++;
 }
-}
-if(data.picture !== undefined){
-if(!(validate118(data.picture, {instancePath:instancePath+"/picture",parentData:data,parentDataProperty:"picture",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate118.errors : vErrors.concat(validate118.errors);
+const len0 = data6.length;
+for(let i0=0; i0<len0; i0++){
+if(!(validate57(data6[i0], {instancePath:instancePath+"/notes/" + i0,parentData:data6,parentDataProperty:i0,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
 errors = vErrors.length;
 }
 }
-if(data.disturbs !== undefined){
-let data9 = data.disturbs;
-if(Array.isArray(data9)){
-if(data9.length > 12){
-const err13 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+}
+else {
+const err13 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err13];
 }
@@ -7582,8 +8770,18 @@ vErrors.push(err13);
 }
 errors++;
 }
-if(data9.length < 1){
-const err14 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+}
+if(data.why !== undefined){
+if(!(validate57(data.why, {instancePath:instancePath+"/why",parentData:data,parentDataProperty:"why",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
+errors = vErrors.length;
+}
+}
+if(data.cautions !== undefined){
+let data9 = data.cautions;
+if(Array.isArray(data9)){
+if(data9.length > 12){
+const err14 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
 if(vErrors === null){
 vErrors = [err14];
 }
@@ -7594,14 +8792,14 @@ errors++;
 }
 const len1 = data9.length;
 for(let i1=0; i1<len1; i1++){
-if(!(validate123(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate123.errors : vErrors.concat(validate123.errors);
+if(!(validate92(data9[i1], {instancePath:instancePath+"/cautions/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err15 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err15 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err15];
 }
@@ -7611,11 +8809,17 @@ vErrors.push(err15);
 errors++;
 }
 }
-if(data.next !== undefined){
-let data11 = data.next;
-if(Array.isArray(data11)){
-if(data11.length > 30){
-const err16 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+if(data.picture !== undefined){
+if(!(validate120(data.picture, {instancePath:instancePath+"/picture",parentData:data,parentDataProperty:"picture",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate120.errors : vErrors.concat(validate120.errors);
+errors = vErrors.length;
+}
+}
+if(data.disturbs !== undefined){
+let data12 = data.disturbs;
+if(Array.isArray(data12)){
+if(data12.length > 12){
+const err16 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
 if(vErrors === null){
 vErrors = [err16];
 }
@@ -7624,21 +8828,87 @@ vErrors.push(err16);
 }
 errors++;
 }
-const len2 = data11.length;
-for(let i2=0; i2<len2; i2++){
-if(!(validate128(data11[i2], {instancePath:instancePath+"/next/" + i2,parentData:data11,parentDataProperty:i2,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate128.errors : vErrors.concat(validate128.errors);
-errors = vErrors.length;
-}
-}
-}
-else {
-const err17 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(data12.length < 1){
+const err17 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
 if(vErrors === null){
 vErrors = [err17];
 }
 else {
 vErrors.push(err17);
+}
+errors++;
+}
+const len2 = data12.length;
+for(let i2=0; i2<len2; i2++){
+if(!(validate125(data12[i2], {instancePath:instancePath+"/disturbs/" + i2,parentData:data12,parentDataProperty:i2,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate125.errors : vErrors.concat(validate125.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err18 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err18];
+}
+else {
+vErrors.push(err18);
+}
+errors++;
+}
+}
+if(data.stay !== undefined){
+if(typeof data.stay !== "boolean"){
+const err19 = {instancePath:instancePath+"/stay",schemaPath:"#/properties/stay/type",keyword:"type",params:{type: "boolean"},message:"must be boolean"};
+if(vErrors === null){
+vErrors = [err19];
+}
+else {
+vErrors.push(err19);
+}
+errors++;
+}
+}
+if(data.release !== undefined){
+if(!(validate130(data.release, {instancePath:instancePath+"/release",parentData:data,parentDataProperty:"release",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate130.errors : vErrors.concat(validate130.errors);
+errors = vErrors.length;
+}
+}
+if(data.verify !== undefined){
+if(!(validate133(data.verify, {instancePath:instancePath+"/verify",parentData:data,parentDataProperty:"verify",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate133.errors : vErrors.concat(validate133.errors);
+errors = vErrors.length;
+}
+}
+if(data.next !== undefined){
+let data17 = data.next;
+if(Array.isArray(data17)){
+if(data17.length > 30){
+const err20 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+if(vErrors === null){
+vErrors = [err20];
+}
+else {
+vErrors.push(err20);
+}
+errors++;
+}
+const len3 = data17.length;
+for(let i3=0; i3<len3; i3++){
+if(!(validate136(data17[i3], {instancePath:instancePath+"/next/" + i3,parentData:data17,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate136.errors : vErrors.concat(validate136.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err21 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err21];
+}
+else {
+vErrors.push(err21);
 }
 errors++;
 }
@@ -7650,60 +8920,60 @@ errors = vErrors.length;
 }
 }
 if(data.results !== undefined){
-let data14 = data.results;
-if(Array.isArray(data14)){
-if(data14.length > 30){
-const err18 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+let data20 = data.results;
+if(Array.isArray(data20)){
+if(data20.length > 30){
+const err22 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
 if(vErrors === null){
-vErrors = [err18];
+vErrors = [err22];
 }
 else {
-vErrors.push(err18);
+vErrors.push(err22);
 }
 errors++;
 }
-const len3 = data14.length;
-for(let i3=0; i3<len3; i3++){
-if(!(validate135(data14[i3], {instancePath:instancePath+"/results/" + i3,parentData:data14,parentDataProperty:i3,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate135.errors : vErrors.concat(validate135.errors);
+const len4 = data20.length;
+for(let i4=0; i4<len4; i4++){
+if(!(validate143(data20[i4], {instancePath:instancePath+"/results/" + i4,parentData:data20,parentDataProperty:i4,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate143.errors : vErrors.concat(validate143.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err19 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err23 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
-vErrors = [err19];
+vErrors = [err23];
 }
 else {
-vErrors.push(err19);
+vErrors.push(err23);
 }
 errors++;
 }
 }
 }
 else {
-const err20 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
+const err24 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
 if(vErrors === null){
-vErrors = [err20];
+vErrors = [err24];
 }
 else {
-vErrors.push(err20);
+vErrors.push(err24);
 }
 errors++;
 }
-validate322.errors = vErrors;
+validate373.errors = vErrors;
 return errors === 0;
 }
-validate322.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate373.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema66 = {"type":"object","properties":{"kind":{"const":"finding"},"id":{"$ref":"#/$defs/name"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"result":{"enum":["in","out","too-close"]},"verdict":{"$ref":"#/$defs/paragraph"},"cause":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"correction":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"customer":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"nextProcedure":{"$ref":"#/$defs/procedureId"}},"required":["id","number","title","action","kind","result","verdict","cause","correction","customer"],"additionalProperties":false};
-const schema67 = {"type":"object","properties":{"text":{"$ref":"#/$defs/paragraph"},"when":{"$ref":"#/$defs/expression"}},"required":["text"],"additionalProperties":false};
+const schema69 = {"type":"object","properties":{"kind":{"const":"finding"},"id":{"$ref":"#/$defs/name"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"result":{"enum":["in","out","too-close"]},"verdict":{"$ref":"#/$defs/paragraph"},"cause":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"correction":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"customer":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"nextProcedure":{"$ref":"#/$defs/procedureId"}},"required":["id","number","title","action","kind","result","verdict","cause","correction","customer"],"additionalProperties":false};
+const schema70 = {"type":"object","properties":{"text":{"$ref":"#/$defs/paragraph"},"when":{"$ref":"#/$defs/expression"}},"required":["text"],"additionalProperties":false};
 
-function validate342(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate401(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate342.evaluated;
+const evaluated0 = validate401.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -7756,16 +9026,16 @@ vErrors.push(err2);
 }
 errors++;
 }
-validate342.errors = vErrors;
+validate401.errors = vErrors;
 return errors === 0;
 }
-validate342.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate401.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 
-function validate333(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate388(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate333.evaluated;
+const evaluated0 = validate388.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -7874,7 +9144,7 @@ vErrors.push(err9);
 errors++;
 }
 for(const key0 in data){
-if(!(func1.call(schema66.properties, key0))){
+if(!(func1.call(schema69.properties, key0))){
 const err10 = {instancePath,schemaPath:"#/additionalProperties",keyword:"additionalProperties",params:{additionalProperty: key0},message:"must NOT have additional properties"};
 if(vErrors === null){
 vErrors = [err10];
@@ -7950,17 +9220,17 @@ vErrors = vErrors === null ? validate61.errors : vErrors.concat(validate61.error
 errors = vErrors.length;
 }
 }
-if(data.why !== undefined){
-if(!(validate57(data.why, {instancePath:instancePath+"/why",parentData:data,parentDataProperty:"why",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
+if(data.short !== undefined){
+if(!(validate55(data.short, {instancePath:instancePath+"/short",parentData:data,parentDataProperty:"short",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate55.errors : vErrors.concat(validate55.errors);
 errors = vErrors.length;
 }
 }
-if(data.cautions !== undefined){
-let data6 = data.cautions;
+if(data.notes !== undefined){
+let data6 = data.notes;
 if(Array.isArray(data6)){
-if(data6.length > 12){
-const err15 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+if(data6.length > 10){
+const err15 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/maxItems",keyword:"maxItems",params:{limit: 10},message:"must NOT have more than 10 items"};
 if(vErrors === null){
 vErrors = [err15];
 }
@@ -7969,16 +9239,8 @@ vErrors.push(err15);
 }
 errors++;
 }
-const len0 = data6.length;
-for(let i0=0; i0<len0; i0++){
-if(!(validate92(data6[i0], {instancePath:instancePath+"/cautions/" + i0,parentData:data6,parentDataProperty:i0,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
-errors = vErrors.length;
-}
-}
-}
-else {
-const err16 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(data6.length < 1){
+const err16 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
 if(vErrors === null){
 vErrors = [err16];
 }
@@ -7987,18 +9249,16 @@ vErrors.push(err16);
 }
 errors++;
 }
-}
-if(data.picture !== undefined){
-if(!(validate118(data.picture, {instancePath:instancePath+"/picture",parentData:data,parentDataProperty:"picture",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate118.errors : vErrors.concat(validate118.errors);
+const len0 = data6.length;
+for(let i0=0; i0<len0; i0++){
+if(!(validate57(data6[i0], {instancePath:instancePath+"/notes/" + i0,parentData:data6,parentDataProperty:i0,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
 errors = vErrors.length;
 }
 }
-if(data.disturbs !== undefined){
-let data9 = data.disturbs;
-if(Array.isArray(data9)){
-if(data9.length > 12){
-const err17 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+}
+else {
+const err17 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err17];
 }
@@ -8007,8 +9267,18 @@ vErrors.push(err17);
 }
 errors++;
 }
-if(data9.length < 1){
-const err18 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+}
+if(data.why !== undefined){
+if(!(validate57(data.why, {instancePath:instancePath+"/why",parentData:data,parentDataProperty:"why",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
+errors = vErrors.length;
+}
+}
+if(data.cautions !== undefined){
+let data9 = data.cautions;
+if(Array.isArray(data9)){
+if(data9.length > 12){
+const err18 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
 if(vErrors === null){
 vErrors = [err18];
 }
@@ -8019,14 +9289,14 @@ errors++;
 }
 const len1 = data9.length;
 for(let i1=0; i1<len1; i1++){
-if(!(validate123(data9[i1], {instancePath:instancePath+"/disturbs/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate123.errors : vErrors.concat(validate123.errors);
+if(!(validate92(data9[i1], {instancePath:instancePath+"/cautions/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err19 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err19 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err19];
 }
@@ -8036,15 +9306,87 @@ vErrors.push(err19);
 errors++;
 }
 }
-if(data.result !== undefined){
-let data11 = data.result;
-if(!(((data11 === "in") || (data11 === "out")) || (data11 === "too-close"))){
-const err20 = {instancePath:instancePath+"/result",schemaPath:"#/properties/result/enum",keyword:"enum",params:{allowedValues: schema66.properties.result.enum},message:"must be equal to one of the allowed values"};
+if(data.picture !== undefined){
+if(!(validate120(data.picture, {instancePath:instancePath+"/picture",parentData:data,parentDataProperty:"picture",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate120.errors : vErrors.concat(validate120.errors);
+errors = vErrors.length;
+}
+}
+if(data.disturbs !== undefined){
+let data12 = data.disturbs;
+if(Array.isArray(data12)){
+if(data12.length > 12){
+const err20 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
 if(vErrors === null){
 vErrors = [err20];
 }
 else {
 vErrors.push(err20);
+}
+errors++;
+}
+if(data12.length < 1){
+const err21 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+if(vErrors === null){
+vErrors = [err21];
+}
+else {
+vErrors.push(err21);
+}
+errors++;
+}
+const len2 = data12.length;
+for(let i2=0; i2<len2; i2++){
+if(!(validate125(data12[i2], {instancePath:instancePath+"/disturbs/" + i2,parentData:data12,parentDataProperty:i2,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate125.errors : vErrors.concat(validate125.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err22 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err22];
+}
+else {
+vErrors.push(err22);
+}
+errors++;
+}
+}
+if(data.stay !== undefined){
+if(typeof data.stay !== "boolean"){
+const err23 = {instancePath:instancePath+"/stay",schemaPath:"#/properties/stay/type",keyword:"type",params:{type: "boolean"},message:"must be boolean"};
+if(vErrors === null){
+vErrors = [err23];
+}
+else {
+vErrors.push(err23);
+}
+errors++;
+}
+}
+if(data.release !== undefined){
+if(!(validate130(data.release, {instancePath:instancePath+"/release",parentData:data,parentDataProperty:"release",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate130.errors : vErrors.concat(validate130.errors);
+errors = vErrors.length;
+}
+}
+if(data.verify !== undefined){
+if(!(validate133(data.verify, {instancePath:instancePath+"/verify",parentData:data,parentDataProperty:"verify",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate133.errors : vErrors.concat(validate133.errors);
+errors = vErrors.length;
+}
+}
+if(data.result !== undefined){
+let data17 = data.result;
+if(!(((data17 === "in") || (data17 === "out")) || (data17 === "too-close"))){
+const err24 = {instancePath:instancePath+"/result",schemaPath:"#/properties/result/enum",keyword:"enum",params:{allowedValues: schema69.properties.result.enum},message:"must be equal to one of the allowed values"};
+if(vErrors === null){
+vErrors = [err24];
+}
+else {
+vErrors.push(err24);
 }
 errors++;
 }
@@ -8056,74 +9398,10 @@ errors = vErrors.length;
 }
 }
 if(data.cause !== undefined){
-let data13 = data.cause;
-if(Array.isArray(data13)){
-if(data13.length > 60){
-const err21 = {instancePath:instancePath+"/cause",schemaPath:"#/properties/cause/maxItems",keyword:"maxItems",params:{limit: 60},message:"must NOT have more than 60 items"};
-if(vErrors === null){
-vErrors = [err21];
-}
-else {
-vErrors.push(err21);
-}
-errors++;
-}
-const len2 = data13.length;
-for(let i2=0; i2<len2; i2++){
-if(!(validate342(data13[i2], {instancePath:instancePath+"/cause/" + i2,parentData:data13,parentDataProperty:i2,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate342.errors : vErrors.concat(validate342.errors);
-errors = vErrors.length;
-}
-}
-}
-else {
-const err22 = {instancePath:instancePath+"/cause",schemaPath:"#/properties/cause/type",keyword:"type",params:{type: "array"},message:"must be array"};
-if(vErrors === null){
-vErrors = [err22];
-}
-else {
-vErrors.push(err22);
-}
-errors++;
-}
-}
-if(data.correction !== undefined){
-let data15 = data.correction;
-if(Array.isArray(data15)){
-if(data15.length > 60){
-const err23 = {instancePath:instancePath+"/correction",schemaPath:"#/properties/correction/maxItems",keyword:"maxItems",params:{limit: 60},message:"must NOT have more than 60 items"};
-if(vErrors === null){
-vErrors = [err23];
-}
-else {
-vErrors.push(err23);
-}
-errors++;
-}
-const len3 = data15.length;
-for(let i3=0; i3<len3; i3++){
-if(!(validate342(data15[i3], {instancePath:instancePath+"/correction/" + i3,parentData:data15,parentDataProperty:i3,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate342.errors : vErrors.concat(validate342.errors);
-errors = vErrors.length;
-}
-}
-}
-else {
-const err24 = {instancePath:instancePath+"/correction",schemaPath:"#/properties/correction/type",keyword:"type",params:{type: "array"},message:"must be array"};
-if(vErrors === null){
-vErrors = [err24];
-}
-else {
-vErrors.push(err24);
-}
-errors++;
-}
-}
-if(data.customer !== undefined){
-let data17 = data.customer;
-if(Array.isArray(data17)){
-if(data17.length > 60){
-const err25 = {instancePath:instancePath+"/customer",schemaPath:"#/properties/customer/maxItems",keyword:"maxItems",params:{limit: 60},message:"must NOT have more than 60 items"};
+let data19 = data.cause;
+if(Array.isArray(data19)){
+if(data19.length > 60){
+const err25 = {instancePath:instancePath+"/cause",schemaPath:"#/properties/cause/maxItems",keyword:"maxItems",params:{limit: 60},message:"must NOT have more than 60 items"};
 if(vErrors === null){
 vErrors = [err25];
 }
@@ -8132,21 +9410,85 @@ vErrors.push(err25);
 }
 errors++;
 }
-const len4 = data17.length;
-for(let i4=0; i4<len4; i4++){
-if(!(validate342(data17[i4], {instancePath:instancePath+"/customer/" + i4,parentData:data17,parentDataProperty:i4,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate342.errors : vErrors.concat(validate342.errors);
+const len3 = data19.length;
+for(let i3=0; i3<len3; i3++){
+if(!(validate401(data19[i3], {instancePath:instancePath+"/cause/" + i3,parentData:data19,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate401.errors : vErrors.concat(validate401.errors);
 errors = vErrors.length;
 }
 }
 }
 else {
-const err26 = {instancePath:instancePath+"/customer",schemaPath:"#/properties/customer/type",keyword:"type",params:{type: "array"},message:"must be array"};
+const err26 = {instancePath:instancePath+"/cause",schemaPath:"#/properties/cause/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err26];
 }
 else {
 vErrors.push(err26);
+}
+errors++;
+}
+}
+if(data.correction !== undefined){
+let data21 = data.correction;
+if(Array.isArray(data21)){
+if(data21.length > 60){
+const err27 = {instancePath:instancePath+"/correction",schemaPath:"#/properties/correction/maxItems",keyword:"maxItems",params:{limit: 60},message:"must NOT have more than 60 items"};
+if(vErrors === null){
+vErrors = [err27];
+}
+else {
+vErrors.push(err27);
+}
+errors++;
+}
+const len4 = data21.length;
+for(let i4=0; i4<len4; i4++){
+if(!(validate401(data21[i4], {instancePath:instancePath+"/correction/" + i4,parentData:data21,parentDataProperty:i4,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate401.errors : vErrors.concat(validate401.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err28 = {instancePath:instancePath+"/correction",schemaPath:"#/properties/correction/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err28];
+}
+else {
+vErrors.push(err28);
+}
+errors++;
+}
+}
+if(data.customer !== undefined){
+let data23 = data.customer;
+if(Array.isArray(data23)){
+if(data23.length > 60){
+const err29 = {instancePath:instancePath+"/customer",schemaPath:"#/properties/customer/maxItems",keyword:"maxItems",params:{limit: 60},message:"must NOT have more than 60 items"};
+if(vErrors === null){
+vErrors = [err29];
+}
+else {
+vErrors.push(err29);
+}
+errors++;
+}
+const len5 = data23.length;
+for(let i5=0; i5<len5; i5++){
+if(!(validate401(data23[i5], {instancePath:instancePath+"/customer/" + i5,parentData:data23,parentDataProperty:i5,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate401.errors : vErrors.concat(validate401.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err30 = {instancePath:instancePath+"/customer",schemaPath:"#/properties/customer/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err30];
+}
+else {
+vErrors.push(err30);
 }
 errors++;
 }
@@ -8159,7 +9501,417 @@ errors = vErrors.length;
 }
 }
 else {
-const err27 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
+const err31 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
+if(vErrors === null){
+vErrors = [err31];
+}
+else {
+vErrors.push(err31);
+}
+errors++;
+}
+validate388.errors = vErrors;
+return errors === 0;
+}
+validate388.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+
+const schema71 = {"type":"object","properties":{"kind":{"const":"ramp"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"channels":{"type":"array","items":{"$ref":"#/$defs/channel"},"minItems":1,"maxItems":4},"target":{"type":"number"},"finds":{"type":"array","items":{"$ref":"#/$defs/foundQuantity"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","channels","target","finds"],"additionalProperties":false};
+
+function validate408(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+let vErrors = null;
+let errors = 0;
+const evaluated0 = validate408.evaluated;
+if(evaluated0.dynamicProps){
+evaluated0.props = undefined;
+}
+if(evaluated0.dynamicItems){
+evaluated0.items = undefined;
+}
+if(data && typeof data == "object" && !Array.isArray(data)){
+if(data.id === undefined){
+const err0 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "id"},message:"must have required property '"+"id"+"'"};
+if(vErrors === null){
+vErrors = [err0];
+}
+else {
+vErrors.push(err0);
+}
+errors++;
+}
+if(data.number === undefined){
+const err1 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "number"},message:"must have required property '"+"number"+"'"};
+if(vErrors === null){
+vErrors = [err1];
+}
+else {
+vErrors.push(err1);
+}
+errors++;
+}
+if(data.title === undefined){
+const err2 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "title"},message:"must have required property '"+"title"+"'"};
+if(vErrors === null){
+vErrors = [err2];
+}
+else {
+vErrors.push(err2);
+}
+errors++;
+}
+if(data.action === undefined){
+const err3 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "action"},message:"must have required property '"+"action"+"'"};
+if(vErrors === null){
+vErrors = [err3];
+}
+else {
+vErrors.push(err3);
+}
+errors++;
+}
+if(data.kind === undefined){
+const err4 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "kind"},message:"must have required property '"+"kind"+"'"};
+if(vErrors === null){
+vErrors = [err4];
+}
+else {
+vErrors.push(err4);
+}
+errors++;
+}
+if(data.otherwise === undefined){
+const err5 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "otherwise"},message:"must have required property '"+"otherwise"+"'"};
+if(vErrors === null){
+vErrors = [err5];
+}
+else {
+vErrors.push(err5);
+}
+errors++;
+}
+if(data.cannotMeasure === undefined){
+const err6 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "cannotMeasure"},message:"must have required property '"+"cannotMeasure"+"'"};
+if(vErrors === null){
+vErrors = [err6];
+}
+else {
+vErrors.push(err6);
+}
+errors++;
+}
+if(data.name === undefined){
+const err7 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "name"},message:"must have required property '"+"name"+"'"};
+if(vErrors === null){
+vErrors = [err7];
+}
+else {
+vErrors.push(err7);
+}
+errors++;
+}
+if(data.channels === undefined){
+const err8 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "channels"},message:"must have required property '"+"channels"+"'"};
+if(vErrors === null){
+vErrors = [err8];
+}
+else {
+vErrors.push(err8);
+}
+errors++;
+}
+if(data.target === undefined){
+const err9 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "target"},message:"must have required property '"+"target"+"'"};
+if(vErrors === null){
+vErrors = [err9];
+}
+else {
+vErrors.push(err9);
+}
+errors++;
+}
+if(data.finds === undefined){
+const err10 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "finds"},message:"must have required property '"+"finds"+"'"};
+if(vErrors === null){
+vErrors = [err10];
+}
+else {
+vErrors.push(err10);
+}
+errors++;
+}
+for(const key0 in data){
+if(!(func1.call(schema71.properties, key0))){
+const err11 = {instancePath,schemaPath:"#/additionalProperties",keyword:"additionalProperties",params:{additionalProperty: key0},message:"must NOT have additional properties"};
+if(vErrors === null){
+vErrors = [err11];
+}
+else {
+vErrors.push(err11);
+}
+errors++;
+}
+}
+if(data.kind !== undefined){
+if("ramp" !== data.kind){
+const err12 = {instancePath:instancePath+"/kind",schemaPath:"#/properties/kind/const",keyword:"const",params:{allowedValue: "ramp"},message:"must be equal to constant"};
+if(vErrors === null){
+vErrors = [err12];
+}
+else {
+vErrors.push(err12);
+}
+errors++;
+}
+}
+if(data.id !== undefined){
+if(!(validate84(data.id, {instancePath:instancePath+"/id",parentData:data,parentDataProperty:"id",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate84.errors : vErrors.concat(validate84.errors);
+errors = vErrors.length;
+}
+}
+if(data.number !== undefined){
+let data2 = data.number;
+if(typeof data2 === "string"){
+if(func2(data2) > 8){
+const err13 = {instancePath:instancePath+"/number",schemaPath:"#/properties/number/maxLength",keyword:"maxLength",params:{limit: 8},message:"must NOT have more than 8 characters"};
+if(vErrors === null){
+vErrors = [err13];
+}
+else {
+vErrors.push(err13);
+}
+errors++;
+}
+if(!pattern9.test(data2)){
+const err14 = {instancePath:instancePath+"/number",schemaPath:"#/properties/number/pattern",keyword:"pattern",params:{pattern: "^[A-Za-z0-9]+$"},message:"must match pattern \""+"^[A-Za-z0-9]+$"+"\""};
+if(vErrors === null){
+vErrors = [err14];
+}
+else {
+vErrors.push(err14);
+}
+errors++;
+}
+}
+else {
+const err15 = {instancePath:instancePath+"/number",schemaPath:"#/properties/number/type",keyword:"type",params:{type: "string"},message:"must be string"};
+if(vErrors === null){
+vErrors = [err15];
+}
+else {
+vErrors.push(err15);
+}
+errors++;
+}
+}
+if(data.title !== undefined){
+if(!(validate55(data.title, {instancePath:instancePath+"/title",parentData:data,parentDataProperty:"title",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate55.errors : vErrors.concat(validate55.errors);
+errors = vErrors.length;
+}
+}
+if(data.action !== undefined){
+if(!(validate61(data.action, {instancePath:instancePath+"/action",parentData:data,parentDataProperty:"action",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate61.errors : vErrors.concat(validate61.errors);
+errors = vErrors.length;
+}
+}
+if(data.short !== undefined){
+if(!(validate55(data.short, {instancePath:instancePath+"/short",parentData:data,parentDataProperty:"short",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate55.errors : vErrors.concat(validate55.errors);
+errors = vErrors.length;
+}
+}
+if(data.notes !== undefined){
+let data6 = data.notes;
+if(Array.isArray(data6)){
+if(data6.length > 10){
+const err16 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/maxItems",keyword:"maxItems",params:{limit: 10},message:"must NOT have more than 10 items"};
+if(vErrors === null){
+vErrors = [err16];
+}
+else {
+vErrors.push(err16);
+}
+errors++;
+}
+if(data6.length < 1){
+const err17 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+if(vErrors === null){
+vErrors = [err17];
+}
+else {
+vErrors.push(err17);
+}
+errors++;
+}
+const len0 = data6.length;
+for(let i0=0; i0<len0; i0++){
+if(!(validate57(data6[i0], {instancePath:instancePath+"/notes/" + i0,parentData:data6,parentDataProperty:i0,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err18 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err18];
+}
+else {
+vErrors.push(err18);
+}
+errors++;
+}
+}
+if(data.why !== undefined){
+if(!(validate57(data.why, {instancePath:instancePath+"/why",parentData:data,parentDataProperty:"why",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
+errors = vErrors.length;
+}
+}
+if(data.cautions !== undefined){
+let data9 = data.cautions;
+if(Array.isArray(data9)){
+if(data9.length > 12){
+const err19 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+if(vErrors === null){
+vErrors = [err19];
+}
+else {
+vErrors.push(err19);
+}
+errors++;
+}
+const len1 = data9.length;
+for(let i1=0; i1<len1; i1++){
+if(!(validate92(data9[i1], {instancePath:instancePath+"/cautions/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err20 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err20];
+}
+else {
+vErrors.push(err20);
+}
+errors++;
+}
+}
+if(data.picture !== undefined){
+if(!(validate120(data.picture, {instancePath:instancePath+"/picture",parentData:data,parentDataProperty:"picture",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate120.errors : vErrors.concat(validate120.errors);
+errors = vErrors.length;
+}
+}
+if(data.disturbs !== undefined){
+let data12 = data.disturbs;
+if(Array.isArray(data12)){
+if(data12.length > 12){
+const err21 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+if(vErrors === null){
+vErrors = [err21];
+}
+else {
+vErrors.push(err21);
+}
+errors++;
+}
+if(data12.length < 1){
+const err22 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+if(vErrors === null){
+vErrors = [err22];
+}
+else {
+vErrors.push(err22);
+}
+errors++;
+}
+const len2 = data12.length;
+for(let i2=0; i2<len2; i2++){
+if(!(validate125(data12[i2], {instancePath:instancePath+"/disturbs/" + i2,parentData:data12,parentDataProperty:i2,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate125.errors : vErrors.concat(validate125.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err23 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err23];
+}
+else {
+vErrors.push(err23);
+}
+errors++;
+}
+}
+if(data.stay !== undefined){
+if(typeof data.stay !== "boolean"){
+const err24 = {instancePath:instancePath+"/stay",schemaPath:"#/properties/stay/type",keyword:"type",params:{type: "boolean"},message:"must be boolean"};
+if(vErrors === null){
+vErrors = [err24];
+}
+else {
+vErrors.push(err24);
+}
+errors++;
+}
+}
+if(data.release !== undefined){
+if(!(validate130(data.release, {instancePath:instancePath+"/release",parentData:data,parentDataProperty:"release",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate130.errors : vErrors.concat(validate130.errors);
+errors = vErrors.length;
+}
+}
+if(data.verify !== undefined){
+if(!(validate133(data.verify, {instancePath:instancePath+"/verify",parentData:data,parentDataProperty:"verify",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate133.errors : vErrors.concat(validate133.errors);
+errors = vErrors.length;
+}
+}
+if(data.name !== undefined){
+if(!(validate66(data.name, {instancePath:instancePath+"/name",parentData:data,parentDataProperty:"name",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate66.errors : vErrors.concat(validate66.errors);
+errors = vErrors.length;
+}
+}
+if(data.channels !== undefined){
+let data18 = data.channels;
+if(Array.isArray(data18)){
+if(data18.length > 4){
+const err25 = {instancePath:instancePath+"/channels",schemaPath:"#/properties/channels/maxItems",keyword:"maxItems",params:{limit: 4},message:"must NOT have more than 4 items"};
+if(vErrors === null){
+vErrors = [err25];
+}
+else {
+vErrors.push(err25);
+}
+errors++;
+}
+if(data18.length < 1){
+const err26 = {instancePath:instancePath+"/channels",schemaPath:"#/properties/channels/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+if(vErrors === null){
+vErrors = [err26];
+}
+else {
+vErrors.push(err26);
+}
+errors++;
+}
+const len3 = data18.length;
+for(let i3=0; i3<len3; i3++){
+if(!(validate253(data18[i3], {instancePath:instancePath+"/channels/" + i3,parentData:data18,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate253.errors : vErrors.concat(validate253.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err27 = {instancePath:instancePath+"/channels",schemaPath:"#/properties/channels/type",keyword:"type",params:{type: "array"},message:"must be array"};
 if(vErrors === null){
 vErrors = [err27];
 }
@@ -8168,10 +9920,1360 @@ vErrors.push(err27);
 }
 errors++;
 }
-validate333.errors = vErrors;
+}
+if(data.target !== undefined){
+let data20 = data.target;
+if(!((typeof data20 == "number") && (isFinite(data20)))){
+const err28 = {instancePath:instancePath+"/target",schemaPath:"#/properties/target/type",keyword:"type",params:{type: "number"},message:"must be number"};
+if(vErrors === null){
+vErrors = [err28];
+}
+else {
+vErrors.push(err28);
+}
+errors++;
+}
+}
+if(data.finds !== undefined){
+let data21 = data.finds;
+if(Array.isArray(data21)){
+if(data21.length > 20){
+const err29 = {instancePath:instancePath+"/finds",schemaPath:"#/properties/finds/maxItems",keyword:"maxItems",params:{limit: 20},message:"must NOT have more than 20 items"};
+if(vErrors === null){
+vErrors = [err29];
+}
+else {
+vErrors.push(err29);
+}
+errors++;
+}
+if(data21.length < 1){
+const err30 = {instancePath:instancePath+"/finds",schemaPath:"#/properties/finds/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+if(vErrors === null){
+vErrors = [err30];
+}
+else {
+vErrors.push(err30);
+}
+errors++;
+}
+const len4 = data21.length;
+for(let i4=0; i4<len4; i4++){
+if(!(validate262(data21[i4], {instancePath:instancePath+"/finds/" + i4,parentData:data21,parentDataProperty:i4,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate262.errors : vErrors.concat(validate262.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err31 = {instancePath:instancePath+"/finds",schemaPath:"#/properties/finds/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err31];
+}
+else {
+vErrors.push(err31);
+}
+errors++;
+}
+}
+if(data.next !== undefined){
+let data23 = data.next;
+if(Array.isArray(data23)){
+if(data23.length > 30){
+const err32 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+if(vErrors === null){
+vErrors = [err32];
+}
+else {
+vErrors.push(err32);
+}
+errors++;
+}
+const len5 = data23.length;
+for(let i5=0; i5<len5; i5++){
+if(!(validate136(data23[i5], {instancePath:instancePath+"/next/" + i5,parentData:data23,parentDataProperty:i5,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate136.errors : vErrors.concat(validate136.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err33 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err33];
+}
+else {
+vErrors.push(err33);
+}
+errors++;
+}
+}
+if(data.otherwise !== undefined){
+if(!(validate106(data.otherwise, {instancePath:instancePath+"/otherwise",parentData:data,parentDataProperty:"otherwise",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate106.errors : vErrors.concat(validate106.errors);
+errors = vErrors.length;
+}
+}
+if(data.results !== undefined){
+let data26 = data.results;
+if(Array.isArray(data26)){
+if(data26.length > 30){
+const err34 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+if(vErrors === null){
+vErrors = [err34];
+}
+else {
+vErrors.push(err34);
+}
+errors++;
+}
+const len6 = data26.length;
+for(let i6=0; i6<len6; i6++){
+if(!(validate143(data26[i6], {instancePath:instancePath+"/results/" + i6,parentData:data26,parentDataProperty:i6,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate143.errors : vErrors.concat(validate143.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err35 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err35];
+}
+else {
+vErrors.push(err35);
+}
+errors++;
+}
+}
+if(data.cannotMeasure !== undefined){
+if(!(validate106(data.cannotMeasure, {instancePath:instancePath+"/cannotMeasure",parentData:data,parentDataProperty:"cannotMeasure",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate106.errors : vErrors.concat(validate106.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err36 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
+if(vErrors === null){
+vErrors = [err36];
+}
+else {
+vErrors.push(err36);
+}
+errors++;
+}
+validate408.errors = vErrors;
 return errors === 0;
 }
-validate333.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate408.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+
+const schema72 = {"type":"object","properties":{"kind":{"const":"photo"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"},"name":{"$ref":"#/$defs/name"},"shows":{"type":"array","items":{"$ref":"#/$defs/line"},"minItems":1,"maxItems":10}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","shows"],"additionalProperties":false};
+
+function validate427(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+let vErrors = null;
+let errors = 0;
+const evaluated0 = validate427.evaluated;
+if(evaluated0.dynamicProps){
+evaluated0.props = undefined;
+}
+if(evaluated0.dynamicItems){
+evaluated0.items = undefined;
+}
+if(data && typeof data == "object" && !Array.isArray(data)){
+if(data.id === undefined){
+const err0 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "id"},message:"must have required property '"+"id"+"'"};
+if(vErrors === null){
+vErrors = [err0];
+}
+else {
+vErrors.push(err0);
+}
+errors++;
+}
+if(data.number === undefined){
+const err1 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "number"},message:"must have required property '"+"number"+"'"};
+if(vErrors === null){
+vErrors = [err1];
+}
+else {
+vErrors.push(err1);
+}
+errors++;
+}
+if(data.title === undefined){
+const err2 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "title"},message:"must have required property '"+"title"+"'"};
+if(vErrors === null){
+vErrors = [err2];
+}
+else {
+vErrors.push(err2);
+}
+errors++;
+}
+if(data.action === undefined){
+const err3 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "action"},message:"must have required property '"+"action"+"'"};
+if(vErrors === null){
+vErrors = [err3];
+}
+else {
+vErrors.push(err3);
+}
+errors++;
+}
+if(data.kind === undefined){
+const err4 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "kind"},message:"must have required property '"+"kind"+"'"};
+if(vErrors === null){
+vErrors = [err4];
+}
+else {
+vErrors.push(err4);
+}
+errors++;
+}
+if(data.otherwise === undefined){
+const err5 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "otherwise"},message:"must have required property '"+"otherwise"+"'"};
+if(vErrors === null){
+vErrors = [err5];
+}
+else {
+vErrors.push(err5);
+}
+errors++;
+}
+if(data.cannotMeasure === undefined){
+const err6 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "cannotMeasure"},message:"must have required property '"+"cannotMeasure"+"'"};
+if(vErrors === null){
+vErrors = [err6];
+}
+else {
+vErrors.push(err6);
+}
+errors++;
+}
+if(data.name === undefined){
+const err7 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "name"},message:"must have required property '"+"name"+"'"};
+if(vErrors === null){
+vErrors = [err7];
+}
+else {
+vErrors.push(err7);
+}
+errors++;
+}
+if(data.shows === undefined){
+const err8 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "shows"},message:"must have required property '"+"shows"+"'"};
+if(vErrors === null){
+vErrors = [err8];
+}
+else {
+vErrors.push(err8);
+}
+errors++;
+}
+for(const key0 in data){
+if(!(func1.call(schema72.properties, key0))){
+const err9 = {instancePath,schemaPath:"#/additionalProperties",keyword:"additionalProperties",params:{additionalProperty: key0},message:"must NOT have additional properties"};
+if(vErrors === null){
+vErrors = [err9];
+}
+else {
+vErrors.push(err9);
+}
+errors++;
+}
+}
+if(data.kind !== undefined){
+if("photo" !== data.kind){
+const err10 = {instancePath:instancePath+"/kind",schemaPath:"#/properties/kind/const",keyword:"const",params:{allowedValue: "photo"},message:"must be equal to constant"};
+if(vErrors === null){
+vErrors = [err10];
+}
+else {
+vErrors.push(err10);
+}
+errors++;
+}
+}
+if(data.id !== undefined){
+if(!(validate84(data.id, {instancePath:instancePath+"/id",parentData:data,parentDataProperty:"id",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate84.errors : vErrors.concat(validate84.errors);
+errors = vErrors.length;
+}
+}
+if(data.number !== undefined){
+let data2 = data.number;
+if(typeof data2 === "string"){
+if(func2(data2) > 8){
+const err11 = {instancePath:instancePath+"/number",schemaPath:"#/properties/number/maxLength",keyword:"maxLength",params:{limit: 8},message:"must NOT have more than 8 characters"};
+if(vErrors === null){
+vErrors = [err11];
+}
+else {
+vErrors.push(err11);
+}
+errors++;
+}
+if(!pattern9.test(data2)){
+const err12 = {instancePath:instancePath+"/number",schemaPath:"#/properties/number/pattern",keyword:"pattern",params:{pattern: "^[A-Za-z0-9]+$"},message:"must match pattern \""+"^[A-Za-z0-9]+$"+"\""};
+if(vErrors === null){
+vErrors = [err12];
+}
+else {
+vErrors.push(err12);
+}
+errors++;
+}
+}
+else {
+const err13 = {instancePath:instancePath+"/number",schemaPath:"#/properties/number/type",keyword:"type",params:{type: "string"},message:"must be string"};
+if(vErrors === null){
+vErrors = [err13];
+}
+else {
+vErrors.push(err13);
+}
+errors++;
+}
+}
+if(data.title !== undefined){
+if(!(validate55(data.title, {instancePath:instancePath+"/title",parentData:data,parentDataProperty:"title",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate55.errors : vErrors.concat(validate55.errors);
+errors = vErrors.length;
+}
+}
+if(data.action !== undefined){
+if(!(validate61(data.action, {instancePath:instancePath+"/action",parentData:data,parentDataProperty:"action",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate61.errors : vErrors.concat(validate61.errors);
+errors = vErrors.length;
+}
+}
+if(data.short !== undefined){
+if(!(validate55(data.short, {instancePath:instancePath+"/short",parentData:data,parentDataProperty:"short",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate55.errors : vErrors.concat(validate55.errors);
+errors = vErrors.length;
+}
+}
+if(data.notes !== undefined){
+let data6 = data.notes;
+if(Array.isArray(data6)){
+if(data6.length > 10){
+const err14 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/maxItems",keyword:"maxItems",params:{limit: 10},message:"must NOT have more than 10 items"};
+if(vErrors === null){
+vErrors = [err14];
+}
+else {
+vErrors.push(err14);
+}
+errors++;
+}
+if(data6.length < 1){
+const err15 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+if(vErrors === null){
+vErrors = [err15];
+}
+else {
+vErrors.push(err15);
+}
+errors++;
+}
+const len0 = data6.length;
+for(let i0=0; i0<len0; i0++){
+if(!(validate57(data6[i0], {instancePath:instancePath+"/notes/" + i0,parentData:data6,parentDataProperty:i0,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err16 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err16];
+}
+else {
+vErrors.push(err16);
+}
+errors++;
+}
+}
+if(data.why !== undefined){
+if(!(validate57(data.why, {instancePath:instancePath+"/why",parentData:data,parentDataProperty:"why",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
+errors = vErrors.length;
+}
+}
+if(data.cautions !== undefined){
+let data9 = data.cautions;
+if(Array.isArray(data9)){
+if(data9.length > 12){
+const err17 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+if(vErrors === null){
+vErrors = [err17];
+}
+else {
+vErrors.push(err17);
+}
+errors++;
+}
+const len1 = data9.length;
+for(let i1=0; i1<len1; i1++){
+if(!(validate92(data9[i1], {instancePath:instancePath+"/cautions/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err18 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err18];
+}
+else {
+vErrors.push(err18);
+}
+errors++;
+}
+}
+if(data.picture !== undefined){
+if(!(validate120(data.picture, {instancePath:instancePath+"/picture",parentData:data,parentDataProperty:"picture",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate120.errors : vErrors.concat(validate120.errors);
+errors = vErrors.length;
+}
+}
+if(data.disturbs !== undefined){
+let data12 = data.disturbs;
+if(Array.isArray(data12)){
+if(data12.length > 12){
+const err19 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+if(vErrors === null){
+vErrors = [err19];
+}
+else {
+vErrors.push(err19);
+}
+errors++;
+}
+if(data12.length < 1){
+const err20 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+if(vErrors === null){
+vErrors = [err20];
+}
+else {
+vErrors.push(err20);
+}
+errors++;
+}
+const len2 = data12.length;
+for(let i2=0; i2<len2; i2++){
+if(!(validate125(data12[i2], {instancePath:instancePath+"/disturbs/" + i2,parentData:data12,parentDataProperty:i2,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate125.errors : vErrors.concat(validate125.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err21 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err21];
+}
+else {
+vErrors.push(err21);
+}
+errors++;
+}
+}
+if(data.stay !== undefined){
+if(typeof data.stay !== "boolean"){
+const err22 = {instancePath:instancePath+"/stay",schemaPath:"#/properties/stay/type",keyword:"type",params:{type: "boolean"},message:"must be boolean"};
+if(vErrors === null){
+vErrors = [err22];
+}
+else {
+vErrors.push(err22);
+}
+errors++;
+}
+}
+if(data.release !== undefined){
+if(!(validate130(data.release, {instancePath:instancePath+"/release",parentData:data,parentDataProperty:"release",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate130.errors : vErrors.concat(validate130.errors);
+errors = vErrors.length;
+}
+}
+if(data.verify !== undefined){
+if(!(validate133(data.verify, {instancePath:instancePath+"/verify",parentData:data,parentDataProperty:"verify",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate133.errors : vErrors.concat(validate133.errors);
+errors = vErrors.length;
+}
+}
+if(data.next !== undefined){
+let data17 = data.next;
+if(Array.isArray(data17)){
+if(data17.length > 30){
+const err23 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+if(vErrors === null){
+vErrors = [err23];
+}
+else {
+vErrors.push(err23);
+}
+errors++;
+}
+const len3 = data17.length;
+for(let i3=0; i3<len3; i3++){
+if(!(validate136(data17[i3], {instancePath:instancePath+"/next/" + i3,parentData:data17,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate136.errors : vErrors.concat(validate136.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err24 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err24];
+}
+else {
+vErrors.push(err24);
+}
+errors++;
+}
+}
+if(data.otherwise !== undefined){
+if(!(validate106(data.otherwise, {instancePath:instancePath+"/otherwise",parentData:data,parentDataProperty:"otherwise",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate106.errors : vErrors.concat(validate106.errors);
+errors = vErrors.length;
+}
+}
+if(data.results !== undefined){
+let data20 = data.results;
+if(Array.isArray(data20)){
+if(data20.length > 30){
+const err25 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+if(vErrors === null){
+vErrors = [err25];
+}
+else {
+vErrors.push(err25);
+}
+errors++;
+}
+const len4 = data20.length;
+for(let i4=0; i4<len4; i4++){
+if(!(validate143(data20[i4], {instancePath:instancePath+"/results/" + i4,parentData:data20,parentDataProperty:i4,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate143.errors : vErrors.concat(validate143.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err26 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err26];
+}
+else {
+vErrors.push(err26);
+}
+errors++;
+}
+}
+if(data.cannotMeasure !== undefined){
+if(!(validate106(data.cannotMeasure, {instancePath:instancePath+"/cannotMeasure",parentData:data,parentDataProperty:"cannotMeasure",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate106.errors : vErrors.concat(validate106.errors);
+errors = vErrors.length;
+}
+}
+if(data.name !== undefined){
+if(!(validate66(data.name, {instancePath:instancePath+"/name",parentData:data,parentDataProperty:"name",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate66.errors : vErrors.concat(validate66.errors);
+errors = vErrors.length;
+}
+}
+if(data.shows !== undefined){
+let data24 = data.shows;
+if(Array.isArray(data24)){
+if(data24.length > 10){
+const err27 = {instancePath:instancePath+"/shows",schemaPath:"#/properties/shows/maxItems",keyword:"maxItems",params:{limit: 10},message:"must NOT have more than 10 items"};
+if(vErrors === null){
+vErrors = [err27];
+}
+else {
+vErrors.push(err27);
+}
+errors++;
+}
+if(data24.length < 1){
+const err28 = {instancePath:instancePath+"/shows",schemaPath:"#/properties/shows/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+if(vErrors === null){
+vErrors = [err28];
+}
+else {
+vErrors.push(err28);
+}
+errors++;
+}
+const len5 = data24.length;
+for(let i5=0; i5<len5; i5++){
+if(!(validate61(data24[i5], {instancePath:instancePath+"/shows/" + i5,parentData:data24,parentDataProperty:i5,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate61.errors : vErrors.concat(validate61.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err29 = {instancePath:instancePath+"/shows",schemaPath:"#/properties/shows/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err29];
+}
+else {
+vErrors.push(err29);
+}
+errors++;
+}
+}
+}
+else {
+const err30 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
+if(vErrors === null){
+vErrors = [err30];
+}
+else {
+vErrors.push(err30);
+}
+errors++;
+}
+validate427.errors = vErrors;
+return errors === 0;
+}
+validate427.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+
+const schema73 = {"type":"object","properties":{"kind":{"const":"call"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"procedure":{"$ref":"#/$defs/procedureId"},"version":{"type":"integer","minimum":1,"maximum":100000},"takes":{"type":"array","items":{"$ref":"#/$defs/takenResult"},"maxItems":30},"finds":{"type":"array","items":{"$ref":"#/$defs/calledFinding"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise","procedure","version","takes","finds"],"additionalProperties":false};
+const schema74 = {"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"},"from":{"$ref":"#/$defs/name"}},"required":["name","label","unit","from"],"additionalProperties":false};
+
+function validate461(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+let vErrors = null;
+let errors = 0;
+const evaluated0 = validate461.evaluated;
+if(evaluated0.dynamicProps){
+evaluated0.props = undefined;
+}
+if(evaluated0.dynamicItems){
+evaluated0.items = undefined;
+}
+if(data && typeof data == "object" && !Array.isArray(data)){
+if(data.name === undefined){
+const err0 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "name"},message:"must have required property '"+"name"+"'"};
+if(vErrors === null){
+vErrors = [err0];
+}
+else {
+vErrors.push(err0);
+}
+errors++;
+}
+if(data.label === undefined){
+const err1 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "label"},message:"must have required property '"+"label"+"'"};
+if(vErrors === null){
+vErrors = [err1];
+}
+else {
+vErrors.push(err1);
+}
+errors++;
+}
+if(data.unit === undefined){
+const err2 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "unit"},message:"must have required property '"+"unit"+"'"};
+if(vErrors === null){
+vErrors = [err2];
+}
+else {
+vErrors.push(err2);
+}
+errors++;
+}
+if(data.from === undefined){
+const err3 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "from"},message:"must have required property '"+"from"+"'"};
+if(vErrors === null){
+vErrors = [err3];
+}
+else {
+vErrors.push(err3);
+}
+errors++;
+}
+for(const key0 in data){
+if(!((((((key0 === "name") || (key0 === "label")) || (key0 === "unit")) || (key0 === "sense")) || (key0 === "band")) || (key0 === "from"))){
+const err4 = {instancePath,schemaPath:"#/additionalProperties",keyword:"additionalProperties",params:{additionalProperty: key0},message:"must NOT have additional properties"};
+if(vErrors === null){
+vErrors = [err4];
+}
+else {
+vErrors.push(err4);
+}
+errors++;
+}
+}
+if(data.name !== undefined){
+if(!(validate66(data.name, {instancePath:instancePath+"/name",parentData:data,parentDataProperty:"name",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate66.errors : vErrors.concat(validate66.errors);
+errors = vErrors.length;
+}
+}
+if(data.label !== undefined){
+if(!(validate55(data.label, {instancePath:instancePath+"/label",parentData:data,parentDataProperty:"label",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate55.errors : vErrors.concat(validate55.errors);
+errors = vErrors.length;
+}
+}
+if(data.unit !== undefined){
+if(!(validate71(data.unit, {instancePath:instancePath+"/unit",parentData:data,parentDataProperty:"unit",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate71.errors : vErrors.concat(validate71.errors);
+errors = vErrors.length;
+}
+}
+if(data.sense !== undefined){
+if(!(validate78(data.sense, {instancePath:instancePath+"/sense",parentData:data,parentDataProperty:"sense",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate78.errors : vErrors.concat(validate78.errors);
+errors = vErrors.length;
+}
+}
+if(data.band !== undefined){
+if(!(validate148(data.band, {instancePath:instancePath+"/band",parentData:data,parentDataProperty:"band",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate148.errors : vErrors.concat(validate148.errors);
+errors = vErrors.length;
+}
+}
+if(data.from !== undefined){
+if(!(validate66(data.from, {instancePath:instancePath+"/from",parentData:data,parentDataProperty:"from",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate66.errors : vErrors.concat(validate66.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err5 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
+if(vErrors === null){
+vErrors = [err5];
+}
+else {
+vErrors.push(err5);
+}
+errors++;
+}
+validate461.errors = vErrors;
+return errors === 0;
+}
+validate461.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+
+const schema75 = {"type":"object","properties":{"finding":{"$ref":"#/$defs/name"},"name":{"$ref":"#/$defs/name"}},"required":["finding","name"],"additionalProperties":false};
+
+function validate469(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+let vErrors = null;
+let errors = 0;
+const evaluated0 = validate469.evaluated;
+if(evaluated0.dynamicProps){
+evaluated0.props = undefined;
+}
+if(evaluated0.dynamicItems){
+evaluated0.items = undefined;
+}
+if(data && typeof data == "object" && !Array.isArray(data)){
+if(data.finding === undefined){
+const err0 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "finding"},message:"must have required property '"+"finding"+"'"};
+if(vErrors === null){
+vErrors = [err0];
+}
+else {
+vErrors.push(err0);
+}
+errors++;
+}
+if(data.name === undefined){
+const err1 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "name"},message:"must have required property '"+"name"+"'"};
+if(vErrors === null){
+vErrors = [err1];
+}
+else {
+vErrors.push(err1);
+}
+errors++;
+}
+for(const key0 in data){
+if(!((key0 === "finding") || (key0 === "name"))){
+const err2 = {instancePath,schemaPath:"#/additionalProperties",keyword:"additionalProperties",params:{additionalProperty: key0},message:"must NOT have additional properties"};
+if(vErrors === null){
+vErrors = [err2];
+}
+else {
+vErrors.push(err2);
+}
+errors++;
+}
+}
+if(data.finding !== undefined){
+if(!(validate66(data.finding, {instancePath:instancePath+"/finding",parentData:data,parentDataProperty:"finding",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate66.errors : vErrors.concat(validate66.errors);
+errors = vErrors.length;
+}
+}
+if(data.name !== undefined){
+if(!(validate66(data.name, {instancePath:instancePath+"/name",parentData:data,parentDataProperty:"name",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate66.errors : vErrors.concat(validate66.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err3 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
+if(vErrors === null){
+vErrors = [err3];
+}
+else {
+vErrors.push(err3);
+}
+errors++;
+}
+validate469.errors = vErrors;
+return errors === 0;
+}
+validate469.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+
+
+function validate445(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+let vErrors = null;
+let errors = 0;
+const evaluated0 = validate445.evaluated;
+if(evaluated0.dynamicProps){
+evaluated0.props = undefined;
+}
+if(evaluated0.dynamicItems){
+evaluated0.items = undefined;
+}
+if(data && typeof data == "object" && !Array.isArray(data)){
+if(data.id === undefined){
+const err0 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "id"},message:"must have required property '"+"id"+"'"};
+if(vErrors === null){
+vErrors = [err0];
+}
+else {
+vErrors.push(err0);
+}
+errors++;
+}
+if(data.number === undefined){
+const err1 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "number"},message:"must have required property '"+"number"+"'"};
+if(vErrors === null){
+vErrors = [err1];
+}
+else {
+vErrors.push(err1);
+}
+errors++;
+}
+if(data.title === undefined){
+const err2 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "title"},message:"must have required property '"+"title"+"'"};
+if(vErrors === null){
+vErrors = [err2];
+}
+else {
+vErrors.push(err2);
+}
+errors++;
+}
+if(data.action === undefined){
+const err3 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "action"},message:"must have required property '"+"action"+"'"};
+if(vErrors === null){
+vErrors = [err3];
+}
+else {
+vErrors.push(err3);
+}
+errors++;
+}
+if(data.kind === undefined){
+const err4 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "kind"},message:"must have required property '"+"kind"+"'"};
+if(vErrors === null){
+vErrors = [err4];
+}
+else {
+vErrors.push(err4);
+}
+errors++;
+}
+if(data.otherwise === undefined){
+const err5 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "otherwise"},message:"must have required property '"+"otherwise"+"'"};
+if(vErrors === null){
+vErrors = [err5];
+}
+else {
+vErrors.push(err5);
+}
+errors++;
+}
+if(data.procedure === undefined){
+const err6 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "procedure"},message:"must have required property '"+"procedure"+"'"};
+if(vErrors === null){
+vErrors = [err6];
+}
+else {
+vErrors.push(err6);
+}
+errors++;
+}
+if(data.version === undefined){
+const err7 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "version"},message:"must have required property '"+"version"+"'"};
+if(vErrors === null){
+vErrors = [err7];
+}
+else {
+vErrors.push(err7);
+}
+errors++;
+}
+if(data.takes === undefined){
+const err8 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "takes"},message:"must have required property '"+"takes"+"'"};
+if(vErrors === null){
+vErrors = [err8];
+}
+else {
+vErrors.push(err8);
+}
+errors++;
+}
+if(data.finds === undefined){
+const err9 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "finds"},message:"must have required property '"+"finds"+"'"};
+if(vErrors === null){
+vErrors = [err9];
+}
+else {
+vErrors.push(err9);
+}
+errors++;
+}
+for(const key0 in data){
+if(!(func1.call(schema73.properties, key0))){
+const err10 = {instancePath,schemaPath:"#/additionalProperties",keyword:"additionalProperties",params:{additionalProperty: key0},message:"must NOT have additional properties"};
+if(vErrors === null){
+vErrors = [err10];
+}
+else {
+vErrors.push(err10);
+}
+errors++;
+}
+}
+if(data.kind !== undefined){
+if("call" !== data.kind){
+const err11 = {instancePath:instancePath+"/kind",schemaPath:"#/properties/kind/const",keyword:"const",params:{allowedValue: "call"},message:"must be equal to constant"};
+if(vErrors === null){
+vErrors = [err11];
+}
+else {
+vErrors.push(err11);
+}
+errors++;
+}
+}
+if(data.id !== undefined){
+if(!(validate84(data.id, {instancePath:instancePath+"/id",parentData:data,parentDataProperty:"id",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate84.errors : vErrors.concat(validate84.errors);
+errors = vErrors.length;
+}
+}
+if(data.number !== undefined){
+let data2 = data.number;
+if(typeof data2 === "string"){
+if(func2(data2) > 8){
+const err12 = {instancePath:instancePath+"/number",schemaPath:"#/properties/number/maxLength",keyword:"maxLength",params:{limit: 8},message:"must NOT have more than 8 characters"};
+if(vErrors === null){
+vErrors = [err12];
+}
+else {
+vErrors.push(err12);
+}
+errors++;
+}
+if(!pattern9.test(data2)){
+const err13 = {instancePath:instancePath+"/number",schemaPath:"#/properties/number/pattern",keyword:"pattern",params:{pattern: "^[A-Za-z0-9]+$"},message:"must match pattern \""+"^[A-Za-z0-9]+$"+"\""};
+if(vErrors === null){
+vErrors = [err13];
+}
+else {
+vErrors.push(err13);
+}
+errors++;
+}
+}
+else {
+const err14 = {instancePath:instancePath+"/number",schemaPath:"#/properties/number/type",keyword:"type",params:{type: "string"},message:"must be string"};
+if(vErrors === null){
+vErrors = [err14];
+}
+else {
+vErrors.push(err14);
+}
+errors++;
+}
+}
+if(data.title !== undefined){
+if(!(validate55(data.title, {instancePath:instancePath+"/title",parentData:data,parentDataProperty:"title",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate55.errors : vErrors.concat(validate55.errors);
+errors = vErrors.length;
+}
+}
+if(data.action !== undefined){
+if(!(validate61(data.action, {instancePath:instancePath+"/action",parentData:data,parentDataProperty:"action",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate61.errors : vErrors.concat(validate61.errors);
+errors = vErrors.length;
+}
+}
+if(data.short !== undefined){
+if(!(validate55(data.short, {instancePath:instancePath+"/short",parentData:data,parentDataProperty:"short",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate55.errors : vErrors.concat(validate55.errors);
+errors = vErrors.length;
+}
+}
+if(data.notes !== undefined){
+let data6 = data.notes;
+if(Array.isArray(data6)){
+if(data6.length > 10){
+const err15 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/maxItems",keyword:"maxItems",params:{limit: 10},message:"must NOT have more than 10 items"};
+if(vErrors === null){
+vErrors = [err15];
+}
+else {
+vErrors.push(err15);
+}
+errors++;
+}
+if(data6.length < 1){
+const err16 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+if(vErrors === null){
+vErrors = [err16];
+}
+else {
+vErrors.push(err16);
+}
+errors++;
+}
+const len0 = data6.length;
+for(let i0=0; i0<len0; i0++){
+if(!(validate57(data6[i0], {instancePath:instancePath+"/notes/" + i0,parentData:data6,parentDataProperty:i0,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err17 = {instancePath:instancePath+"/notes",schemaPath:"#/properties/notes/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err17];
+}
+else {
+vErrors.push(err17);
+}
+errors++;
+}
+}
+if(data.why !== undefined){
+if(!(validate57(data.why, {instancePath:instancePath+"/why",parentData:data,parentDataProperty:"why",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate57.errors : vErrors.concat(validate57.errors);
+errors = vErrors.length;
+}
+}
+if(data.cautions !== undefined){
+let data9 = data.cautions;
+if(Array.isArray(data9)){
+if(data9.length > 12){
+const err18 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+if(vErrors === null){
+vErrors = [err18];
+}
+else {
+vErrors.push(err18);
+}
+errors++;
+}
+const len1 = data9.length;
+for(let i1=0; i1<len1; i1++){
+if(!(validate92(data9[i1], {instancePath:instancePath+"/cautions/" + i1,parentData:data9,parentDataProperty:i1,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err19 = {instancePath:instancePath+"/cautions",schemaPath:"#/properties/cautions/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err19];
+}
+else {
+vErrors.push(err19);
+}
+errors++;
+}
+}
+if(data.picture !== undefined){
+if(!(validate120(data.picture, {instancePath:instancePath+"/picture",parentData:data,parentDataProperty:"picture",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate120.errors : vErrors.concat(validate120.errors);
+errors = vErrors.length;
+}
+}
+if(data.disturbs !== undefined){
+let data12 = data.disturbs;
+if(Array.isArray(data12)){
+if(data12.length > 12){
+const err20 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/maxItems",keyword:"maxItems",params:{limit: 12},message:"must NOT have more than 12 items"};
+if(vErrors === null){
+vErrors = [err20];
+}
+else {
+vErrors.push(err20);
+}
+errors++;
+}
+if(data12.length < 1){
+const err21 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
+if(vErrors === null){
+vErrors = [err21];
+}
+else {
+vErrors.push(err21);
+}
+errors++;
+}
+const len2 = data12.length;
+for(let i2=0; i2<len2; i2++){
+if(!(validate125(data12[i2], {instancePath:instancePath+"/disturbs/" + i2,parentData:data12,parentDataProperty:i2,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate125.errors : vErrors.concat(validate125.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err22 = {instancePath:instancePath+"/disturbs",schemaPath:"#/properties/disturbs/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err22];
+}
+else {
+vErrors.push(err22);
+}
+errors++;
+}
+}
+if(data.stay !== undefined){
+if(typeof data.stay !== "boolean"){
+const err23 = {instancePath:instancePath+"/stay",schemaPath:"#/properties/stay/type",keyword:"type",params:{type: "boolean"},message:"must be boolean"};
+if(vErrors === null){
+vErrors = [err23];
+}
+else {
+vErrors.push(err23);
+}
+errors++;
+}
+}
+if(data.release !== undefined){
+if(!(validate130(data.release, {instancePath:instancePath+"/release",parentData:data,parentDataProperty:"release",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate130.errors : vErrors.concat(validate130.errors);
+errors = vErrors.length;
+}
+}
+if(data.verify !== undefined){
+if(!(validate133(data.verify, {instancePath:instancePath+"/verify",parentData:data,parentDataProperty:"verify",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate133.errors : vErrors.concat(validate133.errors);
+errors = vErrors.length;
+}
+}
+if(data.next !== undefined){
+let data17 = data.next;
+if(Array.isArray(data17)){
+if(data17.length > 30){
+const err24 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+if(vErrors === null){
+vErrors = [err24];
+}
+else {
+vErrors.push(err24);
+}
+errors++;
+}
+const len3 = data17.length;
+for(let i3=0; i3<len3; i3++){
+if(!(validate136(data17[i3], {instancePath:instancePath+"/next/" + i3,parentData:data17,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate136.errors : vErrors.concat(validate136.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err25 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err25];
+}
+else {
+vErrors.push(err25);
+}
+errors++;
+}
+}
+if(data.otherwise !== undefined){
+if(!(validate106(data.otherwise, {instancePath:instancePath+"/otherwise",parentData:data,parentDataProperty:"otherwise",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate106.errors : vErrors.concat(validate106.errors);
+errors = vErrors.length;
+}
+}
+if(data.results !== undefined){
+let data20 = data.results;
+if(Array.isArray(data20)){
+if(data20.length > 30){
+const err26 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+if(vErrors === null){
+vErrors = [err26];
+}
+else {
+vErrors.push(err26);
+}
+errors++;
+}
+const len4 = data20.length;
+for(let i4=0; i4<len4; i4++){
+if(!(validate143(data20[i4], {instancePath:instancePath+"/results/" + i4,parentData:data20,parentDataProperty:i4,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate143.errors : vErrors.concat(validate143.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err27 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err27];
+}
+else {
+vErrors.push(err27);
+}
+errors++;
+}
+}
+if(data.procedure !== undefined){
+if(!(validate53(data.procedure, {instancePath:instancePath+"/procedure",parentData:data,parentDataProperty:"procedure",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate53.errors : vErrors.concat(validate53.errors);
+errors = vErrors.length;
+}
+}
+if(data.version !== undefined){
+let data23 = data.version;
+if(!(((typeof data23 == "number") && (!(data23 % 1) && !isNaN(data23))) && (isFinite(data23)))){
+const err28 = {instancePath:instancePath+"/version",schemaPath:"#/properties/version/type",keyword:"type",params:{type: "integer"},message:"must be integer"};
+if(vErrors === null){
+vErrors = [err28];
+}
+else {
+vErrors.push(err28);
+}
+errors++;
+}
+if((typeof data23 == "number") && (isFinite(data23))){
+if(data23 > 100000 || isNaN(data23)){
+const err29 = {instancePath:instancePath+"/version",schemaPath:"#/properties/version/maximum",keyword:"maximum",params:{comparison: "<=", limit: 100000},message:"must be <= 100000"};
+if(vErrors === null){
+vErrors = [err29];
+}
+else {
+vErrors.push(err29);
+}
+errors++;
+}
+if(data23 < 1 || isNaN(data23)){
+const err30 = {instancePath:instancePath+"/version",schemaPath:"#/properties/version/minimum",keyword:"minimum",params:{comparison: ">=", limit: 1},message:"must be >= 1"};
+if(vErrors === null){
+vErrors = [err30];
+}
+else {
+vErrors.push(err30);
+}
+errors++;
+}
+}
+}
+if(data.takes !== undefined){
+let data24 = data.takes;
+if(Array.isArray(data24)){
+if(data24.length > 30){
+const err31 = {instancePath:instancePath+"/takes",schemaPath:"#/properties/takes/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+if(vErrors === null){
+vErrors = [err31];
+}
+else {
+vErrors.push(err31);
+}
+errors++;
+}
+const len5 = data24.length;
+for(let i5=0; i5<len5; i5++){
+if(!(validate461(data24[i5], {instancePath:instancePath+"/takes/" + i5,parentData:data24,parentDataProperty:i5,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate461.errors : vErrors.concat(validate461.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err32 = {instancePath:instancePath+"/takes",schemaPath:"#/properties/takes/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err32];
+}
+else {
+vErrors.push(err32);
+}
+errors++;
+}
+}
+if(data.finds !== undefined){
+let data26 = data.finds;
+if(Array.isArray(data26)){
+if(data26.length > 30){
+const err33 = {instancePath:instancePath+"/finds",schemaPath:"#/properties/finds/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
+if(vErrors === null){
+vErrors = [err33];
+}
+else {
+vErrors.push(err33);
+}
+errors++;
+}
+const len6 = data26.length;
+for(let i6=0; i6<len6; i6++){
+if(!(validate469(data26[i6], {instancePath:instancePath+"/finds/" + i6,parentData:data26,parentDataProperty:i6,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate469.errors : vErrors.concat(validate469.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err34 = {instancePath:instancePath+"/finds",schemaPath:"#/properties/finds/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err34];
+}
+else {
+vErrors.push(err34);
+}
+errors++;
+}
+}
+}
+else {
+const err35 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
+if(vErrors === null){
+vErrors = [err35];
+}
+else {
+vErrors.push(err35);
+}
+errors++;
+}
+validate445.errors = vErrors;
+return errors === 0;
+}
+validate445.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 
 function validate111(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
@@ -8205,8 +11307,8 @@ errors = vErrors.length;
 var props0 = true;
 }
 else if(tag0 === "action"){
-if(!(validate149(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate149.errors : vErrors.concat(validate149.errors);
+if(!(validate157(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate157.errors : vErrors.concat(validate157.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -8214,8 +11316,8 @@ props0 = true;
 }
 }
 else if(tag0 === "reading"){
-if(!(validate160(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate160.errors : vErrors.concat(validate160.errors);
+if(!(validate172(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate172.errors : vErrors.concat(validate172.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -8223,8 +11325,8 @@ props0 = true;
 }
 }
 else if(tag0 === "choice"){
-if(!(validate197(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate197.errors : vErrors.concat(validate197.errors);
+if(!(validate217(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate217.errors : vErrors.concat(validate217.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -8232,8 +11334,8 @@ props0 = true;
 }
 }
 else if(tag0 === "listen"){
-if(!(validate215(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate215.errors : vErrors.concat(validate215.errors);
+if(!(validate240(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate240.errors : vErrors.concat(validate240.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -8241,8 +11343,8 @@ props0 = true;
 }
 }
 else if(tag0 === "hold"){
-if(!(validate251(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate251.errors : vErrors.concat(validate251.errors);
+if(!(validate280(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate280.errors : vErrors.concat(validate280.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -8250,8 +11352,8 @@ props0 = true;
 }
 }
 else if(tag0 === "wait"){
-if(!(validate263(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate263.errors : vErrors.concat(validate263.errors);
+if(!(validate298(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate298.errors : vErrors.concat(validate298.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -8259,8 +11361,8 @@ props0 = true;
 }
 }
 else if(tag0 === "codes"){
-if(!(validate278(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate278.errors : vErrors.concat(validate278.errors);
+if(!(validate317(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate317.errors : vErrors.concat(validate317.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -8268,8 +11370,8 @@ props0 = true;
 }
 }
 else if(tag0 === "drive"){
-if(!(validate293(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate293.errors : vErrors.concat(validate293.errors);
+if(!(validate336(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate336.errors : vErrors.concat(validate336.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -8277,8 +11379,8 @@ props0 = true;
 }
 }
 else if(tag0 === "compute"){
-if(!(validate311(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate311.errors : vErrors.concat(validate311.errors);
+if(!(validate358(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate358.errors : vErrors.concat(validate358.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -8286,8 +11388,8 @@ props0 = true;
 }
 }
 else if(tag0 === "restore"){
-if(!(validate322(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate322.errors : vErrors.concat(validate322.errors);
+if(!(validate373(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate373.errors : vErrors.concat(validate373.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -8295,8 +11397,35 @@ props0 = true;
 }
 }
 else if(tag0 === "finding"){
-if(!(validate333(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate333.errors : vErrors.concat(validate333.errors);
+if(!(validate388(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate388.errors : vErrors.concat(validate388.errors);
+errors = vErrors.length;
+}
+if(props0 !== true){
+props0 = true;
+}
+}
+else if(tag0 === "ramp"){
+if(!(validate408(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate408.errors : vErrors.concat(validate408.errors);
+errors = vErrors.length;
+}
+if(props0 !== true){
+props0 = true;
+}
+}
+else if(tag0 === "photo"){
+if(!(validate427(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate427.errors : vErrors.concat(validate427.errors);
+errors = vErrors.length;
+}
+if(props0 !== true){
+props0 = true;
+}
+}
+else if(tag0 === "call"){
+if(!(validate445(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate445.errors : vErrors.concat(validate445.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){

@@ -1,4 +1,5 @@
-import type { Band, Channel, Found, ProcedureDocument, Quantity, Step } from '../procedure-document';
+import type { Band, Channel, FoundQuantity, ProcedureDocument, Quantity, Step } from '../procedure-document';
+import { channelsOf, findsOf, isFoundQuantity, placedReadsOf, resultsOf, takenOf } from '../step-parts';
 
 /** A quantity with a band, the role of the gear that shows it, and where it stands. */
 export interface BandedQuantity {
@@ -20,44 +21,31 @@ export function bandedQuantities(document: ProcedureDocument): readonly BandedQu
   );
 }
 
-interface Placed {
+interface PlacedQuantity {
   readonly quantity: Quantity;
   readonly gear?: string | undefined;
   readonly pointer: string;
 }
 
-function quantitiesOf(step: Step, pointer: string): readonly Placed[] {
-  const results =
-    step.kind === 'finding'
-      ? []
-      : (step.results ?? []).map((quantity, index): Placed => ({ quantity, pointer: `${pointer}/results/${index}` }));
-  switch (step.kind) {
-    case 'reading':
-    case 'wait':
-      return [
-        ...step.reads.map((quantity, index): Placed => {
-          // What is known by a way is not read off the gear directly.
-          const gear = quantity.ways === undefined ? quantity.gear : undefined;
-          return { quantity, gear, pointer: `${pointer}/reads/${index}` };
-        }),
-        ...results,
-      ];
-    case 'listen':
-      return [
-        ...step.finds.flatMap((found, index): Placed[] =>
-          'unit' in found
-            ? [{ quantity: found, gear: channelGear(found, step.channels), pointer: `${pointer}/finds/${index}` }]
-            : [],
-        ),
-        ...results,
-      ];
-    default:
-      return results;
-  }
+function quantitiesOf(step: Step, pointer: string): readonly PlacedQuantity[] {
+  return [
+    ...placedReadsOf(step).map(({ part, pointer: place }): PlacedQuantity => {
+      // What is known by a way is not read off the gear directly.
+      const gear = part.ways === undefined ? part.gear : undefined;
+      return { quantity: part, gear, pointer: `${pointer}/${place}` };
+    }),
+    ...findsOf(step).flatMap((found, index): PlacedQuantity[] =>
+      isFoundQuantity(found)
+        ? [{ quantity: found, gear: channelGear(found, channelsOf(step)), pointer: `${pointer}/finds/${index}` }]
+        : [],
+    ),
+    ...takenOf(step).map((quantity, index): PlacedQuantity => ({ quantity, pointer: `${pointer}/takes/${index}` })),
+    ...resultsOf(step).map((quantity, index): PlacedQuantity => ({ quantity, pointer: `${pointer}/results/${index}` })),
+  ];
 }
 
 /** Only what is a reading of one channel has that channel's resolution. */
-function channelGear(found: Found, channels: readonly Channel[]): string | undefined {
+function channelGear(found: FoundQuantity, channels: readonly Channel[]): string | undefined {
   if (found.what !== 'seal-point' && found.what !== 'highest-gauge') return undefined;
   return channels.find(({ name }) => name === 'gauge')?.gear;
 }

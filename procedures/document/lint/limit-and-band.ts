@@ -60,8 +60,9 @@ function beyond(
 
 function targetsBeyond(limit: Limit, holds: Holds, { document }: LintSubject): readonly LintFinding[] {
   return document.steps.flatMap((step, place): LintFinding[] => {
-    const gauge = step.kind === 'listen' ? step.channels.find(({ name }) => name === 'gauge') : undefined;
-    if (step.kind !== 'listen' || gauge === undefined || !limit.of.includes('gauge')) return [];
+    if (step.kind !== 'listen' && step.kind !== 'ramp') return [];
+    const gauge = step.channels.find(({ name }) => name === 'gauge');
+    if (gauge === undefined || !limit.of.includes('gauge')) return [];
     if (unitKind(gauge.unit) !== 'pressure' || holds(toBase(step.target, gauge.unit)) !== false) return [];
     const message = `${stepWords(step)}: raises to ${step.target} ${gauge.unit}, beyond the limit ${limit.id} (${limit.holds}). Lower the target.`;
     return [{ rule: 'limit-and-band', step: step.id, pointer: `/steps/${place}/target`, message }];

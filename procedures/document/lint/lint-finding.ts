@@ -1,5 +1,6 @@
 import type { Expression } from '../expression/expression';
 import type { ProcedureDocument, Step } from '../procedure-document';
+import type { PublishedVersions } from './called';
 import type { RunGraph } from './run-graph';
 
 export type LintRule =
@@ -18,7 +19,8 @@ export type LintRule =
   | 'limit-and-band'
   | 'picture-parts'
   | 'one-connective'
-  | 'cautions';
+  | 'cautions'
+  | 'called';
 
 /** One thing that keeps a document from being published, or that its author should know. */
 export interface LintFinding {
@@ -40,6 +42,8 @@ export interface LintSubject {
   readonly graphs: readonly RunGraph[];
   /** The parts that each drawn sheet has; without it pictures are not checked against the drawings. */
   readonly parts?: Readonly<Record<string, readonly string[]>>;
+  /** What may be called; without it calls are not held against what is published. */
+  readonly published?: PublishedVersions;
 }
 
 /** A step as a lead names it. */

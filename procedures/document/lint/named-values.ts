@@ -1,23 +1,24 @@
 import type { ProcedureDocument, Step } from '../procedure-document';
+import { findsOf, isFoundQuantity, isFoundTruth, readsOf, resultsOf, takenOf } from '../step-parts';
 
 /**
  * The names that a step asks for: once it was passed, they can have a value. Whether they do is the run's: what cannot
  * be measured stays without.
  */
 export function askedFor(step: Step): readonly string[] {
-  switch (step.kind) {
-    case 'reading':
-    case 'wait':
-      return step.reads.flatMap(({ name, ways }) => [name, ...(ways ?? []).flatMap(({ entry }) => entry?.name ?? [])]);
-    case 'listen':
-      return [step.name, ...step.finds.flatMap((found) => ('unit' in found ? found.name : []))];
-    case 'choice':
-    case 'codes':
-    case 'drive':
-      return [step.name];
-    default:
-      return [];
-  }
+  return [
+    ...readsOf(step).flatMap(({ name, ways }) => [name, ...(ways ?? []).flatMap(({ entry }) => entry?.name ?? [])]),
+    ...findsOf(step)
+      .filter(isFoundQuantity)
+      .map(({ name }) => name),
+    ...takenOf(step).map(({ name }) => name),
+    ...namedAsWhole(step),
+  ];
+}
+
+/** What a step keeps as a whole under its own name. */
+function namedAsWhole(step: Step): readonly string[] {
+  return 'name' in step ? [step.name] : [];
 }
 
 /** The truths that a step can set; they are false until then. */
@@ -30,7 +31,9 @@ export function truthsSetBy(step: Step): readonly string[] {
     case 'codes':
       return step.newCodes === undefined ? [] : [step.newCodes];
     case 'listen':
-      return step.finds.flatMap((found) => ('unit' in found ? [] : found.name));
+      return step.finds.filter(isFoundTruth).map(({ name }) => name);
+    case 'call':
+      return step.finds.map(({ name }) => name);
     default:
       return [];
   }
@@ -45,8 +48,7 @@ export function startingNames(document: ProcedureDocument): readonly string[] {
 
 /** All names that a step can give a value to, its results included. */
 export function valueNamesOf(step: Step): readonly string[] {
-  const results = step.kind === 'finding' ? [] : (step.results ?? []).map(({ name }) => name);
-  return [...askedFor(step), ...results];
+  return [...askedFor(step), ...resultsOf(step).map(({ name }) => name)];
 }
 
 const placeholder = /\{([^{}]*)\}/g;

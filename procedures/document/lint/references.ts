@@ -1,11 +1,19 @@
 import { channelNames } from './channel-names';
+import { valueNamesOf } from './named-values';
 import { stepWords, type LintFinding, type LintSubject } from './lint-finding';
 import { wayName, waysOf } from './ways';
 import type { ProcedureDocument, Step } from '../procedure-document';
+import { channelsOf, placedReadsOf, readsOf } from '../step-parts';
 
 /** Ids, roles and names that lead nowhere, or that two parts share. */
 export function brokenReferences({ document }: LintSubject): readonly LintFinding[] {
-  return [...sharedIds(document), ...danglingWays(document), ...missingGear(document), ...unknownNames(document)];
+  return [
+    ...sharedIds(document),
+    ...danglingWays(document),
+    ...missingGear(document),
+    ...unknownNames(document),
+    ...endlessValidity(document),
+  ];
 }
 
 function sharedIds(document: ProcedureDocument): readonly LintFinding[] {
@@ -91,16 +99,31 @@ function missingGear(document: ProcedureDocument): readonly LintFinding[] {
 }
 
 function gearOf(step: Step): readonly string[] {
-  if (step.kind === 'listen') return step.channels.flatMap(({ gear }) => gear ?? []);
-  if (step.kind !== 'reading' && step.kind !== 'wait') return [];
-  return step.reads.flatMap(({ gear, ways }) => [
-    ...(gear === undefined ? [] : [gear]),
-    ...(ways ?? []).flatMap(({ entry }) => entry?.gear ?? []),
-  ]);
+  return [
+    ...channelsOf(step).flatMap(({ gear }) => gear ?? []),
+    ...readsOf(step).flatMap(({ gear, ways }) => [
+      ...(gear === undefined ? [] : [gear]),
+      ...(ways ?? []).flatMap(({ entry }) => entry?.gear ?? []),
+    ]),
+  ];
+}
+
+/** A reading cannot end with a step that is not there. */
+function endlessValidity(document: ProcedureDocument): readonly LintFinding[] {
+  const steps = new Set(document.steps.map(({ id }) => id));
+  return document.steps.flatMap((step, place) =>
+    placedReadsOf(step).flatMap(({ part, pointer }) =>
+      (part.validity?.until ?? []).flatMap((id): LintFinding[] => {
+        if (steps.has(id)) return [];
+        const message = `${stepWords(step)}: ${part.name} holds until \`${id}\`, and no step is called that.`;
+        return [{ rule: 'references', step: step.id, pointer: `/steps/${place}/${pointer}/validity`, message }];
+      }),
+    ),
+  );
 }
 
 function unknownNames(document: ProcedureDocument): readonly LintFinding[] {
-  const pressures = new Set([...channelNames, ...document.steps.flatMap(pressureNames)]);
+  const pressures = new Set([...channelNames, ...document.steps.flatMap(valueNamesOf)]);
   const limits = document.limits.flatMap((limit, place) =>
     limit.of.flatMap((name): LintFinding[] => {
       if (pressures.has(name)) return [];
@@ -124,21 +147,4 @@ function unknownNames(document: ProcedureDocument): readonly LintFinding[] {
     return [{ ...at, message: `${stepWords(step)}: \`newCodes\` needs \`comparedWith\`: name the codes step before.` }];
   });
   return [...limits, ...comparisons];
-}
-
-function pressureNames(step: Step): readonly string[] {
-  if (step.kind === 'finding') return [];
-  const results = (step.results ?? []).map(({ name }) => name);
-  switch (step.kind) {
-    case 'reading':
-    case 'wait':
-      return [
-        ...results,
-        ...step.reads.flatMap(({ name, ways }) => [name, ...(ways ?? []).flatMap(({ entry }) => entry?.name ?? [])]),
-      ];
-    case 'listen':
-      return [...results, ...step.finds.map(({ name }) => name)];
-    default:
-      return results;
-  }
 }

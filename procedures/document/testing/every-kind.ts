@@ -1,5 +1,6 @@
 import type { ProcedureDocument } from '../procedure-document';
 import { everyKindFindings } from './every-kind-findings';
+import { everyKindMoreSteps } from './every-kind-more-steps';
 import { everyKindSteps } from './every-kind-steps';
 
 /**
@@ -65,5 +66,5 @@ export const everyKind: ProcedureDocument = {
     makeSafe: ['Close the supply.', 'Open the vent.'],
     exit: { to: 'restore', because: 'the test was stopped', verdict: 'notCompleted' },
   },
-  steps: [...everyKindSteps, ...everyKindFindings],
+  steps: [...everyKindSteps, ...everyKindFindings, ...everyKindMoreSteps],
 };
