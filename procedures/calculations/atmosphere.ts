@@ -1,4 +1,5 @@
 import { requireInRange } from './argument-range';
+import { dryAirGasConstant } from './dry-air';
 
 // ISO 2533:1975, clause 2 (U.S. Standard Atmosphere 1976 agrees below 32 km).
 /** Nominal radius of the earth, which turns geometric into geopotential altitude. */
@@ -7,8 +8,6 @@ const seaLevelKelvin = 288.15;
 const lapseKelvinPerM = 0.0065;
 const seaLevelKpa = 101.325;
 const standardGravityMPerS2 = 9.80665;
-/** Specific gas constant of dry air, J/(kg K), as ISO 2533 has it. */
-const dryAirGasConstant = 287.05287;
 /** g0 / (R L) = 5.255880. */
 const pressureExponent = standardGravityMPerS2 / (dryAirGasConstant * lapseKelvinPerM);
 
