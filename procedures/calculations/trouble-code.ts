@@ -1,13 +1,7 @@
-import { requireInRange } from './argument-range';
+import { requireByte } from './byte';
 import { genericTroubleCodes } from './generic-trouble-codes';
 
 const systems = 'PCBU';
-
-const requireByte = (name: string, value: number): number => {
-  requireInRange(name, value, { low: 0, high: 255 });
-  if (!Number.isInteger(value)) throw new RangeError(`${name} is ${value}; allowed: a whole number from 0 to 255`);
-  return value;
-};
 
 /**
  * Gives the trouble code of two bytes as it is written, or undefined for 00 00, which only fills a message up.
