@@ -3,6 +3,7 @@ import type { Step } from '../../../procedures/document';
 import type { RunCommand, Series } from '../../../procedures/engine';
 import type { GearItem } from '../core/wire';
 import { CodesEntry } from './codes/codes-entry';
+import { entryField } from './entry-draft';
 import { FindingEntry } from './finding/finding-entry';
 import { CautionGate } from './frame/caution-gate';
 import { HandSide } from './frame/hand-side';
@@ -57,8 +58,6 @@ export class CurrentStepView {
   readonly kept = input<Series>();
   /** A log that the practice bench offers. */
   readonly offered = input<{ readonly fileName: string; readonly path: string }>();
-  /** What was entered here and is not recorded yet. */
-  readonly draft = input<unknown>();
   readonly problem = input<RunProblem>();
   readonly isBusy = input(false);
   readonly commanded = output<RunCommand>();
@@ -66,9 +65,10 @@ export class CurrentStepView {
   readonly finished = output<ListenDone>();
   readonly wouldGoTo = output<string | undefined>();
   readonly holdOver = output();
-  readonly drafted = output<unknown>();
   readonly leftForBench = output();
 
+  /** What is edited in the write-up and not kept yet. */
+  protected readonly writeUp = entryField<object>(this.run, 'write-up', {});
   /** The caution that has to be acknowledged before the step's entry unlocks. */
   protected readonly caution = computed(() => {
     const step = this.step();

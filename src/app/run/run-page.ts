@@ -10,6 +10,7 @@ import {
   linkedSignal,
   signal,
 } from '@angular/core';
+import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
 import { Router } from '@angular/router';
 import type { Step } from '../../../procedures/document';
 import type { RunCommand } from '../../../procedures/engine';
@@ -96,7 +97,7 @@ export class RunPage {
   protected readonly holding = inject(HandSetting);
   protected readonly theme = inject(Theme);
   protected readonly gear = inject(RunGear);
-  protected readonly draft = inject(EntryDraft);
+  private readonly draft = inject(EntryDraft);
   private readonly primary = inject(PrimaryAction);
   private readonly tones = inject(Tones);
   private readonly sync = inject(Sync);
@@ -174,6 +175,13 @@ export class RunPage {
   constructor() {
     // Towards the outside: the address names the run, and leaving the page gives it up.
     effect(() => void this.store.load(this.runId()));
+    effect(() => void this.draft.recall(this.runId()));
+    effect(() => {
+      const run = this.run();
+      if (run !== undefined && !this.store.isElsewhere()) this.draft.tidy(run);
+    });
+    // A refusal stands until what was refused is changed.
+    this.draft.changed.pipe(takeUntilDestroyed()).subscribe(() => this.store.forgetProblem());
     effect(() => {
       if (this.store.problem()?.field === 'gear' && this.step()?.kind !== 'start') this.sheet.set({ show: 'gear' });
     });
@@ -256,10 +264,7 @@ export class RunPage {
     this.sheet.set(undefined);
     const tone = after === undefined ? undefined : toneAfter(before, after);
     if (tone !== undefined) this.tones.play(tone);
-    if (after?.status === 'closed') {
-      this.sync.soon();
-      void this.draft.forget();
-    }
+    if (after?.status === 'closed') this.sync.soon();
   }
 
   private noteVisibility(): void {

@@ -1,5 +1,6 @@
 import { TestBed, type ComponentFixture } from '@angular/core/testing';
 import type { RunCommand } from '../../../../procedures/engine';
+import { draftsForSpecs } from '../testing/drafts-for-specs';
 import { stepOf, viewOf, walkedTo } from '../testing/run-for-specs';
 import { buttonNamed, elementOf, hasButton, textOf } from '../testing/shown-page';
 import { CodesEntry } from './codes-entry';
@@ -7,10 +8,10 @@ import { CodesEntry } from './codes-entry';
 /** At the codes of a visit that lists P0068. */
 async function shown() {
   const walk = walkedTo('codes-before');
+  TestBed.configureTestingModule({ providers: draftsForSpecs() });
   const fixture = TestBed.createComponent(CodesEntry);
   const commands: RunCommand[] = [];
   fixture.componentInstance.commanded.subscribe((command) => commands.push(command));
-  fixture.componentInstance.drafted.subscribe((codes) => fixture.componentRef.setInput('draft', codes));
   fixture.componentRef.setInput('run', viewOf(walk));
   fixture.componentRef.setInput('step', stepOf(walk, 'codes'));
   await fixture.whenStable();

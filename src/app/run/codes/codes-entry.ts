@@ -1,6 +1,7 @@
-import { ChangeDetectionStrategy, Component, computed, input, linkedSignal, output, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, linkedSignal } from '@angular/core';
 import type { TroubleCodeEntry } from '../../../../procedures/engine';
 import { codeWords } from '../../shared/trouble-code-words';
+import { entryField } from '../entry-draft';
 import { BigAction } from '../frame/big-action';
 import { HandSide } from '../frame/hand-side';
 import { WideSide } from '../frame/wide-side';
@@ -19,23 +20,16 @@ type Status = TroubleCodeEntry['status'];
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class CodesEntry extends StepEntry<'codes'> {
-  /** The list as it was left by a reload in the midst of it. */
-  readonly draft = input<unknown>();
-  /** The list as it stands now. */
-  readonly drafted = output<readonly TroubleCodeEntry[]>();
-
-  private readonly claim = computed(() => this.run().state.current?.claimedSeq);
-  protected readonly codes = computed<readonly TroubleCodeEntry[]>(() => codesIn(this.draft()));
-  /** The code that is being entered; undefined while the list is shown. */
-  protected readonly text = linkedSignal<number | undefined, string | undefined>({
-    source: this.claim,
-    computation: () => undefined,
-  });
-  protected readonly status = signal<Status>('stored');
-  protected readonly freezeFrame = signal('');
-  protected readonly isWhole = computed(() => isWholeCode(this.text() ?? ''));
-  protected readonly meaning = computed(() => codeWords(this.text() ?? ''));
-  protected readonly shown = computed(() => (this.text() ?? '').padEnd(5, '\u00b7'));
+  protected readonly codes = entryField<readonly TroubleCodeEntry[]>(this.run, 'codes', []);
+  /** Whether a code is being entered; otherwise the list is shown. */
+  protected readonly isTyping = entryField(this.run, 'is-typing', false);
+  /** The code that is being entered. */
+  protected readonly text = entryField(this.run, 'code', '');
+  protected readonly status = entryField<Status>(this.run, 'status', 'stored');
+  protected readonly freezeFrame = entryField(this.run, 'freeze-frame', '');
+  protected readonly isWhole = computed(() => isWholeCode(this.text()));
+  protected readonly meaning = computed(() => codeWords(this.text()));
+  protected readonly shown = computed(() => this.text().padEnd(5, '\u00b7'));
   protected readonly statuses: readonly Status[] = ['stored', 'pending', 'permanent'];
   /** Codes that are known of already: those of the visit, and those of the step that this one is compared with. */
   protected readonly known = computed(() => {
@@ -47,10 +41,7 @@ export class CodesEntry extends StepEntry<'codes'> {
   });
 
   /** Known codes that were looked for and are not there, in this claim. */
-  protected readonly absent = linkedSignal<number | undefined, readonly string[]>({
-    source: this.claim,
-    computation: () => [],
-  });
+  protected readonly absent = entryField<readonly string[]>(this.run, 'absent', []);
   private readonly unanswered = computed(() => this.known().filter((code) => !this.absent().includes(code)));
   protected readonly isAnswered = computed(() => this.unanswered().length === 0);
   protected readonly primaryLabel = computed(() => {
@@ -67,7 +58,7 @@ export class CodesEntry extends StepEntry<'codes'> {
       : undefined,
   );
   private readonly wasTried = linkedSignal<number | undefined, boolean>({
-    source: this.claim,
+    source: () => this.run().state.current?.claimedSeq,
     computation: () => false,
   });
 
@@ -77,6 +68,7 @@ export class CodesEntry extends StepEntry<'codes'> {
     this.status.set('stored');
     this.freezeFrame.set('');
     this.text.set(code);
+    this.isTyping.set(true);
   }
 
   protected setAbsent(code: string, isAbsent: boolean): void {
@@ -84,24 +76,24 @@ export class CodesEntry extends StepEntry<'codes'> {
   }
 
   protected type(key: string): void {
-    this.text.update((text) => typeCode(text ?? '', key));
+    this.text.update((text) => typeCode(text, key));
   }
 
   protected erase(): void {
-    this.text.update((text) => (text === undefined || text === '' ? undefined : text.slice(0, -1)));
+    if (this.text() === '') this.isTyping.set(false);
+    else this.text.update((text) => text.slice(0, -1));
   }
 
   protected keep(): void {
     const code = this.text();
-    if (code === undefined) return;
     const freezeFrame = this.freezeFrame().trim();
     const entry = { code, status: this.status(), ...(freezeFrame === '' ? {} : { freezeFrame }) };
-    this.drafted.emit([...this.codes().filter((other) => other.code !== code), entry]);
-    this.text.set(undefined);
+    this.codes.update((codes) => [...codes.filter((other) => other.code !== code), entry]);
+    this.isTyping.set(false);
   }
 
   protected remove(code: string): void {
-    this.drafted.emit(this.codes().filter((other) => other.code !== code));
+    this.codes.update((codes) => codes.filter((other) => other.code !== code));
   }
 
   protected record(): void {
@@ -109,8 +101,4 @@ export class CodesEntry extends StepEntry<'codes'> {
     if (!this.isAnswered()) return;
     this.commanded.emit({ do: 'record-codes', codes: this.codes() });
   }
-}
-
-function codesIn(draft: unknown): readonly TroubleCodeEntry[] {
-  return Array.isArray(draft) ? (draft as readonly TroubleCodeEntry[]) : [];
 }

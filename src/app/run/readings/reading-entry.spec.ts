@@ -1,11 +1,13 @@
 import { TestBed, type ComponentFixture } from '@angular/core/testing';
 import type { RunCommand } from '../../../../procedures/engine';
 import { buttonNamed, elementOf, hasButton } from '../testing/shown-page';
+import { draftsForSpecs } from '../testing/drafts-for-specs';
 import { stepOf, viewOf, walkedTo } from '../testing/run-for-specs';
 import { ReadingEntry } from './reading-entry';
 
 async function shown(stepId: string, kind: 'reading' | 'wait' = 'reading') {
   const walk = walkedTo(stepId);
+  TestBed.configureTestingModule({ providers: draftsForSpecs() });
   const fixture = TestBed.createComponent(ReadingEntry);
   fixture.componentRef.setInput('run', viewOf(walk));
   fixture.componentRef.setInput('step', stepOf(walk, kind));
@@ -125,6 +127,6 @@ describe('ReadingEntry', () => {
     await fixture.whenStable();
     expect(elementOf(fixture).querySelector('.remark')?.textContent).toContain('Not yet.');
     expect(elementOf(fixture).querySelector('.notes')?.textContent).toContain('before: 14');
-    expect(hasButton(fixture, 'Take back')).toBe(true);
+    expect(hasButton(fixture, 'Undo last reading')).toBe(true);
   });
 });

@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, computed, effect, linkedSignal, output, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, effect, output, signal } from '@angular/core';
 import type { UnitName } from '../../../../procedures/calculations';
 import {
   parseDecimal,
@@ -9,6 +9,7 @@ import {
   takesNeeded,
   type NamedValue,
 } from '../../../../procedures/engine';
+import { entryField } from '../entry-draft';
 import { HandSide } from '../frame/hand-side';
 import { WideSide } from '../frame/wide-side';
 import { StepEntry } from '../step-entry';
@@ -45,20 +46,15 @@ export class ReadingEntry extends StepEntry<'reading' | 'wait'> {
     const quantity = this.quantity();
     return quantity === undefined ? [] : takesOf(this.run(), quantity.name);
   });
-  protected readonly wayId = linkedSignal<string | undefined, string | undefined>({
-    source: () => this.quantity()?.name,
-    computation: () => undefined,
-  });
+  private readonly chosenWay = entryField(this.run, 'way', '');
+  protected readonly wayId = computed(() => (this.chosenWay() === '' ? undefined : this.chosenWay()));
   protected readonly way = computed(() => this.quantity()?.ways?.find(({ id }) => id === this.wayId()));
   protected readonly target = computed(() => {
     const quantity = this.quantity();
     return quantity === undefined ? undefined : entryTarget(this.run().state, quantity, this.way());
   });
   /** What is typed. A new quantity, way or take begins empty; a refusal leaves it as it is. */
-  protected readonly text = linkedSignal<string, string>({
-    source: () => `${this.quantity()?.name} ${this.wayId()} ${this.takes().length} ${this.run().state.seq}`,
-    computation: () => '',
-  });
+  protected readonly text = entryField(this.run, () => `figure ${this.wayId() ?? ''}`, '');
   private readonly attempted = signal('');
 
   protected readonly preview = computed(() => {
@@ -124,11 +120,11 @@ export class ReadingEntry extends StepEntry<'reading' | 'wait'> {
     return isRead ? `Not yet. ${step.meanwhile}` : undefined;
   });
 
-  /** What the key beside the digits does: with nothing typed it leads back to the ways, or takes back the last take. */
+  /** What the key beside the digits does: with nothing typed it leads back to the ways, or undoes the last take. */
   protected readonly eraseLabel = computed(() => {
     if (this.text() !== '') return 'Erase';
     if (this.wayId() !== undefined) return 'Other way';
-    return this.takes().length > 0 ? 'Take back' : 'Erase';
+    return this.takes().length > 0 ? 'Undo last reading' : 'Erase';
   });
 
   constructor() {
@@ -147,7 +143,7 @@ export class ReadingEntry extends StepEntry<'reading' | 'wait'> {
   protected erase(): void {
     const name = this.quantity()?.name;
     if (this.text() !== '') this.press('erase');
-    else if (this.wayId() !== undefined) this.wayId.set(undefined);
+    else if (this.wayId() !== undefined) this.chosenWay.set('');
     else if (name !== undefined && this.takes().length > 0) {
       this.commanded.emit({ do: 'take-back', name, reason: 'taken back' });
     }
@@ -163,7 +159,7 @@ export class ReadingEntry extends StepEntry<'reading' | 'wait'> {
 
   /** A way that asks for nothing is recorded by its tile, with the figure that it gives. */
   protected chooseWay(id: string): void {
-    this.wayId.set(id);
+    this.chosenWay.set(id);
     const quantity = this.quantity();
     if (quantity === undefined || this.way()?.entry !== undefined) return;
     const { procedure, state } = this.run();

@@ -15,6 +15,7 @@ import { SheetHand } from './sheet-hand';
     <bay-sheet-hand>
       @if (need(); as need) {
         <bay-gear-choice
+          [run]="run()"
           [need]="need"
           [place]="place()"
           [of]="needs().length"

@@ -3,6 +3,8 @@ import type { RunCommand } from '../../../../procedures/engine';
 import { clockTime } from '../../core/time-words';
 import { ResultMark } from '../../shared/result-mark';
 import { resultWords } from '../../shared/result-words';
+import { entryField } from '../entry-draft';
+import { RefusalLine } from '../frame/refusal-line';
 import { PrimaryButton } from '../primary-action';
 import { JudgedLine } from '../readings/judged-line';
 import type { RunProblem, RunView } from '../run-view';
@@ -16,7 +18,7 @@ import { SheetWide } from './sheet-wide';
 /** An earlier step as it was left: nothing can be entered, and one control leads back. */
 @Component({
   selector: 'bay-look-back-sheet',
-  imports: [JudgedLine, PrimaryButton, ReasonField, ResultMark, SheetBody, SheetHand, SheetWide],
+  imports: [JudgedLine, PrimaryButton, ReasonField, RefusalLine, ResultMark, SheetBody, SheetHand, SheetWide],
   templateUrl: './look-back-sheet.html',
   styleUrl: './look-back-sheet.css',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -32,7 +34,12 @@ export class LookBackSheet {
   readonly commanded = output<RunCommand>();
 
   protected readonly isRedoing = signal(false);
-  protected readonly reason = signal('');
+  protected readonly reason = entryField(this.run, () => `again ${this.place()?.step.id ?? ''}`, '');
+  /** What was missing at the last tap on *Take it again*, and is missing still. */
+  protected readonly missing = computed(() =>
+    this.wasTried() && this.reason().trim() === '' ? 'Say why first.' : undefined,
+  );
+  private readonly wasTried = signal(false);
 
   private readonly places = computed(() => walkedBefore(this.run()));
   protected readonly place = computed(() => this.places()[this.bead()]);
@@ -57,6 +64,7 @@ export class LookBackSheet {
   });
 
   protected redo(step: string): void {
+    this.wasTried.set(true);
     const reason = this.reason().trim();
     if (reason !== '') this.commanded.emit({ do: 'redo', step, reason });
   }

@@ -16,12 +16,9 @@ import { ChangeDetectionStrategy, Component, input, model } from '@angular/core'
         id="reason"
         rows="2"
         [value]="text()"
-        [attr.aria-invalid]="refusal() ? 'true' : null"
+        [attr.aria-invalid]="isRefused() ? 'true' : null"
         (input)="text.set(words.value)"
       ></textarea>
-      @if (refusal(); as refusal) {
-        <p class="error" role="alert">{{ refusal }}</p>
-      }
     </div>
   `,
   styles: `
@@ -63,5 +60,6 @@ export class ReasonField {
   /** The usual reasons. */
   readonly usuals = input.required<readonly string[]>();
   readonly text = model.required<string>();
-  readonly refusal = input<string>();
+  /** Whether it was refused; why is said over the primary action. */
+  readonly isRefused = input(false);
 }

@@ -1,12 +1,14 @@
 import { TestBed } from '@angular/core/testing';
 import type { RunCommand } from '../../../../procedures/engine';
 import type { HonestWay } from '../frame/honest-ways';
+import { draftsForSpecs } from '../testing/drafts-for-specs';
 import { viewOf, walkedTo } from '../testing/run-for-specs';
 import { buttonNamed, hasButton, textOf } from '../testing/shown-page';
 import { WayOutSheet } from './way-out-sheet';
 
 async function shown(stepId: string, way: HonestWay) {
   const walk = walkedTo(stepId);
+  TestBed.configureTestingModule({ providers: draftsForSpecs() });
   const fixture = TestBed.createComponent(WayOutSheet);
   const commands: RunCommand[] = [];
   fixture.componentInstance.commanded.subscribe((command) => commands.push(command));

@@ -1,7 +1,9 @@
-import { ChangeDetectionStrategy, Component, computed, input, output, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
 import type { Step } from '../../../../procedures/document';
 import { renderTemplate, type RunCommand } from '../../../../procedures/engine';
+import { entryField } from '../entry-draft';
 import type { HonestWay } from '../frame/honest-ways';
+import { RefusalLine } from '../frame/refusal-line';
 import { PrimaryButton } from '../primary-action';
 import type { RunProblem, RunView } from '../run-view';
 import { ReasonField } from './reason-field';
@@ -44,7 +46,7 @@ const words: Readonly<Record<HonestWay, WayWords>> = {
 /** One of the three honest ways out: what it leads to, a reason, and two controls, one of them back. */
 @Component({
   selector: 'bay-way-out-sheet',
-  imports: [PrimaryButton, ReasonField, SheetBody, SheetHand],
+  imports: [PrimaryButton, ReasonField, RefusalLine, SheetBody, SheetHand],
   templateUrl: './way-out-sheet.html',
   styleUrl: './way-out-sheet.css',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -58,7 +60,7 @@ export class WayOutSheet {
   readonly commanded = output<RunCommand>();
   readonly left = output();
 
-  protected readonly reason = signal('');
+  protected readonly reason = entryField(this.run, () => this.way(), '', ['set-aside', 'lead-called']);
   protected readonly words = computed(() => words[this.way()]);
   /** Why the way is not open, where it is not. */
   protected readonly closed = computed(() => {

@@ -1,11 +1,13 @@
 import { TestBed } from '@angular/core/testing';
 import type { RunCommand } from '../../../../procedures/engine';
 import type { RunWalk } from '../../../../procedures/engine/testing/run-walk';
+import { draftsForSpecs } from '../testing/drafts-for-specs';
 import { viewOf, walkedTo } from '../testing/run-for-specs';
 import { buttonNamed, elementOf, textOf } from '../testing/shown-page';
 import { WhySheet } from './why-sheet';
 
 async function shown(walk: RunWalk) {
+  TestBed.configureTestingModule({ providers: draftsForSpecs() });
   const fixture = TestBed.createComponent(WhySheet);
   const commands: RunCommand[] = [];
   fixture.componentInstance.commanded.subscribe((command) => commands.push(command));

@@ -1,5 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, input, output, signal } from '@angular/core';
 import { exitsOf, shownUnit, type DecisionInput, type NamedExit, type RunCommand } from '../../../../procedures/engine';
+import { entryField } from '../entry-draft';
+import { RefusalLine } from '../frame/refusal-line';
 import { PrimaryButton } from '../primary-action';
 import type { RunProblem, RunView } from '../run-view';
 import { lastDecision } from '../walked-steps';
@@ -14,7 +16,7 @@ import { SheetWide } from './sheet-wide';
  */
 @Component({
   selector: 'bay-why-sheet',
-  imports: [PrimaryButton, ReasonField, SheetBody, SheetHand, SheetWide],
+  imports: [PrimaryButton, ReasonField, RefusalLine, SheetBody, SheetHand, SheetWide],
   templateUrl: './why-sheet.html',
   styleUrl: './why-sheet.css',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -27,16 +29,17 @@ export class WhySheet {
   readonly left = output();
 
   protected readonly isOverruling = signal(false);
-  protected readonly chosen = signal<string | undefined>(undefined);
-  protected readonly reason = signal('');
+  /** The exit that is taken instead; empty while none is chosen. */
+  protected readonly chosen = entryField(this.run, 'overruled-by', '');
+  protected readonly reason = entryField(this.run, 'overruled-because', '');
 
   /** What was missing at the last tap on *Take it*, and is missing still. */
   protected readonly missing = computed(() => {
     if (!this.wasTried()) return undefined;
-    if (this.chosen() === undefined) return 'Choose one of the ways above first.';
+    if (this.chosen() === '') return 'Choose one of the ways above first.';
     return this.reason().trim() === '' ? 'Say why this is right first.' : undefined;
   });
-  protected readonly isComplete = computed(() => this.chosen() !== undefined && this.reason().trim() !== '');
+  protected readonly isComplete = computed(() => this.chosen() !== '' && this.reason().trim() !== '');
   private readonly wasTried = signal(false);
 
   protected readonly decision = computed(() => lastDecision(this.run()));
@@ -67,7 +70,7 @@ export class WhySheet {
   protected overrule(): void {
     const exit = this.chosen();
     this.wasTried.set(true);
-    if (exit !== undefined && this.isComplete()) this.commanded.emit({ do: 'overrule', exit, reason: this.reason() });
+    if (this.isComplete()) this.commanded.emit({ do: 'overrule', exit, reason: this.reason() });
   }
 
   private titleOf({ to, verdict }: NamedExit): string {

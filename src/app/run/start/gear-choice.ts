@@ -1,21 +1,27 @@
-import { ChangeDetectionStrategy, Component, computed, input, linkedSignal, output, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
 import type { GearNeed } from '../../../../procedures/document';
 import type { InstrumentSnapshot, RunCommand } from '../../../../procedures/engine';
 import type { GearItem } from '../../core/wire';
+import { entryField } from '../entry-draft';
+import { RefusalLine } from '../frame/refusal-line';
 import { PrimaryButton } from '../primary-action';
-import type { RunProblem } from '../run-view';
+import type { RunProblem, RunView } from '../run-view';
 import { ReasonField } from '../sheets/reason-field';
 import { gearFor, type GearFacts } from './gear-facts';
+
+/** What stands for an instrument that was put back: no instrument's id. */
+const noInstrument = 'none';
 
 /** Takes one instrument for one role. An overdue one costs a reason; a coarse one says what that will mean. */
 @Component({
   selector: 'bay-gear-choice',
-  imports: [PrimaryButton, ReasonField],
+  imports: [PrimaryButton, ReasonField, RefusalLine],
   templateUrl: './gear-choice.html',
   styleUrl: './gear-choice.css',
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class GearChoice {
+  readonly run = input.required<RunView>();
   readonly need = input.required<GearNeed>();
   readonly place = input.required<number>();
   readonly of = input.required<number>();
@@ -30,11 +36,10 @@ export class GearChoice {
   readonly goneWithout = output();
 
   protected readonly facts = computed(() => gearFor(this.need(), this.gear(), this.now()));
-  protected readonly pickedId = linkedSignal<string, string | undefined>({
-    source: () => this.need().role,
-    computation: () => this.chosen()?.id,
-  });
-  protected readonly reason = signal('');
+  /** The instrument that was tapped, not yet taken; empty while none was. */
+  private readonly tapped = entryField(this.run, () => `instrument ${this.need().role}`, '', ['gear-chosen']);
+  protected readonly pickedId = computed(() => (this.tapped() === '' ? this.chosen()?.id : this.tapped()));
+  protected readonly reason = entryField(this.run, () => `overdue ${this.need().role}`, '', ['gear-chosen']);
   protected readonly picked = computed<GearFacts | undefined>(() =>
     this.facts().find(({ item }) => item.id === this.pickedId()),
   );
@@ -46,7 +51,7 @@ export class GearChoice {
   });
 
   protected pick({ item, isOverdue }: GearFacts): void {
-    this.pickedId.update((id) => (isOverdue && id === item.id ? undefined : item.id));
+    this.tapped.set(isOverdue && this.pickedId() === item.id ? noInstrument : item.id);
   }
 
   protected take(): void {

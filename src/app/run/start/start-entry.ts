@@ -1,5 +1,6 @@
-import { ChangeDetectionStrategy, Component, computed, input, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import type { GearItem } from '../../core/wire';
+import { entryField } from '../entry-draft';
 import { BigAction } from '../frame/big-action';
 import { CautionGate } from '../frame/caution-gate';
 import { HandSide } from '../frame/hand-side';
@@ -22,10 +23,11 @@ export class StartEntry extends StepEntry<'start'> {
   /** The device's clock, for due dates. */
   readonly now = input.required<number>();
 
-  private readonly isPrepared = signal(false);
-  private readonly knowsStopActions = signal(false);
-  private readonly without = signal<readonly string[]>([]);
-  protected readonly again = signal<string | undefined>(undefined);
+  private readonly isPrepared = entryField(this.run, 'is-prepared', false);
+  private readonly knowsStopActions = entryField(this.run, 'knows-stop-actions', false);
+  private readonly without = entryField<readonly string[]>(this.run, 'without', []);
+  /** The role whose gear is chosen again; empty while none is. */
+  protected readonly again = entryField(this.run, 'again', '');
 
   protected readonly card = computed(() => this.run().procedure.document.start);
   protected readonly document = computed(() => this.run().procedure.document);
@@ -52,7 +54,7 @@ export class StartEntry extends StepEntry<'start'> {
 
   protected goWithout(role: string): void {
     this.without.update((roles) => [...roles, role]);
-    this.again.set(undefined);
+    this.again.set('');
   }
 
   protected chooseAgain(role: string): void {

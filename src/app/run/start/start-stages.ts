@@ -10,14 +10,14 @@ export type StartStage =
   | { readonly show: 'gear'; readonly need: GearNeed; readonly place: number; readonly of: number }
   | { readonly show: 'ready' };
 
-/** What of the start card was answered that no event keeps: after a reload it is asked again. */
+/** What of the start card was answered that no event keeps. */
 export interface StartAnswers {
   readonly isPrepared: boolean;
   readonly knowsStopActions: boolean;
   /** Optional gear that is done without. */
   readonly without: readonly string[];
-  /** Gear that is chosen again. */
-  readonly again: string | undefined;
+  /** The role whose gear is chosen again; empty while none is. */
+  readonly again: string;
 }
 
 /** The screen that comes next: what must be ready, what to do at once, each caution, each piece of gear. */

@@ -13,9 +13,6 @@ import { StepEntry } from '../step-entry';
     <bay-wide-side [run]="run()" [step]="step()" />
     <bay-hand-side>
       <bay-last-reading [run]="run()" />
-      @if (problem(); as problem) {
-        <p class="error" role="alert">{{ problem.message }}</p>
-      }
       @if (disturbs().length > 0) {
         <div class="opens">
           <b>Goes on the list of what is disturbed</b>
@@ -24,7 +21,12 @@ import { StepEntry } from '../step-entry';
           }
         </div>
       }
-      <bay-big-action [label]="'Done,\\ngo on'" [isBusy]="isBusy()" (done)="commanded.emit({ do: 'confirm' })" />
+      <bay-big-action
+        [label]="'Done,\\ngo on'"
+        [refusal]="problem()?.message"
+        [isBusy]="isBusy()"
+        (done)="commanded.emit({ do: 'confirm' })"
+      />
     </bay-hand-side>
   `,
   styles: `

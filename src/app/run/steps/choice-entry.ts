@@ -4,10 +4,10 @@ import {
   Component,
   computed,
   type ElementRef,
-  linkedSignal,
   viewChild,
 } from '@angular/core';
 import type { ChoiceOption } from '../../../../procedures/document';
+import { entryField } from '../entry-draft';
 import { BigAction } from '../frame/big-action';
 import { HandSide } from '../frame/hand-side';
 import { LastReading } from '../frame/last-reading';
@@ -26,14 +26,8 @@ import { StepEntry } from '../step-entry';
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class ChoiceEntry extends StepEntry<'choice'> {
-  protected readonly chosen = linkedSignal<number | undefined, readonly string[]>({
-    source: () => this.run().state.current?.claimedSeq,
-    computation: () => [],
-  });
-  protected readonly text = linkedSignal<number | undefined, string>({
-    source: () => this.run().state.current?.claimedSeq,
-    computation: () => '',
-  });
+  protected readonly chosen = entryField<readonly string[]>(this.run, 'chosen', []);
+  protected readonly text = entryField(this.run, 'asked', '');
   protected readonly several = computed(() => this.step().several === true);
   /** What is asked beside the chosen options. */
   protected readonly asks = computed(() =>
@@ -41,9 +35,13 @@ export class ChoiceEntry extends StepEntry<'choice'> {
       .options.filter(({ name }) => this.chosen().includes(name))
       .flatMap(({ ask }) => ask ?? []),
   );
-  protected readonly isReady = computed(
-    () => this.chosen().length > 0 && (this.asks().length === 0 || this.text().trim() !== ''),
-  );
+  /** What has to be entered before anything can be recorded. */
+  protected readonly missing = computed(() => {
+    if (this.chosen().length === 0) return 'Choose first what you see.';
+    return this.asks().length > 0 && this.text().trim() === ''
+      ? `Say above first: ${this.asks().join(' ')}`
+      : undefined;
+  });
 
   private readonly field = viewChild<ElementRef<HTMLTextAreaElement>>('asked');
 

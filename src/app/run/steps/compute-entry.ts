@@ -39,12 +39,10 @@ import { formulaParts } from './formula-words';
           <p class="none">{{ result.label }}: cannot be computed, what it needs was not measured.</p>
         }
       }
-      @if (problem(); as problem) {
-        <p class="error" role="alert">{{ problem.message }}</p>
-      }
       <bay-big-action
         label="Seen,
 go on"
+        [refusal]="problem()?.message"
         [isBusy]="isBusy()"
         (done)="commanded.emit({ do: 'confirm' })"
       />

@@ -1,4 +1,5 @@
-import { ChangeDetectionStrategy, Component, computed, linkedSignal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed } from '@angular/core';
+import { entryField } from '../entry-draft';
 import { BigAction } from '../frame/big-action';
 import { HandSide } from '../frame/hand-side';
 import { WideSide } from '../frame/wide-side';
@@ -13,15 +14,8 @@ import { StepEntry } from '../step-entry';
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class DriveEntry extends StepEntry<'drive'> {
-  private readonly claim = computed(() => this.run().state.current?.claimedSeq);
-  protected readonly isParked = linkedSignal<number | undefined, boolean>({
-    source: this.claim,
-    computation: () => false,
-  });
-  protected readonly visited = linkedSignal<number | undefined, readonly string[]>({
-    source: this.claim,
-    computation: () => [],
-  });
+  protected readonly isParked = entryField(this.run, 'parked', false);
+  protected readonly visited = entryField<readonly string[]>(this.run, 'visited', []);
   protected readonly isNone = computed(() => this.visited().length === 0);
 
   protected toggle(name: string): void {

@@ -1,6 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed } from '@angular/core';
 import { BigAction } from '../frame/big-action';
 import { HandSide } from '../frame/hand-side';
+import { RefusalLine } from '../frame/refusal-line';
 import { WideSide } from '../frame/wide-side';
 import { StepEntry } from '../step-entry';
 import { RestoreList } from './restore-list';
@@ -8,7 +9,7 @@ import { RestoreList } from './restore-list';
 /** Puts back everything that is still disturbed: one big tick each; the last one goes on. */
 @Component({
   selector: 'bay-restore-entry',
-  imports: [BigAction, HandSide, RestoreList, WideSide],
+  imports: [BigAction, HandSide, RefusalLine, RestoreList, WideSide],
   template: `
     <bay-wide-side [run]="run()" [step]="step()" />
     <bay-hand-side>
@@ -18,16 +19,16 @@ import { RestoreList } from './restore-list';
         [isBusy]="isBusy()"
         (restored)="commanded.emit({ do: 'restore', item: $event })"
       />
-      @if (problem(); as problem) {
-        <p class="error" role="alert">{{ problem.message }}</p>
-      }
       @if (items().length === 0) {
         <bay-big-action
           label="All is back,
 go on"
+          [refusal]="problem()?.message"
           [isBusy]="isBusy()"
           (done)="commanded.emit({ do: 'confirm' })"
         />
+      } @else {
+        <bay-refusal-line [refusal]="problem()?.message" />
       }
     </bay-hand-side>
   `,
