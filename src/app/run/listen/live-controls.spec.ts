@@ -91,12 +91,12 @@ describe('LiveControls', () => {
     expect(hasButton(page.fixture, 'The noise begins')).toBe(true);
   });
 
-  it('takes the last point back', async () => {
+  it('undoes the last point', async () => {
     const page = await shown();
     await tap(page, 'Gauge at zero: begin to raise');
     page.at(4);
     await tap(page, '+ 1');
-    await tap(page, 'Take back');
+    await tap(page, 'Undo last point');
     expect(page.commands.at(-1)).toMatchObject({ do: 'take-back', name: 'gauge' });
     expect(elementOf(page.fixture).querySelector('.figure .num')?.textContent).toBe('0.0');
   });
@@ -129,7 +129,7 @@ describe('LiveControls', () => {
     }
     buttonNamed(page.fixture, 'It never stopped').click();
     await page.fixture.whenStable();
-    buttonNamed(page.fixture, 'Back').click();
+    buttonNamed(page.fixture, 'Leave it').click();
     await page.fixture.whenStable();
     expect(hasButton(page.fixture, 'Sure? It never stopped')).toBe(false);
     buttonNamed(page.fixture, 'It never stopped').click();

@@ -1,15 +1,15 @@
 import { ChangeDetectionStrategy, Component, input, linkedSignal, output } from '@angular/core';
 
 /**
- * What ends or throws away a ramp: the first tap only asks, beside a way back, and the second does it. Whatever else
+ * What ends or throws away a ramp: the first tap only asks, beside a way out of it, and the second does it. Whatever else
  * happens in the run meanwhile takes the question away.
  */
 @Component({
   selector: 'bay-sure-button',
   template: `
     @if (isAsked()) {
-      <!-- Where the first tap was stands the way back: a bounce of the finger undoes, and does not confirm. -->
-      <button type="button" (click)="isAsked.set(false)">Back</button>
+      <!-- Where the first tap was stands the way out: a bounce of the finger undoes, and does not confirm. -->
+      <button type="button" (click)="isAsked.set(false)">Leave it</button>
     }
     <button type="button" [class.asked]="isAsked()" [disabled]="isBusy() || !isReady()" (click)="press()">
       {{ isAsked() ? 'Sure? ' + label() : label() }}
