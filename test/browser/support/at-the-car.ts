@@ -73,11 +73,15 @@ export async function acknowledge(page: Page, count: number): Promise<void> {
 
 /** Enters digits on the pad and taps the primary action. */
 export async function enter(page: Page, digits: string): Promise<void> {
+  await typeOnPad(page, digits);
+  await tap(page.locator('bay-number-pad .go'));
+}
+
+async function typeOnPad(page: Page, digits: string): Promise<void> {
   for (const digit of digits) {
     const name = { '-': 'minus', '.': 'decimal point' }[digit] ?? digit;
     await page.locator('bay-number-pad').getByRole('button', { name, exact: true }).click();
   }
-  await tap(page.locator('bay-number-pad .go'));
 }
 
 async function leftStep(page: Page, step: Step): Promise<void> {
@@ -100,8 +104,10 @@ async function answer(
       if (way !== undefined) await tap(page.getByRole('button', { name: way }));
       const digits = left.read[step.number]?.shift();
       if (digits === undefined) throw new Error(`nothing to read at step ${step.number}`);
+      await typeOnPad(page, digits);
+      // With the digits in it: only what is recorded changes the entry further.
       const before = await page.locator('bay-hand-side').innerText();
-      await enter(page, digits);
+      await tap(page.locator('bay-number-pad .go'));
       await expect.poll(async () => page.locator('bay-hand-side').innerText()).not.toBe(before);
       if ((left.read[step.number]?.length ?? 0) > 0) await answer(page, step, { ...answers, way: {} }, left);
       return;
