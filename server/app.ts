@@ -57,7 +57,7 @@ export function createApp({ config, database, log, clock, build, isStopping }: A
   const routes = withOpenApi([
     ...healthRoutes(database, isStopping),
     ...accessRoutes(new AccessService(database, accessTokens, clock), tablets, reached),
-    ...syncRoutes(new SyncService(database, tablets, new VisitsService(database, clock), runs)),
+    ...syncRoutes(new SyncService(database, tablets, new VisitsService(database, clock), runs, clock)),
     ...attachmentsRoutes(new AttachmentsService(database, clock)),
     ...proceduresRoutes(new ProceduresService(database, clock)),
     ...recordsRoutes(new RecordsService(database)),

@@ -51,6 +51,7 @@ function open(procedure: CompiledProcedure, header: RunHeader, event: RunEvent):
     visit: event.data.visit,
     siteName: event.data.siteName,
     inputs: event.data.inputs,
+    ...(event.data.again === undefined ? {} : { again: event.data.again }),
     current: undefined,
     walked: [],
     values: {},

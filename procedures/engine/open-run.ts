@@ -1,7 +1,7 @@
 import type { CompiledProcedure } from '../document';
 import { parseDecimal } from './figures';
 import type { Outcome } from './run-command';
-import type { Figure, VisitSnapshot } from './run-event';
+import type { BegunAgain, Figure, VisitSnapshot } from './run-event';
 
 /** What a run starts with, as site and visit know it. */
 export interface OpeningFacts {
@@ -12,6 +12,8 @@ export interface OpeningFacts {
   readonly elevationM?: string;
   /** Litres, decimal text. */
   readonly displacementL?: string;
+  /** Why it is begun although others of the same half are known. */
+  readonly again?: BegunAgain;
 }
 
 /** The first two events of a run: opened, with every input resolved, and the claim of the first step. */
@@ -40,11 +42,11 @@ export function openRun(procedure: CompiledProcedure, facts: OpeningFacts): Outc
   }
   const first = document.steps[0];
   if (first === undefined) return { ok: false, code: 'no-steps', message: 'The procedure has no steps.' };
-  const { visit, siteName, person } = facts;
+  const { visit, siteName, person, again } = facts;
   return {
     ok: true,
     drafts: [
-      { type: 'opened', data: { visit, siteName, inputs, person } },
+      { type: 'opened', data: { visit, siteName, inputs, person, ...(again === undefined ? {} : { again }) } },
       { type: 'step-claimed', data: { step: first.id } },
     ],
   };

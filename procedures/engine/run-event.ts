@@ -95,6 +95,13 @@ export interface VisitSnapshot {
   readonly codes: readonly string[];
 }
 
+/** Why a run was begun although others of the same visit, procedure and half were known. */
+export interface BegunAgain {
+  readonly because: string;
+  /** Those runs, by their ids. */
+  readonly besides: readonly string[];
+}
+
 export interface TroubleCodeEntry {
   readonly code: string;
   readonly status: 'stored' | 'pending' | 'permanent';
@@ -122,6 +129,8 @@ export interface RunEventData {
     /** The procedure's inputs as resolved from site, visit and defaults, by name. */
     readonly inputs: Readonly<Record<string, Figure & { readonly source: string }>>;
     readonly person: string;
+    /** Absent where no other run of the same half was known. */
+    readonly again?: BegunAgain;
   };
   /** An instrument was taken for a role; a later one for the same role supersedes it from there on. */
   'gear-chosen': { readonly role: string; readonly instrument: InstrumentSnapshot; readonly overdueBecause?: string };

@@ -1,6 +1,7 @@
 import type { JudgedResult, PressureSense } from '../document';
 import type { UnitName } from '../calculations';
 import type {
+  BegunAgain,
   DecisionInput,
   Figure,
   InstrumentSnapshot,
@@ -24,6 +25,8 @@ export interface RunState {
   readonly personName: string;
   readonly visit: VisitSnapshot;
   readonly siteName: string;
+  /** Why it was begun beside others of the same half. */
+  readonly again?: BegunAgain;
   readonly inputs: Readonly<Record<string, Figure & { readonly source: string }>>;
   /** The claimed step; absent once a finding is reached. */
   readonly current: CurrentStep | undefined;

@@ -18,6 +18,7 @@ const dataOf: RunEventData = {
     siteName: 'Ossenholt',
     inputs: { elevation: { text: '640', unit: 'm', source: 'the site' } },
     person: 'I. Okafor',
+    again: { because: 'Repaired since', besides: ['0197f3a0-0000-7000-8000-0000000000aa'] },
   },
   'gear-chosen': {
     role: 'gauge',
@@ -125,6 +126,7 @@ function eventOf(type: keyof RunEventData): Record<string, unknown> & { data: Re
 
 /** The fields that an event's data may do without. */
 const optional: Readonly<Partial<Record<keyof RunEventData, readonly string[]>>> = {
+  opened: ['again'],
   'gear-chosen': ['overdueBecause'],
   'reading-recorded': ['way', 'instrument', 'resolution', 'uncertainty', 'timeS'],
   'series-recorded': ['fileName'],

@@ -1,7 +1,7 @@
 import { Check, Column, Entity, PrimaryColumn } from 'typeorm';
 
 /** The kinds of things that tablets pull. */
-export type ChangedKind = 'site' | 'gear' | 'person' | 'visit' | 'procedure';
+export type ChangedKind = 'site' | 'gear' | 'person' | 'visit' | 'procedure' | 'run';
 
 /** The one counter of all changes that tablets pull. */
 @Entity('change_counter')

@@ -15,7 +15,7 @@ import type { RunEvent, RunHeader, RunState } from '../../procedures/engine';
 import { PlainText } from '../http/plain-text';
 import { Nested } from '../http/validated';
 import { PublishedProcedure } from '../procedures/procedures.service';
-import { CountersignatureDto } from '../sync/sync.service';
+import { CountersignatureDto, VisitRun } from '../sync/sync.service';
 
 export const recordColumns = [
   'openedAt',
@@ -204,6 +204,10 @@ export class RecordDetail {
   /** The enrolled tablets among those that wrote, in the order in which they did. */
   @Nested(() => WritingTablet, { each: true })
   declare tablets: WritingTablet[];
+
+  /** The runs of the same half of the same visit, this one included, the first begun first. */
+  @Nested(() => VisitRun, { each: true })
+  declare sameHalf: readonly VisitRun[];
 
   @Nested(() => ChainFound)
   declare chain: ChainFound;

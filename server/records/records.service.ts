@@ -4,7 +4,7 @@ import { verifyChain, type RunEvent, type RunHeader } from '../../procedures/eng
 import { Tablet } from '../access/access.entity';
 import { NotFound } from '../http/problem';
 import { publishedProcedures } from '../procedures/procedures.service';
-import { countersignatureOnTheWire, isCountersigned, mainBranch, RunRows } from '../sync/sync.service';
+import { countersignatureOnTheWire, isCountersigned, mainBranch, RunRows, runsOfSameHalf } from '../sync/sync.service';
 import { Countersignature, DiscrepancyRow, RefusedEventRow, Run, RunBranch, ServerKey } from '../sync/sync.entity';
 import { recordPage } from './record-page';
 import type { ChainFound, RecordDetail, RecordPage, RecordsQuery, WritingTablet } from './records.dto';
@@ -48,6 +48,7 @@ export class RecordsService {
         receivedAt: run.receivedAt.toISOString(),
         procedure,
         tablets: await tabletsOf(manager, lines.get(mainBranch) ?? []),
+        sameHalf: await runsOfSameHalf(manager, header),
         chain: chainFound(header, lines, signed, keys),
         discrepancies: discrepancies
           .filter(({ branch }) => branch === mainBranch)

@@ -7,12 +7,13 @@ import { sitesForPull } from '../sites/sites.service';
 import { visitsForPull } from '../visits/visits.service';
 import { cursorText, parseCursor, type Cursor } from './cursor';
 import type { PullAnswer } from './sync.dto';
+import { runsForPull } from './visit-runs';
 
 /**
  * What changed since a cursor, or everything when there is none or it is from another life of the database. One
  * snapshot: the position is read in it, and positions become visible in their own order, so nothing falls between.
  */
-export async function pull(database: DataSource, since: string | undefined): Promise<PullAnswer> {
+export async function pull(database: DataSource, since: string | undefined, at: Date): Promise<PullAnswer> {
   const from = since === undefined ? undefined : parseCursor(since);
   return database.transaction('REPEATABLE READ', async (manager) => {
     const now = await currentCursor(manager);
@@ -26,6 +27,7 @@ export async function pull(database: DataSource, since: string | undefined): Pro
       gear: await gearForPull(manager, ids('gear')),
       people: await peopleForPull(manager, ids('person')),
       visits: await visitsForPull(manager, ids('visit')),
+      runs: await runsForPull(manager, at, ids('run')),
       notices: [],
     };
   });

@@ -1,6 +1,7 @@
 import type { DataSource, EntityManager } from 'typeorm';
 import { canonicalJson, type RunEvent, type RunHeader } from '../../procedures/engine';
 import { validateRunEvent, type EventProblem } from '../../procedures/engine/validate-event';
+import { noteChange } from '../database/change-log';
 import { AppError } from '../http/problem';
 import { validated } from '../http/validated';
 import type { CompiledProcedures, PublishedVersion } from '../procedures/procedures.service';
@@ -66,8 +67,10 @@ export class RunIntake {
       await rows.keepRefused(walk.refused.event, walk.refused.text, facts.tabletId, walk.refused.reason, at);
     }
     if (walk.branch === undefined && isNew) await rows.forgetEmpty();
-    if (walk.added.length > 0) await this.keep(manager, rows, version, walk, isNew, at);
-    return this.answer(manager, rows, header, walk);
+    const isNews = walk.added.length > 0 && (await this.keep(manager, rows, version, walk, isNew, at));
+    const answer = await this.answer(manager, rows, header, walk);
+    if (isNews) await noteChange(manager, 'run', header.runId);
+    return answer;
   }
 
   private async walk(
@@ -85,6 +88,7 @@ export class RunIntake {
     return walk;
   }
 
+  /** Gives whether other tablets should hear of it. */
   private async keep(
     manager: EntityManager,
     rows: RunRows,
@@ -92,7 +96,7 @@ export class RunIntake {
     walk: RunWalk,
     isNew: boolean,
     at: Date,
-  ): Promise<void> {
+  ): Promise<boolean> {
     await rows.insertEvents(walk.added, at);
     await rows.insertAttachments(walk.added);
     for (const [branch, state] of walk.states) {
@@ -104,9 +108,9 @@ export class RunIntake {
       await this.countersigner.sign(manager, { runId: state.header.runId, branch, seq: ends.headSeq, head: ends.head });
     }
     const state = walk.states.get(mainBranch);
-    if (state === undefined) return;
+    if (state === undefined) return false;
     const events = walk.added.filter(({ branch }) => branch === mainBranch).map(({ event }) => event);
-    await updateRun(manager, version.procedure, state, events, isNew);
+    return updateRun(manager, version.procedure, state, events, isNew);
   }
 
   private async answer(

@@ -16,17 +16,22 @@ export async function insertRun(manager: EntityManager, header: RunHeader, title
   return made.length > 0;
 }
 
-/** Brings the run's projection up to a state, by the events since the last time (`isWhole`: since its beginning). */
+/**
+ * Brings the run's projection up to a state, by the events since the last time (`isWhole`: since its beginning). Gives
+ * whether it is changed for those who are told of the run on other tablets.
+ */
 export async function updateRun(
   manager: EntityManager,
   procedure: CompiledProcedure,
   state: RunState,
   events: readonly RunEvent[],
   isWhole: boolean,
-): Promise<void> {
+): Promise<boolean> {
   const { runId } = state.header;
   const before = isWhole
     ? null
-    : await manager.findOne(Run, { select: { verdict: true, closedAt: true }, where: { runId } });
-  await manager.update(Run, { runId }, projectRun(procedure, state, events, before ?? undefined));
+    : await manager.findOne(Run, { select: { status: true, verdict: true, closedAt: true }, where: { runId } });
+  const after = projectRun(procedure, state, events, before ?? undefined);
+  await manager.update(Run, { runId }, after);
+  return before?.status !== after.status || before.verdict !== after.verdict;
 }

@@ -11,7 +11,8 @@ import {
   MaxLength,
   Min,
 } from 'class-validator';
-import type { RunHeader } from '../../procedures/engine';
+import type { JudgedResult } from '../../procedures/document';
+import type { BegunAgain, RunHeader, RunState } from '../../procedures/engine';
 import type { ColleagueOnTheWire } from '../access/access.service';
 import type { GearOnTheWire } from '../gear/gear.service';
 import { PlainText } from '../http/plain-text';
@@ -183,6 +184,67 @@ export class PullQuery {
   declare since?: string;
 }
 
+/** Why a run was begun although others of its half were known. */
+export class BegunAgainDto implements BegunAgain {
+  @IsString()
+  declare because: string;
+
+  /** Those runs. */
+  @IsUUID(undefined, { each: true })
+  declare besides: string[];
+}
+
+/** What every tablet is told of a run, whichever tablet has it. */
+export class VisitRun {
+  @IsUUID()
+  declare runId: string;
+
+  @IsUUID()
+  declare visitId: string;
+
+  @IsString()
+  declare procedureId: string;
+
+  @IsString()
+  declare procedureTitle: string;
+
+  @IsOptional()
+  @IsIn(['cold', 'warm'])
+  declare half?: 'cold' | 'warm';
+
+  @IsOptional()
+  @IsUUID()
+  declare pairId?: string;
+
+  /** Who began it. */
+  @IsString()
+  declare personName: string;
+
+  /** The tablet on which it was begun, as people call it. */
+  @IsOptional()
+  @IsString()
+  declare tabletLabel?: string;
+
+  /** The tablet's clock, milliseconds since 1970. */
+  @IsInt()
+  declare openedAt: number;
+
+  @IsString()
+  declare status: RunState['status'];
+
+  @IsOptional()
+  @IsString()
+  declare verdict?: string;
+
+  @IsOptional()
+  @IsIn(['in', 'out', 'too-close'])
+  declare result?: JudgedResult;
+
+  @IsOptional()
+  @Nested(() => BegunAgainDto)
+  declare again?: BegunAgain;
+}
+
 export class PullAnswer {
   /** `<epoch>.<position>`. */
   @IsString()
@@ -202,6 +264,10 @@ export class PullAnswer {
 
   @IsArray()
   declare visits: readonly VisitOnTheWire[];
+
+  /** Of all tablets. */
+  @Nested(() => VisitRun, { each: true })
+  declare runs: readonly VisitRun[];
 
   @IsArray()
   declare notices: readonly never[];

@@ -16,6 +16,7 @@ import { Site } from '../sites/sites.entity';
 @Index('run_procedure_opened', ['procedureId', 'openedAt', 'runId'])
 @Index('run_person_name', ['personName', 'runId'])
 @Index('run_repair_order', ['repairOrder', 'runId'])
+@Index('run_visit', ['visitId', 'procedureId'])
 export class Run {
   @PrimaryColumn({ name: 'run_id', type: 'uuid' })
   declare runId: string;

@@ -13,7 +13,8 @@ export { mainBranch } from './event-place';
 export { isCountersigned, ServerKeys } from './server-keys';
 export { rebuildRuns } from './rebuild-runs';
 export { RunRows } from './run-rows';
-export { CountersignatureDto } from './sync.dto';
+export { runsOfSameHalf } from './visit-runs';
+export { CountersignatureDto, VisitRun } from './sync.dto';
 
 /** Whether a tablet signed these bytes; undefined when it is not enrolled. */
 export interface TabletSignatures {
@@ -27,6 +28,7 @@ export class SyncService {
     private readonly tablets: TabletSignatures,
     private readonly visits: VisitsService,
     private readonly runs: RunIntake,
+    private readonly clock: () => Date,
   ) {}
 
   /** Takes a push in, item by item. Throws `UnknownTablet` or `WrongSignature`; then nothing of it is taken. */
@@ -44,7 +46,7 @@ export class SyncService {
   }
 
   pull(since: string | undefined): Promise<PullAnswer> {
-    return pull(this.database, since);
+    return pull(this.database, since, this.clock());
   }
 
   private async takeDocument({ kind, document }: PushedDocument, tabletId: string): Promise<PushedDocumentAnswer> {

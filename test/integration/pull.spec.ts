@@ -38,7 +38,7 @@ const visit = {
   changedAt: 1_790_000_000_000,
 };
 
-const empty = { procedures: [], sites: [], gear: [], people: [], visits: [], notices: [] };
+const empty = { procedures: [], sites: [], gear: [], people: [], visits: [], runs: [], notices: [] };
 
 describe('a pull', () => {
   it('gives the whole garage without a cursor', async () => {

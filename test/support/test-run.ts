@@ -1,7 +1,14 @@
 import { v7 as uuidv7 } from 'uuid';
 import { compileProcedure } from '../../procedures/document';
-import { headerHash, sealEvent, type EventDraft, type RunEvent, type RunHeader } from '../../procedures/engine';
-import { RunWalk } from '../../procedures/engine/testing/run-walk';
+import {
+  headerHash,
+  sealEvent,
+  type BegunAgain,
+  type EventDraft,
+  type RunEvent,
+  type RunHeader,
+} from '../../procedures/engine';
+import { openingFacts, RunWalk } from '../../procedures/engine/testing/run-walk';
 import { smallProcedure } from '../../procedures/engine/testing/small-procedure';
 import { demoPeople, demoSites } from '../../server/database/demo/demo-garage';
 import { gaugeG12, scanToolS3 } from './ossenholt-gear';
@@ -37,9 +44,10 @@ export async function publishSmallProcedure(server: TestServer): Promise<number>
   return (published.json as { version: number }).version;
 }
 
-/** A run that was just opened: opened, first step claimed. */
-export function openedRun(writer: Writer, header: Partial<RunHeader> = {}): SentRun {
-  return sent(new RunWalk(compiledSmall, freshHeader(header)), writer);
+/** A run that was just opened: opened, first step claimed. `again`: why, beside others that were known. */
+export function openedRun(writer: Writer, header: Partial<RunHeader> = {}, again?: BegunAgain): SentRun {
+  const facts = { ...openingFacts, ...(again === undefined ? {} : { again }) };
+  return sent(new RunWalk(compiledSmall, freshHeader(header), facts), writer);
 }
 
 /** A whole run that ends in the finding that the sensor reads off, with write-up, closed. */

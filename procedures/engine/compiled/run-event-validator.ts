@@ -2,8 +2,8 @@
 // Made by build-validators.mjs from the schema; not to be edited.
 
 export const checkRunEvent = validate52;
-const schema19 = {"$schema":"https://json-schema.org/draft/2020-12/schema","$id":"run-event.schema.json","title":"Run event","description":"One thing that happened in a run: the envelope, and the data of its type. Agrees with run-event.ts.","type":"object","properties":{"runId":{"$ref":"#/$defs/anyUuid"},"seq":{"$ref":"#/$defs/seq"},"id":{"$ref":"#/$defs/uuid"},"at":{"$ref":"#/$defs/count"},"elapsed":{"type":"number","minimum":0,"maximum":9007199254740991},"actor":{"$ref":"#/$defs/id"},"device":{"$ref":"#/$defs/id"},"build":{"$ref":"#/$defs/id"},"schema":{"const":1},"prev":{"$ref":"#/$defs/hash"},"hash":{"$ref":"#/$defs/hash"},"type":{"enum":["opened","gear-chosen","step-claimed","step-done","caution-acknowledged","reading-recorded","not-measurable","not-applicable","predicted","series-recorded","mark-placed","codes-recorded","timer-started","timer-ended","choice-made","photo-attached","note-written","margin-note-written","disturbed","restored","branch-taken","branch-overruled","step-redone","undone","lead-called","released","set-aside","resumed","handed-over","limit-exceeded","alert-raised","alert-acknowledged","stopped","version-notice-answered","finding-reached","write-up-written","closed","verified","signed","amended","joined","clock-jumped","transcribed"]},"data":{"type":"object"}},"required":["runId","seq","id","at","elapsed","actor","device","build","schema","prev","hash","type","data"],"allOf":[{"if":{"properties":{"type":{"const":"opened"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/opened"}}}},{"if":{"properties":{"type":{"const":"gear-chosen"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/gear-chosen"}}}},{"if":{"properties":{"type":{"const":"step-claimed"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/step-claimed"}}}},{"if":{"properties":{"type":{"const":"step-done"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/step-done"}}}},{"if":{"properties":{"type":{"const":"caution-acknowledged"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/caution-acknowledged"}}}},{"if":{"properties":{"type":{"const":"reading-recorded"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/reading-recorded"}}}},{"if":{"properties":{"type":{"const":"not-measurable"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/not-measurable"}}}},{"if":{"properties":{"type":{"const":"not-applicable"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/not-applicable"}}}},{"if":{"properties":{"type":{"const":"predicted"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/predicted"}}}},{"if":{"properties":{"type":{"const":"series-recorded"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/series-recorded"}}}},{"if":{"properties":{"type":{"const":"mark-placed"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/mark-placed"}}}},{"if":{"properties":{"type":{"const":"codes-recorded"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/codes-recorded"}}}},{"if":{"properties":{"type":{"const":"timer-started"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/timer-started"}}}},{"if":{"properties":{"type":{"const":"timer-ended"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/timer-ended"}}}},{"if":{"properties":{"type":{"const":"choice-made"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/choice-made"}}}},{"if":{"properties":{"type":{"const":"photo-attached"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/photo-attached"}}}},{"if":{"properties":{"type":{"const":"note-written"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/note-written"}}}},{"if":{"properties":{"type":{"const":"margin-note-written"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/margin-note-written"}}}},{"if":{"properties":{"type":{"const":"disturbed"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/disturbed"}}}},{"if":{"properties":{"type":{"const":"restored"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/restored"}}}},{"if":{"properties":{"type":{"const":"branch-taken"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/branch-taken"}}}},{"if":{"properties":{"type":{"const":"branch-overruled"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/branch-overruled"}}}},{"if":{"properties":{"type":{"const":"step-redone"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/step-redone"}}}},{"if":{"properties":{"type":{"const":"undone"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/undone"}}}},{"if":{"properties":{"type":{"const":"lead-called"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/lead-called"}}}},{"if":{"properties":{"type":{"const":"released"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/released"}}}},{"if":{"properties":{"type":{"const":"set-aside"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/set-aside"}}}},{"if":{"properties":{"type":{"const":"resumed"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/resumed"}}}},{"if":{"properties":{"type":{"const":"handed-over"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/handed-over"}}}},{"if":{"properties":{"type":{"const":"limit-exceeded"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/limit-exceeded"}}}},{"if":{"properties":{"type":{"const":"alert-raised"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/alert-raised"}}}},{"if":{"properties":{"type":{"const":"alert-acknowledged"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/alert-acknowledged"}}}},{"if":{"properties":{"type":{"const":"stopped"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/stopped"}}}},{"if":{"properties":{"type":{"const":"version-notice-answered"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/version-notice-answered"}}}},{"if":{"properties":{"type":{"const":"finding-reached"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/finding-reached"}}}},{"if":{"properties":{"type":{"const":"write-up-written"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/write-up-written"}}}},{"if":{"properties":{"type":{"const":"closed"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/closed"}}}},{"if":{"properties":{"type":{"const":"verified"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/verified"}}}},{"if":{"properties":{"type":{"const":"signed"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/signed"}}}},{"if":{"properties":{"type":{"const":"amended"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/amended"}}}},{"if":{"properties":{"type":{"const":"joined"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/joined"}}}},{"if":{"properties":{"type":{"const":"clock-jumped"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/clock-jumped"}}}},{"if":{"properties":{"type":{"const":"transcribed"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/transcribed"}}}}],"additionalProperties":false,"$defs":{"unit":{"enum":["kPa","Pa","hPa","bar","psi","inHg","inH2O","mmHg","degC","degF","K","L/min","ft3/min","m3/s","g/s","kg/h","lb/min","L","cm3","m","km","mi","Nm","lbf.ft","V","mV","ohm","kohm","s","min","h","km/h","mph","%","1","rpm","dB"]},"sense":{"enum":["absolute","gauge"]},"id":{"description":"An id or a name of the document.","type":"string","minLength":1,"maxLength":100},"step":{"type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"hash":{"description":"SHA-256, hexadecimal.","type":"string","pattern":"^[0-9a-f]{64}$"},"label":{"type":"string","maxLength":200},"words":{"type":"string","maxLength":4000},"figureText":{"description":"A figure with the digits that were given.","type":"string","minLength":1,"maxLength":40},"seq":{"type":"integer","minimum":1,"maximum":9007199254740991},"count":{"type":"integer","minimum":0,"maximum":9007199254740991},"source":{"enum":["typed","file","simulated","computed"]},"figure":{"type":"object","properties":{"text":{"$ref":"#/$defs/figureText"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"}},"required":["text","unit"],"additionalProperties":false},"inputFigure":{"type":"object","properties":{"text":{"$ref":"#/$defs/figureText"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"source":{"$ref":"#/$defs/label"}},"required":["text","unit","source"],"additionalProperties":false},"instrumentRange":{"type":"object","properties":{"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"low":{"type":"number"},"high":{"type":"number"},"resolution":{"type":"number","minimum":0},"accuracy":{"type":"number","minimum":0}},"required":["unit","low","high","resolution","accuracy"],"additionalProperties":false},"instrument":{"type":"object","properties":{"id":{"$ref":"#/$defs/id"},"kind":{"enum":["pressure-gauge","scan-tool","listening-probe","barometer","thermometer"]},"label":{"$ref":"#/$defs/label"},"shows":{"type":"array","items":{"$ref":"#/$defs/instrumentRange"},"maxItems":20},"dueOn":{"type":"string","pattern":"^[0-9]{4}-[0-9]{2}-[0-9]{2}$"}},"required":["id","kind","label","shows","dueOn"],"additionalProperties":false},"visit":{"type":"object","properties":{"repairOrder":{"$ref":"#/$defs/label"},"vin":{"type":"string","maxLength":40},"car":{"$ref":"#/$defs/label"},"odometer":{"$ref":"#/$defs/figure"},"concern":{"$ref":"#/$defs/words"},"codes":{"type":"array","items":{"type":"string","maxLength":20},"maxItems":100}},"required":["repairOrder","vin","car","odometer","concern","codes"],"additionalProperties":false},"code":{"type":"object","properties":{"code":{"type":"string","minLength":1,"maxLength":20},"status":{"enum":["stored","pending","permanent"]},"freezeFrame":{"$ref":"#/$defs/words"}},"required":["code","status"],"additionalProperties":false},"decisionInput":{"type":"object","properties":{"name":{"$ref":"#/$defs/id"},"label":{"$ref":"#/$defs/label"},"text":{"type":"string","maxLength":200},"unit":{"$ref":"#/$defs/unit"},"uncertainty":{"$ref":"#/$defs/figureText"}},"required":["name","label","text"],"additionalProperties":false},"report":{"type":"string","maxLength":40000},"opened":{"type":"object","properties":{"visit":{"$ref":"#/$defs/visit"},"siteName":{"$ref":"#/$defs/label"},"inputs":{"type":"object","propertyNames":{"type":"string","pattern":"^[a-z][A-Za-z0-9]*$","maxLength":60},"maxProperties":200,"additionalProperties":{"$ref":"#/$defs/inputFigure"}},"person":{"$ref":"#/$defs/label"}},"required":["visit","siteName","inputs","person"],"additionalProperties":false},"gear-chosen":{"type":"object","properties":{"role":{"$ref":"#/$defs/id"},"instrument":{"$ref":"#/$defs/instrument"},"overdueBecause":{"$ref":"#/$defs/words"}},"required":["role","instrument"],"additionalProperties":false},"step-claimed":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"}},"required":["step"],"additionalProperties":false},"step-done":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"}},"required":["step"],"additionalProperties":false},"caution-acknowledged":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"caution":{"type":"integer","minimum":0,"maximum":1000}},"required":["step","caution"],"additionalProperties":false},"reading-recorded":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"name":{"$ref":"#/$defs/id"},"figure":{"$ref":"#/$defs/figure"},"source":{"$ref":"#/$defs/source"},"way":{"$ref":"#/$defs/id"},"instrument":{"$ref":"#/$defs/id"},"resolution":{"$ref":"#/$defs/figureText"},"uncertainty":{"$ref":"#/$defs/figureText"},"timeS":{"type":"number","minimum":0}},"required":["step","name","figure","source"],"additionalProperties":false},"not-measurable":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"reason":{"$ref":"#/$defs/words"}},"required":["step","reason"],"additionalProperties":false},"not-applicable":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"reason":{"$ref":"#/$defs/words"}},"required":["step","reason"],"additionalProperties":false},"predicted":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"option":{"$ref":"#/$defs/id"}},"required":["step","option"],"additionalProperties":false},"series-recorded":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"name":{"$ref":"#/$defs/id"},"sha256":{"$ref":"#/$defs/hash"},"bytes":{"$ref":"#/$defs/count"},"samples":{"$ref":"#/$defs/count"},"durationS":{"type":"number","minimum":0},"channels":{"type":"array","items":{"type":"object","properties":{"name":{"$ref":"#/$defs/label"},"unit":{"type":"string","maxLength":40},"column":{"$ref":"#/$defs/label"}},"required":["name","unit","column"],"additionalProperties":false},"maxItems":200},"source":{"$ref":"#/$defs/source"},"fileName":{"type":"string","maxLength":400},"skipped":{"$ref":"#/$defs/count"},"problems":{"type":"array","items":{"$ref":"#/$defs/words"},"maxItems":100}},"required":["step","name","sha256","bytes","samples","durationS","channels","source","skipped","problems"],"additionalProperties":false},"mark-placed":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"series":{"$ref":"#/$defs/id"},"mark":{"enum":["noise-begins","noise-stops"]},"timeS":{"type":"number","minimum":0},"by":{"enum":["tap","pedal","suggested"]}},"required":["step","series","mark","timeS","by"],"additionalProperties":false},"codes-recorded":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"name":{"$ref":"#/$defs/id"},"codes":{"type":"array","items":{"$ref":"#/$defs/code"},"maxItems":200}},"required":["step","name","codes"],"additionalProperties":false},"timer-started":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"seconds":{"type":"number","minimum":0}},"required":["step","seconds"],"additionalProperties":false},"timer-ended":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"certain":{"type":"boolean"}},"required":["step","certain"],"additionalProperties":false},"choice-made":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"name":{"$ref":"#/$defs/id"},"options":{"type":"array","items":{"$ref":"#/$defs/id"},"maxItems":50},"text":{"$ref":"#/$defs/words"}},"required":["step","name","options"],"additionalProperties":false},"photo-attached":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"sha256":{"$ref":"#/$defs/hash"},"bytes":{"$ref":"#/$defs/count"},"mediaType":{"type":"string","maxLength":100}},"required":["step","sha256","bytes","mediaType"],"additionalProperties":false},"note-written":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"text":{"$ref":"#/$defs/words"}},"required":["step","text"],"additionalProperties":false},"margin-note-written":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"text":{"$ref":"#/$defs/words"}},"required":["step","text"],"additionalProperties":false},"disturbed":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"item":{"$ref":"#/$defs/id"},"label":{"$ref":"#/$defs/label"}},"required":["step","item","label"],"additionalProperties":false},"restored":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"item":{"$ref":"#/$defs/id"}},"required":["step","item"],"additionalProperties":false},"branch-taken":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"to":{"$ref":"#/$defs/step"},"exit":{"type":"string","minLength":1,"maxLength":60},"when":{"type":"string","maxLength":2000},"inputs":{"type":"array","items":{"$ref":"#/$defs/decisionInput"},"maxItems":400},"because":{"$ref":"#/$defs/words"},"verdict":{"$ref":"#/$defs/step"}},"required":["step","to","exit","inputs","because"],"additionalProperties":false},"branch-overruled":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"computed":{"$ref":"#/$defs/id"},"chosen":{"$ref":"#/$defs/id"},"reason":{"$ref":"#/$defs/words"}},"required":["step","computed","chosen","reason"],"additionalProperties":false},"step-redone":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"reason":{"$ref":"#/$defs/words"}},"required":["step","reason"],"additionalProperties":false},"undone":{"type":"object","properties":{"seq":{"$ref":"#/$defs/seq"},"reason":{"$ref":"#/$defs/words"}},"required":["seq","reason"],"additionalProperties":false},"lead-called":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"question":{"$ref":"#/$defs/words"}},"required":["step","question"],"additionalProperties":false},"released":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"evidence":{"$ref":"#/$defs/words"}},"required":["step","evidence"],"additionalProperties":false},"set-aside":{"type":"object","properties":{"reason":{"$ref":"#/$defs/words"}},"required":["reason"],"additionalProperties":false},"resumed":{"type":"object","properties":{"from":{"enum":["set-aside","stopped","reload","lead-called"]}},"required":["from"],"additionalProperties":false},"handed-over":{"type":"object","properties":{"to":{"$ref":"#/$defs/id"},"reason":{"$ref":"#/$defs/words"}},"required":["to","reason"],"additionalProperties":false},"limit-exceeded":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"limit":{"$ref":"#/$defs/id"},"name":{"$ref":"#/$defs/id"},"figure":{"$ref":"#/$defs/figure"}},"required":["step","limit","name","figure"],"additionalProperties":false},"alert-raised":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"text":{"$ref":"#/$defs/words"}},"required":["step","text"],"additionalProperties":false},"alert-acknowledged":{"type":"object","properties":{"seq":{"$ref":"#/$defs/seq"}},"required":["seq"],"additionalProperties":false},"stopped":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"reason":{"$ref":"#/$defs/words"}},"required":["step","reason"],"additionalProperties":false},"version-notice-answered":{"type":"object","properties":{"version":{"$ref":"#/$defs/seq"},"answer":{"enum":["go-on","end"]}},"required":["version","answer"],"additionalProperties":false},"finding-reached":{"type":"object","properties":{"finding":{"$ref":"#/$defs/step"},"verdict":{"$ref":"#/$defs/words"}},"required":["finding","verdict"],"additionalProperties":false},"write-up-written":{"type":"object","properties":{"concern":{"$ref":"#/$defs/report"},"cause":{"$ref":"#/$defs/report"},"correction":{"$ref":"#/$defs/report"},"customer":{"$ref":"#/$defs/report"},"edited":{"type":"array","items":{"enum":["concern","cause","correction","customer"]},"maxItems":4}},"required":["concern","cause","correction","customer","edited"],"additionalProperties":false},"closed":{"type":"object","properties":{"finding":{"$ref":"#/$defs/step"}},"required":["finding"],"additionalProperties":false},"verified":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"by":{"$ref":"#/$defs/id"}},"required":["step","by"],"additionalProperties":false},"signed":{"type":"object","properties":{"head":{"$ref":"#/$defs/hash"},"meaning":{"enum":["performed","reviewed"]},"signature":{"type":"string","minLength":1,"maxLength":1000},"key":{"type":"string","minLength":1,"maxLength":1000}},"required":["head","meaning","signature","key"],"additionalProperties":false},"amended":{"type":"object","properties":{"text":{"$ref":"#/$defs/words"},"reason":{"$ref":"#/$defs/words"}},"required":["text","reason"],"additionalProperties":false},"joined":{"type":"object","properties":{"branch":{"$ref":"#/$defs/id"},"head":{"$ref":"#/$defs/hash"}},"required":["branch","head"],"additionalProperties":false},"clock-jumped":{"type":"object","properties":{"byMs":{"type":"number"}},"required":["byMs"],"additionalProperties":false},"transcribed":{"type":"object","properties":{"from":{"$ref":"#/$defs/words"}},"required":["from"],"additionalProperties":false},"anyUuid":{"type":"string","pattern":"^[0-9a-f]{8}(-[0-9a-f]{4}){3}-[0-9a-f]{12}$"},"uuid":{"type":"string","pattern":"^[0-9a-f]{8}-[0-9a-f]{4}-7[0-9a-f]{3}-[89ab][0-9a-f]{3}-[0-9a-f]{12}$"}}};
-const schema20 = {"type":"object","properties":{"visit":{"$ref":"#/$defs/visit"},"siteName":{"$ref":"#/$defs/label"},"inputs":{"type":"object","propertyNames":{"type":"string","pattern":"^[a-z][A-Za-z0-9]*$","maxLength":60},"maxProperties":200,"additionalProperties":{"$ref":"#/$defs/inputFigure"}},"person":{"$ref":"#/$defs/label"}},"required":["visit","siteName","inputs","person"],"additionalProperties":false};
+const schema19 = {"$schema":"https://json-schema.org/draft/2020-12/schema","$id":"run-event.schema.json","title":"Run event","description":"One thing that happened in a run: the envelope, and the data of its type. Agrees with run-event.ts.","type":"object","properties":{"runId":{"$ref":"#/$defs/anyUuid"},"seq":{"$ref":"#/$defs/seq"},"id":{"$ref":"#/$defs/uuid"},"at":{"$ref":"#/$defs/count"},"elapsed":{"type":"number","minimum":0,"maximum":9007199254740991},"actor":{"$ref":"#/$defs/id"},"device":{"$ref":"#/$defs/id"},"build":{"$ref":"#/$defs/id"},"schema":{"const":1},"prev":{"$ref":"#/$defs/hash"},"hash":{"$ref":"#/$defs/hash"},"type":{"enum":["opened","gear-chosen","step-claimed","step-done","caution-acknowledged","reading-recorded","not-measurable","not-applicable","predicted","series-recorded","mark-placed","codes-recorded","timer-started","timer-ended","choice-made","photo-attached","note-written","margin-note-written","disturbed","restored","branch-taken","branch-overruled","step-redone","undone","lead-called","released","set-aside","resumed","handed-over","limit-exceeded","alert-raised","alert-acknowledged","stopped","version-notice-answered","finding-reached","write-up-written","closed","verified","signed","amended","joined","clock-jumped","transcribed"]},"data":{"type":"object"}},"required":["runId","seq","id","at","elapsed","actor","device","build","schema","prev","hash","type","data"],"allOf":[{"if":{"properties":{"type":{"const":"opened"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/opened"}}}},{"if":{"properties":{"type":{"const":"gear-chosen"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/gear-chosen"}}}},{"if":{"properties":{"type":{"const":"step-claimed"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/step-claimed"}}}},{"if":{"properties":{"type":{"const":"step-done"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/step-done"}}}},{"if":{"properties":{"type":{"const":"caution-acknowledged"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/caution-acknowledged"}}}},{"if":{"properties":{"type":{"const":"reading-recorded"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/reading-recorded"}}}},{"if":{"properties":{"type":{"const":"not-measurable"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/not-measurable"}}}},{"if":{"properties":{"type":{"const":"not-applicable"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/not-applicable"}}}},{"if":{"properties":{"type":{"const":"predicted"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/predicted"}}}},{"if":{"properties":{"type":{"const":"series-recorded"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/series-recorded"}}}},{"if":{"properties":{"type":{"const":"mark-placed"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/mark-placed"}}}},{"if":{"properties":{"type":{"const":"codes-recorded"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/codes-recorded"}}}},{"if":{"properties":{"type":{"const":"timer-started"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/timer-started"}}}},{"if":{"properties":{"type":{"const":"timer-ended"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/timer-ended"}}}},{"if":{"properties":{"type":{"const":"choice-made"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/choice-made"}}}},{"if":{"properties":{"type":{"const":"photo-attached"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/photo-attached"}}}},{"if":{"properties":{"type":{"const":"note-written"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/note-written"}}}},{"if":{"properties":{"type":{"const":"margin-note-written"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/margin-note-written"}}}},{"if":{"properties":{"type":{"const":"disturbed"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/disturbed"}}}},{"if":{"properties":{"type":{"const":"restored"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/restored"}}}},{"if":{"properties":{"type":{"const":"branch-taken"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/branch-taken"}}}},{"if":{"properties":{"type":{"const":"branch-overruled"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/branch-overruled"}}}},{"if":{"properties":{"type":{"const":"step-redone"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/step-redone"}}}},{"if":{"properties":{"type":{"const":"undone"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/undone"}}}},{"if":{"properties":{"type":{"const":"lead-called"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/lead-called"}}}},{"if":{"properties":{"type":{"const":"released"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/released"}}}},{"if":{"properties":{"type":{"const":"set-aside"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/set-aside"}}}},{"if":{"properties":{"type":{"const":"resumed"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/resumed"}}}},{"if":{"properties":{"type":{"const":"handed-over"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/handed-over"}}}},{"if":{"properties":{"type":{"const":"limit-exceeded"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/limit-exceeded"}}}},{"if":{"properties":{"type":{"const":"alert-raised"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/alert-raised"}}}},{"if":{"properties":{"type":{"const":"alert-acknowledged"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/alert-acknowledged"}}}},{"if":{"properties":{"type":{"const":"stopped"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/stopped"}}}},{"if":{"properties":{"type":{"const":"version-notice-answered"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/version-notice-answered"}}}},{"if":{"properties":{"type":{"const":"finding-reached"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/finding-reached"}}}},{"if":{"properties":{"type":{"const":"write-up-written"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/write-up-written"}}}},{"if":{"properties":{"type":{"const":"closed"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/closed"}}}},{"if":{"properties":{"type":{"const":"verified"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/verified"}}}},{"if":{"properties":{"type":{"const":"signed"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/signed"}}}},{"if":{"properties":{"type":{"const":"amended"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/amended"}}}},{"if":{"properties":{"type":{"const":"joined"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/joined"}}}},{"if":{"properties":{"type":{"const":"clock-jumped"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/clock-jumped"}}}},{"if":{"properties":{"type":{"const":"transcribed"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/transcribed"}}}}],"additionalProperties":false,"$defs":{"unit":{"enum":["kPa","Pa","hPa","bar","psi","inHg","inH2O","mmHg","degC","degF","K","L/min","ft3/min","m3/s","g/s","kg/h","lb/min","L","cm3","m","km","mi","Nm","lbf.ft","V","mV","ohm","kohm","s","min","h","km/h","mph","%","1","rpm","dB"]},"sense":{"enum":["absolute","gauge"]},"id":{"description":"An id or a name of the document.","type":"string","minLength":1,"maxLength":100},"step":{"type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"hash":{"description":"SHA-256, hexadecimal.","type":"string","pattern":"^[0-9a-f]{64}$"},"label":{"type":"string","maxLength":200},"words":{"type":"string","maxLength":4000},"figureText":{"description":"A figure with the digits that were given.","type":"string","minLength":1,"maxLength":40},"seq":{"type":"integer","minimum":1,"maximum":9007199254740991},"count":{"type":"integer","minimum":0,"maximum":9007199254740991},"source":{"enum":["typed","file","simulated","computed"]},"figure":{"type":"object","properties":{"text":{"$ref":"#/$defs/figureText"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"}},"required":["text","unit"],"additionalProperties":false},"inputFigure":{"type":"object","properties":{"text":{"$ref":"#/$defs/figureText"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"source":{"$ref":"#/$defs/label"}},"required":["text","unit","source"],"additionalProperties":false},"instrumentRange":{"type":"object","properties":{"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"low":{"type":"number"},"high":{"type":"number"},"resolution":{"type":"number","minimum":0},"accuracy":{"type":"number","minimum":0}},"required":["unit","low","high","resolution","accuracy"],"additionalProperties":false},"instrument":{"type":"object","properties":{"id":{"$ref":"#/$defs/id"},"kind":{"enum":["pressure-gauge","scan-tool","listening-probe","barometer","thermometer"]},"label":{"$ref":"#/$defs/label"},"shows":{"type":"array","items":{"$ref":"#/$defs/instrumentRange"},"maxItems":20},"dueOn":{"type":"string","pattern":"^[0-9]{4}-[0-9]{2}-[0-9]{2}$"}},"required":["id","kind","label","shows","dueOn"],"additionalProperties":false},"visit":{"type":"object","properties":{"repairOrder":{"$ref":"#/$defs/label"},"vin":{"type":"string","maxLength":40},"car":{"$ref":"#/$defs/label"},"odometer":{"$ref":"#/$defs/figure"},"concern":{"$ref":"#/$defs/words"},"codes":{"type":"array","items":{"type":"string","maxLength":20},"maxItems":100}},"required":["repairOrder","vin","car","odometer","concern","codes"],"additionalProperties":false},"code":{"type":"object","properties":{"code":{"type":"string","minLength":1,"maxLength":20},"status":{"enum":["stored","pending","permanent"]},"freezeFrame":{"$ref":"#/$defs/words"}},"required":["code","status"],"additionalProperties":false},"decisionInput":{"type":"object","properties":{"name":{"$ref":"#/$defs/id"},"label":{"$ref":"#/$defs/label"},"text":{"type":"string","maxLength":200},"unit":{"$ref":"#/$defs/unit"},"uncertainty":{"$ref":"#/$defs/figureText"}},"required":["name","label","text"],"additionalProperties":false},"report":{"type":"string","maxLength":40000},"opened":{"type":"object","properties":{"visit":{"$ref":"#/$defs/visit"},"siteName":{"$ref":"#/$defs/label"},"inputs":{"type":"object","propertyNames":{"type":"string","pattern":"^[a-z][A-Za-z0-9]*$","maxLength":60},"maxProperties":200,"additionalProperties":{"$ref":"#/$defs/inputFigure"}},"person":{"$ref":"#/$defs/label"},"again":{"$ref":"#/$defs/begunAgain"}},"required":["visit","siteName","inputs","person"],"additionalProperties":false},"begunAgain":{"description":"Why a run was begun although others of the same half were known.","type":"object","properties":{"because":{"$ref":"#/$defs/words"},"besides":{"type":"array","items":{"$ref":"#/$defs/anyUuid"},"maxItems":200}},"required":["because","besides"],"additionalProperties":false},"gear-chosen":{"type":"object","properties":{"role":{"$ref":"#/$defs/id"},"instrument":{"$ref":"#/$defs/instrument"},"overdueBecause":{"$ref":"#/$defs/words"}},"required":["role","instrument"],"additionalProperties":false},"step-claimed":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"}},"required":["step"],"additionalProperties":false},"step-done":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"}},"required":["step"],"additionalProperties":false},"caution-acknowledged":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"caution":{"type":"integer","minimum":0,"maximum":1000}},"required":["step","caution"],"additionalProperties":false},"reading-recorded":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"name":{"$ref":"#/$defs/id"},"figure":{"$ref":"#/$defs/figure"},"source":{"$ref":"#/$defs/source"},"way":{"$ref":"#/$defs/id"},"instrument":{"$ref":"#/$defs/id"},"resolution":{"$ref":"#/$defs/figureText"},"uncertainty":{"$ref":"#/$defs/figureText"},"timeS":{"type":"number","minimum":0}},"required":["step","name","figure","source"],"additionalProperties":false},"not-measurable":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"reason":{"$ref":"#/$defs/words"}},"required":["step","reason"],"additionalProperties":false},"not-applicable":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"reason":{"$ref":"#/$defs/words"}},"required":["step","reason"],"additionalProperties":false},"predicted":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"option":{"$ref":"#/$defs/id"}},"required":["step","option"],"additionalProperties":false},"series-recorded":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"name":{"$ref":"#/$defs/id"},"sha256":{"$ref":"#/$defs/hash"},"bytes":{"$ref":"#/$defs/count"},"samples":{"$ref":"#/$defs/count"},"durationS":{"type":"number","minimum":0},"channels":{"type":"array","items":{"type":"object","properties":{"name":{"$ref":"#/$defs/label"},"unit":{"type":"string","maxLength":40},"column":{"$ref":"#/$defs/label"}},"required":["name","unit","column"],"additionalProperties":false},"maxItems":200},"source":{"$ref":"#/$defs/source"},"fileName":{"type":"string","maxLength":400},"skipped":{"$ref":"#/$defs/count"},"problems":{"type":"array","items":{"$ref":"#/$defs/words"},"maxItems":100}},"required":["step","name","sha256","bytes","samples","durationS","channels","source","skipped","problems"],"additionalProperties":false},"mark-placed":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"series":{"$ref":"#/$defs/id"},"mark":{"enum":["noise-begins","noise-stops"]},"timeS":{"type":"number","minimum":0},"by":{"enum":["tap","pedal","suggested"]}},"required":["step","series","mark","timeS","by"],"additionalProperties":false},"codes-recorded":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"name":{"$ref":"#/$defs/id"},"codes":{"type":"array","items":{"$ref":"#/$defs/code"},"maxItems":200}},"required":["step","name","codes"],"additionalProperties":false},"timer-started":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"seconds":{"type":"number","minimum":0}},"required":["step","seconds"],"additionalProperties":false},"timer-ended":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"certain":{"type":"boolean"}},"required":["step","certain"],"additionalProperties":false},"choice-made":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"name":{"$ref":"#/$defs/id"},"options":{"type":"array","items":{"$ref":"#/$defs/id"},"maxItems":50},"text":{"$ref":"#/$defs/words"}},"required":["step","name","options"],"additionalProperties":false},"photo-attached":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"sha256":{"$ref":"#/$defs/hash"},"bytes":{"$ref":"#/$defs/count"},"mediaType":{"type":"string","maxLength":100}},"required":["step","sha256","bytes","mediaType"],"additionalProperties":false},"note-written":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"text":{"$ref":"#/$defs/words"}},"required":["step","text"],"additionalProperties":false},"margin-note-written":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"text":{"$ref":"#/$defs/words"}},"required":["step","text"],"additionalProperties":false},"disturbed":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"item":{"$ref":"#/$defs/id"},"label":{"$ref":"#/$defs/label"}},"required":["step","item","label"],"additionalProperties":false},"restored":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"item":{"$ref":"#/$defs/id"}},"required":["step","item"],"additionalProperties":false},"branch-taken":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"to":{"$ref":"#/$defs/step"},"exit":{"type":"string","minLength":1,"maxLength":60},"when":{"type":"string","maxLength":2000},"inputs":{"type":"array","items":{"$ref":"#/$defs/decisionInput"},"maxItems":400},"because":{"$ref":"#/$defs/words"},"verdict":{"$ref":"#/$defs/step"}},"required":["step","to","exit","inputs","because"],"additionalProperties":false},"branch-overruled":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"computed":{"$ref":"#/$defs/id"},"chosen":{"$ref":"#/$defs/id"},"reason":{"$ref":"#/$defs/words"}},"required":["step","computed","chosen","reason"],"additionalProperties":false},"step-redone":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"reason":{"$ref":"#/$defs/words"}},"required":["step","reason"],"additionalProperties":false},"undone":{"type":"object","properties":{"seq":{"$ref":"#/$defs/seq"},"reason":{"$ref":"#/$defs/words"}},"required":["seq","reason"],"additionalProperties":false},"lead-called":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"question":{"$ref":"#/$defs/words"}},"required":["step","question"],"additionalProperties":false},"released":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"evidence":{"$ref":"#/$defs/words"}},"required":["step","evidence"],"additionalProperties":false},"set-aside":{"type":"object","properties":{"reason":{"$ref":"#/$defs/words"}},"required":["reason"],"additionalProperties":false},"resumed":{"type":"object","properties":{"from":{"enum":["set-aside","stopped","reload","lead-called"]}},"required":["from"],"additionalProperties":false},"handed-over":{"type":"object","properties":{"to":{"$ref":"#/$defs/id"},"reason":{"$ref":"#/$defs/words"}},"required":["to","reason"],"additionalProperties":false},"limit-exceeded":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"limit":{"$ref":"#/$defs/id"},"name":{"$ref":"#/$defs/id"},"figure":{"$ref":"#/$defs/figure"}},"required":["step","limit","name","figure"],"additionalProperties":false},"alert-raised":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"text":{"$ref":"#/$defs/words"}},"required":["step","text"],"additionalProperties":false},"alert-acknowledged":{"type":"object","properties":{"seq":{"$ref":"#/$defs/seq"}},"required":["seq"],"additionalProperties":false},"stopped":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"reason":{"$ref":"#/$defs/words"}},"required":["step","reason"],"additionalProperties":false},"version-notice-answered":{"type":"object","properties":{"version":{"$ref":"#/$defs/seq"},"answer":{"enum":["go-on","end"]}},"required":["version","answer"],"additionalProperties":false},"finding-reached":{"type":"object","properties":{"finding":{"$ref":"#/$defs/step"},"verdict":{"$ref":"#/$defs/words"}},"required":["finding","verdict"],"additionalProperties":false},"write-up-written":{"type":"object","properties":{"concern":{"$ref":"#/$defs/report"},"cause":{"$ref":"#/$defs/report"},"correction":{"$ref":"#/$defs/report"},"customer":{"$ref":"#/$defs/report"},"edited":{"type":"array","items":{"enum":["concern","cause","correction","customer"]},"maxItems":4}},"required":["concern","cause","correction","customer","edited"],"additionalProperties":false},"closed":{"type":"object","properties":{"finding":{"$ref":"#/$defs/step"}},"required":["finding"],"additionalProperties":false},"verified":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"by":{"$ref":"#/$defs/id"}},"required":["step","by"],"additionalProperties":false},"signed":{"type":"object","properties":{"head":{"$ref":"#/$defs/hash"},"meaning":{"enum":["performed","reviewed"]},"signature":{"type":"string","minLength":1,"maxLength":1000},"key":{"type":"string","minLength":1,"maxLength":1000}},"required":["head","meaning","signature","key"],"additionalProperties":false},"amended":{"type":"object","properties":{"text":{"$ref":"#/$defs/words"},"reason":{"$ref":"#/$defs/words"}},"required":["text","reason"],"additionalProperties":false},"joined":{"type":"object","properties":{"branch":{"$ref":"#/$defs/id"},"head":{"$ref":"#/$defs/hash"}},"required":["branch","head"],"additionalProperties":false},"clock-jumped":{"type":"object","properties":{"byMs":{"type":"number"}},"required":["byMs"],"additionalProperties":false},"transcribed":{"type":"object","properties":{"from":{"$ref":"#/$defs/words"}},"required":["from"],"additionalProperties":false},"anyUuid":{"type":"string","pattern":"^[0-9a-f]{8}(-[0-9a-f]{4}){3}-[0-9a-f]{12}$"},"uuid":{"type":"string","pattern":"^[0-9a-f]{8}-[0-9a-f]{4}-7[0-9a-f]{3}-[89ab][0-9a-f]{3}-[0-9a-f]{12}$"}}};
+const schema20 = {"type":"object","properties":{"visit":{"$ref":"#/$defs/visit"},"siteName":{"$ref":"#/$defs/label"},"inputs":{"type":"object","propertyNames":{"type":"string","pattern":"^[a-z][A-Za-z0-9]*$","maxLength":60},"maxProperties":200,"additionalProperties":{"$ref":"#/$defs/inputFigure"}},"person":{"$ref":"#/$defs/label"},"again":{"$ref":"#/$defs/begunAgain"}},"required":["visit","siteName","inputs","person"],"additionalProperties":false};
 const schema21 = {"type":"object","properties":{"repairOrder":{"$ref":"#/$defs/label"},"vin":{"type":"string","maxLength":40},"car":{"$ref":"#/$defs/label"},"odometer":{"$ref":"#/$defs/figure"},"concern":{"$ref":"#/$defs/words"},"codes":{"type":"array","items":{"type":"string","maxLength":20},"maxItems":100}},"required":["repairOrder","vin","car","odometer","concern","codes"],"additionalProperties":false};
 const schema22 = {"type":"string","maxLength":200};
 const func1 = (text) => [...text].length;
@@ -561,6 +561,145 @@ return errors === 0;
 }
 validate70.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
+const schema29 = {"description":"Why a run was begun although others of the same half were known.","type":"object","properties":{"because":{"$ref":"#/$defs/words"},"besides":{"type":"array","items":{"$ref":"#/$defs/anyUuid"},"maxItems":200}},"required":["because","besides"],"additionalProperties":false};
+const schema30 = {"type":"string","pattern":"^[0-9a-f]{8}(-[0-9a-f]{4}){3}-[0-9a-f]{12}$"};
+const pattern4 = new RegExp("^[0-9a-f]{8}(-[0-9a-f]{4}){3}-[0-9a-f]{12}$", "u");
+
+function validate79(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+let vErrors = null;
+let errors = 0;
+const evaluated0 = validate79.evaluated;
+if(evaluated0.dynamicProps){
+evaluated0.props = undefined;
+}
+if(evaluated0.dynamicItems){
+evaluated0.items = undefined;
+}
+if(typeof data === "string"){
+if(!pattern4.test(data)){
+const err0 = {instancePath,schemaPath:"#/pattern",keyword:"pattern",params:{pattern: "^[0-9a-f]{8}(-[0-9a-f]{4}){3}-[0-9a-f]{12}$"},message:"must match pattern \""+"^[0-9a-f]{8}(-[0-9a-f]{4}){3}-[0-9a-f]{12}$"+"\""};
+if(vErrors === null){
+vErrors = [err0];
+}
+else {
+vErrors.push(err0);
+}
+errors++;
+}
+}
+else {
+const err1 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "string"},message:"must be string"};
+if(vErrors === null){
+vErrors = [err1];
+}
+else {
+vErrors.push(err1);
+}
+errors++;
+}
+validate79.errors = vErrors;
+return errors === 0;
+}
+validate79.evaluated = {"dynamicProps":false,"dynamicItems":false};
+
+
+function validate77(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+let vErrors = null;
+let errors = 0;
+const evaluated0 = validate77.evaluated;
+if(evaluated0.dynamicProps){
+evaluated0.props = undefined;
+}
+if(evaluated0.dynamicItems){
+evaluated0.items = undefined;
+}
+if(data && typeof data == "object" && !Array.isArray(data)){
+if(data.because === undefined){
+const err0 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "because"},message:"must have required property '"+"because"+"'"};
+if(vErrors === null){
+vErrors = [err0];
+}
+else {
+vErrors.push(err0);
+}
+errors++;
+}
+if(data.besides === undefined){
+const err1 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "besides"},message:"must have required property '"+"besides"+"'"};
+if(vErrors === null){
+vErrors = [err1];
+}
+else {
+vErrors.push(err1);
+}
+errors++;
+}
+for(const key0 in data){
+if(!((key0 === "because") || (key0 === "besides"))){
+const err2 = {instancePath,schemaPath:"#/additionalProperties",keyword:"additionalProperties",params:{additionalProperty: key0},message:"must NOT have additional properties"};
+if(vErrors === null){
+vErrors = [err2];
+}
+else {
+vErrors.push(err2);
+}
+errors++;
+}
+}
+if(data.because !== undefined){
+if(!(validate66(data.because, {instancePath:instancePath+"/because",parentData:data,parentDataProperty:"because",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate66.errors : vErrors.concat(validate66.errors);
+errors = vErrors.length;
+}
+}
+if(data.besides !== undefined){
+let data1 = data.besides;
+if(Array.isArray(data1)){
+if(data1.length > 200){
+const err3 = {instancePath:instancePath+"/besides",schemaPath:"#/properties/besides/maxItems",keyword:"maxItems",params:{limit: 200},message:"must NOT have more than 200 items"};
+if(vErrors === null){
+vErrors = [err3];
+}
+else {
+vErrors.push(err3);
+}
+errors++;
+}
+const len0 = data1.length;
+for(let i0=0; i0<len0; i0++){
+if(!(validate79(data1[i0], {instancePath:instancePath+"/besides/" + i0,parentData:data1,parentDataProperty:i0,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate79.errors : vErrors.concat(validate79.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err4 = {instancePath:instancePath+"/besides",schemaPath:"#/properties/besides/type",keyword:"type",params:{type: "array"},message:"must be array"};
+if(vErrors === null){
+vErrors = [err4];
+}
+else {
+vErrors.push(err4);
+}
+errors++;
+}
+}
+}
+else {
+const err5 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
+if(vErrors === null){
+vErrors = [err5];
+}
+else {
+vErrors.push(err5);
+}
+errors++;
+}
+validate77.errors = vErrors;
+return errors === 0;
+}
+validate77.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+
 const pattern3 = new RegExp("^[a-z][A-Za-z0-9]*$", "u");
 
 function validate53(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
@@ -615,7 +754,7 @@ vErrors.push(err3);
 errors++;
 }
 for(const key0 in data){
-if(!((((key0 === "visit") || (key0 === "siteName")) || (key0 === "inputs")) || (key0 === "person"))){
+if(!(((((key0 === "visit") || (key0 === "siteName")) || (key0 === "inputs")) || (key0 === "person")) || (key0 === "again"))){
 const err4 = {instancePath,schemaPath:"#/additionalProperties",keyword:"additionalProperties",params:{additionalProperty: key0},message:"must NOT have additional properties"};
 if(vErrors === null){
 vErrors = [err4];
@@ -721,6 +860,12 @@ vErrors = vErrors === null ? validate55.errors : vErrors.concat(validate55.error
 errors = vErrors.length;
 }
 }
+if(data.again !== undefined){
+if(!(validate77(data.again, {instancePath:instancePath+"/again",parentData:data,parentDataProperty:"again",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate77.errors : vErrors.concat(validate77.errors);
+errors = vErrors.length;
+}
+}
 }
 else {
 const err11 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
@@ -737,13 +882,13 @@ return errors === 0;
 }
 validate53.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema29 = {"type":"object","properties":{"role":{"$ref":"#/$defs/id"},"instrument":{"$ref":"#/$defs/instrument"},"overdueBecause":{"$ref":"#/$defs/words"}},"required":["role","instrument"],"additionalProperties":false};
-const schema30 = {"description":"An id or a name of the document.","type":"string","minLength":1,"maxLength":100};
+const schema31 = {"type":"object","properties":{"role":{"$ref":"#/$defs/id"},"instrument":{"$ref":"#/$defs/instrument"},"overdueBecause":{"$ref":"#/$defs/words"}},"required":["role","instrument"],"additionalProperties":false};
+const schema32 = {"description":"An id or a name of the document.","type":"string","minLength":1,"maxLength":100};
 
-function validate79(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate84(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate79.evaluated;
+const evaluated0 = validate84.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -782,18 +927,18 @@ vErrors.push(err2);
 }
 errors++;
 }
-validate79.errors = vErrors;
+validate84.errors = vErrors;
 return errors === 0;
 }
-validate79.evaluated = {"dynamicProps":false,"dynamicItems":false};
+validate84.evaluated = {"dynamicProps":false,"dynamicItems":false};
 
-const schema31 = {"type":"object","properties":{"id":{"$ref":"#/$defs/id"},"kind":{"enum":["pressure-gauge","scan-tool","listening-probe","barometer","thermometer"]},"label":{"$ref":"#/$defs/label"},"shows":{"type":"array","items":{"$ref":"#/$defs/instrumentRange"},"maxItems":20},"dueOn":{"type":"string","pattern":"^[0-9]{4}-[0-9]{2}-[0-9]{2}$"}},"required":["id","kind","label","shows","dueOn"],"additionalProperties":false};
-const schema32 = {"type":"object","properties":{"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"low":{"type":"number"},"high":{"type":"number"},"resolution":{"type":"number","minimum":0},"accuracy":{"type":"number","minimum":0}},"required":["unit","low","high","resolution","accuracy"],"additionalProperties":false};
+const schema33 = {"type":"object","properties":{"id":{"$ref":"#/$defs/id"},"kind":{"enum":["pressure-gauge","scan-tool","listening-probe","barometer","thermometer"]},"label":{"$ref":"#/$defs/label"},"shows":{"type":"array","items":{"$ref":"#/$defs/instrumentRange"},"maxItems":20},"dueOn":{"type":"string","pattern":"^[0-9]{4}-[0-9]{2}-[0-9]{2}$"}},"required":["id","kind","label","shows","dueOn"],"additionalProperties":false};
+const schema34 = {"type":"object","properties":{"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"low":{"type":"number"},"high":{"type":"number"},"resolution":{"type":"number","minimum":0},"accuracy":{"type":"number","minimum":0}},"required":["unit","low","high","resolution","accuracy"],"additionalProperties":false};
 
-function validate84(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate89(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate84.evaluated;
+const evaluated0 = validate89.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -962,17 +1107,17 @@ vErrors.push(err12);
 }
 errors++;
 }
-validate84.errors = vErrors;
+validate89.errors = vErrors;
 return errors === 0;
 }
-validate84.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate89.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const pattern4 = new RegExp("^[0-9]{4}-[0-9]{2}-[0-9]{2}$", "u");
+const pattern5 = new RegExp("^[0-9]{4}-[0-9]{2}-[0-9]{2}$", "u");
 
-function validate81(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate86(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate81.evaluated;
+const evaluated0 = validate86.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -1043,15 +1188,15 @@ errors++;
 }
 }
 if(data.id !== undefined){
-if(!(validate79(data.id, {instancePath:instancePath+"/id",parentData:data,parentDataProperty:"id",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate79.errors : vErrors.concat(validate79.errors);
+if(!(validate84(data.id, {instancePath:instancePath+"/id",parentData:data,parentDataProperty:"id",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate84.errors : vErrors.concat(validate84.errors);
 errors = vErrors.length;
 }
 }
 if(data.kind !== undefined){
 let data1 = data.kind;
 if(!(((((data1 === "pressure-gauge") || (data1 === "scan-tool")) || (data1 === "listening-probe")) || (data1 === "barometer")) || (data1 === "thermometer"))){
-const err6 = {instancePath:instancePath+"/kind",schemaPath:"#/properties/kind/enum",keyword:"enum",params:{allowedValues: schema31.properties.kind.enum},message:"must be equal to one of the allowed values"};
+const err6 = {instancePath:instancePath+"/kind",schemaPath:"#/properties/kind/enum",keyword:"enum",params:{allowedValues: schema33.properties.kind.enum},message:"must be equal to one of the allowed values"};
 if(vErrors === null){
 vErrors = [err6];
 }
@@ -1082,8 +1227,8 @@ errors++;
 }
 const len0 = data3.length;
 for(let i0=0; i0<len0; i0++){
-if(!(validate84(data3[i0], {instancePath:instancePath+"/shows/" + i0,parentData:data3,parentDataProperty:i0,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate84.errors : vErrors.concat(validate84.errors);
+if(!(validate89(data3[i0], {instancePath:instancePath+"/shows/" + i0,parentData:data3,parentDataProperty:i0,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate89.errors : vErrors.concat(validate89.errors);
 errors = vErrors.length;
 }
 }
@@ -1102,7 +1247,7 @@ errors++;
 if(data.dueOn !== undefined){
 let data5 = data.dueOn;
 if(typeof data5 === "string"){
-if(!pattern4.test(data5)){
+if(!pattern5.test(data5)){
 const err9 = {instancePath:instancePath+"/dueOn",schemaPath:"#/properties/dueOn/pattern",keyword:"pattern",params:{pattern: "^[0-9]{4}-[0-9]{2}-[0-9]{2}$"},message:"must match pattern \""+"^[0-9]{4}-[0-9]{2}-[0-9]{2}$"+"\""};
 if(vErrors === null){
 vErrors = [err9];
@@ -1135,16 +1280,16 @@ vErrors.push(err11);
 }
 errors++;
 }
-validate81.errors = vErrors;
+validate86.errors = vErrors;
 return errors === 0;
 }
-validate81.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate86.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 
-function validate78(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate83(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate78.evaluated;
+const evaluated0 = validate83.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -1185,14 +1330,14 @@ errors++;
 }
 }
 if(data.role !== undefined){
-if(!(validate79(data.role, {instancePath:instancePath+"/role",parentData:data,parentDataProperty:"role",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate79.errors : vErrors.concat(validate79.errors);
+if(!(validate84(data.role, {instancePath:instancePath+"/role",parentData:data,parentDataProperty:"role",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate84.errors : vErrors.concat(validate84.errors);
 errors = vErrors.length;
 }
 }
 if(data.instrument !== undefined){
-if(!(validate81(data.instrument, {instancePath:instancePath+"/instrument",parentData:data,parentDataProperty:"instrument",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate81.errors : vErrors.concat(validate81.errors);
+if(!(validate86(data.instrument, {instancePath:instancePath+"/instrument",parentData:data,parentDataProperty:"instrument",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate86.errors : vErrors.concat(validate86.errors);
 errors = vErrors.length;
 }
 }
@@ -1213,19 +1358,19 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate78.errors = vErrors;
+validate83.errors = vErrors;
 return errors === 0;
 }
-validate78.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate83.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema33 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"}},"required":["step"],"additionalProperties":false};
-const schema34 = {"type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60};
-const pattern5 = new RegExp("^[A-Za-z][A-Za-z0-9-]*$", "u");
+const schema35 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"}},"required":["step"],"additionalProperties":false};
+const schema36 = {"type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60};
+const pattern6 = new RegExp("^[A-Za-z][A-Za-z0-9-]*$", "u");
 
-function validate92(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate97(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate92.evaluated;
+const evaluated0 = validate97.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -1243,7 +1388,7 @@ vErrors.push(err0);
 }
 errors++;
 }
-if(!pattern5.test(data)){
+if(!pattern6.test(data)){
 const err1 = {instancePath,schemaPath:"#/pattern",keyword:"pattern",params:{pattern: "^[A-Za-z][A-Za-z0-9-]*$"},message:"must match pattern \""+"^[A-Za-z][A-Za-z0-9-]*$"+"\""};
 if(vErrors === null){
 vErrors = [err1];
@@ -1264,16 +1409,16 @@ vErrors.push(err2);
 }
 errors++;
 }
-validate92.errors = vErrors;
+validate97.errors = vErrors;
 return errors === 0;
 }
-validate92.evaluated = {"dynamicProps":false,"dynamicItems":false};
+validate97.evaluated = {"dynamicProps":false,"dynamicItems":false};
 
 
-function validate91(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate96(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate91.evaluated;
+const evaluated0 = validate96.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -1304,8 +1449,8 @@ errors++;
 }
 }
 if(data.step !== undefined){
-if(!(validate92(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+if(!(validate97(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
 errors = vErrors.length;
 }
 }
@@ -1320,17 +1465,17 @@ vErrors.push(err2);
 }
 errors++;
 }
-validate91.errors = vErrors;
+validate96.errors = vErrors;
 return errors === 0;
 }
-validate91.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate96.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema35 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"}},"required":["step"],"additionalProperties":false};
+const schema37 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"}},"required":["step"],"additionalProperties":false};
 
-function validate95(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate100(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate95.evaluated;
+const evaluated0 = validate100.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -1361,8 +1506,8 @@ errors++;
 }
 }
 if(data.step !== undefined){
-if(!(validate92(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+if(!(validate97(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
 errors = vErrors.length;
 }
 }
@@ -1377,17 +1522,17 @@ vErrors.push(err2);
 }
 errors++;
 }
-validate95.errors = vErrors;
+validate100.errors = vErrors;
 return errors === 0;
 }
-validate95.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate100.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema36 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"caution":{"type":"integer","minimum":0,"maximum":1000}},"required":["step","caution"],"additionalProperties":false};
+const schema38 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"caution":{"type":"integer","minimum":0,"maximum":1000}},"required":["step","caution"],"additionalProperties":false};
 
-function validate98(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate103(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate98.evaluated;
+const evaluated0 = validate103.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -1428,8 +1573,8 @@ errors++;
 }
 }
 if(data.step !== undefined){
-if(!(validate92(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+if(!(validate97(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
 errors = vErrors.length;
 }
 }
@@ -1479,19 +1624,19 @@ vErrors.push(err6);
 }
 errors++;
 }
-validate98.errors = vErrors;
+validate103.errors = vErrors;
 return errors === 0;
 }
-validate98.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate103.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema37 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"name":{"$ref":"#/$defs/id"},"figure":{"$ref":"#/$defs/figure"},"source":{"$ref":"#/$defs/source"},"way":{"$ref":"#/$defs/id"},"instrument":{"$ref":"#/$defs/id"},"resolution":{"$ref":"#/$defs/figureText"},"uncertainty":{"$ref":"#/$defs/figureText"},"timeS":{"type":"number","minimum":0}},"required":["step","name","figure","source"],"additionalProperties":false};
+const schema39 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"name":{"$ref":"#/$defs/id"},"figure":{"$ref":"#/$defs/figure"},"source":{"$ref":"#/$defs/source"},"way":{"$ref":"#/$defs/id"},"instrument":{"$ref":"#/$defs/id"},"resolution":{"$ref":"#/$defs/figureText"},"uncertainty":{"$ref":"#/$defs/figureText"},"timeS":{"type":"number","minimum":0}},"required":["step","name","figure","source"],"additionalProperties":false};
 const func11 = Object.prototype.hasOwnProperty;
-const schema38 = {"enum":["typed","file","simulated","computed"]};
+const schema40 = {"enum":["typed","file","simulated","computed"]};
 
-function validate105(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate110(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate105.evaluated;
+const evaluated0 = validate110.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -1499,7 +1644,7 @@ if(evaluated0.dynamicItems){
 evaluated0.items = undefined;
 }
 if(!((((data === "typed") || (data === "file")) || (data === "simulated")) || (data === "computed"))){
-const err0 = {instancePath,schemaPath:"#/enum",keyword:"enum",params:{allowedValues: schema38.enum},message:"must be equal to one of the allowed values"};
+const err0 = {instancePath,schemaPath:"#/enum",keyword:"enum",params:{allowedValues: schema40.enum},message:"must be equal to one of the allowed values"};
 if(vErrors === null){
 vErrors = [err0];
 }
@@ -1508,16 +1653,16 @@ vErrors.push(err0);
 }
 errors++;
 }
-validate105.errors = vErrors;
+validate110.errors = vErrors;
 return errors === 0;
 }
-validate105.evaluated = {"dynamicProps":false,"dynamicItems":false};
+validate110.evaluated = {"dynamicProps":false,"dynamicItems":false};
 
 
-function validate101(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate106(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate101.evaluated;
+const evaluated0 = validate106.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -1566,7 +1711,7 @@ vErrors.push(err3);
 errors++;
 }
 for(const key0 in data){
-if(!(func11.call(schema37.properties, key0))){
+if(!(func11.call(schema39.properties, key0))){
 const err4 = {instancePath,schemaPath:"#/additionalProperties",keyword:"additionalProperties",params:{additionalProperty: key0},message:"must NOT have additional properties"};
 if(vErrors === null){
 vErrors = [err4];
@@ -1578,14 +1723,14 @@ errors++;
 }
 }
 if(data.step !== undefined){
-if(!(validate92(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+if(!(validate97(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
 errors = vErrors.length;
 }
 }
 if(data.name !== undefined){
-if(!(validate79(data.name, {instancePath:instancePath+"/name",parentData:data,parentDataProperty:"name",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate79.errors : vErrors.concat(validate79.errors);
+if(!(validate84(data.name, {instancePath:instancePath+"/name",parentData:data,parentDataProperty:"name",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate84.errors : vErrors.concat(validate84.errors);
 errors = vErrors.length;
 }
 }
@@ -1596,20 +1741,20 @@ errors = vErrors.length;
 }
 }
 if(data.source !== undefined){
-if(!(validate105(data.source, {instancePath:instancePath+"/source",parentData:data,parentDataProperty:"source",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate105.errors : vErrors.concat(validate105.errors);
+if(!(validate110(data.source, {instancePath:instancePath+"/source",parentData:data,parentDataProperty:"source",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate110.errors : vErrors.concat(validate110.errors);
 errors = vErrors.length;
 }
 }
 if(data.way !== undefined){
-if(!(validate79(data.way, {instancePath:instancePath+"/way",parentData:data,parentDataProperty:"way",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate79.errors : vErrors.concat(validate79.errors);
+if(!(validate84(data.way, {instancePath:instancePath+"/way",parentData:data,parentDataProperty:"way",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate84.errors : vErrors.concat(validate84.errors);
 errors = vErrors.length;
 }
 }
 if(data.instrument !== undefined){
-if(!(validate79(data.instrument, {instancePath:instancePath+"/instrument",parentData:data,parentDataProperty:"instrument",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate79.errors : vErrors.concat(validate79.errors);
+if(!(validate84(data.instrument, {instancePath:instancePath+"/instrument",parentData:data,parentDataProperty:"instrument",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate84.errors : vErrors.concat(validate84.errors);
 errors = vErrors.length;
 }
 }
@@ -1661,17 +1806,17 @@ vErrors.push(err7);
 }
 errors++;
 }
-validate101.errors = vErrors;
+validate106.errors = vErrors;
 return errors === 0;
 }
-validate101.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate106.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema39 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"reason":{"$ref":"#/$defs/words"}},"required":["step","reason"],"additionalProperties":false};
+const schema41 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"reason":{"$ref":"#/$defs/words"}},"required":["step","reason"],"additionalProperties":false};
 
-function validate112(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate117(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate112.evaluated;
+const evaluated0 = validate117.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -1712,8 +1857,8 @@ errors++;
 }
 }
 if(data.step !== undefined){
-if(!(validate92(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+if(!(validate97(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
 errors = vErrors.length;
 }
 }
@@ -1734,17 +1879,17 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate112.errors = vErrors;
+validate117.errors = vErrors;
 return errors === 0;
 }
-validate112.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate117.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema40 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"reason":{"$ref":"#/$defs/words"}},"required":["step","reason"],"additionalProperties":false};
+const schema42 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"reason":{"$ref":"#/$defs/words"}},"required":["step","reason"],"additionalProperties":false};
 
-function validate116(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate121(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate116.evaluated;
+const evaluated0 = validate121.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -1785,8 +1930,8 @@ errors++;
 }
 }
 if(data.step !== undefined){
-if(!(validate92(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+if(!(validate97(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
 errors = vErrors.length;
 }
 }
@@ -1807,17 +1952,17 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate116.errors = vErrors;
+validate121.errors = vErrors;
 return errors === 0;
 }
-validate116.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate121.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema41 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"option":{"$ref":"#/$defs/id"}},"required":["step","option"],"additionalProperties":false};
+const schema43 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"option":{"$ref":"#/$defs/id"}},"required":["step","option"],"additionalProperties":false};
 
-function validate120(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate125(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate120.evaluated;
+const evaluated0 = validate125.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -1858,14 +2003,14 @@ errors++;
 }
 }
 if(data.step !== undefined){
-if(!(validate92(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+if(!(validate97(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
 errors = vErrors.length;
 }
 }
 if(data.option !== undefined){
-if(!(validate79(data.option, {instancePath:instancePath+"/option",parentData:data,parentDataProperty:"option",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate79.errors : vErrors.concat(validate79.errors);
+if(!(validate84(data.option, {instancePath:instancePath+"/option",parentData:data,parentDataProperty:"option",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate84.errors : vErrors.concat(validate84.errors);
 errors = vErrors.length;
 }
 }
@@ -1880,19 +2025,19 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate120.errors = vErrors;
+validate125.errors = vErrors;
 return errors === 0;
 }
-validate120.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate125.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema42 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"name":{"$ref":"#/$defs/id"},"sha256":{"$ref":"#/$defs/hash"},"bytes":{"$ref":"#/$defs/count"},"samples":{"$ref":"#/$defs/count"},"durationS":{"type":"number","minimum":0},"channels":{"type":"array","items":{"type":"object","properties":{"name":{"$ref":"#/$defs/label"},"unit":{"type":"string","maxLength":40},"column":{"$ref":"#/$defs/label"}},"required":["name","unit","column"],"additionalProperties":false},"maxItems":200},"source":{"$ref":"#/$defs/source"},"fileName":{"type":"string","maxLength":400},"skipped":{"$ref":"#/$defs/count"},"problems":{"type":"array","items":{"$ref":"#/$defs/words"},"maxItems":100}},"required":["step","name","sha256","bytes","samples","durationS","channels","source","skipped","problems"],"additionalProperties":false};
-const schema43 = {"description":"SHA-256, hexadecimal.","type":"string","pattern":"^[0-9a-f]{64}$"};
-const pattern6 = new RegExp("^[0-9a-f]{64}$", "u");
+const schema44 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"name":{"$ref":"#/$defs/id"},"sha256":{"$ref":"#/$defs/hash"},"bytes":{"$ref":"#/$defs/count"},"samples":{"$ref":"#/$defs/count"},"durationS":{"type":"number","minimum":0},"channels":{"type":"array","items":{"type":"object","properties":{"name":{"$ref":"#/$defs/label"},"unit":{"type":"string","maxLength":40},"column":{"$ref":"#/$defs/label"}},"required":["name","unit","column"],"additionalProperties":false},"maxItems":200},"source":{"$ref":"#/$defs/source"},"fileName":{"type":"string","maxLength":400},"skipped":{"$ref":"#/$defs/count"},"problems":{"type":"array","items":{"$ref":"#/$defs/words"},"maxItems":100}},"required":["step","name","sha256","bytes","samples","durationS","channels","source","skipped","problems"],"additionalProperties":false};
+const schema45 = {"description":"SHA-256, hexadecimal.","type":"string","pattern":"^[0-9a-f]{64}$"};
+const pattern7 = new RegExp("^[0-9a-f]{64}$", "u");
 
-function validate127(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate132(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate127.evaluated;
+const evaluated0 = validate132.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -1900,7 +2045,7 @@ if(evaluated0.dynamicItems){
 evaluated0.items = undefined;
 }
 if(typeof data === "string"){
-if(!pattern6.test(data)){
+if(!pattern7.test(data)){
 const err0 = {instancePath,schemaPath:"#/pattern",keyword:"pattern",params:{pattern: "^[0-9a-f]{64}$"},message:"must match pattern \""+"^[0-9a-f]{64}$"+"\""};
 if(vErrors === null){
 vErrors = [err0];
@@ -1921,17 +2066,17 @@ vErrors.push(err1);
 }
 errors++;
 }
-validate127.errors = vErrors;
+validate132.errors = vErrors;
 return errors === 0;
 }
-validate127.evaluated = {"dynamicProps":false,"dynamicItems":false};
+validate132.evaluated = {"dynamicProps":false,"dynamicItems":false};
 
-const schema44 = {"type":"integer","minimum":0,"maximum":9007199254740991};
+const schema46 = {"type":"integer","minimum":0,"maximum":9007199254740991};
 
-function validate129(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate134(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate129.evaluated;
+const evaluated0 = validate134.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -1970,16 +2115,16 @@ vErrors.push(err2);
 errors++;
 }
 }
-validate129.errors = vErrors;
+validate134.errors = vErrors;
 return errors === 0;
 }
-validate129.evaluated = {"dynamicProps":false,"dynamicItems":false};
+validate134.evaluated = {"dynamicProps":false,"dynamicItems":false};
 
 
-function validate124(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate129(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate124.evaluated;
+const evaluated0 = validate129.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -2088,7 +2233,7 @@ vErrors.push(err9);
 errors++;
 }
 for(const key0 in data){
-if(!(func11.call(schema42.properties, key0))){
+if(!(func11.call(schema44.properties, key0))){
 const err10 = {instancePath,schemaPath:"#/additionalProperties",keyword:"additionalProperties",params:{additionalProperty: key0},message:"must NOT have additional properties"};
 if(vErrors === null){
 vErrors = [err10];
@@ -2100,32 +2245,32 @@ errors++;
 }
 }
 if(data.step !== undefined){
-if(!(validate92(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+if(!(validate97(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
 errors = vErrors.length;
 }
 }
 if(data.name !== undefined){
-if(!(validate79(data.name, {instancePath:instancePath+"/name",parentData:data,parentDataProperty:"name",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate79.errors : vErrors.concat(validate79.errors);
+if(!(validate84(data.name, {instancePath:instancePath+"/name",parentData:data,parentDataProperty:"name",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate84.errors : vErrors.concat(validate84.errors);
 errors = vErrors.length;
 }
 }
 if(data.sha256 !== undefined){
-if(!(validate127(data.sha256, {instancePath:instancePath+"/sha256",parentData:data,parentDataProperty:"sha256",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate127.errors : vErrors.concat(validate127.errors);
+if(!(validate132(data.sha256, {instancePath:instancePath+"/sha256",parentData:data,parentDataProperty:"sha256",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate132.errors : vErrors.concat(validate132.errors);
 errors = vErrors.length;
 }
 }
 if(data.bytes !== undefined){
-if(!(validate129(data.bytes, {instancePath:instancePath+"/bytes",parentData:data,parentDataProperty:"bytes",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate129.errors : vErrors.concat(validate129.errors);
+if(!(validate134(data.bytes, {instancePath:instancePath+"/bytes",parentData:data,parentDataProperty:"bytes",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate134.errors : vErrors.concat(validate134.errors);
 errors = vErrors.length;
 }
 }
 if(data.samples !== undefined){
-if(!(validate129(data.samples, {instancePath:instancePath+"/samples",parentData:data,parentDataProperty:"samples",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate129.errors : vErrors.concat(validate129.errors);
+if(!(validate134(data.samples, {instancePath:instancePath+"/samples",parentData:data,parentDataProperty:"samples",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate134.errors : vErrors.concat(validate134.errors);
 errors = vErrors.length;
 }
 }
@@ -2275,8 +2420,8 @@ errors++;
 }
 }
 if(data.source !== undefined){
-if(!(validate105(data.source, {instancePath:instancePath+"/source",parentData:data,parentDataProperty:"source",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate105.errors : vErrors.concat(validate105.errors);
+if(!(validate110(data.source, {instancePath:instancePath+"/source",parentData:data,parentDataProperty:"source",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate110.errors : vErrors.concat(validate110.errors);
 errors = vErrors.length;
 }
 }
@@ -2306,8 +2451,8 @@ errors++;
 }
 }
 if(data.skipped !== undefined){
-if(!(validate129(data.skipped, {instancePath:instancePath+"/skipped",parentData:data,parentDataProperty:"skipped",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate129.errors : vErrors.concat(validate129.errors);
+if(!(validate134(data.skipped, {instancePath:instancePath+"/skipped",parentData:data,parentDataProperty:"skipped",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate134.errors : vErrors.concat(validate134.errors);
 errors = vErrors.length;
 }
 }
@@ -2354,17 +2499,17 @@ vErrors.push(err26);
 }
 errors++;
 }
-validate124.errors = vErrors;
+validate129.errors = vErrors;
 return errors === 0;
 }
-validate124.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate129.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema45 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"series":{"$ref":"#/$defs/id"},"mark":{"enum":["noise-begins","noise-stops"]},"timeS":{"type":"number","minimum":0},"by":{"enum":["tap","pedal","suggested"]}},"required":["step","series","mark","timeS","by"],"additionalProperties":false};
+const schema47 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"series":{"$ref":"#/$defs/id"},"mark":{"enum":["noise-begins","noise-stops"]},"timeS":{"type":"number","minimum":0},"by":{"enum":["tap","pedal","suggested"]}},"required":["step","series","mark","timeS","by"],"additionalProperties":false};
 
-function validate138(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate143(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate138.evaluated;
+const evaluated0 = validate143.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -2435,21 +2580,21 @@ errors++;
 }
 }
 if(data.step !== undefined){
-if(!(validate92(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+if(!(validate97(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
 errors = vErrors.length;
 }
 }
 if(data.series !== undefined){
-if(!(validate79(data.series, {instancePath:instancePath+"/series",parentData:data,parentDataProperty:"series",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate79.errors : vErrors.concat(validate79.errors);
+if(!(validate84(data.series, {instancePath:instancePath+"/series",parentData:data,parentDataProperty:"series",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate84.errors : vErrors.concat(validate84.errors);
 errors = vErrors.length;
 }
 }
 if(data.mark !== undefined){
 let data2 = data.mark;
 if(!((data2 === "noise-begins") || (data2 === "noise-stops"))){
-const err6 = {instancePath:instancePath+"/mark",schemaPath:"#/properties/mark/enum",keyword:"enum",params:{allowedValues: schema45.properties.mark.enum},message:"must be equal to one of the allowed values"};
+const err6 = {instancePath:instancePath+"/mark",schemaPath:"#/properties/mark/enum",keyword:"enum",params:{allowedValues: schema47.properties.mark.enum},message:"must be equal to one of the allowed values"};
 if(vErrors === null){
 vErrors = [err6];
 }
@@ -2487,7 +2632,7 @@ errors++;
 if(data.by !== undefined){
 let data4 = data.by;
 if(!(((data4 === "tap") || (data4 === "pedal")) || (data4 === "suggested"))){
-const err9 = {instancePath:instancePath+"/by",schemaPath:"#/properties/by/enum",keyword:"enum",params:{allowedValues: schema45.properties.by.enum},message:"must be equal to one of the allowed values"};
+const err9 = {instancePath:instancePath+"/by",schemaPath:"#/properties/by/enum",keyword:"enum",params:{allowedValues: schema47.properties.by.enum},message:"must be equal to one of the allowed values"};
 if(vErrors === null){
 vErrors = [err9];
 }
@@ -2508,18 +2653,18 @@ vErrors.push(err10);
 }
 errors++;
 }
-validate138.errors = vErrors;
+validate143.errors = vErrors;
 return errors === 0;
 }
-validate138.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate143.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema46 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"name":{"$ref":"#/$defs/id"},"codes":{"type":"array","items":{"$ref":"#/$defs/code"},"maxItems":200}},"required":["step","name","codes"],"additionalProperties":false};
-const schema47 = {"type":"object","properties":{"code":{"type":"string","minLength":1,"maxLength":20},"status":{"enum":["stored","pending","permanent"]},"freezeFrame":{"$ref":"#/$defs/words"}},"required":["code","status"],"additionalProperties":false};
+const schema48 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"name":{"$ref":"#/$defs/id"},"codes":{"type":"array","items":{"$ref":"#/$defs/code"},"maxItems":200}},"required":["step","name","codes"],"additionalProperties":false};
+const schema49 = {"type":"object","properties":{"code":{"type":"string","minLength":1,"maxLength":20},"status":{"enum":["stored","pending","permanent"]},"freezeFrame":{"$ref":"#/$defs/words"}},"required":["code","status"],"additionalProperties":false};
 
-function validate145(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate150(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate145.evaluated;
+const evaluated0 = validate150.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -2597,7 +2742,7 @@ errors++;
 if(data.status !== undefined){
 let data1 = data.status;
 if(!(((data1 === "stored") || (data1 === "pending")) || (data1 === "permanent"))){
-const err6 = {instancePath:instancePath+"/status",schemaPath:"#/properties/status/enum",keyword:"enum",params:{allowedValues: schema47.properties.status.enum},message:"must be equal to one of the allowed values"};
+const err6 = {instancePath:instancePath+"/status",schemaPath:"#/properties/status/enum",keyword:"enum",params:{allowedValues: schema49.properties.status.enum},message:"must be equal to one of the allowed values"};
 if(vErrors === null){
 vErrors = [err6];
 }
@@ -2624,16 +2769,16 @@ vErrors.push(err7);
 }
 errors++;
 }
-validate145.errors = vErrors;
+validate150.errors = vErrors;
 return errors === 0;
 }
-validate145.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate150.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 
-function validate142(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate147(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate142.evaluated;
+const evaluated0 = validate147.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -2684,14 +2829,14 @@ errors++;
 }
 }
 if(data.step !== undefined){
-if(!(validate92(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+if(!(validate97(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
 errors = vErrors.length;
 }
 }
 if(data.name !== undefined){
-if(!(validate79(data.name, {instancePath:instancePath+"/name",parentData:data,parentDataProperty:"name",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate79.errors : vErrors.concat(validate79.errors);
+if(!(validate84(data.name, {instancePath:instancePath+"/name",parentData:data,parentDataProperty:"name",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate84.errors : vErrors.concat(validate84.errors);
 errors = vErrors.length;
 }
 }
@@ -2710,8 +2855,8 @@ errors++;
 }
 const len0 = data2.length;
 for(let i0=0; i0<len0; i0++){
-if(!(validate145(data2[i0], {instancePath:instancePath+"/codes/" + i0,parentData:data2,parentDataProperty:i0,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate145.errors : vErrors.concat(validate145.errors);
+if(!(validate150(data2[i0], {instancePath:instancePath+"/codes/" + i0,parentData:data2,parentDataProperty:i0,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate150.errors : vErrors.concat(validate150.errors);
 errors = vErrors.length;
 }
 }
@@ -2738,17 +2883,17 @@ vErrors.push(err6);
 }
 errors++;
 }
-validate142.errors = vErrors;
+validate147.errors = vErrors;
 return errors === 0;
 }
-validate142.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate147.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema48 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"seconds":{"type":"number","minimum":0}},"required":["step","seconds"],"additionalProperties":false};
+const schema50 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"seconds":{"type":"number","minimum":0}},"required":["step","seconds"],"additionalProperties":false};
 
-function validate149(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate154(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate149.evaluated;
+const evaluated0 = validate154.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -2789,8 +2934,8 @@ errors++;
 }
 }
 if(data.step !== undefined){
-if(!(validate92(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+if(!(validate97(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
 errors = vErrors.length;
 }
 }
@@ -2830,17 +2975,17 @@ vErrors.push(err5);
 }
 errors++;
 }
-validate149.errors = vErrors;
+validate154.errors = vErrors;
 return errors === 0;
 }
-validate149.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate154.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema49 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"certain":{"type":"boolean"}},"required":["step","certain"],"additionalProperties":false};
+const schema51 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"certain":{"type":"boolean"}},"required":["step","certain"],"additionalProperties":false};
 
-function validate152(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate157(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate152.evaluated;
+const evaluated0 = validate157.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -2881,8 +3026,8 @@ errors++;
 }
 }
 if(data.step !== undefined){
-if(!(validate92(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+if(!(validate97(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
 errors = vErrors.length;
 }
 }
@@ -2909,17 +3054,17 @@ vErrors.push(err4);
 }
 errors++;
 }
-validate152.errors = vErrors;
+validate157.errors = vErrors;
 return errors === 0;
 }
-validate152.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate157.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema50 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"name":{"$ref":"#/$defs/id"},"options":{"type":"array","items":{"$ref":"#/$defs/id"},"maxItems":50},"text":{"$ref":"#/$defs/words"}},"required":["step","name","options"],"additionalProperties":false};
+const schema52 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"name":{"$ref":"#/$defs/id"},"options":{"type":"array","items":{"$ref":"#/$defs/id"},"maxItems":50},"text":{"$ref":"#/$defs/words"}},"required":["step","name","options"],"additionalProperties":false};
 
-function validate155(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate160(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate155.evaluated;
+const evaluated0 = validate160.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -2970,14 +3115,14 @@ errors++;
 }
 }
 if(data.step !== undefined){
-if(!(validate92(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+if(!(validate97(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
 errors = vErrors.length;
 }
 }
 if(data.name !== undefined){
-if(!(validate79(data.name, {instancePath:instancePath+"/name",parentData:data,parentDataProperty:"name",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate79.errors : vErrors.concat(validate79.errors);
+if(!(validate84(data.name, {instancePath:instancePath+"/name",parentData:data,parentDataProperty:"name",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate84.errors : vErrors.concat(validate84.errors);
 errors = vErrors.length;
 }
 }
@@ -2996,8 +3141,8 @@ errors++;
 }
 const len0 = data2.length;
 for(let i0=0; i0<len0; i0++){
-if(!(validate79(data2[i0], {instancePath:instancePath+"/options/" + i0,parentData:data2,parentDataProperty:i0,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate79.errors : vErrors.concat(validate79.errors);
+if(!(validate84(data2[i0], {instancePath:instancePath+"/options/" + i0,parentData:data2,parentDataProperty:i0,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate84.errors : vErrors.concat(validate84.errors);
 errors = vErrors.length;
 }
 }
@@ -3030,17 +3175,17 @@ vErrors.push(err6);
 }
 errors++;
 }
-validate155.errors = vErrors;
+validate160.errors = vErrors;
 return errors === 0;
 }
-validate155.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate160.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema51 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"sha256":{"$ref":"#/$defs/hash"},"bytes":{"$ref":"#/$defs/count"},"mediaType":{"type":"string","maxLength":100}},"required":["step","sha256","bytes","mediaType"],"additionalProperties":false};
+const schema53 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"sha256":{"$ref":"#/$defs/hash"},"bytes":{"$ref":"#/$defs/count"},"mediaType":{"type":"string","maxLength":100}},"required":["step","sha256","bytes","mediaType"],"additionalProperties":false};
 
-function validate161(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate166(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate161.evaluated;
+const evaluated0 = validate166.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -3101,20 +3246,20 @@ errors++;
 }
 }
 if(data.step !== undefined){
-if(!(validate92(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+if(!(validate97(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
 errors = vErrors.length;
 }
 }
 if(data.sha256 !== undefined){
-if(!(validate127(data.sha256, {instancePath:instancePath+"/sha256",parentData:data,parentDataProperty:"sha256",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate127.errors : vErrors.concat(validate127.errors);
+if(!(validate132(data.sha256, {instancePath:instancePath+"/sha256",parentData:data,parentDataProperty:"sha256",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate132.errors : vErrors.concat(validate132.errors);
 errors = vErrors.length;
 }
 }
 if(data.bytes !== undefined){
-if(!(validate129(data.bytes, {instancePath:instancePath+"/bytes",parentData:data,parentDataProperty:"bytes",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate129.errors : vErrors.concat(validate129.errors);
+if(!(validate134(data.bytes, {instancePath:instancePath+"/bytes",parentData:data,parentDataProperty:"bytes",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate134.errors : vErrors.concat(validate134.errors);
 errors = vErrors.length;
 }
 }
@@ -3154,90 +3299,17 @@ vErrors.push(err7);
 }
 errors++;
 }
-validate161.errors = vErrors;
-return errors === 0;
-}
-validate161.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
-
-const schema52 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"text":{"$ref":"#/$defs/words"}},"required":["step","text"],"additionalProperties":false};
-
-function validate166(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
-let vErrors = null;
-let errors = 0;
-const evaluated0 = validate166.evaluated;
-if(evaluated0.dynamicProps){
-evaluated0.props = undefined;
-}
-if(evaluated0.dynamicItems){
-evaluated0.items = undefined;
-}
-if(data && typeof data == "object" && !Array.isArray(data)){
-if(data.step === undefined){
-const err0 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "step"},message:"must have required property '"+"step"+"'"};
-if(vErrors === null){
-vErrors = [err0];
-}
-else {
-vErrors.push(err0);
-}
-errors++;
-}
-if(data.text === undefined){
-const err1 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "text"},message:"must have required property '"+"text"+"'"};
-if(vErrors === null){
-vErrors = [err1];
-}
-else {
-vErrors.push(err1);
-}
-errors++;
-}
-for(const key0 in data){
-if(!((key0 === "step") || (key0 === "text"))){
-const err2 = {instancePath,schemaPath:"#/additionalProperties",keyword:"additionalProperties",params:{additionalProperty: key0},message:"must NOT have additional properties"};
-if(vErrors === null){
-vErrors = [err2];
-}
-else {
-vErrors.push(err2);
-}
-errors++;
-}
-}
-if(data.step !== undefined){
-if(!(validate92(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
-errors = vErrors.length;
-}
-}
-if(data.text !== undefined){
-if(!(validate66(data.text, {instancePath:instancePath+"/text",parentData:data,parentDataProperty:"text",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate66.errors : vErrors.concat(validate66.errors);
-errors = vErrors.length;
-}
-}
-}
-else {
-const err3 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
-if(vErrors === null){
-vErrors = [err3];
-}
-else {
-vErrors.push(err3);
-}
-errors++;
-}
 validate166.errors = vErrors;
 return errors === 0;
 }
 validate166.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema53 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"text":{"$ref":"#/$defs/words"}},"required":["step","text"],"additionalProperties":false};
+const schema54 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"text":{"$ref":"#/$defs/words"}},"required":["step","text"],"additionalProperties":false};
 
-function validate170(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate171(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate170.evaluated;
+const evaluated0 = validate171.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -3278,8 +3350,8 @@ errors++;
 }
 }
 if(data.step !== undefined){
-if(!(validate92(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+if(!(validate97(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
 errors = vErrors.length;
 }
 }
@@ -3300,17 +3372,90 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate170.errors = vErrors;
+validate171.errors = vErrors;
 return errors === 0;
 }
-validate170.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate171.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema54 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"item":{"$ref":"#/$defs/id"},"label":{"$ref":"#/$defs/label"}},"required":["step","item","label"],"additionalProperties":false};
+const schema55 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"text":{"$ref":"#/$defs/words"}},"required":["step","text"],"additionalProperties":false};
 
-function validate174(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate175(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate174.evaluated;
+const evaluated0 = validate175.evaluated;
+if(evaluated0.dynamicProps){
+evaluated0.props = undefined;
+}
+if(evaluated0.dynamicItems){
+evaluated0.items = undefined;
+}
+if(data && typeof data == "object" && !Array.isArray(data)){
+if(data.step === undefined){
+const err0 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "step"},message:"must have required property '"+"step"+"'"};
+if(vErrors === null){
+vErrors = [err0];
+}
+else {
+vErrors.push(err0);
+}
+errors++;
+}
+if(data.text === undefined){
+const err1 = {instancePath,schemaPath:"#/required",keyword:"required",params:{missingProperty: "text"},message:"must have required property '"+"text"+"'"};
+if(vErrors === null){
+vErrors = [err1];
+}
+else {
+vErrors.push(err1);
+}
+errors++;
+}
+for(const key0 in data){
+if(!((key0 === "step") || (key0 === "text"))){
+const err2 = {instancePath,schemaPath:"#/additionalProperties",keyword:"additionalProperties",params:{additionalProperty: key0},message:"must NOT have additional properties"};
+if(vErrors === null){
+vErrors = [err2];
+}
+else {
+vErrors.push(err2);
+}
+errors++;
+}
+}
+if(data.step !== undefined){
+if(!(validate97(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
+errors = vErrors.length;
+}
+}
+if(data.text !== undefined){
+if(!(validate66(data.text, {instancePath:instancePath+"/text",parentData:data,parentDataProperty:"text",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate66.errors : vErrors.concat(validate66.errors);
+errors = vErrors.length;
+}
+}
+}
+else {
+const err3 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
+if(vErrors === null){
+vErrors = [err3];
+}
+else {
+vErrors.push(err3);
+}
+errors++;
+}
+validate175.errors = vErrors;
+return errors === 0;
+}
+validate175.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+
+const schema56 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"item":{"$ref":"#/$defs/id"},"label":{"$ref":"#/$defs/label"}},"required":["step","item","label"],"additionalProperties":false};
+
+function validate179(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+let vErrors = null;
+let errors = 0;
+const evaluated0 = validate179.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -3361,14 +3506,14 @@ errors++;
 }
 }
 if(data.step !== undefined){
-if(!(validate92(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+if(!(validate97(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
 errors = vErrors.length;
 }
 }
 if(data.item !== undefined){
-if(!(validate79(data.item, {instancePath:instancePath+"/item",parentData:data,parentDataProperty:"item",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate79.errors : vErrors.concat(validate79.errors);
+if(!(validate84(data.item, {instancePath:instancePath+"/item",parentData:data,parentDataProperty:"item",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate84.errors : vErrors.concat(validate84.errors);
 errors = vErrors.length;
 }
 }
@@ -3389,17 +3534,17 @@ vErrors.push(err4);
 }
 errors++;
 }
-validate174.errors = vErrors;
+validate179.errors = vErrors;
 return errors === 0;
 }
-validate174.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate179.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema55 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"item":{"$ref":"#/$defs/id"}},"required":["step","item"],"additionalProperties":false};
+const schema57 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"item":{"$ref":"#/$defs/id"}},"required":["step","item"],"additionalProperties":false};
 
-function validate179(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate184(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate179.evaluated;
+const evaluated0 = validate184.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -3440,14 +3585,14 @@ errors++;
 }
 }
 if(data.step !== undefined){
-if(!(validate92(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+if(!(validate97(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
 errors = vErrors.length;
 }
 }
 if(data.item !== undefined){
-if(!(validate79(data.item, {instancePath:instancePath+"/item",parentData:data,parentDataProperty:"item",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate79.errors : vErrors.concat(validate79.errors);
+if(!(validate84(data.item, {instancePath:instancePath+"/item",parentData:data,parentDataProperty:"item",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate84.errors : vErrors.concat(validate84.errors);
 errors = vErrors.length;
 }
 }
@@ -3462,18 +3607,18 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate179.errors = vErrors;
+validate184.errors = vErrors;
 return errors === 0;
 }
-validate179.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate184.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema56 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"to":{"$ref":"#/$defs/step"},"exit":{"type":"string","minLength":1,"maxLength":60},"when":{"type":"string","maxLength":2000},"inputs":{"type":"array","items":{"$ref":"#/$defs/decisionInput"},"maxItems":400},"because":{"$ref":"#/$defs/words"},"verdict":{"$ref":"#/$defs/step"}},"required":["step","to","exit","inputs","because"],"additionalProperties":false};
-const schema57 = {"type":"object","properties":{"name":{"$ref":"#/$defs/id"},"label":{"$ref":"#/$defs/label"},"text":{"type":"string","maxLength":200},"unit":{"$ref":"#/$defs/unit"},"uncertainty":{"$ref":"#/$defs/figureText"}},"required":["name","label","text"],"additionalProperties":false};
+const schema58 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"to":{"$ref":"#/$defs/step"},"exit":{"type":"string","minLength":1,"maxLength":60},"when":{"type":"string","maxLength":2000},"inputs":{"type":"array","items":{"$ref":"#/$defs/decisionInput"},"maxItems":400},"because":{"$ref":"#/$defs/words"},"verdict":{"$ref":"#/$defs/step"}},"required":["step","to","exit","inputs","because"],"additionalProperties":false};
+const schema59 = {"type":"object","properties":{"name":{"$ref":"#/$defs/id"},"label":{"$ref":"#/$defs/label"},"text":{"type":"string","maxLength":200},"unit":{"$ref":"#/$defs/unit"},"uncertainty":{"$ref":"#/$defs/figureText"}},"required":["name","label","text"],"additionalProperties":false};
 
-function validate186(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate191(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate186.evaluated;
+const evaluated0 = validate191.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -3524,8 +3669,8 @@ errors++;
 }
 }
 if(data.name !== undefined){
-if(!(validate79(data.name, {instancePath:instancePath+"/name",parentData:data,parentDataProperty:"name",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate79.errors : vErrors.concat(validate79.errors);
+if(!(validate84(data.name, {instancePath:instancePath+"/name",parentData:data,parentDataProperty:"name",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate84.errors : vErrors.concat(validate84.errors);
 errors = vErrors.length;
 }
 }
@@ -3583,16 +3728,16 @@ vErrors.push(err6);
 }
 errors++;
 }
-validate186.errors = vErrors;
+validate191.errors = vErrors;
 return errors === 0;
 }
-validate186.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate191.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 
-function validate183(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate188(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate183.evaluated;
+const evaluated0 = validate188.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -3663,14 +3808,14 @@ errors++;
 }
 }
 if(data.step !== undefined){
-if(!(validate92(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+if(!(validate97(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
 errors = vErrors.length;
 }
 }
 if(data.to !== undefined){
-if(!(validate92(data.to, {instancePath:instancePath+"/to",parentData:data,parentDataProperty:"to",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+if(!(validate97(data.to, {instancePath:instancePath+"/to",parentData:data,parentDataProperty:"to",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
 errors = vErrors.length;
 }
 }
@@ -3749,8 +3894,8 @@ errors++;
 }
 const len0 = data4.length;
 for(let i0=0; i0<len0; i0++){
-if(!(validate186(data4[i0], {instancePath:instancePath+"/inputs/" + i0,parentData:data4,parentDataProperty:i0,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate186.errors : vErrors.concat(validate186.errors);
+if(!(validate191(data4[i0], {instancePath:instancePath+"/inputs/" + i0,parentData:data4,parentDataProperty:i0,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate191.errors : vErrors.concat(validate191.errors);
 errors = vErrors.length;
 }
 }
@@ -3773,8 +3918,8 @@ errors = vErrors.length;
 }
 }
 if(data.verdict !== undefined){
-if(!(validate92(data.verdict, {instancePath:instancePath+"/verdict",parentData:data,parentDataProperty:"verdict",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+if(!(validate97(data.verdict, {instancePath:instancePath+"/verdict",parentData:data,parentDataProperty:"verdict",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
 errors = vErrors.length;
 }
 }
@@ -3789,17 +3934,17 @@ vErrors.push(err13);
 }
 errors++;
 }
-validate183.errors = vErrors;
+validate188.errors = vErrors;
 return errors === 0;
 }
-validate183.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate188.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema58 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"computed":{"$ref":"#/$defs/id"},"chosen":{"$ref":"#/$defs/id"},"reason":{"$ref":"#/$defs/words"}},"required":["step","computed","chosen","reason"],"additionalProperties":false};
+const schema60 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"computed":{"$ref":"#/$defs/id"},"chosen":{"$ref":"#/$defs/id"},"reason":{"$ref":"#/$defs/words"}},"required":["step","computed","chosen","reason"],"additionalProperties":false};
 
-function validate195(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate200(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate195.evaluated;
+const evaluated0 = validate200.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -3860,20 +4005,20 @@ errors++;
 }
 }
 if(data.step !== undefined){
-if(!(validate92(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+if(!(validate97(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
 errors = vErrors.length;
 }
 }
 if(data.computed !== undefined){
-if(!(validate79(data.computed, {instancePath:instancePath+"/computed",parentData:data,parentDataProperty:"computed",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate79.errors : vErrors.concat(validate79.errors);
+if(!(validate84(data.computed, {instancePath:instancePath+"/computed",parentData:data,parentDataProperty:"computed",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate84.errors : vErrors.concat(validate84.errors);
 errors = vErrors.length;
 }
 }
 if(data.chosen !== undefined){
-if(!(validate79(data.chosen, {instancePath:instancePath+"/chosen",parentData:data,parentDataProperty:"chosen",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate79.errors : vErrors.concat(validate79.errors);
+if(!(validate84(data.chosen, {instancePath:instancePath+"/chosen",parentData:data,parentDataProperty:"chosen",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate84.errors : vErrors.concat(validate84.errors);
 errors = vErrors.length;
 }
 }
@@ -3894,17 +4039,17 @@ vErrors.push(err5);
 }
 errors++;
 }
-validate195.errors = vErrors;
+validate200.errors = vErrors;
 return errors === 0;
 }
-validate195.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate200.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema59 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"reason":{"$ref":"#/$defs/words"}},"required":["step","reason"],"additionalProperties":false};
+const schema61 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"reason":{"$ref":"#/$defs/words"}},"required":["step","reason"],"additionalProperties":false};
 
-function validate201(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate206(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate201.evaluated;
+const evaluated0 = validate206.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -3945,8 +4090,8 @@ errors++;
 }
 }
 if(data.step !== undefined){
-if(!(validate92(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+if(!(validate97(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
 errors = vErrors.length;
 }
 }
@@ -3967,18 +4112,18 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate201.errors = vErrors;
+validate206.errors = vErrors;
 return errors === 0;
 }
-validate201.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate206.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema60 = {"type":"object","properties":{"seq":{"$ref":"#/$defs/seq"},"reason":{"$ref":"#/$defs/words"}},"required":["seq","reason"],"additionalProperties":false};
-const schema61 = {"type":"integer","minimum":1,"maximum":9007199254740991};
+const schema62 = {"type":"object","properties":{"seq":{"$ref":"#/$defs/seq"},"reason":{"$ref":"#/$defs/words"}},"required":["seq","reason"],"additionalProperties":false};
+const schema63 = {"type":"integer","minimum":1,"maximum":9007199254740991};
 
-function validate206(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate211(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate206.evaluated;
+const evaluated0 = validate211.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4017,16 +4162,16 @@ vErrors.push(err2);
 errors++;
 }
 }
-validate206.errors = vErrors;
+validate211.errors = vErrors;
 return errors === 0;
 }
-validate206.evaluated = {"dynamicProps":false,"dynamicItems":false};
+validate211.evaluated = {"dynamicProps":false,"dynamicItems":false};
 
 
-function validate205(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate210(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate205.evaluated;
+const evaluated0 = validate210.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4067,8 +4212,8 @@ errors++;
 }
 }
 if(data.seq !== undefined){
-if(!(validate206(data.seq, {instancePath:instancePath+"/seq",parentData:data,parentDataProperty:"seq",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate206.errors : vErrors.concat(validate206.errors);
+if(!(validate211(data.seq, {instancePath:instancePath+"/seq",parentData:data,parentDataProperty:"seq",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate211.errors : vErrors.concat(validate211.errors);
 errors = vErrors.length;
 }
 }
@@ -4089,17 +4234,17 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate205.errors = vErrors;
+validate210.errors = vErrors;
 return errors === 0;
 }
-validate205.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate210.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema62 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"question":{"$ref":"#/$defs/words"}},"required":["step","question"],"additionalProperties":false};
+const schema64 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"question":{"$ref":"#/$defs/words"}},"required":["step","question"],"additionalProperties":false};
 
-function validate210(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate215(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate210.evaluated;
+const evaluated0 = validate215.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4140,8 +4285,8 @@ errors++;
 }
 }
 if(data.step !== undefined){
-if(!(validate92(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+if(!(validate97(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
 errors = vErrors.length;
 }
 }
@@ -4162,17 +4307,17 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate210.errors = vErrors;
+validate215.errors = vErrors;
 return errors === 0;
 }
-validate210.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate215.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema63 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"evidence":{"$ref":"#/$defs/words"}},"required":["step","evidence"],"additionalProperties":false};
+const schema65 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"evidence":{"$ref":"#/$defs/words"}},"required":["step","evidence"],"additionalProperties":false};
 
-function validate214(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate219(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate214.evaluated;
+const evaluated0 = validate219.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4213,8 +4358,8 @@ errors++;
 }
 }
 if(data.step !== undefined){
-if(!(validate92(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+if(!(validate97(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
 errors = vErrors.length;
 }
 }
@@ -4235,17 +4380,17 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate214.errors = vErrors;
+validate219.errors = vErrors;
 return errors === 0;
 }
-validate214.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate219.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema64 = {"type":"object","properties":{"reason":{"$ref":"#/$defs/words"}},"required":["reason"],"additionalProperties":false};
+const schema66 = {"type":"object","properties":{"reason":{"$ref":"#/$defs/words"}},"required":["reason"],"additionalProperties":false};
 
-function validate218(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate223(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate218.evaluated;
+const evaluated0 = validate223.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4292,17 +4437,17 @@ vErrors.push(err2);
 }
 errors++;
 }
-validate218.errors = vErrors;
+validate223.errors = vErrors;
 return errors === 0;
 }
-validate218.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate223.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema65 = {"type":"object","properties":{"from":{"enum":["set-aside","stopped","reload","lead-called"]}},"required":["from"],"additionalProperties":false};
+const schema67 = {"type":"object","properties":{"from":{"enum":["set-aside","stopped","reload","lead-called"]}},"required":["from"],"additionalProperties":false};
 
-function validate221(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate226(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate221.evaluated;
+const evaluated0 = validate226.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4335,7 +4480,7 @@ errors++;
 if(data.from !== undefined){
 let data0 = data.from;
 if(!((((data0 === "set-aside") || (data0 === "stopped")) || (data0 === "reload")) || (data0 === "lead-called"))){
-const err2 = {instancePath:instancePath+"/from",schemaPath:"#/properties/from/enum",keyword:"enum",params:{allowedValues: schema65.properties.from.enum},message:"must be equal to one of the allowed values"};
+const err2 = {instancePath:instancePath+"/from",schemaPath:"#/properties/from/enum",keyword:"enum",params:{allowedValues: schema67.properties.from.enum},message:"must be equal to one of the allowed values"};
 if(vErrors === null){
 vErrors = [err2];
 }
@@ -4356,17 +4501,17 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate221.errors = vErrors;
+validate226.errors = vErrors;
 return errors === 0;
 }
-validate221.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate226.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema66 = {"type":"object","properties":{"to":{"$ref":"#/$defs/id"},"reason":{"$ref":"#/$defs/words"}},"required":["to","reason"],"additionalProperties":false};
+const schema68 = {"type":"object","properties":{"to":{"$ref":"#/$defs/id"},"reason":{"$ref":"#/$defs/words"}},"required":["to","reason"],"additionalProperties":false};
 
-function validate223(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate228(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate223.evaluated;
+const evaluated0 = validate228.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4407,8 +4552,8 @@ errors++;
 }
 }
 if(data.to !== undefined){
-if(!(validate79(data.to, {instancePath:instancePath+"/to",parentData:data,parentDataProperty:"to",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate79.errors : vErrors.concat(validate79.errors);
+if(!(validate84(data.to, {instancePath:instancePath+"/to",parentData:data,parentDataProperty:"to",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate84.errors : vErrors.concat(validate84.errors);
 errors = vErrors.length;
 }
 }
@@ -4429,17 +4574,17 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate223.errors = vErrors;
+validate228.errors = vErrors;
 return errors === 0;
 }
-validate223.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate228.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema67 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"limit":{"$ref":"#/$defs/id"},"name":{"$ref":"#/$defs/id"},"figure":{"$ref":"#/$defs/figure"}},"required":["step","limit","name","figure"],"additionalProperties":false};
+const schema69 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"limit":{"$ref":"#/$defs/id"},"name":{"$ref":"#/$defs/id"},"figure":{"$ref":"#/$defs/figure"}},"required":["step","limit","name","figure"],"additionalProperties":false};
 
-function validate227(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate232(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate227.evaluated;
+const evaluated0 = validate232.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4500,20 +4645,20 @@ errors++;
 }
 }
 if(data.step !== undefined){
-if(!(validate92(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+if(!(validate97(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
 errors = vErrors.length;
 }
 }
 if(data.limit !== undefined){
-if(!(validate79(data.limit, {instancePath:instancePath+"/limit",parentData:data,parentDataProperty:"limit",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate79.errors : vErrors.concat(validate79.errors);
+if(!(validate84(data.limit, {instancePath:instancePath+"/limit",parentData:data,parentDataProperty:"limit",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate84.errors : vErrors.concat(validate84.errors);
 errors = vErrors.length;
 }
 }
 if(data.name !== undefined){
-if(!(validate79(data.name, {instancePath:instancePath+"/name",parentData:data,parentDataProperty:"name",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate79.errors : vErrors.concat(validate79.errors);
+if(!(validate84(data.name, {instancePath:instancePath+"/name",parentData:data,parentDataProperty:"name",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate84.errors : vErrors.concat(validate84.errors);
 errors = vErrors.length;
 }
 }
@@ -4534,17 +4679,17 @@ vErrors.push(err5);
 }
 errors++;
 }
-validate227.errors = vErrors;
+validate232.errors = vErrors;
 return errors === 0;
 }
-validate227.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate232.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema68 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"text":{"$ref":"#/$defs/words"}},"required":["step","text"],"additionalProperties":false};
+const schema70 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"text":{"$ref":"#/$defs/words"}},"required":["step","text"],"additionalProperties":false};
 
-function validate233(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate238(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate233.evaluated;
+const evaluated0 = validate238.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4585,8 +4730,8 @@ errors++;
 }
 }
 if(data.step !== undefined){
-if(!(validate92(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+if(!(validate97(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
 errors = vErrors.length;
 }
 }
@@ -4607,17 +4752,17 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate233.errors = vErrors;
+validate238.errors = vErrors;
 return errors === 0;
 }
-validate233.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate238.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema69 = {"type":"object","properties":{"seq":{"$ref":"#/$defs/seq"}},"required":["seq"],"additionalProperties":false};
+const schema71 = {"type":"object","properties":{"seq":{"$ref":"#/$defs/seq"}},"required":["seq"],"additionalProperties":false};
 
-function validate237(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate242(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate237.evaluated;
+const evaluated0 = validate242.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4648,8 +4793,8 @@ errors++;
 }
 }
 if(data.seq !== undefined){
-if(!(validate206(data.seq, {instancePath:instancePath+"/seq",parentData:data,parentDataProperty:"seq",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate206.errors : vErrors.concat(validate206.errors);
+if(!(validate211(data.seq, {instancePath:instancePath+"/seq",parentData:data,parentDataProperty:"seq",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate211.errors : vErrors.concat(validate211.errors);
 errors = vErrors.length;
 }
 }
@@ -4664,17 +4809,17 @@ vErrors.push(err2);
 }
 errors++;
 }
-validate237.errors = vErrors;
+validate242.errors = vErrors;
 return errors === 0;
 }
-validate237.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate242.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema70 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"reason":{"$ref":"#/$defs/words"}},"required":["step","reason"],"additionalProperties":false};
+const schema72 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"reason":{"$ref":"#/$defs/words"}},"required":["step","reason"],"additionalProperties":false};
 
-function validate240(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate245(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate240.evaluated;
+const evaluated0 = validate245.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4715,8 +4860,8 @@ errors++;
 }
 }
 if(data.step !== undefined){
-if(!(validate92(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+if(!(validate97(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
 errors = vErrors.length;
 }
 }
@@ -4737,17 +4882,17 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate240.errors = vErrors;
+validate245.errors = vErrors;
 return errors === 0;
 }
-validate240.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate245.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema71 = {"type":"object","properties":{"version":{"$ref":"#/$defs/seq"},"answer":{"enum":["go-on","end"]}},"required":["version","answer"],"additionalProperties":false};
+const schema73 = {"type":"object","properties":{"version":{"$ref":"#/$defs/seq"},"answer":{"enum":["go-on","end"]}},"required":["version","answer"],"additionalProperties":false};
 
-function validate244(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate249(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate244.evaluated;
+const evaluated0 = validate249.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4788,15 +4933,15 @@ errors++;
 }
 }
 if(data.version !== undefined){
-if(!(validate206(data.version, {instancePath:instancePath+"/version",parentData:data,parentDataProperty:"version",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate206.errors : vErrors.concat(validate206.errors);
+if(!(validate211(data.version, {instancePath:instancePath+"/version",parentData:data,parentDataProperty:"version",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate211.errors : vErrors.concat(validate211.errors);
 errors = vErrors.length;
 }
 }
 if(data.answer !== undefined){
 let data1 = data.answer;
 if(!((data1 === "go-on") || (data1 === "end"))){
-const err3 = {instancePath:instancePath+"/answer",schemaPath:"#/properties/answer/enum",keyword:"enum",params:{allowedValues: schema71.properties.answer.enum},message:"must be equal to one of the allowed values"};
+const err3 = {instancePath:instancePath+"/answer",schemaPath:"#/properties/answer/enum",keyword:"enum",params:{allowedValues: schema73.properties.answer.enum},message:"must be equal to one of the allowed values"};
 if(vErrors === null){
 vErrors = [err3];
 }
@@ -4817,17 +4962,17 @@ vErrors.push(err4);
 }
 errors++;
 }
-validate244.errors = vErrors;
+validate249.errors = vErrors;
 return errors === 0;
 }
-validate244.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate249.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema72 = {"type":"object","properties":{"finding":{"$ref":"#/$defs/step"},"verdict":{"$ref":"#/$defs/words"}},"required":["finding","verdict"],"additionalProperties":false};
+const schema74 = {"type":"object","properties":{"finding":{"$ref":"#/$defs/step"},"verdict":{"$ref":"#/$defs/words"}},"required":["finding","verdict"],"additionalProperties":false};
 
-function validate247(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate252(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate247.evaluated;
+const evaluated0 = validate252.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4868,8 +5013,8 @@ errors++;
 }
 }
 if(data.finding !== undefined){
-if(!(validate92(data.finding, {instancePath:instancePath+"/finding",parentData:data,parentDataProperty:"finding",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+if(!(validate97(data.finding, {instancePath:instancePath+"/finding",parentData:data,parentDataProperty:"finding",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
 errors = vErrors.length;
 }
 }
@@ -4890,18 +5035,18 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate247.errors = vErrors;
+validate252.errors = vErrors;
 return errors === 0;
 }
-validate247.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate252.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema73 = {"type":"object","properties":{"concern":{"$ref":"#/$defs/report"},"cause":{"$ref":"#/$defs/report"},"correction":{"$ref":"#/$defs/report"},"customer":{"$ref":"#/$defs/report"},"edited":{"type":"array","items":{"enum":["concern","cause","correction","customer"]},"maxItems":4}},"required":["concern","cause","correction","customer","edited"],"additionalProperties":false};
-const schema74 = {"type":"string","maxLength":40000};
+const schema75 = {"type":"object","properties":{"concern":{"$ref":"#/$defs/report"},"cause":{"$ref":"#/$defs/report"},"correction":{"$ref":"#/$defs/report"},"customer":{"$ref":"#/$defs/report"},"edited":{"type":"array","items":{"enum":["concern","cause","correction","customer"]},"maxItems":4}},"required":["concern","cause","correction","customer","edited"],"additionalProperties":false};
+const schema76 = {"type":"string","maxLength":40000};
 
-function validate252(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate257(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate252.evaluated;
+const evaluated0 = validate257.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4930,16 +5075,16 @@ vErrors.push(err1);
 }
 errors++;
 }
-validate252.errors = vErrors;
+validate257.errors = vErrors;
 return errors === 0;
 }
-validate252.evaluated = {"dynamicProps":false,"dynamicItems":false};
+validate257.evaluated = {"dynamicProps":false,"dynamicItems":false};
 
 
-function validate251(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate256(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate251.evaluated;
+const evaluated0 = validate256.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -5010,26 +5155,26 @@ errors++;
 }
 }
 if(data.concern !== undefined){
-if(!(validate252(data.concern, {instancePath:instancePath+"/concern",parentData:data,parentDataProperty:"concern",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate252.errors : vErrors.concat(validate252.errors);
+if(!(validate257(data.concern, {instancePath:instancePath+"/concern",parentData:data,parentDataProperty:"concern",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate257.errors : vErrors.concat(validate257.errors);
 errors = vErrors.length;
 }
 }
 if(data.cause !== undefined){
-if(!(validate252(data.cause, {instancePath:instancePath+"/cause",parentData:data,parentDataProperty:"cause",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate252.errors : vErrors.concat(validate252.errors);
+if(!(validate257(data.cause, {instancePath:instancePath+"/cause",parentData:data,parentDataProperty:"cause",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate257.errors : vErrors.concat(validate257.errors);
 errors = vErrors.length;
 }
 }
 if(data.correction !== undefined){
-if(!(validate252(data.correction, {instancePath:instancePath+"/correction",parentData:data,parentDataProperty:"correction",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate252.errors : vErrors.concat(validate252.errors);
+if(!(validate257(data.correction, {instancePath:instancePath+"/correction",parentData:data,parentDataProperty:"correction",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate257.errors : vErrors.concat(validate257.errors);
 errors = vErrors.length;
 }
 }
 if(data.customer !== undefined){
-if(!(validate252(data.customer, {instancePath:instancePath+"/customer",parentData:data,parentDataProperty:"customer",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate252.errors : vErrors.concat(validate252.errors);
+if(!(validate257(data.customer, {instancePath:instancePath+"/customer",parentData:data,parentDataProperty:"customer",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate257.errors : vErrors.concat(validate257.errors);
 errors = vErrors.length;
 }
 }
@@ -5050,7 +5195,7 @@ const len0 = data4.length;
 for(let i0=0; i0<len0; i0++){
 let data5 = data4[i0];
 if(!((((data5 === "concern") || (data5 === "cause")) || (data5 === "correction")) || (data5 === "customer"))){
-const err7 = {instancePath:instancePath+"/edited/" + i0,schemaPath:"#/properties/edited/items/enum",keyword:"enum",params:{allowedValues: schema73.properties.edited.items.enum},message:"must be equal to one of the allowed values"};
+const err7 = {instancePath:instancePath+"/edited/" + i0,schemaPath:"#/properties/edited/items/enum",keyword:"enum",params:{allowedValues: schema75.properties.edited.items.enum},message:"must be equal to one of the allowed values"};
 if(vErrors === null){
 vErrors = [err7];
 }
@@ -5083,17 +5228,17 @@ vErrors.push(err9);
 }
 errors++;
 }
-validate251.errors = vErrors;
+validate256.errors = vErrors;
 return errors === 0;
 }
-validate251.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate256.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema75 = {"type":"object","properties":{"finding":{"$ref":"#/$defs/step"}},"required":["finding"],"additionalProperties":false};
+const schema77 = {"type":"object","properties":{"finding":{"$ref":"#/$defs/step"}},"required":["finding"],"additionalProperties":false};
 
-function validate258(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate263(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate258.evaluated;
+const evaluated0 = validate263.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -5124,8 +5269,8 @@ errors++;
 }
 }
 if(data.finding !== undefined){
-if(!(validate92(data.finding, {instancePath:instancePath+"/finding",parentData:data,parentDataProperty:"finding",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+if(!(validate97(data.finding, {instancePath:instancePath+"/finding",parentData:data,parentDataProperty:"finding",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
 errors = vErrors.length;
 }
 }
@@ -5140,17 +5285,17 @@ vErrors.push(err2);
 }
 errors++;
 }
-validate258.errors = vErrors;
+validate263.errors = vErrors;
 return errors === 0;
 }
-validate258.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate263.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema76 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"by":{"$ref":"#/$defs/id"}},"required":["step","by"],"additionalProperties":false};
+const schema78 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"by":{"$ref":"#/$defs/id"}},"required":["step","by"],"additionalProperties":false};
 
-function validate261(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate266(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate261.evaluated;
+const evaluated0 = validate266.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -5191,14 +5336,14 @@ errors++;
 }
 }
 if(data.step !== undefined){
-if(!(validate92(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate92.errors : vErrors.concat(validate92.errors);
+if(!(validate97(data.step, {instancePath:instancePath+"/step",parentData:data,parentDataProperty:"step",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.errors);
 errors = vErrors.length;
 }
 }
 if(data.by !== undefined){
-if(!(validate79(data.by, {instancePath:instancePath+"/by",parentData:data,parentDataProperty:"by",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate79.errors : vErrors.concat(validate79.errors);
+if(!(validate84(data.by, {instancePath:instancePath+"/by",parentData:data,parentDataProperty:"by",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate84.errors : vErrors.concat(validate84.errors);
 errors = vErrors.length;
 }
 }
@@ -5213,17 +5358,17 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate261.errors = vErrors;
+validate266.errors = vErrors;
 return errors === 0;
 }
-validate261.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate266.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema77 = {"type":"object","properties":{"head":{"$ref":"#/$defs/hash"},"meaning":{"enum":["performed","reviewed"]},"signature":{"type":"string","minLength":1,"maxLength":1000},"key":{"type":"string","minLength":1,"maxLength":1000}},"required":["head","meaning","signature","key"],"additionalProperties":false};
+const schema79 = {"type":"object","properties":{"head":{"$ref":"#/$defs/hash"},"meaning":{"enum":["performed","reviewed"]},"signature":{"type":"string","minLength":1,"maxLength":1000},"key":{"type":"string","minLength":1,"maxLength":1000}},"required":["head","meaning","signature","key"],"additionalProperties":false};
 
-function validate265(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate270(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate265.evaluated;
+const evaluated0 = validate270.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -5284,15 +5429,15 @@ errors++;
 }
 }
 if(data.head !== undefined){
-if(!(validate127(data.head, {instancePath:instancePath+"/head",parentData:data,parentDataProperty:"head",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate127.errors : vErrors.concat(validate127.errors);
+if(!(validate132(data.head, {instancePath:instancePath+"/head",parentData:data,parentDataProperty:"head",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate132.errors : vErrors.concat(validate132.errors);
 errors = vErrors.length;
 }
 }
 if(data.meaning !== undefined){
 let data1 = data.meaning;
 if(!((data1 === "performed") || (data1 === "reviewed"))){
-const err5 = {instancePath:instancePath+"/meaning",schemaPath:"#/properties/meaning/enum",keyword:"enum",params:{allowedValues: schema77.properties.meaning.enum},message:"must be equal to one of the allowed values"};
+const err5 = {instancePath:instancePath+"/meaning",schemaPath:"#/properties/meaning/enum",keyword:"enum",params:{allowedValues: schema79.properties.meaning.enum},message:"must be equal to one of the allowed values"};
 if(vErrors === null){
 vErrors = [err5];
 }
@@ -5383,17 +5528,17 @@ vErrors.push(err12);
 }
 errors++;
 }
-validate265.errors = vErrors;
+validate270.errors = vErrors;
 return errors === 0;
 }
-validate265.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate270.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema78 = {"type":"object","properties":{"text":{"$ref":"#/$defs/words"},"reason":{"$ref":"#/$defs/words"}},"required":["text","reason"],"additionalProperties":false};
+const schema80 = {"type":"object","properties":{"text":{"$ref":"#/$defs/words"},"reason":{"$ref":"#/$defs/words"}},"required":["text","reason"],"additionalProperties":false};
 
-function validate268(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate273(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate268.evaluated;
+const evaluated0 = validate273.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -5456,17 +5601,17 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate268.errors = vErrors;
+validate273.errors = vErrors;
 return errors === 0;
 }
-validate268.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate273.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema79 = {"type":"object","properties":{"branch":{"$ref":"#/$defs/id"},"head":{"$ref":"#/$defs/hash"}},"required":["branch","head"],"additionalProperties":false};
+const schema81 = {"type":"object","properties":{"branch":{"$ref":"#/$defs/id"},"head":{"$ref":"#/$defs/hash"}},"required":["branch","head"],"additionalProperties":false};
 
-function validate272(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate277(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate272.evaluated;
+const evaluated0 = validate277.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -5507,14 +5652,14 @@ errors++;
 }
 }
 if(data.branch !== undefined){
-if(!(validate79(data.branch, {instancePath:instancePath+"/branch",parentData:data,parentDataProperty:"branch",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate79.errors : vErrors.concat(validate79.errors);
+if(!(validate84(data.branch, {instancePath:instancePath+"/branch",parentData:data,parentDataProperty:"branch",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate84.errors : vErrors.concat(validate84.errors);
 errors = vErrors.length;
 }
 }
 if(data.head !== undefined){
-if(!(validate127(data.head, {instancePath:instancePath+"/head",parentData:data,parentDataProperty:"head",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate127.errors : vErrors.concat(validate127.errors);
+if(!(validate132(data.head, {instancePath:instancePath+"/head",parentData:data,parentDataProperty:"head",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate132.errors : vErrors.concat(validate132.errors);
 errors = vErrors.length;
 }
 }
@@ -5529,17 +5674,17 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate272.errors = vErrors;
+validate277.errors = vErrors;
 return errors === 0;
 }
-validate272.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate277.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema80 = {"type":"object","properties":{"byMs":{"type":"number"}},"required":["byMs"],"additionalProperties":false};
+const schema82 = {"type":"object","properties":{"byMs":{"type":"number"}},"required":["byMs"],"additionalProperties":false};
 
-function validate276(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate281(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate276.evaluated;
+const evaluated0 = validate281.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -5593,17 +5738,17 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate276.errors = vErrors;
+validate281.errors = vErrors;
 return errors === 0;
 }
-validate276.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate281.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema81 = {"type":"object","properties":{"from":{"$ref":"#/$defs/words"}},"required":["from"],"additionalProperties":false};
+const schema83 = {"type":"object","properties":{"from":{"$ref":"#/$defs/words"}},"required":["from"],"additionalProperties":false};
 
-function validate278(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate283(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate278.evaluated;
+const evaluated0 = validate283.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -5650,58 +5795,18 @@ vErrors.push(err2);
 }
 errors++;
 }
-validate278.errors = vErrors;
+validate283.errors = vErrors;
 return errors === 0;
 }
-validate278.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate283.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema82 = {"type":"string","pattern":"^[0-9a-f]{8}(-[0-9a-f]{4}){3}-[0-9a-f]{12}$"};
-const pattern7 = new RegExp("^[0-9a-f]{8}(-[0-9a-f]{4}){3}-[0-9a-f]{12}$", "u");
-
-function validate281(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
-let vErrors = null;
-let errors = 0;
-const evaluated0 = validate281.evaluated;
-if(evaluated0.dynamicProps){
-evaluated0.props = undefined;
-}
-if(evaluated0.dynamicItems){
-evaluated0.items = undefined;
-}
-if(typeof data === "string"){
-if(!pattern7.test(data)){
-const err0 = {instancePath,schemaPath:"#/pattern",keyword:"pattern",params:{pattern: "^[0-9a-f]{8}(-[0-9a-f]{4}){3}-[0-9a-f]{12}$"},message:"must match pattern \""+"^[0-9a-f]{8}(-[0-9a-f]{4}){3}-[0-9a-f]{12}$"+"\""};
-if(vErrors === null){
-vErrors = [err0];
-}
-else {
-vErrors.push(err0);
-}
-errors++;
-}
-}
-else {
-const err1 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "string"},message:"must be string"};
-if(vErrors === null){
-vErrors = [err1];
-}
-else {
-vErrors.push(err1);
-}
-errors++;
-}
-validate281.errors = vErrors;
-return errors === 0;
-}
-validate281.evaluated = {"dynamicProps":false,"dynamicItems":false};
-
-const schema83 = {"type":"string","pattern":"^[0-9a-f]{8}-[0-9a-f]{4}-7[0-9a-f]{3}-[89ab][0-9a-f]{3}-[0-9a-f]{12}$"};
+const schema84 = {"type":"string","pattern":"^[0-9a-f]{8}-[0-9a-f]{4}-7[0-9a-f]{3}-[89ab][0-9a-f]{3}-[0-9a-f]{12}$"};
 const pattern8 = new RegExp("^[0-9a-f]{8}-[0-9a-f]{4}-7[0-9a-f]{3}-[89ab][0-9a-f]{3}-[0-9a-f]{12}$", "u");
 
-function validate284(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate288(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate284.evaluated;
+const evaluated0 = validate288.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -5730,10 +5835,10 @@ vErrors.push(err1);
 }
 errors++;
 }
-validate284.errors = vErrors;
+validate288.errors = vErrors;
 return errors === 0;
 }
-validate284.evaluated = {"dynamicProps":false,"dynamicItems":false};
+validate288.evaluated = {"dynamicProps":false,"dynamicItems":false};
 
 
 function validate52(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
@@ -5859,8 +5964,8 @@ if(_valid1){
 const _errs11 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate78(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate78.errors : vErrors.concat(validate78.errors);
+if(!(validate83(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate83.errors : vErrors.concat(validate83.errors);
 errors = vErrors.length;
 }
 }
@@ -5936,8 +6041,8 @@ if(_valid2){
 const _errs17 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate91(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate91.errors : vErrors.concat(validate91.errors);
+if(!(validate96(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate96.errors : vErrors.concat(validate96.errors);
 errors = vErrors.length;
 }
 }
@@ -6013,8 +6118,8 @@ if(_valid3){
 const _errs23 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate95(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate95.errors : vErrors.concat(validate95.errors);
+if(!(validate100(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate100.errors : vErrors.concat(validate100.errors);
 errors = vErrors.length;
 }
 }
@@ -6090,8 +6195,8 @@ if(_valid4){
 const _errs29 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate98(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate98.errors : vErrors.concat(validate98.errors);
+if(!(validate103(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate103.errors : vErrors.concat(validate103.errors);
 errors = vErrors.length;
 }
 }
@@ -6167,8 +6272,8 @@ if(_valid5){
 const _errs35 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate101(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate101.errors : vErrors.concat(validate101.errors);
+if(!(validate106(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate106.errors : vErrors.concat(validate106.errors);
 errors = vErrors.length;
 }
 }
@@ -6244,8 +6349,8 @@ if(_valid6){
 const _errs41 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate112(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate112.errors : vErrors.concat(validate112.errors);
+if(!(validate117(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate117.errors : vErrors.concat(validate117.errors);
 errors = vErrors.length;
 }
 }
@@ -6321,8 +6426,8 @@ if(_valid7){
 const _errs47 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate116(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate116.errors : vErrors.concat(validate116.errors);
+if(!(validate121(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate121.errors : vErrors.concat(validate121.errors);
 errors = vErrors.length;
 }
 }
@@ -6398,8 +6503,8 @@ if(_valid8){
 const _errs53 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate120(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate120.errors : vErrors.concat(validate120.errors);
+if(!(validate125(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate125.errors : vErrors.concat(validate125.errors);
 errors = vErrors.length;
 }
 }
@@ -6475,8 +6580,8 @@ if(_valid9){
 const _errs59 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate124(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate124.errors : vErrors.concat(validate124.errors);
+if(!(validate129(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate129.errors : vErrors.concat(validate129.errors);
 errors = vErrors.length;
 }
 }
@@ -6552,8 +6657,8 @@ if(_valid10){
 const _errs65 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate138(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate138.errors : vErrors.concat(validate138.errors);
+if(!(validate143(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate143.errors : vErrors.concat(validate143.errors);
 errors = vErrors.length;
 }
 }
@@ -6629,8 +6734,8 @@ if(_valid11){
 const _errs71 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate142(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate142.errors : vErrors.concat(validate142.errors);
+if(!(validate147(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate147.errors : vErrors.concat(validate147.errors);
 errors = vErrors.length;
 }
 }
@@ -6706,8 +6811,8 @@ if(_valid12){
 const _errs77 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate149(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate149.errors : vErrors.concat(validate149.errors);
+if(!(validate154(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate154.errors : vErrors.concat(validate154.errors);
 errors = vErrors.length;
 }
 }
@@ -6783,8 +6888,8 @@ if(_valid13){
 const _errs83 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate152(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate152.errors : vErrors.concat(validate152.errors);
+if(!(validate157(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate157.errors : vErrors.concat(validate157.errors);
 errors = vErrors.length;
 }
 }
@@ -6860,8 +6965,8 @@ if(_valid14){
 const _errs89 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate155(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate155.errors : vErrors.concat(validate155.errors);
+if(!(validate160(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate160.errors : vErrors.concat(validate160.errors);
 errors = vErrors.length;
 }
 }
@@ -6937,8 +7042,8 @@ if(_valid15){
 const _errs95 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate161(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate161.errors : vErrors.concat(validate161.errors);
+if(!(validate166(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate166.errors : vErrors.concat(validate166.errors);
 errors = vErrors.length;
 }
 }
@@ -7014,8 +7119,8 @@ if(_valid16){
 const _errs101 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate166(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate166.errors : vErrors.concat(validate166.errors);
+if(!(validate171(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate171.errors : vErrors.concat(validate171.errors);
 errors = vErrors.length;
 }
 }
@@ -7091,8 +7196,8 @@ if(_valid17){
 const _errs107 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate170(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate170.errors : vErrors.concat(validate170.errors);
+if(!(validate175(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate175.errors : vErrors.concat(validate175.errors);
 errors = vErrors.length;
 }
 }
@@ -7168,8 +7273,8 @@ if(_valid18){
 const _errs113 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate174(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate174.errors : vErrors.concat(validate174.errors);
+if(!(validate179(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate179.errors : vErrors.concat(validate179.errors);
 errors = vErrors.length;
 }
 }
@@ -7245,8 +7350,8 @@ if(_valid19){
 const _errs119 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate179(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate179.errors : vErrors.concat(validate179.errors);
+if(!(validate184(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate184.errors : vErrors.concat(validate184.errors);
 errors = vErrors.length;
 }
 }
@@ -7322,8 +7427,8 @@ if(_valid20){
 const _errs125 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate183(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate183.errors : vErrors.concat(validate183.errors);
+if(!(validate188(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate188.errors : vErrors.concat(validate188.errors);
 errors = vErrors.length;
 }
 }
@@ -7399,8 +7504,8 @@ if(_valid21){
 const _errs131 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate195(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate195.errors : vErrors.concat(validate195.errors);
+if(!(validate200(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate200.errors : vErrors.concat(validate200.errors);
 errors = vErrors.length;
 }
 }
@@ -7476,8 +7581,8 @@ if(_valid22){
 const _errs137 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate201(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate201.errors : vErrors.concat(validate201.errors);
+if(!(validate206(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate206.errors : vErrors.concat(validate206.errors);
 errors = vErrors.length;
 }
 }
@@ -7553,8 +7658,8 @@ if(_valid23){
 const _errs143 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate205(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate205.errors : vErrors.concat(validate205.errors);
+if(!(validate210(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate210.errors : vErrors.concat(validate210.errors);
 errors = vErrors.length;
 }
 }
@@ -7630,8 +7735,8 @@ if(_valid24){
 const _errs149 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate210(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate210.errors : vErrors.concat(validate210.errors);
+if(!(validate215(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate215.errors : vErrors.concat(validate215.errors);
 errors = vErrors.length;
 }
 }
@@ -7707,8 +7812,8 @@ if(_valid25){
 const _errs155 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate214(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate214.errors : vErrors.concat(validate214.errors);
+if(!(validate219(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate219.errors : vErrors.concat(validate219.errors);
 errors = vErrors.length;
 }
 }
@@ -7784,8 +7889,8 @@ if(_valid26){
 const _errs161 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate218(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate218.errors : vErrors.concat(validate218.errors);
+if(!(validate223(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate223.errors : vErrors.concat(validate223.errors);
 errors = vErrors.length;
 }
 }
@@ -7861,8 +7966,8 @@ if(_valid27){
 const _errs167 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate221(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate221.errors : vErrors.concat(validate221.errors);
+if(!(validate226(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate226.errors : vErrors.concat(validate226.errors);
 errors = vErrors.length;
 }
 }
@@ -7938,8 +8043,8 @@ if(_valid28){
 const _errs173 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate223(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate223.errors : vErrors.concat(validate223.errors);
+if(!(validate228(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate228.errors : vErrors.concat(validate228.errors);
 errors = vErrors.length;
 }
 }
@@ -8015,8 +8120,8 @@ if(_valid29){
 const _errs179 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate227(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate227.errors : vErrors.concat(validate227.errors);
+if(!(validate232(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate232.errors : vErrors.concat(validate232.errors);
 errors = vErrors.length;
 }
 }
@@ -8092,8 +8197,8 @@ if(_valid30){
 const _errs185 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate233(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate233.errors : vErrors.concat(validate233.errors);
+if(!(validate238(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate238.errors : vErrors.concat(validate238.errors);
 errors = vErrors.length;
 }
 }
@@ -8169,8 +8274,8 @@ if(_valid31){
 const _errs191 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate237(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate237.errors : vErrors.concat(validate237.errors);
+if(!(validate242(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate242.errors : vErrors.concat(validate242.errors);
 errors = vErrors.length;
 }
 }
@@ -8246,8 +8351,8 @@ if(_valid32){
 const _errs197 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate240(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate240.errors : vErrors.concat(validate240.errors);
+if(!(validate245(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate245.errors : vErrors.concat(validate245.errors);
 errors = vErrors.length;
 }
 }
@@ -8323,8 +8428,8 @@ if(_valid33){
 const _errs203 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate244(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate244.errors : vErrors.concat(validate244.errors);
+if(!(validate249(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate249.errors : vErrors.concat(validate249.errors);
 errors = vErrors.length;
 }
 }
@@ -8400,8 +8505,8 @@ if(_valid34){
 const _errs209 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate247(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate247.errors : vErrors.concat(validate247.errors);
+if(!(validate252(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate252.errors : vErrors.concat(validate252.errors);
 errors = vErrors.length;
 }
 }
@@ -8477,8 +8582,8 @@ if(_valid35){
 const _errs215 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate251(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate251.errors : vErrors.concat(validate251.errors);
+if(!(validate256(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate256.errors : vErrors.concat(validate256.errors);
 errors = vErrors.length;
 }
 }
@@ -8554,8 +8659,8 @@ if(_valid36){
 const _errs221 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate258(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate258.errors : vErrors.concat(validate258.errors);
+if(!(validate263(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate263.errors : vErrors.concat(validate263.errors);
 errors = vErrors.length;
 }
 }
@@ -8631,8 +8736,8 @@ if(_valid37){
 const _errs227 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate261(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate261.errors : vErrors.concat(validate261.errors);
+if(!(validate266(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate266.errors : vErrors.concat(validate266.errors);
 errors = vErrors.length;
 }
 }
@@ -8708,8 +8813,8 @@ if(_valid38){
 const _errs233 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate265(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate265.errors : vErrors.concat(validate265.errors);
+if(!(validate270(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate270.errors : vErrors.concat(validate270.errors);
 errors = vErrors.length;
 }
 }
@@ -8785,8 +8890,8 @@ if(_valid39){
 const _errs239 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate268(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate268.errors : vErrors.concat(validate268.errors);
+if(!(validate273(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate273.errors : vErrors.concat(validate273.errors);
 errors = vErrors.length;
 }
 }
@@ -8862,8 +8967,8 @@ if(_valid40){
 const _errs245 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate272(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate272.errors : vErrors.concat(validate272.errors);
+if(!(validate277(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate277.errors : vErrors.concat(validate277.errors);
 errors = vErrors.length;
 }
 }
@@ -8939,8 +9044,8 @@ if(_valid41){
 const _errs251 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate276(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate276.errors : vErrors.concat(validate276.errors);
+if(!(validate281(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate281.errors : vErrors.concat(validate281.errors);
 errors = vErrors.length;
 }
 }
@@ -9016,8 +9121,8 @@ if(_valid42){
 const _errs257 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate278(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate278.errors : vErrors.concat(validate278.errors);
+if(!(validate283(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate283.errors : vErrors.concat(validate283.errors);
 errors = vErrors.length;
 }
 }
@@ -9193,26 +9298,26 @@ errors++;
 }
 }
 if(data.runId !== undefined){
-if(!(validate281(data.runId, {instancePath:instancePath+"/runId",parentData:data,parentDataProperty:"runId",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate281.errors : vErrors.concat(validate281.errors);
+if(!(validate79(data.runId, {instancePath:instancePath+"/runId",parentData:data,parentDataProperty:"runId",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate79.errors : vErrors.concat(validate79.errors);
 errors = vErrors.length;
 }
 }
 if(data.seq !== undefined){
-if(!(validate206(data.seq, {instancePath:instancePath+"/seq",parentData:data,parentDataProperty:"seq",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate206.errors : vErrors.concat(validate206.errors);
+if(!(validate211(data.seq, {instancePath:instancePath+"/seq",parentData:data,parentDataProperty:"seq",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate211.errors : vErrors.concat(validate211.errors);
 errors = vErrors.length;
 }
 }
 if(data.id !== undefined){
-if(!(validate284(data.id, {instancePath:instancePath+"/id",parentData:data,parentDataProperty:"id",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate284.errors : vErrors.concat(validate284.errors);
+if(!(validate288(data.id, {instancePath:instancePath+"/id",parentData:data,parentDataProperty:"id",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate288.errors : vErrors.concat(validate288.errors);
 errors = vErrors.length;
 }
 }
 if(data.at !== undefined){
-if(!(validate129(data.at, {instancePath:instancePath+"/at",parentData:data,parentDataProperty:"at",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate129.errors : vErrors.concat(validate129.errors);
+if(!(validate134(data.at, {instancePath:instancePath+"/at",parentData:data,parentDataProperty:"at",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate134.errors : vErrors.concat(validate134.errors);
 errors = vErrors.length;
 }
 }
@@ -9252,20 +9357,20 @@ errors++;
 }
 }
 if(data.actor !== undefined){
-if(!(validate79(data.actor, {instancePath:instancePath+"/actor",parentData:data,parentDataProperty:"actor",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate79.errors : vErrors.concat(validate79.errors);
+if(!(validate84(data.actor, {instancePath:instancePath+"/actor",parentData:data,parentDataProperty:"actor",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate84.errors : vErrors.concat(validate84.errors);
 errors = vErrors.length;
 }
 }
 if(data.device !== undefined){
-if(!(validate79(data.device, {instancePath:instancePath+"/device",parentData:data,parentDataProperty:"device",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate79.errors : vErrors.concat(validate79.errors);
+if(!(validate84(data.device, {instancePath:instancePath+"/device",parentData:data,parentDataProperty:"device",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate84.errors : vErrors.concat(validate84.errors);
 errors = vErrors.length;
 }
 }
 if(data.build !== undefined){
-if(!(validate79(data.build, {instancePath:instancePath+"/build",parentData:data,parentDataProperty:"build",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate79.errors : vErrors.concat(validate79.errors);
+if(!(validate84(data.build, {instancePath:instancePath+"/build",parentData:data,parentDataProperty:"build",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate84.errors : vErrors.concat(validate84.errors);
 errors = vErrors.length;
 }
 }
@@ -9282,14 +9387,14 @@ errors++;
 }
 }
 if(data.prev !== undefined){
-if(!(validate127(data.prev, {instancePath:instancePath+"/prev",parentData:data,parentDataProperty:"prev",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate127.errors : vErrors.concat(validate127.errors);
+if(!(validate132(data.prev, {instancePath:instancePath+"/prev",parentData:data,parentDataProperty:"prev",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate132.errors : vErrors.concat(validate132.errors);
 errors = vErrors.length;
 }
 }
 if(data.hash !== undefined){
-if(!(validate127(data.hash, {instancePath:instancePath+"/hash",parentData:data,parentDataProperty:"hash",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate127.errors : vErrors.concat(validate127.errors);
+if(!(validate132(data.hash, {instancePath:instancePath+"/hash",parentData:data,parentDataProperty:"hash",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate132.errors : vErrors.concat(validate132.errors);
 errors = vErrors.length;
 }
 }

@@ -5,6 +5,7 @@ import { CreateRuns1764547203000 } from './1764547203000-create-runs';
 import { CreateWitnessOfRuns1764547204000 } from './1764547204000-create-witness-of-runs';
 import { CreateChangeLog1764547205000 } from './1764547205000-create-change-log';
 import { RefuseChanges1764547206000 } from './1764547206000-refuse-changes';
+import { IndexRunsByVisit1764547208000 } from './1764547208000-index-runs-by-visit';
 
 /** Every migration in order. */
 export const migrations = [
@@ -15,4 +16,5 @@ export const migrations = [
   CreateWitnessOfRuns1764547204000,
   CreateChangeLog1764547205000,
   RefuseChanges1764547206000,
+  IndexRunsByVisit1764547208000,
 ];
