@@ -5,7 +5,7 @@ import { provideServiceWorker } from '@angular/service-worker';
 import { OfflineStore } from '../core/offline-store';
 import type { RunRow, RunSummary } from '../core/stored-rows';
 import { coreForSpecs, eventually, okafor, startOfDay, workOffline } from '../core/testing/core-for-specs';
-import type { GearItem, PublishedProcedure, Role, Visit } from '../core/wire';
+import type { GearItem, PublishedProcedure, Role, Visit, VisitRun } from '../core/wire';
 import { BenchPage } from './bench-page';
 
 const summary: RunSummary = {
@@ -44,6 +44,18 @@ const visit = (id: string, repairOrder: string): Visit =>
     car: { make: 'Merrow', model: 'Heron' },
     changedAt: startOfDay,
   }) as unknown as Visit;
+const told = (runId: string, change: Partial<VisitRun> = {}): VisitRun => ({
+  runId,
+  visitId: 'v-1',
+  procedureId: 'seal',
+  procedureTitle: 'Seal',
+  half: 'cold',
+  personName: 'R. Adeyemi',
+  tabletLabel: 'B2',
+  openedAt: startOfDay,
+  status: 'open',
+  ...change,
+});
 const procedure = {
   id: 'seal',
   version: 1,
@@ -81,7 +93,11 @@ describe('BenchPage', () => {
     const { text, primaries } = await bench('technician', (store) =>
       store.runs.bulkPut([
         run('r-1', { changedAt: startOfDay - 1000 }),
-        run('r-2', { openedBy: 'p-other', summary: { ...summary, personName: 'R. Adeyemi', repairOrder: '4409' } }),
+        run('r-2', {
+          visitId: 'v-2',
+          openedBy: 'p-other',
+          summary: { ...summary, personName: 'R. Adeyemi', repairOrder: '4409' },
+        }),
       ]),
     );
     await eventually(() => expect(text()).toContain('begun by R. Adeyemi'));
@@ -107,6 +123,40 @@ describe('BenchPage', () => {
     });
     await eventually(() => expect(text()).toContain('warm half of a pair'));
     expect(text()).toContain('Merrow Heron, silver: Does not seal');
+  });
+
+  it('says that the half on the car was begun on another tablet too, and where to see it', async () => {
+    const { text, links } = await bench('technician', async (store) => {
+      await store.visits.put(visit('v-1', '4417'));
+      await store.runs.put(run('r-1'));
+      await store.toldRuns.put(told('r-2'));
+    });
+    await eventually(() => expect(text()).toContain('RO 4417, Merrow Heron, silver: the cold half was begun twice.'));
+    expect(text()).toMatch(/R\. Adeyemi, today \d+:\d+, on tablet B2: still open/);
+    expect(links()).toContainEqual(['See the visit', '/visit/v-1']);
+  });
+
+  it.each<[string, Partial<VisitRun>]>([
+    ['it is the other half', { half: 'warm' }],
+    ['it was begun knowingly, with a reason', { again: { because: 'To compare', besides: ['r-1'] } }],
+  ])('does not say so when %s', async (_why, change) => {
+    const { text, primaries } = await bench('technician', async (store) => {
+      await store.runs.put(run('r-1'));
+      await store.toldRuns.put(told('r-2', change));
+    });
+    await eventually(() => expect(primaries()).toEqual(['Go back to step 11']));
+    expect(text()).not.toContain('was begun twice');
+  });
+
+  it('says who has a visit on another tablet, and takes one that nobody has first', async () => {
+    const { text, primaries } = await bench('technician', async (store) => {
+      await store.visits.bulkPut([visit('v-1', '4417'), visit('v-0', '4410')]);
+      await store.procedures.put(procedure);
+      await store.toldRuns.put(told('r-2'));
+    });
+    await eventually(() => expect(primaries()).toEqual(['Take it: 1 procedure fits']));
+    expect(text()).toContain('R. Adeyemi has it on tablet B2: still open');
+    expect(text().indexOf('RO 4410')).toBeLessThan(text().indexOf('RO 4417'));
   });
 
   it('says which instrument is overdue, of this site alone', async () => {

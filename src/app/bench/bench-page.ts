@@ -9,6 +9,7 @@ import { clock } from '../core/time-and-ids';
 import { dayTime } from '../core/time-words';
 import type { Role } from '../core/wire';
 import { TopBar } from '../shared/top-bar';
+import { TwiceBegun } from '../shared/twice-begun';
 import { BenchStore } from './bench-store';
 import { ReadyList } from './ready-list';
 import { RunCard } from './run-card';
@@ -45,7 +46,7 @@ const minuteMs = 60_000;
 /** The Bench: what is on the car now, what waits, and what works without a network. */
 @Component({
   selector: 'bay-bench-page',
-  imports: [ReadyList, RouterLink, RunCard, TopBar],
+  imports: [ReadyList, RouterLink, RunCard, TopBar, TwiceBegun],
   templateUrl: './bench-page.html',
   styleUrl: './bench-page.css',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -72,11 +73,21 @@ export class BenchPage {
   });
   protected readonly worksAtCars = computed(() => this.home() === undefined);
   /** With nothing on the car, the visit to take next is the loud thing of the Bench. */
-  protected readonly next = computed(() => (this.store.open().length > 0 ? undefined : this.store.waiting()[0]));
+  protected readonly next = computed(() => {
+    const waiting = this.store.waiting();
+    return this.store.open().length > 0 ? undefined : (waiting.find(({ isTaken }) => !isTaken) ?? waiting[0]);
+  });
   protected readonly listed = computed(() => {
     const next = this.next();
     return this.store.waiting().filter((item) => item !== next);
   });
+  /** Halves that were begun more than once, each with its order and car. */
+  protected readonly unaware = computed(() =>
+    this.store.unaware().map((runs) => {
+      const own = this.store.summaryOf(runs.find(({ isHere }) => isHere)?.runId);
+      return { visitId: runs[0]?.visitId, runs, about: own && `RO ${own.repairOrder}, ${own.car}` };
+    }),
+  );
   protected readonly waiting = computed(() => this.sync.view().waiting);
   protected readonly photosLeft = this.storage.photosLeft;
   protected readonly isExpired = computed(() => this.session.state() === 'expired');

@@ -1,4 +1,5 @@
 import { computed, inject, Injectable, type Signal } from '@angular/core';
+import { begunUnaware, isOver, knownRuns, standingWords, type KnownRun } from '../core/known-runs';
 import { liveRows } from '../core/live-rows';
 import { OfflineStore } from '../core/offline-store';
 import { Session } from '../core/session';
@@ -24,12 +25,14 @@ export interface ClosedRun {
   readonly changedAt: number;
 }
 
-/** A visit on which nothing was begun here, or only one half of a pair. */
+/** A visit on which nothing was begun, only one half of a pair, or something on another tablet. */
 export interface WaitingVisit {
   readonly visit: Visit;
   readonly car: string;
-  /** `2 procedures fit`, `warm half of a pair`. */
+  /** `2 procedures fit`, `warm half of a pair`, or who is at it elsewhere. */
   readonly fits: string;
+  /** Whether someone is at it on another tablet. */
+  readonly isTaken: boolean;
 }
 
 /** What is on the tablet, so that it works without a network. */
@@ -53,6 +56,7 @@ export class BenchStore {
   private readonly now = inject(clock);
 
   private readonly runs = liveRows(() => this.store.runs.orderBy('changedAt').reverse().toArray());
+  private readonly told = liveRows(() => this.store.toldRuns.toArray());
   private readonly visits = liveRows(() => this.store.visits.orderBy('changedAt').reverse().toArray());
   private readonly procedures = liveRows(() => this.store.procedures.toArray());
   private readonly gear = liveRows(() => this.store.gear.toArray());
@@ -80,8 +84,13 @@ export class BenchStore {
       .filter(({ summary }) => isClosed(summary))
       .slice(0, closedShown),
   );
+  private readonly known = computed(() => knownRuns(this.runs() ?? [], this.told() ?? []));
+  /** Halves that go on here and were begun a second time, here or elsewhere, the one not knowing of the other. */
+  readonly unaware = computed(() =>
+    begunUnaware(this.known()).filter((group) => group.some(({ isHere }) => isHere) && !group.every(isOver)),
+  );
   readonly waiting: Signal<readonly WaitingVisit[]> = computed(() =>
-    waitingVisits(this.visits() ?? [], this.runs() ?? [], this.procedures() ?? []),
+    waitingVisits(this.visits() ?? [], this.known(), this.procedures() ?? []),
   );
   readonly ready: Signal<ReadyView> = computed(() => {
     const usable = startable(this.procedures() ?? []);
@@ -93,6 +102,11 @@ export class BenchStore {
       nextDue: nextDueOf(here, this.now()),
     };
   });
+
+  /** What is shown of a run of this tablet. */
+  summaryOf(runId: string | undefined): RunSummary | undefined {
+    return this.runs()?.find((run) => run.runId === runId)?.summary;
+  }
 }
 
 type Summarised = RunRow & { readonly summary: RunSummary };
@@ -109,25 +123,29 @@ function nextDueOf(gear: readonly GearItem[], now: number): ReadyView['nextDue']
 
 function waitingVisits(
   visits: readonly Visit[],
-  runs: readonly RunRow[],
+  runs: readonly KnownRun[],
   procedures: readonly PublishedProcedure[],
 ): readonly WaitingVisit[] {
-  return visits.flatMap((visit) => {
-    const own = runs.filter(({ visitId }) => visitId === visit.id);
+  return visits.flatMap((visit): WaitingVisit[] => {
+    const ofVisit = runs.filter(({ visitId }) => visitId === visit.id);
     const car = carWords(visit);
-    if (own.length === 0) return [{ visit, car, fits: fitWords(procedures, visit) }];
-    const half = missingHalf(own);
-    return half === undefined ? [] : [{ visit, car, fits: `${half} half of a pair` }];
+    if (ofVisit.length === 0) return [{ visit, car, fits: fitWords(procedures, visit), isTaken: false }];
+    const open = ofVisit.find((run) => !isOver(run));
+    if (open !== undefined) {
+      const fits = `${open.personName} has it on ${open.tablet}: ${standingWords(open)}`;
+      return ofVisit.some(({ isHere }) => isHere) ? [] : [{ visit, car, fits, isTaken: true }];
+    }
+    const half = missingHalf(ofVisit);
+    return half === undefined ? [] : [{ visit, car, fits: `${half} half of a pair`, isTaken: false }];
   });
 }
 
-/** The half that a closed run still lacks its partner for, unless anything on the car is open. */
-function missingHalf(runs: readonly RunRow[]): 'cold' | 'warm' | undefined {
-  if (runs.some(({ summary }) => summary !== undefined && !isClosed(summary))) return undefined;
+/** The half that a closed run still lacks its partner for. */
+function missingHalf(runs: readonly KnownRun[]): 'cold' | 'warm' | undefined {
   const halves = new Map<string, Set<string>>();
-  for (const { header } of runs) {
-    if (header.pairId === undefined || header.half === undefined) continue;
-    halves.set(header.pairId, (halves.get(header.pairId) ?? new Set()).add(header.half));
+  for (const { pairId, half } of runs) {
+    if (pairId === undefined || half === undefined) continue;
+    halves.set(pairId, (halves.get(pairId) ?? new Set()).add(half));
   }
   const alone = [...halves.values()].find((pair) => pair.size === 1);
   if (alone === undefined) return undefined;

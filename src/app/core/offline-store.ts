@@ -2,7 +2,7 @@ import { inject, Injectable, InjectionToken } from '@angular/core';
 import { Dexie, type EntityTable, type Table } from 'dexie';
 import type { RunEvent } from '../../../procedures/engine';
 import type { BlobRow, OutboxRow, ReceiptRow, RunRow, SettingRow, TabletKeyRow } from './stored-rows';
-import type { Colleague, GearItem, PublishedProcedure, Site, Visit } from './wire';
+import type { Colleague, GearItem, PublishedProcedure, Site, Visit, VisitRun } from './wire';
 
 /** The databases' names; specs give each test its own. */
 export const storeNames = new InjectionToken<{ readonly work: string; readonly practice: string }>('storeNames', {
@@ -32,6 +32,8 @@ export class OfflineStore extends Dexie implements RunTables {
   declare readonly gear: EntityTable<GearItem, 'id'>;
   declare readonly people: EntityTable<Colleague, 'id'>;
   declare readonly visits: EntityTable<Visit, 'id'>;
+  /** Runs of all tablets, as the server told of them. */
+  declare readonly toldRuns: EntityTable<VisitRun, 'runId'>;
   declare readonly settings: EntityTable<SettingRow, 'key'>;
   declare readonly keys: EntityTable<TabletKeyRow, 'id'>;
 
@@ -52,6 +54,10 @@ export class OfflineStore extends Dexie implements RunTables {
       settings: 'key',
       keys: 'id',
     });
+    // The runs of before come with everything else: the next pull begins anew.
+    this.version(2)
+      .stores({ toldRuns: 'runId, visitId' })
+      .upgrade((transaction) => transaction.table('settings').delete('pull-cursor'));
   }
 }
 

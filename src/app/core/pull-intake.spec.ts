@@ -4,7 +4,7 @@ import { OfflineStore } from './offline-store';
 import { PullIntake } from './pull-intake';
 import type { RunRow } from './stored-rows';
 import { asked, closeStores, coreForSpecs, startOfDay } from './testing/core-for-specs';
-import type { GearItem, PublishedProcedure, PullAnswer, Site, Visit } from './wire';
+import type { GearItem, PublishedProcedure, PullAnswer, Site, Visit, VisitRun } from './wire';
 
 const answer = (change: Partial<PullAnswer>): PullAnswer => ({
   cursor: 'e1.1',
@@ -13,6 +13,7 @@ const answer = (change: Partial<PullAnswer>): PullAnswer => ({
   gear: [],
   people: [],
   visits: [],
+  runs: [],
   notices: [],
   ...change,
 });
@@ -66,6 +67,15 @@ describe('PullIntake', () => {
       'seal 1',
       'seal 2',
     ]);
+  });
+
+  it('knows the runs of all tablets as they were told last', async () => {
+    const told = (runId: string, status: string) => ({ runId, visitId: 'v-1', status }) as VisitRun;
+    const store = await pulls(
+      answer({ runs: [told('r-1', 'open'), told('r-2', 'open')] }),
+      answer({ cursor: 'e1.2', runs: [told('r-1', 'closed')] }),
+    );
+    expect((await store.toldRuns.toArray()).map(({ status }) => status)).toEqual(['closed', 'open']);
   });
 
   it('lets the later writer of a visit win', async () => {

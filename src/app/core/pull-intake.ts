@@ -38,6 +38,7 @@ export class PullIntake {
       await store.people.bulkPut([...answer.people]);
       await store.procedures.bulkPut([...answer.procedures]);
       await store.visits.bulkPut(await this.newerVisits(answer.visits));
+      await store.toldRuns.bulkPut([...answer.runs]);
       await store.receipts.where('runId').notEqual('').and(this.isOld).delete();
       if (isRestored) await this.offerAgain(epochOf(answer.cursor));
       await store.settings.put({ key: cursorKey, value: answer.cursor });
@@ -50,7 +51,7 @@ export class PullIntake {
   /** A whole answer replaces what is here, but for what a run of this tablet still needs. */
   private async clearOutdated({ procedures }: PullAnswer): Promise<void> {
     const { store } = this;
-    await Promise.all([store.sites.clear(), store.gear.clear(), store.people.clear()]);
+    await Promise.all([store.sites.clear(), store.gear.clear(), store.people.clear(), store.toldRuns.clear()]);
     const kept = new Set(procedures.map(({ id, version }) => `${id}@${version}`));
     for (const { header } of await store.runs.toArray()) kept.add(`${header.procedureId}@${header.version}`);
     const outdated = (await store.procedures.toCollection().primaryKeys()).filter(

@@ -26,6 +26,7 @@ export function summariseRun(document: ProcedureDocument, state: RunState): RunS
     pause: state.pause && { at: state.pause.at, reason: state.pause.reason },
     verdict: state.finding === undefined ? undefined : steps.get(state.finding)?.title,
     half: state.header.half,
+    ...(state.again === undefined ? {} : { again: state.again }),
   };
 }
 

@@ -1,5 +1,5 @@
 import type { JudgedResult } from '../../../procedures/document';
-import type { RunHeader, RunState } from '../../../procedures/engine';
+import type { BegunAgain, RunHeader, RunState } from '../../../procedures/engine';
 import type { Countersignature, Person } from './wire';
 
 /**
@@ -41,6 +41,8 @@ export interface RunSummary {
   /** The verdict in words, once a finding is reached. */
   readonly verdict: string | undefined;
   readonly half: RunHeader['half'];
+  /** Why it was begun beside others of its half. */
+  readonly again?: BegunAgain;
 }
 
 /** Something that waits to be sent. Rows go only when the server's receipt is stored. */

@@ -28,6 +28,7 @@ const nothing: PullAnswer = {
   gear: [],
   people: [],
   visits: [],
+  runs: [],
   notices: [],
 };
 

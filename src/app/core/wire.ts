@@ -1,5 +1,5 @@
-import type { ProcedureDocument, InstrumentKind } from '../../../procedures/document';
-import type { InstrumentRange } from '../../../procedures/engine';
+import type { ProcedureDocument, InstrumentKind, JudgedResult } from '../../../procedures/document';
+import type { BegunAgain, InstrumentRange, RunState } from '../../../procedures/engine';
 
 /** What the server and the tablet say to each other, as JSON. */
 
@@ -96,6 +96,28 @@ export interface VisitedCar {
   readonly year?: number;
 }
 
+/** What every tablet is told of a run, whichever tablet has it. */
+export interface VisitRun {
+  readonly runId: string;
+  readonly visitId: string;
+  readonly procedureId: string;
+  readonly procedureTitle: string;
+  readonly half?: 'cold' | 'warm';
+  readonly pairId?: string;
+  /** Who began it. */
+  readonly personName: string;
+  /** What people call the tablet on which it was begun; absent when the server does not know it. */
+  readonly tabletLabel?: string;
+  /** That tablet's clock, milliseconds since 1970. */
+  readonly openedAt: number;
+  readonly status: RunState['status'];
+  /** The finding in words. */
+  readonly verdict?: string;
+  readonly result?: JudgedResult;
+  /** Why it was begun beside others. */
+  readonly again?: BegunAgain;
+}
+
 /** What a pull brings. Everything when it began without a cursor or the server's epoch is another. */
 export interface PullAnswer {
   /** `epoch.position`. */
@@ -105,6 +127,7 @@ export interface PullAnswer {
   readonly gear: readonly GearItem[];
   readonly people: readonly Colleague[];
   readonly visits: readonly Visit[];
+  readonly runs: readonly VisitRun[];
   readonly notices: readonly unknown[];
 }
 

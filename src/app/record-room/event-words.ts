@@ -28,7 +28,7 @@ export function sayEvent(procedure: CompiledProcedure, event: RunEvent): EventWo
     case 'branch-taken':
       return undefined;
     case 'opened':
-      return plain('Run opened', `${event.data.person}, ${event.data.siteName}`);
+      return sayOpened(event);
     case 'gear-chosen':
       return sayGear(procedure, event);
     case 'caution-acknowledged':
@@ -115,6 +115,13 @@ const resumedAfter = {
   reload: 'the app was opened again',
   'lead-called': 'the lead was called',
 } as const;
+
+function sayOpened({ data: { person, siteName, again } }: EventOf<'opened'>): EventWords {
+  const by = `${person}, ${siteName}`;
+  if (again === undefined) return plain('Run opened', by);
+  const others = again.besides.length === 1 ? 'another' : `${again.besides.length} others`;
+  return live(`Run opened beside ${others} of the same half: ${again.because}`, by);
+}
 
 function sayGear(procedure: CompiledProcedure, { data }: EventOf<'gear-chosen'>): EventWords {
   const role = procedure.document.gear.find((need) => need.role === data.role)?.label ?? data.role;

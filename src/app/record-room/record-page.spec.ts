@@ -161,6 +161,28 @@ describe('the page of one record', () => {
     expect(textOf(root())).not.toContain('No finding yet');
   });
 
+  it('shows the runs of the same half side by side, with the reason for the second', async () => {
+    const one = { runId: header.runId, visitId: header.visitId, procedureId: header.procedureId, half: 'cold' };
+    const first = { ...one, procedureTitle: 'Seal', personName: 'I. Okafor', tabletLabel: 'B2', openedAt: 1 };
+    const second = { ...first, runId: 'r-2', personName: 'R. Adeyemi', tabletLabel: 'Tablet B3', status: 'open' };
+    const sameHalf = [{ ...first, status: 'closed', result: 'out', verdict: 'Does not seal' }, second];
+    await show({ ...detail, sameHalf });
+    const region = byRole(root(), 'region', '2 runs of the same cold half');
+    expect(textOf(region)).toContain('without knowing of each other');
+    expect(textOf(region)).toMatch(/Run 1, shown here\s*closed.*I\. Okafor\s*On\s*tablet B2\s*Finding\s*Does not seal/);
+    expect(byRole(region, 'link', 'Run 2').getAttribute('href')).toBe('/records/r-2');
+    expect(textOf(region)).toMatch(/Run 2\s*open.*R\. Adeyemi\s*On\s*Tablet B3\s*Finding\s*none yet$/);
+  });
+
+  it('does not say of runs that knew of each other that they did not', async () => {
+    const one = { runId: header.runId, half: 'cold', personName: 'I. Okafor', openedAt: 1, status: 'closed' };
+    const again = { because: 'Repaired since', besides: [header.runId] };
+    await show({ ...detail, sameHalf: [one, { ...one, runId: 'r-2', again }] });
+    const region = byRole(root(), 'region', '2 runs of the same cold half');
+    expect(textOf(region)).not.toContain('without knowing');
+    expect(textOf(region)).toMatch(/Begun again\s*Repaired since/);
+  });
+
   it('refuses to replay on another procedure than the one that the run was opened on', async () => {
     const document = { ...run.procedure.document, title: 'Another one' };
     await show({ ...detail, procedure: { ...detail.procedure, document } });

@@ -3,6 +3,7 @@ import { ChangeDetectionStrategy, Component, computed, effect, inject, input, un
 import { RouterLink } from '@angular/router';
 import { liveRows } from '../core/live-rows';
 import { OfflineStore } from '../core/offline-store';
+import { tabletWords } from '../core/tablet-words';
 import { LoadProblem } from '../shared/load-problem';
 import { unbroken } from '../shared/unbroken';
 import { ResultMark } from '../shared/result-mark';
@@ -10,6 +11,7 @@ import { TopBar } from '../shared/top-bar';
 import { EventList } from './event-list';
 import { RecordStore } from './record-store';
 import { RecordSummary } from './record-summary';
+import { SameHalf } from './same-half';
 import { StoryTable } from './story-table';
 import { WriteUpView } from './write-up-view';
 
@@ -23,6 +25,7 @@ import { WriteUpView } from './write-up-view';
     RecordSummary,
     ResultMark,
     RouterLink,
+    SameHalf,
     StoryTable,
     TopBar,
     WriteUpView,
@@ -98,6 +101,3 @@ export class RecordPage {
     element?.focus({ preventScroll: true });
   }
 }
-
-/** A label may say already that it is a tablet's. */
-const tabletWords = (label: string): string => (/^tablet\b/i.test(label) ? label : `tablet ${label}`);

@@ -1,6 +1,6 @@
 import type { JudgedResult } from '../../../procedures/document';
 import type { RunEvent, RunHeader, RunState } from '../../../procedures/engine';
-import type { Countersignature, PublishedProcedure } from '../core/wire';
+import type { Countersignature, PublishedProcedure, VisitRun } from '../core/wire';
 
 /** One row of the list: the server's projection of a run. */
 export interface RecordRow {
@@ -38,6 +38,8 @@ export interface RecordDetail {
   readonly procedure: PublishedProcedure;
   /** The tablets that wrote, as people call them. */
   readonly tablets: readonly { readonly id: string; readonly label: string }[];
+  /** The runs of the same half of the same visit, this one included, the first begun first. */
+  readonly sameHalf: readonly VisitRun[];
   /** What the server or an earlier build computed differently. */
   readonly discrepancies: readonly FoundDiscrepancy[];
   /** What was done without the right to do it; kept, and not part of the run. */
@@ -84,6 +86,7 @@ export function readRecordDetail(body: unknown): RecordDetail {
     return {
       ...(body as unknown as RecordDetail),
       branches: listOf(body['branches']),
+      sameHalf: listOf(body['sameHalf']),
       tablets: listOf(body['tablets']),
       countersigned: listOf(body['countersigned']),
       discrepancies: listOf(body['discrepancies']),

@@ -2,12 +2,14 @@ import { inject, Injectable } from '@angular/core';
 import {
   openRun,
   replay,
+  type BegunAgain,
   type EventDraft,
   type OpeningFacts,
   type RunEvent,
   type RunHeader,
 } from '../../../procedures/engine';
 import type { CompiledProcedure } from '../../../procedures/document';
+import { knownRuns } from '../core/known-runs';
 import { OfflineStore } from '../core/offline-store';
 import { procedureCompiler } from '../core/procedure-compiler';
 import { NobodyToSign, RunJournal } from '../core/run-journal';
@@ -33,15 +35,19 @@ export class RunBeginner {
   private readonly compile = inject(procedureCompiler);
   private readonly makeId = inject(newId);
 
-  /** `half` is given where the procedure is run as a pair. */
-  async begin(visit: Visit, published: PublishedProcedure, half: Half | undefined): Promise<Begun> {
+  /**
+   * `half` is given where the procedure is run as a pair; `again`, why, where others of the same half are known. Nothing
+   * here keeps a person from beginning: what else there is may be on a tablet that is out of reach.
+   */
+  async begin(visit: Visit, published: PublishedProcedure, half: Half | undefined, again?: BegunAgain): Promise<Begun> {
     const person = this.session.person();
     if (!person) return { ok: false, message: 'Nobody is signed in.' };
     const site = await this.store.sites.get(visit.siteId);
     if (!site)
       return { ok: false, message: 'The site of this visit is not on the tablet yet: it comes with the next sync.' };
     const procedure = await this.compile(published.document);
-    const outcome = openRun(procedure, openingFacts(visit, site, person.displayName));
+    const facts = openingFacts(visit, site, person.displayName);
+    const outcome = openRun(procedure, again === undefined ? facts : { ...facts, again });
     if (!outcome.ok) return { ok: false, message: outcome.message };
     const header = await this.headerOf(visit, published, half);
     return this.write(procedure, header, outcome.drafts);
@@ -75,13 +81,13 @@ export class RunBeginner {
 
   /** The pair that the latest run of the other half began, unless this half of it was run already. */
   private async pairIdOf(visit: Visit, published: PublishedProcedure, half: Half): Promise<string | undefined> {
-    const rows = await this.store.runs.where('visitId').equals(visit.id).toArray();
-    const headers = rows
-      .sort((a, b) => b.changedAt - a.changedAt)
-      .map(({ header }) => header)
-      .filter(({ procedureId }) => procedureId === published.id);
-    const taken = new Set(headers.filter((header) => header.half === half).map(({ pairId }) => pairId));
-    return headers.find((header) => header.half !== half && !taken.has(header.pairId))?.pairId;
+    const [own, told] = await Promise.all([
+      this.store.runs.where('visitId').equals(visit.id).toArray(),
+      this.store.toldRuns.where('visitId').equals(visit.id).toArray(),
+    ]);
+    const runs = knownRuns(own, told).filter(({ procedureId }) => procedureId === published.id);
+    const taken = new Set(runs.filter((run) => run.half === half).map(({ pairId }) => pairId));
+    return runs.find((run) => run.half !== half && !taken.has(run.pairId))?.pairId;
   }
 }
 

@@ -9,7 +9,7 @@ import { PrimaryButton } from '../primary-action';
 import { JudgedLine } from '../readings/judged-line';
 import type { RunProblem, RunView } from '../run-view';
 import { beadResult, walkedBefore } from '../walked-steps';
-import { ReasonField } from './reason-field';
+import { ReasonField } from '../../shared/reason-field';
 import { recordedIn } from './recorded-in-step';
 import { SheetBody } from './sheet-body';
 import { SheetHand } from './sheet-hand';

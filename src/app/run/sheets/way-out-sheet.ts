@@ -6,7 +6,7 @@ import type { HonestWay } from '../frame/honest-ways';
 import { RefusalLine } from '../frame/refusal-line';
 import { PrimaryButton } from '../primary-action';
 import type { RunProblem, RunView } from '../run-view';
-import { ReasonField } from './reason-field';
+import { ReasonField } from '../../shared/reason-field';
 import { SheetBody } from './sheet-body';
 import { SheetHand } from './sheet-hand';
 

@@ -5,7 +5,7 @@ import { RefusalLine } from '../frame/refusal-line';
 import { PrimaryButton } from '../primary-action';
 import type { RunProblem, RunView } from '../run-view';
 import { lastDecision } from '../walked-steps';
-import { ReasonField } from './reason-field';
+import { ReasonField } from '../../shared/reason-field';
 import { SheetBody } from './sheet-body';
 import { SheetHand } from './sheet-hand';
 import { SheetWide } from './sheet-wide';

@@ -6,7 +6,7 @@ import { entryField } from '../entry-draft';
 import { RefusalLine } from '../frame/refusal-line';
 import { PrimaryButton } from '../primary-action';
 import type { RunProblem, RunView } from '../run-view';
-import { ReasonField } from '../sheets/reason-field';
+import { ReasonField } from '../../shared/reason-field';
 import { gearFor, type GearFacts } from './gear-facts';
 
 /** What stands for an instrument that was put back: no instrument's id. */
