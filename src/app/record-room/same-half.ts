@@ -22,7 +22,13 @@ export class SameHalf {
   /** The one that is shown. */
   readonly shown = input.required<string>();
 
-  protected readonly isUnaware = computed(() => areUnaware(this.runs()));
+  protected readonly unaware = computed(() => {
+    const runs = this.runs();
+    if (!areUnaware(runs)) return undefined;
+    return runs.length === 2
+      ? 'They were begun without knowing of each other.'
+      : 'Not each was begun knowing of the others.';
+  });
   protected readonly title = computed(() => {
     const [first] = this.runs();
     return `${this.runs().length} runs of the same ${first === undefined ? 'procedure' : workWords(first)}`;

@@ -6,7 +6,7 @@ import { begunWords, standingWords, workWords, type KnownRun } from '../core/kno
   selector: 'bay-twice-begun',
   template: `
     <p>
-      <b>{{ title() }}</b> Neither knew of the other. Both are kept; agree on which goes on.
+      <b>{{ title() }}</b> {{ unaware() }} agree on which goes on.
     </p>
     <ul>
       @for (line of lines(); track line.runId) {
@@ -48,6 +48,11 @@ export class TwiceBegun {
     const about = this.about();
     return `${about === undefined ? 'The' : `${about}: the`} ${what} was begun ${times}.`;
   });
+  protected readonly unaware = computed(() =>
+    this.runs().length === 2
+      ? 'Neither knew of the other. Both are kept;'
+      : 'Not each was begun knowing of the others. All are kept;',
+  );
   protected readonly lines = computed(() =>
     this.runs().map((run) => ({
       runId: run.runId,

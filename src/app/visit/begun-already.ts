@@ -52,7 +52,7 @@ export class BegunAlready {
       isLoud: run === firstHere,
       begun: begunWords(run, this.now()),
       stands: standingWords(run),
-      elsewhere: isOver(run) ? `It was done on ${run.tablet}.` : `It goes on there, on ${run.tablet}.`,
+      elsewhere: isOver(run) ? 'It was done there.' : 'It goes on there.',
     }));
   });
   protected readonly hasOneHere = computed(() => this.runs().some(({ isHere }) => isHere));

@@ -90,7 +90,7 @@ describe('VisitPage', () => {
     const { press, opened, text } = await shown(elsewhere);
     await press(/Cold half again/);
     expect(text()).toContain('The cold half was begun on this visit already');
-    expect(text()).toMatch(/R\. Adeyemi, today \d+:00, on tablet B2\s*still open\s*It goes on there, on tablet B2\./);
+    expect(text()).toMatch(/R\. Adeyemi, today \d+:00, on tablet B2\s*still open\s*It goes on there\./);
     expect(await opened()).toEqual([]);
     await press(/Leave it at that/);
     expect(text()).not.toContain('begun on this visit already');
