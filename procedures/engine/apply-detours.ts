@@ -1,6 +1,6 @@
 import type { CompiledProcedure } from '../document';
 import { dropLastTake } from './apply-readings';
-import { requireStep } from './apply-walk';
+import { requireCurrent, requireStep } from './apply-walk';
 import { RefusedEvent } from './refusal';
 import type { EventOf } from './run-event';
 import type { RunState } from './run-state';
@@ -19,11 +19,13 @@ export function overrule(procedure: CompiledProcedure, state: RunState, event: E
     verdict: overruled?.verdictBefore,
     finding: undefined,
     current: undefined,
+    due: undefined,
   };
 }
 
 export function redo(procedure: CompiledProcedure, state: RunState, event: EventOf<'step-redone'>): RunState {
-  requireStep(procedure, event.data.step);
+  const step = requireStep(procedure, event.data.step);
+  if (step.kind === 'finding') throw new RefusedEvent('not-done', 'a finding is reached, not taken again');
   const at = findLastIndex(state.walked, (claim) => claim.step === event.data.step);
   const earlier = state.walked[at];
   if (earlier === undefined) throw new RefusedEvent('not-done', 'that step was never walked');
@@ -36,6 +38,8 @@ export function redo(procedure: CompiledProcedure, state: RunState, event: Event
     verdict: earlier.verdictBefore,
     finding: undefined,
     current: undefined,
+    due: step.id,
+    overruled: undefined,
   };
 }
 
@@ -51,6 +55,7 @@ export function exceedLimit(procedure: CompiledProcedure, state: RunState, event
   const limit = procedure.document.limits.find((candidate) => candidate.id === event.data.limit);
   if (limit === undefined) throw new RefusedEvent('unknown-name', `the procedure has no limit ${event.data.limit}`);
   const { step: stepId, name, figure } = event.data;
+  requireCurrent(state, stepId);
   const alarm = { seq: event.seq, step: stepId, limit: limit.id, name, figure, says: limit.says, then: limit.then };
   return {
     ...dropLastTake(withoutSeries(procedure, state, stepId), name),
@@ -74,6 +79,7 @@ export function reachFinding(
 ): RunState {
   const finding = requireStep(procedure, event.data.finding);
   if (finding.kind !== 'finding') throw new RefusedEvent('unknown-step', `step ${finding.number} is no finding`);
+  if (state.due !== finding.id) throw new RefusedEvent('not-due', `no way led to the finding ${finding.id}`);
   const claim = {
     step: finding.id,
     claimedSeq: event.seq,
@@ -82,5 +88,12 @@ export function reachFinding(
     doneAt: event.at,
     result: finding.result,
   };
-  return { ...state, current: undefined, verdict: finding.id, finding: finding.id, walked: [...state.walked, claim] };
+  return {
+    ...state,
+    current: undefined,
+    due: undefined,
+    verdict: finding.id,
+    finding: finding.id,
+    walked: [...state.walked, claim],
+  };
 }

@@ -1,13 +1,22 @@
 import type { CompiledProcedure } from '../document';
 import { requireCurrent, requireStep } from './apply-walk';
+import { cautionCount } from './cautions';
 import { newCodesAgainst } from './compare-codes';
 import { own } from './environment';
 import { RefusedEvent } from './refusal';
 import type { EventOf } from './run-event';
 import type { RunState } from './run-state';
 
-export function acknowledge(state: RunState, event: EventOf<'caution-acknowledged'>): RunState {
+export function acknowledge(
+  procedure: CompiledProcedure,
+  state: RunState,
+  event: EventOf<'caution-acknowledged'>,
+): RunState {
   const current = requireCurrent(state, event.data.step);
+  const step = requireStep(procedure, current.id);
+  if (event.data.caution >= cautionCount(procedure, step)) {
+    throw new RefusedEvent('unknown-name', `step ${step.number} has no caution ${event.data.caution}`);
+  }
   const acknowledged = [...new Set([...current.acknowledged, event.data.caution])];
   return { ...state, current: { ...current, acknowledged } };
 }
@@ -74,14 +83,27 @@ export function makeChoice(procedure: CompiledProcedure, state: RunState, event:
 
 export function disturb(procedure: CompiledProcedure, state: RunState, event: EventOf<'disturbed'>): RunState {
   const { step: stepId, item, label } = event.data;
+  requireCurrent(state, stepId);
   const declared = requireStep(procedure, stepId).disturbs?.find((candidate) => candidate.item === item);
   if (declared === undefined) throw new RefusedEvent('unknown-name', `${item} is not disturbed by that step`);
   const rest = state.disturbed.filter((candidate) => candidate.item !== item);
   return { ...state, disturbed: [{ item, label, restore: declared.restore, step: stepId, seq: event.seq }, ...rest] };
 }
 
-export function chooseGear(state: RunState, event: EventOf<'gear-chosen'>): RunState {
+export function restore(state: RunState, { data: { item } }: EventOf<'restored'>): RunState {
+  const disturbed = state.disturbed.filter((candidate) => candidate.item !== item);
+  if (disturbed.length === state.disturbed.length) {
+    throw new RefusedEvent('unknown-name', `${item} is not disturbed: it cannot be put back`);
+  }
+  return { ...state, disturbed };
+}
+
+export function chooseGear(procedure: CompiledProcedure, state: RunState, event: EventOf<'gear-chosen'>): RunState {
   const { role, instrument, overdueBecause } = event.data;
+  const need = procedure.document.gear.find((candidate) => candidate.role === role);
+  if (need?.kind !== instrument.kind) {
+    throw new RefusedEvent('unknown-name', `the procedure asks for no ${instrument.kind} as ${role}`);
+  }
   const chosen = { ...instrument, seq: event.seq, ...(overdueBecause === undefined ? {} : { overdueBecause }) };
   return { ...state, gear: { ...state.gear, [role]: chosen } };
 }

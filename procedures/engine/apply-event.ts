@@ -1,17 +1,22 @@
-import type { CompiledProcedure } from '../document';
+import type { CompiledProcedure, ProcedureDocument } from '../document';
+import { unitKind } from '../calculations';
 import { brokenLink, contentHash, headerHash } from './chain';
 import { exceedLimit, overrule, reachFinding, redo } from './apply-detours';
-import { acknowledge, chooseGear, disturb, makeChoice, recordCodes, runTimer } from './apply-entries';
+import { acknowledge, chooseGear, disturb, makeChoice, recordCodes, restore, runTimer } from './apply-entries';
 import { placeMark, recordReading, recordSeries, undo } from './apply-readings';
 import { amendClaim, claimStep, finishStep, requireCurrent, takeBranch } from './apply-walk';
-import { RefusedEvent, type ReplayResult } from './refusal';
-import type { RunEvent, RunHeader } from './run-event';
+import { own } from './environment';
+import { problemWithHeader, problemWithShape } from './event-shape';
+import { parseDecimal } from './figures';
+import { RefusedEvent, type Refusal, type ReplayResult } from './refusal';
+import { requireGoing } from './require-going';
+import type { EventOf, RunEvent, RunHeader } from './run-event';
 import type { RunState } from './run-state';
 
 /**
- * The run after one more event. Total and deterministic: it gives a state or a refusal that names the event and why.
- * Order comes from seq and the chain alone; a value that this build computes differently is a discrepancy, never a
- * refusal.
+ * The run after one more event. Total and deterministic: whatever the event holds, it gives a state or a refusal that
+ * names the event and why; it never throws on what JSON can hold. Order comes from seq and the chain alone; a value
+ * that this build computes differently is a discrepancy, never a refusal.
  */
 export function applyEvent(
   procedure: CompiledProcedure,
@@ -20,15 +25,21 @@ export function applyEvent(
   event: RunEvent,
 ): ReplayResult {
   const seq = (state?.seq ?? 0) + 1;
+  const refused = (code: Refusal['code'], what: string): ReplayResult => {
+    const id: unknown = typeof event === 'object' ? (event as RunEvent | null)?.id : undefined;
+    return { ok: false, refusal: { seq, ...(typeof id === 'string' ? { id } : {}), code, what } };
+  };
+  const odd = (state === undefined ? problemWithHeader(header) : undefined) ?? problemWithShape(event);
+  if (odd !== undefined) return refused('malformed', `event ${seq} cannot be read: ${odd}`);
   const broken = brokenLink(header, event, seq, state?.head ?? headerHash(header));
-  if (broken !== undefined) return { ok: false, refusal: { seq, code: 'chain', what: broken } };
+  if (broken !== undefined) return refused('chain', broken);
   try {
     const next = state === undefined ? open(procedure, header, event) : reduceEvent(procedure, state, event);
     return { ok: true, state: { ...next, seq: event.seq, head: event.hash, lastAt: event.at } };
   } catch (error) {
-    if (error instanceof RefusedEvent) return { ok: false, refusal: { seq, code: error.code, what: error.message } };
+    if (error instanceof RefusedEvent) return refused(error.code, error.message);
     // RangeError: a figure of the event is outside of what its calculation allows.
-    if (error instanceof RangeError) return { ok: false, refusal: { seq, code: 'malformed', what: error.message } };
+    if (error instanceof RangeError) return refused('malformed', error.message);
     throw error;
   }
 }
@@ -39,6 +50,7 @@ function open(procedure: CompiledProcedure, header: RunHeader, event: RunEvent):
   if (document.id !== header.procedureId || contentHash(document) !== header.contentHash) {
     throw new RefusedEvent('other-procedure', 'the run was opened on another procedure or version');
   }
+  requireInputs(document, event);
   return {
     header,
     status: 'open',
@@ -53,6 +65,7 @@ function open(procedure: CompiledProcedure, header: RunHeader, event: RunEvent):
     inputs: event.data.inputs,
     ...(event.data.again === undefined ? {} : { again: event.data.again }),
     current: undefined,
+    due: document.steps[0]?.id,
     walked: [],
     values: {},
     truths: {},
@@ -73,24 +86,31 @@ function open(procedure: CompiledProcedure, header: RunHeader, event: RunEvent):
   };
 }
 
-/** The same without the chain: for events that have no place in it yet. Throws `RefusedEvent`. */
-export function reduceEvent(procedure: CompiledProcedure, state: RunState, event: RunEvent): RunState {
-  if (state.status === 'closed' || state.status === 'signed') {
-    if (event.type !== 'signed' && event.type !== 'amended') {
-      throw new RefusedEvent('not-open', 'the run is closed: only a signature or an amendment may follow');
+/** Every input of the procedure has to be there, as a figure of its own kind: conditions are evaluated on them. */
+function requireInputs({ inputs }: ProcedureDocument, { data }: EventOf<'opened'>): void {
+  for (const { name, unit } of inputs) {
+    const given = own(data.inputs, name);
+    if (given === undefined) throw new RefusedEvent('malformed', `the input ${name} is missing`);
+    if (parseDecimal(given.text) === undefined || unitKind(given.unit) !== unitKind(unit)) {
+      throw new RefusedEvent('malformed', `the input ${name} is no figure in ${unit}`);
     }
   }
+}
+
+/** The same without shape and chain: for events that have no place in it yet. Throws `RefusedEvent` and `RangeError`. */
+export function reduceEvent(procedure: CompiledProcedure, state: RunState, event: RunEvent): RunState {
+  requireGoing(state, event);
   switch (event.type) {
     case 'opened':
       throw new RefusedEvent('opened-twice', 'the run was opened already');
     case 'gear-chosen':
-      return chooseGear(state, event);
+      return chooseGear(procedure, state, event);
     case 'step-claimed':
       return claimStep(procedure, state, event);
     case 'step-done':
       return finishStep(procedure, state, event);
     case 'caution-acknowledged':
-      return acknowledge(state, event);
+      return acknowledge(procedure, state, event);
     case 'reading-recorded':
       return recordReading(procedure, state, event);
     case 'not-measurable':
@@ -111,7 +131,7 @@ export function reduceEvent(procedure: CompiledProcedure, state: RunState, event
     case 'disturbed':
       return disturb(procedure, state, event);
     case 'restored':
-      return { ...state, disturbed: state.disturbed.filter(({ item }) => item !== event.data.item) };
+      return restore(state, event);
     case 'branch-taken':
       return takeBranch(procedure, state, event);
     case 'branch-overruled':
@@ -131,13 +151,17 @@ export function reduceEvent(procedure: CompiledProcedure, state: RunState, event
     case 'limit-exceeded':
       return exceedLimit(procedure, state, event);
     case 'alert-acknowledged':
-      return state.alarm?.seq === event.data.seq ? { ...state, alarm: undefined } : state;
+      if (state.alarm?.seq !== event.data.seq) {
+        throw new RefusedEvent('unknown-name', `no limit was exceeded at event ${event.data.seq} that still waits`);
+      }
+      return { ...state, alarm: undefined };
     case 'finding-reached':
       return reachFinding(procedure, state, event);
     case 'write-up-written':
       return { ...state, writeUp: event.data };
     case 'closed':
-      if (state.finding === undefined) throw new RefusedEvent('not-done', 'the run has no finding yet');
+      if (state.finding === undefined || state.finding !== event.data.finding)
+        throw new RefusedEvent('not-done', 'the run has not reached that finding');
       if (state.disturbed.length > 0) throw new RefusedEvent('still-disturbed', 'something disturbed is not restored');
       return { ...state, status: 'closed', current: undefined };
     case 'signed':

@@ -1,11 +1,12 @@
+import { unitKind } from '../calculations';
 import type { CompiledProcedure, Step } from '../document';
 import { own } from './environment';
 import { parseDecimal } from './figures';
 import { computedValue, measureQuantity } from './measure-quantity';
-import { channelsOf, foundQuantitiesOf, readQuantity, takesNeeded } from './quantities';
+import { channelsOf, foundQuantitiesOf, readQuantity, takesNeeded, wayOf } from './quantities';
 import { RefusedEvent } from './refusal';
 import { requireCurrent, requireStep } from './apply-walk';
-import type { EventOf } from './run-event';
+import type { EventOf, RunEventData } from './run-event';
 import type { NamedValue, RunState, SeriesState, Take } from './run-state';
 
 /** One take: when the quantity has all it needs, its value follows. */
@@ -17,20 +18,14 @@ export function recordReading(
   const { step: stepId, name, figure, source, way, timeS } = event.data;
   const step = requireStep(procedure, stepId);
   const current = requireCurrent(state, stepId);
-  if (parseDecimal(figure.text) === undefined) {
-    throw new RefusedEvent('malformed', `the reading ${name} is no decimal number`);
-  }
+  requireFigure(step, event.data);
   const found = foundQuantitiesOf(step).find((candidate) => candidate.name === name);
   if (found !== undefined && source === 'computed') {
     const provenance = { step: step.id, seq: event.seq, at: event.at };
     const figureWithSpread = { text: figure.text, uncertainty: event.data.uncertainty ?? '0' };
     return withValues(state, [computedValue(procedure, state, found, figureWithSpread, provenance)]);
   }
-  const isChannel = channelsOf(step).some((channel) => channel.name === name);
   const quantity = readQuantity(step, name);
-  if (quantity === undefined && !isChannel) {
-    throw new RefusedEvent('unknown-name', `step ${step.number} takes no reading ${name}`);
-  }
   const take: Take = {
     seq: event.seq,
     text: figure.text,
@@ -42,6 +37,27 @@ export function recordReading(
   const takes = [...(own(current.takes, name) ?? []), take];
   const next = { ...state, current: { ...current, takes: { ...current.takes, [name]: takes } } };
   return quantity === undefined ? next : remeasure(procedure, next, step, name, event);
+}
+
+/** The figure has to be a decimal in a unit of what is read: a quantity, the entry of its way, or a channel. */
+function requireFigure(step: Step, { name, figure, way: wayId, uncertainty }: RunEventData['reading-recorded']): void {
+  const quantity = readQuantity(step, name);
+  const way = quantity === undefined ? undefined : wayOf(quantity, wayId);
+  if (quantity !== undefined && (way === undefined) !== (quantity.ways === undefined)) {
+    throw new RefusedEvent('unknown-name', `${name} is not known by the way ${wayId ?? 'of reading it directly'}`);
+  }
+  const read =
+    way?.entry ??
+    quantity ??
+    foundQuantitiesOf(step).find((found) => found.name === name) ??
+    channelsOf(step).find((channel) => channel.name === name);
+  if (read === undefined) throw new RefusedEvent('unknown-name', `step ${step.number} takes no reading ${name}`);
+  if (parseDecimal(figure.text) === undefined || unitKind(figure.unit) !== unitKind(read.unit)) {
+    throw new RefusedEvent('malformed', `the reading ${name} is no decimal number in a unit such as ${read.unit}`);
+  }
+  if (uncertainty !== undefined && !((parseDecimal(uncertainty) ?? -1) >= 0)) {
+    throw new RefusedEvent('malformed', `the uncertainty of ${name} is no decimal number from 0`);
+  }
 }
 
 /** Names the value of a quantity from its takes in this claim, once there are enough. */

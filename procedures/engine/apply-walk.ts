@@ -1,18 +1,21 @@
-import type { CompiledProcedure, Exit, Step } from '../document';
+import type { CompiledProcedure, Step } from '../document';
+import { own } from './environment';
 import { evaluateResult } from './measure-quantity';
 import { noiseTruthsOf, resultsOf } from './quantities';
 import { RefusedEvent } from './refusal';
 import type { EventOf } from './run-event';
 import type { CurrentStep, NamedValue, RunState, WalkedStep } from './run-state';
-import { exitsOf, wayOn } from './ways-on';
+import { exitsOf, wayOn, type NamedExit } from './ways-on';
 import { worstOf } from './worst-result';
 
 /** A step is now the current one. Claiming it again supersedes what it gave before. */
 export function claimStep(procedure: CompiledProcedure, state: RunState, event: EventOf<'step-claimed'>): RunState {
   const step = requireStep(procedure, event.data.step);
-  if (state.current !== undefined && !state.current.isDone && state.current.id !== step.id) {
-    throw new RefusedEvent('not-done', `step ${step.number} was claimed before the current one was done`);
+  const isAgain = state.current?.id === step.id && !state.current.isDone;
+  if (step.id !== state.due && !isAgain) {
+    throw new RefusedEvent('not-due', `step ${step.number} was claimed, to which no way led`);
   }
+  if (step.kind === 'finding') throw new RefusedEvent('not-due', 'a finding is reached, not claimed');
   const current: CurrentStep = {
     id: step.id,
     claimedSeq: event.seq,
@@ -31,6 +34,7 @@ export function claimStep(procedure: CompiledProcedure, state: RunState, event: 
   return {
     ...state,
     current,
+    due: undefined,
     walked: [...state.walked, claim],
     values: without(state.values, step.id),
     truths: without(state.truths, step.id),
@@ -51,6 +55,9 @@ function without<T extends { readonly step: string }>(
 export function finishStep(procedure: CompiledProcedure, state: RunState, event: EventOf<'step-done'>): RunState {
   const current = requireCurrent(state, event.data.step);
   const step = requireStep(procedure, current.id);
+  if (step.kind === 'restore' && state.disturbed.length > 0) {
+    throw new RefusedEvent('still-disturbed', 'something disturbed is not put back yet');
+  }
   const provenance = { step: step.id, seq: event.seq, at: event.at };
   let next: RunState = {
     ...state,
@@ -61,9 +68,9 @@ export function finishStep(procedure: CompiledProcedure, state: RunState, event:
     const value = evaluateResult(procedure, next, result, provenance);
     if (value !== undefined) next = { ...next, values: { ...next.values, [value.name]: value } };
   }
-  const own = Object.values(next.values).filter((value: NamedValue) => value.step === step.id);
+  const given = Object.values(next.values).filter((value: NamedValue) => value.step === step.id);
   const result = worstOf(
-    own.flatMap((value) => (value.judgement?.result === undefined ? [] : [value.judgement.result])),
+    given.flatMap((value) => (value.judgement?.result === undefined ? [] : [value.judgement.result])),
   );
   return amendClaim(next, {
     doneSeq: event.seq,
@@ -75,7 +82,7 @@ export function finishStep(procedure: CompiledProcedure, state: RunState, event:
 /** The marks of the step's series say whether there was a noise, and whether it stopped. */
 function noiseTruths(state: RunState, step: Step, seq: number): RunState['truths'] {
   if (step.kind !== 'listen') return {};
-  const marks = state.series[step.name]?.marks ?? {};
+  const marks = own(state.series, step.name)?.marks ?? {};
   const stopped = marks['noise-stops'] !== undefined;
   return Object.fromEntries(
     noiseTruthsOf(step).map((found) => {
@@ -89,19 +96,20 @@ function noiseTruths(state: RunState, step: Step, seq: number): RunState['truths
 export function takeBranch(procedure: CompiledProcedure, state: RunState, event: EventOf<'branch-taken'>): RunState {
   const { step: stepId, to, exit, verdict } = event.data;
   const step = requireStep(procedure, stepId);
-  const authored: Exit | undefined = exitsOf(procedure, step).find((candidate) => candidate.exit === exit);
+  const authored = exitsOf(procedure, step).find((candidate) => candidate.exit === exit);
   if (authored === undefined) throw new RefusedEvent('unknown-exit', `step ${step.number} has no exit ${exit}`);
+  requirePlaceForWay(state, step, authored);
   const heading = authored.verdict ?? state.verdict;
   const target = authored.to === 'verdict' ? heading : authored.to;
-  if (to !== target)
-    throw new RefusedEvent('unknown-exit', `exit ${exit} of step ${step.number} leads to ${target}, not ${to}`);
+  if (target === undefined || to !== target) {
+    const leads = target ?? 'no finding yet';
+    throw new RefusedEvent('unknown-exit', `exit ${exit} of step ${step.number} leads to ${leads}, not ${to}`);
+  }
+  requireStep(procedure, target);
   if (verdict !== undefined && verdict !== authored.verdict) {
     throw new RefusedEvent('unknown-exit', `exit ${exit} of step ${step.number} does not head for ${verdict}`);
   }
   const isStop = exit === 'stop';
-  if (!isStop && state.current?.id !== stepId && state.overruled !== stepId) {
-    throw new RefusedEvent('not-current', `step ${step.number} is not the current one`);
-  }
   const expected =
     isStop || exit === 'cannot-measure' || state.overruled === stepId ? undefined : wayOn(procedure, state, step);
   const discrepancies =
@@ -112,12 +120,13 @@ export function takeBranch(procedure: CompiledProcedure, state: RunState, event:
           { seq: event.seq, what: `way on from step ${step.number}`, recorded: exit, computed: expected.exit },
         ];
   const counted = exit.startsWith('next-') ? `${step.id}/${exit}` : undefined;
-  const way = { seq: event.seq, ...event.data };
   const next: RunState = {
     ...state,
     status: isStop ? 'open' : state.status,
     pause: isStop ? undefined : state.pause,
     verdict: heading,
+    finding: undefined,
+    due: target,
     overruled: undefined,
     discrepancies,
     branchCounts:
@@ -126,7 +135,27 @@ export function takeBranch(procedure: CompiledProcedure, state: RunState, event:
         : { ...state.branchCounts, [counted]: (state.branchCounts[counted] ?? 0) + 1 },
     current: state.current === undefined ? undefined : { ...state.current, isDone: true },
   };
-  return amendClaim(next, { way });
+  return amendClaim(next, { way: { seq: event.seq, ...event.data } });
+}
+
+/** A way is taken once from the step that is done, from the one overruled, or out of a stop; a bound is a bound. */
+function requirePlaceForWay(state: RunState, step: Step, { exit, atMost }: NamedExit): void {
+  if (exit === 'stop') {
+    if (state.status !== 'stopped')
+      throw new RefusedEvent('not-open', 'the run is not stopped: no way leads out of it');
+    if (state.walked.at(-1)?.step !== step.id) {
+      throw new RefusedEvent('not-current', `the run was not stopped at step ${step.number}`);
+    }
+    return;
+  }
+  if (atMost !== undefined && (own(state.branchCounts, `${step.id}/${exit}`) ?? 0) >= atMost) {
+    throw new RefusedEvent('unknown-exit', `exit ${exit} of step ${step.number} was taken ${atMost} times already`);
+  }
+  if (state.overruled === step.id) return;
+  if (state.current?.id !== step.id || state.due !== undefined) {
+    throw new RefusedEvent('not-current', `step ${step.number} is not the current one`);
+  }
+  if (!state.current.isDone) throw new RefusedEvent('not-done', `step ${step.number} is not done yet`);
 }
 
 /** Changes the newest claim. */
@@ -143,5 +172,6 @@ export function requireStep(procedure: CompiledProcedure, id: string): Step {
 
 export function requireCurrent(state: RunState, id: string): CurrentStep {
   if (state.current?.id !== id) throw new RefusedEvent('not-current', `step ${id} is not the current one`);
+  if (state.current.isDone) throw new RefusedEvent('not-current', `step ${id} is done already`);
   return state.current;
 }

@@ -1,4 +1,5 @@
 import type { CompiledProcedure, Step } from '../document';
+import { cautionCount } from './cautions';
 import { isComplete, recordTake, takeBack } from './decide-readings';
 import { finishListening, importSeries, placeMark, takeMarkAway } from './decide-listening';
 import { close, keepWriteUp, leavePause, leaveStop, overrule, pause, redo } from './decide-run';
@@ -151,13 +152,6 @@ function currentStep(drafting: Drafting): Step {
 
 function wrongKind(step: Step): CannotDo {
   return new CannotDo('wrong-kind', `Step ${step.number} does not take that.`);
-}
-
-/** How many cautions gate a step: the start card's hold throughout, the others are the step's own. */
-export function cautionCount(procedure: CompiledProcedure, step: Step): number {
-  return step.kind === 'start'
-    ? procedure.document.start.throughout.length + (step.cautions?.length ?? 0)
-    : (step.cautions?.length ?? 0);
 }
 
 function requireCautions(drafting: Drafting, step: Step): void {

@@ -16,7 +16,8 @@ export {
   type EventPlace,
 } from './chain';
 export { newCodesAgainst } from './compare-codes';
-export { cautionCount, decide } from './decide';
+export { cautionCount } from './cautions';
+export { decide } from './decide';
 export { coarseness, isOverdue } from './decide-gear';
 export { parseDecimal, tidyDecimal } from './figures';
 export { samplesOf, suggestMark, type MarkSuggestion } from './listening';

@@ -2,7 +2,10 @@ import type { RunState } from './run-state';
 
 /** Why an event cannot be part of the run: structure, never a value. */
 export interface Refusal {
+  /** The event's place in the sequence, from 1: where it stands, whatever number it carries. */
   readonly seq: number;
+  /** Its own id, where it has one that can be read. */
+  readonly id?: string;
   readonly code:
     | 'chain'
     | 'not-opened'
@@ -12,10 +15,13 @@ export interface Refusal {
     | 'unknown-name'
     | 'unknown-exit'
     | 'not-current'
+    | 'not-due'
+    | 'alarm'
     | 'not-open'
     | 'not-done'
     | 'still-disturbed'
     | 'malformed';
+  /** The reason in words: a clause without a full stop. */
   readonly what: string;
 }
 

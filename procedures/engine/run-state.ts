@@ -30,6 +30,8 @@ export interface RunState {
   readonly inputs: Readonly<Record<string, Figure & { readonly source: string }>>;
   /** The claimed step; absent once a finding is reached. */
   readonly current: CurrentStep | undefined;
+  /** The step to be claimed or the finding to be reached next: where a way led that was taken, or a step taken again. */
+  readonly due: string | undefined;
   /** Every claim in order, the current one included. */
   readonly walked: readonly WalkedStep[];
   /** The latest of each named quantity. */

@@ -1,0 +1,74 @@
+import { isUnit } from '../calculations';
+
+/**
+ * Says what keeps a value from having a shape, with the place in it (`data/figure/text is no text`); undefined when it
+ * has it. Never throws on a value that JSON can hold.
+ */
+export type Shape = (value: unknown, at: string) => string | undefined;
+
+export const text: Shape = (value, at) => (typeof value === 'string' ? undefined : `${at} is no text`);
+
+/** A finite number: NaN and the infinities have no JSON form. */
+export const number: Shape = (value, at) => (Number.isFinite(value) ? undefined : `${at} is no number`);
+
+/** A whole number from 0 that JSON keeps exactly (at most 2^53 - 1). */
+export const count: Shape = (value, at) =>
+  Number.isSafeInteger(value) && (value as number) >= 0 ? undefined : `${at} is no whole number from 0`;
+
+/** Seconds, or another size that is never below zero. */
+export const size: Shape = (value, at) =>
+  Number.isFinite(value) && (value as number) >= 0 ? undefined : `${at} is no number from 0`;
+
+export const flag: Shape = (value, at) => (typeof value === 'boolean' ? undefined : `${at} is neither true nor false`);
+
+export const unit: Shape = (value, at) =>
+  typeof value === 'string' && isUnit(value) ? undefined : `${at} is no unit that is known here`;
+
+export function oneOf(...allowed: readonly unknown[]): Shape {
+  return (value, at) => (allowed.includes(value) ? undefined : `${at} is none of ${allowed.join(', ')}`);
+}
+
+export function listOf(entry: Shape): Shape {
+  return (value, at) => {
+    if (!Array.isArray(value)) return `${at} is no list`;
+    for (let index = 0; index < value.length; index += 1) {
+      const problem = entry(value[index], `${at}/${index}`);
+      if (problem !== undefined) return problem;
+    }
+    return undefined;
+  };
+}
+
+/** An object with one shape under every name. */
+export function recordOf(entry: Shape): Shape {
+  return (value, at) => {
+    if (!isObject(value)) return `${at} is no object`;
+    for (const name of Object.keys(value)) {
+      const problem = entry(value[name], `${at}/${name}`);
+      if (problem !== undefined) return problem;
+    }
+    return undefined;
+  };
+}
+
+/** An object with these members; a member whose name ends in `?` may be absent. What else it has is left alone. */
+export function objectOf(members: Readonly<Record<string, Shape>>): Shape {
+  const needed = Object.entries(members).map(([name, shape]) => {
+    const isOptional = name.endsWith('?');
+    return { name: isOptional ? name.slice(0, -1) : name, isOptional, shape };
+  });
+  return (value, at) => {
+    if (!isObject(value)) return `${at} is no object`;
+    for (const { name, isOptional, shape } of needed) {
+      const member = Object.hasOwn(value, name) ? value[name] : undefined;
+      if (member === undefined && isOptional) continue;
+      const problem = member === undefined ? `${at}/${name} is missing` : shape(member, `${at}/${name}`);
+      if (problem !== undefined) return problem;
+    }
+    return undefined;
+  };
+}
+
+function isObject(value: unknown): value is Readonly<Record<string, unknown>> {
+  return typeof value === 'object' && value !== null && !Array.isArray(value);
+}
