@@ -36,6 +36,17 @@ export { channelsOf, readsOf, resultsOf, takesNeeded } from './quantities';
 export { type Refusal, type ReplayResult } from './refusal';
 export { replay } from './replay';
 export { sha256Hex } from './sha256';
+export {
+  readSnapshot,
+  replayFrom,
+  snapshotFormat,
+  takeSnapshot,
+  type RunSnapshot,
+  type SnapshotPlace,
+  type SnapshotProblem,
+  type SnapshotReading,
+  type SnapshotReplay,
+} from './snapshot';
 export { renderCited, renderTemplate, shownUnit, type Citation } from './template';
 export { exitsOf, wayOn, type NamedExit } from './ways-on';
 export { composeWriteUp, writeUpParts, type WriteUp, type WriteUpPart } from './write-up';

@@ -1,5 +1,5 @@
 import type { CompiledProcedure, FindingStep, Sentence } from '../document';
-import { environmentOf } from './environment';
+import { environmentOf, own } from './environment';
 import { truthOf } from './judge-quantity';
 import { readQuantity, wayOf } from './quantities';
 import type { ChosenInstrument, RunState } from './run-state';
@@ -52,9 +52,10 @@ function codesOf(procedure: CompiledProcedure): readonly Sentence[] {
 }
 
 function testedBy(procedure: CompiledProcedure, state: RunState): readonly Sentence[] {
-  const instruments = Object.entries(state.gear).flatMap(([role, instrument]) =>
-    isUsed(procedure, state, role) ? [instrumentWords(instrument)] : [],
-  );
+  const instruments = procedure.document.gear.flatMap(({ role }) => {
+    const instrument = own(state.gear, role);
+    return instrument !== undefined && isUsed(procedure, state, role) ? [instrumentWords(instrument)] : [];
+  });
   const gear = instruments.length === 0 ? '' : ` with ${instruments.join(', ')}`;
   return [{ text: `Tested by ${procedure.document.title}, version ${state.header.version}${gear}.` }];
 }
