@@ -18,7 +18,7 @@ const speedRangeRpm = { low: 1, high: 30_000 };
 const manifoldRangeKpa = { low: 0.1, high: 1000 };
 /** A fraction: a percentage in its place is refused. */
 const efficiencyRange = { low: 0, high: 3 };
-const airflowRangeGps = { low: 0, high: 100_000 };
+const airflowRangeGps = { low: 0, high: 10_000_000 };
 
 /** The air that the cylinders would take in each second if they filled at manifold density, in g/s. */
 function sweptAirGps({ displacementL, rpm, manifoldKpa, intakeC }: EngineAir): number {
@@ -58,7 +58,7 @@ export function speedDensityAirflow(engine: EngineAir & { readonly volumetricEff
  *
  *     VE = 2 m / (rho V N),  rho = p / (R T)
  *
- * `airflowGps` is 0 to 100 000 g/s. The result is not bounded: an efficiency far from 1 tells of a reading or a
+ * `airflowGps` is 0 to 10 000 000 g/s. The result is not bounded: an efficiency far from 1 tells of a reading or a
  * displacement that cannot be right.
  *
  * Throws RangeError outside the ranges of `EngineAir`. Source: as `speedDensityAirflow`.
