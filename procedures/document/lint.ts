@@ -5,10 +5,13 @@ import { parseExpression } from './expression/parse';
 import { narrowBands } from './lint/band-and-gear';
 import { unboundedLoops } from './lint/bounded-loops';
 import { unsoundCalls, type PublishedVersions } from './lint/called';
+import { lateCautions } from './lint/caution-place';
+import { cautionsWithWork, notesWithImperatives } from './lint/caution-work';
 import { piledUpCautions } from './lint/cautions';
 import { mixedConnectives } from './lint/conditions';
 import { bandsBeyondLimits } from './lint/limit-and-band';
 import type { LintFinding, LintSubject } from './lint/lint-finding';
+import { doubleActions } from './lint/one-action';
 import { missingParts } from './lint/pictures';
 import { endlessSteps, unnamedVerdicts, unreachableSteps, waysToFindings } from './lint/reachable';
 import { brokenReferences } from './lint/references';
@@ -16,6 +19,8 @@ import { neverRestored } from './lint/restored';
 import { runGraphs } from './lint/run-graph';
 import { startCardPlace } from './lint/start';
 import { unknownTemplateNames } from './lint/template-names';
+import { nominalsWithTolerance } from './lint/two-ends';
+import { unusedReadings } from './lint/unused-readings';
 import { valuesBeforeUse } from './lint/value-before-use';
 import type { ProcedureDocument } from './procedure-document';
 import { validateDocument } from './validate-document';
@@ -51,7 +56,14 @@ const errorRules: readonly ((subject: LintSubject) => readonly LintFinding[])[] 
   mixedConnectives,
   piledUpCautions,
   unsoundCalls,
+  unusedReadings,
+  lateCautions,
+  cautionsWithWork,
+  notesWithImperatives,
+  nominalsWithTolerance,
 ];
+
+const warningRules: readonly ((subject: LintSubject) => readonly LintFinding[])[] = [narrowBands, doubleActions];
 
 /**
  * Reads a document as its publisher would: shape, expressions, ways, values, restoring, cautions. Every way is
@@ -68,7 +80,7 @@ export function lintProcedure(document: ProcedureDocument, options: LintOptions 
   const subject: LintSubject = { document, trees, graphs: runGraphs(document, trees), ...options };
   return {
     errors: [...expressionFindings(document), ...errorRules.flatMap((rule) => rule(subject))],
-    warnings: narrowBands(subject),
+    warnings: warningRules.flatMap((rule) => rule(subject)),
     waysToFindings: waysToFindings(subject),
   };
 }

@@ -20,7 +20,16 @@ export type LintRule =
   | 'picture-parts'
   | 'one-connective'
   | 'cautions'
-  | 'called';
+  | 'called'
+  | 'unused-reading'
+  | 'one-action'
+  | 'caution-place'
+  | 'caution-work'
+  | 'note-work'
+  | 'limit-and-gear'
+  | 'limit-in-words'
+  | 'two-ends'
+  | 'one-exit';
 
 /** One thing that keeps a document from being published, or that its author should know. */
 export interface LintFinding {
