@@ -3,6 +3,18 @@ import type { ProcedureDocument } from '../../procedures/document';
 import { PlainText } from '../http/plain-text';
 import { Nested } from '../http/validated';
 
+/** Why a version starts no new run, and who said so. */
+export class Withdrawal {
+  @IsString()
+  declare reason: string;
+
+  @IsString()
+  declare by: string;
+
+  @IsISO8601()
+  declare at: string;
+}
+
 export class VersionSummary {
   @IsInt()
   declare version: number;
@@ -19,6 +31,10 @@ export class VersionSummary {
 
   @IsString()
   declare contentHash: string;
+
+  @IsOptional()
+  @Nested(() => Withdrawal)
+  declare withdrawal?: Withdrawal;
 }
 
 /** What keeps a draft from being published. */
@@ -38,6 +54,9 @@ export class DraftSummary {
   /** The document's own, which may be another than that of the versions. */
   @IsString()
   declare title: string;
+
+  @IsString()
+  declare contentHash: string;
 
   @IsISO8601()
   declare importedAt: string;
@@ -63,6 +82,7 @@ export class ProcedureSummary {
   @IsString()
   declare id: string;
 
+  /** Of the newest published version, else of the draft, else of the newest withdrawn one. */
   @IsString()
   declare title: string;
 

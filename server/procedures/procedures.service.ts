@@ -8,7 +8,7 @@ import { Conflict, NotFound } from '../http/problem';
 import type { Principal } from '../http/route';
 import { checkedDocument, publishingProblems, requirePublishable } from './checked-document';
 import type { DraftAnswer, DraftDetail, ProcedureSummary, PublicationAnswer } from './procedures.dto';
-import { ProcedureDraft, ProcedureVersion, ProcedureWithdrawal } from './procedures.entity';
+import { ProcedureDraft, ProcedureVersion } from './procedures.entity';
 import { summariesOf } from './summaries';
 
 export { PublishedProcedure } from './procedures.dto';
@@ -27,7 +27,10 @@ export class ProceduresService {
     return summariesOf(this.database.manager);
   }
 
-  /** Keeps a document as a draft, in place of an earlier one that was not published. Throws `Invalid`; then nothing is kept. */
+  /**
+   * Keeps a document as a draft, in place of an earlier one that was not published. Throws `Invalid`, or `Conflict` when
+   * the version that new runs take, or the draft that waits, says exactly the same; then nothing is changed.
+   */
   async importDraft(sent: object, person: Principal): Promise<DraftAnswer> {
     const document = checkedDocument(sent);
     const text = canonicalJson(document);
@@ -41,6 +44,8 @@ export class ProceduresService {
       importedAt: this.clock(),
     };
     await this.database.transaction(async (manager) => {
+      await lockProcedure(manager, document.id);
+      await this.refuseTheSame(manager, draft);
       await manager.delete(ProcedureDraft, { procedureId: document.id, publishedVersion: IsNull() });
       await manager.insert(ProcedureDraft, draft);
     });
@@ -57,6 +62,7 @@ export class ProceduresService {
     return {
       id: draft.id,
       title: draft.title,
+      contentHash: draft.contentHash,
       procedureId: draft.procedureId,
       importedAt: draft.importedAt.toISOString(),
       importedBy: importer?.displayName ?? '',
@@ -65,7 +71,7 @@ export class ProceduresService {
     };
   }
 
-  /** Publishes a draft as the next version. Throws `NotFound`, `Invalid` while its lint has errors, or `Conflict` when it, or just that, is published. */
+  /** Publishes a draft as the next version. Throws `NotFound`, `Invalid` while its lint has errors, or `Conflict` when it is published. */
   async publish(draftId: string, person: Principal): Promise<PublicationAnswer> {
     return this.database.transaction(async (manager) => {
       const draft = await manager.findOne(ProcedureDraft, {
@@ -77,7 +83,7 @@ export class ProceduresService {
         throw new Conflict(`This draft is version ${draft.publishedVersion} already.`);
       requirePublishable(JSON.parse(draft.document) as ProcedureDocument);
       // Two drafts of one procedure at once would both take the same number.
-      await manager.query('SELECT pg_advisory_xact_lock(hashtextextended($1, 0))', [`procedure/${draft.procedureId}`]);
+      await lockProcedure(manager, draft.procedureId);
       const version = await this.nextVersion(manager, draft);
       const published = {
         procedureId: draft.procedureId,
@@ -118,24 +124,35 @@ export class ProceduresService {
     });
   }
 
-  private async nextVersion(manager: EntityManager, draft: ProcedureDraft): Promise<number> {
-    const latest = await manager.findOne(ProcedureVersion, {
-      where: { procedureId: draft.procedureId },
-      order: { version: 'DESC' },
-    });
-    if (latest === null) return 1;
-    const isWithdrawn = await manager.existsBy(ProcedureWithdrawal, {
-      procedureId: latest.procedureId,
-      version: latest.version,
-    });
-    if (latest.contentHash === draft.contentHash && !isWithdrawn) {
-      throw new Conflict(`Version ${latest.version} says exactly the same.`);
+  private async nextVersion(manager: EntityManager, { procedureId }: ProcedureDraft): Promise<number> {
+    return 1 + ((await manager.maximum(ProcedureVersion, 'version', { procedureId })) ?? 0);
+  }
+
+  private async refuseTheSame(
+    manager: EntityManager,
+    { procedureId, contentHash }: Pick<ProcedureDraft, 'procedureId' | 'contentHash'>,
+  ): Promise<void> {
+    const [standing] = await manager.query<{ version: number; content_hash: string }[]>(
+      `SELECT version, content_hash FROM procedure_version v WHERE procedure_id = $1
+       AND NOT EXISTS (SELECT FROM procedure_withdrawal w WHERE (w.procedure_id, w.version) = (v.procedure_id, v.version))
+       ORDER BY version DESC LIMIT 1`,
+      [procedureId],
+    );
+    if (standing?.content_hash === contentHash) {
+      throw new Conflict(`Version ${standing.version} says exactly the same: nothing was changed.`);
     }
-    return latest.version + 1;
+    if (await manager.existsBy(ProcedureDraft, { procedureId, contentHash, publishedVersion: IsNull() })) {
+      throw new Conflict('The draft that waits says exactly the same: nothing was changed.');
+    }
   }
 
   private async nameOf(manager: EntityManager, { personId, displayName }: Principal): Promise<string> {
     const person = await manager.findOneBy(Person, { id: personId });
     return person?.displayName ?? displayName;
   }
+}
+
+/** Until the transaction ends nobody else brings in or publishes a draft of this procedure. */
+async function lockProcedure(manager: EntityManager, procedureId: string): Promise<void> {
+  await manager.query('SELECT pg_advisory_xact_lock(hashtextextended($1, 0))', [`procedure/${procedureId}`]);
 }

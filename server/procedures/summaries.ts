@@ -10,7 +10,9 @@ interface VersionRow {
   content_hash: string;
   published_at: Date;
   published_by: string;
-  is_withdrawn: boolean;
+  reason: string | null;
+  withdrawn_by: string | null;
+  withdrawn_at: Date | null;
 }
 
 interface DraftRow {
@@ -18,6 +20,7 @@ interface DraftRow {
   procedure_id: string;
   title: string;
   document: string;
+  content_hash: string;
   imported_at: Date;
   imported_by: string;
 }
@@ -26,13 +29,14 @@ interface DraftRow {
 export async function summariesOf(manager: EntityManager): Promise<readonly ProcedureSummary[]> {
   const versions = await manager.query<VersionRow[]>(
     `SELECT v.procedure_id, v.version, v.title, v.content_hash, v.published_at, p.display_name AS published_by,
-       EXISTS (SELECT FROM procedure_withdrawal w WHERE (w.procedure_id, w.version) = (v.procedure_id, v.version))
-         AS is_withdrawn
+       w.reason, w.withdrawn_at, wp.display_name AS withdrawn_by
      FROM procedure_version v JOIN person p ON p.id = v.published_by
+     LEFT JOIN procedure_withdrawal w ON (w.procedure_id, w.version) = (v.procedure_id, v.version)
+     LEFT JOIN person wp ON wp.id = w.withdrawn_by
      ORDER BY v.procedure_id, v.version DESC`,
   );
   const drafts = await manager.query<DraftRow[]>(
-    `SELECT d.id, d.procedure_id, d.title, d.document, d.imported_at, p.display_name AS imported_by
+    `SELECT d.id, d.procedure_id, d.title, d.document, d.content_hash, d.imported_at, p.display_name AS imported_by
      FROM procedure_draft d JOIN person p ON p.id = d.imported_by
      WHERE d.published_version IS NULL ORDER BY d.imported_at`,
   );
@@ -42,7 +46,7 @@ export async function summariesOf(manager: EntityManager): Promise<readonly Proc
     const draft = drafts.findLast((row) => row.procedure_id === id);
     return {
       id,
-      title: own[0]?.title ?? draft?.title ?? id,
+      title: (own.find((row) => row.reason === null) ?? draft ?? own[0])?.title ?? id,
       versions: own.map(versionSummary),
       ...(draft === undefined ? {} : { draft: draftSummary(draft) }),
     };
@@ -52,10 +56,13 @@ export async function summariesOf(manager: EntityManager): Promise<readonly Proc
 function versionSummary(row: VersionRow): VersionSummary {
   return {
     version: row.version,
-    status: row.is_withdrawn ? 'withdrawn' : 'published',
+    status: row.reason === null ? 'published' : 'withdrawn',
     publishedAt: row.published_at.toISOString(),
     publishedBy: row.published_by,
     contentHash: row.content_hash,
+    ...(row.reason === null || row.withdrawn_at === null
+      ? {}
+      : { withdrawal: { reason: row.reason, by: row.withdrawn_by ?? '', at: row.withdrawn_at.toISOString() } }),
   };
 }
 
@@ -64,6 +71,7 @@ function draftSummary(row: DraftRow): NonNullable<ProcedureSummary['draft']> {
   return {
     id: row.id,
     title: row.title,
+    contentHash: row.content_hash,
     importedAt: row.imported_at.toISOString(),
     importedBy: row.imported_by,
     problems,

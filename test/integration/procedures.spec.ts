@@ -63,6 +63,7 @@ it('gives the lead a draft to read, until it is published', async () => {
   expect((await read()).json).toEqual({
     id: json.id,
     title: smallProcedure.title,
+    contentHash: contentHash(smallProcedure),
     procedureId: 'small-check',
     importedAt: server.now.toISOString(),
     importedBy: 'R. Adeyemi',
@@ -73,15 +74,47 @@ it('gives the lead a draft to read, until it is published', async () => {
   expect((await read()).status).toBe(404);
 });
 
-it('does not publish the very same once more, unless it was withdrawn', async () => {
+it('changes nothing for a document that says the same as the version that stands, until it is withdrawn', async () => {
   await publishSmallProcedure(server);
-  const same = await importDraft(smallProcedure);
-  expect(await publish(same.json.id)).toMatchObject({
+  const before = await summary();
+  expect(await importDraft(smallProcedure)).toMatchObject({
     status: 409,
-    json: { detail: 'Version 1 says exactly the same.' },
+    json: { detail: 'Version 1 says exactly the same: nothing was changed.' },
   });
+  expect(await summary()).toEqual(before);
   expect((await withdraw(1)).status).toBe(201);
-  expect((await publish(same.json.id)).json).toMatchObject({ version: 2 });
+  const again = await importDraft(smallProcedure);
+  expect((await publish(again.json.id)).json).toMatchObject({ version: 2 });
+});
+
+it('takes an earlier version back as a draft: what stands is another', async () => {
+  await publishSmallProcedure(server);
+  await publish((await importDraft({ ...smallProcedure, title: 'Another' })).json.id);
+  expect((await publish((await importDraft(smallProcedure)).json.id)).json).toMatchObject({ version: 3 });
+});
+
+it('changes nothing for a document that says the same as the draft that waits, however its fields are ordered', async () => {
+  const { json } = await importDraft(smallProcedure);
+  const turned = Object.fromEntries(Object.entries(smallProcedure).reverse());
+  expect(await importDraft(turned)).toMatchObject({
+    status: 409,
+    json: { detail: 'The draft that waits says exactly the same: nothing was changed.' },
+  });
+  expect(await summary()).toMatchObject({ draft: { id: json.id, contentHash: contentHash(smallProcedure) } });
+});
+
+it('heads a procedure by the newest published version, else by the draft, else by the newest withdrawn one', async () => {
+  const title = async () => (await summary()).title;
+  await publishSmallProcedure(server);
+  await publish((await importDraft({ ...smallProcedure, title: 'Second' })).json.id);
+  await importDraft({ ...smallProcedure, title: 'Draft' });
+  expect(await title()).toBe('Second');
+  await withdraw(2);
+  expect(await title()).toBe(smallProcedure.title);
+  await withdraw(1);
+  expect(await title()).toBe('Draft');
+  await server.database.query('DELETE FROM procedure_draft WHERE published_version IS NULL');
+  expect(await title()).toBe('Second');
 });
 
 it('puts a new draft in the place of the one that waits', async () => {
@@ -105,7 +138,8 @@ it('withdraws a version once, with a reason', async () => {
   expect((await withdraw(2)).status).toBe(404);
   expect((await withdraw(1)).status).toBe(201);
   expect((await withdraw(1)).status).toBe(409);
-  expect(await summary()).toMatchObject({ versions: [{ version: 1, status: 'withdrawn' }] });
+  const withdrawal = { reason: 'A band was wrong.', by: 'R. Adeyemi', at: server.now.toISOString() };
+  expect(await summary()).toMatchObject({ versions: [{ version: 1, status: 'withdrawn', withdrawal }] });
 });
 
 it('refuses a document that can not run, naming step and place, and keeps nothing', async () => {

@@ -2,6 +2,7 @@ import 'fake-indexeddb/auto';
 import type { HttpTestingController } from '@angular/common/http/testing';
 import { TestBed, type ComponentFixture } from '@angular/core/testing';
 import { provideRouter } from '@angular/router';
+import { contentHash } from '../../../procedures/engine';
 import { crankcaseValveSeal } from '../../../procedures/library';
 import { OfflineStore } from '../core/offline-store';
 import { asked, closeStores, coreForSpecs, startOfDay } from '../core/testing/core-for-specs';
@@ -21,6 +22,7 @@ const version = (number: number, status: 'published' | 'withdrawn') => ({
 });
 const draft = {
   id: 'draft-1',
+  contentHash: 'ff'.repeat(32),
   title: 'Crankcase valve seal, better',
   importedAt: new Date(startOfDay).toISOString(),
   importedBy: 'R. Adeyemi',
@@ -75,6 +77,58 @@ describe('the Method desk', () => {
     expect(rows[1]).not.toContain(hash);
     expect(rows[2]).toMatch(/^3\s*withdrawn/);
     expect(allByRole(root(), 'button', 'Withdraw')).toHaveLength(1);
+  });
+
+  it('gives the reason for which a version was withdrawn, by whom and when', async () => {
+    const at = new Date(startOfDay).toISOString();
+    const withdrawal = { reason: 'The band was too wide.', by: 'R. Adeyemi', at };
+    await showList([{ ...listed, versions: [version(4, 'published'), { ...version(3, 'withdrawn'), withdrawal }] }]);
+    const rows = allByRole(root(), 'row').slice(1).map(textOf);
+    expect(rows[2]).toMatch(/^3\s*withdrawn\s*The band was too wide\..*withdrawn today \d+:\d+, R\. Adeyemi/);
+    expect(rows[1]).not.toContain('too wide');
+  });
+
+  it.each([
+    [{ ...listed }, undefined],
+    [{ ...listed, versions: [version(3, 'withdrawn')] }, 'only a draft'],
+    [{ ...listed, versions: [version(3, 'withdrawn')], draft: null }, 'withdrawn: no new run starts'],
+  ])("marks a title that is not a published version's", async (procedure, mark) => {
+    await showList([procedure]);
+    expect(root().querySelector('bay-procedure-versions header .chip')?.textContent?.trim()).toBe(mark);
+  });
+
+  it.each<[string, object, string]>([
+    [
+      'version',
+      { versions: [{ ...version(4, 'published'), contentHash: contentHash(crankcaseValveSeal) }] },
+      'Version 4',
+    ],
+    ['draft', { draft: { ...draft, contentHash: contentHash(crankcaseValveSeal) } }, 'The draft that waits'],
+  ])('says that nothing changed for a file that is the standing %s, and sends nothing', async (_what, change, what) => {
+    await showList([{ ...listed, ...change }]);
+    await choose(fileText(crankcaseValveSeal));
+    expect(allByRole(root(), 'dialog')).toEqual([]);
+    server.expectNone('/api/procedures/drafts');
+    const says = `${what} says exactly what seal.json says: nothing was changed.`;
+    expect(textOf(byRole(root(), 'status', says))).toBe(says);
+  });
+
+  it('takes a file that is a withdrawn version', async () => {
+    const versions = [{ ...version(4, 'withdrawn'), contentHash: contentHash(crankcaseValveSeal) }];
+    await showList([{ ...listed, versions, draft: null }]);
+    await choose(fileText(crankcaseValveSeal));
+    await answer('POST', '/api/procedures/drafts', { id: 'd', procedureId: id, problems: [] }, 201);
+    await showList();
+  });
+
+  it('says so when the same was brought in elsewhere meanwhile', async () => {
+    await showList([]);
+    await choose(fileText(crankcaseValveSeal));
+    const detail = 'The draft that waits says exactly the same: nothing was changed.';
+    await answer('POST', '/api/procedures/drafts', { title: 'Conflict', detail }, 409);
+    await showList();
+    expect(textOf(byRole(root(), 'status', detail))).toBe(detail);
+    expect(alerts()).toBe('');
   });
 
   it('brings a file in as a draft', async () => {

@@ -36,6 +36,8 @@ export class MethodDeskPage {
   }
 
   protected async bringIn({ fileName, text }: ChosenFile): Promise<void> {
+    const same = this.store.sameAs(text);
+    if (same !== undefined) return this.store.leaveAsItIs(fileName, same);
     const waiting = this.store.draftInPlaceOf(text);
     if (waiting === undefined || (await this.mayReplace(waiting, fileName))) {
       return this.store.bringIn(fileName, text);

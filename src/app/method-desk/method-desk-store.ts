@@ -1,4 +1,6 @@
 import { computed, inject, Injectable, signal } from '@angular/core';
+import type { ProcedureDocument } from '../../../procedures/document';
+import { contentHash } from '../../../procedures/engine';
 import { ApiProblem } from '../core/api-problem';
 import { Sync } from '../core/sync';
 import { problemsOf } from './import-problems';
@@ -53,12 +55,32 @@ export class MethodDeskStore {
         problems = (await this.shelf.importDraft(read.document)).problems.length;
       } catch (error) {
         if (!(error instanceof ApiProblem)) throw error;
+        // Someone else brought in or published the same meanwhile.
+        if (error.status === 409) return this.sayTheSame(error.message);
         return this.keep(refusedImport({ fileName, text }, read.document, error));
       }
       await this.putAway();
       this.said.set({ tone: 'done', text: `${fileName} is a draft now. ${publishingWords(problems)}` });
       this.list.reload();
     });
+  }
+
+  /** What stands already and says exactly what a file says, in words; by the list as it was last fetched. */
+  sameAs(text: string): string | undefined {
+    const read = readProcedureFile(text);
+    if (!read.ok || !('id' in read.document)) return undefined;
+    const { id } = read.document;
+    const listed = this.procedures()?.find((procedure) => procedure.id === id);
+    const hash = hashOf(read.document);
+    const standing = listed?.versions.find(({ status }) => status === 'published');
+    if (standing !== undefined && standing.contentHash === hash) return `Version ${standing.version}`;
+    return listed?.draft != null && listed.draft.contentHash === hash ? 'The draft that waits' : undefined;
+  }
+
+  /** Lets a file go that says what stands already. */
+  async leaveAsItIs(fileName: string, same: string): Promise<void> {
+    await this.putAway();
+    this.said.set({ tone: 'done', text: `${same} says exactly what ${fileName} says: nothing was changed.` });
   }
 
   /** The draft whose place a file would take, by the list as it was last fetched. */
@@ -96,6 +118,12 @@ export class MethodDeskStore {
     this.said.set(notice);
   }
 
+  private async sayTheSame(text: string): Promise<void> {
+    await this.putAway();
+    this.said.set({ tone: 'done', text });
+    this.list.reload();
+  }
+
   private async change(act: () => Promise<string>): Promise<void> {
     await this.during(async () => {
       try {
@@ -120,6 +148,16 @@ export class MethodDeskStore {
     this.working.set(true);
     this.said.set(undefined);
     await work().finally(() => this.working.set(false));
+  }
+}
+
+/** Undefined for what has no canonical form, as a lone half of a surrogate pair: the server says what is wrong with it. */
+function hashOf(document: object): string | undefined {
+  try {
+    return contentHash(document as ProcedureDocument);
+  } catch (error) {
+    if (error instanceof Error) return undefined;
+    throw error;
   }
 }
 

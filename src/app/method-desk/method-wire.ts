@@ -9,10 +9,14 @@ export interface VersionSummary {
   readonly publishedBy: string;
   /** SHA-256 of the document's canonical JSON, hexadecimal. */
   readonly contentHash: string;
+  /** Why it starts no new run; of a withdrawn version alone. */
+  readonly withdrawal?: { readonly reason: string; readonly by: string; readonly at: string };
 }
 
 export interface DraftSummary {
   readonly id: string;
+  /** SHA-256 of the document's canonical JSON, hexadecimal. */
+  readonly contentHash: string;
   /** The document's own, which may be another than that of the versions. */
   readonly title: string;
   /** ISO 8601. */
@@ -25,6 +29,7 @@ export interface DraftSummary {
 /** A procedure with all its versions, newest first, and the draft that waits. */
 export interface ProcedureSummary {
   readonly id: string;
+  /** Of the newest published version, else of the draft, else of the newest withdrawn one. */
   readonly title: string;
   readonly versions: readonly VersionSummary[];
   readonly draft?: DraftSummary | null;

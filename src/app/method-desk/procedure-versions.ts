@@ -26,6 +26,12 @@ export class ProcedureVersions {
     if (draft == null) return undefined;
     return { summary: draft, problems: draft.problems.length, when: this.said(draft.importedAt) };
   });
+  /** What the title is of, where it is not a published version's. */
+  protected readonly headedBy = computed(() => {
+    const { versions, draft } = this.procedure();
+    if (versions.some(({ status }) => status === 'published')) return undefined;
+    return draft == null ? 'withdrawn' : 'draft';
+  });
   protected readonly nextVersion = computed(
     () => this.procedure().versions.reduce((highest, { version }) => Math.max(highest, version), 0) + 1,
   );
@@ -34,6 +40,10 @@ export class ProcedureVersions {
     return this.procedure().versions.map((entry) => ({
       ...entry,
       when: this.said(entry.publishedAt),
+      withdrawn: entry.withdrawal && {
+        reason: entry.withdrawal.reason,
+        when: `withdrawn ${this.said(entry.withdrawal.at)}, ${entry.withdrawal.by}`,
+      },
       shortHash: entry.contentHash.slice(0, 10),
       isInUse: entry.version === newest,
     }));
