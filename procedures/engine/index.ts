@@ -19,6 +19,8 @@ export { newCodesAgainst } from './compare-codes';
 export { cautionCount } from './cautions';
 export { decide } from './decide';
 export { coarseness, isOverdue } from './decide-gear';
+export { previewDecision, type DecisionPreview } from './deciding';
+export { evidenceOf, type Evidence, type FindingEvidence } from './evidence';
 export { parseDecimal, tidyDecimal } from './figures';
 export { samplesOf, suggestMark, type MarkSuggestion } from './listening';
 export { openRun, type OpeningFacts } from './open-run';

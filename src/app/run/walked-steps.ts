@@ -1,5 +1,5 @@
 import type { Step } from '../../../procedures/document';
-import type { NamedValue, RunState, WalkedStep } from '../../../procedures/engine';
+import { resultsOf, type NamedValue, type RunState, type WalkedStep } from '../../../procedures/engine';
 import type { ShownResult } from '../shared/result-words';
 import type { RunView } from './run-view';
 
@@ -35,10 +35,19 @@ export function valuesOf(state: Pick<RunState, 'values'>, stepId: string): reado
   return Object.values(state.values).filter(({ step }) => step === stepId);
 }
 
-/** The value that was recorded last in the whole run. */
-export function latestValue(state: Pick<RunState, 'values'>): NamedValue | undefined {
-  return Object.values(state.values).reduce<NamedValue | undefined>(
-    (latest, value) => (latest === undefined || value.seq >= latest.seq ? value : latest),
-    undefined,
-  );
+/**
+ * The value that was recorded last in the whole run. What a step only works out on the way, with no band, is left out;
+ * of a ramp the first thing counts that it was to find.
+ */
+export function latestValue({ procedure, state }: Pick<RunView, 'procedure' | 'state'>): NamedValue | undefined {
+  const read = Object.values(state.values)
+    .filter(({ name, step: id }) => {
+      const step = procedure.step(id);
+      const result = step === undefined ? undefined : resultsOf(step).find((candidate) => candidate.name === name);
+      return result === undefined || result.band !== undefined;
+    })
+    .sort((a, b) => a.seq - b.seq);
+  const latest = read.at(-1);
+  if (latest === undefined || procedure.step(latest.step)?.kind !== 'listen') return latest;
+  return read.find(({ step }) => step === latest.step);
 }

@@ -78,7 +78,7 @@ import { latestValue } from '../walked-steps';
 export class LastReading {
   readonly run = input.required<RunView>();
 
-  protected readonly last = computed(() => latestValue(this.run().state));
+  protected readonly last = computed(() => latestValue(this.run()));
   protected readonly number = computed(() => {
     const step = this.last()?.step;
     return step === undefined ? '' : (this.run().procedure.step(step)?.number ?? step);

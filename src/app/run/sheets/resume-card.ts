@@ -55,7 +55,7 @@ export class ResumeCard {
   });
   /** The value that was recorded last, where the step done last gave none. */
   protected readonly lastValue = computed(() => {
-    const value = (this.last()?.said.values.length ?? 0) > 0 ? undefined : latestValue(this.state());
+    const value = (this.last()?.said.values.length ?? 0) > 0 ? undefined : latestValue(this.run());
     return value === undefined
       ? undefined
       : { value, number: this.run().procedure.step(value.step)?.number ?? value.step };

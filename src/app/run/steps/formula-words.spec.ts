@@ -11,7 +11,7 @@ describe('formulaParts', () => {
   });
 
   it('leaves a name without a number where it was never measured', () => {
-    const parts = formulaParts({ procedure: valveSeal, state: walkedTo('key-on').state }, 'highestGauge - sealHigh');
+    const parts = formulaParts({ procedure: valveSeal, state: walkedTo('key-on').state }, 'highestGauge < sealHigh');
     expect(parts).toMatchObject([
       { name: 'highestGauge', value: undefined },
       {},

@@ -1,5 +1,5 @@
 import { compileProcedure, type CompiledProcedure, type Step } from '../../../../procedures/document';
-import type { InstrumentSnapshot, RunCommand, RunHeader } from '../../../../procedures/engine';
+import type { InstrumentSnapshot, RunCommand, RunHeader, Series } from '../../../../procedures/engine';
 import { RunWalk } from '../../../../procedures/engine/testing/run-walk';
 import { crankcaseValveSeal } from '../../../../procedures/library';
 import type { StepOf } from '../step-entry';
@@ -77,4 +77,41 @@ export function stepOf<K extends Step['kind']>(walk: RunWalk, kind: K): StepOf<K
   const step = currentStep(walk);
   if (step.kind !== kind) throw new Error(`the walk stands at a step of kind ${step.kind}`);
   return step as StepOf<K>;
+}
+
+/** A ramp of the gauge alone, 0.2 kPa a second from rest, a sample a second. */
+export function rampTo(gaugeKpa: number): Series {
+  const values = Array.from({ length: Math.round(gaugeKpa / 0.2) + 6 }, (_, s) => Math.max(0, (s - 5) * 0.2));
+  return { timeS: values.map((_, s) => s), channels: [{ name: 'gauge', unit: 'kPa', values }] };
+}
+
+/** A cold half after its ramp, with the noise heard between these pressures; at step 11b. */
+export function listenedTo(gaugeKpa: number, heard: { begins?: number; stops?: number } = {}): RunWalk {
+  const series = rampTo(gaugeKpa);
+  const at = (kpa: number): number => 5 + kpa / 0.2;
+  const marks = (['begins', 'stops'] as const).flatMap((name): RunCommand[] => {
+    const kpa = heard[name];
+    return kpa === undefined ? [] : [{ do: 'mark', mark: `noise-${name}`, timeS: at(kpa), by: 'tap' }];
+  });
+  const record = {
+    bytes: 1,
+    samples: series.timeS.length,
+    durationS: series.timeS.at(-1) ?? 0,
+    sha256: '0'.repeat(64),
+  };
+  return walkedTo('raise-and-listen').do(
+    {
+      do: 'import-series',
+      series,
+      record: {
+        ...record,
+        channels: [{ name: 'gauge', unit: 'kPa', column: 'gauge' }],
+        source: 'file',
+        skipped: 0,
+        problems: [],
+      },
+    },
+    ...marks,
+    { do: 'finish-listening', series },
+  );
 }
