@@ -1,12 +1,23 @@
 import { TestBed } from '@angular/core/testing';
 import type { RunCommand } from '../../../../procedures/engine';
 import type { RunWalk } from '../../../../procedures/engine/testing/run-walk';
-import { viewOf, walkedTo } from '../testing/run-for-specs';
+import { listenedTo, viewOf, walkedTo } from '../testing/run-for-specs';
 import { buttonNamed, elementOf, hasButton, textOf } from '../testing/shown-page';
 import { FindingEntry } from './finding-entry';
 
 /** A cold half that ends as not completed, before anything was opened. */
 const ended = (): RunWalk => walkedTo('cold-enough').do({ do: 'cannot-measure', reason: 'the thermometer fails' });
+
+/** Goes on from where the test was ended: what is apart goes back, the rest is confirmed. */
+function endStep(walk: RunWalk): void {
+  const step = walk.procedure.step(walk.state.current?.id ?? '')!;
+  walk.cautions(step.cautions?.length ?? 0);
+  if (step.kind === 'wait') walk.do({ do: 'record', name: 'gaugeLeft', text: '0.0', unit: 'kPa' });
+  else if (step.kind === 'codes') walk.do({ do: 'record-codes', codes: [] });
+  else if (step.kind === 'restore')
+    walk.do(...walk.state.disturbed.map(({ item }): RunCommand => ({ do: 'restore', item })));
+  else walk.do({ do: 'confirm' });
+}
 
 async function shown(walk: RunWalk) {
   const fixture = TestBed.createComponent(FindingEntry);
@@ -44,6 +55,31 @@ describe('FindingEntry', () => {
     expect(elementOf(fixture).querySelector('h1')?.textContent).toContain('Not completed');
     expect(partNamed(fixture, 'Concern').textContent).toContain('composed from the record');
     expect(partNamed(fixture, 'Concern').textContent).toContain('Whistle at idle');
+  });
+
+  it('shows what led to it, and folds the readings that did not', async () => {
+    const walk = listenedTo(8, { begins: 0.4 });
+    walk.do(
+      { do: 'confirm' },
+      { do: 'acknowledge-caution', caution: 0 },
+      { do: 'cannot-measure', reason: 'it is dark' },
+    );
+    while (walk.state.finding === undefined) endStep(walk);
+    const { fixture } = await shown(walk);
+    const wide = elementOf(fixture).querySelector('bay-sheet-wide')!;
+    expect(
+      [...wide.querySelectorAll('.seen')].map((seen) =>
+        [...seen.children].map(({ textContent }) => textContent).join(': '),
+      ),
+    ).toEqual([
+      'Step 13, where the air comes out: cannot be measured: it is dark',
+      'Noise at the probe: heard, and it never stopped',
+    ]);
+    const folded = wide.querySelector('details')!;
+    expect(folded.open).toBe(false);
+    expect(folded.querySelector('summary')?.textContent).toBe('3 more readings');
+    const labels = [...wide.querySelectorAll('bay-judged-line .label')].map((label) => label.textContent);
+    expect(labels).toEqual(['Highest pressure reached', 'Manifold minus boost', 'Boost pressure', 'Manifold pressure']);
   });
 
   it('tells what was edited from what was composed, and keeps both apart in the record', async () => {

@@ -1,6 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, input, output, signal } from '@angular/core';
-import { renderTemplate } from '../../../../procedures/engine';
+import { evidenceOf, renderTemplate } from '../../../../procedures/engine';
 import { ResultMark } from '../../shared/result-mark';
+import { resultWords } from '../../shared/result-words';
 import { BigAction } from '../frame/big-action';
 import { unbroken } from '../../shared/unbroken';
 import { HandSide } from '../frame/hand-side';
@@ -40,12 +41,18 @@ export class FindingEntry extends StepEntry<'finding'> {
     const { procedure, state } = this.run();
     return unbroken(renderTemplate(procedure, state, this.step().verdict) ?? this.step().title);
   });
-  /** The judged numbers, and those that have no band, in the order in which they were measured. */
-  protected readonly values = computed(() =>
-    Object.values(this.run().state.values)
-      .filter(({ judgement }) => judgement !== undefined)
-      .sort((a, b) => a.seq - b.seq),
-  );
+  /** What led to the finding, and what else was judged. */
+  protected readonly evidence = computed(() => {
+    const { procedure, state, events } = this.run();
+    return evidenceOf(procedure, state, events);
+  });
+  /** `6 more readings, 1 of them out of band`: what is folded away does not hide that something is off. */
+  protected readonly restWords = computed(() => {
+    const { rest } = this.evidence();
+    const off = rest.filter(({ judgement }) => judgement?.result === 'out').length;
+    const all = `${rest.length} more ${rest.length === 1 ? 'reading' : 'readings'}`;
+    return off === 0 ? all : `${all}, ${off} of them ${resultWords.out}`;
+  });
   protected readonly parts = computed(() => draftOf(this.run(), this.edits()));
   protected readonly edited = computed(() => this.parts().find(({ name }) => name === this.editing()));
   protected readonly isKept = computed(() => isKept(this.run(), this.parts()));

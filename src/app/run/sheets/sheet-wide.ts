@@ -15,18 +15,19 @@ import { ChangeDetectionStrategy, Component } from '@angular/core';
       display: flex;
       flex-direction: column;
       gap: 14px;
-      padding: 16px 20px 0 24px;
+      padding: 16px 20px 24px 24px;
       background: var(--paper);
       overflow: auto;
       overscroll-behavior: contain;
     }
     @media (max-width: 640px) {
       :host {
-        padding: 8px 12px 4px;
+        padding: 8px 12px 20px;
         gap: 8px;
       }
     }
   `,
+  host: { class: 'scrolls' },
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class SheetWide {}
