@@ -29,11 +29,20 @@ export interface PlotRequest {
   readonly colours: PlotColours;
 }
 
-const font = '500 14px Inter, sans-serif';
-const markFont = '700 15px Inter, sans-serif';
-const columnPx = 74;
 const gapPx = 6;
-const sameColumn = { size: 0, gap: gapPx - columnPx };
+/** Sizes of the drawing: with room, and on a phone where it is low. */
+const roomySizes = {
+  fontPx: 14,
+  markPx: 15,
+  columnPx: 74,
+  timePx: 34,
+  padding: [26, 8, 0, 14],
+  rowPx: 20,
+  spacePx: 30,
+};
+const lowSizes = { fontPx: 12, markPx: 13, columnPx: 58, timePx: 20, padding: [8, 6, 0, 8], rowPx: 15, spacePx: 18 };
+/** Below this height it is drawn as a low one. */
+const lowPx = 180;
 /** The sound's share of the height, at the bottom. */
 const soundShare = 0.32;
 const dashes: readonly (readonly number[])[] = [[], [10, 6], [3, 4]];
@@ -55,11 +64,14 @@ export function plotOptions(request: PlotRequest): uPlot.Options {
   const pressureFloor = hasSound && hasPressure ? soundShare + 0.06 : 0;
   const soundCeiling = hasPressure ? soundShare : 1;
   let pressureIndex = 0;
+  const sizes = sizesFor(height);
+  const font = `500 ${sizes.fontPx}px Inter, sans-serif`;
+  const sameColumn = { size: 0, gap: gapPx - sizes.columnPx };
   const axis = { stroke: colours.ink2, font, grid: { stroke: colours.rule, width: 1 }, ticks: { show: false } };
   return {
     width,
     height,
-    padding: [26, 8, 0, 14],
+    padding: [...sizes.padding] as uPlot.Padding,
     legend: { show: false },
     cursor: { show: false },
     scales: {
@@ -71,13 +83,13 @@ export function plotOptions(request: PlotRequest): uPlot.Options {
       {
         ...axis,
         grid: { show: false },
-        size: 34,
+        size: sizes.timePx,
         values: (_plot, ticks) => ticks.map((tick, i) => (i === 0 ? `${tick} s` : String(tick))),
       },
-      ...(hasPressure ? [sideAxis(axis, 'pressure', pressureUnit, extent(series, false))] : []),
+      ...(hasPressure ? [sideAxis(axis, 'pressure', pressureUnit, extent(series, false), sizes)] : []),
       ...(hasSound
         ? // Its figures stand in the pressures' column, lower down: it takes no room of its own.
-          [{ ...sideAxis(axis, 'sound', 'dB', extent(series, true)), ...(hasPressure ? sameColumn : {}) }]
+          [{ ...sideAxis(axis, 'sound', 'dB', extent(series, true), sizes), ...(hasPressure ? sameColumn : {}) }]
         : []),
     ],
     series: [
@@ -101,6 +113,8 @@ export function plotOptions(request: PlotRequest): uPlot.Options {
     },
   };
 }
+
+const sizesFor = (height: number): typeof roomySizes => (height < lowPx ? lowSizes : roomySizes);
 
 /** The scale for which the data `low` to `high` fills the shares `from` to `to` of the height. */
 function stretched(low: number | null, high: number | null, from: number, to: number): [number, number] {
@@ -130,6 +144,7 @@ function sideAxis(
   scale: string,
   unit: string,
   [low, high]: readonly [number, number],
+  { columnPx, spacePx }: typeof roomySizes,
 ): uPlot.Axis {
   const step = (high - low) / 20;
   // Ticks in the other scale's part of the height would say nothing.
@@ -142,7 +157,7 @@ function sideAxis(
     side: 1,
     size: columnPx,
     gap: gapPx,
-    space: 30,
+    space: spacePx,
     filter: inPart,
     values: (_plot, ticks) => {
       const last = ticks.findLastIndex((tick) => tick !== null);
@@ -166,12 +181,13 @@ function drawStrip(plot: uPlot, { strip, colours }: PlotRequest): void {
 }
 
 /** Marks are lines across both parts; each label takes the side with more room, one row lower than the one before. */
-function drawMarks(plot: uPlot, { marks, colours }: PlotRequest): void {
+function drawMarks(plot: uPlot, { marks, colours, height }: PlotRequest): void {
+  const { markPx, rowPx } = sizesFor(height);
   const { ctx, bbox } = plot;
   const ratio = devicePixelRatio;
   ctx.save();
   ctx.strokeStyle = colours.live;
-  ctx.font = markFont.replace('15px', `${15 * ratio}px`);
+  ctx.font = `700 ${markPx * ratio}px Inter, sans-serif`;
   ctx.textBaseline = 'bottom';
   [...marks]
     .sort((a, b) => a.timeS - b.timeS)
@@ -186,7 +202,7 @@ function drawMarks(plot: uPlot, { marks, colours }: PlotRequest): void {
       ctx.setLineDash([]);
       const isLeft = x > bbox.left + bbox.width / 2;
       const room = ctx.measureText(mark.label).width;
-      const y = bbox.top + (index % 3) * 20 * ratio + 22 * ratio;
+      const y = bbox.top + ((index % 3) * rowPx + rowPx + 2) * ratio;
       const wished = isLeft ? x - 8 * ratio - room : x + 8 * ratio;
       const labelX = Math.max(bbox.left, Math.min(bbox.left + bbox.width - room, wished));
       ctx.lineWidth = 5 * ratio;

@@ -40,7 +40,7 @@ export interface PlotStrip {
     :host {
       display: block;
       position: relative;
-      min-height: 200px;
+      min-height: 72px;
       min-width: 0;
       overflow: hidden;
     }
@@ -96,7 +96,7 @@ export class RampPlot {
       strip: this.strip(),
       names: this.names(),
       width,
-      height: Math.max(height, 200),
+      height: Math.max(height, 72),
       colours: coloursOf(element),
     });
     if (!Plot) return;

@@ -17,7 +17,7 @@ import { AirPath } from '../../shared/air-path';
     :host {
       display: flex;
       flex: 1 1 0 !important;
-      min-height: 96px;
+      min-height: 146px;
       border: var(--rule-width) solid var(--rule);
       border-radius: var(--r);
       background: var(--sheet);

@@ -33,6 +33,10 @@ export class WideSide {
   protected readonly isCompact = computed(
     () => this.isUnderWay() || (this.cautions().length > 1 && cautionToRead(this.run(), this.step()) === undefined),
   );
+  /** Whether why and the picture may stand side by side, where the side is wide and low. */
+  protected readonly isPictured = computed(
+    () => this.why() !== undefined && this.step().picture !== undefined && this.step().kind !== 'compute',
+  );
   protected readonly why = computed(() => {
     const { why } = this.step();
     if (why === undefined || this.isUnderWay()) return undefined;
