@@ -9,6 +9,7 @@ import { lateCautions } from './lint/caution-place';
 import { cautionsWithWork, notesWithImperatives } from './lint/caution-work';
 import { piledUpCautions } from './lint/cautions';
 import { mixedConnectives } from './lint/conditions';
+import { exitFindings } from './lint/exits';
 import { bandsBeyondLimits } from './lint/limit-and-band';
 import type { LintFinding, LintSubject } from './lint/lint-finding';
 import { doubleActions } from './lint/one-action';
@@ -78,9 +79,10 @@ export function lintProcedure(document: ProcedureDocument, options: LintOptions 
   }
   const trees = treesOf(document);
   const subject: LintSubject = { document, trees, graphs: runGraphs(document, trees), ...options };
+  const exits = exitFindings(subject);
   return {
-    errors: [...expressionFindings(document), ...errorRules.flatMap((rule) => rule(subject))],
-    warnings: warningRules.flatMap((rule) => rule(subject)),
+    errors: [...expressionFindings(document), ...errorRules.flatMap((rule) => rule(subject)), ...exits.errors],
+    warnings: [...warningRules.flatMap((rule) => rule(subject)), ...exits.warnings],
     waysToFindings: waysToFindings(subject),
   };
 }

@@ -1,0 +1,60 @@
+import type { Expression } from '../../expression/expression';
+import { factsOf, type Beforehand, type Fact } from './decision-facts';
+import { findCase, type Search } from './find-case';
+import { isFoundByLot } from './try-cases';
+
+/** Whether a branch can be the first that holds; `unlikely` where neither a case nor a proof was found. */
+export type Taken = 'can-be' | 'never' | 'unlikely';
+
+/** An ordered list of conditions, asked about all cases that there can be. */
+export class DecisionCases {
+  constructor(
+    private readonly conditions: readonly Expression[],
+    private readonly beforehand: Beforehand,
+  ) {}
+
+  /** Whether a run can take the branch, as far as its own condition and those before it tell. */
+  taken(index: number): Taken {
+    return this.takenAfter(index, this.conditions.slice(0, index));
+  }
+
+  /** Why a branch is never taken: nothing makes it hold, one earlier branch takes all that it would, or several do. */
+  whyNever(index: number): 'never-holds' | { readonly behind: number } | 'behind-several' {
+    if (this.takenAfter(index, []) === 'never') return 'never-holds';
+    const behind = this.conditions
+      .slice(0, index)
+      .findIndex((condition) => this.takenAfter(index, [condition]) === 'never');
+    return behind < 0 ? 'behind-several' : { behind };
+  }
+
+  /**
+   * Whether, of all measured values, only those exactly on a figure hold none of the conditions: an end that was left
+   * out of both sides.
+   */
+  missesOnlyPoints(): boolean {
+    const facts = factsOf(this.conditions, this.beforehand);
+    if (![...facts.values()].some(({ fact }) => fact === 'cell' || fact === 'order')) return false;
+    const wanted = { not: this.conditions, allows: isMeasured };
+    const besidePoints = findCase({ ...wanted, allows: isBesidePoint }, facts, this.beforehand);
+    return besidePoints.found === 'none' && findCase(wanted, facts, this.beforehand).found === 'case';
+  }
+
+  private takenAfter(index: number, not: readonly Expression[]): Taken {
+    const holding = this.conditions[index];
+    if (holding === undefined) return 'can-be';
+    const wanted = { not, holding };
+    const { found }: Search = findCase(wanted, factsOf([holding, ...not], this.beforehand), this.beforehand);
+    if (found !== 'open') return found === 'none' ? 'never' : 'can-be';
+    return isFoundByLot(wanted, this.beforehand) ? 'can-be' : 'unlikely';
+  }
+}
+
+function isMeasured(fact: Fact, value: number): boolean {
+  if (fact.fact === 'measured') return value === 1;
+  return fact.fact !== 'order' || value !== 3;
+}
+
+function isBesidePoint(fact: Fact, value: number): boolean {
+  if (fact.fact === 'cell') return value % 2 === 0;
+  return isMeasured(fact, value) && (fact.fact !== 'order' || value !== 1);
+}
