@@ -1,7 +1,8 @@
-import { differenceToBase, expandedUncertainty, unitKind, type UnitName } from '../calculations';
-import type { PressureSense } from '../document';
+import { differenceFromBase, differenceToBase, expandedUncertainty, unitKind, type UnitName } from '../calculations';
+import type { PressureSense, Quantity } from '../document';
 import { decimalsOf } from './figures';
 import type { InstrumentRange, InstrumentSnapshot } from './run-event';
+import type { RunState } from './run-state';
 
 /** The range of an instrument with which a quantity of this unit and sense is read; undefined if it has none. */
 export function rangeFor(
@@ -20,6 +21,21 @@ export function rangeFor(
 export function resolutionOf(text: string, unit: UnitName, range: InstrumentRange | undefined): number {
   const typed = differenceToBase(10 ** -decimalsOf(text), unit);
   return range === undefined ? typed : Math.max(typed, differenceToBase(range.resolution, range.unit));
+}
+
+/**
+ * How many decimals the steps of the chosen instrument's display have in the quantity's unit, at most 6; undefined
+ * where no instrument reads it.
+ */
+export function readDecimals(
+  state: Pick<RunState, 'gear'>,
+  { gear, unit, sense }: Quantity & { readonly gear?: string },
+): number | undefined {
+  const range = rangeFor(gear === undefined ? undefined : state.gear[gear], unit, sense);
+  if (range === undefined || !(range.resolution > 0)) return undefined;
+  const step = differenceFromBase(differenceToBase(range.resolution, range.unit), unit);
+  // A step such as 0.5 kPa is shown with one decimal; the small allowance is for steps that came through a conversion.
+  return Math.min(6, Math.max(0, Math.ceil(-Math.log10(step) - 1e-9)));
 }
 
 /**

@@ -1,18 +1,25 @@
-import { judge } from '../calculations';
+import { judge, type UnitName } from '../calculations';
 import type { CompiledProcedure, Environment, Quantity } from '../document';
 import { decimalsOf, fixed, shownIn } from './figures';
 import type { Judgement } from './run-state';
 
+/** What is held against a band: base units, expanded uncertainty (k = 2). */
+export interface HeldFigure {
+  readonly value: number;
+  readonly uncertainty: number;
+  /** How many decimals the value is read with in its quantity's unit; absent where that is not known. */
+  readonly decimals: number | undefined;
+}
+
 /**
- * Judges a value (base units, expanded uncertainty k = 2) against its quantity's band: in, out or too close to call,
+ * Judges a value against its quantity's band: in, out or too close to call,
  * guarded on both sides by the uncertainty of the value and of the band's ends together. Undefined where the quantity has no band. A band whose condition does not hold, or whose
  * ends need a value that was never measured, is not judged, and says so.
  */
 export function judgeQuantity(
   procedure: CompiledProcedure,
   quantity: Quantity,
-  value: number,
-  uncertainty: number,
+  { value, uncertainty, decimals }: HeldFigure,
   environment: Environment,
 ): Judgement | undefined {
   const band = quantity.band;
@@ -22,8 +29,8 @@ export function judgeQuantity(
   // The ends may rest on readings of their own: the verdict is about the difference from them (JCGM 100:2008, 5.1.2).
   const guard = Math.hypot(uncertainty, Math.max(low?.uncertainty ?? 0, high?.uncertainty ?? 0));
   const ends = {
-    ...(low === undefined ? {} : { low: low.value, lowText: endText(low.value, quantity) }),
-    ...(high === undefined ? {} : { high: high.value, highText: endText(high.value, quantity) }),
+    ...(low === undefined ? {} : { low: low.value, lowText: endText(low, quantity.unit, decimals) }),
+    ...(high === undefined ? {} : { high: high.value, highText: endText(high, quantity.unit, decimals) }),
     guard,
     source: band.source,
   };
@@ -43,12 +50,15 @@ export function judgeQuantity(
   };
 }
 
-/** A band's end with its own expanded uncertainty, base units; undefined where it needs what was never measured. */
+/** A band's end with its own expanded uncertainty, base units. */
+type BandEnd = Pick<HeldFigure, 'value' | 'uncertainty'>;
+
+/** The band's end; undefined where it needs what was never measured. */
 function endOf(
   procedure: CompiledProcedure,
   source: string | undefined,
   environment: Environment,
-): { readonly value: number; readonly uncertainty: number } | undefined {
+): BandEnd | undefined {
   if (source === undefined) return undefined;
   const expression = procedure.expression(source);
   const outcome = expression.evaluate(environment);
@@ -62,9 +72,14 @@ export function truthOf(procedure: CompiledProcedure, source: string, environmen
   return outcome.ok && typeof outcome.value === 'boolean' ? outcome.value : undefined;
 }
 
-/** A band's end as people read it: as many decimals as needed, at most two, at least one where it is not whole. */
-function endText(end: number, quantity: Quantity): string {
-  const shown = shownIn(end, quantity.unit);
+/**
+ * A band's end as people read it; what is judged is never rounded. An end that rests on readings has the decimals of
+ * the reading that is held against it. One that the author gave outright keeps its own: as many as needed, at most
+ * two, at least one where it is not whole.
+ */
+function endText(end: BandEnd, unit: UnitName, decimals: number | undefined): string {
+  const shown = shownIn(end.value, unit);
+  if (end.uncertainty > 0 && decimals !== undefined) return fixed(shown, decimals);
   const text = String(Number(shown.toFixed(2)));
   return decimalsOf(text) === 0 && !Number.isInteger(shown) ? fixed(shown, 1) : text;
 }

@@ -2,7 +2,7 @@ import { differenceToBase, fromBase, toBase, type UnitName } from '../calculatio
 import type { CompiledProcedure, EntryWay, Quantity, ReadQuantity } from '../document';
 import { environmentOf } from './environment';
 import { decimalsOf, figureText, fixed, uncertaintyText } from './figures';
-import { rangeFor, readingUncertainty, resolutionOf } from './instrument-uncertainty';
+import { rangeFor, readDecimals, readingUncertainty, resolutionOf } from './instrument-uncertainty';
 import { judgeQuantity } from './judge-quantity';
 import type { NamedValue, RunState, Take } from './run-state';
 
@@ -107,7 +107,7 @@ function meanText(mean: number, takes: readonly Take[], unit: UnitName): string 
 function judged(
   procedure: CompiledProcedure,
   state: RunState,
-  quantity: Quantity,
+  quantity: Quantity & { readonly gear?: string },
   measured: Measured,
   take: Take,
   takes: number,
@@ -115,7 +115,8 @@ function judged(
 ): NamedValue {
   const value = named(quantity, measured, take, takes, provenance);
   const environment = environmentOf(state, { [quantity.name]: value });
-  const judgement = judgeQuantity(procedure, quantity, measured.value, measured.uncertainty, environment);
+  const decimals = readDecimals(state, quantity) ?? decimalsOf(measured.text);
+  const judgement = judgeQuantity(procedure, quantity, { ...measured, decimals }, environment);
   return judgement === undefined ? value : { ...value, judgement };
 }
 

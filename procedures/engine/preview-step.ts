@@ -1,5 +1,6 @@
 import type { CompiledProcedure, Quantity } from '../document';
 import { environmentOf } from './environment';
+import { readDecimals } from './instrument-uncertainty';
 import { judgeQuantity } from './judge-quantity';
 import { evaluateResult } from './measure-quantity';
 import { resultsOf } from './quantities';
@@ -9,9 +10,14 @@ import type { Judgement, NamedValue, RunState } from './run-state';
 export function previewBand(
   procedure: CompiledProcedure,
   state: RunState,
-  quantity: Quantity,
+  quantity: Quantity & { readonly gear?: string },
 ): Omit<Judgement, 'result'> | undefined {
-  const judgement = judgeQuantity(procedure, quantity, 0, 0, environmentOf(state));
+  const judgement = judgeQuantity(
+    procedure,
+    quantity,
+    { value: 0, uncertainty: 0, decimals: readDecimals(state, quantity) },
+    environmentOf(state),
+  );
   if (judgement === undefined) return undefined;
   const { result: _ofNothing, ...band } = judgement;
   return band;

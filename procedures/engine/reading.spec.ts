@@ -44,7 +44,7 @@ describe('a reading', () => {
     const preview = previewReading(procedure, walk.state, { name: 'manifoldPressure', text: '98.0', unit: 'kPa' });
     expect(preview).toMatchObject({
       ok: true,
-      value: { judgement: { result: 'out', lowText: '91.87', highText: '95.87' } },
+      value: { judgement: { result: 'out', lowText: '91.9', highText: '95.9' } },
       way: { to: 'restore', verdict: 'sensorOff' },
     });
   });

@@ -28,7 +28,7 @@ describe('ReadingEntry', () => {
   it('shows the band before anything is typed', async () => {
     const { fixture } = await shown('manifold-pressure');
     expect(elementOf(fixture).querySelector('bay-band-gauge svg')?.getAttribute('aria-label')).toBe(
-      'no reading yet, band from 91.86 to 95.86 kPa',
+      'no reading yet, band from 91.9 to 95.9 kPa',
     );
   });
 
