@@ -88,7 +88,7 @@ test('a lead brings in and publishes version 2: tablets take it for new runs, an
   await page.goto(run);
   await tap(page.getByRole('button', { name: /Go on with step 2d/ }));
   await expect(page.locator('bay-run-header .procedure')).toHaveText(
-    `${crankcaseValveSeal.title}, cold half, version 1`,
+    `Cold half, version 1: ${crankcaseValveSeal.title}`,
   );
   await walkTo(page, '3', coldCar);
   const [stored] = await storedOnTablet(page, 'runs');

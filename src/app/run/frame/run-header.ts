@@ -19,9 +19,10 @@ export class RunHeaderBar {
   protected readonly isPractice = computed(() => this.run().header.kind === 'practice');
   protected readonly car = computed(() => this.run().state.visit);
   protected readonly title = computed(() => this.run().procedure.document.title);
+  /** Before the title, which may be cut at its end. */
   protected readonly version = computed(() => {
     const { half, version } = this.run().header;
-    return `, ${half === undefined ? '' : `${half} half, `}version ${version}`;
+    return half === undefined ? `Version ${version}` : `${half === 'cold' ? 'Cold' : 'Warm'} half, version ${version}`;
   });
   private readonly expected = computed(() => expectedSteps(this.run().procedure, this.run().state.header.half));
   protected readonly place = computed(() => {
