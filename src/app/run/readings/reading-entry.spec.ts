@@ -127,6 +127,6 @@ describe('ReadingEntry', () => {
     await fixture.whenStable();
     expect(elementOf(fixture).querySelector('.remark')?.textContent).toContain('Not yet.');
     expect(elementOf(fixture).querySelector('.notes')?.textContent).toContain('before: 14');
-    expect(hasButton(fixture, 'Undo last reading')).toBe(true);
+    expect(hasButton(fixture, 'Undo 14')).toBe(true);
   });
 });

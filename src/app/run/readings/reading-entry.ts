@@ -124,7 +124,9 @@ export class ReadingEntry extends StepEntry<'reading' | 'wait'> {
   protected readonly eraseLabel = computed(() => {
     if (this.text() !== '') return 'Erase';
     if (this.wayId() !== undefined) return 'Other way';
-    return this.takes().length > 0 ? 'Undo last reading' : 'Erase';
+    // By its figure: in a wait the quantity that is asked for again is not the one that was read last.
+    const last = this.takes().at(-1)?.text;
+    return last === undefined ? 'Erase' : `Undo ${shownFigure(last)}`;
   });
 
   constructor() {
