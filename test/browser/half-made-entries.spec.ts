@@ -130,6 +130,7 @@ test('a choice and the words beside it outlive a reload and a pause; what is ref
   // The step before is repeated: 13 is reached anew, and nothing stands in it.
   await page.reload();
   await tap(page.getByRole('button', { name: /^Repeat step/ }));
+  await expect(page.locator('bay-run-header')).not.toContainText('Step 13');
   await reach(page, '13');
   await expect(choice.getByRole('checkbox', { name: 'At a joint' })).not.toBeChecked();
   await expect(page.locator('#asked')).toHaveCount(0);
