@@ -16,11 +16,15 @@ import type { ProcedureDocument, Step } from './procedure-document';
 export interface CompiledProcedure {
   /** With the steps of the procedures that it calls written in. */
   readonly document: ProcedureDocument;
+  /** As it was published: what a run's header has the hash of. */
+  readonly authored: ProcedureDocument;
   readonly step: (id: string) => Step | undefined;
   /** The expression with exactly this text. Throws RangeError on a text that the document does not hold. */
   readonly expression: (source: string) => CompiledExpression;
   /** The called procedure that a step or finding belongs to, the innermost one. */
   readonly blockOf: (id: string) => CallBlock | undefined;
+  /** The called procedure that a limit belongs to; undefined where it holds throughout the run. */
+  readonly blockOfLimit: (id: string) => CallBlock | undefined;
   /** What a name stands for; undefined where no input, quantity, option or finding has it. */
   readonly declared: (name: string) => Declaration | undefined;
 }
@@ -78,8 +82,10 @@ export function compileProcedure(authored: ProcedureDocument, library?: Procedur
     ok: true,
     procedure: {
       document,
+      authored,
       step: (id) => steps.get(id),
       blockOf: (id) => blocks.find((block) => block.steps.has(id)),
+      blockOfLimit: (id) => blocks.find((block) => block.limits.has(id)),
       expression: (source) => {
         const known = expressions.get(source);
         if (known === undefined) throw new RangeError(`expression is ${source}; allowed: one of the document's own`);

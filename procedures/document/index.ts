@@ -10,7 +10,16 @@ export {
   type CompiledProcedure,
   type CompileProblem,
 } from './compile-procedure';
-export { channelsOf, findsOf, isFoundQuantity, isFoundTruth, readsOf, resultsOf, takenOf } from './step-parts';
+export {
+  channelsOf,
+  findsOf,
+  isFoundQuantity,
+  isFoundTruth,
+  isSeriesStep,
+  readsOf,
+  resultsOf,
+  takenOf,
+} from './step-parts';
 export { type CallBlock, type ProcedureLibrary } from './call/expand-calls';
 export { type Declaration } from './declarations';
 export { type Environment, type Evaluation, type EvaluationProblem } from './expression/environment';

@@ -1,5 +1,5 @@
 import type { ReadQuantity, Result } from './quantity';
-import type { Channel, Found, FoundQuantity, FoundTruth, Step, TakenResult } from './step';
+import type { Channel, Found, FoundQuantity, FoundTruth, SeriesStep, Step, TakenResult } from './step';
 
 /** A part of a step, and where it stands in it: `reads/0`. */
 export interface Placed<T> {
@@ -25,9 +25,13 @@ export function readsOf(step: Step): readonly ReadQuantity[] {
   return placedReadsOf(step).map(({ part }) => part);
 }
 
+export function isSeriesStep(step: Step): step is SeriesStep {
+  return step.kind === 'listen' || step.kind === 'ramp';
+}
+
 /** What a step looks for in its series. */
 export function findsOf(step: Step): readonly Found[] {
-  return step.kind === 'listen' || step.kind === 'ramp' ? step.finds : [];
+  return isSeriesStep(step) ? step.finds : [];
 }
 
 export function isFoundQuantity(found: Found): found is FoundQuantity {
@@ -40,7 +44,7 @@ export function isFoundTruth(found: Found): found is FoundTruth {
 
 /** The channels of a step's series. */
 export function channelsOf(step: Step): readonly Channel[] {
-  return step.kind === 'listen' || step.kind === 'ramp' ? step.channels : [];
+  return isSeriesStep(step) ? step.channels : [];
 }
 
 /** What a step computes when it is done. */

@@ -159,6 +159,9 @@ export interface Channel {
   readonly needed: boolean;
 }
 
+/** A step that takes a series. */
+export type SeriesStep = RampStep | ListenStep;
+
 /** What a listen step looks for; truths are names that hold or do not, the rest are quantities. */
 export type Found = FoundTruth | FoundQuantity;
 

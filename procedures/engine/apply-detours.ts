@@ -1,4 +1,4 @@
-import type { CompiledProcedure } from '../document';
+import { isSeriesStep, type CompiledProcedure } from '../document';
 import { dropLastTake } from './apply-readings';
 import { requireCurrent, requireStep } from './apply-walk';
 import { RefusedEvent } from './refusal';
@@ -67,7 +67,7 @@ export function exceedLimit(procedure: CompiledProcedure, state: RunState, event
 /** A series that went over a limit is evidence, but nothing is found in it: the ramp is taken again. */
 function withoutSeries(procedure: CompiledProcedure, state: RunState, stepId: string): RunState {
   const step = requireStep(procedure, stepId);
-  if (step.kind !== 'listen') return state;
+  if (!isSeriesStep(step)) return state;
   const { [step.name]: _gone, ...series } = state.series;
   return { ...state, series };
 }

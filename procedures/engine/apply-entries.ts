@@ -81,6 +81,21 @@ export function makeChoice(procedure: CompiledProcedure, state: RunState, event:
   return { ...state, truths: { ...state.truths, ...truths }, choices: { ...state.choices, [name]: choice } };
 }
 
+export function keepPhoto(procedure: CompiledProcedure, state: RunState, event: EventOf<'photo-attached'>): RunState {
+  const { step: stepId, sha256, mediaType } = event.data;
+  const step = requireStep(procedure, stepId);
+  requireCurrent(state, stepId);
+  if (step.kind !== 'photo') throw new RefusedEvent('unknown-name', `step ${step.number} takes no photo`);
+  const photos = [...(own(state.photos, step.name)?.photos ?? []), { seq: event.seq, sha256, mediaType }];
+  return {
+    ...state,
+    photos: {
+      ...state.photos,
+      [step.name]: { step: stepId, seq: event.seq, photos },
+    },
+  };
+}
+
 export function disturb(procedure: CompiledProcedure, state: RunState, event: EventOf<'disturbed'>): RunState {
   const { step: stepId, item, label } = event.data;
   requireCurrent(state, stepId);

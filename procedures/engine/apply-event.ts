@@ -2,7 +2,17 @@ import type { CompiledProcedure, ProcedureDocument } from '../document';
 import { unitKind } from '../calculations';
 import { brokenLink, contentHash, headerHash } from './chain';
 import { exceedLimit, overrule, reachFinding, redo } from './apply-detours';
-import { acknowledge, chooseGear, disturb, makeChoice, recordCodes, restore, runTimer } from './apply-entries';
+import {
+  acknowledge,
+  chooseGear,
+  disturb,
+  keepPhoto,
+  makeChoice,
+  recordCodes,
+  restore,
+  runTimer,
+} from './apply-entries';
+import { applyRelease, applyVerification } from './apply-second-person';
 import { placeMark, recordReading, recordSeries, undo } from './apply-readings';
 import { amendClaim, claimStep, finishStep, requireCurrent, takeBranch } from './apply-walk';
 import { own } from './environment';
@@ -46,8 +56,8 @@ export function applyEvent(
 
 function open(procedure: CompiledProcedure, header: RunHeader, event: RunEvent): RunState {
   if (event.type !== 'opened') throw new RefusedEvent('not-opened', 'the first event must open the run');
-  const document = procedure.document;
-  if (document.id !== header.procedureId || contentHash(document) !== header.contentHash) {
+  const { document, authored } = procedure;
+  if (document.id !== header.procedureId || contentHash(authored) !== header.contentHash) {
     throw new RefusedEvent('other-procedure', 'the run was opened on another procedure or version');
   }
   requireInputs(document, event);
@@ -76,6 +86,7 @@ function open(procedure: CompiledProcedure, header: RunHeader, event: RunEvent):
     series: {},
     codes: {},
     choices: {},
+    photos: {},
     overruled: undefined,
     branchCounts: {},
     exceeded: [],
@@ -121,6 +132,12 @@ export function reduceEvent(procedure: CompiledProcedure, state: RunState, event
       return recordSeries(procedure, state, event);
     case 'mark-placed':
       return placeMark(procedure, state, event);
+    case 'photo-attached':
+      return keepPhoto(procedure, state, event);
+    case 'released':
+      return applyRelease(procedure, state, event);
+    case 'verified':
+      return applyVerification(procedure, state, event);
     case 'codes-recorded':
       return recordCodes(procedure, state, event);
     case 'timer-started':
@@ -167,7 +184,7 @@ export function reduceEvent(procedure: CompiledProcedure, state: RunState, event
     case 'signed':
       return { ...state, status: 'signed' };
     default:
-      // Kept and shown, without an effect on the state: notes, photos, predictions, notices.
+      // Kept and shown, without an effect on the state: notes, predictions, notices.
       return state;
   }
 }

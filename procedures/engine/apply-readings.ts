@@ -1,5 +1,5 @@
 import { unitKind } from '../calculations';
-import type { CompiledProcedure, Step } from '../document';
+import { isSeriesStep, type CompiledProcedure, type Step } from '../document';
 import { own } from './environment';
 import { parseDecimal } from './figures';
 import { computedValue, measureQuantity } from './measure-quantity';
@@ -123,7 +123,7 @@ export function recordSeries(
 ): RunState {
   const step = requireStep(procedure, event.data.step);
   requireCurrent(state, step.id);
-  if (step.kind !== 'listen' || step.name !== event.data.name) {
+  if (!isSeriesStep(step) || step.name !== event.data.name) {
     throw new RefusedEvent('unknown-name', `step ${step.number} takes no series ${event.data.name}`);
   }
   const marks = own(state.series, step.name)?.marks ?? {};

@@ -1,6 +1,9 @@
 import type { CompiledProcedure, Step } from '../document';
+import { calledTruths, calledValues, destinationOf, dueAt, withoutCountsOf } from './called';
 import { own } from './environment';
 import { evaluateResult } from './measure-quantity';
+import { waitsForSomebody } from './waits-for-somebody';
+import { endStaleReadings } from './validity';
 import { noiseTruthsOf, resultsOf } from './quantities';
 import { RefusedEvent } from './refusal';
 import type { EventOf } from './run-event';
@@ -20,6 +23,7 @@ export function claimStep(procedure: CompiledProcedure, state: RunState, event: 
     id: step.id,
     claimedSeq: event.seq,
     claimedAt: event.at,
+    claimedBy: event.actor,
     acknowledged: [],
     takes: {},
     timer: undefined,
@@ -31,17 +35,22 @@ export function claimStep(procedure: CompiledProcedure, state: RunState, event: 
     claimedAt: event.at,
     ...(state.verdict === undefined ? {} : { verdictBefore: state.verdict }),
   };
-  return {
-    ...state,
-    current,
-    due: undefined,
-    walked: [...state.walked, claim],
-    values: without(state.values, step.id),
-    truths: without(state.truths, step.id),
-    choices: without(state.choices, step.id),
-    codes: without(state.codes, step.id),
-    series: without(state.series, step.id),
-  };
+  return endStaleReadings(
+    procedure,
+    {
+      ...state,
+      current,
+      due: undefined,
+      walked: [...state.walked, claim],
+      values: without(state.values, step.id),
+      truths: without(state.truths, step.id),
+      choices: without(state.choices, step.id),
+      codes: without(state.codes, step.id),
+      series: without(state.series, step.id),
+      photos: without(state.photos, step.id),
+    },
+    event,
+  );
 }
 
 function without<T extends { readonly step: string }>(
@@ -55,15 +64,25 @@ function without<T extends { readonly step: string }>(
 export function finishStep(procedure: CompiledProcedure, state: RunState, event: EventOf<'step-done'>): RunState {
   const current = requireCurrent(state, event.data.step);
   const step = requireStep(procedure, current.id);
-  if (step.kind === 'restore' && state.disturbed.length > 0) {
+  if (step.kind === 'restore' && dueAt(procedure, state, step.id).length > 0) {
     throw new RefusedEvent('still-disturbed', 'something disturbed is not put back yet');
   }
+  const waits = waitsForSomebody(step, current);
+  if (waits !== undefined) throw new RefusedEvent('not-done', `step ${step.number} still waits for its ${waits}`);
   const provenance = { step: step.id, seq: event.seq, at: event.at };
   let next: RunState = {
     ...state,
     current: { ...current, isDone: true },
-    truths: { ...state.truths, ...noiseTruths(state, step, event.seq) },
+    truths: {
+      ...state.truths,
+      ...noiseTruths(state, step, event.seq),
+      ...calledTruths(state, step, event.seq),
+    },
   };
+  next = endStaleReadings(procedure, next, { ...event, done: step.id });
+  for (const value of calledValues(procedure, next, step, event.seq)) {
+    next = { ...next, values: { ...next.values, [value.name]: value } };
+  }
   for (const result of resultsOf(step)) {
     const value = evaluateResult(procedure, next, result, provenance);
     if (value !== undefined) next = { ...next, values: { ...next.values, [value.name]: value } };
@@ -99,8 +118,7 @@ export function takeBranch(procedure: CompiledProcedure, state: RunState, event:
   const authored = exitsOf(procedure, step).find((candidate) => candidate.exit === exit);
   if (authored === undefined) throw new RefusedEvent('unknown-exit', `step ${step.number} has no exit ${exit}`);
   requirePlaceForWay(state, step, authored);
-  const heading = authored.verdict ?? state.verdict;
-  const target = authored.to === 'verdict' ? heading : authored.to;
+  const { to: target, heading } = destinationOf(procedure, state, step, authored);
   if (target === undefined || to !== target) {
     const leads = target ?? 'no finding yet';
     throw new RefusedEvent('unknown-exit', `exit ${exit} of step ${step.number} leads to ${leads}, not ${to}`);
@@ -119,6 +137,7 @@ export function takeBranch(procedure: CompiledProcedure, state: RunState, event:
           ...state.discrepancies,
           { seq: event.seq, what: `way on from step ${step.number}`, recorded: exit, computed: expected.exit },
         ];
+  const counts = step.kind === 'call' ? withoutCountsOf(state.branchCounts, procedure, step.id) : state.branchCounts;
   const counted = exit.startsWith('next-') ? `${step.id}/${exit}` : undefined;
   const next: RunState = {
     ...state,
@@ -129,10 +148,7 @@ export function takeBranch(procedure: CompiledProcedure, state: RunState, event:
     due: target,
     overruled: undefined,
     discrepancies,
-    branchCounts:
-      counted === undefined
-        ? state.branchCounts
-        : { ...state.branchCounts, [counted]: (state.branchCounts[counted] ?? 0) + 1 },
+    branchCounts: counted === undefined ? counts : { ...counts, [counted]: (counts[counted] ?? 0) + 1 },
     current: state.current === undefined ? undefined : { ...state.current, isDone: true },
   };
   return amendClaim(next, { way: { seq: event.seq, ...event.data } });

@@ -1,5 +1,5 @@
 import { convert, isUnit } from '../calculations';
-import type { ListenStep } from '../document';
+import type { SeriesStep } from '../document';
 import { CannotDo, type Drafting } from './drafting';
 import { own } from './environment';
 import { completeStep } from './go-on';
@@ -16,7 +16,7 @@ type Mark = Extract<RunCommand, { do: 'mark' }>;
 const restS = 1;
 
 /** Keeps a series with the step and holds every sample against the limits. */
-export function importSeries(drafting: Drafting, step: ListenStep, { record, series }: Import): void {
+export function importSeries(drafting: Drafting, step: SeriesStep, { record, series }: Import): void {
   const missing = step.channels.filter(
     (channel) => channel.needed && !series.channels.some((candidate) => candidate.name === channel.name),
   );
@@ -44,7 +44,7 @@ export function importSeries(drafting: Drafting, step: ListenStep, { record, ser
 /** The highest sample of the first channel that breaks a limit. */
 function worstSample(
   drafting: Drafting,
-  step: ListenStep,
+  step: SeriesStep,
   series: Series,
 ): { readonly limit: string; readonly name: string; readonly text: string } | undefined {
   for (const channel of series.channels) {
@@ -71,7 +71,7 @@ function worstSample(
  * Refuses a series whose gauge does not begin at zero, by more than its accuracy and its step allow: every figure of
  * the ramp would carry that offset, and a log that begins under pressure has no rest to measure a rise from.
  */
-function requireRestAtZero(drafting: Drafting, step: ListenStep, series: Series): void {
+function requireRestAtZero(drafting: Drafting, step: SeriesStep, series: Series): void {
   const channel = series.channels.find(({ name }) => name === 'gauge');
   const range = gaugeRange(drafting.state, step);
   if (channel === undefined || range === undefined || !isUnit(channel.unit)) return;
@@ -92,7 +92,7 @@ function requireRestAtZero(drafting: Drafting, step: ListenStep, series: Series)
 }
 
 /** Places one of the two marks; the noise cannot stop before it began. */
-export function placeMark(drafting: Drafting, step: ListenStep, { mark, timeS, by }: Mark): void {
+export function placeMark(drafting: Drafting, step: SeriesStep, { mark, timeS, by }: Mark): void {
   const marks = own(drafting.state.series, step.name)?.marks ?? {};
   const begins = mark === 'noise-begins' ? timeS : marks['noise-begins']?.timeS;
   const stops = mark === 'noise-stops' ? timeS : marks['noise-stops']?.timeS;
@@ -103,14 +103,14 @@ export function placeMark(drafting: Drafting, step: ListenStep, { mark, timeS, b
   drafting.add({ type: 'mark-placed', data: { step: step.id, series: step.name, mark, timeS, by } });
 }
 
-export function takeMarkAway(drafting: Drafting, step: ListenStep, mark: Mark['mark']): void {
+export function takeMarkAway(drafting: Drafting, step: SeriesStep, mark: Mark['mark']): void {
   const seq = own(drafting.state.series, step.name)?.marks[mark]?.seq;
   if (seq === undefined) throw new CannotDo('no-mark', 'There is no such mark to take away.');
   drafting.add({ type: 'undone', data: { seq, reason: 'mark taken away' } });
 }
 
 /** Computes what is to be found, names it, and goes on. */
-export function finishListening(drafting: Drafting, step: ListenStep, series: Series): void {
+export function finishListening(drafting: Drafting, step: SeriesStep, series: Series): void {
   if (own(drafting.state.series, step.name)?.record === undefined) {
     throw new CannotDo(
       'no-series',

@@ -28,6 +28,7 @@ interface Target {
 export function recordTake(drafting: Drafting, step: Step, command: Record): void {
   const way = wayWithoutEntry(step, command);
   if (way !== undefined) return recordDerived(drafting, step, way);
+  requireItsTime(drafting, step, command.name);
   const target = targetOf(step, command);
   const text = tidyDecimal(command.text);
   const value = requirePlausible(target, text, command.unit);
@@ -106,12 +107,28 @@ export function takeBack(drafting: Drafting, { name, reason }: Extract<RunComman
   drafting.add({ type: 'undone', data: { seq, reason: reason.trim() } });
 }
 
-/** Whether everything that the step reads has its value, and what it waits for is true. */
-export function isComplete(drafting: Drafting, step: Step): boolean {
+/** Whether everything that the step reads has its value, its time is over, and what it waits for is true. */
+export function isComplete({ procedure, state }: Drafting, step: Step): boolean {
   const reads = readsOf(step);
-  const isRead = reads.length > 0 && reads.every(({ name }) => own(drafting.state.values, name)?.step === step.id);
-  if (!isRead || step.kind !== 'wait') return isRead;
-  return truthOf(drafting.procedure, step.until, environmentOf(drafting.state)) === true;
+  const isTimed = step.kind === 'hold' || (step.kind === 'wait' && step.atLeastSeconds !== undefined);
+  if (reads.length === 0 && !isTimed) return false;
+  if (!reads.every(({ name }) => own(state.values, name)?.step === step.id)) return false;
+  const timer = state.current?.timer;
+  if (isTimed && !(timer?.ended === true && timer.certain)) return false;
+  return step.kind !== 'wait' || truthOf(procedure, step.until, environmentOf(state)) === true;
+}
+
+/** What a hold ends with is read when its time is over, and not before. */
+function requireItsTime({ state }: Drafting, step: Step, name: string): void {
+  if (step.kind !== 'hold') return;
+  const timer = state.current?.timer;
+  const isOver = timer?.ended === true && timer.certain;
+  if (!isOver && step.ends?.some((quantity) => quantity.name === name) === true) {
+    throw new CannotDo('not-yet', 'That is read when the time is over.');
+  }
+  if (timer !== undefined && step.begins?.some((quantity) => quantity.name === name) === true) {
+    throw new CannotDo('too-late', 'The clock runs already: that belongs to its beginning. Take the step again.');
+  }
 }
 
 function targetOf(step: Step, command: Record): Target {

@@ -1,11 +1,18 @@
-import type { CompiledProcedure, Step } from '../document';
+import { isSeriesStep, type CompiledProcedure, type Step } from '../document';
 import { cautionCount } from './cautions';
 import { isComplete, recordTake, takeBack } from './decide-readings';
 import { finishListening, importSeries, placeMark, takeMarkAway } from './decide-listening';
 import { close, keepWriteUp, leavePause, leaveStop, overrule, pause, redo } from './decide-run';
 import { chooseGear, requireGear } from './decide-gear';
 import { CannotDo, Drafting } from './drafting';
-import { completeStep } from './go-on';
+import { startTimer, endTimer } from './decide-timer';
+import { attachPhoto } from './decide-photo';
+import { completeStep, passOver } from './go-on';
+import { requireNothingDue, restore } from './restoring';
+import { release, verify } from './decide-second-person';
+import { own } from './environment';
+import { wrongKind } from './wrong-kind';
+import { requireCautions } from './require-cautions';
 import { exitsOf } from './ways-on';
 import type { Outcome, RunCommand } from './run-command';
 import { RefusedEvent } from './refusal';
@@ -28,6 +35,8 @@ const beforeCautions: ReadonlySet<RunCommand['do']> = new Set([
   'redo',
   'overrule',
   'cannot-measure',
+  'not-applicable',
+  'verify',
   'restore',
   'keep-write-up',
   'close',
@@ -36,10 +45,11 @@ const beforeCautions: ReadonlySet<RunCommand['do']> = new Set([
 
 /**
  * Decides what a command means as the run stands: the events to write, in order, or why it cannot be done, in words
- * that say how to go on. Writes nothing and knows no clock.
+ * that say how to go on. Writes nothing; `at` is the device's clock, by which readings that hold for a while are told
+ * from those that no longer do.
  */
-export function decide(procedure: CompiledProcedure, state: RunState, command: RunCommand): Outcome {
-  const drafting = new Drafting(procedure, state);
+export function decide(procedure: CompiledProcedure, state: RunState, command: RunCommand, at?: number): Outcome {
+  const drafting = new Drafting(procedure, state, at);
   try {
     requireOpen(state, command);
     perform(drafting, command);
@@ -118,15 +128,22 @@ function performInStep(drafting: Drafting, command: RunCommand): void {
       if (step.kind !== 'codes') throw wrongKind(step);
       drafting.add({ type: 'codes-recorded', data: { step: step.id, name: step.name, codes: command.codes } });
       return completeStep(drafting, step);
+    case 'attach-photo':
+      return attachPhoto(drafting, step, command);
     case 'start-timer':
-      if (step.kind !== 'hold') throw wrongKind(step);
-      return drafting.add({ type: 'timer-started', data: { step: step.id, seconds: step.seconds } });
+      return startTimer(drafting, step);
     case 'end-timer':
       return endTimer(drafting, step, command.certain);
+    case 'release':
+      return release(drafting, step, command);
+    case 'verify':
+      return verify(drafting, step, command);
     case 'cannot-measure':
       return cannotMeasure(drafting, step, command.reason);
+    case 'not-applicable':
+      return notApplicable(drafting, step, command.reason);
     case 'import-series':
-      if (step.kind !== 'listen') throw wrongKind(step);
+      if (!isSeriesStep(step)) throw wrongKind(step);
       return importSeries(drafting, step, command);
     case 'mark':
       if (step.kind !== 'listen') throw wrongKind(step);
@@ -135,7 +152,7 @@ function performInStep(drafting: Drafting, command: RunCommand): void {
       if (step.kind !== 'listen') throw wrongKind(step);
       return takeMarkAway(drafting, step, command.mark);
     case 'finish-listening':
-      if (step.kind !== 'listen') throw wrongKind(step);
+      if (!isSeriesStep(step)) throw wrongKind(step);
       return finishListening(drafting, step, command.series);
     default:
       throw wrongKind(step);
@@ -148,17 +165,6 @@ function currentStep(drafting: Drafting): Step {
   if (step === undefined)
     throw new CannotDo('no-step', 'The run has reached its finding: nothing is left to do in a step.');
   return step;
-}
-
-function wrongKind(step: Step): CannotDo {
-  return new CannotDo('wrong-kind', `Step ${step.number} does not take that.`);
-}
-
-function requireCautions(drafting: Drafting, step: Step): void {
-  const acknowledged = drafting.state.current?.acknowledged.length ?? 0;
-  if (acknowledged < cautionCount(drafting.procedure, step)) {
-    throw new CannotDo('caution-first', 'Read the caution first and say so.');
-  }
 }
 
 function acknowledgeCaution(drafting: Drafting, step: Step, caution: number): void {
@@ -176,15 +182,20 @@ function confirm(drafting: Drafting, step: Step): void {
       return completeStep(drafting, step);
     case 'action':
     case 'compute':
+    case 'call':
       return completeStep(drafting, step);
     case 'restore':
-      if (drafting.state.disturbed.length > 0) {
+      requireNothingDue(drafting, step);
+      return completeStep(drafting, step);
+    case 'photo':
+      if (own(drafting.state.photos, step.name) === undefined) {
         throw new CannotDo(
-          'still-disturbed',
-          `Still to be put back: ${drafting.state.disturbed.map(({ label }) => label).join(', ')}.`,
+          'no-photo',
+          `Take a photo first: ${step.shows.join(' ')} If it cannot be taken, say so below.`,
         );
       }
       return completeStep(drafting, step);
+    case 'hold':
     case 'reading':
     case 'wait':
       if (!isComplete(drafting, step)) throw new CannotDo('not-complete', 'Enter what the step asks for first.');
@@ -215,13 +226,6 @@ function choose(drafting: Drafting, step: Step, { options, text }: Extract<RunCo
   completeStep(drafting, step);
 }
 
-function endTimer(drafting: Drafting, step: Step, certain: boolean): void {
-  if (step.kind !== 'hold') throw wrongKind(step);
-  if (drafting.state.current?.timer === undefined) throw new CannotDo('no-timer', 'Start the clock first.');
-  drafting.add({ type: 'timer-ended', data: { step: step.id, certain } });
-  if (certain) completeStep(drafting, step);
-}
-
 function cannotMeasure(drafting: Drafting, step: Step, reason: string): void {
   if (!('cannotMeasure' in step))
     throw new CannotDo(
@@ -235,15 +239,16 @@ function cannotMeasure(drafting: Drafting, step: Step, reason: string): void {
   completeStep(drafting, step, exit);
 }
 
-function restore(drafting: Drafting, item: string): void {
-  if (!drafting.state.disturbed.some((candidate) => candidate.item === item)) {
-    throw new CannotDo('not-disturbed', 'That is back in its place already.');
-  }
-  const { current } = drafting.state;
-  const step = current === undefined ? undefined : drafting.procedure.step(current.id);
-  if (step !== undefined) requireCautions(drafting, step);
-  drafting.add({ type: 'restored', data: { step: step?.id ?? drafting.state.finding ?? '', item } });
-  if (step?.kind === 'restore' && drafting.state.disturbed.length === 0) completeStep(drafting, step);
+function notApplicable(drafting: Drafting, step: Step, reason: string): void {
+  const why = reason.trim();
+  if (why === '') throw new CannotDo('say-why', 'Say in a few words why this does not apply to the car.', 'reason');
+  if (step.kind === 'start' || step.kind === 'restore' || step.kind === 'call') throw wrongKind(step);
+  drafting.add({
+    type: 'not-applicable',
+    data: { step: step.id, reason: why },
+  });
+  const exit = exitsOf(drafting.procedure, step).find((candidate) => candidate.exit === 'cannot-measure');
+  passOver(drafting, step, exit);
 }
 
 function acknowledgeLimit(drafting: Drafting): void {

@@ -25,6 +25,8 @@ export class Drafting {
   constructor(
     readonly procedure: CompiledProcedure,
     private current: RunState,
+    /** The device's clock; without one time stands still at the last event. */
+    private readonly at: number = current.lastAt,
   ) {}
 
   get state(): RunState {
@@ -33,12 +35,12 @@ export class Drafting {
 
   add(draft: EventDraft): void {
     const seq = this.current.seq + 1;
-    const { lastAt, header, openedBy } = this.current;
+    const { header, openedBy } = this.current;
     const place = {
       runId: header.runId,
       seq,
       id: '',
-      at: lastAt,
+      at: this.at,
       elapsed: 0,
       actor: openedBy,
       device: '',

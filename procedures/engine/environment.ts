@@ -9,7 +9,7 @@ export function environmentOf(
 ): Environment {
   const value = (name: string): Pick<NamedValue, 'value' | 'uncertainty' | 'judgement'> | undefined => {
     const known = own(extra, name) ?? own(state.values, name);
-    if (known !== undefined) return known;
+    if (known !== undefined) return 'stale' in known ? undefined : known;
     const input = own(state.inputs, name);
     return input === undefined ? undefined : { value: toBase(Number(input.text), input.unit), uncertainty: 0 };
   };

@@ -99,7 +99,7 @@ const dataShapes: Readonly<Record<RunEventType, Shape>> = {
   'step-redone': stepAndReason,
   undone: objectOf({ seq: count, reason: text }),
   'lead-called': objectOf({ step: text, question: text }),
-  released: objectOf({ step: text, evidence: text }),
+  released: objectOf({ step: text, evidence: text, by: oneOf('lead', 'manager') }),
   'set-aside': objectOf({ reason: text }),
   resumed: objectOf({ from: oneOf('set-aside', 'stopped', 'reload', 'lead-called') }),
   'handed-over': objectOf({ to: text, reason: text }),

@@ -1,19 +1,41 @@
 import type { Step } from '../document';
 import { CannotDo, type Drafting } from './drafting';
+import { requireSomebody } from './decide-second-person';
 import { renderTemplate } from './template';
+import { staleAmong } from './validity';
 import { branchData, wayOn, type NamedExit } from './ways-on';
 
 /** Completes the current step: what it disturbs, its results, the way its conditions lead to, and the next claim. */
 export function completeStep(drafting: Drafting, step: Step, forced?: NamedExit): void {
-  const { procedure } = drafting;
   for (const { item, label } of step.disturbs ?? []) {
     drafting.add({ type: 'disturbed', data: { step: step.id, item, label } });
   }
+  passOver(drafting, step, forced);
+}
+
+/** The same for a step whose act was not done: nothing was taken apart. */
+export function passOver(drafting: Drafting, step: Step, forced?: NamedExit): void {
+  const { procedure } = drafting;
+  requireSomebody(drafting, step);
   drafting.add({ type: 'step-done', data: { step: step.id } });
+  if (forced === undefined) requireFresh(drafting, step);
   const exit = forced ?? wayOn(procedure, drafting.state, step);
   if (exit === undefined)
     throw new CannotDo('no-way-on', `Step ${step.number} has no way on. Set the run aside and tell the lead.`);
   takeExit(drafting, step, exit);
+}
+
+/** No way is decided on a reading that no longer holds. */
+function requireFresh({ procedure, state }: Drafting, step: Step): void {
+  const conditions = step.kind === 'finding' ? [] : (step.next ?? []);
+  const names = conditions.flatMap(({ when }) => procedure.expression(when).names);
+  const stale = staleAmong(state, [...new Set(names)])[0];
+  if (stale === undefined) return;
+  const number = procedure.step(stale.step)?.number ?? stale.step;
+  throw new CannotDo(
+    'stale',
+    `${stale.label} no longer holds. ${stale.stale?.because ?? ''} Take it again: go back to step ${number}.`,
+  );
 }
 
 /** Takes one exit: the branch, then the next step's claim or the finding. */

@@ -34,6 +34,8 @@ export {
   type WayAhead,
 } from './preview';
 export { previewBand, previewResults } from './preview-step';
+export { secondsOf } from './decide-timer';
+export { waitsForSomebody } from './waits-for-somebody';
 export { channelsOf, readsOf, resultsOf, takesNeeded } from './quantities';
 export { type Refusal, type ReplayResult } from './refusal';
 export { replay } from './replay';

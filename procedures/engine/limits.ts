@@ -1,5 +1,6 @@
 import { toBase, type UnitName } from '../calculations';
 import type { CompiledProcedure, Environment, Limit, PressureSense } from '../document';
+import { limitHoldsAt } from './called';
 import { own } from './environment';
 import { truthOf } from './judge-quantity';
 import type { RunState } from './run-state';
@@ -23,6 +24,7 @@ export function brokenLimit(
 ): Limit | undefined {
   return procedure.document.limits.find((limit) => {
     if (!limit.of.includes(entered.name)) return false;
+    if (!limitHoldsAt(procedure, limit.id, state.current?.id)) return false;
     const gauge = asGauge(state, entered);
     return gauge !== undefined && truthOf(procedure, limit.holds, gaugeOnly(gauge)) === false;
   });

@@ -11,9 +11,10 @@ import {
   unitKind,
   type NoSealReason,
   type RampSample,
+  type SealPoint,
   type SensorTracking,
 } from '../calculations';
-import type { CompiledProcedure, Found, ListenStep, Quantity } from '../document';
+import { isSeriesStep, type CompiledProcedure, type FoundQuantity, type SeriesStep } from '../document';
 import { own } from './environment';
 import { figureText, type FigureText } from './figures';
 import { rangeFor } from './instrument-uncertainty';
@@ -33,7 +34,10 @@ const noSealWords: Readonly<Record<NoSealReason, string>> = {
 
 /** What was found in a series: figures in the quantities' own units. */
 export interface ListeningResult {
-  readonly found: readonly { readonly quantity: Extract<Found, Quantity>; readonly figure: FigureText }[];
+  readonly found: readonly {
+    readonly quantity: FoundQuantity;
+    readonly figure: FigureText;
+  }[];
   /** Why a quantity could not be found, in plain words. */
   readonly problems: readonly string[];
 }
@@ -72,7 +76,7 @@ function kilopascals(series: Series, name: string): (index: number) => number | 
 }
 
 /** The step of the gauge channel: the chosen instrument's display. */
-export function gaugeRange(state: RunState, step: ListenStep): InstrumentRange | undefined {
+export function gaugeRange(state: RunState, step: SeriesStep): InstrumentRange | undefined {
   const channel = step.channels.find((candidate) => candidate.name === 'gauge');
   if (channel?.gear === undefined || !isUnit(channel.unit)) return undefined;
   return rangeFor(state.gear[channel.gear], channel.unit, 'gauge');
@@ -88,7 +92,7 @@ function stationKpaOf(state: RunState, series: Series): number {
 
 /** Where the level falls for good, by the calculation; nothing is marked until a person accepts it. */
 export function suggestMark(procedure: CompiledProcedure, state: RunState, series: Series): MarkSuggestion {
-  const step = currentListenStep(procedure, state);
+  const step = currentSeriesStep(procedure, state);
   if (step === undefined) return { ok: false, reason: 'The current step does not listen.' };
   const stationKpa = stationKpaOf(state, series);
   const seal = findSealPoint(samplesOf(series, stationKpa), {
@@ -103,9 +107,9 @@ export function suggestMark(procedure: CompiledProcedure, state: RunState, serie
   };
 }
 
-export function currentListenStep(procedure: CompiledProcedure, state: RunState): ListenStep | undefined {
+export function currentSeriesStep(procedure: CompiledProcedure, state: RunState): SeriesStep | undefined {
   const step = state.current === undefined ? undefined : procedure.step(state.current.id);
-  return step?.kind === 'listen' ? step : undefined;
+  return step !== undefined && isSeriesStep(step) ? step : undefined;
 }
 
 function resolutionOption(range: InstrumentRange | undefined): { readonly resolutionKpa?: number } {
@@ -113,7 +117,7 @@ function resolutionOption(range: InstrumentRange | undefined): { readonly resolu
 }
 
 /** Computes everything that the listen step looks for, from the series and the marks that stand in the state. */
-export function analyseListening(state: RunState, step: ListenStep, series: Series): ListeningResult {
+export function analyseListening(state: RunState, step: SeriesStep, series: Series): ListeningResult {
   const stationKpa = stationKpaOf(state, series);
   const samples = samplesOf(series, stationKpa);
   const hasManifold = series.channels.some(({ name }) => name === 'manifold');
@@ -135,7 +139,7 @@ export function analyseListening(state: RunState, step: ListenStep, series: Seri
 
 interface Search {
   readonly state: RunState;
-  readonly step: ListenStep;
+  readonly step: SeriesStep;
   readonly samples: readonly RampSample[];
   readonly stationKpa: number;
   readonly hasManifold: boolean;
@@ -146,7 +150,7 @@ interface Search {
 
 type Sought = { readonly value: number; readonly uncertainty: number } | string | undefined;
 
-function lookFor(what: Extract<Found, Quantity>['what'], search: Search): Sought {
+function lookFor(what: FoundQuantity['what'], search: Search): Sought {
   switch (what) {
     case 'seal-point':
       return sealPoint(search);
@@ -160,16 +164,25 @@ function lookFor(what: Extract<Found, Quantity>['what'], search: Search): Sought
 }
 
 function sealPoint({ state, step, samples, stationKpa, range, accuracy }: Search): Sought {
+  const options = { stationKpa, ...resolutionOption(range) };
+  if (step.kind === 'ramp') return sealed(findSealPoint(samples, options), accuracy);
   const marks = own(state.series, step.name)?.marks ?? {};
   const stops = marks['noise-stops'];
   if (stops === undefined) return undefined;
-  const options = { stationKpa, ...resolutionOption(range) };
   const begins = marks['noise-begins']?.timeS ?? Math.min(stops.timeS, samples[0]?.timeS ?? 0);
   const computed = stops.by === 'suggested' ? findSealPoint(samples, options) : undefined;
   const seal =
     computed?.sealed === true && Math.abs(computed.timeS - stops.timeS) < 0.05
       ? computed
-      : sealPointFromMarks(samples, { ...options, noiseBeginsS: begins, noiseStopsS: stops.timeS });
+      : sealPointFromMarks(samples, {
+          ...options,
+          noiseBeginsS: begins,
+          noiseStopsS: stops.timeS,
+        });
+  return sealed(seal, accuracy);
+}
+
+function sealed(seal: SealPoint, accuracy: number): Sought {
   if (!seal.sealed) return noSealWords[seal.reason];
   const fromGauge = expandedUncertainty({ accuracy });
   return { value: seal.aboveStationKpa * 1000, uncertainty: Math.hypot(seal.uncertaintyKpa * 1000, fromGauge) };

@@ -2,7 +2,7 @@ import type { CompiledProcedure, Step } from '../document';
 import { decide } from './decide';
 import { Drafting } from './drafting';
 import { own } from './environment';
-import { analyseListening, currentListenStep, suggestMark, type MarkSuggestion } from './listening';
+import { analyseListening, currentSeriesStep, suggestMark, type MarkSuggestion } from './listening';
 import { computedValue } from './measure-quantity';
 import type { RunCommand } from './run-command';
 import type { RunEventData, RunHeader } from './run-event';
@@ -60,7 +60,7 @@ export function previewListening(
   state: RunState,
   series: Series,
 ): ListeningPreview | undefined {
-  const step = currentListenStep(procedure, state);
+  const step = currentSeriesStep(procedure, state);
   if (step === undefined) return undefined;
   const { found, problems } = analyseListening(state, step, series);
   const provenance = { step: step.id, seq: state.seq, at: state.lastAt };

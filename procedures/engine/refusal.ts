@@ -19,6 +19,7 @@ export interface Refusal {
     | 'alarm'
     | 'not-open'
     | 'not-done'
+    | 'not-allowed'
     | 'still-disturbed'
     | 'malformed';
   /** The reason in words: a clause without a full stop. */

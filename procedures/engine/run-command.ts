@@ -41,12 +41,29 @@ export type RunCommand =
   | { readonly do: 'unmark'; readonly mark: 'noise-begins' | 'noise-stops' }
   /** Computes what is to be found in the series between its marks, and goes on. */
   | { readonly do: 'finish-listening'; readonly series: Series }
+  /** A photo of a photo step: its bytes are a blob of their own, named by hash. `confirm` goes on. */
+  | {
+      readonly do: 'attach-photo';
+      readonly sha256: string;
+      readonly bytes: number;
+      readonly mediaType: string;
+    }
+  /** Somebody with the role lets the run go on from a release point. */
+  | {
+      readonly do: 'release';
+      readonly role: 'lead' | 'manager';
+      readonly evidence: string;
+    }
+  /** A second person, by id, looked. */
+  | { readonly do: 'verify'; readonly by: string }
   | { readonly do: 'record-codes'; readonly codes: readonly TroubleCodeEntry[] }
   | { readonly do: 'start-timer' }
   /** `certain` is false when the clock was changed while the app was closed. */
   | { readonly do: 'end-timer'; readonly certain: boolean }
   | { readonly do: 'restore'; readonly item: string }
   | { readonly do: 'cannot-measure'; readonly reason: string }
+  /** The step does not apply to this car; says why. */
+  | { readonly do: 'not-applicable'; readonly reason: string }
   | { readonly do: 'not-sure'; readonly question: string }
   | { readonly do: 'set-aside'; readonly reason: string }
   | { readonly do: 'resume' }

@@ -224,7 +224,12 @@ export interface RunEventData {
   /** The event with this seq no longer counts; it stays visible. */
   undone: { readonly seq: number; readonly reason: string };
   'lead-called': { readonly step: string; readonly question: string };
-  released: { readonly step: string; readonly evidence: string };
+  /** Somebody who may let the run go on did so; the actor is who. */
+  released: {
+    readonly step: string;
+    readonly evidence: string;
+    readonly by: 'lead' | 'manager';
+  };
   'set-aside': { readonly reason: string };
   resumed: { readonly from: 'set-aside' | 'stopped' | 'reload' | 'lead-called' };
   'handed-over': { readonly to: string; readonly reason: string };

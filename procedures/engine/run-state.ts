@@ -48,6 +48,8 @@ export interface RunState {
   readonly series: Readonly<Record<string, SeriesState>>;
   readonly codes: Readonly<Record<string, CodesState>>;
   readonly choices: Readonly<Record<string, ChoiceState>>;
+  /** Of each photo step, by its name, the photos that were kept. */
+  readonly photos: Readonly<Record<string, PhotosState>>;
   /** A step whose way is being overruled: its next `branch-taken` is the person's choice. */
   readonly overruled: string | undefined;
   /** How often each bounded branch was taken: `step/next-N` -> count. */
@@ -67,6 +69,11 @@ export interface CurrentStep {
   readonly id: string;
   readonly claimedSeq: number;
   readonly claimedAt: number;
+  /** Who claimed it. */
+  readonly claimedBy: string;
+  /** Who let the run go on from here, and who looked a second time. */
+  readonly releasedBy?: string;
+  readonly verifiedBy?: string;
   /** Of the step's cautions, by place, those acknowledged in this claim. */
   readonly acknowledged: readonly number[];
   /** Takes recorded in this claim: name -> decimal texts. */
@@ -141,6 +148,8 @@ export interface NamedValue {
   /** Sample standard deviation of the takes, in base units; 0 for one. */
   readonly spread: number;
   readonly judgement?: Judgement;
+  /** Set once it no longer holds: expressions see no value until it is taken again. */
+  readonly stale?: { readonly seq: number; readonly because: string };
 }
 
 export interface Judgement {
@@ -201,6 +210,16 @@ export interface ChoiceState {
   readonly options: readonly string[];
   readonly labels: readonly string[];
   readonly text?: string;
+}
+
+export interface PhotosState {
+  readonly step: string;
+  readonly seq: number;
+  readonly photos: readonly {
+    readonly seq: number;
+    readonly sha256: string;
+    readonly mediaType: string;
+  }[];
 }
 
 export interface LimitAlarm {

@@ -9,7 +9,7 @@ import { sha256Hex } from './sha256';
 import { count, objectOf, text } from './shape';
 
 /** The form of `RunState` that snapshots hold. It is counted up whenever a member of the state changes. */
-export const snapshotFormat = 1;
+export const snapshotFormat = 2;
 
 /**
  * A state kept so that a replay need not begin at the start: a copy that can be thrown away, never the truth. JSON;
@@ -77,7 +77,7 @@ export function readSnapshot({ procedure, header, build }: SnapshotPlace, value:
     return refused('other-format', `the snapshot has the form ${snapshot.format}, this build reads ${snapshotFormat}`);
   }
   if (snapshot.build !== build) return refused('other-build', `the snapshot was computed by ${snapshot.build}`);
-  if (snapshot.contentHash !== contentHash(procedure.document)) {
+  if (snapshot.contentHash !== contentHash(procedure.authored)) {
     return refused('other-document', 'the snapshot belongs to another procedure or version');
   }
   if (snapshot.headerHash !== headerHash(header)) return refused('other-run', 'the snapshot belongs to another run');

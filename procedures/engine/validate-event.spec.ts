@@ -84,7 +84,7 @@ const dataOf: RunEventData = {
   'step-redone': { step: 'a', reason: 'slipped' },
   undone: { seq: 3, reason: 'slipped' },
   'lead-called': { step: 'a', question: 'which port?' },
-  released: { step: 'a', evidence: 'seen' },
+  released: { step: 'a', evidence: 'seen', by: 'lead' },
   'set-aside': { reason: 'lunch' },
   resumed: { from: 'set-aside' },
   'handed-over': { to: 'adeyemi', reason: 'shift' },

@@ -1,4 +1,5 @@
 import type { CompiledProcedure, Exit, Step } from '../document';
+import { destinationOf } from './called';
 import { environmentOf, own } from './environment';
 import { truthOf } from './judge-quantity';
 import type { DecisionInput, RunEventData } from './run-event';
@@ -46,10 +47,9 @@ export function branchData(
   exit: NamedExit,
   because: string = exit.because,
 ): RunEventData['branch-taken'] {
-  const verdict = exit.verdict ?? state.verdict;
   return {
     step: step.id,
-    to: exit.to === 'verdict' ? (verdict ?? exit.to) : exit.to,
+    to: destinationOf(procedure, state, step, exit).to ?? exit.to,
     exit: exit.exit,
     ...(exit.when === undefined ? {} : { when: exit.when }),
     inputs: exit.when === undefined ? [] : decisionInputs(procedure, state, exit.when),

@@ -1,6 +1,7 @@
 import { differenceFromBase, toBase, unitKind } from '../../calculations';
 import { truthPart } from '../expression/truth-part';
 import type { Limit } from '../procedure-document';
+import { isSeriesStep } from '../step-parts';
 import { bandedQuantities, type BandedQuantity } from './banded-quantities';
 import { stepWords, type LintFinding, type LintSubject } from './lint-finding';
 import { NominalFigures, shortFigure } from './nominal-figures';
@@ -60,7 +61,7 @@ function beyond(
 
 function targetsBeyond(limit: Limit, holds: Holds, { document }: LintSubject): readonly LintFinding[] {
   return document.steps.flatMap((step, place): LintFinding[] => {
-    if (step.kind !== 'listen' && step.kind !== 'ramp') return [];
+    if (!isSeriesStep(step)) return [];
     const gauge = step.channels.find(({ name }) => name === 'gauge');
     if (gauge === undefined || !limit.of.includes('gauge')) return [];
     if (unitKind(gauge.unit) !== 'pressure' || holds(toBase(step.target, gauge.unit)) !== false) return [];

@@ -120,7 +120,7 @@ export function dataOf(procedure: CompiledProcedure): Readonly<Record<RunEventTy
     resolution: fc.constantFrom(0, 0.1, 1),
     accuracy: fc.constantFrom(0, 0.25, 1e300),
   });
-  const hash = fc.constant(contentHash(procedure.document));
+  const hash = fc.constant(contentHash(procedure.authored));
   return {
     opened: fc.constant(openedData(procedure.document)),
     'gear-chosen': fc.record({

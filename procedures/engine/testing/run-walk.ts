@@ -23,6 +23,7 @@ export class RunWalk {
   readonly header: RunHeader;
   readonly events: RunEvent[] = [];
   state: RunState;
+  private laterMs = 0;
 
   constructor(
     readonly procedure: CompiledProcedure,
@@ -33,7 +34,7 @@ export class RunWalk {
       runId: '0190a7f0-0000-7000-8000-000000000001',
       procedureId: procedure.document.id,
       version: 1,
-      contentHash: contentHash(procedure.document),
+      contentHash: contentHash(procedure.authored),
       visitId: '0190a7f0-0000-7000-8000-000000000002',
       siteId: 'ossenholt',
       kind: 'real',
@@ -50,7 +51,7 @@ export class RunWalk {
 
   /** What the command would give, nothing written. */
   ask(command: RunCommand): Outcome {
-    return decide(this.procedure, this.state, command);
+    return decide(this.procedure, this.state, command, this.timeOf(this.events.length + 1));
   }
 
   /** Does it, or throws the words that it was refused with. */
@@ -64,10 +65,20 @@ export class RunWalk {
     return this;
   }
 
+  /** Lets time go by. */
+  later(minutes: number): this {
+    this.laterMs += minutes * 60_000;
+    return this;
+  }
+
   /** Acknowledges every caution of the current step. */
   cautions(count: number): this {
     for (let caution = 0; caution < count; caution += 1) this.do({ do: 'acknowledge-caution', caution });
     return this;
+  }
+
+  private timeOf(seq: number): number {
+    return 1_790_000_000_000 + seq * 1_000 + this.laterMs;
   }
 
   private write(draft: EventDraft): RunState {
@@ -76,7 +87,7 @@ export class RunWalk {
       runId: this.header.runId,
       seq,
       id: `0190a7f0-0000-7000-8000-${String(seq).padStart(12, '0')}`,
-      at: 1_790_000_000_000 + seq * 1_000,
+      at: this.timeOf(seq),
       elapsed: seq * 1_000,
       actor: 'okafor',
       device: 'B2',

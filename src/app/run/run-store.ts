@@ -129,7 +129,7 @@ export class RunStore {
     }
     this.acting.set(command.do);
     try {
-      const outcome = decide(view.procedure, view.state, command);
+      const outcome = decide(view.procedure, view.state, command, this.now());
       if (!outcome.ok) {
         this.trouble.set(outcome);
         return false;

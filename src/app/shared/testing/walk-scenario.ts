@@ -160,7 +160,7 @@ function headerOf(procedure: CompiledProcedure, scenario: PracticeScenario, kind
     runId: '0193b0a0-1000-7000-8000-000000000001',
     procedureId: procedure.document.id,
     version: 1,
-    contentHash: contentHash(procedure.document),
+    contentHash: contentHash(procedure.authored),
     visitId: scenario.visitId,
     siteId: 's-ossenholt',
     kind,
