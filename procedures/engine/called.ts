@@ -1,5 +1,6 @@
 import type { CallBlock, CompiledProcedure, Exit, Step } from '../document';
 import { environmentOf, own } from './environment';
+import { decimalsOf } from './figures';
 import { judgeQuantity } from './judge-quantity';
 import type { NamedTruth, NamedValue, RunState } from './run-state';
 
@@ -54,7 +55,12 @@ export function calledValues(
       ...(band === undefined ? {} : { band }),
     };
     const environment = environmentOf(state, { [name]: value });
-    const judgement = judgeQuantity(procedure, quantity, value.value, value.uncertainty, environment);
+    const judgement = judgeQuantity(
+      procedure,
+      quantity,
+      { value: value.value, uncertainty: value.uncertainty, decimals: decimalsOf(value.text) },
+      environment,
+    );
     return [judgement === undefined ? value : { ...value, judgement }];
   });
 }
