@@ -26,6 +26,7 @@ export { type LogChannel, type LogHints, type LogProblem, type ScanLog } from '.
 export { sealPointFromMarks, type SealMarks } from './seal-marks';
 export { findSealPoint } from './seal-point';
 export { type NoSealReason, type SealOptions, type SealPoint } from './seal-result';
+export { steepestRise, type SteepestRise } from './steepest-rise';
 export { trackSensors, type SensorSeries, type SensorTracking, type Tracking } from './sensor-tracking';
 export { decodeTroubleCode, describeTroubleCode } from './trouble-code';
 export { expandedUncertainty, type UncertaintySources } from './uncertainty';

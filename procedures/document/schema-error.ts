@@ -102,6 +102,7 @@ const foundKinds: readonly Found['what'][] = [
   'noise-stopped',
   'seal-point',
   'highest-gauge',
+  'rise-rate',
   'manifold-gain',
   'boost-gain',
   'worst-gap',

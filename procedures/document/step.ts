@@ -172,7 +172,7 @@ export interface FoundTruth {
 
 /** What is computed from a series: the change point of its sound, an extreme, or how its sensors follow each other. */
 export type FoundQuantity = Quantity & {
-  readonly what: 'seal-point' | 'highest-gauge' | 'manifold-gain' | 'boost-gain' | 'worst-gap';
+  readonly what: 'seal-point' | 'highest-gauge' | 'rise-rate' | 'manifold-gain' | 'boost-gain' | 'worst-gap';
 };
 
 /** A timed wait, such as one under pressure, with what is read as it begins and as it ends. */

@@ -6,6 +6,7 @@ import {
   isUnit,
   sealPointFromMarks,
   standardPressure,
+  steepestRise,
   toBase,
   trackSensors,
   unitKind,
@@ -156,6 +157,8 @@ function lookFor(what: FoundQuantity['what'], search: Search): Sought {
       return sealPoint(search);
     case 'highest-gauge':
       return highestGauge(search);
+    case 'rise-rate':
+      return riseRate(search);
     case 'manifold-gain':
     case 'boost-gain':
     case 'worst-gap':
@@ -194,6 +197,22 @@ function highestGauge({ samples, range, accuracy }: Search): Sought {
   if (!Number.isFinite(highest)) return 'The series has no gauge pressure.';
   const resolution = range === undefined ? 0 : differenceToBase(range.resolution, range.unit);
   return { value: highest * 1000, uncertainty: expandedUncertainty({ accuracy, resolution }) };
+}
+
+/** A mark is placed late, and the pressure leaps as soon as the valve shuts: so much before it is left out. */
+const leapS = 2;
+
+/**
+ * How fast the pressure was raised while it was listened to, in a second. An offset of the gauge is the same at both
+ * ends of a stretch and falls out: the steps of its display are what is left open.
+ */
+function riseRate({ state, step, samples, range }: Search): Sought {
+  const stops = own(state.series, step.name)?.marks['noise-stops']?.timeS ?? Number.POSITIVE_INFINITY;
+  const rise = steepestRise(samples.filter(({ timeS }) => timeS <= stops - leapS));
+  if (rise === undefined) return 'The series is too short to say how fast the pressure was raised.';
+  const resolution = range === undefined ? 0 : differenceToBase(range.resolution, range.unit);
+  const uncertainty = (Math.SQRT2 * expandedUncertainty({ resolution })) / (rise.toS - rise.fromS);
+  return { value: rise.kpaPerS * 1000, uncertainty };
 }
 
 function tracked(

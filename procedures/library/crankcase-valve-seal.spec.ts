@@ -96,7 +96,7 @@ describe('crankcase valve seal', () => {
       ...('results' in step ? (step.results ?? []) : []),
     ]);
     const sources = bands.flatMap((quantity) => ('band' in quantity && quantity.band ? [quantity.band.source] : []));
-    expect(sources).toEqual(Array.from({ length: 7 }, () => noSource));
+    expect(sources).toEqual(Array.from({ length: 8 }, () => noSource));
     for (const [id, field] of [
       ['raise-and-listen', 'why'],
       ['hold-pressure', 'why'],

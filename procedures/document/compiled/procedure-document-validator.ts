@@ -2,7 +2,7 @@
 // Made by build-validators.mjs from the schema; not to be edited.
 
 export const checkProcedureDocument = validate52;
-const schema19 = {"$schema":"https://json-schema.org/draft/2020-12/schema","$id":"procedure-document.schema.json","title":"Procedure document","description":"What a lead authors, a version freezes and a run walks. Agrees with procedure-document.ts; what lies between the parts (names, ways, restoring) is the lint's.","type":"object","properties":{"format":{"const":1},"id":{"$ref":"#/$defs/procedureId"},"title":{"$ref":"#/$defs/label"},"purpose":{"$ref":"#/$defs/paragraph"},"system":{"$ref":"#/$defs/label"},"appliesTo":{"$ref":"#/$defs/appliesTo"},"expectedMinutes":{"type":"integer","minimum":1,"maximum":1440},"useLevel":{"enum":["every-step","consulted"]},"pair":{"type":"boolean"},"gear":{"type":"array","items":{"$ref":"#/$defs/gearNeed"},"maxItems":30},"inputs":{"type":"array","items":{"$ref":"#/$defs/input"},"maxItems":100},"pictures":{"type":"array","items":{"$ref":"#/$defs/identifier"},"maxItems":30},"references":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":50},"deference":{"$ref":"#/$defs/paragraph"},"start":{"$ref":"#/$defs/startCard"},"limits":{"type":"array","items":{"$ref":"#/$defs/limit"},"maxItems":20},"stop":{"$ref":"#/$defs/stopSheet"},"steps":{"type":"array","items":{"$ref":"#/$defs/step"},"minItems":2,"maxItems":500}},"required":["format","id","title","purpose","system","appliesTo","expectedMinutes","useLevel","gear","inputs","pictures","references","deference","start","limits","stop","steps"],"additionalProperties":false,"$defs":{"unit":{"enum":["kPa","Pa","hPa","bar","psi","inHg","inH2O","mmHg","degC","degF","K","L/min","ft3/min","m3/s","g/s","kg/h","lb/min","L","cm3","m","km","mi","Nm","lbf.ft","V","mV","ohm","kohm","s","min","h","km/h","mph","%","1","rpm","dB"]},"sense":{"description":"Gauge and absolute are different kinds.","enum":["absolute","gauge"]},"name":{"description":"A name in expressions: letters and digits, first letter small.","type":"string","pattern":"^[a-z][A-Za-z0-9]*$","maxLength":60},"identifier":{"description":"Letters, digits and hyphens.","type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"procedureId":{"description":"Lower-case words joined by hyphens.","type":"string","pattern":"^[a-z0-9]+(-[a-z0-9]+)*$","maxLength":80},"decimal":{"description":"A figure as text, with the digits that it was given with.","type":"string","pattern":"^-?[0-9]+(\\.[0-9]+)?$","maxLength":20},"expression":{"description":"Text in the expression language.","type":"string","minLength":1,"maxLength":2000},"label":{"type":"string","minLength":1,"maxLength":120},"line":{"type":"string","minLength":1,"maxLength":300},"paragraph":{"description":"May be a template: {name} stands for a value of the run.","type":"string","minLength":1,"maxLength":1000},"range":{"type":"object","properties":{"low":{"type":"number"},"high":{"type":"number"}},"required":["low","high"],"additionalProperties":false},"caution":{"type":"object","properties":{"word":{"enum":["danger","warning","caution","notice"]},"text":{"$ref":"#/$defs/paragraph"}},"required":["word","text"],"additionalProperties":false},"appliesTo":{"type":"object","properties":{"codes":{"type":"array","items":{"type":"string","pattern":"^[PCBU][0-3][0-9A-F]{3}$"},"maxItems":100},"symptoms":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":30},"engine":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":30}},"required":["codes","symptoms","engine"],"additionalProperties":false},"instrumentKind":{"enum":["pressure-gauge","scan-tool","listening-probe","barometer","thermometer"]},"gearNeed":{"type":"object","properties":{"role":{"$ref":"#/$defs/name"},"kind":{"$ref":"#/$defs/instrumentKind"},"label":{"$ref":"#/$defs/label"},"optional":{"type":"boolean"},"shows":{"type":"object","properties":{"unit":{"$ref":"#/$defs/unit"},"low":{"type":"number"},"high":{"type":"number"},"resolution":{"type":"number","exclusiveMinimum":0}},"required":["unit","low","high","resolution"],"additionalProperties":false}},"required":["role","kind","label"],"additionalProperties":false},"input":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"from":{"enum":["site.elevation","visit.displacement","default"]},"default":{"$ref":"#/$defs/decimal"},"source":{"$ref":"#/$defs/line"}},"required":["name","label","unit","from","source"],"additionalProperties":false},"startCard":{"type":"object","properties":{"prerequisites":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":20},"stopActions":{"type":"array","items":{"$ref":"#/$defs/line"},"minItems":1,"maxItems":3},"people":{"$ref":"#/$defs/line"},"throughout":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12}},"required":["prerequisites","stopActions","people","throughout"],"additionalProperties":false},"limit":{"type":"object","properties":{"id":{"$ref":"#/$defs/identifier"},"holds":{"$ref":"#/$defs/expression"},"of":{"type":"array","items":{"$ref":"#/$defs/name"},"minItems":1,"maxItems":50},"says":{"$ref":"#/$defs/line"},"then":{"$ref":"#/$defs/line"}},"required":["id","holds","of","says","then"],"additionalProperties":false},"exit":{"type":"object","properties":{"to":{"description":"A step's id, or `verdict`.","type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"because":{"$ref":"#/$defs/line"},"verdict":{"$ref":"#/$defs/name"}},"required":["to","because"],"additionalProperties":false},"branch":{"type":"object","properties":{"to":{"description":"A step's id, or `verdict`.","type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"because":{"$ref":"#/$defs/line"},"verdict":{"$ref":"#/$defs/name"},"when":{"$ref":"#/$defs/expression"},"atMost":{"type":"integer","minimum":1,"maximum":20},"thenceforth":{"$ref":"#/$defs/exit"}},"required":["to","because","when"],"dependentRequired":{"atMost":["thenceforth"],"thenceforth":["atMost"]},"additionalProperties":false},"stopSheet":{"type":"object","properties":{"makeSafe":{"type":"array","items":{"$ref":"#/$defs/line"},"minItems":1,"maxItems":12},"exit":{"$ref":"#/$defs/exit"}},"required":["makeSafe","exit"],"additionalProperties":false},"band":{"type":"object","properties":{"low":{"$ref":"#/$defs/expression"},"high":{"$ref":"#/$defs/expression"},"when":{"$ref":"#/$defs/expression"},"unjudged":{"$ref":"#/$defs/line"},"source":{"$ref":"#/$defs/line"}},"required":["source"],"anyOf":[{"required":["low"]},{"required":["high"]}],"additionalProperties":false},"result":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"},"is":{"$ref":"#/$defs/expression"}},"required":["name","label","unit","is"],"additionalProperties":false},"entry":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"plausible":{"$ref":"#/$defs/range"},"gear":{"$ref":"#/$defs/name"}},"required":["name","label","unit","plausible"],"additionalProperties":false},"entryWay":{"type":"object","properties":{"id":{"$ref":"#/$defs/identifier"},"label":{"$ref":"#/$defs/label"},"hint":{"$ref":"#/$defs/line"},"entry":{"$ref":"#/$defs/entry"},"is":{"$ref":"#/$defs/expression"},"uncertainty":{"$ref":"#/$defs/expression"}},"required":["id","label","hint","is"],"additionalProperties":false},"readQuantity":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"},"gear":{"$ref":"#/$defs/name"},"plausible":{"$ref":"#/$defs/range"},"takes":{"type":"integer","minimum":1,"maximum":5},"ways":{"type":"array","items":{"$ref":"#/$defs/entryWay"},"minItems":1,"maxItems":10},"validity":{"$ref":"#/$defs/validity"}},"required":["name","label","unit","plausible"],"additionalProperties":false},"picture":{"type":"object","properties":{"sheet":{"$ref":"#/$defs/identifier"},"marks":{"type":"array","items":{"$ref":"#/$defs/identifier"},"maxItems":30},"labels":{"type":"object","propertyNames":{"pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"maxProperties":30,"additionalProperties":{"$ref":"#/$defs/label"}}},"required":["sheet","marks"],"additionalProperties":false},"disturbed":{"type":"object","properties":{"item":{"$ref":"#/$defs/identifier"},"label":{"$ref":"#/$defs/label"},"restore":{"$ref":"#/$defs/line"}},"required":["item","label","restore"],"additionalProperties":false},"option":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"ask":{"$ref":"#/$defs/line"},"alone":{"type":"boolean"},"picture":{"$ref":"#/$defs/picture"}},"required":["name","label"],"additionalProperties":false},"channel":{"type":"object","properties":{"name":{"enum":["gauge","manifold","boost","sound"]},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"gear":{"$ref":"#/$defs/name"},"needed":{"type":"boolean"}},"required":["name","label","unit","needed"],"additionalProperties":false},"foundTruth":{"type":"object","properties":{"what":{"enum":["noise-heard","noise-stopped"]},"name":{"$ref":"#/$defs/name"}},"required":["what","name"],"additionalProperties":false},"foundQuantity":{"type":"object","properties":{"what":{"enum":["seal-point","highest-gauge","manifold-gain","boost-gain","worst-gap"]},"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"}},"required":["what","name","label","unit"],"additionalProperties":false},"found":{"type":"object","discriminator":{"propertyName":"what"},"required":["what"],"oneOf":[{"$ref":"#/$defs/foundTruth"},{"$ref":"#/$defs/foundQuantity"}]},"driveWindow":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"what":{"$ref":"#/$defs/line"}},"required":["name","label","what"],"additionalProperties":false},"sentence":{"type":"object","properties":{"text":{"$ref":"#/$defs/paragraph"},"when":{"$ref":"#/$defs/expression"}},"required":["text"],"additionalProperties":false},"startStep":{"type":"object","properties":{"kind":{"const":"start"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"actionStep":{"type":"object","properties":{"kind":{"const":"action"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"readingStep":{"type":"object","properties":{"kind":{"const":"reading"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"reads":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","reads"],"additionalProperties":false},"choiceStep":{"type":"object","properties":{"kind":{"const":"choice"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"several":{"type":"boolean"},"options":{"type":"array","items":{"$ref":"#/$defs/option"},"minItems":1,"maxItems":30},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","options"],"additionalProperties":false},"listenStep":{"type":"object","properties":{"kind":{"const":"listen"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"channels":{"type":"array","items":{"$ref":"#/$defs/channel"},"minItems":1,"maxItems":4},"target":{"type":"number"},"finds":{"type":"array","items":{"$ref":"#/$defs/found"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","channels","target","finds"],"additionalProperties":false},"holdStep":{"type":"object","properties":{"kind":{"const":"hold"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"seconds":{"type":"integer","minimum":1,"maximum":86400},"begins":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"ends":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","seconds"],"additionalProperties":false},"waitStep":{"type":"object","properties":{"kind":{"const":"wait"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"reads":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"until":{"$ref":"#/$defs/expression"},"atLeastSeconds":{"type":"integer","minimum":1,"maximum":86400},"meanwhile":{"$ref":"#/$defs/paragraph"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","reads","until","meanwhile"],"additionalProperties":false},"codesStep":{"type":"object","properties":{"kind":{"const":"codes"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"comparedWith":{"$ref":"#/$defs/name"},"newCodes":{"$ref":"#/$defs/name"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name"],"additionalProperties":false},"driveStep":{"type":"object","properties":{"kind":{"const":"drive"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"windows":{"type":"array","items":{"$ref":"#/$defs/driveWindow"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","windows"],"additionalProperties":false},"computeStep":{"type":"object","properties":{"kind":{"const":"compute"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"restoreStep":{"type":"object","properties":{"kind":{"const":"restore"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"findingStep":{"type":"object","properties":{"kind":{"const":"finding"},"id":{"$ref":"#/$defs/name"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"result":{"enum":["in","out","too-close"]},"verdict":{"$ref":"#/$defs/paragraph"},"cause":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"correction":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"customer":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"nextProcedure":{"$ref":"#/$defs/procedureId"}},"required":["id","number","title","action","kind","result","verdict","cause","correction","customer"],"additionalProperties":false},"validity":{"type":"object","description":"Ends after minutes, or when one of the steps is done.","properties":{"minutes":{"type":"number","exclusiveMinimum":0,"maximum":1440},"until":{"type":"array","items":{"$ref":"#/$defs/identifier"},"minItems":1,"maxItems":30},"because":{"$ref":"#/$defs/line"}},"required":["because"],"anyOf":[{"required":["minutes"]},{"required":["until"]}],"additionalProperties":false},"releasePoint":{"type":"object","properties":{"by":{"enum":["lead","manager"]},"evidence":{"$ref":"#/$defs/line"}},"required":["by","evidence"],"additionalProperties":false},"verification":{"type":"object","properties":{"how":{"enum":["independent","concurrent"]},"what":{"$ref":"#/$defs/line"}},"required":["how","what"],"additionalProperties":false},"takenResult":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"},"from":{"$ref":"#/$defs/name"}},"required":["name","label","unit","from"],"additionalProperties":false},"calledFinding":{"type":"object","properties":{"finding":{"$ref":"#/$defs/name"},"name":{"$ref":"#/$defs/name"}},"required":["finding","name"],"additionalProperties":false},"rampStep":{"type":"object","properties":{"kind":{"const":"ramp"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"channels":{"type":"array","items":{"$ref":"#/$defs/channel"},"minItems":1,"maxItems":4},"target":{"type":"number"},"finds":{"type":"array","items":{"$ref":"#/$defs/foundQuantity"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","channels","target","finds"],"additionalProperties":false},"photoStep":{"type":"object","properties":{"kind":{"const":"photo"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"},"name":{"$ref":"#/$defs/name"},"shows":{"type":"array","items":{"$ref":"#/$defs/line"},"minItems":1,"maxItems":10}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","shows"],"additionalProperties":false},"callStep":{"type":"object","properties":{"kind":{"const":"call"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"procedure":{"$ref":"#/$defs/procedureId"},"version":{"type":"integer","minimum":1,"maximum":100000},"takes":{"type":"array","items":{"$ref":"#/$defs/takenResult"},"maxItems":30},"finds":{"type":"array","items":{"$ref":"#/$defs/calledFinding"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise","procedure","version","takes","finds"],"additionalProperties":false},"step":{"type":"object","discriminator":{"propertyName":"kind"},"required":["kind"],"oneOf":[{"$ref":"#/$defs/startStep"},{"$ref":"#/$defs/actionStep"},{"$ref":"#/$defs/readingStep"},{"$ref":"#/$defs/choiceStep"},{"$ref":"#/$defs/listenStep"},{"$ref":"#/$defs/holdStep"},{"$ref":"#/$defs/waitStep"},{"$ref":"#/$defs/codesStep"},{"$ref":"#/$defs/driveStep"},{"$ref":"#/$defs/computeStep"},{"$ref":"#/$defs/restoreStep"},{"$ref":"#/$defs/findingStep"},{"$ref":"#/$defs/rampStep"},{"$ref":"#/$defs/photoStep"},{"$ref":"#/$defs/callStep"}]}}};
+const schema19 = {"$schema":"https://json-schema.org/draft/2020-12/schema","$id":"procedure-document.schema.json","title":"Procedure document","description":"What a lead authors, a version freezes and a run walks. Agrees with procedure-document.ts; what lies between the parts (names, ways, restoring) is the lint's.","type":"object","properties":{"format":{"const":1},"id":{"$ref":"#/$defs/procedureId"},"title":{"$ref":"#/$defs/label"},"purpose":{"$ref":"#/$defs/paragraph"},"system":{"$ref":"#/$defs/label"},"appliesTo":{"$ref":"#/$defs/appliesTo"},"expectedMinutes":{"type":"integer","minimum":1,"maximum":1440},"useLevel":{"enum":["every-step","consulted"]},"pair":{"type":"boolean"},"gear":{"type":"array","items":{"$ref":"#/$defs/gearNeed"},"maxItems":30},"inputs":{"type":"array","items":{"$ref":"#/$defs/input"},"maxItems":100},"pictures":{"type":"array","items":{"$ref":"#/$defs/identifier"},"maxItems":30},"references":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":50},"deference":{"$ref":"#/$defs/paragraph"},"start":{"$ref":"#/$defs/startCard"},"limits":{"type":"array","items":{"$ref":"#/$defs/limit"},"maxItems":20},"stop":{"$ref":"#/$defs/stopSheet"},"steps":{"type":"array","items":{"$ref":"#/$defs/step"},"minItems":2,"maxItems":500}},"required":["format","id","title","purpose","system","appliesTo","expectedMinutes","useLevel","gear","inputs","pictures","references","deference","start","limits","stop","steps"],"additionalProperties":false,"$defs":{"unit":{"enum":["kPa","Pa","hPa","bar","psi","inHg","inH2O","mmHg","degC","degF","K","L/min","ft3/min","m3/s","g/s","kg/h","lb/min","L","cm3","m","km","mi","Nm","lbf.ft","V","mV","ohm","kohm","s","min","h","km/h","mph","%","1","rpm","dB"]},"sense":{"description":"Gauge and absolute are different kinds.","enum":["absolute","gauge"]},"name":{"description":"A name in expressions: letters and digits, first letter small.","type":"string","pattern":"^[a-z][A-Za-z0-9]*$","maxLength":60},"identifier":{"description":"Letters, digits and hyphens.","type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"procedureId":{"description":"Lower-case words joined by hyphens.","type":"string","pattern":"^[a-z0-9]+(-[a-z0-9]+)*$","maxLength":80},"decimal":{"description":"A figure as text, with the digits that it was given with.","type":"string","pattern":"^-?[0-9]+(\\.[0-9]+)?$","maxLength":20},"expression":{"description":"Text in the expression language.","type":"string","minLength":1,"maxLength":2000},"label":{"type":"string","minLength":1,"maxLength":120},"line":{"type":"string","minLength":1,"maxLength":300},"paragraph":{"description":"May be a template: {name} stands for a value of the run.","type":"string","minLength":1,"maxLength":1000},"range":{"type":"object","properties":{"low":{"type":"number"},"high":{"type":"number"}},"required":["low","high"],"additionalProperties":false},"caution":{"type":"object","properties":{"word":{"enum":["danger","warning","caution","notice"]},"text":{"$ref":"#/$defs/paragraph"}},"required":["word","text"],"additionalProperties":false},"appliesTo":{"type":"object","properties":{"codes":{"type":"array","items":{"type":"string","pattern":"^[PCBU][0-3][0-9A-F]{3}$"},"maxItems":100},"symptoms":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":30},"engine":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":30}},"required":["codes","symptoms","engine"],"additionalProperties":false},"instrumentKind":{"enum":["pressure-gauge","scan-tool","listening-probe","barometer","thermometer"]},"gearNeed":{"type":"object","properties":{"role":{"$ref":"#/$defs/name"},"kind":{"$ref":"#/$defs/instrumentKind"},"label":{"$ref":"#/$defs/label"},"optional":{"type":"boolean"},"shows":{"type":"object","properties":{"unit":{"$ref":"#/$defs/unit"},"low":{"type":"number"},"high":{"type":"number"},"resolution":{"type":"number","exclusiveMinimum":0}},"required":["unit","low","high","resolution"],"additionalProperties":false}},"required":["role","kind","label"],"additionalProperties":false},"input":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"from":{"enum":["site.elevation","visit.displacement","default"]},"default":{"$ref":"#/$defs/decimal"},"source":{"$ref":"#/$defs/line"}},"required":["name","label","unit","from","source"],"additionalProperties":false},"startCard":{"type":"object","properties":{"prerequisites":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":20},"stopActions":{"type":"array","items":{"$ref":"#/$defs/line"},"minItems":1,"maxItems":3},"people":{"$ref":"#/$defs/line"},"throughout":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12}},"required":["prerequisites","stopActions","people","throughout"],"additionalProperties":false},"limit":{"type":"object","properties":{"id":{"$ref":"#/$defs/identifier"},"holds":{"$ref":"#/$defs/expression"},"of":{"type":"array","items":{"$ref":"#/$defs/name"},"minItems":1,"maxItems":50},"says":{"$ref":"#/$defs/line"},"then":{"$ref":"#/$defs/line"}},"required":["id","holds","of","says","then"],"additionalProperties":false},"exit":{"type":"object","properties":{"to":{"description":"A step's id, or `verdict`.","type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"because":{"$ref":"#/$defs/line"},"verdict":{"$ref":"#/$defs/name"}},"required":["to","because"],"additionalProperties":false},"branch":{"type":"object","properties":{"to":{"description":"A step's id, or `verdict`.","type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"because":{"$ref":"#/$defs/line"},"verdict":{"$ref":"#/$defs/name"},"when":{"$ref":"#/$defs/expression"},"atMost":{"type":"integer","minimum":1,"maximum":20},"thenceforth":{"$ref":"#/$defs/exit"}},"required":["to","because","when"],"dependentRequired":{"atMost":["thenceforth"],"thenceforth":["atMost"]},"additionalProperties":false},"stopSheet":{"type":"object","properties":{"makeSafe":{"type":"array","items":{"$ref":"#/$defs/line"},"minItems":1,"maxItems":12},"exit":{"$ref":"#/$defs/exit"}},"required":["makeSafe","exit"],"additionalProperties":false},"band":{"type":"object","properties":{"low":{"$ref":"#/$defs/expression"},"high":{"$ref":"#/$defs/expression"},"when":{"$ref":"#/$defs/expression"},"unjudged":{"$ref":"#/$defs/line"},"source":{"$ref":"#/$defs/line"}},"required":["source"],"anyOf":[{"required":["low"]},{"required":["high"]}],"additionalProperties":false},"result":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"},"is":{"$ref":"#/$defs/expression"}},"required":["name","label","unit","is"],"additionalProperties":false},"entry":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"plausible":{"$ref":"#/$defs/range"},"gear":{"$ref":"#/$defs/name"}},"required":["name","label","unit","plausible"],"additionalProperties":false},"entryWay":{"type":"object","properties":{"id":{"$ref":"#/$defs/identifier"},"label":{"$ref":"#/$defs/label"},"hint":{"$ref":"#/$defs/line"},"entry":{"$ref":"#/$defs/entry"},"is":{"$ref":"#/$defs/expression"},"uncertainty":{"$ref":"#/$defs/expression"}},"required":["id","label","hint","is"],"additionalProperties":false},"readQuantity":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"},"gear":{"$ref":"#/$defs/name"},"plausible":{"$ref":"#/$defs/range"},"takes":{"type":"integer","minimum":1,"maximum":5},"ways":{"type":"array","items":{"$ref":"#/$defs/entryWay"},"minItems":1,"maxItems":10},"validity":{"$ref":"#/$defs/validity"}},"required":["name","label","unit","plausible"],"additionalProperties":false},"picture":{"type":"object","properties":{"sheet":{"$ref":"#/$defs/identifier"},"marks":{"type":"array","items":{"$ref":"#/$defs/identifier"},"maxItems":30},"labels":{"type":"object","propertyNames":{"pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"maxProperties":30,"additionalProperties":{"$ref":"#/$defs/label"}}},"required":["sheet","marks"],"additionalProperties":false},"disturbed":{"type":"object","properties":{"item":{"$ref":"#/$defs/identifier"},"label":{"$ref":"#/$defs/label"},"restore":{"$ref":"#/$defs/line"}},"required":["item","label","restore"],"additionalProperties":false},"option":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"ask":{"$ref":"#/$defs/line"},"alone":{"type":"boolean"},"picture":{"$ref":"#/$defs/picture"}},"required":["name","label"],"additionalProperties":false},"channel":{"type":"object","properties":{"name":{"enum":["gauge","manifold","boost","sound"]},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"gear":{"$ref":"#/$defs/name"},"needed":{"type":"boolean"}},"required":["name","label","unit","needed"],"additionalProperties":false},"foundTruth":{"type":"object","properties":{"what":{"enum":["noise-heard","noise-stopped"]},"name":{"$ref":"#/$defs/name"}},"required":["what","name"],"additionalProperties":false},"foundQuantity":{"type":"object","properties":{"what":{"enum":["seal-point","highest-gauge","rise-rate","manifold-gain","boost-gain","worst-gap"]},"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"}},"required":["what","name","label","unit"],"additionalProperties":false},"found":{"type":"object","discriminator":{"propertyName":"what"},"required":["what"],"oneOf":[{"$ref":"#/$defs/foundTruth"},{"$ref":"#/$defs/foundQuantity"}]},"driveWindow":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"what":{"$ref":"#/$defs/line"}},"required":["name","label","what"],"additionalProperties":false},"sentence":{"type":"object","properties":{"text":{"$ref":"#/$defs/paragraph"},"when":{"$ref":"#/$defs/expression"}},"required":["text"],"additionalProperties":false},"startStep":{"type":"object","properties":{"kind":{"const":"start"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"actionStep":{"type":"object","properties":{"kind":{"const":"action"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"readingStep":{"type":"object","properties":{"kind":{"const":"reading"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"reads":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","reads"],"additionalProperties":false},"choiceStep":{"type":"object","properties":{"kind":{"const":"choice"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"several":{"type":"boolean"},"options":{"type":"array","items":{"$ref":"#/$defs/option"},"minItems":1,"maxItems":30},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","options"],"additionalProperties":false},"listenStep":{"type":"object","properties":{"kind":{"const":"listen"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"channels":{"type":"array","items":{"$ref":"#/$defs/channel"},"minItems":1,"maxItems":4},"target":{"type":"number"},"finds":{"type":"array","items":{"$ref":"#/$defs/found"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","channels","target","finds"],"additionalProperties":false},"holdStep":{"type":"object","properties":{"kind":{"const":"hold"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"seconds":{"type":"integer","minimum":1,"maximum":86400},"begins":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"ends":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","seconds"],"additionalProperties":false},"waitStep":{"type":"object","properties":{"kind":{"const":"wait"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"reads":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"until":{"$ref":"#/$defs/expression"},"atLeastSeconds":{"type":"integer","minimum":1,"maximum":86400},"meanwhile":{"$ref":"#/$defs/paragraph"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","reads","until","meanwhile"],"additionalProperties":false},"codesStep":{"type":"object","properties":{"kind":{"const":"codes"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"comparedWith":{"$ref":"#/$defs/name"},"newCodes":{"$ref":"#/$defs/name"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name"],"additionalProperties":false},"driveStep":{"type":"object","properties":{"kind":{"const":"drive"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"windows":{"type":"array","items":{"$ref":"#/$defs/driveWindow"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","windows"],"additionalProperties":false},"computeStep":{"type":"object","properties":{"kind":{"const":"compute"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"restoreStep":{"type":"object","properties":{"kind":{"const":"restore"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"findingStep":{"type":"object","properties":{"kind":{"const":"finding"},"id":{"$ref":"#/$defs/name"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"result":{"enum":["in","out","too-close"]},"verdict":{"$ref":"#/$defs/paragraph"},"cause":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"correction":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"customer":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"nextProcedure":{"$ref":"#/$defs/procedureId"}},"required":["id","number","title","action","kind","result","verdict","cause","correction","customer"],"additionalProperties":false},"validity":{"type":"object","description":"Ends after minutes, or when one of the steps is done.","properties":{"minutes":{"type":"number","exclusiveMinimum":0,"maximum":1440},"until":{"type":"array","items":{"$ref":"#/$defs/identifier"},"minItems":1,"maxItems":30},"because":{"$ref":"#/$defs/line"}},"required":["because"],"anyOf":[{"required":["minutes"]},{"required":["until"]}],"additionalProperties":false},"releasePoint":{"type":"object","properties":{"by":{"enum":["lead","manager"]},"evidence":{"$ref":"#/$defs/line"}},"required":["by","evidence"],"additionalProperties":false},"verification":{"type":"object","properties":{"how":{"enum":["independent","concurrent"]},"what":{"$ref":"#/$defs/line"}},"required":["how","what"],"additionalProperties":false},"takenResult":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"},"from":{"$ref":"#/$defs/name"}},"required":["name","label","unit","from"],"additionalProperties":false},"calledFinding":{"type":"object","properties":{"finding":{"$ref":"#/$defs/name"},"name":{"$ref":"#/$defs/name"}},"required":["finding","name"],"additionalProperties":false},"rampStep":{"type":"object","properties":{"kind":{"const":"ramp"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"channels":{"type":"array","items":{"$ref":"#/$defs/channel"},"minItems":1,"maxItems":4},"target":{"type":"number"},"finds":{"type":"array","items":{"$ref":"#/$defs/foundQuantity"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","channels","target","finds"],"additionalProperties":false},"photoStep":{"type":"object","properties":{"kind":{"const":"photo"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"},"name":{"$ref":"#/$defs/name"},"shows":{"type":"array","items":{"$ref":"#/$defs/line"},"minItems":1,"maxItems":10}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","shows"],"additionalProperties":false},"callStep":{"type":"object","properties":{"kind":{"const":"call"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"procedure":{"$ref":"#/$defs/procedureId"},"version":{"type":"integer","minimum":1,"maximum":100000},"takes":{"type":"array","items":{"$ref":"#/$defs/takenResult"},"maxItems":30},"finds":{"type":"array","items":{"$ref":"#/$defs/calledFinding"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise","procedure","version","takes","finds"],"additionalProperties":false},"step":{"type":"object","discriminator":{"propertyName":"kind"},"required":["kind"],"oneOf":[{"$ref":"#/$defs/startStep"},{"$ref":"#/$defs/actionStep"},{"$ref":"#/$defs/readingStep"},{"$ref":"#/$defs/choiceStep"},{"$ref":"#/$defs/listenStep"},{"$ref":"#/$defs/holdStep"},{"$ref":"#/$defs/waitStep"},{"$ref":"#/$defs/codesStep"},{"$ref":"#/$defs/driveStep"},{"$ref":"#/$defs/computeStep"},{"$ref":"#/$defs/restoreStep"},{"$ref":"#/$defs/findingStep"},{"$ref":"#/$defs/rampStep"},{"$ref":"#/$defs/photoStep"},{"$ref":"#/$defs/callStep"}]}}};
 const func1 = Object.prototype.hasOwnProperty;
 const schema20 = {"description":"Lower-case words joined by hyphens.","type":"string","pattern":"^[a-z0-9]+(-[a-z0-9]+)*$","maxLength":80};
 const func2 = (text) => [...text].length;
@@ -5307,7 +5307,7 @@ return errors === 0;
 }
 validate260.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema61 = {"type":"object","properties":{"what":{"enum":["seal-point","highest-gauge","manifold-gain","boost-gain","worst-gap"]},"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"}},"required":["what","name","label","unit"],"additionalProperties":false};
+const schema61 = {"type":"object","properties":{"what":{"enum":["seal-point","highest-gauge","rise-rate","manifold-gain","boost-gain","worst-gap"]},"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"}},"required":["what","name","label","unit"],"additionalProperties":false};
 
 function validate262(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
@@ -5374,7 +5374,7 @@ errors++;
 }
 if(data.what !== undefined){
 let data0 = data.what;
-if(!(((((data0 === "seal-point") || (data0 === "highest-gauge")) || (data0 === "manifold-gain")) || (data0 === "boost-gain")) || (data0 === "worst-gap"))){
+if(!((((((data0 === "seal-point") || (data0 === "highest-gauge")) || (data0 === "rise-rate")) || (data0 === "manifold-gain")) || (data0 === "boost-gain")) || (data0 === "worst-gap"))){
 const err5 = {instancePath:instancePath+"/what",schemaPath:"#/properties/what/enum",keyword:"enum",params:{allowedValues: schema61.properties.what.enum},message:"must be equal to one of the allowed values"};
 if(vErrors === null){
 vErrors = [err5];
@@ -5481,6 +5481,15 @@ props0 = true;
 }
 }
 else if(tag0 === "highest-gauge"){
+if(!(validate262(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate262.errors : vErrors.concat(validate262.errors);
+errors = vErrors.length;
+}
+if(props0 !== true){
+props0 = true;
+}
+}
+else if(tag0 === "rise-rate"){
 if(!(validate262(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
 vErrors = vErrors === null ? validate262.errors : vErrors.concat(validate262.errors);
 errors = vErrors.length;
@@ -6108,10 +6117,10 @@ validate240.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false}
 
 const schema62 = {"type":"object","properties":{"kind":{"const":"hold"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"seconds":{"type":"integer","minimum":1,"maximum":86400},"begins":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"ends":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","seconds"],"additionalProperties":false};
 
-function validate280(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate281(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate280.evaluated;
+const evaluated0 = validate281.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -6640,17 +6649,17 @@ vErrors.push(err35);
 }
 errors++;
 }
-validate280.errors = vErrors;
+validate281.errors = vErrors;
 return errors === 0;
 }
-validate280.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate281.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema63 = {"type":"object","properties":{"kind":{"const":"wait"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"reads":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"until":{"$ref":"#/$defs/expression"},"atLeastSeconds":{"type":"integer","minimum":1,"maximum":86400},"meanwhile":{"$ref":"#/$defs/paragraph"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","reads","until","meanwhile"],"additionalProperties":false};
 
-function validate298(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate299(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate298.evaluated;
+const evaluated0 = validate299.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -7169,17 +7178,17 @@ vErrors.push(err34);
 }
 errors++;
 }
-validate298.errors = vErrors;
+validate299.errors = vErrors;
 return errors === 0;
 }
-validate298.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate299.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema64 = {"type":"object","properties":{"kind":{"const":"codes"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"comparedWith":{"$ref":"#/$defs/name"},"newCodes":{"$ref":"#/$defs/name"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name"],"additionalProperties":false};
 
-function validate317(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate318(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate317.evaluated;
+const evaluated0 = validate318.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -7607,18 +7616,18 @@ vErrors.push(err26);
 }
 errors++;
 }
-validate317.errors = vErrors;
+validate318.errors = vErrors;
 return errors === 0;
 }
-validate317.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate318.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema65 = {"type":"object","properties":{"kind":{"const":"drive"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"windows":{"type":"array","items":{"$ref":"#/$defs/driveWindow"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","windows"],"additionalProperties":false};
 const schema66 = {"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"what":{"$ref":"#/$defs/line"}},"required":["name","label","what"],"additionalProperties":false};
 
-function validate349(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate350(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate349.evaluated;
+const evaluated0 = validate350.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -7697,16 +7706,16 @@ vErrors.push(err4);
 }
 errors++;
 }
-validate349.errors = vErrors;
+validate350.errors = vErrors;
 return errors === 0;
 }
-validate349.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate350.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 
-function validate336(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate337(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate336.evaluated;
+const evaluated0 = validate337.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -8070,8 +8079,8 @@ errors++;
 }
 const len3 = data18.length;
 for(let i3=0; i3<len3; i3++){
-if(!(validate349(data18[i3], {instancePath:instancePath+"/windows/" + i3,parentData:data18,parentDataProperty:i3,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate349.errors : vErrors.concat(validate349.errors);
+if(!(validate350(data18[i3], {instancePath:instancePath+"/windows/" + i3,parentData:data18,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate350.errors : vErrors.concat(validate350.errors);
 errors = vErrors.length;
 }
 }
@@ -8174,17 +8183,17 @@ vErrors.push(err30);
 }
 errors++;
 }
-validate336.errors = vErrors;
+validate337.errors = vErrors;
 return errors === 0;
 }
-validate336.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate337.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema67 = {"type":"object","properties":{"kind":{"const":"compute"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false};
 
-function validate358(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate359(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate358.evaluated;
+const evaluated0 = validate359.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -8568,17 +8577,17 @@ vErrors.push(err24);
 }
 errors++;
 }
-validate358.errors = vErrors;
+validate359.errors = vErrors;
 return errors === 0;
 }
-validate358.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate359.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema68 = {"type":"object","properties":{"kind":{"const":"restore"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false};
 
-function validate373(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate374(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate373.evaluated;
+const evaluated0 = validate374.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -8962,18 +8971,18 @@ vErrors.push(err24);
 }
 errors++;
 }
-validate373.errors = vErrors;
+validate374.errors = vErrors;
 return errors === 0;
 }
-validate373.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate374.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema69 = {"type":"object","properties":{"kind":{"const":"finding"},"id":{"$ref":"#/$defs/name"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"result":{"enum":["in","out","too-close"]},"verdict":{"$ref":"#/$defs/paragraph"},"cause":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"correction":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"customer":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"nextProcedure":{"$ref":"#/$defs/procedureId"}},"required":["id","number","title","action","kind","result","verdict","cause","correction","customer"],"additionalProperties":false};
 const schema70 = {"type":"object","properties":{"text":{"$ref":"#/$defs/paragraph"},"when":{"$ref":"#/$defs/expression"}},"required":["text"],"additionalProperties":false};
 
-function validate401(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate402(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate401.evaluated;
+const evaluated0 = validate402.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -9026,16 +9035,16 @@ vErrors.push(err2);
 }
 errors++;
 }
-validate401.errors = vErrors;
+validate402.errors = vErrors;
 return errors === 0;
 }
-validate401.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate402.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 
-function validate388(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate389(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate388.evaluated;
+const evaluated0 = validate389.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -9412,8 +9421,8 @@ errors++;
 }
 const len3 = data19.length;
 for(let i3=0; i3<len3; i3++){
-if(!(validate401(data19[i3], {instancePath:instancePath+"/cause/" + i3,parentData:data19,parentDataProperty:i3,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate401.errors : vErrors.concat(validate401.errors);
+if(!(validate402(data19[i3], {instancePath:instancePath+"/cause/" + i3,parentData:data19,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate402.errors : vErrors.concat(validate402.errors);
 errors = vErrors.length;
 }
 }
@@ -9444,8 +9453,8 @@ errors++;
 }
 const len4 = data21.length;
 for(let i4=0; i4<len4; i4++){
-if(!(validate401(data21[i4], {instancePath:instancePath+"/correction/" + i4,parentData:data21,parentDataProperty:i4,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate401.errors : vErrors.concat(validate401.errors);
+if(!(validate402(data21[i4], {instancePath:instancePath+"/correction/" + i4,parentData:data21,parentDataProperty:i4,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate402.errors : vErrors.concat(validate402.errors);
 errors = vErrors.length;
 }
 }
@@ -9476,8 +9485,8 @@ errors++;
 }
 const len5 = data23.length;
 for(let i5=0; i5<len5; i5++){
-if(!(validate401(data23[i5], {instancePath:instancePath+"/customer/" + i5,parentData:data23,parentDataProperty:i5,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate401.errors : vErrors.concat(validate401.errors);
+if(!(validate402(data23[i5], {instancePath:instancePath+"/customer/" + i5,parentData:data23,parentDataProperty:i5,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate402.errors : vErrors.concat(validate402.errors);
 errors = vErrors.length;
 }
 }
@@ -9510,17 +9519,17 @@ vErrors.push(err31);
 }
 errors++;
 }
-validate388.errors = vErrors;
+validate389.errors = vErrors;
 return errors === 0;
 }
-validate388.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate389.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema71 = {"type":"object","properties":{"kind":{"const":"ramp"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"channels":{"type":"array","items":{"$ref":"#/$defs/channel"},"minItems":1,"maxItems":4},"target":{"type":"number"},"finds":{"type":"array","items":{"$ref":"#/$defs/foundQuantity"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","channels","target","finds"],"additionalProperties":false};
 
-function validate408(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate409(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate408.evaluated;
+const evaluated0 = validate409.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -10063,17 +10072,17 @@ vErrors.push(err36);
 }
 errors++;
 }
-validate408.errors = vErrors;
+validate409.errors = vErrors;
 return errors === 0;
 }
-validate408.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate409.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema72 = {"type":"object","properties":{"kind":{"const":"photo"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"},"name":{"$ref":"#/$defs/name"},"shows":{"type":"array","items":{"$ref":"#/$defs/line"},"minItems":1,"maxItems":10}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","shows"],"additionalProperties":false};
 
-function validate427(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate428(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate427.evaluated;
+const evaluated0 = validate428.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -10541,18 +10550,18 @@ vErrors.push(err30);
 }
 errors++;
 }
-validate427.errors = vErrors;
+validate428.errors = vErrors;
 return errors === 0;
 }
-validate427.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate428.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema73 = {"type":"object","properties":{"kind":{"const":"call"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"procedure":{"$ref":"#/$defs/procedureId"},"version":{"type":"integer","minimum":1,"maximum":100000},"takes":{"type":"array","items":{"$ref":"#/$defs/takenResult"},"maxItems":30},"finds":{"type":"array","items":{"$ref":"#/$defs/calledFinding"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise","procedure","version","takes","finds"],"additionalProperties":false};
 const schema74 = {"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"},"from":{"$ref":"#/$defs/name"}},"required":["name","label","unit","from"],"additionalProperties":false};
 
-function validate461(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate462(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate461.evaluated;
+const evaluated0 = validate462.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -10659,17 +10668,17 @@ vErrors.push(err5);
 }
 errors++;
 }
-validate461.errors = vErrors;
+validate462.errors = vErrors;
 return errors === 0;
 }
-validate461.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate462.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema75 = {"type":"object","properties":{"finding":{"$ref":"#/$defs/name"},"name":{"$ref":"#/$defs/name"}},"required":["finding","name"],"additionalProperties":false};
 
-function validate469(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate470(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate469.evaluated;
+const evaluated0 = validate470.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -10732,16 +10741,16 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate469.errors = vErrors;
+validate470.errors = vErrors;
 return errors === 0;
 }
-validate469.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate470.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 
-function validate445(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate446(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate445.evaluated;
+const evaluated0 = validate446.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -11210,8 +11219,8 @@ errors++;
 }
 const len5 = data24.length;
 for(let i5=0; i5<len5; i5++){
-if(!(validate461(data24[i5], {instancePath:instancePath+"/takes/" + i5,parentData:data24,parentDataProperty:i5,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate461.errors : vErrors.concat(validate461.errors);
+if(!(validate462(data24[i5], {instancePath:instancePath+"/takes/" + i5,parentData:data24,parentDataProperty:i5,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate462.errors : vErrors.concat(validate462.errors);
 errors = vErrors.length;
 }
 }
@@ -11242,8 +11251,8 @@ errors++;
 }
 const len6 = data26.length;
 for(let i6=0; i6<len6; i6++){
-if(!(validate469(data26[i6], {instancePath:instancePath+"/finds/" + i6,parentData:data26,parentDataProperty:i6,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate469.errors : vErrors.concat(validate469.errors);
+if(!(validate470(data26[i6], {instancePath:instancePath+"/finds/" + i6,parentData:data26,parentDataProperty:i6,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate470.errors : vErrors.concat(validate470.errors);
 errors = vErrors.length;
 }
 }
@@ -11270,10 +11279,10 @@ vErrors.push(err35);
 }
 errors++;
 }
-validate445.errors = vErrors;
+validate446.errors = vErrors;
 return errors === 0;
 }
-validate445.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate446.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 
 function validate111(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
@@ -11343,8 +11352,8 @@ props0 = true;
 }
 }
 else if(tag0 === "hold"){
-if(!(validate280(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate280.errors : vErrors.concat(validate280.errors);
+if(!(validate281(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate281.errors : vErrors.concat(validate281.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -11352,8 +11361,8 @@ props0 = true;
 }
 }
 else if(tag0 === "wait"){
-if(!(validate298(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate298.errors : vErrors.concat(validate298.errors);
+if(!(validate299(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate299.errors : vErrors.concat(validate299.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -11361,8 +11370,8 @@ props0 = true;
 }
 }
 else if(tag0 === "codes"){
-if(!(validate317(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate317.errors : vErrors.concat(validate317.errors);
+if(!(validate318(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate318.errors : vErrors.concat(validate318.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -11370,8 +11379,8 @@ props0 = true;
 }
 }
 else if(tag0 === "drive"){
-if(!(validate336(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate336.errors : vErrors.concat(validate336.errors);
+if(!(validate337(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate337.errors : vErrors.concat(validate337.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -11379,8 +11388,8 @@ props0 = true;
 }
 }
 else if(tag0 === "compute"){
-if(!(validate358(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate358.errors : vErrors.concat(validate358.errors);
+if(!(validate359(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate359.errors : vErrors.concat(validate359.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -11388,8 +11397,8 @@ props0 = true;
 }
 }
 else if(tag0 === "restore"){
-if(!(validate373(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate373.errors : vErrors.concat(validate373.errors);
+if(!(validate374(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate374.errors : vErrors.concat(validate374.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -11397,8 +11406,8 @@ props0 = true;
 }
 }
 else if(tag0 === "finding"){
-if(!(validate388(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate388.errors : vErrors.concat(validate388.errors);
+if(!(validate389(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate389.errors : vErrors.concat(validate389.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -11406,8 +11415,8 @@ props0 = true;
 }
 }
 else if(tag0 === "ramp"){
-if(!(validate408(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate408.errors : vErrors.concat(validate408.errors);
+if(!(validate409(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate409.errors : vErrors.concat(validate409.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -11415,8 +11424,8 @@ props0 = true;
 }
 }
 else if(tag0 === "photo"){
-if(!(validate427(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate427.errors : vErrors.concat(validate427.errors);
+if(!(validate428(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate428.errors : vErrors.concat(validate428.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -11424,8 +11433,8 @@ props0 = true;
 }
 }
 else if(tag0 === "call"){
-if(!(validate445(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate445.errors : vErrors.concat(validate445.errors);
+if(!(validate446(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate446.errors : vErrors.concat(validate446.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){

@@ -50,6 +50,7 @@ describe('crankcase valve seal, warm half, coarse gauge and coarse bus: too clos
       'boostPressure 94 +- 0.8 kPa: in',
       'sensorGap 0.0 +- 1.2 kPa: in',
       'sealPoint 3.0 +- 1.8 kPa: too-close',
+      'riseRate 0.09 +- 0.08 kPa: in',
       'manifoldGain 1.003 +- 0.007: in',
       'boostGain 0.984 +- 0.008: in',
       'worstGap -1.0 +- 0.9 kPa: too-close',

@@ -39,8 +39,8 @@ function evidence({ procedure, state, events }: RunWalk) {
   return { finding: state.finding, led: led.map(line), rest: rest.map(({ name }) => name) };
 }
 
-/** The six judged values of a run whose ramp had all channels and which are no evidence of its finding. */
-const sensors = ['worstGap', 'boostGain', 'manifoldGain', 'sensorGap', 'boostPressure', 'manifoldPressure'];
+/** The seven judged values of a run whose ramp had all channels and which are no evidence of its finding. */
+const sensors = ['worstGap', 'boostGain', 'manifoldGain', 'riseRate', 'sensorGap', 'boostPressure', 'manifoldPressure'];
 
 describe('the evidence of each finding of the crankcase valve seal: what led there, the newest decision first', () => {
   it('seals: quiet in the hold, and where the noise stopped', () => {
@@ -267,7 +267,7 @@ describe('the evidence of each finding of the crankcase valve seal: what led the
       'Noise at the probe: heard, and it stopped',
       'Seal point: 3.4 ± 0.3 kPa, in',
     ]);
-    expect(rest).toEqual(['worstGap', 'sensorGap', 'boostPressure', 'manifoldPressure']);
+    expect(rest).toEqual(['worstGap', 'riseRate', 'sensorGap', 'boostPressure', 'manifoldPressure']);
   });
 
   it('no place found: that nothing was heard to come out, and how far it was raised', () => {

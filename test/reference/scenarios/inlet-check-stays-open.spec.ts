@@ -30,6 +30,7 @@ describe('crankcase valve seal, cold half: the inlet-side check valve stays open
       'manifoldPressure 94.2 +- 0.6 kPa: in',
       'boostPressure 93.9 +- 0.6 kPa: in',
       'sensorGap 0.3 +- 0.8 kPa: in',
+      'riseRate 0.090 +- 0.008 kPa: in',
       'manifoldGain 0.999 +- 0.003: in',
       'boostGain 0.998 +- 0.003: in',
       'worstGap -0.50 +- 0.18 kPa: in',

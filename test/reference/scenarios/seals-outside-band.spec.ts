@@ -42,6 +42,7 @@ describe('crankcase valve seal, warm half: the noise stops outside the band', ()
       'boostPressure 93.9 +- 0.6 kPa: in',
       'sensorGap 0.3 +- 0.8 kPa: in',
       'sealPoint 6.2 +- 0.3 kPa: out',
+      'riseRate 0.090 +- 0.008 kPa: in',
       'manifoldGain 1.000 +- 0.002: in',
       'boostGain 1.001 +- 0.002: in',
       'worstGap -0.50 +- 0.19 kPa: in',

@@ -43,6 +43,7 @@ describe('crankcase valve seal, warm half: the valve seals', () => {
       'boostPressure 93.9 +- 0.6 kPa: in',
       'sensorGap 0.3 +- 0.8 kPa: in',
       'sealPoint 3.4 +- 0.3 kPa: in',
+      'riseRate 0.090 +- 0.008 kPa: in',
       'manifoldGain 1.000 +- 0.002: in',
       'boostGain 1.000 +- 0.002: in',
       'worstGap -0.6 +- 0.2 kPa: in',

@@ -77,9 +77,15 @@ describe('FindingEntry', () => {
     ]);
     const folded = wide.querySelector('details')!;
     expect(folded.open).toBe(false);
-    expect(folded.querySelector('summary')?.textContent).toBe('3 more readings');
+    expect(folded.querySelector('summary')?.textContent).toBe('4 more readings');
     const labels = [...wide.querySelectorAll('bay-judged-line .label')].map((label) => label.textContent);
-    expect(labels).toEqual(['Highest pressure reached', 'Manifold minus boost', 'Boost pressure', 'Manifold pressure']);
+    expect(labels).toEqual([
+      'Highest pressure reached',
+      'Fastest rise in a second',
+      'Manifold minus boost',
+      'Boost pressure',
+      'Manifold pressure',
+    ]);
   });
 
   it('tells what was edited from what was composed, and keeps both apart in the record', async () => {

@@ -161,4 +161,22 @@ describe('LiveControls', () => {
     expect(page.walk.state.current?.takes['gauge'] ?? []).toEqual([]);
     expect(page.walk.state.series['listening']).toBeUndefined();
   });
+
+  it('says that it is raised too fast, by the step\u2019s own band, and not before', async () => {
+    const page = await shown();
+    const remark = (): HTMLElement => elementOf(page.fixture).querySelector<HTMLElement>('.remark')!;
+    await tap(page, 'Gauge at zero: begin to raise');
+    for (const seconds of [4, 8, 12]) {
+      page.at(seconds);
+      await tap(page, '+ 0.5');
+    }
+    expect(remark().textContent).toMatch(/^rising 0\.1\d kPa a second/);
+    expect(remark().classList).not.toContain('too-fast');
+    for (const seconds of [14, 16, 18, 20]) {
+      page.at(seconds);
+      await tap(page, '+ 1');
+    }
+    expect(remark().textContent).toMatch(/^raised too fast, rising 0\.\d+ kPa a second/);
+    expect(remark().classList).toContain('too-fast');
+  });
 });

@@ -69,6 +69,14 @@ export class LiveControls {
     const { procedure, state } = this.run();
     return previewListening(procedure, state, this.series());
   });
+  /** Whether it was raised too fast so far, by the step's own band. */
+  protected readonly isTooFast = computed(() => {
+    const name = this.step().finds.find(({ what }) => what === 'rise-rate')?.name;
+    if (name === undefined || this.lacksPointAfter() || this.series().timeS.length < 3) return false;
+    const { procedure, state } = this.run();
+    const rise = previewListening(procedure, state, this.series())?.values.find((value) => value.name === name);
+    return rise?.judgement?.result === 'out' && rise.value > (rise.judgement.high ?? Infinity);
+  });
   /** The quantity that the mark gives, judged. */
   protected readonly found = computed(() => this.preview()?.values.find(({ judgement }) => judgement !== undefined));
   protected readonly remark = computed(() => {
@@ -79,6 +87,7 @@ export class LiveControls {
     const rate = riseRate(this.series());
     const beginsAt = this.beginsAt();
     return [
+      this.isTooFast() ? 'raised too fast' : undefined,
       rate === undefined ? undefined : `rising ${rate.toFixed(2)} ${shownUnit(this.unit())} a second`,
       beginsAt === undefined ? undefined : `noise since ${beginsAt.toFixed(0)} s`,
     ]
