@@ -30,6 +30,7 @@ describe('the rows of a claim', () => {
     expect(rest.flatMap((row) => (row.kind === 'value' ? [row.label] : []))).toEqual([
       'Seal point',
       'Highest pressure reached',
+      'Fastest rise in a second',
       'Manifold pressure per gauge',
       'Boost pressure per gauge',
       'Widest gap between the sensors',
