@@ -9,9 +9,9 @@ export interface JudgedReading {
   /** The expanded uncertainty U of the value; 0 or more. */
   readonly uncertainty: number;
   /** The band's lower edge; left out when there is none. */
-  readonly low?: number;
+  readonly low?: number | undefined;
   /** The band's upper edge, not below `low`; left out when there is none. */
-  readonly high?: number;
+  readonly high?: number | undefined;
 }
 
 /**

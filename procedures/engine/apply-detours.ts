@@ -4,17 +4,18 @@ import { requireCurrent, requireStep } from './apply-walk';
 import { RefusedEvent } from './refusal';
 import type { EventOf } from './run-event';
 import type { RunState } from './run-state';
+import { added, changedFrom, withoutEntry } from './state-changes';
 
 export function overrule(procedure: CompiledProcedure, state: RunState, event: EventOf<'branch-overruled'>): RunState {
   requireStep(procedure, event.data.step);
   const at = findLastIndex(state.walked, (claim) => claim.step === event.data.step && claim.way !== undefined);
   if (at < 0) throw new RefusedEvent('not-done', 'no way was taken from that step');
   const overruled = state.walked[at];
-  const walked = state.walked.map((claim, index) => (index > at ? { ...claim, isLeft: true } : claim));
+  const walked = changedFrom(state.walked, at + 1, (claim) => ({ ...claim, isLeft: true }));
   return {
     ...state,
     walked:
-      overruled === undefined ? walked : [...walked, { ...overruled, claimedSeq: event.seq, claimedAt: event.at }],
+      overruled === undefined ? walked : added(walked, { ...overruled, claimedSeq: event.seq, claimedAt: event.at }),
     overruled: event.data.step,
     verdict: overruled?.verdictBefore,
     finding: undefined,
@@ -29,11 +30,10 @@ export function redo(procedure: CompiledProcedure, state: RunState, event: Event
   const at = findLastIndex(state.walked, (claim) => claim.step === event.data.step);
   const earlier = state.walked[at];
   if (earlier === undefined) throw new RefusedEvent('not-done', 'that step was never walked');
-  const last = state.walked.length - 1;
   return {
     ...state,
-    walked: state.walked.map((claim, index) =>
-      index === last && claim.doneSeq === undefined ? { ...claim, isLeft: true } : claim,
+    walked: changedFrom(state.walked, state.walked.length - 1, (claim) =>
+      claim.doneSeq === undefined ? { ...claim, isLeft: true } : claim,
     ),
     verdict: earlier.verdictBefore,
     finding: undefined,
@@ -60,7 +60,7 @@ export function exceedLimit(procedure: CompiledProcedure, state: RunState, event
   return {
     ...dropLastTake(withoutSeries(procedure, state, stepId), name),
     alarm,
-    exceeded: [...state.exceeded, alarm],
+    exceeded: added(state.exceeded, alarm),
   };
 }
 
@@ -68,8 +68,7 @@ export function exceedLimit(procedure: CompiledProcedure, state: RunState, event
 function withoutSeries(procedure: CompiledProcedure, state: RunState, stepId: string): RunState {
   const step = requireStep(procedure, stepId);
   if (!isSeriesStep(step)) return state;
-  const { [step.name]: _gone, ...series } = state.series;
-  return { ...state, series };
+  return { ...state, series: withoutEntry(state.series, step.name) };
 }
 
 export function reachFinding(
@@ -94,6 +93,6 @@ export function reachFinding(
     due: undefined,
     verdict: finding.id,
     finding: finding.id,
-    walked: [...state.walked, claim],
+    walked: added(state.walked, claim),
   };
 }

@@ -3,6 +3,7 @@ import { requireCurrent, requireStep } from './apply-walk';
 import { cautionCount } from './cautions';
 import { newCodesAgainst } from './compare-codes';
 import { own } from './environment';
+import { added, withEntry } from './state-changes';
 import { RefusedEvent } from './refusal';
 import type { EventOf } from './run-event';
 import type { RunState } from './run-state';
@@ -29,21 +30,11 @@ export function recordCodes(procedure: CompiledProcedure, state: RunState, event
   }
   const entry = { step: codesStep.id, seq: event.seq, codes: event.data.codes };
   const earlier = codesStep.comparedWith === undefined ? undefined : own(state.codes, codesStep.comparedWith);
-  const truth =
-    codesStep.newCodes === undefined
-      ? {}
-      : {
-          [codesStep.newCodes]: {
-            holds: newCodesAgainst(earlier?.codes ?? [], event.data.codes).length > 0,
-            step: codesStep.id,
-            seq: event.seq,
-          },
-        };
-  return {
-    ...state,
-    codes: { ...state.codes, [codesStep.name]: entry },
-    truths: { ...state.truths, ...truth },
-  };
+  const codes = withEntry(state.codes, codesStep.name, entry);
+  if (codesStep.newCodes === undefined) return { ...state, codes };
+  const holds = newCodesAgainst(earlier?.codes ?? [], event.data.codes).length > 0;
+  const truth = { holds, step: codesStep.id, seq: event.seq };
+  return { ...state, codes, truths: withEntry(state.truths, codesStep.newCodes, truth) };
 }
 
 export function runTimer(state: RunState, event: EventOf<'timer-started'> | EventOf<'timer-ended'>): RunState {
@@ -73,12 +64,13 @@ export function makeChoice(procedure: CompiledProcedure, state: RunState, event:
   if (options.some((option) => !offered.some((candidate) => candidate.name === option))) {
     throw new RefusedEvent('unknown-name', `step ${chosen.number} does not offer that option`);
   }
-  const truths = Object.fromEntries(
-    offered.map((option) => [option.name, { holds: options.includes(option.name), step: stepId, seq: event.seq }]),
-  );
+  const truths = offered.reduce((record, option) => {
+    const holds = options.includes(option.name);
+    return withEntry(record, option.name, { holds, step: stepId, seq: event.seq });
+  }, state.truths);
   const labels = offered.filter((option) => options.includes(option.name)).map((option) => option.label);
   const choice = { step: stepId, seq: event.seq, options, labels, ...(text === undefined ? {} : { text }) };
-  return { ...state, truths: { ...state.truths, ...truths }, choices: { ...state.choices, [name]: choice } };
+  return { ...state, truths, choices: withEntry(state.choices, name, choice) };
 }
 
 export function keepPhoto(procedure: CompiledProcedure, state: RunState, event: EventOf<'photo-attached'>): RunState {
@@ -86,14 +78,8 @@ export function keepPhoto(procedure: CompiledProcedure, state: RunState, event: 
   const step = requireStep(procedure, stepId);
   requireCurrent(state, stepId);
   if (step.kind !== 'photo') throw new RefusedEvent('unknown-name', `step ${step.number} takes no photo`);
-  const photos = [...(own(state.photos, step.name)?.photos ?? []), { seq: event.seq, sha256, mediaType }];
-  return {
-    ...state,
-    photos: {
-      ...state.photos,
-      [step.name]: { step: stepId, seq: event.seq, photos },
-    },
-  };
+  const photos = added(own(state.photos, step.name)?.photos ?? [], { seq: event.seq, sha256, mediaType });
+  return { ...state, photos: withEntry(state.photos, step.name, { step: stepId, seq: event.seq, photos }) };
 }
 
 export function disturb(procedure: CompiledProcedure, state: RunState, event: EventOf<'disturbed'>): RunState {

@@ -22,6 +22,7 @@ import { RefusedEvent, type Refusal, type ReplayResult } from './refusal';
 import { requireGoing } from './require-going';
 import type { EventOf, RunEvent, RunHeader } from './run-event';
 import type { RunState } from './run-state';
+import { draftOf, type StateDraft } from './state-changes';
 
 /**
  * The run after one more event. Total and deterministic: whatever the event holds, it gives a state or a refusal that
@@ -45,13 +46,22 @@ export function applyEvent(
   if (broken !== undefined) return refused('chain', broken);
   try {
     const next = state === undefined ? open(procedure, header, event) : reduceEvent(procedure, state, event);
-    return { ok: true, state: { ...next, seq: event.seq, head: event.hash, lastAt: event.at } };
+    return { ok: true, state: placed(state, next, event) };
   } catch (error) {
     if (error instanceof RefusedEvent) return refused(error.code, error.message);
     // RangeError: a figure of the event is outside of what its calculation allows.
     if (error instanceof RangeError) return refused('malformed', error.message);
     throw error;
   }
+}
+
+/** The state as of the event that led to it. A reducer gives the state before, or a new one that nobody has seen. */
+export function placed(before: RunState | undefined, next: RunState, event: RunEvent): RunState {
+  const state = next === before ? draftOf(next) : (next as StateDraft);
+  state.seq = event.seq;
+  state.head = event.hash;
+  state.lastAt = event.at;
+  return state;
 }
 
 function open(procedure: CompiledProcedure, header: RunHeader, event: RunEvent): RunState {

@@ -2,12 +2,14 @@ import { unitKind } from '../calculations';
 import { isSeriesStep, type CompiledProcedure, type Step } from '../document';
 import { own } from './environment';
 import { parseDecimal } from './figures';
+import { added, withEntry, withoutEntry } from './state-changes';
 import { computedValue, measureQuantity } from './measure-quantity';
 import { channelsOf, foundQuantitiesOf, readQuantity, takesNeeded, wayOf } from './quantities';
 import { RefusedEvent } from './refusal';
 import { requireCurrent, requireStep } from './apply-walk';
 import type { EventOf, RunEventData } from './run-event';
 import type { NamedValue, RunState, SeriesState, Take } from './run-state';
+import { draftOf } from './state-changes';
 
 /** One take: when the quantity has all it needs, its value follows. */
 export function recordReading(
@@ -34,8 +36,9 @@ export function recordReading(
     ...(way === undefined ? {} : { way }),
     ...(timeS === undefined ? {} : { timeS }),
   };
-  const takes = [...(own(current.takes, name) ?? []), take];
-  const next = { ...state, current: { ...current, takes: { ...current.takes, [name]: takes } } };
+  const takes = added(own(current.takes, name) ?? [], take);
+  const next = draftOf(state);
+  next.current = { ...current, takes: { ...current.takes, [name]: takes } };
   return quantity === undefined ? next : remeasure(procedure, next, step, name, event);
 }
 
@@ -78,12 +81,15 @@ function remeasure(
 }
 
 function withValues(state: RunState, values: readonly NamedValue[]): RunState {
-  return { ...state, values: { ...state.values, ...Object.fromEntries(values.map((value) => [value.name, value])) } };
+  const next = draftOf(state);
+  for (const value of values) next.values = withEntry(next.values, value.name, value);
+  return next;
 }
 
 function withoutValue(state: RunState, name: string): RunState {
-  const { [name]: _gone, ...values } = state.values;
-  return { ...state, values };
+  const next = draftOf(state);
+  next.values = withoutEntry(state.values, name);
+  return next;
 }
 
 /** A take that went over a limit is evidence, but does not count as a reading. */
@@ -110,7 +116,7 @@ export function undo(procedure: CompiledProcedure, state: RunState, event: Event
   for (const [name, series] of Object.entries(state.series)) {
     const marks = Object.entries(series.marks).filter(([, mark]) => mark.seq !== event.data.seq);
     if (marks.length < Object.keys(series.marks).length) {
-      return { ...state, series: { ...state.series, [name]: { ...series, marks: Object.fromEntries(marks) } } };
+      return { ...state, series: withEntry(state.series, name, { ...series, marks: Object.fromEntries(marks) }) };
     }
   }
   throw new RefusedEvent('unknown-name', `event ${event.data.seq} gave nothing that the current step still holds`);
@@ -128,7 +134,7 @@ export function recordSeries(
   }
   const marks = own(state.series, step.name)?.marks ?? {};
   const series: SeriesState = { step: step.id, seq: event.seq, record: event.data, marks };
-  return { ...state, series: { ...state.series, [step.name]: series } };
+  return { ...state, series: withEntry(state.series, step.name, series) };
 }
 
 export function placeMark(procedure: CompiledProcedure, state: RunState, event: EventOf<'mark-placed'>): RunState {
@@ -141,11 +147,6 @@ export function placeMark(procedure: CompiledProcedure, state: RunState, event: 
   const series = own(state.series, name);
   const marks = { ...series?.marks, [mark]: { timeS, seq: event.seq, by } };
   const record = series?.record;
-  return {
-    ...state,
-    series: {
-      ...state.series,
-      [name]: { step: step.id, seq: series?.seq ?? event.seq, marks, ...(record === undefined ? {} : { record }) },
-    },
-  };
+  const marked = { step: step.id, seq: series?.seq ?? event.seq, marks, ...(record === undefined ? {} : { record }) };
+  return { ...state, series: withEntry(state.series, name, marked) };
 }

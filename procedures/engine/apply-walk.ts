@@ -7,7 +7,8 @@ import { endStaleReadings } from './validity';
 import { noiseTruthsOf, resultsOf } from './quantities';
 import { RefusedEvent } from './refusal';
 import type { EventOf } from './run-event';
-import type { CurrentStep, NamedValue, RunState, WalkedStep } from './run-state';
+import type { CurrentStep, RunState, WalkedStep } from './run-state';
+import { added, changedFrom, countedUp, draftOf, entriesOfStep, withEntry, withoutStep } from './state-changes';
 import { exitsOf, wayOn, type NamedExit } from './ways-on';
 import { worstOf } from './worst-result';
 
@@ -35,29 +36,17 @@ export function claimStep(procedure: CompiledProcedure, state: RunState, event: 
     claimedAt: event.at,
     ...(state.verdict === undefined ? {} : { verdictBefore: state.verdict }),
   };
-  return endStaleReadings(
-    procedure,
-    {
-      ...state,
-      current,
-      due: undefined,
-      walked: [...state.walked, claim],
-      values: without(state.values, step.id),
-      truths: without(state.truths, step.id),
-      choices: without(state.choices, step.id),
-      codes: without(state.codes, step.id),
-      series: without(state.series, step.id),
-      photos: without(state.photos, step.id),
-    },
-    event,
-  );
-}
-
-function without<T extends { readonly step: string }>(
-  record: Readonly<Record<string, T>>,
-  step: string,
-): Readonly<Record<string, T>> {
-  return Object.fromEntries(Object.entries(record).filter(([, entry]) => entry.step !== step));
+  const next = draftOf(state);
+  next.current = current;
+  next.due = undefined;
+  next.walked = added(state.walked, claim);
+  next.values = withoutStep(state.values, step.id);
+  next.truths = withoutStep(state.truths, step.id);
+  next.choices = withoutStep(state.choices, step.id);
+  next.codes = withoutStep(state.codes, step.id);
+  next.series = withoutStep(state.series, step.id);
+  next.photos = withoutStep(state.photos, step.id);
+  return endStaleReadings(procedure, next, event);
 }
 
 /** The step's action is done: its results follow, and what was judged in it makes its bead. */
@@ -70,45 +59,41 @@ export function finishStep(procedure: CompiledProcedure, state: RunState, event:
   const waits = waitsForSomebody(step, current);
   if (waits !== undefined) throw new RefusedEvent('not-done', `step ${step.number} still waits for its ${waits}`);
   const provenance = { step: step.id, seq: event.seq, at: event.at };
-  let next: RunState = {
-    ...state,
-    current: { ...current, isDone: true },
-    truths: {
-      ...state.truths,
-      ...noiseTruths(state, step, event.seq),
-      ...calledTruths(state, step, event.seq),
-    },
-  };
-  next = endStaleReadings(procedure, next, { ...event, done: step.id });
+  const done = draftOf(state);
+  done.current = { ...current, isDone: true };
+  done.truths = withNoiseTruths(state, step, event.seq);
+  for (const [name, truth] of Object.entries(calledTruths(state, step, event.seq))) {
+    done.truths = withEntry(done.truths, name, truth);
+  }
+  const next = draftOf(endStaleReadings(procedure, done, { seq: event.seq, at: event.at, done: step.id }));
   for (const value of calledValues(procedure, next, step, event.seq)) {
-    next = { ...next, values: { ...next.values, [value.name]: value } };
+    next.values = withEntry(next.values, value.name, value);
   }
   for (const result of resultsOf(step)) {
     const value = evaluateResult(procedure, next, result, provenance);
-    if (value !== undefined) next = { ...next, values: { ...next.values, [value.name]: value } };
+    if (value !== undefined) next.values = withEntry(next.values, value.name, value);
   }
-  const given = Object.values(next.values).filter((value: NamedValue) => value.step === step.id);
   const result = worstOf(
-    given.flatMap((value) => (value.judgement?.result === undefined ? [] : [value.judgement.result])),
+    entriesOfStep(next.values, step.id).flatMap(({ judgement }) =>
+      judgement?.result === undefined ? [] : [judgement.result],
+    ),
   );
-  return amendClaim(next, {
-    doneSeq: event.seq,
-    doneAt: event.at,
-    ...(result === undefined ? {} : { result }),
-  });
+  const { seq: doneSeq, at: doneAt } = event;
+  next.walked = amended(next.walked, (last) =>
+    result === undefined ? { ...last, doneSeq, doneAt } : { ...last, doneSeq, doneAt, result },
+  );
+  return next;
 }
 
 /** The marks of the step's series say whether there was a noise, and whether it stopped. */
-function noiseTruths(state: RunState, step: Step, seq: number): RunState['truths'] {
-  if (step.kind !== 'listen') return {};
+function withNoiseTruths(state: RunState, step: Step, seq: number): RunState['truths'] {
+  if (step.kind !== 'listen') return state.truths;
   const marks = own(state.series, step.name)?.marks ?? {};
   const stopped = marks['noise-stops'] !== undefined;
-  return Object.fromEntries(
-    noiseTruthsOf(step).map((found) => {
-      const holds = found.what === 'noise-stopped' ? stopped : stopped || marks['noise-begins'] !== undefined;
-      return [found.name, { holds, step: step.id, seq }];
-    }),
-  );
+  return noiseTruthsOf(step).reduce((truths, found) => {
+    const holds = found.what === 'noise-stopped' ? stopped : stopped || marks['noise-begins'] !== undefined;
+    return withEntry(truths, found.name, { holds, step: step.id, seq });
+  }, state.truths);
 }
 
 /** The way that was taken. A way that this build would not take is kept and noted as a discrepancy. */
@@ -133,25 +118,28 @@ export function takeBranch(procedure: CompiledProcedure, state: RunState, event:
   const discrepancies =
     expected === undefined || expected.exit === exit
       ? state.discrepancies
-      : [
-          ...state.discrepancies,
-          { seq: event.seq, what: `way on from step ${step.number}`, recorded: exit, computed: expected.exit },
-        ];
-  const counts = step.kind === 'call' ? withoutCountsOf(state.branchCounts, procedure, step.id) : state.branchCounts;
-  const counted = exit.startsWith('next-') ? `${step.id}/${exit}` : undefined;
-  const next: RunState = {
-    ...state,
-    status: isStop ? 'open' : state.status,
-    pause: isStop ? undefined : state.pause,
-    verdict: heading,
-    finding: undefined,
-    due: target,
-    overruled: undefined,
-    discrepancies,
-    branchCounts: counted === undefined ? counts : { ...counts, [counted]: (counts[counted] ?? 0) + 1 },
-    current: state.current === undefined ? undefined : { ...state.current, isDone: true },
-  };
-  return amendClaim(next, { way: { seq: event.seq, ...event.data } });
+      : added(state.discrepancies, {
+          seq: event.seq,
+          what: `way on from step ${step.number}`,
+          recorded: exit,
+          computed: expected.exit,
+        });
+  const way = { seq: event.seq, ...event.data };
+  const next = draftOf(state);
+  if (isStop) {
+    next.status = 'open';
+    next.pause = undefined;
+  }
+  next.verdict = heading;
+  next.finding = undefined;
+  next.due = target;
+  next.overruled = undefined;
+  next.discrepancies = discrepancies;
+  if (step.kind === 'call') next.branchCounts = withoutCountsOf(state.branchCounts, procedure, step.id);
+  if (exit.startsWith('next-')) next.branchCounts = countedUp(next.branchCounts, `${step.id}/${exit}`);
+  if (state.current?.isDone === false) next.current = { ...state.current, isDone: true };
+  next.walked = amended(state.walked, (last) => ({ ...last, way }));
+  return next;
 }
 
 /** A way is taken once from the step that is done, from the one overruled, or out of a stop; a bound is a bound. */
@@ -176,8 +164,11 @@ function requirePlaceForWay(state: RunState, step: Step, { exit, atMost }: Named
 
 /** Changes the newest claim. */
 export function amendClaim(state: RunState, change: Partial<WalkedStep>): RunState {
-  const last = state.walked.at(-1);
-  return last === undefined ? state : { ...state, walked: [...state.walked.slice(0, -1), { ...last, ...change }] };
+  return { ...state, walked: amended(state.walked, (last) => ({ ...last, ...change })) };
+}
+
+function amended(walked: RunState['walked'], change: (last: WalkedStep) => WalkedStep): RunState['walked'] {
+  return changedFrom(walked, walked.length - 1, change);
 }
 
 export function requireStep(procedure: CompiledProcedure, id: string): Step {

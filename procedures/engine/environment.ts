@@ -2,10 +2,12 @@ import { toBase } from '../calculations';
 import type { Environment, JudgedResult } from '../document';
 import type { NamedValue, RunState } from './run-state';
 
+const nothing = {};
+
 /** What expressions see of a run: its values, truths and inputs, with `extra` values laid over them. */
 export function environmentOf(
   state: Pick<RunState, 'values' | 'truths' | 'inputs' | 'verdict' | 'header'>,
-  extra: Readonly<Record<string, Pick<NamedValue, 'value' | 'uncertainty' | 'judgement'>>> = {},
+  extra: Readonly<Record<string, Pick<NamedValue, 'value' | 'uncertainty' | 'judgement'>>> = nothing,
 ): Environment {
   const value = (name: string): Pick<NamedValue, 'value' | 'uncertainty' | 'judgement'> | undefined => {
     const known = own(extra, name) ?? own(state.values, name);

@@ -62,7 +62,7 @@ export function uncertaintyText(uncertainty: number, unit: UnitName): string {
 /** Fixed decimals without a negative zero. */
 export function fixed(value: number, decimals: number): string {
   const text = value.toFixed(decimals);
-  return Number(text) === 0 ? text.replace('-', '') : text;
+  return text.startsWith('-') && Number(text) === 0 ? text.slice(1) : text;
 }
 
 /** At most so many decimals, without trailing zeros. */

@@ -48,9 +48,8 @@ export function readingUncertainty(
   spread: number,
   takes: number,
 ): number {
-  return expandedUncertainty({
-    ...(range === undefined ? {} : { accuracy: differenceToBase(range.accuracy, range.unit) }),
-    resolution,
-    ...(takes > 1 ? { repeatDeviation: spread, repeats: takes } : {}),
-  });
+  const accuracy = range === undefined ? 0 : differenceToBase(range.accuracy, range.unit);
+  return expandedUncertainty(
+    takes > 1 ? { accuracy, resolution, repeatDeviation: spread, repeats: takes } : { accuracy, resolution },
+  );
 }

@@ -1,6 +1,6 @@
 import { judge, type UnitName } from '../calculations';
 import type { CompiledProcedure, Environment, Quantity } from '../document';
-import { decimalsOf, fixed, shownIn } from './figures';
+import { decimalsOf, fixed, shownIn, trimmed } from './figures';
 import type { Judgement } from './run-state';
 
 /** What is held against a band: base units, expanded uncertainty (k = 2). */
@@ -28,26 +28,20 @@ export function judgeQuantity(
   const high = endOf(procedure, band.high, environment);
   // The ends may rest on readings of their own: the verdict is about the difference from them (JCGM 100:2008, 5.1.2).
   const guard = Math.hypot(uncertainty, Math.max(low?.uncertainty ?? 0, high?.uncertainty ?? 0));
-  const ends = {
-    ...(low === undefined ? {} : { low: low.value, lowText: endText(low, quantity.unit, decimals) }),
-    ...(high === undefined ? {} : { high: high.value, highText: endText(high, quantity.unit, decimals) }),
-    guard,
-    source: band.source,
-  };
+  const judgement: { -readonly [Field in keyof Judgement]: Judgement[Field] } = { guard, source: band.source };
+  if (low !== undefined) {
+    judgement.low = low.value;
+    judgement.lowText = endText(low, quantity.unit, decimals);
+  }
+  if (high !== undefined) {
+    judgement.high = high.value;
+    judgement.highText = endText(high, quantity.unit, decimals);
+  }
   const isMissing = (band.low !== undefined && low === undefined) || (band.high !== undefined && high === undefined);
   const isJudged = band.when === undefined || truthOf(procedure, band.when, environment) === true;
-  if (isMissing || !isJudged) {
-    return { ...ends, unjudged: band.unjudged ?? 'Not judged: what its band needs was not measured.' };
-  }
-  return {
-    ...ends,
-    result: judge({
-      value,
-      uncertainty: guard,
-      ...(low === undefined ? {} : { low: low.value }),
-      ...(high === undefined ? {} : { high: high.value }),
-    }),
-  };
+  if (isMissing || !isJudged) judgement.unjudged = band.unjudged ?? 'Not judged: what its band needs was not measured.';
+  else judgement.result = judge({ value, uncertainty: guard, low: judgement.low, high: judgement.high });
+  return judgement;
 }
 
 /** A band's end with its own expanded uncertainty, base units. */
@@ -80,6 +74,6 @@ export function truthOf(procedure: CompiledProcedure, source: string, environmen
 function endText(end: BandEnd, unit: UnitName, decimals: number | undefined): string {
   const shown = shownIn(end.value, unit);
   if (end.uncertainty > 0 && decimals !== undefined) return fixed(shown, decimals);
-  const text = String(Number(shown.toFixed(2)));
+  const text = trimmed(shown, 2);
   return decimalsOf(text) === 0 && !Number.isInteger(shown) ? fixed(shown, 1) : text;
 }

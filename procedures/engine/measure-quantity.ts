@@ -22,6 +22,9 @@ interface Measured {
   readonly uncertaintyText: string;
 }
 
+/** A named value that is still being put together. */
+type ValueDraft = { -readonly [Field in keyof NamedValue]: NamedValue[Field] };
+
 /**
  * The named values that the takes of one quantity give: the quantity itself and, where it was known by a way with an
  * entry, the entry. Empty when the way's expression cannot be evaluated.
@@ -117,7 +120,8 @@ function judged(
   const environment = environmentOf(state, { [quantity.name]: value });
   const decimals = readDecimals(state, quantity) ?? decimalsOf(measured.text);
   const judgement = judgeQuantity(procedure, quantity, { ...measured, decimals }, environment);
-  return judgement === undefined ? value : { ...value, judgement };
+  if (judgement !== undefined) value.judgement = judgement;
+  return value;
 }
 
 function named(
@@ -126,8 +130,8 @@ function named(
   take: Pick<Take, 'source' | 'way'>,
   takes: number,
   { step, seq, at }: Provenance,
-): NamedValue {
-  return {
+): ValueDraft {
+  const value: ValueDraft = {
     name: quantity.name,
     label: quantity.label,
     value: measured.value,
@@ -135,15 +139,16 @@ function named(
     text: measured.text,
     uncertaintyText: measured.uncertaintyText,
     unit: quantity.unit,
-    ...(quantity.sense === undefined ? {} : { sense: quantity.sense }),
     step,
     seq,
     at,
     source: take.source,
-    ...(take.way === undefined ? {} : { way: take.way }),
     takes,
     spread: measured.spread,
   };
+  if (quantity.sense !== undefined) value.sense = quantity.sense;
+  if (take.way !== undefined) value.way = take.way;
+  return value;
 }
 
 /** A value that came computed, with its uncertainty, both as texts in the quantity's unit. */

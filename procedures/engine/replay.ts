@@ -1,5 +1,6 @@
 import type { CompiledProcedure } from '../document';
 import { applyEvent } from './apply-event';
+import { changingInPlace } from './state-changes';
 import type { ReplayResult } from './refusal';
 import type { RunEvent, RunHeader } from './run-event';
 import type { RunState } from './run-state';
@@ -11,13 +12,15 @@ export function replay(
   events: readonly RunEvent[],
   from?: RunState,
 ): ReplayResult {
-  let state = from;
-  for (const event of events) {
-    const result = applyEvent(procedure, header, state, event);
-    if (!result.ok) return result;
-    state = result.state;
-  }
-  return state === undefined
-    ? { ok: false, refusal: { seq: 1, code: 'not-opened', what: 'the run has no events' } }
-    : { ok: true, state };
+  return changingInPlace(() => {
+    let state = from;
+    for (const event of events) {
+      const result = applyEvent(procedure, header, state, event);
+      if (!result.ok) return result;
+      state = result.state;
+    }
+    return state === undefined
+      ? { ok: false, refusal: { seq: 1, code: 'not-opened', what: 'the run has no events' } }
+      : { ok: true, state };
+  });
 }

@@ -2,6 +2,7 @@ import type { CompiledProcedure, Validity } from '../document';
 import { own } from './environment';
 import { readsOf } from './quantities';
 import type { NamedValue, RunState } from './run-state';
+import { draftOf, withEntry } from './state-changes';
 
 /** The moment at which readings are asked whether they still hold. */
 interface Moment {
@@ -31,15 +32,12 @@ export function endStaleReadings(procedure: CompiledProcedure, state: RunState, 
   for (const [name, validity] of endingReadings(procedure)) {
     const value = own(values, name);
     if (value === undefined || value.stale !== undefined || !isOver(validity, value, moment)) continue;
-    values = {
-      ...values,
-      [name]: {
-        ...value,
-        stale: { seq: moment.seq, because: validity.because },
-      },
-    };
+    values = withEntry(values, name, { ...value, stale: { seq: moment.seq, because: validity.because } });
   }
-  return values === state.values ? state : { ...state, values };
+  if (values === state.values) return state;
+  const next = draftOf(state);
+  next.values = values;
+  return next;
 }
 
 function isOver({ minutes, until }: Validity, value: NamedValue, { at, done }: Moment): boolean {

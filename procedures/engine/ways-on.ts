@@ -13,8 +13,19 @@ export interface NamedExit extends Exit {
   readonly atMost?: number;
 }
 
+/** A procedure's exits by step: a replay asks for them at every branch. */
+const knownExits = new WeakMap<CompiledProcedure, Map<Step, readonly NamedExit[]>>();
+
 /** Every exit that the author gave a step, in the order in which they are tried. */
 export function exitsOf(procedure: CompiledProcedure, step: Step): readonly NamedExit[] {
+  let ofProcedure = knownExits.get(procedure);
+  if (ofProcedure === undefined) knownExits.set(procedure, (ofProcedure = new Map()));
+  let exits = ofProcedure.get(step);
+  if (exits === undefined) ofProcedure.set(step, (exits = namedExits(procedure, step)));
+  return exits;
+}
+
+function namedExits(procedure: CompiledProcedure, step: Step): readonly NamedExit[] {
   const stop: NamedExit = { ...procedure.document.stop.exit, exit: 'stop' };
   if (step.kind === 'finding') return [stop];
   const branches = (step.next ?? []).flatMap((branch, index): NamedExit[] => {

@@ -60,6 +60,9 @@ function valueNames(expression: Expression): readonly string[] {
   return [...names];
 }
 
+/** Written out, not spread: judging a reading does this for every name of its band's ends. */
 function withNumber(environment: Environment, changed: string, value: number): Environment {
-  return { ...environment, number: (name) => (name === changed ? value : environment.number(name)) };
+  const { truth, result, uncertainty, isMeasured } = environment;
+  const number = (name: string): number | undefined => (name === changed ? value : environment.number(name));
+  return { number, truth, result, uncertainty, isMeasured };
 }
