@@ -1,5 +1,6 @@
-import { medianInPlace } from './median';
 import { requireInRange } from './argument-range';
+import { requireSeriesPair } from './finite-series';
+import { medianInPlace } from './median';
 
 /** A straight line by least squares: y = intercept + slope x. */
 export interface LineFit {
@@ -13,17 +14,6 @@ export interface LineFit {
   readonly residualDeviation: number;
   /** 1 - residual / total sum of squares; 1 for points that all lie on a level line. */
   readonly rSquared: number;
-}
-
-/** Checks two series of one length, all finite; gives the length. */
-function requireSeries(x: ArrayLike<number>, y: ArrayLike<number>, atLeast: number): number {
-  requireInRange('length of x', x.length, { low: atLeast });
-  if (y.length !== x.length) throw new RangeError(`length of y is ${y.length}; allowed: ${x.length}, as of x`);
-  for (let index = 0; index < x.length; index++) {
-    if (!Number.isFinite(x[index])) throw new RangeError(`x[${index}] is ${x[index]}; allowed: a finite number`);
-    if (!Number.isFinite(y[index])) throw new RangeError(`y[${index}] is ${y[index]}; allowed: a finite number`);
-  }
-  return x.length;
 }
 
 /** The mean in two passes: the second takes back what the first lost to rounding. */
@@ -62,7 +52,7 @@ const at = (values: ArrayLike<number>, index: number): number => values[index] ?
  * @example fitLine([0, 1, 2], [1, 3, 5]) // slope 2, intercept 1, rSquared 1
  */
 export function fitLine(x: ArrayLike<number>, y: ArrayLike<number>): LineFit {
-  const n = requireSeries(x, y, 3);
+  const n = requireSeriesPair(['x', x], ['y', y], 3);
   const meanX = meanOf(x);
   const meanY = meanOf(y);
   const offX = (index: number): number => at(x, index) - meanX;
@@ -118,7 +108,7 @@ function drawer(seed: number): (below: number) => number {
  * @example fitRobustLine([0, 1, 2, 3], [0, 1, 2, 30]) // slope 1.5, intercept 0
  */
 export function fitRobustLine(x: ArrayLike<number>, y: ArrayLike<number>): { slope: number; intercept: number } {
-  const n = requireSeries(x, y, 2);
+  const n = requireSeriesPair(['x', x], ['y', y], 2);
   const slopes = n <= exactPointLimit ? allSlopes(x, y, n) : sampledSlopes(x, y, n);
   if (slopes.length === 0) throw new RangeError(`x are all ${at(x, 0)}; allowed: at least two different values`);
   const slope = requireInRange('slope', medianInPlace(slopes));

@@ -1,4 +1,5 @@
 import { requireInRange } from './argument-range';
+import { requireSeriesPair } from './finite-series';
 import { fitLine } from './fit';
 
 /** Readings of one moment at one index: the test gauge and two sensors of absolute pressure. */
@@ -34,6 +35,8 @@ export interface SensorTracking {
 }
 
 const coverageFactor = 2;
+/** Two readings leave nothing to judge a line by. */
+const fewestReadings = 3;
 
 /** The gap's line over the gauge's pressure: the gauge is the finest of the three, so it stands on the x axis. */
 function trackingOf(gaugeKpa: readonly number[], gapsKpa: readonly number[]): Tracking {
@@ -63,10 +66,10 @@ function trackingOf(gaugeKpa: readonly number[], gapsKpa: readonly number[]): Tr
  */
 export function trackSensors({ gaugeKpa, firstKpa, secondKpa, stationKpa }: SensorSeries): SensorTracking {
   requireInRange('stationKpa', stationKpa, { low: 0, aboveLow: true });
-  for (const [name, series] of Object.entries({ firstKpa, secondKpa })) {
-    const allowed = gaugeKpa.length;
-    if (series.length !== allowed)
-      throw new RangeError(`length of ${name} is ${series.length}; allowed: ${allowed}, as of gaugeKpa`);
+  requireSeriesPair(['gaugeKpa', gaugeKpa], ['firstKpa', firstKpa], fewestReadings);
+  requireSeriesPair(['gaugeKpa', gaugeKpa], ['secondKpa', secondKpa], fewestReadings);
+  if (gaugeKpa.every((gauge) => gauge === gaugeKpa[0])) {
+    throw new RangeError(`gaugeKpa are all ${gaugeKpa[0]}; allowed: at least two different values`);
   }
   const gapsTo = (sensorKpa: readonly number[], otherKpa: readonly number[]): number[] =>
     sensorKpa.map((sensor, index) => sensor - (otherKpa[index] ?? NaN));

@@ -109,7 +109,7 @@ export type UnitName = keyof typeof units;
 
 /** Whether the text names a unit of the table. */
 export function isUnit(text: string): text is UnitName {
-  return Object.hasOwn(units, text);
+  return typeof text === 'string' && Object.hasOwn(units, text);
 }
 
 /**
@@ -118,7 +118,7 @@ export function isUnit(text: string): text is UnitName {
  * Throws RangeError on a name that is not in the table.
  */
 export function unitKind(name: UnitName): UnitKind {
-  return definitionOf(name).kind;
+  return definitionOf('name', name).kind;
 }
 
 /**
@@ -127,7 +127,7 @@ export function unitKind(name: UnitName): UnitKind {
  * Throws RangeError on a value that is not finite, on a temperature below absolute zero and on an unknown unit.
  */
 export function toBase(value: number, from: UnitName): number {
-  const { kind, scale, offset } = definitionOf(from);
+  const { kind, scale, offset } = definitionOf('from', from);
   requireInRange(`value in ${from}`, value, kind === 'temperature' ? { low: -offset } : {});
   return requireInRange(`value in ${from}, in its base unit`, (value + offset) * scale);
 }
@@ -138,8 +138,8 @@ export function toBase(value: number, from: UnitName): number {
  * Throws RangeError on a value that is not finite, on a temperature below 0 K and on an unknown unit.
  */
 export function fromBase(baseValue: number, to: UnitName): number {
-  const { kind, scale, offset } = definitionOf(to);
-  requireInRange('base value', baseValue, kind === 'temperature' ? { low: 0 } : {});
+  const { kind, scale, offset } = definitionOf('to', to);
+  requireInRange('baseValue', baseValue, kind === 'temperature' ? { low: 0 } : {});
   return requireInRange(`value in ${to}`, baseValue / scale - offset);
 }
 
@@ -163,7 +163,7 @@ export function convert(value: number, from: UnitName, to: UnitName): number {
  * Throws RangeError on a value that is not finite and on an unknown unit.
  */
 export function differenceToBase(difference: number, from: UnitName): number {
-  return requireInRange(`difference in ${from}`, difference) * definitionOf(from).scale;
+  return requireInRange(`difference in ${from}`, difference) * definitionOf('from', from).scale;
 }
 
 /**
@@ -174,7 +174,7 @@ export function differenceToBase(difference: number, from: UnitName): number {
 export function differenceFromBase(baseDifference: number, to: UnitName): number {
   return requireInRange(
     `difference in ${to}`,
-    requireInRange('base difference', baseDifference) / definitionOf(to).scale,
+    requireInRange('baseDifference', baseDifference) / definitionOf('to', to).scale,
   );
 }
 
@@ -190,14 +190,14 @@ export function convertDifference(difference: number, from: UnitName, to: UnitNa
 }
 
 /** Names come from documents and files, so the type alone does not vouch for them. */
-function definitionOf(name: UnitName): UnitDefinition {
-  if (!isUnit(name)) throw new RangeError(`unit is ${String(name)}; allowed: ${Object.keys(units).join(', ')}`);
+function definitionOf(argument: string, name: UnitName): UnitDefinition {
+  if (!isUnit(name)) throw new RangeError(`${argument} is ${String(name)}; allowed: ${Object.keys(units).join(', ')}`);
   return units[name];
 }
 
 function requireOneKind(from: UnitName, to: UnitName): void {
-  const { kind } = definitionOf(from);
-  if (definitionOf(to).kind !== kind) {
+  const { kind } = definitionOf('from', from);
+  if (definitionOf('to', to).kind !== kind) {
     throw new RangeError(`to is ${to} (${unitKind(to)}); allowed: a unit of ${kind}, as ${from} is`);
   }
 }

@@ -40,8 +40,8 @@ const valueOf = (character: string): number => letterValues[letters.indexOf(char
  * @example vinCheckDigit('1ZZBT4CK4LR204817') // '4'
  */
 export function vinCheckDigit(vin: string): string {
-  if (!vinPattern.test(vin)) {
-    throw new RangeError(`vin is ${vin}; allowed: 17 digits and upper-case letters without I, O and Q`);
+  if (typeof vin !== 'string' || !vinPattern.test(vin)) {
+    throw new RangeError(`vin is ${String(vin)}; allowed: 17 digits and upper-case letters without I, O and Q`);
   }
   const sum = weights.reduce((total, weight, index) => total + weight * valueOf(vin.charAt(index)), 0);
   const remainder = sum % 11;
