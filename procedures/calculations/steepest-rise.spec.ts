@@ -41,4 +41,13 @@ describe('steepestRise', () => {
   it('is below zero where the pressure only fell', () => {
     expect(steepestRise(ramp(...times(12, -0.1)))?.kpaPerS).toBeCloseTo(-0.1, 12);
   });
+
+  it('refuses what is no number and a clock that runs backwards', () => {
+    const good = ramp(...times(12, 0.1));
+    expect(() => steepestRise([...good, { timeS: 13, gaugeKpa: NaN }])).toThrow('gaugeKpa of sample 13 is NaN');
+    expect(() => steepestRise([...good, { timeS: 11, gaugeKpa: 1 }])).toThrow(
+      'timeS of sample 13 is 11; allowed: 12 or more',
+    );
+    expect(() => steepestRise([{ timeS: -Infinity, gaugeKpa: 1 }, ...good])).toThrow('timeS of sample 0 is -Infinity');
+  });
 });

@@ -101,6 +101,12 @@ export const readingFunctions: Readonly<Record<string, ExportedFunction>> = {
     optional: ['resolutionKpa'],
     samples: { samples: ['timeS', 'gaugeKpa', 'mapKpa', 'soundDb'] },
   },
+  steepestRise: {
+    valid: fc.record({ samples: ramp }),
+    call: inOrder('steepestRise', 'samples'),
+    numbers: {},
+    samples: { samples: ['timeS', 'gaugeKpa'] },
+  },
   expandedUncertainty: {
     valid: fc.record({
       accuracy: fc.option(between(0, 1e6), { nil: undefined }),
