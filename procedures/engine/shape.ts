@@ -28,12 +28,13 @@ export function oneOf(...allowed: readonly unknown[]): Shape {
   return (value, at) => (allowed.includes(value) ? undefined : `${at} is none of ${allowed.join(', ')}`);
 }
 
+// The place of a member is put together only where something is wrong with it: every event of a replay is checked.
+
 export function listOf(entry: Shape): Shape {
   return (value, at) => {
     if (!Array.isArray(value)) return `${at} is no list`;
     for (let index = 0; index < value.length; index += 1) {
-      const problem = entry(value[index], `${at}/${index}`);
-      if (problem !== undefined) return problem;
+      if (entry(value[index], '') !== undefined) return entry(value[index], `${at}/${index}`);
     }
     return undefined;
   };
@@ -44,8 +45,7 @@ export function recordOf(entry: Shape): Shape {
   return (value, at) => {
     if (!isObject(value)) return `${at} is no object`;
     for (const name of Object.keys(value)) {
-      const problem = entry(value[name], `${at}/${name}`);
-      if (problem !== undefined) return problem;
+      if (entry(value[name], '') !== undefined) return entry(value[name], `${at}/${name}`);
     }
     return undefined;
   };
@@ -61,9 +61,11 @@ export function objectOf(members: Readonly<Record<string, Shape>>): Shape {
     if (!isObject(value)) return `${at} is no object`;
     for (const { name, isOptional, shape } of needed) {
       const member = Object.hasOwn(value, name) ? value[name] : undefined;
-      if (member === undefined && isOptional) continue;
-      const problem = member === undefined ? `${at}/${name} is missing` : shape(member, `${at}/${name}`);
-      if (problem !== undefined) return problem;
+      if (member === undefined) {
+        if (isOptional) continue;
+        return `${at}/${name} is missing`;
+      }
+      if (shape(member, '') !== undefined) return shape(member, `${at}/${name}`);
     }
     return undefined;
   };
