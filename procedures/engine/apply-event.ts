@@ -97,6 +97,7 @@ function open(procedure: CompiledProcedure, header: RunHeader, event: RunEvent):
     codes: {},
     choices: {},
     photos: {},
+    clockJumps: [],
     overruled: undefined,
     branchCounts: {},
     exceeded: [],
@@ -155,6 +156,8 @@ export function reduceEvent(procedure: CompiledProcedure, state: RunState, event
       return runTimer(state, event);
     case 'choice-made':
       return makeChoice(procedure, state, event);
+    case 'clock-jumped':
+      return { ...state, clockJumps: [...state.clockJumps, { seq: event.seq, byMs: event.data.byMs }] };
     case 'disturbed':
       return disturb(procedure, state, event);
     case 'restored':

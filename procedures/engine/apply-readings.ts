@@ -7,6 +7,7 @@ import { computedValue, measureQuantity } from './measure-quantity';
 import { channelsOf, foundQuantitiesOf, readQuantity, takesNeeded, wayOf } from './quantities';
 import { RefusedEvent } from './refusal';
 import { requireCurrent, requireStep } from './apply-walk';
+import { endStaleReadings } from './validity';
 import type { EventOf, RunEventData } from './run-event';
 import type { NamedValue, RunState, SeriesState, Take } from './run-state';
 import { draftOf } from './state-changes';
@@ -37,8 +38,9 @@ export function recordReading(
     ...(timeS === undefined ? {} : { timeS }),
   };
   const takes = added(own(current.takes, name) ?? [], take);
-  const next = draftOf(state);
-  next.current = { ...current, takes: { ...current.takes, [name]: takes } };
+  const draft = draftOf(state);
+  draft.current = { ...current, takes: { ...current.takes, [name]: takes } };
+  const next = endStaleReadings(procedure, draft, event);
   return quantity === undefined ? next : remeasure(procedure, next, step, name, event);
 }
 

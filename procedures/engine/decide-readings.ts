@@ -2,7 +2,9 @@ import { convert, isUnit, unitKind, type UnitName } from '../calculations';
 import type { Channel, EntryWay, ReadQuantity, Step } from '../document';
 import { CannotDo, type Drafting } from './drafting';
 import { parseDecimal, tidyDecimal } from './figures';
-import { completeStep } from './go-on';
+import { completeStep, takeAgain } from './go-on';
+import { staleAmong } from './validity';
+import { waitsForSomebody } from './waits-for-somebody';
 import { rangeFor } from './instrument-uncertainty';
 import { truthOf } from './judge-quantity';
 import { environmentOf, own } from './environment';
@@ -17,6 +19,8 @@ type Record = Extract<RunCommand, { do: 'record' }>;
 
 /** What a value is entered against: a quantity, the entry of one of its ways, or a channel of a ramp. */
 interface Target {
+  /** Of the quantity, of its way's entry, or of the channel. */
+  readonly name: string;
   readonly label: string;
   readonly unit: UnitName;
   readonly sense?: 'absolute' | 'gauge';
@@ -47,19 +51,33 @@ export function recordTake(drafting: Drafting, step: Step, command: Record): voi
       ...(command.timeS === undefined ? {} : { timeS: command.timeS }),
     },
   });
-  const entered = {
-    name: command.name,
-    value,
-    unit: command.unit,
-    ...(target.sense === undefined ? {} : { sense: target.sense }),
-  };
-  const broken = brokenLimit(drafting.procedure, drafting.state, entered);
-  if (broken !== undefined) {
+  requireFreshBasis(drafting, step, command);
+  const sense = target.sense === undefined ? {} : { sense: target.sense };
+  for (const name of new Set([target.name, command.name])) {
+    const broken = brokenLimit(drafting.procedure, drafting.state, { name, value, unit: command.unit, ...sense });
+    if (broken === undefined) continue;
     const figure = { text, unit: command.unit };
     drafting.add({ type: 'limit-exceeded', data: { step: step.id, limit: broken.id, name: command.name, figure } });
     return;
   }
-  if (isComplete(drafting, step)) completeStep(drafting, step);
+  finishEntry(drafting, step);
+}
+
+/** Goes on with what is complete; a step that waits for somebody else keeps its readings and waits. */
+function finishEntry(drafting: Drafting, step: Step): void {
+  if (waitsForSomebody(step, drafting.state.current) !== undefined || !isComplete(drafting, step)) return;
+  completeStep(drafting, step);
+}
+
+/** What a reading is judged against, and what its way computes with, has to hold. */
+function requireFreshBasis({ procedure, state }: Drafting, step: Step, command: Record): void {
+  const quantity = readQuantity(step, command.name);
+  const way = quantity === undefined ? undefined : wayOf(quantity, command.way);
+  const { low, high, when } = quantity?.band ?? {};
+  const sources = [low, high, when, way?.is, way?.uncertainty].filter((source) => source !== undefined);
+  const names = sources.flatMap((source) => procedure.expression(source).names);
+  const stale = staleAmong(state, names)[0];
+  if (stale !== undefined) throw takeAgain(procedure, stale);
 }
 
 /** The quantity and the way by which it follows from the run's inputs alone, where the command names such a way. */
@@ -97,7 +115,7 @@ function recordDerived(
     uncertainty: value.uncertaintyText,
   } as const;
   drafting.add({ type: 'reading-recorded', data });
-  if (isComplete(drafting, step)) completeStep(drafting, step);
+  finishEntry(drafting, step);
 }
 
 /** The newest take of this claim no longer counts; the record keeps it, with the reason that the person gave. */
@@ -150,8 +168,9 @@ function quantityTarget(quantity: ReadQuantity, wayId: string | undefined): Targ
 
 function channelTarget(channel: Channel): Target {
   if (!isUnit(channel.unit)) throw new CannotDo('unknown-name', `${channel.label} cannot be typed.`);
-  const { label, unit, sense, gear } = channel;
+  const { name, label, unit, sense, gear } = channel;
   return {
+    name,
     label,
     unit,
     ...(sense === undefined ? {} : { sense }),

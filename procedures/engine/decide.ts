@@ -17,6 +17,7 @@ import { exitsOf } from './ways-on';
 import type { Outcome, RunCommand } from './run-command';
 import { RefusedEvent } from './refusal';
 import type { RunState } from './run-state';
+import { waitsForSomebody } from './waits-for-somebody';
 
 /** What may be done while the run waits, before its current step's cautions, or under an alarm. */
 const always: ReadonlySet<RunCommand['do']> = new Set([
@@ -127,7 +128,7 @@ function performInStep(drafting: Drafting, command: RunCommand): void {
     case 'record-codes':
       if (step.kind !== 'codes') throw wrongKind(step);
       drafting.add({ type: 'codes-recorded', data: { step: step.id, name: step.name, codes: command.codes } });
-      return completeStep(drafting, step);
+      return waitsForSomebody(step, drafting.state.current) === undefined ? completeStep(drafting, step) : undefined;
     case 'attach-photo':
       return attachPhoto(drafting, step, command);
     case 'start-timer':
@@ -200,9 +201,21 @@ function confirm(drafting: Drafting, step: Step): void {
     case 'wait':
       if (!isComplete(drafting, step)) throw new CannotDo('not-complete', 'Enter what the step asks for first.');
       return completeStep(drafting, step);
+    case 'choice':
+    case 'drive':
+    case 'codes':
+      // Only what had to wait for somebody is entered and not done.
+      if (!isEntered(drafting.state, step)) {
+        throw new CannotDo('not-complete', 'Enter what the step asks for first.');
+      }
+      return completeStep(drafting, step);
     default:
       throw new CannotDo('not-complete', 'Enter what the step asks for first.');
   }
+}
+
+function isEntered({ codes, choices }: RunState, step: Extract<Step, { kind: 'choice' | 'drive' | 'codes' }>): boolean {
+  return own<object>(step.kind === 'codes' ? codes : choices, step.name) !== undefined;
 }
 
 function choose(drafting: Drafting, step: Step, { options, text }: Extract<RunCommand, { do: 'choose' }>): void {
@@ -223,7 +236,7 @@ function choose(drafting: Drafting, step: Step, { options, text }: Extract<RunCo
     type: 'choice-made',
     data: { step: step.id, name: step.name, options, ...(words === '' ? {} : { text: words }) },
   });
-  completeStep(drafting, step);
+  if (waitsForSomebody(step, drafting.state.current) === undefined) completeStep(drafting, step);
 }
 
 function cannotMeasure(drafting: Drafting, step: Step, reason: string): void {

@@ -1,4 +1,5 @@
-import type { Step } from '../document';
+import { resultsOf, takenOf, type CompiledProcedure, type Step } from '../document';
+import type { NamedValue } from './run-state';
 import { CannotDo, type Drafting } from './drafting';
 import { requireSomebody } from './decide-second-person';
 import { renderTemplate } from './template';
@@ -25,16 +26,21 @@ export function passOver(drafting: Drafting, step: Step, forced?: NamedExit): vo
   takeExit(drafting, step, exit);
 }
 
-/** No way is decided on a reading that no longer holds. */
+/** Nothing is computed or decided from a reading that no longer holds. */
 function requireFresh({ procedure, state }: Drafting, step: Step): void {
   const conditions = step.kind === 'finding' ? [] : (step.next ?? []);
-  const names = conditions.flatMap(({ when }) => procedure.expression(when).names);
-  const stale = staleAmong(state, [...new Set(names)])[0];
-  if (stale === undefined) return;
-  const number = procedure.step(stale.step)?.number ?? stale.step;
-  throw new CannotDo(
+  const sources = [...conditions.map(({ when }) => when), ...resultsOf(step).map(({ is }) => is)];
+  const names = sources.flatMap((source) => procedure.expression(source).names);
+  const stale = staleAmong(state, [...new Set([...names, ...takenOf(step).map(({ from }) => from)])])[0];
+  if (stale !== undefined) throw takeAgain(procedure, stale);
+}
+
+/** Says why a reading has no value any more, and where it is taken again. */
+export function takeAgain(procedure: CompiledProcedure, { label, step, stale }: NamedValue): CannotDo {
+  const number = procedure.step(step)?.number ?? step;
+  return new CannotDo(
     'stale',
-    `${stale.label} no longer holds. ${stale.stale?.because ?? ''} Take it again: go back to step ${number}.`,
+    `${label} no longer holds. ${stale?.because ?? ''} Take it again: go back to step ${number}.`,
   );
 }
 

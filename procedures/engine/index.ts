@@ -16,6 +16,7 @@ export {
   type EventPlace,
 } from './chain';
 export { newCodesAgainst } from './compare-codes';
+export { compareHalves, type HalvesCompared, type PairComparison } from './compare-halves';
 export { cautionCount } from './cautions';
 export { decide } from './decide';
 export { coarseness, isOverdue } from './decide-gear';

@@ -50,6 +50,8 @@ export interface RunState {
   readonly choices: Readonly<Record<string, ChoiceState>>;
   /** Of each photo step, by its name, the photos that were kept. */
   readonly photos: Readonly<Record<string, PhotosState>>;
+  /** When the device's clock was set, and by how much (milliseconds, forward is positive). */
+  readonly clockJumps: readonly { readonly seq: number; readonly byMs: number }[];
   /** A step whose way is being overruled: its next `branch-taken` is the person's choice. */
   readonly overruled: string | undefined;
   /** How often each bounded branch was taken: `step/next-N` -> count. */

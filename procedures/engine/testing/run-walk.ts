@@ -81,7 +81,8 @@ export class RunWalk {
     return 1_790_000_000_000 + seq * 1_000 + this.laterMs;
   }
 
-  private write(draft: EventDraft): RunState {
+  /** Writes what a shell would write beside commands. */
+  write(draft: EventDraft): RunState {
     const seq = this.events.length + 1;
     const event = sealEvent(draft, {
       runId: this.header.runId,

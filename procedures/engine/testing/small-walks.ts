@@ -1,5 +1,6 @@
 import { compileProcedure, type CompiledProcedure } from '../../document';
 import type { InstrumentSnapshot, Series } from '..';
+import { changedDocument } from '../../document/testing/changed-document';
 import { RunWalk } from './run-walk';
 import { smallProcedure } from './small-procedure';
 
@@ -59,4 +60,24 @@ export function atListen(): RunWalk {
   return atManifold()
     .cautions(1)
     .do({ do: 'record', name: 'manifoldPressure', text: '94.2', unit: 'kPa' }, { do: 'confirm' });
+}
+
+/** The small procedure with parts of it changed, compiled. */
+export function changedProcedure(
+  ...changes: Parameters<typeof changedDocument> extends [unknown, ...infer R] ? R : never
+): CompiledProcedure {
+  const result = compileProcedure(changedDocument(smallProcedure, ...changes));
+  if (!result.ok) throw new Error(JSON.stringify(result.problems));
+  return result.procedure;
+}
+
+/** Up to step 2 of a changed small procedure. */
+export function begunWith(changed: CompiledProcedure): RunWalk {
+  return new RunWalk(changed)
+    .cautions(1)
+    .do(
+      { do: 'choose-gear', role: 'gauge', instrument: fineGauge },
+      { do: 'choose-gear', role: 'scanTool', instrument: scanTool },
+      { do: 'confirm' },
+    );
 }
