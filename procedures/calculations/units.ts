@@ -84,6 +84,7 @@ export const units = {
   'lb/min': massFlow(poundKg / 60),
   L: volume(0.001),
   cm3: volume(1e-6),
+  mm: distance(0.001),
   m: distance(1),
   km: distance(1000),
   mi: distance(mileM),

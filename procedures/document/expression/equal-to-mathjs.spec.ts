@@ -1,10 +1,22 @@
 import { all, create, type MathJsInstance, type Unit } from 'mathjs';
-import { standardPressure, stationPressure, toAbsolute, toGauge } from '../../calculations';
+import {
+  decayLeakRate,
+  elevationOf,
+  orificeDiameter,
+  orificeMassFlow,
+  speedDensityAirflow,
+  standardPressure,
+  stationPressure,
+  toAbsolute,
+  toGauge,
+  volumetricEfficiency,
+} from '../../calculations';
 import type { Environment } from './environment';
 import { compileEvaluation } from './evaluate';
 import type { Expression } from './expression';
 import { inferKind } from './infer-kind';
 import { numberPart } from './number-part';
+import { isPhysical } from './signatures';
 import { parseExpression } from './parse';
 import { baseUnitOf, Dice, ExpressionAuthor, kinds, unitsOf, valueRange, type Want } from './testing/random-expression';
 
@@ -35,6 +47,23 @@ function inBaseUnits(value: unknown): number {
 
 const inPascal = (pascal: number): Unit => math.unit(pascal, 'Pa');
 
+function engineAir([displacement, speed, manifold, intake]: readonly [Unit, Unit, Unit, Unit, unknown]) {
+  return {
+    displacementL: displacement.toNumber('L'),
+    rpm: speed.toNumber('minute^-1'),
+    manifoldKpa: manifold.toNumber('kPa'),
+    intakeC: intake.toNumber('degC'),
+  };
+}
+
+function orifice([upstream, downstream, temperature]: readonly [Unit, Unit, Unit]) {
+  return {
+    upstreamKpa: upstream.toNumber('kPa'),
+    downstreamKpa: downstream.toNumber('kPa'),
+    upstreamC: temperature.toNumber('degC'),
+  };
+}
+
 function theirScope(values: Readonly<Record<string, number | boolean>>): Record<string, unknown> {
   const stationKpa = (values['stationPressure'] as number) / 1000;
   const scope: Record<string, unknown> = {
@@ -44,6 +73,27 @@ function theirScope(values: Readonly<Record<string, number | boolean>>): Record<
     stationPressure: (setting: Unit, elevation: Unit) =>
       inPascal(
         stationPressure({ altimeterSettingKpa: setting.toNumber('kPa'), elevationM: elevation.toNumber('m') }) * 1000,
+      ),
+    elevationOf: (pressure: Unit) => math.unit(elevationOf(pressure.toNumber('kPa')), 'm'),
+    speedDensityAirflow: (...engine: [Unit, Unit, Unit, Unit, number]) =>
+      math.unit(speedDensityAirflow({ ...engineAir(engine), volumetricEfficiency: engine[4] }), 'g/s'),
+    volumetricEfficiency: (...engine: [Unit, Unit, Unit, Unit, Unit]) =>
+      volumetricEfficiency({ ...engineAir(engine), airflowGps: engine[4].toNumber('g/s') }),
+    orificeMassFlow: (diameter: Unit, ...sides: [Unit, Unit, Unit]) =>
+      math.unit(orificeMassFlow({ diameterMm: diameter.toNumber('mm'), ...orifice(sides) }).gps, 'g/s'),
+    orificeDiameter: (flow: Unit, ...sides: [Unit, Unit, Unit]) =>
+      math.unit(orificeDiameter({ flowGps: flow.toNumber('g/s'), ...orifice(sides) }), 'mm'),
+    decayLeakRate: (volume: Unit, start: Unit, end: Unit, startT: Unit, endT: Unit, time: Unit) =>
+      math.unit(
+        decayLeakRate({
+          volumeL: volume.toNumber('L'),
+          startKpa: start.toNumber('kPa'),
+          endKpa: end.toNumber('kPa'),
+          startC: startT.toNumber('degC'),
+          endC: endT.toNumber('degC'),
+          seconds: time.toNumber('s'),
+        }).standardCm3PerMin,
+        'cm^3/minute',
       ),
     absolute: (gauge: Unit) => inPascal(toAbsolute(gauge.toNumber('kPa'), stationKpa) * 1000),
     gauge: (absolute: Unit) => inPascal(toGauge(absolute.toNumber('kPa'), stationKpa) * 1000),
@@ -72,6 +122,8 @@ function magnitude(node: Expression, environment: Environment): number {
     case 'call':
       if (node.calls === 'standardPressure' || node.calls === 'stationPressure')
         return 2e5 + 20 * of(node.arguments.at(-1) as Expression);
+      // Their arguments are names alone; the pressures of both sides may be near each other.
+      if (isPhysical(node.calls)) return 1e3 * Math.abs(numberPart(node)(environment) ?? Number.NaN);
       return node.arguments.reduce(
         (sum, argument) => sum + of(argument),
         node.calls === 'absolute' || node.calls === 'gauge' ? 1e5 : 0,

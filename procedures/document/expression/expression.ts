@@ -68,8 +68,18 @@ export interface AboutNode extends Span {
   readonly name: string;
 }
 
-export type CalculationName =
-  'abs' | 'min' | 'max' | 'mean' | 'standardPressure' | 'stationPressure' | 'absolute' | 'gauge';
+export type CalculationName = 'abs' | 'min' | 'max' | 'mean' | 'absolute' | 'gauge' | PhysicalCalculation;
+
+/** The calculations whose arguments have fixed kinds; `signatures.ts` has those. */
+export type PhysicalCalculation =
+  | 'standardPressure'
+  | 'stationPressure'
+  | 'elevationOf'
+  | 'speedDensityAirflow'
+  | 'volumetricEfficiency'
+  | 'orificeMassFlow'
+  | 'orificeDiameter'
+  | 'decayLeakRate';
 
 /** `uncertainty` gives a difference; the others hold or do not. */
 export type QuestionName = 'inBand' | 'outOfBand' | 'tooClose' | 'measured' | 'uncertainty';

@@ -17,13 +17,13 @@ import {
   mismatch,
   plainNumber,
   pressure,
-  quantityOf,
   truth,
   writtenKind,
   type Kind,
   type QuantityKind,
   type Sense,
 } from './kinds';
+import { signatures } from './signatures';
 
 /** The kinds of the names that an expression may use. */
 export type KindOfName = (name: string) => Kind | undefined;
@@ -144,13 +144,6 @@ class KindReader {
       case 'max':
       case 'mean':
         return kinds.reduce((all, kind) => alike(node, `put into one ${node.calls}`, all, kind));
-      case 'standardPressure':
-        this.argument(node, 0, first, quantityOf('distance', 'difference'));
-        return pressure('absolute');
-      case 'stationPressure':
-        this.argument(node, 0, first, pressure('absolute'));
-        this.argument(node, 1, kinds[1] ?? plainNumber, quantityOf('distance', 'difference'));
-        return pressure('absolute');
       case 'absolute':
         this.station(node);
         this.argument(node, 0, first, pressure('gauge'));
@@ -159,6 +152,11 @@ class KindReader {
         this.station(node);
         this.argument(node, 0, first, pressure('absolute'));
         return pressure('gauge');
+      default: {
+        const { takes, gives } = signatures[node.calls];
+        takes.forEach((wanted, index) => this.argument(node, index, kinds[index] ?? plainNumber, wanted));
+        return gives;
+      }
     }
   }
 

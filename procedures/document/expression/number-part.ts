@@ -1,4 +1,5 @@
-import { standardPressure, stationPressure, toAbsolute, toBase, toGauge } from '../../calculations';
+import { toAbsolute, toBase, toGauge } from '../../calculations';
+import { signatures } from './signatures';
 import type { Environment } from './environment';
 import { stationPressureName, type ArithmeticNode, type CallNode, type Expression } from './expression';
 
@@ -60,7 +61,6 @@ const operations: Readonly<Record<ArithmeticNode['operator'], (a: number, b: num
 function callPart(node: CallNode): NumberPart {
   const parts = node.arguments.map(numberPart);
   const first = parts[0] ?? (() => undefined);
-  const second = parts[1] ?? (() => undefined);
   switch (node.calls) {
     case 'abs':
       return (environment) => {
@@ -73,23 +73,14 @@ function callPart(node: CallNode): NumberPart {
       return ofAll(parts, (values) => Math.max(...values));
     case 'mean':
       return ofAll(parts, (values) => values.reduce((sum, value) => sum + value, 0) / values.length);
-    case 'standardPressure':
-      return ofTwo(
-        first,
-        () => 0,
-        (elevationM) => standardPressure(elevationM) * pascalPerKpa,
-      );
-    case 'stationPressure':
-      return ofTwo(
-        first,
-        second,
-        (setting, elevationM) =>
-          stationPressure({ altimeterSettingKpa: setting / pascalPerKpa, elevationM }) * pascalPerKpa,
-      );
     case 'absolute':
       return ofTwo(first, station, (gauge, air) => toAbsolute(gauge / pascalPerKpa, air / pascalPerKpa) * pascalPerKpa);
     case 'gauge':
       return ofTwo(first, station, (value, air) => toGauge(value / pascalPerKpa, air / pascalPerKpa) * pascalPerKpa);
+    default: {
+      const { calculate } = signatures[node.calls];
+      return ofAll(parts, (values) => calculate(...values));
+    }
   }
 }
 
@@ -103,7 +94,7 @@ function ofAll(parts: readonly NumberPart[], calculate: (values: readonly number
       if (value === undefined) return undefined;
       values.push(value);
     }
-    return finite(calculate(values));
+    return inRange(() => calculate(values));
   };
 }
 

@@ -16,6 +16,24 @@ export const calculations: Readonly<Record<CalculationName, Arity>> = {
   mean: { least: 2, most: 20, form: 'mean(a, b)' },
   standardPressure: { least: 1, most: 1, form: 'standardPressure(elevation)' },
   stationPressure: { least: 2, most: 2, form: 'stationPressure(altimeterSetting, elevation)' },
+  elevationOf: { least: 1, most: 1, form: 'elevationOf(pressure)' },
+  speedDensityAirflow: {
+    least: 5,
+    most: 5,
+    form: 'speedDensityAirflow(displacement, speed, manifold, intakeTemperature, efficiency)',
+  },
+  volumetricEfficiency: {
+    least: 5,
+    most: 5,
+    form: 'volumetricEfficiency(displacement, speed, manifold, intakeTemperature, airflow)',
+  },
+  orificeMassFlow: { least: 4, most: 4, form: 'orificeMassFlow(diameter, upstream, downstream, temperature)' },
+  orificeDiameter: { least: 4, most: 4, form: 'orificeDiameter(flow, upstream, downstream, temperature)' },
+  decayLeakRate: {
+    least: 6,
+    most: 6,
+    form: 'decayLeakRate(volume, start, end, startTemperature, endTemperature, time)',
+  },
   absolute: { least: 1, most: 1, form: 'absolute(x)' },
   gauge: { least: 1, most: 1, form: 'gauge(x)' },
 };

@@ -24,6 +24,7 @@ const inMathjs: Readonly<Partial<Record<UnitName, string>>> = {
   'lb/min': 'lb/minute',
   L: 'L',
   cm3: 'cm^3',
+  mm: 'mm',
   m: 'm',
   km: 'km',
   mi: 'mi',

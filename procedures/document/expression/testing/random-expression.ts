@@ -16,6 +16,7 @@ const written: Readonly<Record<string, string>> = {
   'kg/h': 'kg/hour',
   L: 'L',
   cm3: 'cm^3',
+  mm: 'mm',
   m: 'm',
   km: 'km',
   V: 'V',
@@ -27,6 +28,7 @@ const written: Readonly<Record<string, string>> = {
   h: 'hour',
   'km/h': 'km/hour',
   dB: 'level',
+  rpm: 'minute^-1',
 };
 
 /** A wanted kind: which units a number of it is written in, and which names have it. */
@@ -42,7 +44,9 @@ export type Want =
   | 'volume'
   | 'time'
   | 'distance'
-  | 'level';
+  | 'level'
+  | 'turning'
+  | 'hole';
 
 export const unitsOf: Readonly<Record<Want, readonly string[]>> = {
   absolute: ['kPa', 'Pa', 'hPa', 'bar', 'psi'],
@@ -57,6 +61,8 @@ export const unitsOf: Readonly<Record<Want, readonly string[]>> = {
   time: ['s', 'min', 'h'],
   distance: ['m', 'km'],
   level: ['dB'],
+  turning: ['rpm'],
+  hole: ['mm'],
 };
 
 export const kinds: Readonly<Record<string, Kind>> = {
@@ -78,6 +84,8 @@ export const kinds: Readonly<Record<string, Kind>> = {
   timeA: declaredKind('s'),
   distanceA: declaredKind('m'),
   levelA: declaredKind('dB'),
+  turningA: declaredKind('rpm'),
+  holeA: declaredKind('mm'),
   truthA: truth,
   truthB: truth,
 };
@@ -93,6 +101,8 @@ export const baseUnitOf: Readonly<Record<string, string>> = {
   time: 's',
   distance: 'm',
   level: 'level',
+  turning: 's^-1',
+  hole: 'm',
 };
 export const valueRange: Readonly<Record<string, readonly [number, number]>> = {
   absolute: [60_000, 140_000],
@@ -106,6 +116,8 @@ export const valueRange: Readonly<Record<string, readonly [number, number]>> = {
   time: [1, 90],
   distance: [0, 3_000],
   level: [-80, -10],
+  turning: [5, 120],
+  hole: [0.0001, 0.005],
   plain: [-3, 3],
 };
 
@@ -217,9 +229,28 @@ export class ExpressionAuthor {
           sums('difference', 'absolute', '/'),
           sums('time', 'time', '/'),
           sums('temperature', 'temperature', '/'),
+          () => same('volumetricEfficiency(volumeA, turningA, absoluteA, temperatureA, massA)'),
         ];
       case 'flow':
-        return [many, scaled, sums('volume', 'time', '/'), sums(want, want, '-')];
+        return [
+          many,
+          scaled,
+          sums('volume', 'time', '/'),
+          sums(want, want, '-'),
+          () => same('decayLeakRate(volumeA, absoluteA, absoluteB, temperatureA, temperatureB, timeA)'),
+        ];
+      case 'mass':
+        return [
+          many,
+          scaled,
+          sums(want, want, '+'),
+          () => same('speedDensityAirflow(volumeA, turningA, absoluteA, temperatureA, plainA)'),
+          () => same('orificeMassFlow(holeA, absoluteA, absoluteB, temperatureB)'),
+        ];
+      case 'hole':
+        return [many, scaled, () => same('orificeDiameter(massA, absoluteB, absoluteA, temperatureA)')];
+      case 'distance':
+        return [many, scaled, sums(want, want, '-'), () => same('elevationOf(absoluteA)')];
       case 'volume':
         return [many, scaled, sums('flow', 'time', '*'), sums(want, want, '+')];
       default:

@@ -86,6 +86,8 @@ function callInterval(node: CallNode, given: readonly Interval[], of: (name: str
         () =>
           stationPressure({ altimeterSettingKpa: first.high / pascalPerKpa, elevationM: second.low }) * pascalPerKpa,
       );
+    default:
+      return anyNumber;
   }
 }
 
