@@ -1,5 +1,5 @@
 import { compileProcedure, type CompileProblem, type ProcedureDocument } from '../../procedures/document';
-import { lintProcedure, validateDocument } from '../../procedures/document/authoring';
+import { lintProcedure, validateDocument, type PublishedVersions } from '../../procedures/document/authoring';
 import { pictureParts } from '../../procedures/library/picture-parts';
 import { Invalid, type FieldProblem } from '../http/problem';
 
@@ -14,17 +14,17 @@ export function checkedDocument(sent: unknown): ProcedureDocument {
   return validation.document;
 }
 
-/** What would keep a document from being published, in words: the errors of its lint. */
-export function publishingProblems(document: ProcedureDocument): FieldProblem[] {
-  return lintProcedure(document, { parts: pictureParts }).errors.map(({ step, pointer = '', message }) => ({
+/** What would keep a document from being published, in words: the errors of its lint. `published`: what it may call. */
+export function publishingProblems(document: ProcedureDocument, published: PublishedVersions): FieldProblem[] {
+  return lintProcedure(document, { parts: pictureParts, published }).errors.map(({ step, pointer = '', message }) => ({
     pointer,
     detail: step === undefined ? message : `Step ${step}: ${message}`,
   }));
 }
 
 /** Throws `Invalid` while something keeps the document from being published. */
-export function requirePublishable(document: ProcedureDocument): void {
-  const problems = publishingProblems(document);
+export function requirePublishable(document: ProcedureDocument, published: PublishedVersions): void {
+  const problems = publishingProblems(document, published);
   if (problems.length > 0) throw refusal(problems);
 }
 

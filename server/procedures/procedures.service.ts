@@ -6,6 +6,7 @@ import { Person } from '../access/access.entity';
 import { noteChange } from '../database/change-log';
 import { Conflict, NotFound } from '../http/problem';
 import type { Principal } from '../http/route';
+import { callableVersions } from './called-versions';
 import { checkedDocument, publishingProblems, requirePublishable } from './checked-document';
 import type { DraftAnswer, DraftDetail, ProcedureSummary, PublicationAnswer } from './procedures.dto';
 import { ProcedureDraft, ProcedureVersion } from './procedures.entity';
@@ -15,6 +16,7 @@ export { PublishedProcedure } from './procedures.dto';
 export { publishedVersion, type PublishedVersion } from './published-version';
 export { publishedProcedures } from './published-procedures';
 export { CompiledProcedures } from './compiled-procedures';
+export { calledVersions } from './called-versions';
 
 /** Drafts, and what becomes of them: versions that never change, and their withdrawal. */
 export class ProceduresService {
@@ -49,7 +51,8 @@ export class ProceduresService {
       await manager.delete(ProcedureDraft, { procedureId: document.id, publishedVersion: IsNull() });
       await manager.insert(ProcedureDraft, draft);
     });
-    return { id: draft.id, procedureId: document.id, problems: publishingProblems(document) };
+    const published = await callableVersions(this.database.manager, document);
+    return { id: draft.id, procedureId: document.id, problems: publishingProblems(document, published) };
   }
 
   /** A draft that waits, with its document. Throws `NotFound`. */
@@ -66,7 +69,7 @@ export class ProceduresService {
       procedureId: draft.procedureId,
       importedAt: draft.importedAt.toISOString(),
       importedBy: importer?.displayName ?? '',
-      problems: publishingProblems(document),
+      problems: publishingProblems(document, await callableVersions(manager, document)),
       document,
     };
   }
@@ -81,7 +84,8 @@ export class ProceduresService {
       if (draft === null) throw new NotFound('There is no such draft.');
       if (draft.publishedVersion !== null)
         throw new Conflict(`This draft is version ${draft.publishedVersion} already.`);
-      requirePublishable(JSON.parse(draft.document) as ProcedureDocument);
+      const document = JSON.parse(draft.document) as ProcedureDocument;
+      requirePublishable(document, await callableVersions(manager, document));
       // Two drafts of one procedure at once would both take the same number.
       await lockProcedure(manager, draft.procedureId);
       const version = await this.nextVersion(manager, draft);

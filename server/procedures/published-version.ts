@@ -1,5 +1,6 @@
 import type { EntityManager } from 'typeorm';
 import type { CompiledProcedure, ProcedureDocument } from '../../procedures/document';
+import { calledLibrary } from './called-versions';
 import type { CompiledProcedures } from './compiled-procedures';
 import { ProcedureVersion } from './procedures.entity';
 
@@ -17,6 +18,17 @@ export async function publishedVersion(
 ): Promise<PublishedVersion | undefined> {
   const found = await manager.findOneBy(ProcedureVersion, { procedureId, version, contentHash });
   if (found === null) return undefined;
-  const procedure = compiled.of(contentHash, () => JSON.parse(found.document) as ProcedureDocument);
-  return { title: found.title, procedure };
+  return {
+    title: found.title,
+    procedure: compiled.known(contentHash) ?? (await compiledAnew(manager, compiled, found)),
+  };
+}
+
+async function compiledAnew(
+  manager: EntityManager,
+  compiled: CompiledProcedures,
+  { contentHash, document: text }: ProcedureVersion,
+): Promise<CompiledProcedure> {
+  const document = JSON.parse(text) as ProcedureDocument;
+  return compiled.keep(contentHash, document, await calledLibrary(manager, document));
 }

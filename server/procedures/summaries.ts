@@ -1,7 +1,8 @@
 import type { EntityManager } from 'typeorm';
 import type { ProcedureDocument } from '../../procedures/document';
+import { callableVersions } from './called-versions';
 import { publishingProblems } from './checked-document';
-import type { ProcedureSummary, VersionSummary } from './procedures.dto';
+import type { DraftSummary, ProcedureSummary, VersionSummary } from './procedures.dto';
 
 interface VersionRow {
   procedure_id: string;
@@ -40,6 +41,8 @@ export async function summariesOf(manager: EntityManager): Promise<readonly Proc
      FROM procedure_draft d JOIN person p ON p.id = d.imported_by
      WHERE d.published_version IS NULL ORDER BY d.imported_at`,
   );
+  const summaries = new Map<DraftRow, DraftSummary>();
+  for (const row of drafts) summaries.set(row, await draftSummary(manager, row));
   const ids = new Set([...versions, ...drafts].map((row) => row.procedure_id));
   return [...ids].sort().map((id) => {
     const own = versions.filter((row) => row.procedure_id === id);
@@ -48,7 +51,7 @@ export async function summariesOf(manager: EntityManager): Promise<readonly Proc
       id,
       title: (own.find((row) => row.reason === null) ?? draft ?? own[0])?.title ?? id,
       versions: own.map(versionSummary),
-      ...(draft === undefined ? {} : { draft: draftSummary(draft) }),
+      ...(draft === undefined ? {} : { draft: summaries.get(draft) }),
     };
   });
 }
@@ -66,8 +69,9 @@ function versionSummary(row: VersionRow): VersionSummary {
   };
 }
 
-function draftSummary(row: DraftRow): NonNullable<ProcedureSummary['draft']> {
-  const problems = publishingProblems(JSON.parse(row.document) as ProcedureDocument);
+async function draftSummary(manager: EntityManager, row: DraftRow): Promise<DraftSummary> {
+  const document = JSON.parse(row.document) as ProcedureDocument;
+  const problems = publishingProblems(document, await callableVersions(manager, document));
   return {
     id: row.id,
     title: row.title,

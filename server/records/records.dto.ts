@@ -201,6 +201,10 @@ export class RecordDetail {
   @Nested(() => PublishedProcedure)
   declare procedure: PublishedProcedure;
 
+  /** What it calls, at any depth: without them it can not be replayed. */
+  @Nested(() => PublishedProcedure, { each: true })
+  declare called: readonly PublishedProcedure[];
+
   /** The enrolled tablets among those that wrote, in the order in which they did. */
   @Nested(() => WritingTablet, { each: true })
   declare tablets: WritingTablet[];

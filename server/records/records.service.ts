@@ -3,7 +3,7 @@ import { validate as isUuid } from 'uuid';
 import { verifyChain, type RunEvent, type RunHeader } from '../../procedures/engine';
 import { Tablet } from '../access/access.entity';
 import { NotFound } from '../http/problem';
-import { publishedProcedures } from '../procedures/procedures.service';
+import { calledVersions, publishedProcedures } from '../procedures/procedures.service';
 import { countersignatureOnTheWire, isCountersigned, mainBranch, RunRows, runsOfSameHalf } from '../sync/sync.service';
 import { Countersignature, DiscrepancyRow, RefusedEventRow, Run, RunBranch, ServerKey } from '../sync/sync.entity';
 import { recordPage } from './record-page';
@@ -47,6 +47,7 @@ export class RecordsService {
         countersigned: signed.map(countersignatureOnTheWire),
         receivedAt: run.receivedAt.toISOString(),
         procedure,
+        called: await calledVersions(manager, procedure.document),
         tablets: await tabletsOf(manager, lines.get(mainBranch) ?? []),
         sameHalf: await runsOfSameHalf(manager, header),
         chain: chainFound(header, lines, signed, keys),

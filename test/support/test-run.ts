@@ -12,6 +12,7 @@ import { openingFacts, RunWalk } from '../../procedures/engine/testing/run-walk'
 import { smallProcedure } from '../../procedures/engine/testing/small-procedure';
 import { demoPeople, demoSites } from '../../server/database/demo/demo-garage';
 import { gaugeG12, scanToolS3 } from './ossenholt-gear';
+import { publishDocument } from './publish-document';
 import type { TestServer } from './test-server';
 
 export { smallProcedure };
@@ -35,14 +36,7 @@ export const brandtId = demoPeople[2]!.id;
 export const lindqvistId = demoPeople[3]!.id;
 
 /** Publishes the procedure that the specs run; gives its version. */
-export async function publishSmallProcedure(server: TestServer): Promise<number> {
-  const draft = await server.ask('POST', '/api/procedures/drafts', { as: 'adeyemi', json: smallProcedure });
-  if (draft.status !== 201) throw new Error(`no draft: ${draft.bytes.toString('utf8')}`);
-  const path = `/api/procedures/drafts/${(draft.json as { id: string }).id}/publication`;
-  const published = await server.ask('POST', path, { as: 'adeyemi', json: {} });
-  if (published.status !== 201) throw new Error(`not published: ${published.bytes.toString('utf8')}`);
-  return (published.json as { version: number }).version;
-}
+export const publishSmallProcedure = (server: TestServer): Promise<number> => publishDocument(server, smallProcedure);
 
 /** A run that was just opened: opened, first step claimed. `again`: why, beside others that were known. */
 export function openedRun(writer: Writer, header: Partial<RunHeader> = {}, again?: BegunAgain): SentRun {
@@ -77,7 +71,8 @@ export function continued(run: SentRun, draft: EventDraft, writer: Writer, seq =
   return { header: run.header, events };
 }
 
-function sent(walk: RunWalk, writer: Writer): SentRun {
+/** A walk's events as a tablet would have sealed them. */
+export function sent(walk: RunWalk, writer: Writer): SentRun {
   const events: RunEvent[] = [];
   for (const { type, data } of walk.events) {
     events.push(seal(walk.header, events.at(-1), { type, data } as EventDraft, writer));

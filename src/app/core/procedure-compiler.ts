@@ -1,16 +1,39 @@
-import { InjectionToken } from '@angular/core';
-import type { CompiledProcedure, ProcedureDocument } from '../../../procedures/document';
+import { inject, InjectionToken } from '@angular/core';
+import type { CalledKey, CompiledProcedure, ProcedureDocument } from '../../../procedures/document';
+import { OfflineStore } from './offline-store';
 
-/** Makes a procedure runnable. Throws an `Error` that names the first problem of a document that has one. */
+/** A procedure calls a version that is not on this tablet: no run of it can be opened here before that has come. */
+export class CalledVersionMissing extends Error {
+  override readonly name = 'CalledVersionMissing';
+
+  constructor(readonly called: CalledKey) {
+    super(
+      `It calls ${called.procedure}, version ${called.version}, which is not on this tablet yet. ` +
+        'It comes with the next sync.',
+    );
+  }
+}
+
+/**
+ * Makes a procedure runnable, with the versions that it calls as they are on this tablet. Throws `CalledVersionMissing`,
+ * or an `Error` that names the first problem of a document that has one.
+ */
 export type ProcedureCompiler = (document: ProcedureDocument) => Promise<CompiledProcedure>;
 
 /** The expression library is the heaviest part of the app, so it comes in a chunk of its own. */
 export const procedureCompiler = new InjectionToken<ProcedureCompiler>('procedureCompiler', {
-  factory: () => async (document) => {
-    const { compileProcedure } = await import('../../../procedures/document');
-    const outcome = compileProcedure(document);
-    if (outcome.ok) return outcome.procedure;
-    const first = outcome.problems[0];
-    throw new Error(`${first?.where ?? document.id}: ${first?.message ?? 'the procedure cannot be run'}`);
+  factory: () => {
+    const { procedures } = inject(OfflineStore);
+    return async (document) => {
+      const { compileProcedure, gatherCalls, libraryOf } = await import('../../../procedures/document');
+      const { found, missing } = await gatherCalls(document, ({ procedure, version }) =>
+        procedures.get([procedure, version]),
+      );
+      if (missing !== undefined) throw new CalledVersionMissing(missing);
+      const outcome = compileProcedure(document, libraryOf(found));
+      if (outcome.ok) return outcome.procedure;
+      const first = outcome.problems[0];
+      throw new Error(`${first?.where ?? document.id}: ${first?.message ?? 'the procedure cannot be run'}`);
+    };
   },
 });

@@ -18,7 +18,10 @@ const answer = (change: Partial<PullAnswer>): PullAnswer => ({
   ...change,
 });
 const gear = (id: string) => ({ id, siteId: 's-1', label: id }) as GearItem;
-const procedure = (id: string, version: number) => ({ id, version, status: 'published' }) as PublishedProcedure;
+const procedure = (id: string, version: number, calls: readonly string[] = []) => {
+  const steps = calls.map((called) => ({ kind: 'call', procedure: called, version: 1 }));
+  return { id, version, status: 'published', document: { steps } } as unknown as PublishedProcedure;
+};
 const visit = (id: string, changedAt: number, concern: string) => ({ id, changedAt, concern }) as Visit;
 
 async function pulls(...answers: PullAnswer[]): Promise<OfflineStore> {
@@ -66,6 +69,22 @@ describe('PullIntake', () => {
     expect((await store.procedures.toArray()).map(({ id, version }) => `${id} ${version}`)).toEqual([
       'seal 1',
       'seal 2',
+    ]);
+  });
+
+  it('keeps what that version calls too, at every depth', async () => {
+    const { server } = coreForSpecs();
+    const store = TestBed.inject(OfflineStore);
+    await store.runs.put({ runId: 'r-1', header: { procedureId: 'seal', version: 1 } } as RunRow);
+    await pullsFrom(server, [
+      answer({ procedures: [procedure('seal', 1, ['plug']), procedure('plug', 1, ['vent']), procedure('vent', 1)] }),
+      answer({ cursor: 'e2.1', procedures: [procedure('seal', 2)] }),
+    ]);
+    expect((await store.procedures.toArray()).map(({ id, version }) => `${id} ${version}`)).toEqual([
+      'plug 1',
+      'seal 1',
+      'seal 2',
+      'vent 1',
     ]);
   });
 

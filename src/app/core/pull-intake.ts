@@ -53,7 +53,15 @@ export class PullIntake {
     const { store } = this;
     await Promise.all([store.sites.clear(), store.gear.clear(), store.people.clear(), store.toldRuns.clear()]);
     const kept = new Set(procedures.map(({ id, version }) => `${id}@${version}`));
-    for (const { header } of await store.runs.toArray()) kept.add(`${header.procedureId}@${header.version}`);
+    const here = new Map((await store.procedures.toArray()).map((row) => [`${row.id}@${row.version}`, row]));
+    const keep = (key: string): void => {
+      const row = here.get(key);
+      if (kept.has(key) || row === undefined) return;
+      kept.add(key);
+      // A run cannot be replayed without what its procedure calls.
+      for (const step of row.document.steps) if (step.kind === 'call') keep(`${step.procedure}@${step.version}`);
+    };
+    for (const { header } of await store.runs.toArray()) keep(`${header.procedureId}@${header.version}`);
     const outdated = (await store.procedures.toCollection().primaryKeys()).filter(
       ([id, version]) => !kept.has(`${id}@${version}`),
     );

@@ -36,6 +36,8 @@ export interface RecordDetail {
   readonly countersigned: readonly BranchCountersignature[];
   readonly receivedAt?: string | number;
   readonly procedure: PublishedProcedure;
+  /** What it calls, at any depth. */
+  readonly called: readonly PublishedProcedure[];
   /** The tablets that wrote, as people call them. */
   readonly tablets: readonly { readonly id: string; readonly label: string }[];
   /** The runs of the same half of the same visit, this one included, the first begun first. */
@@ -85,6 +87,7 @@ export function readRecordDetail(body: unknown): RecordDetail {
   if (isObject(body) && isObject(body['header']) && Array.isArray(body['events']) && isObject(body['procedure'])) {
     return {
       ...(body as unknown as RecordDetail),
+      called: listOf(body['called']),
       branches: listOf(body['branches']),
       sameHalf: listOf(body['sameHalf']),
       tablets: listOf(body['tablets']),

@@ -20,12 +20,17 @@ export type RetoldRecord =
  * Replays a record with the same core that wrote it. The compiler of the expressions is heavy and comes as a chunk of
  * its own.
  */
-export async function retellRecord({ header, events, procedure: published }: RecordDetail): Promise<RetoldRecord> {
+export async function retellRecord({
+  header,
+  events,
+  procedure: published,
+  called,
+}: RecordDetail): Promise<RetoldRecord> {
   if (contentHash(published.document) !== header.contentHash) {
     return { ok: false, why: 'The procedure that came with the record is not the one that the run was opened on.' };
   }
-  const { compileProcedure } = await import('../../../procedures/document');
-  const compiled = compileProcedure(published.document);
+  const { compileProcedure, libraryOf } = await import('../../../procedures/document');
+  const compiled = compileProcedure(published.document, libraryOf(called));
   if (!compiled.ok) {
     const first = compiled.problems[0];
     return { ok: false, why: `This build cannot read the procedure: ${first?.message ?? 'its document is damaged'}` };

@@ -1,0 +1,40 @@
+import type { FindingStep } from '../procedure-document';
+
+export const walkRoundFindings: readonly FindingStep[] = [
+  {
+    id: 'tightIntake',
+    number: 'F1',
+    kind: 'finding',
+    title: 'The intake is tight',
+    action: 'The intake keeps what is put on it.',
+    result: 'in',
+    verdict: 'The intake is tight: it lost {lost} in half a minute.',
+    cause: [{ text: 'It was held from {heldFrom} to {heldTo}.' }, { text: 'The plug stood at {plugThere}.' }],
+    correction: [{ text: 'None at the intake.' }],
+    customer: [{ text: 'The intake of your car is tight.' }],
+  },
+  {
+    id: 'leakyIntake',
+    number: 'F2',
+    kind: 'finding',
+    title: 'The intake leaks',
+    action: 'The intake does not keep what is put on it.',
+    result: 'out',
+    verdict: 'The intake leaks.',
+    cause: [{ text: 'It lost {lost} in half a minute.' }],
+    correction: [{ text: 'Find where it comes out.' }],
+    customer: [{ text: 'The intake of your car lets air out.' }],
+  },
+  {
+    id: 'notCompleted',
+    number: 'F3',
+    kind: 'finding',
+    title: 'Not completed',
+    action: 'The test was not completed.',
+    result: 'too-close',
+    verdict: 'The test was not completed.',
+    cause: [],
+    correction: [{ text: 'Begin it again.' }],
+    customer: [{ text: 'The test could not be finished.' }],
+  },
+];
