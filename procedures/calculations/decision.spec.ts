@@ -22,6 +22,32 @@ describe('judge', () => {
     ]);
   });
 
+  it('judges decimals as the whole numbers of their last digit', () => {
+    const digits = fc.integer({ min: -2000, max: 2000 });
+    const widths = fc.integer({ min: 0, max: 400 });
+    fc.assert(
+      fc.property(
+        digits,
+        widths,
+        digits,
+        widths,
+        fc.constantFrom(10, 100, 1000),
+        (value, uncertainty, low, wide, by) => {
+          const whole = judge({ value, uncertainty, low, high: low + wide });
+          const [high, tenths] = [
+            (low + wide) / by,
+            { value: value / by, uncertainty: uncertainty / by, low: low / by },
+          ];
+          expect(judge({ ...tenths, high })).toBe(whole);
+        },
+      ),
+      { numRuns: 5000 },
+    );
+    // 2.3 - 2 is 0.2999999999999998 in doubles.
+    expect(judge({ value: 2.3, uncertainty: 0.3, low: 2, high: 3 })).toBe('in');
+    expect(judge({ value: 1.7, uncertainty: 0.3, low: 2, high: 3 })).toBe('too-close');
+  });
+
   it('needs no second edge', () => {
     expect(judge({ value: 509.7, uncertainty: 17.2, low: 490 })).toBe('in');
     expect(judge({ value: 216, uncertainty: 15, high: 200 })).toBe('out');

@@ -14,6 +14,13 @@ export interface JudgedReading {
   readonly high?: number | undefined;
 }
 
+/** As a decimal fraction has no exact double, 2.3 - 2 falls short of 0.3: so many times the last digit may be lost. */
+const roundingSteps = 16;
+
+/** How far apart two sums of these numbers may be and still mean the same. */
+const roundingOf = (...numbers: number[]): number =>
+  roundingSteps * Number.EPSILON * Math.max(...numbers.map(Math.abs));
+
 /**
  * Judges a reading against its band with a guard band of U on both sides of each edge.
  *
@@ -22,7 +29,8 @@ export interface JudgedReading {
  *     too-close  anything else
  *
  * A value exactly on an inner boundary is in and one exactly on an outer boundary is too close: the band is a closed
- * interval, and the published texts leave these two points open. A band narrower than 2 U has no value that is in.
+ * interval, and the published texts leave these two points open. Decimals are compared as such: 2.3 with U = 0.3 is
+ * exactly on the inner boundary of 2, rounding apart. A band narrower than 2 U has no value that is in.
  *
  * Throws RangeError on anything that is not finite, on a negative uncertainty, on `high` below `low` and when there
  * is no edge at all. Source: JCGM 106:2012, clause 8 (guarded acceptance and guarded rejection); ILAC-G8:09/2019,
@@ -40,6 +48,7 @@ export function judge({ value, uncertainty, low, high }: JudgedReading): Verdict
   const above = low === undefined ? Infinity : value - low;
   const below = high === undefined ? Infinity : high - value;
   const margin = Math.min(above, below);
-  if (margin < -uncertainty) return 'out';
-  return above >= uncertainty && below >= uncertainty ? 'in' : 'too-close';
+  const rounding = roundingOf(value, uncertainty, low ?? 0, high ?? 0);
+  if (margin < -uncertainty - rounding) return 'out';
+  return margin >= uncertainty - rounding ? 'in' : 'too-close';
 }
