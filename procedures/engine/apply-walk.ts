@@ -8,8 +8,8 @@ import { noiseTruthsOf, resultsOf } from './quantities';
 import { RefusedEvent } from './refusal';
 import type { EventOf } from './run-event';
 import type { CurrentStep, RunState, WalkedStep } from './run-state';
-import { added, changedFrom, countedUp, draftOf, entriesOfStep, withEntry, withoutStep } from './state-changes';
-import { exitsOf, wayOn, type NamedExit } from './ways-on';
+import { added, countedUp, draftOf, entriesOfStep, lastChanged, withEntry, withoutStep } from './state-changes';
+import { exitNamed, wayOn, type NamedExit } from './ways-on';
 import { worstOf } from './worst-result';
 
 /** A step is now the current one. Claiming it again supersedes what it gave before. */
@@ -78,10 +78,11 @@ export function finishStep(procedure: CompiledProcedure, state: RunState, event:
       judgement?.result === undefined ? [] : [judgement.result],
     ),
   );
-  const { seq: doneSeq, at: doneAt } = event;
-  next.walked = amended(next.walked, (last) =>
-    result === undefined ? { ...last, doneSeq, doneAt } : { ...last, doneSeq, doneAt, result },
-  );
+  next.walked = lastChanged(next.walked, (claim) => {
+    claim.doneSeq = event.seq;
+    claim.doneAt = event.at;
+    if (result !== undefined) claim.result = result;
+  });
   return next;
 }
 
@@ -100,7 +101,7 @@ function withNoiseTruths(state: RunState, step: Step, seq: number): RunState['tr
 export function takeBranch(procedure: CompiledProcedure, state: RunState, event: EventOf<'branch-taken'>): RunState {
   const { step: stepId, to, exit, verdict } = event.data;
   const step = requireStep(procedure, stepId);
-  const authored = exitsOf(procedure, step).find((candidate) => candidate.exit === exit);
+  const authored = exitNamed(procedure, step, exit);
   if (authored === undefined) throw new RefusedEvent('unknown-exit', `step ${step.number} has no exit ${exit}`);
   requirePlaceForWay(state, step, authored);
   const { to: target, heading } = destinationOf(procedure, state, step, authored);
@@ -138,7 +139,9 @@ export function takeBranch(procedure: CompiledProcedure, state: RunState, event:
   if (step.kind === 'call') next.branchCounts = withoutCountsOf(state.branchCounts, procedure, step.id);
   if (exit.startsWith('next-')) next.branchCounts = countedUp(next.branchCounts, `${step.id}/${exit}`);
   if (state.current?.isDone === false) next.current = { ...state.current, isDone: true };
-  next.walked = amended(state.walked, (last) => ({ ...last, way }));
+  next.walked = lastChanged(state.walked, (claim) => {
+    claim.way = way;
+  });
   return next;
 }
 
@@ -164,11 +167,7 @@ function requirePlaceForWay(state: RunState, step: Step, { exit, atMost }: Named
 
 /** Changes the newest claim. */
 export function amendClaim(state: RunState, change: Partial<WalkedStep>): RunState {
-  return { ...state, walked: amended(state.walked, (last) => ({ ...last, ...change })) };
-}
-
-function amended(walked: RunState['walked'], change: (last: WalkedStep) => WalkedStep): RunState['walked'] {
-  return changedFrom(walked, walked.length - 1, change);
+  return { ...state, walked: lastChanged(state.walked, (claim) => Object.assign(claim, change)) };
 }
 
 export function requireStep(procedure: CompiledProcedure, id: string): Step {

@@ -17,7 +17,8 @@ type Names = Map<string, Set<string>>;
 
 interface Made {
   state: RunState | undefined;
-  readonly lists: Set<object>;
+  /** With the last entry that was put in, while only the list holds it. */
+  readonly lists: Map<object, unknown>;
   /** With the names that each step gave. */
   readonly records: Map<object, Names>;
 }
@@ -28,7 +29,7 @@ let made: Made | undefined;
 /** Does the work of one replay: it must give out no state but the last. What comes in from outside stays as it is. */
 export function changingInPlace<T>(work: () => T): T {
   const outer = made;
-  made = { state: undefined, lists: new Set(), records: new Map() };
+  made = { state: undefined, lists: new Map(), records: new Map() };
   try {
     return work();
   } finally {
@@ -57,7 +58,27 @@ const shortList = 8;
 export function added<T>(list: readonly T[], entry: T): readonly T[] {
   const changed = changeableList(list);
   changed.push(entry);
+  keepLast(changed, entry);
   return changed;
+}
+
+/** The list with its last entry changed; `change` sets fields of a draft. An empty list stays as it is. */
+export function lastChanged<T extends object>(
+  list: readonly T[],
+  change: (draft: { -readonly [Field in keyof T]: T[Field] }) => void,
+): readonly T[] {
+  const last = list.at(-1);
+  if (last === undefined) return list;
+  const changed = changeableList(list);
+  const draft = made?.lists.get(changed) === last ? last : { ...last };
+  change(draft);
+  changed[changed.length - 1] = draft;
+  keepLast(changed, draft);
+  return changed;
+}
+
+function keepLast(list: object, entry: unknown): void {
+  if (made?.lists.has(list) === true) made.lists.set(list, entry);
 }
 
 /** The list with the entries from `start` on changed. */
@@ -74,7 +95,7 @@ export function changedFrom<T>(list: readonly T[], start: number, change: (entry
 function changeableList<T>(list: readonly T[]): T[] {
   if (made?.lists.has(list) === true) return list as T[];
   const copy = [...list];
-  if (copy.length > shortList) made?.lists.add(copy);
+  if (copy.length > shortList) made?.lists.set(copy, undefined);
   return copy;
 }
 
@@ -113,7 +134,7 @@ export function withoutStep<T extends OfStep>(
 export function countedUp(record: Readonly<Record<string, number>>, name: string): Readonly<Record<string, number>> {
   const changed = made?.lists.has(record) === true ? (record as Record<string, number>) : { ...record };
   changed[name] = (changed[name] ?? 0) + 1;
-  made?.lists.add(changed);
+  made?.lists.set(changed, undefined);
   return changed;
 }
 

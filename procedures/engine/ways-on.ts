@@ -13,16 +13,35 @@ export interface NamedExit extends Exit {
   readonly atMost?: number;
 }
 
-/** A procedure's exits by step: a replay asks for them at every branch. */
-const knownExits = new WeakMap<CompiledProcedure, Map<Step, readonly NamedExit[]>>();
+/** A step's exits in the order in which they are tried, and by their names. */
+interface Exits {
+  readonly inOrder: readonly NamedExit[];
+  readonly byName: ReadonlyMap<string, NamedExit>;
+}
 
-/** Every exit that the author gave a step, in the order in which they are tried. */
-export function exitsOf(procedure: CompiledProcedure, step: Step): readonly NamedExit[] {
+/** A procedure's exits by step: a replay asks for them at every branch. */
+const knownExits = new WeakMap<CompiledProcedure, Map<Step, Exits>>();
+
+function exitsOnce(procedure: CompiledProcedure, step: Step): Exits {
   let ofProcedure = knownExits.get(procedure);
   if (ofProcedure === undefined) knownExits.set(procedure, (ofProcedure = new Map()));
   let exits = ofProcedure.get(step);
-  if (exits === undefined) ofProcedure.set(step, (exits = namedExits(procedure, step)));
+  if (exits === undefined) {
+    const inOrder = namedExits(procedure, step);
+    exits = { inOrder, byName: new Map(inOrder.map((exit) => [exit.exit, exit])) };
+    ofProcedure.set(step, exits);
+  }
   return exits;
+}
+
+/** Every exit that the author gave a step, in the order in which they are tried. */
+export function exitsOf(procedure: CompiledProcedure, step: Step): readonly NamedExit[] {
+  return exitsOnce(procedure, step).inOrder;
+}
+
+/** One of them by its name. */
+export function exitNamed(procedure: CompiledProcedure, step: Step, name: string): NamedExit | undefined {
+  return exitsOnce(procedure, step).byName.get(name);
 }
 
 function namedExits(procedure: CompiledProcedure, step: Step): readonly NamedExit[] {
