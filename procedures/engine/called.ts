@@ -54,7 +54,7 @@ export function calledValues(
       ...(sense === undefined ? {} : { sense }),
       ...(band === undefined ? {} : { band }),
     };
-    const environment = environmentOf(state, { [name]: value });
+    const environment = environmentOf(state, value);
     const judgement = judgeQuantity(
       procedure,
       quantity,

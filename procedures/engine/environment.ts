@@ -2,18 +2,18 @@ import { toBase } from '../calculations';
 import type { Environment, JudgedResult } from '../document';
 import type { NamedValue, RunState } from './run-state';
 
-const nothing = {};
+type SeenValue = Pick<NamedValue, 'name' | 'value' | 'uncertainty' | 'judgement' | 'stale'>;
 
-/** What expressions see of a run: its values, truths and inputs, with `extra` values laid over them. */
+/** What expressions see of a run: its values, truths and inputs, with one value that is being made laid over them. */
 export function environmentOf(
   state: Pick<RunState, 'values' | 'truths' | 'inputs' | 'verdict' | 'header'>,
-  extra: Readonly<Record<string, Pick<NamedValue, 'value' | 'uncertainty' | 'judgement'>>> = nothing,
+  made?: SeenValue,
 ): Environment {
-  const value = (name: string): Pick<NamedValue, 'value' | 'uncertainty' | 'judgement'> | undefined => {
-    const known = own(extra, name) ?? own(state.values, name);
-    if (known !== undefined) return 'stale' in known ? undefined : known;
+  const value = (name: string): SeenValue | undefined => {
+    const known = made?.name === name ? made : own(state.values, name);
+    if (known !== undefined) return known.stale === undefined ? known : undefined;
     const input = own(state.inputs, name);
-    return input === undefined ? undefined : { value: toBase(Number(input.text), input.unit), uncertainty: 0 };
+    return input === undefined ? undefined : { name, value: toBase(Number(input.text), input.unit), uncertainty: 0 };
   };
   return {
     number: (name) => value(name)?.value,

@@ -57,7 +57,7 @@ function measureByWay(
   const entry = way.entry;
   const entered =
     entry === undefined ? undefined : named({ ...entry }, meanOfTakes(state, entry, [take]), take, 1, provenance);
-  const environment = environmentOf(state, entered === undefined ? {} : { [entered.name]: entered });
+  const environment = environmentOf(state, entered);
   const is = procedure.expression(way.is);
   const value = is.evaluate(environment);
   if (!value.ok || typeof value.value !== 'number') return [];
@@ -117,7 +117,7 @@ function judged(
   provenance: Provenance,
 ): NamedValue {
   const value = named(quantity, measured, take, takes, provenance);
-  const environment = environmentOf(state, { [quantity.name]: value });
+  const environment = environmentOf(state, value);
   const decimals = readDecimals(state, quantity) ?? decimalsOf(measured.text);
   const judgement = judgeQuantity(procedure, quantity, { ...measured, decimals }, environment);
   if (judgement !== undefined) value.judgement = judgement;

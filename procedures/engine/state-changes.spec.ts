@@ -8,6 +8,7 @@ import {
   countedUp,
   draftOf,
   entriesOfStep,
+  lastChanged,
   withEntry,
   withoutEntry,
   withoutStep,
@@ -129,6 +130,22 @@ describe('changes of lists and records', () => {
     };
     expect(changes()).toEqual(expected);
     expect(changingInPlace(changes)).toEqual(expected);
+  });
+
+  it('changes the last entry of a list, and no entry that was there before', () => {
+    const claims = frozen(Array.from({ length: 9 }, (_, index) => ({ step: `s${index}`, count: 0 })));
+    const twice = (): unknown => {
+      const once = lastChanged(claims, (draft) => (draft.count += 1));
+      const grown = added(once, { step: 's9', count: 10 });
+      return lastChanged(
+        lastChanged(grown, (draft) => (draft.count += 1)),
+        (draft) => (draft.count += 1),
+      );
+    };
+    const expected = [...claims.slice(0, 8), { step: 's8', count: 1 }, { step: 's9', count: 12 }];
+    expect(twice()).toEqual(expected);
+    expect(changingInPlace(twice)).toEqual(expected);
+    expect(lastChanged([], () => undefined)).toEqual([]);
   });
 
   it('makes drafts that have every field of the state', () => {

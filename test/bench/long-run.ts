@@ -30,5 +30,7 @@ export function longRun(readings: number, events: number): LongRun {
     const name = walk.state.current?.id.replace('read', 'pressure') ?? '';
     walk.do({ do: 'record', name, text: (5 + (reading % 7) / 10).toFixed(1), unit: 'kPa' });
   }
-  return { procedure: compiled.procedure, header: walk.header, events: walk.events.slice(0, events) };
+  // As they come from storage or over the wire.
+  const stored = JSON.parse(JSON.stringify(walk.events.slice(0, events))) as RunEvent[];
+  return { procedure: compiled.procedure, header: walk.header, events: stored };
 }
