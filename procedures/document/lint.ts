@@ -20,6 +20,7 @@ import { neverRestored } from './lint/restored';
 import { runGraphs } from './lint/run-graph';
 import { startCardPlace } from './lint/start';
 import { unknownTemplateNames } from './lint/template-names';
+import { verdictsWithoutReading } from './lint/unmeasured-verdicts';
 import { nominalsWithTolerance } from './lint/two-ends';
 import { unusedReadings } from './lint/unused-readings';
 import { valuesBeforeUse } from './lint/value-before-use';
@@ -51,6 +52,7 @@ const errorRules: readonly ((subject: LintSubject) => readonly LintFinding[])[] 
   unnamedVerdicts,
   unboundedLoops,
   valuesBeforeUse,
+  verdictsWithoutReading,
   neverRestored,
   bandsBeyondLimits,
   missingParts,

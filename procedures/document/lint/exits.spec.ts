@@ -167,6 +167,39 @@ describe('a figure that was left out of both sides is warned of', () => {
   });
 });
 
+describe('a verdict for want of a reading', () => {
+  const verdict: Parameters<typeof changedDocument>[1] = [
+    `${place('settle')}/otherwise`,
+    (exit) => (exit['verdict'] = 'doesNotSeal'),
+  ];
+  const skipping: Parameters<typeof changedDocument>[1] = [
+    `${place('manifold')}/cannotMeasure`,
+    (exit) => Object.assign(exit, { to: 'dipstick', because: 'the scan tool shows nothing' }),
+  ];
+
+  it('is refused, with the way on which it was not measured', () => {
+    expect(exits(deciding('settle', ['manifoldPressure > 90 kPa'], verdict, skipping)).errors).toEqual([
+      'Step 10, otherwise: names the finding "Does not seal" also where manifoldPressure could not be measured, on the way 1, 2, 3, 4, 5, 6, 10: branch 1 cannot be told then. Put a branch `not measured(manifoldPressure)` with a way of its own before it.',
+    ]);
+    expect(exits(deciding('settle', ['inBand(manifoldPressure)'], verdict, skipping)).errors).toHaveLength(1);
+    expect(exits(deciding('settle', ['offset > 1 kPa'], verdict, skipping)).errors).toHaveLength(1);
+  });
+
+  test.each<readonly [what: string, conditions: readonly string[], changes: readonly (typeof verdict)[]]>([
+    ['the exit for it is there', ['not measured(manifoldPressure)', 'manifoldPressure > 90 kPa'], [verdict, skipping]],
+    ['no verdict is named', ['manifoldPressure > 90 kPa'], [skipping]],
+    ['every way has the reading', ['manifoldPressure > 90 kPa'], [verdict]],
+    ['it is the step’s own', ['gaugeLeft > 2 kPa'], [verdict, skipping]],
+    [
+      'the finding leaves it open',
+      ['manifoldPressure > 90 kPa'],
+      [[verdict[0], (exit) => (exit['verdict'] = 'notCompleted')], skipping],
+    ],
+  ])('is none where %s', (_what, conditions, changes) => {
+    expect(exits(deciding('settle', conditions, ...changes)).errors).toEqual([]);
+  });
+});
+
 it('says so where the cases are too many to go through and none was drawn', () => {
   // Ten pairs of which one is seen each, in 2^20 cases; the first branch has taken what the second one needs.
   const sides = ['left', 'right'].map((side) => Array.from({ length: 10 }, (_, index) => `${side}${index}`));

@@ -30,6 +30,8 @@ export class KnownValues {
   constructor(
     private readonly graph: RunGraph,
     private readonly subject: Pick<LintSubject, 'document' | 'trees'>,
+    /** Whether what could not be measured counts as known: it was asked for, and the author gave it a way on. */
+    private readonly counts: 'asked-for' | 'measured' = 'asked-for',
   ) {
     const { document } = subject;
     this.bits = new NameBits([...document.inputs.map(({ name }) => name), ...document.steps.flatMap(valueNamesOf)]);
@@ -97,7 +99,8 @@ export class KnownValues {
 
   /** What is known after an edge: a step that is stopped gives nothing. Undefined where it cannot be taken yet. */
   private after({ from, way }: RunEdge): bigint | undefined {
-    if (way.kind === 'stop') return this.at(from, 'before');
+    const givesNothing = way.kind === 'stop' || (way.kind === 'cannot-measure' && this.counts === 'measured');
+    if (givesNothing) return this.at(from, 'before');
     let known = this.at(from, 'at-ways');
     for (const { tree, isTaken } of this.conditionsPassed(from, way)) {
       for (const name of namesIn(tree)) {

@@ -4,8 +4,9 @@ import { namesIn } from '../expression/names-in';
 import type { Step } from '../procedure-document';
 import { KnownValues, type Moment } from './known-values';
 import { stepWords, wayWords, type LintFinding, type LintSubject } from './lint-finding';
-import { namesInTemplate, valueNamesOf, visitNames } from './named-values';
-import type { RunGraph, RunPlace } from './run-graph';
+import { namesInTemplate, visitNames } from './named-values';
+import type { RunPlace } from './run-graph';
+import { isStop, wayWithout } from './way-without';
 import { wayName } from './ways';
 
 /**
@@ -22,7 +23,7 @@ export function valuesBeforeUse(subject: LintSubject): readonly LintFinding[] {
       for (const use of [...(uses.get(place.step.id) ?? []), ...templateUses(place, titles)]) {
         for (const name of missingFor(use, place, known, subject)) {
           const key = `${use.pointer} ${name}`;
-          if (!findings.has(key)) findings.set(key, finding(use, name, place, wayWithout(graph, place, name)));
+          if (!findings.has(key)) findings.set(key, finding(use, name, place, wayWithout(graph, place, name, isStop)));
         }
       }
     }
@@ -90,26 +91,6 @@ function missingFor(use: Use, place: RunPlace, known: KnownValues, { trees }: Li
     if (known.knows(name, place, use.when)) return false;
     return tree === undefined || known.truthWithout(tree, name, place) === 'missing';
   });
-}
-
-/** The shortest way to a place on which nothing asks for the name. */
-function wayWithout(graph: RunGraph, place: RunPlace, name: string): readonly Step[] {
-  const first = graph.places[0];
-  if (first === undefined) return [];
-  const cameFrom = new Map<RunPlace, RunPlace | undefined>([[first, undefined]]);
-  const queue = [first];
-  for (const from of queue) {
-    const asked = valueNamesOf(from.step).includes(name);
-    for (const { to, way } of from.out) {
-      if (cameFrom.has(to) || (asked && way.kind !== 'stop')) continue;
-      cameFrom.set(to, from);
-      queue.push(to);
-    }
-  }
-  if (!cameFrom.has(place)) return graph.wayTo(place);
-  const steps: Step[] = [];
-  for (let at: RunPlace | undefined = place; at !== undefined; at = cameFrom.get(at)) steps.unshift(at.step);
-  return steps;
 }
 
 function finding({ where, pointer }: Use, name: string, { step }: RunPlace, way: readonly Step[]): LintFinding {
