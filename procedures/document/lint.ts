@@ -5,11 +5,14 @@ import { parseExpression } from './expression/parse';
 import { narrowBands } from './lint/band-and-gear';
 import { unboundedLoops } from './lint/bounded-loops';
 import { unsoundCalls, type PublishedVersions } from './lint/called';
+import { looseBounds } from './lint/bounds';
 import { lateCautions } from './lint/caution-place';
 import { cautionsWithWork, notesWithImperatives } from './lint/caution-work';
 import { piledUpCautions } from './lint/cautions';
 import { mixedConnectives } from './lint/conditions';
 import { exitFindings } from './lint/exits';
+import { limitsBeyondGear } from './lint/limit-and-gear';
+import { limitsInWords } from './lint/limit-in-words';
 import { bandsBeyondLimits } from './lint/limit-and-band';
 import type { LintFinding, LintSubject } from './lint/lint-finding';
 import { doubleActions } from './lint/one-action';
@@ -51,10 +54,13 @@ const errorRules: readonly ((subject: LintSubject) => readonly LintFinding[])[] 
   endlessSteps,
   unnamedVerdicts,
   unboundedLoops,
+  looseBounds,
   valuesBeforeUse,
   verdictsWithoutReading,
   neverRestored,
   bandsBeyondLimits,
+  limitsBeyondGear,
+  limitsInWords,
   missingParts,
   mixedConnectives,
   piledUpCautions,

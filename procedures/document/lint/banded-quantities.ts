@@ -21,6 +21,15 @@ export function bandedQuantities(document: ProcedureDocument): readonly BandedQu
   );
 }
 
+/** Every quantity of the steps that is read off gear, with the gear's role. */
+export function shownQuantities(
+  document: ProcedureDocument,
+): readonly { readonly quantity: Quantity; readonly gear: string }[] {
+  return document.steps.flatMap((step) =>
+    quantitiesOf(step, '').flatMap(({ quantity, gear }) => (gear === undefined ? [] : [{ quantity, gear }])),
+  );
+}
+
 interface PlacedQuantity {
   readonly quantity: Quantity;
   readonly gear?: string | undefined;

@@ -71,6 +71,24 @@ describe('the ways of a run: what publishing refuses', () => {
       changes: [[`${place('manifold')}/next/1/thenceforth`, (exit) => (exit['to'] = 'air')]],
     },
     {
+      what: 'a measurement that may be repeated too often',
+      rule: 'bounded-loops',
+      message: /^Step 4, branch 2: may be taken 4 times; a measurement is repeated at most 3 times/,
+      changes: [[`${place('manifold')}/next/1`, (branch) => (branch['atMost'] = 4)]],
+    },
+    {
+      what: 'more rounds than five',
+      rule: 'bounded-loops',
+      message: /^Step 9, branch 1: may be taken 6 times; at most 5 rounds are gone/,
+      changes: [
+        [
+          `${place('still-quiet')}/next/0`,
+          (branch) =>
+            Object.assign(branch, { to: 'raise', atMost: 6, thenceforth: { to: 'settle', because: 'enough' } }),
+        ],
+      ],
+    },
+    {
       what: 'a way back where it cannot be measured',
       rule: 'bounded-loops',
       message: /^Step 4, cannot measure: leads back to step 3/,
@@ -97,6 +115,10 @@ describe('the ways of a run: what passes beside it', () => {
             }),
         ],
       ],
+    },
+    {
+      what: 'three repeats',
+      changes: [[`${place('manifold')}/next/1`, (branch) => (branch['atMost'] = 3)]],
     },
     {
       what: 'a branch that the finding decides',
