@@ -8,6 +8,8 @@ export interface WrittenFigure {
   readonly value: number;
   /** Half of its last digit, in base units: what rounding may have left. */
   readonly slack: number;
+  /** What stands before it in its clause: `The limit is`. */
+  readonly before: string;
   /** What follows, up to the next stop: `gauge`, `absolute`. */
   readonly next: string;
 }
@@ -23,10 +25,16 @@ export function pressuresIn(text: string): readonly WrittenFigure[] {
   return [...text.matchAll(pattern)].flatMap((match): WrittenFigure[] => {
     const [whole, digits = '', unit = ''] = match;
     if (!isUnit(unit)) return [];
+    const before =
+      text
+        .slice(0, match.index)
+        .split(/[.,;:!?]\s/)
+        .at(-1)
+        ?.trim() ?? '';
     const next = /^[^.,;:!?]*/.exec(text.slice(match.index + whole.length))?.[0].trim() ?? '';
     const value = toBase(Number(digits), unit);
     const lastDigit = 10 ** -decimalsIn(digits);
-    return [{ text: whole, unit, value, slack: toBase(lastDigit / 2, unit) - toBase(0, unit), next }];
+    return [{ text: whole, unit, value, slack: toBase(lastDigit / 2, unit) - toBase(0, unit), before, next }];
   });
 }
 

@@ -8,7 +8,7 @@ import { NominalFigures, shortFigure } from './nominal-figures';
 
 /** Texts that ask for a pressure, whatever else they say. */
 const acts: readonly string[] = ['action', 'short', 'meanwhile', 'restore', 'makeSafe', 'stopActions', 'then'];
-/** What makes a figure in another text one that is meant to be reached or kept to. */
+/** What, before a figure in its clause, makes it one that is meant to be reached or kept to. */
 const asks =
   /\b(?:limit|ceiling|at most|maximum|max|up to|not above|never above|no more than|raise|raised|pressuri[sz]e|relief|set to|set at|target)\b/i;
 
@@ -58,8 +58,8 @@ function tooMuch(
   { document }: LintSubject,
 ): readonly LintFinding[] {
   if (placed.pointer.startsWith('/limits/') && placed.field === 'says') return [];
-  if (!acts.includes(placed.field) && !asks.test(placed.text)) return [];
-  const above = written.find(({ value, slack }) => value - slack > pascal);
+  const isMeant = ({ before }: WrittenFigure): boolean => acts.includes(placed.field) || asks.test(before);
+  const above = written.find((figure) => figure.value - figure.slack > pascal && isMeant(figure));
   if (above === undefined) return [];
   const ceiling = `${shortFigure(differenceFromBase(pascal, above.unit))} ${above.unit}`;
   const message = `${textPlace(document, placed)}: "${above.text}" in \`${placed.field}\` is more than the limit ${limit.id} allows, ${ceiling} gauge. Lower it, or say that it is absolute.`;
