@@ -68,14 +68,16 @@ function placesThatEnd(graph: RunGraph): ReadonlySet<RunPlace> {
 
 /** For each finding that can be reached, one shortest way: the ids of its steps. A stop is on it only if it must be. */
 export function waysToFindings({ graphs }: LintSubject): Readonly<Record<string, readonly string[]>> {
-  const ways: Record<string, readonly string[]> = {};
+  const nearest = new Map<string, { readonly graph: RunGraph; readonly place: RunPlace }>();
   for (const graph of graphs) {
     for (const place of graph.places) {
       if (place.step.kind !== 'finding') continue;
-      const way = graph.wayTo(place).map(({ id }) => id);
-      const known = Object.hasOwn(ways, place.step.id) ? ways[place.step.id] : undefined;
-      if (known === undefined || way.length < known.length) ways[place.step.id] = way;
+      const known = nearest.get(place.step.id)?.place;
+      const isNearer =
+        known === undefined || place.stops < known.stops || (place.stops === known.stops && place.depth < known.depth);
+      if (isNearer) nearest.set(place.step.id, { graph, place });
     }
   }
-  return ways;
+  const ways = [...nearest].map(([id, { graph, place }]) => [id, graph.wayTo(place).map((step) => step.id)] as const);
+  return Object.fromEntries(ways);
 }

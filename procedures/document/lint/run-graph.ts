@@ -13,6 +13,9 @@ export interface RunPlace {
   readonly out: RunEdge[];
   /** The edge by which the way that is shown comes here. */
   readonly cameBy: RunEdge | undefined;
+  /** The edges on that way, and how many of them are stops. */
+  readonly depth: number;
+  readonly stops: number;
   /** The truths that steps on that way can have set. */
   readonly settable: ReadonlySet<string>;
 }
@@ -22,6 +25,9 @@ export interface RunEdge {
   readonly to: RunPlace;
   readonly way: Way;
 }
+
+/** A way that is open from a place. */
+type OpenWay = Pick<RunEdge, 'from' | 'way'>;
 
 /** A way to `verdict` where no finding was named before. */
 export interface LooseEnd {
@@ -69,26 +75,35 @@ export class RunGraph {
 
   /**
    * Breadth first. Ways that need a truth which no step before could set, and ways that need a stop, are followed when
-   * no other is left, so that a way that is shown has one only if it must.
+   * no other is left, so that a way that is shown has one only if it must; and again the nearest ones first.
    */
   private explore(looseEnds: LooseEnd[]): readonly RunPlace[] {
     const places: RunPlace[] = [];
     const first = this.document.steps[0];
     if (first === undefined) return places;
-    const later: Record<'unset' | 'stop', (() => void)[]> = { unset: [], stop: [] };
+    const later: Record<'unset' | 'stop', OpenWay[]> = { unset: [], stop: [] };
+    let waiting: readonly OpenWay[] = [];
+    let followed = 0;
     this.reach(first, 0, undefined, undefined, places);
-    for (let index = 0; ; index += 1) {
-      while (index === places.length && later.unset.length + later.stop.length > 0) {
-        const next = later.unset.length > 0 ? later.unset : later.stop;
-        next.splice(0).forEach((follow) => follow());
-      }
+    for (let index = 0; ;) {
       const from = places[index];
-      if (from === undefined) return places;
-      for (const way of this.openWays(from)) {
-        const follow = (): void => this.follow(from, way, places, looseEnds);
-        if (way.kind === 'stop') later.stop.push(follow);
-        else if (this.needsUnset(way, from)) later.unset.push(follow);
-        else follow();
+      const next = waiting[followed];
+      if (next !== undefined && (from === undefined || next.from.depth <= from.depth)) {
+        followed += 1;
+        this.follow(next, places, looseEnds);
+      } else if (from !== undefined) {
+        index += 1;
+        for (const way of this.openWays(from)) {
+          const open = { from, way };
+          if (way.kind === 'stop') later.stop.push(open);
+          else if (this.needsUnset(way, from)) later.unset.push(open);
+          else this.follow(open, places, looseEnds);
+        }
+      } else {
+        waiting = (later.unset.length > 0 ? later.unset : later.stop).splice(0);
+        if (waiting.length === 0) return places;
+        waiting = [...waiting].sort((a, b) => a.from.depth - b.from.depth);
+        followed = 0;
       }
     }
   }
@@ -104,7 +119,7 @@ export class RunGraph {
     return partialTruth(tree, { truth, isMissing: () => false }) === 'fails';
   }
 
-  private follow(from: RunPlace, way: Way, places: RunPlace[], looseEnds: LooseEnd[]): void {
+  private follow({ from, way }: OpenWay, places: RunPlace[], looseEnds: LooseEnd[]): void {
     const verdict = way.exit.verdict ?? from.verdict;
     const id = way.exit.to === 'verdict' ? verdict : way.exit.to;
     if (id === undefined) {
@@ -122,7 +137,7 @@ export class RunGraph {
     step: Step,
     place: number,
     verdict: string | undefined,
-    by: Pick<RunEdge, 'from' | 'way'> | undefined,
+    by: OpenWay | undefined,
     places: RunPlace[],
   ): void {
     const key = `${place}/${verdict ?? ''}`;
@@ -166,12 +181,7 @@ export class RunGraph {
   }
 }
 
-function newPlace(
-  step: Step,
-  place: number,
-  verdict: string | undefined,
-  by: Pick<RunEdge, 'from' | 'way'> | undefined,
-): RunPlace {
+function newPlace(step: Step, place: number, verdict: string | undefined, by: OpenWay | undefined): RunPlace {
   const settable = by === undefined ? new Set<string>() : settableAfter(by.from);
   const made: { -readonly [K in keyof RunPlace]: RunPlace[K] } = {
     step,
@@ -179,6 +189,8 @@ function newPlace(
     verdict,
     out: [],
     cameBy: undefined,
+    depth: by === undefined ? 0 : by.from.depth + 1,
+    stops: by === undefined ? 0 : by.from.stops + (by.way.kind === 'stop' ? 1 : 0),
     settable,
   };
   if (by !== undefined) made.cameBy = { ...by, to: made };
