@@ -64,7 +64,7 @@ export function recordTake(drafting: Drafting, step: Step, command: Record): voi
 }
 
 /** Goes on with what is complete; a step that waits for somebody else keeps its readings and waits. */
-function finishEntry(drafting: Drafting, step: Step): void {
+export function finishEntry(drafting: Drafting, step: Step): void {
   if (waitsForSomebody(step, drafting.state.current) !== undefined || !isComplete(drafting, step)) return;
   completeStep(drafting, step);
 }

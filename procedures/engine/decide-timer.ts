@@ -1,8 +1,7 @@
 import type { HoldStep, Step, WaitStep } from '../document';
-import { isComplete } from './decide-readings';
+import { finishEntry } from './decide-readings';
 import { CannotDo, type Drafting } from './drafting';
 import { own } from './environment';
-import { completeStep } from './go-on';
 import { wrongKind } from './wrong-kind';
 
 /** How long a step lasts; undefined where it has no clock. */
@@ -27,7 +26,7 @@ export function endTimer(drafting: Drafting, step: Step, certain: boolean): void
   if (!isTimed(step)) throw wrongKind(step);
   if (drafting.state.current?.timer === undefined) throw new CannotDo('no-timer', 'Start the clock first.');
   drafting.add({ type: 'timer-ended', data: { step: step.id, certain } });
-  if (certain && isComplete(drafting, step)) completeStep(drafting, step);
+  finishEntry(drafting, step);
 }
 
 function isTimed(step: Step): step is HoldStep | WaitStep {
