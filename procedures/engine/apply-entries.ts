@@ -76,8 +76,9 @@ export function makeChoice(procedure: CompiledProcedure, state: RunState, event:
 export function keepPhoto(procedure: CompiledProcedure, state: RunState, event: EventOf<'photo-attached'>): RunState {
   const { step: stepId, sha256, mediaType } = event.data;
   const step = requireStep(procedure, stepId);
+  // Evidence of any other step is kept and shown, and asks nothing of the run.
+  if (step.kind !== 'photo') return state;
   requireCurrent(state, stepId);
-  if (step.kind !== 'photo') throw new RefusedEvent('unknown-name', `step ${step.number} takes no photo`);
   const photos = added(own(state.photos, step.name)?.photos ?? [], { seq: event.seq, sha256, mediaType });
   return { ...state, photos: withEntry(state.photos, step.name, { step: stepId, seq: event.seq, photos }) };
 }

@@ -84,3 +84,15 @@ describe('a limit on what a way enters', () => {
     expect(walk.state.values['stationPressure']).toBeUndefined();
   });
 });
+
+describe('a photo of a step that asks for none', () => {
+  it('is kept as evidence, and the run stands where it stood', () => {
+    const walk = begunWith(changedProcedure());
+    const before = walk.state;
+    walk.write({
+      type: 'photo-attached',
+      data: { step: 'air', sha256: 'ab'.repeat(32), bytes: 10, mediaType: 'image/jpeg' },
+    });
+    expect(walk.state).toMatchObject({ current: before.current, photos: {} });
+  });
+});
