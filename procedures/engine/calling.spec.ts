@@ -1,5 +1,5 @@
 import { compileProcedure } from '../document';
-import { decide } from '.';
+import { decide, expectedSteps, previewTaken, routeAhead } from '.';
 import { inPartTest, outerWalk, partWith, read } from './testing/outer-walk';
 import { outerProcedure } from './testing/outer-procedure';
 import { RunWalk } from './testing/run-walk';
@@ -32,6 +32,17 @@ describe('a called procedure', () => {
     expect(walk.state.truths['itHeld']?.holds).toBe(true);
     expect(walk.state.truths['itLeaked']?.holds).toBe(false);
     expect(walk.state.current?.id).toBe('lead');
+  });
+
+  it('shows beforehand what is taken over, judged, and where its steps lead', () => {
+    const walk = partWith(inPartTest(), '5.0');
+    expect(previewTaken(walk.procedure, walk.state)).toMatchObject([
+      { name: 'there', text: '5.0', judgement: { result: 'in' } },
+    ]);
+    const back = inPartTest().do({ do: 'confirm' }, read('partPartPressure', '5.0', 'kPa'));
+    expect(routeAhead(back.procedure, back.state)).toEqual([{ to: 'part', label: '4, part test', isMain: true }]);
+    // The steps of the called one count: 4 beside the 11 of the caller.
+    expect(expectedSteps(walk.procedure)).toBe(15);
   });
 
   it('leaves the finding that the caller headed for as it was', () => {

@@ -57,8 +57,14 @@ export function decide(procedure: CompiledProcedure, state: RunState, command: R
     return { ok: true, drafts: drafting.drafts };
   } catch (error) {
     if (error instanceof CannotDo) {
-      const { code, message, field } = error;
-      return { ok: false, code, message, ...(field === undefined ? {} : { field }) };
+      const { code, message, field, takeAgain } = error;
+      return {
+        ok: false,
+        code,
+        message,
+        ...(field === undefined ? {} : { field }),
+        ...(takeAgain === undefined ? {} : { takeAgain }),
+      };
     }
     // The reducer refuses what has no place in the run; a RangeError is a figure outside of a calculation's range.
     if (error instanceof RefusedEvent || error instanceof RangeError) {

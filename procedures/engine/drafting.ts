@@ -9,6 +9,8 @@ export class CannotDo extends Error {
     readonly code: string,
     message: string,
     readonly field?: string,
+    /** The step that has to be taken again first. */
+    readonly takeAgain?: string,
   ) {
     super(message);
     this.name = 'CannotDo';

@@ -41,6 +41,8 @@ export function takeAgain(procedure: CompiledProcedure, { label, step, stale }: 
   return new CannotDo(
     'stale',
     `${label} no longer holds. ${stale?.because ?? ''} Take it again: go back to step ${number}.`,
+    undefined,
+    step,
   );
 }
 

@@ -17,6 +17,7 @@ export {
 } from './chain';
 export { newCodesAgainst } from './compare-codes';
 export { compareHalves, type HalvesCompared, type PairComparison } from './compare-halves';
+export { dueAt } from './called';
 export { cautionCount } from './cautions';
 export { decide } from './decide';
 export { coarseness, isOverdue } from './decide-gear';
@@ -34,7 +35,7 @@ export {
   type ReadingPreview,
   type WayAhead,
 } from './preview';
-export { previewBand, previewResults } from './preview-step';
+export { previewBand, previewResults, previewTaken } from './preview-step';
 export { secondsOf } from './decide-timer';
 export { waitsForSomebody } from './waits-for-somebody';
 export { channelsOf, readsOf, resultsOf, takesNeeded } from './quantities';

@@ -1,4 +1,5 @@
 import type { CompiledProcedure, Quantity } from '../document';
+import { calledValues } from './called';
 import { environmentOf } from './environment';
 import { readDecimals } from './instrument-uncertainty';
 import { judgeQuantity } from './judge-quantity';
@@ -35,4 +36,10 @@ export function previewResults(procedure: CompiledProcedure, state: RunState): r
     known = { ...known, values: { ...known.values, [value.name]: value } };
     return [value];
   });
+}
+
+/** What the current step takes over from the procedure that it calls, judged here. Empty where it calls none. */
+export function previewTaken(procedure: CompiledProcedure, state: RunState): readonly NamedValue[] {
+  const step = state.current === undefined ? undefined : procedure.step(state.current.id);
+  return step === undefined ? [] : calledValues(procedure, state, step, state.seq);
 }

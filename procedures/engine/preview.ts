@@ -110,7 +110,13 @@ function targetsOf(
   const forHalf = (step.next ?? []).find(({ when }) => when === half);
   const branches = (step.next ?? []).filter(({ when }) => when !== 'cold' && when !== 'warm');
   const exits = forHalf === undefined ? [...branches, step.otherwise] : [forHalf];
-  const ids = exits.map(({ to, verdict: named }) => (to === 'verdict' ? (named ?? verdict ?? to) : to));
+  const call = procedure.blockOf(step.id)?.call;
+  const ids = exits.map(({ to, verdict: named }) => {
+    const id = to === 'verdict' ? (named ?? verdict ?? call ?? to) : to;
+    // A finding of a called procedure is none of the run's: it leads to the step that called.
+    const block = procedure.step(id)?.kind === 'finding' ? procedure.blockOf(id) : undefined;
+    return block?.call ?? id;
+  });
   const targets = steps.filter(({ id }) => id !== step.id && ids.includes(id));
   const here = steps.findIndex(({ id }) => id === step.id);
   const isLater = (target: Step): boolean => steps.indexOf(target) > here && target.kind !== 'finding';

@@ -86,4 +86,11 @@ export type RunCommand =
 /** What a command gives: events to be written, or a reason in words that say how to go on. */
 export type Outcome =
   | { readonly ok: true; readonly drafts: readonly EventDraft[] }
-  | { readonly ok: false; readonly code: string; readonly message: string; readonly field?: string };
+  | {
+      readonly ok: false;
+      readonly code: string;
+      readonly message: string;
+      readonly field?: string;
+      /** The step that has to be taken again first: its reading no longer holds. */
+      readonly takeAgain?: string;
+    };

@@ -14,6 +14,7 @@ describe('a reading that holds for a while', () => {
     expect(walk.ask({ do: 'confirm' })).toMatchObject({
       ok: false,
       code: 'stale',
+      takeAgain: 'warm',
       message: 'Coolant no longer holds. A warm engine cools. Take it again: go back to step 2.',
     });
     walk.do({ do: 'redo', step: 'warm', reason: 'it cooled' });

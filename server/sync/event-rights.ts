@@ -4,10 +4,11 @@ import type { Role } from '../http/route';
 const atTheCar: readonly Role[] = ['technician', 'lead'];
 const atWork: readonly Role[] = ['technician', 'lead', 'manager'];
 const leads: readonly Role[] = ['lead'];
+const releasers: readonly Role[] = ['lead', 'manager'];
 
 /**
- * Whose event of a real run each type may be. An apprentice practises only; a manager reads records and makes none;
- * releasing and deciding about a new version are the lead's.
+ * Whose event of a real run each type may be. An apprentice practises only; a manager reads records and makes none, but
+ * releases what waits for one; deciding about a new version is the lead's.
  */
 const whoMay: Readonly<Record<RunEventType, readonly Role[]>> = {
   opened: atTheCar,
@@ -35,9 +36,10 @@ const whoMay: Readonly<Record<RunEventType, readonly Role[]>> = {
   'step-redone': atTheCar,
   undone: atTheCar,
   'lead-called': atTheCar,
-  released: leads,
+  released: releasers,
   'set-aside': atTheCar,
-  resumed: atTheCar,
+  // A manager takes a run up that was set aside until a release.
+  resumed: atWork,
   'handed-over': atTheCar,
   'limit-exceeded': atTheCar,
   'alert-raised': atTheCar,
@@ -63,7 +65,10 @@ export function missingRight(event: RunEvent, role: Role | undefined): string | 
   }
   const isReview = event.type === 'signed' && event.data.meaning === 'reviewed';
   const mayDo = isReview ? (['lead', 'manager'] as const) : whoMay[event.type];
-  return mayDo.some((allowed) => allowed === role)
-    ? undefined
-    : `event ${event.seq} (${event.type}) is by a ${role}, whose it can not be`;
+  if (!mayDo.some((allowed) => allowed === role)) {
+    return `event ${event.seq} (${event.type}) is by a ${role}, whose it can not be`;
+  }
+  return event.type === 'released' && event.data.by !== role
+    ? `event ${event.seq} (released) says that the ${event.data.by} released, and is by a ${role}`
+    : undefined;
 }

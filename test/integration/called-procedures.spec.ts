@@ -7,10 +7,10 @@ import { RecordDetail } from '../../server/records/records.dto';
 import { validated } from '../../server/http/validated';
 import { rebuildRuns } from '../../server/sync/rebuild-runs';
 import { publishDocument } from '../support/publish-document';
-import { continued } from '../support/test-run';
+import { adeyemiId, brandtId, continued, lindqvistId, okaforId } from '../support/test-run';
 import { TestServer } from '../support/test-server';
 import { TestTablet } from '../support/test-tablet';
-import { sentThroughCall } from '../support/walk-round-run';
+import { sentRound } from '../support/walk-round-run';
 
 let server: TestServer;
 beforeEach(async () => {
@@ -66,7 +66,7 @@ describe('a run through a called procedure', () => {
     const tablet = await TestTablet.enrol(server);
     await publishDocument(server, plugHold);
     await publishDocument(server, walkRound);
-    const run = sentThroughCall('4.2', { device: tablet.id });
+    const run = sentRound('show', { device: tablet.id });
     await withdraw(plugHold.id, 1);
     const pushed = await tablet.push({ runs: [run] });
     expect(pushed.json.runs).toMatchObject([{ acceptedThrough: run.events.length }]);
@@ -95,7 +95,7 @@ describe('a run through a called procedure', () => {
     const tablet = await TestTablet.enrol(server);
     await publishDocument(server, plugHold);
     await publishDocument(server, walkRound);
-    const run = sentThroughCall('4.2', { device: tablet.id });
+    const run = sentRound('show', { device: tablet.id });
     const claim = run.events.findIndex(
       ({ type, data }) => type === 'step-claimed' && 'step' in data && data.step === 'plug-test-start',
     );
@@ -104,5 +104,28 @@ describe('a run through a called procedure', () => {
     const skipped = continued(cut, { type: 'step-claimed', data: { step: 'plug-test' } }, { device: tablet.id });
     const pushed = await tablet.push({ runs: [skipped] });
     expect(pushed.json.runs).toMatchObject([{ acceptedThrough: claim, problem: { code: 'structure' } }]);
+  });
+});
+
+describe('a release point', () => {
+  const release = (by: 'lead' | 'manager') =>
+    ({ type: 'released', data: { step: 'show', evidence: 'Seen.', by } }) as const;
+
+  it.each([
+    ['the lead', 'lead', adeyemiId, true],
+    ['the manager', 'manager', lindqvistId, true],
+    ['a technician', 'lead', okaforId, false],
+    ['a lead as if they were the manager', 'manager', adeyemiId, false],
+  ] as const)('is released by %s, or not', async (_who, by, actor, isTaken) => {
+    const tablet = await TestTablet.enrol(server);
+    await publishDocument(server, plugHold);
+    await publishDocument(server, walkRound);
+    const run = sentRound('show', { device: tablet.id });
+    const looked = continued(run, { type: 'verified', data: { step: 'show', by: brandtId } }, { device: tablet.id });
+    const released = continued(looked, release(by), { device: tablet.id, actor });
+    const pushed = await tablet.push({ runs: [released] });
+    const accepted = released.events.length - (isTaken ? 0 : 1);
+    expect(pushed.json.runs).toMatchObject([{ acceptedThrough: accepted }]);
+    expect(pushed.json.runs[0].problem?.code).toBe(isTaken ? undefined : 'not-allowed');
   });
 });

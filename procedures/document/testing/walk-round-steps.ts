@@ -28,7 +28,8 @@ export const walkRoundSteps: readonly Step[] = [
         validity: { minutes: 30, until: ['stand'], because: 'A warm engine cools.' },
       },
     ],
-    otherwise: { to: 'plug', because: 'the coolant is at {coolantTemperature}', verdict: 'tightIntake' },
+    next: [{ when: 'measured(lost)', to: 'decide', because: 'it was taken again, at {coolantTemperature}' }],
+    otherwise: { to: 'plug', because: 'the coolant is at {coolantTemperature}' },
     cannotMeasure: notCompleted,
   },
   {
@@ -126,7 +127,6 @@ export const walkRoundSteps: readonly Step[] = [
         band: { high: '1 kPa', source },
       },
     ],
-    next: [{ when: 'outOfBand(lost)', to: 'where', because: 'it lost {lost}', verdict: 'leakyIntake' }],
     otherwise: { to: 'where', because: 'it lost {lost}' },
     cannotMeasure: notCompleted,
   },
@@ -150,11 +150,7 @@ export const walkRoundSteps: readonly Step[] = [
         picture: { sheet: 'air-path', marks: ['throttle', 'manifold'] },
       },
     ],
-    next: [
-      { when: 'atTheCooler', to: 'photo', because: 'air comes out at the cooler', verdict: 'leakyIntake' },
-      { when: 'atTheThrottle', to: 'photo', because: 'air comes out at the throttle', verdict: 'leakyIntake' },
-    ],
-    otherwise: { to: 'photo', because: 'no air comes out' },
+    otherwise: { to: 'photo', because: 'it was looked for' },
     cannotMeasure: { to: 'photo', because: 'it cannot be seen' },
   },
   {
@@ -210,7 +206,7 @@ export const walkRoundSteps: readonly Step[] = [
     atLeastSeconds: 20,
     meanwhile: 'Keep away from the plug.',
     otherwise: { to: 'decide', because: 'the pressure is gone' },
-    cannotMeasure: { to: 'restore', because: 'the gauge shows nothing' },
+    cannotMeasure: notCompleted,
   },
   {
     id: 'decide',
@@ -225,8 +221,16 @@ export const walkRoundSteps: readonly Step[] = [
         because: 'the engine was too hot: {coolantTemperature}',
         verdict: 'notCompleted',
       },
+      { when: 'outOfBand(lost)', to: 'restore', because: 'it lost {lost}', verdict: 'leakyIntake' },
+      { when: 'tooClose(lost)', to: 'restore', because: '{lost} is too close to call', verdict: 'notCompleted' },
+      {
+        when: 'atTheCooler or atTheThrottle',
+        to: 'restore',
+        because: 'air came out',
+        verdict: 'leakyIntake',
+      },
     ],
-    otherwise: { to: 'restore', because: 'the engine was not too hot' },
+    otherwise: { to: 'restore', because: 'it lost {lost}', verdict: 'tightIntake' },
   },
   {
     id: 'restore',
