@@ -1,6 +1,7 @@
 import { inject, Injectable } from '@angular/core';
+import type { CompiledProcedure } from '../../../procedures/document';
 import { openRun, replay, type RunEvent, type RunHeader } from '../../../procedures/engine';
-import { procedureCompiler } from '../core/procedure-compiler';
+import { CalledVersionMissing, procedureCompiler } from '../core/procedure-compiler';
 import { RunJournal } from '../core/run-journal';
 import { summariseRun } from '../core/run-summary';
 import { Session } from '../core/session';
@@ -23,7 +24,8 @@ export class PracticeStarter {
   async start(scenario: PracticeScenario, published: PublishedProcedure): Promise<StartedPractice> {
     const person = this.session.person();
     if (person === undefined) return { ok: false, why: 'Nobody is signed in.' };
-    const procedure = await this.compile(published.document);
+    const procedure = await this.compiled(published);
+    if (procedure instanceof CalledVersionMissing) return { ok: false, why: procedure.message };
     const opening = openRun(procedure, {
       visit: scenario.visit,
       siteName: scenario.place.name,
@@ -53,5 +55,14 @@ export class PracticeStarter {
       this.journal.release(header.runId);
     }
     return { ok: true, runId: header.runId };
+  }
+
+  private async compiled({ document }: PublishedProcedure): Promise<CompiledProcedure | CalledVersionMissing> {
+    try {
+      return await this.compile(document);
+    } catch (error) {
+      if (error instanceof CalledVersionMissing) return error;
+      throw error;
+    }
   }
 }

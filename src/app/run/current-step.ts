@@ -1,7 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
 import type { Step } from '../../../procedures/document';
 import type { RunCommand, Series } from '../../../procedures/engine';
-import type { GearItem } from '../core/wire';
+import type { Colleague, GearItem, Person } from '../core/wire';
 import { CodesEntry } from './codes/codes-entry';
 import { entryField } from './entry-draft';
 import { FindingEntry } from './finding/finding-entry';
@@ -11,22 +11,30 @@ import { WideSide } from './frame/wide-side';
 import type { ClocksNow } from './hold-clock';
 import { ListenEntry } from './listen/listen-entry';
 import type { ListenDone, SeriesTaken } from './listen/listen-requests';
+import type { ShownPhoto } from './photo/kept-photos';
+import { PhotoEntry } from './photo/photo-entry';
+import type { PhotoTaken } from './photo/photo-file';
 import { ReadingEntry } from './readings/reading-entry';
 import type { RunProblem, RunView } from './run-view';
+import { SecondPersonEntry } from './second-person/second-person-entry';
+import { isForSomebody } from './second-person/waiting-for';
 import { StartEntry } from './start/start-entry';
 import { cautionToRead } from './step-cautions';
 import { ActionEntry } from './steps/action-entry';
+import { CallEntry } from './steps/call-entry';
 import { ChoiceEntry } from './steps/choice-entry';
 import { ComputeEntry } from './steps/compute-entry';
 import { DriveEntry } from './steps/drive-entry';
 import { HoldEntry } from './steps/hold-entry';
 import { RestoreEntry } from './steps/restore-entry';
+import { timedStage } from './timed-stage';
 
 /** The current step: its cautions first, then the entry of its kind. */
 @Component({
   selector: 'bay-current-step',
   imports: [
     ActionEntry,
+    CallEntry,
     CautionGate,
     ChoiceEntry,
     CodesEntry,
@@ -36,8 +44,10 @@ import { RestoreEntry } from './steps/restore-entry';
     HandSide,
     HoldEntry,
     ListenEntry,
+    PhotoEntry,
     ReadingEntry,
     RestoreEntry,
+    SecondPersonEntry,
     StartEntry,
     WideSide,
   ],
@@ -56,6 +66,11 @@ export class CurrentStepView {
   readonly clocks = input.required<() => ClocksNow>();
   /** The listen step's kept series, once its bytes are read. */
   readonly kept = input<Series>();
+  /** The photos that were kept in the current step. */
+  readonly photos = input<readonly ShownPhoto[]>([]);
+  /** Everybody who has an account, and who of them is signed in here. */
+  readonly people = input<readonly Colleague[]>([]);
+  readonly person = input<Person>();
   /** A log that the practice bench offers. */
   readonly offered = input<{ readonly fileName: string; readonly path: string }>();
   readonly problem = input<RunProblem>();
@@ -63,6 +78,7 @@ export class CurrentStepView {
   readonly commanded = output<RunCommand>();
   readonly seriesTaken = output<SeriesTaken>();
   readonly finished = output<ListenDone>();
+  readonly photoTaken = output<PhotoTaken>();
   readonly wouldGoTo = output<string | undefined>();
   readonly holdOver = output();
   readonly leftForBench = output();
@@ -75,6 +91,13 @@ export class CurrentStepView {
     if (step.kind === 'start' || step.kind === 'finding') return undefined;
     const at = cautionToRead(this.run(), step);
     return at === undefined ? undefined : { at };
+  });
+  /** Whether only somebody else's part of the step, or the way on after it, is left. */
+  protected readonly isForSomebody = computed(() => isForSomebody(this.run(), this.step()));
+  /** What a timed step asks for now. */
+  protected readonly stage = computed(() => {
+    const step = this.step();
+    return step.kind === 'hold' || step.kind === 'wait' ? timedStage(this.run(), step) : undefined;
   });
   protected readonly elapsed = () => this.clocks()().elapsed;
 }

@@ -1,6 +1,6 @@
 import { inject, Injectable } from '@angular/core';
 import type { CompiledProcedure, ProcedureDocument } from '../../../procedures/document';
-import { replay } from '../../../procedures/engine';
+import { replay, waitsForSomebody, type RunState } from '../../../procedures/engine';
 import { OfflineStore } from '../core/offline-store';
 import { RunJournal } from '../core/run-journal';
 import { Session } from '../core/session';
@@ -34,7 +34,8 @@ export class RunOpener {
     const { header, events, clockBackMs } = stored;
     const role = this.session.person()?.role;
     // What the server would refuse from this person must not be written on the tablet either.
-    if (header.kind === 'real' && role !== 'technician' && role !== 'lead') {
+    const mayOpen = role === 'technician' || role === 'lead' || role === 'manager';
+    if (header.kind === 'real' && !mayOpen) {
       this.journal.release(runId);
       return { ok: false, why: 'not-allowed', what: role ?? '' };
     }
@@ -50,6 +51,10 @@ export class RunOpener {
     const replayed = replay(procedure, header, events);
     if (!replayed.ok) {
       return { ok: false, why: 'damaged', what: `event ${replayed.refusal.seq}: ${replayed.refusal.what}` };
+    }
+    if (header.kind === 'real' && role === 'manager' && !waitsForRelease(procedure, replayed.state)) {
+      this.journal.release(runId);
+      return { ok: false, why: 'not-allowed', what: role };
     }
     return {
       ok: true,
@@ -72,4 +77,10 @@ export class RunOpener {
       throw error;
     }
   }
+}
+
+/** A manager reads finished runs in the Record room; only a release brings them to an open one. */
+function waitsForRelease(procedure: CompiledProcedure, { current }: RunState): boolean {
+  const step = current === undefined ? undefined : procedure.step(current.id);
+  return step !== undefined && waitsForSomebody(step, current) === 'release';
 }

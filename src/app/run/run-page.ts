@@ -24,25 +24,30 @@ import { syncWords } from '../shared/sync-words';
 import { briefConnection } from './brief-connection';
 import { CurrentStepView } from './current-step';
 import { EntryDraft } from './entry-draft';
-import { HonestWays, type HonestWay } from './frame/honest-ways';
+import { HonestWays } from './frame/honest-ways';
 import { RunHeaderBar } from './frame/run-header';
 import { StopRow } from './frame/stop-row';
 import { ListenFlow } from './listen/listen-flow';
 import { pedalAct } from './pedal-keys';
+import { KeptPhotos } from './photo/kept-photos';
+import type { PhotoTaken } from './photo/photo-file';
 import { practiceRamp } from './practice-ramp';
 import { PrimaryAction } from './primary-action';
 import { RunGear } from './run-gear';
+import { RunPeople } from './run-people';
 import { RunPreferences } from './run-preferences';
 import { RunStore } from './run-store';
 import { toneAfter } from './run-tones';
 import { GearSheet } from './sheets/gear-sheet';
 import { LimitTakeover } from './sheets/limit-takeover';
+import type { LaidSheet } from './sheets/laid-sheet';
 import { LookBackSheet } from './sheets/look-back-sheet';
 import { OpenListSheet } from './sheets/open-list-sheet';
 import { ResumeCard } from './sheets/resume-card';
 import { SheetBody } from './sheets/sheet-body';
 import { SheetHand } from './sheets/sheet-hand';
 import { StopSheet } from './sheets/stop-sheet';
+import { TakeAgainSheet } from './sheets/take-again-sheet';
 import { ViewSheet } from './sheets/view-sheet';
 import { WayOutSheet } from './sheets/way-out-sheet';
 import { WhySheet } from './sheets/why-sheet';
@@ -51,12 +56,6 @@ import { Tones } from './tones';
 import { AwakeScreen } from './wake-lock';
 import { beadResult, lastDecision, walkedBefore } from './walked-steps';
 import { waysAhead } from './ways-ahead';
-
-/** A card laid over the step. */
-type Sheet =
-  | { readonly show: 'open-list' | 'view' | 'why' | 'gear' }
-  | { readonly show: 'look-back'; readonly bead: number }
-  | { readonly show: 'way-out'; readonly way: HonestWay };
 
 /** A page that was out of sight for this long may have cost the place. */
 const placeLostMs = 30_000;
@@ -79,11 +78,12 @@ const placeLostMs = 30_000;
     SheetHand,
     StopRow,
     StopSheet,
+    TakeAgainSheet,
     ViewSheet,
     WayOutSheet,
     WhySheet,
   ],
-  providers: [AwakeScreen, EntryDraft, ListenFlow, PrimaryAction, RunGear, RunStore],
+  providers: [AwakeScreen, EntryDraft, KeptPhotos, ListenFlow, PrimaryAction, RunGear, RunPeople, RunStore],
   templateUrl: './run-page.html',
   styleUrl: './run-page.css',
   host: { '(window:keydown)': 'pedal($event)' },
@@ -97,6 +97,8 @@ export class RunPage {
   protected readonly holding = inject(HandSetting);
   protected readonly theme = inject(Theme);
   protected readonly gear = inject(RunGear);
+  protected readonly photos = inject(KeptPhotos);
+  protected readonly people = inject(RunPeople);
   private readonly draft = inject(EntryDraft);
   private readonly primary = inject(PrimaryAction);
   private readonly tones = inject(Tones);
@@ -109,7 +111,7 @@ export class RunPage {
   /** From the address. */
   readonly runId = input.required<string>();
 
-  protected readonly sheet = signal<Sheet | undefined>(undefined);
+  protected readonly sheet = signal<LaidSheet | undefined>(undefined);
   protected readonly now = signal(this.clock());
 
   protected readonly run = this.store.view;
@@ -185,6 +187,11 @@ export class RunPage {
     effect(() => {
       if (this.store.problem()?.field === 'gear' && this.step()?.kind !== 'start') this.sheet.set({ show: 'gear' });
     });
+    effect(() => {
+      const { takeAgain, message } = this.store.problem() ?? {};
+      if (takeAgain !== undefined && message !== undefined)
+        this.sheet.set({ show: 'take-again', of: takeAgain, said: message });
+    });
     void this.preferences.recall();
     void this.awake.take();
     const timer = setInterval(() => this.now.set(this.clock()), 10_000);
@@ -209,6 +216,15 @@ export class RunPage {
     if (await this.flow.take(request)) this.afterAct(before);
   }
 
+  protected async keepPhoto({ command, blob }: PhotoTaken): Promise<void> {
+    const before = this.store.state();
+    if (await this.store.act(command, { blobs: [blob] })) this.afterAct(before);
+  }
+
+  protected async takeAgain(step: string): Promise<void> {
+    await this.act({ do: 'redo', step, reason: 'its reading no longer holds' });
+  }
+
   protected async finishListening(request: Parameters<ListenFlow['finish']>[0]): Promise<void> {
     const before = this.store.state();
     await this.flow.finish(request);
@@ -231,7 +247,7 @@ export class RunPage {
     this.tones.play('hold-over');
   }
 
-  protected open(sheet: Sheet): void {
+  protected open(sheet: LaidSheet): void {
     this.store.forgetProblem();
     this.sheet.set(sheet);
   }

@@ -8,9 +8,11 @@ export interface RunPreferencesRow {
   readonly hasSound: boolean;
   /** Whether step, limit and value are drawn large enough to be read from 1.5 m. */
   readonly isFromAfar: boolean;
+  /** Whether a step is said in the few words that its author gave for whoever knows the procedure. */
+  readonly isBrief: boolean;
 }
 
-const usual: RunPreferencesRow = { hasSound: true, isFromAfar: false };
+const usual: RunPreferencesRow = { hasSound: true, isFromAfar: false, isBrief: false };
 
 /** Reads and keeps how a person likes the run's screens. */
 @Injectable({ providedIn: 'root' })

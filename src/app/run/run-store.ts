@@ -9,6 +9,7 @@ import {
 } from '../../../procedures/engine';
 import { NobodyToSign, RunJournal, RunWrittenElsewhere, type NewBlob } from '../core/run-journal';
 import { summariseRun } from '../core/run-summary';
+import { Session } from '../core/session';
 import { clock, monotonicClock } from '../core/time-and-ids';
 import { ClockWatch } from './clock-watch';
 import { RunOpener, type OpenedRun } from './run-opener';
@@ -30,6 +31,9 @@ export interface ActExtras {
 /** What may be done before the resume card is answered. */
 const answersResume: ReadonlySet<RunCommand['do']> = new Set(['resume', 'stop', 'acknowledge-limit', 'leave-stop']);
 
+/** What a manager may do to a real run: what the server would refuse must not be written here either. */
+const ofManager: ReadonlySet<RunCommand['do']> = new Set(['release', 'resume']);
+
 /**
  * One run on the screen. A command is decided, its events are written for good, and only then does the screen go on.
  * Provided by the run's page, so that leaving the page gives the run up.
@@ -38,6 +42,7 @@ const answersResume: ReadonlySet<RunCommand['do']> = new Set(['resume', 'stop', 
 export class RunStore {
   private readonly opener = inject(RunOpener);
   private readonly journal = inject(RunJournal);
+  private readonly session = inject(Session);
   private readonly now = inject(clock);
   private readonly monotonic = inject(monotonicClock);
 
@@ -125,6 +130,10 @@ export class RunStore {
     if (extras.isFollowUp !== true && !this.guard.admit()) return false;
     if (this.awaitsResume() && !answersResume.has(command.do)) {
       this.trouble.set({ code: 'resume-first', message: 'Answer first whether you go on here.' });
+      return false;
+    }
+    if (view.header.kind === 'real' && this.session.person()?.role === 'manager' && !ofManager.has(command.do)) {
+      this.trouble.set({ code: 'not-yours', message: 'A manager only releases here. Whoever runs the test goes on.' });
       return false;
     }
     this.acting.set(command.do);

@@ -15,4 +15,6 @@ export interface RunProblem {
   readonly message: string;
   /** The field that it stands beside. */
   readonly field?: string;
+  /** The step whose reading no longer holds and has to be taken again. */
+  readonly takeAgain?: string;
 }

@@ -48,6 +48,7 @@ export function latestValue({ procedure, state }: Pick<RunView, 'procedure' | 's
     })
     .sort((a, b) => a.seq - b.seq);
   const latest = read.at(-1);
-  if (latest === undefined || procedure.step(latest.step)?.kind !== 'listen') return latest;
+  const kind = latest === undefined ? undefined : procedure.step(latest.step)?.kind;
+  if (latest === undefined || (kind !== 'listen' && kind !== 'ramp')) return latest;
   return read.find(({ step }) => step === latest.step);
 }

@@ -36,5 +36,10 @@ export class RunHeaderBar {
     const expected = this.expected();
     return { words: `Step ${step.number} of about ${expected}`, briefly: `Step ${step.number} of ${expected}` };
   });
+  /** The person stays at the car: what can wait, such as what is sent, is not said meanwhile. */
+  protected readonly isStaying = computed(() => {
+    const { procedure, state } = this.run();
+    return state.current !== undefined && procedure.step(state.current.id)?.stay === true;
+  });
   protected readonly disturbed = computed(() => this.run().state.disturbed.length);
 }

@@ -37,6 +37,8 @@ export class WideSide {
   protected readonly isPictured = computed(
     () => this.why() !== undefined && this.step().picture !== undefined && this.step().kind !== 'compute',
   );
+  /** Background for whoever wants it: folded, and out of the way while something goes on. */
+  protected readonly notes = computed(() => (this.isUnderWay() ? [] : (this.step().notes ?? [])));
   protected readonly why = computed(() => {
     const { why } = this.step();
     if (why === undefined || this.isUnderWay()) return undefined;

@@ -24,7 +24,7 @@ import {
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class FileTaking {
-  readonly step = input.required<StepOf<'listen'>>();
+  readonly step = input.required<StepOf<'listen' | 'ramp'>>();
   /** A log that the practice bench offers. */
   readonly offered = input<{ readonly fileName: string; readonly path: string }>();
   readonly problem = input<RunProblem>();

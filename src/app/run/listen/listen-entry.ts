@@ -7,6 +7,7 @@ import { HandSide } from '../frame/hand-side';
 import { StepPictureView } from '../frame/step-picture-view';
 import { WideSide } from '../frame/wide-side';
 import { StepEntry } from '../step-entry';
+import { FoundControls } from './found-controls';
 import { FileTaking } from './file-taking';
 import { LiveControls } from './live-controls';
 import { MarkControls } from './mark-controls';
@@ -15,17 +16,17 @@ import { plotMarks } from './plot-marks';
 import type { ListenDone, SeriesTaken } from './listen-requests';
 
 /**
- * A logged ramp with the marks `noise begins` and `noise stops`: typed live, one tap a point, or taken from a file.
- * What the marks give is judged while they are moved.
+ * A logged ramp: typed live, one tap a point, or taken from a file. One that is listened to has the marks `noise begins`
+ * and `noise stops`, and what they give is judged while they are moved; of any other what is found in it is shown.
  */
 @Component({
   selector: 'bay-listen-entry',
-  imports: [FileTaking, HandSide, LiveControls, MarkControls, RampPlot, StepPictureView, WideSide],
+  imports: [FileTaking, FoundControls, HandSide, LiveControls, MarkControls, RampPlot, StepPictureView, WideSide],
   templateUrl: './listen-entry.html',
   styleUrl: './listen-entry.css',
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
-export class ListenEntry extends StepEntry<'listen'> {
+export class ListenEntry extends StepEntry<'listen' | 'ramp'> {
   /** The series that was kept with the step, once its bytes are read. */
   readonly kept = input<Series>();
   /** The run's monotonic time, milliseconds. */

@@ -54,7 +54,8 @@ export class ListenFlow {
   private record() {
     const view = this.store.view();
     const step = view?.state.current === undefined ? undefined : view.procedure.step(view.state.current.id);
-    return step?.kind === 'listen' ? view?.state.series[step.name]?.record : undefined;
+    const isSeries = step?.kind === 'listen' || step?.kind === 'ramp';
+    return isSeries ? view?.state.series[step.name]?.record : undefined;
   }
 
   private async readBack(sha256: string): Promise<void> {

@@ -31,7 +31,7 @@ export interface Aim {
 })
 export class LiveControls {
   readonly run = input.required<RunView>();
-  readonly step = input.required<StepOf<'listen'>>();
+  readonly step = input.required<StepOf<'listen' | 'ramp'>>();
   readonly series = input.required<Series>();
   readonly aim = input.required<Aim>();
   readonly elapsed = input.required<() => number>();
@@ -64,8 +64,11 @@ export class LiveControls {
     const stops = this.stopsAt();
     return stops !== undefined && (this.series().timeS.at(-1) ?? 0) <= stops;
   });
+  /** Whether the noise is listened to; what is found in a ramp without marks needs its points alone. */
+  protected readonly hasMarks = computed(() => this.step().kind === 'listen');
   protected readonly preview = computed(() => {
-    if (this.stopsAt() === undefined || this.lacksPointAfter() || this.series().timeS.length < 3) return undefined;
+    if ((this.hasMarks() && this.stopsAt() === undefined) || this.lacksPointAfter() || this.series().timeS.length < 3)
+      return undefined;
     const { procedure, state } = this.run();
     return previewListening(procedure, state, this.series());
   });
@@ -77,8 +80,12 @@ export class LiveControls {
     const rise = previewListening(procedure, state, this.series())?.values.find((value) => value.name === name);
     return rise?.judgement?.result === 'out' && rise.value > (rise.judgement.high ?? Infinity);
   });
-  /** The quantity that the mark gives, judged. */
-  protected readonly found = computed(() => this.preview()?.values.find(({ judgement }) => judgement !== undefined));
+  /** The quantity that is found, judged. */
+  protected readonly found = computed(() => {
+    const values = this.preview()?.values ?? [];
+    const judged = values.find(({ judgement }) => judgement !== undefined);
+    return judged ?? (this.hasMarks() ? undefined : values[0]);
+  });
   protected readonly remark = computed(() => {
     if (!this.hasBegun()) return 'One tap a point: raise slowly, and tap what the gauge has risen by.';
     if (this.lacksPointAfter()) return 'Raise on, and tap one more point: it tells where the noise stopped.';

@@ -1,5 +1,5 @@
 import type { EventOf, RunEvent, RunState, Series, Take } from '../../../../procedures/engine';
-import type { ListenStep } from '../../../../procedures/document';
+import type { SeriesStep } from '../../../../procedures/document';
 
 /** A series' mark. */
 export type MarkName = 'noise-begins' | 'noise-stops';
@@ -18,7 +18,7 @@ export function timeBase(events: readonly RunEvent[], claimedSeq: number): numbe
 }
 
 /** The typed points of a claim as a series: one time axis, each channel where it was typed. */
-export function seriesOfTakes(step: ListenStep, takes: Readonly<Record<string, readonly Take[]>>): Series {
+export function seriesOfTakes(step: SeriesStep, takes: Readonly<Record<string, readonly Take[]>>): Series {
   const typed = step.channels.flatMap((channel) => {
     const points = (takes[channel.name] ?? []).filter(({ timeS }) => timeS !== undefined);
     return points.length === 0 ? [] : [{ channel, points }];
@@ -40,7 +40,7 @@ export function seriesOfTakes(step: ListenStep, takes: Readonly<Record<string, r
 }
 
 /** The series with each absolute channel counted from its own first value, so that all pressures are rises. */
-export function risesOf(series: Series, step: ListenStep): Series {
+export function risesOf(series: Series, step: SeriesStep): Series {
   const absolute = new Set(step.channels.filter(({ sense }) => sense === 'absolute').map(({ name }) => name));
   return {
     ...series,

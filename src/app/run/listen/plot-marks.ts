@@ -1,4 +1,4 @@
-import type { ListenStep } from '../../../../procedures/document';
+import type { SeriesStep } from '../../../../procedures/document';
 import type { RunState } from '../../../../procedures/engine';
 import type { PlotMark } from '../../shared/ramp-plot-options';
 import type { MarkName } from './live-series';
@@ -8,7 +8,7 @@ const words: Readonly<Record<MarkName, string>> = { 'noise-begins': 'noise begin
 /** The step's marks for the plot, with a mark that is being moved in its new place. */
 export function plotMarks(
   state: RunState,
-  step: ListenStep,
+  step: SeriesStep,
   moved?: { readonly mark: MarkName; readonly timeS: number; readonly label?: string },
 ): readonly PlotMark[] {
   const marks = state.series[step.name]?.marks ?? {};

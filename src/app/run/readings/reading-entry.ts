@@ -31,13 +31,19 @@ import { WayTiles } from './way-tiles';
   styleUrl: './reading-entry.css',
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
-export class ReadingEntry extends StepEntry<'reading' | 'wait'> {
+export class ReadingEntry extends StepEntry<'reading' | 'wait' | 'hold'> {
   /** Where the step would lead if what is typed were recorded; undefined while that is not known. */
   readonly wouldGoTo = output<string | undefined>();
 
+  /** What is read together: of a hold what it begins with, then what it ends with. */
+  private readonly reads = computed(() => {
+    const step = this.step();
+    if (step.kind !== 'hold') return readsOf(step);
+    return (this.run().state.current?.timer === undefined ? step.begins : step.ends) ?? [];
+  });
   /** The quantity that is asked for now: the first that has not all its takes in this claim. */
   protected readonly quantity = computed(() => {
-    const reads = readsOf(this.step());
+    const reads = this.reads();
     const missing = reads.find((read) => takesOf(this.run(), read.name).length < takesNeeded(read));
     // A wait that is not over yet takes its readings again, from the first one on.
     return missing ?? this.againFrom() ?? reads[0];
@@ -96,7 +102,7 @@ export class ReadingEntry extends StepEntry<'reading' | 'wait'> {
     return `${instrument.label}, steps of ${instrument.resolution} ${shownUnit(target.unit)}`;
   });
   protected readonly progress = computed(() => {
-    const reads = readsOf(this.step());
+    const reads = this.reads();
     const quantity = this.quantity();
     if (quantity === undefined) return undefined;
     const needed = takesNeeded(quantity);

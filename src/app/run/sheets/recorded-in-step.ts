@@ -54,6 +54,14 @@ function lineOf(event: RunEvent, procedure: RunView['procedure']): string | unde
       return `Overruled: ${event.data.reason}`;
     case 'step-redone':
       return event.data.reason === '' ? undefined : `Taken again: ${event.data.reason}`;
+    case 'photo-attached':
+      return `Photo kept, ${Math.ceil(event.data.bytes / 1000)} kB`;
+    case 'not-applicable':
+      return `Does not apply: ${event.data.reason}`;
+    case 'verified':
+      return 'A second person has looked';
+    case 'released':
+      return `Released by the ${event.data.by}: ${event.data.evidence}`;
     case 'timer-ended':
       return event.data.certain ? 'Held to the end' : 'Held, time not certain';
     default:

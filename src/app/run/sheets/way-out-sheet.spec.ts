@@ -67,4 +67,23 @@ describe('WayOutSheet', () => {
     buttonNamed(fixture, 'Set aside').click();
     expect(walk.do(commands[0]!).state.status).toBe('set-aside');
   });
+
+  it('lets a step be said not to apply, with a reason, also where nothing is measured', async () => {
+    const { walk, fixture, commands } = await shown('key-on', 'cannot-measure');
+    buttonNamed(fixture, 'It does not apply to this car').click();
+    await fixture.whenStable();
+    buttonNamed(fixture, 'Does not apply, go on').click();
+    expect(walk.ask(commands[0]!)).toMatchObject({ ok: false, code: 'say-why' });
+    buttonNamed(fixture, 'The car does not have this part').click();
+    await fixture.whenStable();
+    buttonNamed(fixture, 'Does not apply, go on').click();
+    expect(commands.at(-1)).toEqual({ do: 'not-applicable', reason: 'The car does not have this part' });
+    walk.do(commands.at(-1)!);
+    expect(walk.state.current?.id).not.toBe('key-on');
+  });
+
+  it('never says so of what puts back or begins', async () => {
+    const { fixture } = await shown('start', 'cannot-measure');
+    expect(hasButton(fixture, 'It does not apply to this car')).toBe(false);
+  });
 });

@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, input, linkedSignal, output } from '@angular/core';
 import type { Step } from '../../../../procedures/document';
 import { renderTemplate, type RunCommand } from '../../../../procedures/engine';
 import { entryField } from '../entry-draft';
@@ -17,7 +17,16 @@ interface WayWords {
   readonly primary: string;
 }
 
-const words: Readonly<Record<HonestWay, WayWords>> = {
+/** A way out as the sheet shows it: what was asked for, or that the step does not apply. */
+type ShownWay = HonestWay | 'not-applicable';
+
+const words: Readonly<Record<ShownWay, WayWords>> = {
+  'not-applicable': {
+    title: 'Does not apply to this car',
+    label: 'Why it does not apply',
+    usuals: ['The car does not have this part', 'It is built another way', 'It was done already', 'Not on this engine'],
+    primary: 'Does not apply,\ngo on',
+  },
   'cannot-measure': {
     title: 'Cannot measure',
     label: 'Why not',
@@ -43,7 +52,8 @@ const words: Readonly<Record<HonestWay, WayWords>> = {
   },
 };
 
-/** One of the three honest ways out: what it leads to, a reason, and two controls, one of them back. */
+/** One of the three honest ways out: what it leads to, a reason, and two controls, one of them back. That a step does not
+ * apply to the car is said from where nothing can be measured. */
 @Component({
   selector: 'bay-way-out-sheet',
   imports: [PrimaryButton, ReasonField, RefusalLine, SheetBody, SheetHand],
@@ -60,18 +70,26 @@ export class WayOutSheet {
   readonly commanded = output<RunCommand>();
   readonly left = output();
 
-  protected readonly reason = entryField(this.run, () => this.way(), '', ['set-aside', 'lead-called']);
-  protected readonly words = computed(() => words[this.way()]);
+  protected readonly shown = linkedSignal<HonestWay, ShownWay>({ source: this.way, computation: (way) => way });
+  protected readonly reason = entryField(this.run, () => this.shown(), '', ['set-aside', 'lead-called']);
+  protected readonly words = computed(() => words[this.shown()]);
   /** Why the way is not open, where it is not. */
   protected readonly closed = computed(() => {
     const step = this.step();
-    if (this.way() !== 'cannot-measure' || (step !== undefined && 'cannotMeasure' in step)) return undefined;
+    if (this.shown() !== 'cannot-measure' || (step !== undefined && 'cannotMeasure' in step)) return undefined;
     return 'Nothing is measured in this step. If it cannot be done, ask the lead under Not sure, or stop the test.';
   });
+  /** Whether a step can be said not to apply: what begins a run, puts back or comes back from a call always does. */
+  protected readonly canApplyNot = computed(() => {
+    const kind = this.step()?.kind;
+    const always = kind === 'start' || kind === 'restore' || kind === 'call' || kind === 'finding';
+    return this.shown() === 'cannot-measure' && kind !== undefined && !always;
+  });
+  private readonly isMeasuring = computed(() => this.shown() === 'cannot-measure' || this.shown() === 'not-applicable');
   /** The exit that the author wrote for it. */
   protected readonly exit = computed(() => {
     const step = this.step();
-    if (this.way() !== 'cannot-measure' || step === undefined || !('cannotMeasure' in step)) return undefined;
+    if (this.isMeasuring() === false || step === undefined || !('cannotMeasure' in step)) return undefined;
     const { procedure, state } = this.run();
     const { to, because, verdict } = step.cannotMeasure;
     const target = procedure.step(to === 'verdict' ? (verdict ?? state.verdict ?? to) : to);
@@ -83,14 +101,16 @@ export class WayOutSheet {
     };
   });
   protected readonly makeSafe = computed(() =>
-    this.way() === 'not-sure' ? this.run().procedure.document.stop.makeSafe : [],
+    this.shown() === 'not-sure' ? this.run().procedure.document.stop.makeSafe : [],
   );
 
   protected confirm(): void {
     const reason = this.reason();
-    switch (this.way()) {
+    switch (this.shown()) {
       case 'cannot-measure':
         return this.commanded.emit({ do: 'cannot-measure', reason });
+      case 'not-applicable':
+        return this.commanded.emit({ do: 'not-applicable', reason });
       case 'not-sure':
         return this.commanded.emit({ do: 'not-sure', question: reason });
       case 'set-aside':

@@ -11,6 +11,7 @@ import { entryField } from '../entry-draft';
 import { BigAction } from '../frame/big-action';
 import { HandSide } from '../frame/hand-side';
 import { LastReading } from '../frame/last-reading';
+import { StepPictureView } from '../frame/step-picture-view';
 import { WideSide } from '../frame/wide-side';
 import { StepEntry } from '../step-entry';
 
@@ -20,7 +21,7 @@ import { StepEntry } from '../step-entry';
  */
 @Component({
   selector: 'bay-choice-entry',
-  imports: [BigAction, HandSide, LastReading, WideSide],
+  imports: [BigAction, HandSide, LastReading, StepPictureView, WideSide],
   templateUrl: './choice-entry.html',
   styleUrl: './choice-entry.css',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -29,6 +30,12 @@ export class ChoiceEntry extends StepEntry<'choice'> {
   protected readonly chosen = entryField<readonly string[]>(this.run, 'chosen', []);
   protected readonly text = entryField(this.run, 'asked', '');
   protected readonly several = computed(() => this.step().several === true);
+  /** What the options look like: of the one that was tapped last, or of all while none is. */
+  protected readonly pictured = computed(() => {
+    const last = this.chosen().at(-1);
+    const asked = this.step().options.filter(({ name }) => last === undefined || name === last);
+    return asked.flatMap(({ name, label, picture }) => (picture === undefined ? [] : [{ name, label, picture }]));
+  });
   /** What is asked beside the chosen options. */
   protected readonly asks = computed(() =>
     this.step()

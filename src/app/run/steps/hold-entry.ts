@@ -3,11 +3,34 @@ import { BigAction } from '../frame/big-action';
 import { HandSide } from '../frame/hand-side';
 import { WideSide } from '../frame/wide-side';
 import { clockText, readHold, type ClocksNow } from '../hold-clock';
+import { secondsOf } from '../../../../procedures/engine';
 import { StepEntry } from '../step-entry';
 
 const tickMs = 100;
 
-/** A timed wait under pressure: what is left in large figures, a tone at the end, the same time after a reload. */
+const clockWords = {
+  hold: {
+    over: 'Held to the end',
+    running: 'Left to hold',
+    before: 'To be held',
+    on: 'Hold on',
+    done: 'Held,\ngo on',
+    again: 'Hold again',
+  },
+  wait: {
+    over: 'The time is over',
+    running: 'Left to wait',
+    before: 'At least to wait',
+    on: 'Wait',
+    done: 'Waited,\ngo on',
+    again: 'Wait again',
+  },
+} as const;
+
+/**
+ * The clock of a hold, or of a wait that has a least time: what is left in large figures, a tone at the end, the same
+ * time after a reload.
+ */
 @Component({
   selector: 'bay-hold-entry',
   imports: [BigAction, HandSide, WideSide],
@@ -15,12 +38,19 @@ const tickMs = 100;
   styleUrl: './hold-entry.css',
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
-export class HoldEntry extends StepEntry<'hold'> {
+export class HoldEntry extends StepEntry<'hold' | 'wait'> {
   /** Reads the run's clocks. */
   readonly clocks = input.required<() => ClocksNow>();
   /** The time is over: a tone sounds. */
   readonly over = output();
 
+  protected readonly words = computed(() => clockWords[this.step().kind]);
+  /** What there is to do while a wait goes on. */
+  protected readonly meanwhile = computed(() => {
+    const step = this.step();
+    return step.kind === 'wait' ? step.meanwhile : undefined;
+  });
+  private readonly seconds = computed(() => secondsOf(this.step()) ?? 0);
   private readonly now = signal<ClocksNow | undefined>(undefined);
   private wasOver = false;
 
@@ -40,12 +70,12 @@ export class HoldEntry extends StepEntry<'hold'> {
   protected readonly isOver = computed(() => !this.isUncertain() && this.reading()?.isOver === true);
   protected readonly left = computed(() => {
     const reading = this.isUncertain() ? undefined : this.reading();
-    return clockText(reading?.leftS ?? this.step().seconds);
+    return clockText(reading?.leftS ?? this.seconds());
   });
   /** The share of the time that is over, 0 to 1. */
   protected readonly share = computed(() => {
     const reading = this.isUncertain() ? undefined : this.reading();
-    return reading === undefined ? 0 : 1 - reading.leftS / this.step().seconds;
+    return reading === undefined ? 0 : 1 - reading.leftS / this.seconds();
   });
 
   constructor() {

@@ -1,4 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed } from '@angular/core';
+import { dueAt } from '../../../../procedures/engine';
 import { BigAction } from '../frame/big-action';
 import { HandSide } from '../frame/hand-side';
 import { RefusalLine } from '../frame/refusal-line';
@@ -52,5 +53,6 @@ go on"
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class RestoreEntry extends StepEntry<'restore'> {
-  protected readonly items = computed(() => this.run().state.disturbed);
+  /** In a called procedure only what that one took apart; the rest goes back with the caller's own step. */
+  protected readonly items = computed(() => dueAt(this.run().procedure, this.run().state, this.step().id));
 }
