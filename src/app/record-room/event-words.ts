@@ -7,6 +7,8 @@ import type { Tone } from './story-line';
 export interface EventWords {
   readonly what: string;
   readonly words?: string;
+  /** The id of the person whom it is about. */
+  readonly person?: string;
   readonly tone: Tone;
 }
 
@@ -16,7 +18,7 @@ const out = (what: string, words?: string): EventWords => ({ what, words, tone: 
 
 /**
  * Says what an event was, for those that the story tells in words: place-keeping marks, readings, series, codes and
- * ways have lines of their own and give undefined.
+ * photos and ways have lines of their own and give undefined.
  */
 export function sayEvent(procedure: CompiledProcedure, event: RunEvent): EventWords | undefined {
   switch (event.type) {
@@ -25,6 +27,7 @@ export function sayEvent(procedure: CompiledProcedure, event: RunEvent): EventWo
     case 'reading-recorded':
     case 'series-recorded':
     case 'codes-recorded':
+    case 'photo-attached':
     case 'branch-taken':
       return undefined;
     case 'opened':
@@ -47,8 +50,6 @@ export function sayEvent(procedure: CompiledProcedure, event: RunEvent): EventWo
       return event.data.certain ? plain('Timer ended') : live('Timer ended, time not certain');
     case 'choice-made':
       return sayChoice(procedure.step(event.data.step), event);
-    case 'photo-attached':
-      return plain('Photo kept', `${Math.ceil(event.data.bytes / 1000)} kB`);
     case 'note-written':
       return plain('Note', event.data.text);
     case 'margin-note-written':
@@ -66,7 +67,7 @@ export function sayEvent(procedure: CompiledProcedure, event: RunEvent): EventWo
     case 'lead-called':
       return live('Not sure, lead called', event.data.question);
     case 'released':
-      return plain('Released', event.data.evidence);
+      return { ...plain(`Released by the ${event.data.by}`, event.data.evidence), person: event.actor };
     case 'set-aside':
       return live('Set aside', event.data.reason);
     case 'resumed':
@@ -93,7 +94,10 @@ export function sayEvent(procedure: CompiledProcedure, event: RunEvent): EventWo
     case 'closed':
       return plain('Run closed');
     case 'verified':
-      return plain('Verified', event.data.by);
+      return {
+        ...plain('A second person has looked', procedure.step(event.data.step)?.verify?.what),
+        person: event.data.by,
+      };
     case 'signed':
       return plain(`Signed: ${event.data.meaning}`);
     case 'amended':

@@ -16,6 +16,9 @@ import type { Passage } from './story-line';
     @if (shown(); as result) {
       <bay-result-mark [result]="result" [size]="18" />
     }
+    @if (passage().within; as call) {
+      <span class="within">in {{ call.number }}, {{ call.title }}</span>
+    }
     @if (passage().isLeft) {
       <span class="muted">left behind</span>
     }
@@ -32,6 +35,11 @@ import type { Passage } from './story-line';
     }
     .title {
       font-weight: 600;
+    }
+    .within {
+      display: block;
+      color: var(--ink-2);
+      font-size: 15px;
     }
     bay-result-mark,
     .muted {

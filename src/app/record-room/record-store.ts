@@ -1,10 +1,11 @@
-import { computed, inject, Injectable, resource, signal } from '@angular/core';
+import { computed, DestroyRef, inject, Injectable, resource, signal } from '@angular/core';
 import type { RunEvent } from '../../../procedures/engine';
 import { ApiProblem } from '../core/api-problem';
 import { wordOfChain } from './chain-word';
 import { DamagedSeries, readSeries } from './read-series';
 import { RecordArchive, recordResource } from './record-archive';
 import { retellRecord } from './retell-record';
+import { photoOf, type PhotoLoad } from './photo-load';
 import type { SeriesLoad } from './series-load';
 
 /** One record: fetched, its chain computed here again, replayed by the core, its series fetched one by one. */
@@ -14,6 +15,7 @@ export class RecordStore {
 
   private readonly runId = signal<string | undefined>(undefined);
   private readonly loads = signal<ReadonlyMap<string, SeriesLoad>>(new Map());
+  private readonly photoLoads = signal<ReadonlyMap<string, PhotoLoad>>(new Map());
 
   private readonly fetched = recordResource(this.runId);
   private readonly replayed = resource({
@@ -21,6 +23,7 @@ export class RecordStore {
     loader: async ({ params }) => {
       const retold = await retellRecord(params);
       void this.fetchSeries(params.events);
+      void this.fetchPhotos(params.events);
       return retold;
     },
   });
@@ -39,9 +42,17 @@ export class RecordStore {
   /** The series by the hash of their bytes. */
   readonly series = this.loads.asReadonly();
 
+  /** The photos by the hash of their bytes. */
+  readonly photos = this.photoLoads.asReadonly();
+
+  constructor() {
+    inject(DestroyRef).onDestroy(() => this.forgetPhotos());
+  }
+
   /** Shows another record. */
   show(runId: string): void {
     this.loads.set(new Map());
+    this.forgetPhotos();
     this.runId.set(runId);
   }
 
@@ -67,6 +78,32 @@ export class RecordStore {
       }
       throw error;
     }
+  }
+
+  private async fetchPhotos(events: readonly RunEvent[]): Promise<void> {
+    const photos = events.flatMap((event) => (event.type === 'photo-attached' ? [event.data] : []));
+    const asked = new Set<string>();
+    for (const { sha256, mediaType } of photos) {
+      if (asked.has(sha256) || this.photoLoads().has(sha256)) continue;
+      asked.add(sha256);
+      await this.fetchPhoto(sha256, mediaType);
+    }
+  }
+
+  private async fetchPhoto(sha256: string, mediaType: string): Promise<void> {
+    const note = (load: PhotoLoad): void => this.photoLoads.update((loads) => new Map(loads).set(sha256, load));
+    note({ status: 'loading' });
+    try {
+      note(photoOf(await this.archive.attachment(sha256), sha256, mediaType));
+    } catch (error) {
+      if (!(error instanceof ApiProblem)) throw error;
+      note(error.status === 404 ? { status: 'missing' } : { status: 'failed', why: error.message });
+    }
+  }
+
+  private forgetPhotos(): void {
+    for (const load of this.photoLoads().values()) if (load.status === 'there') URL.revokeObjectURL(load.url);
+    this.photoLoads.set(new Map());
   }
 
   private note(sha256: string, load: SeriesLoad): void {

@@ -17,12 +17,14 @@ export interface Passage {
   /** Absent for what happened before the first step was claimed. */
   readonly step?: Step;
   readonly result?: ShownResult;
+  /** The step that called the procedure which this one belongs to, the innermost; absent for the run's own steps. */
+  readonly within?: Step;
   /** Whether the step was left before it was done, or the way to it was overruled. */
   readonly isLeft: boolean;
   readonly lines: readonly StoryLine[];
 }
 
-export type StoryLine = ValueLine | SeriesLine | CodesLine | WayLine | SaidLine;
+export type StoryLine = ValueLine | SeriesLine | PhotoLine | CodesLine | WayLine | SaidLine;
 
 interface LineBase {
   readonly seq: number;
@@ -44,6 +46,12 @@ export interface SeriesLine extends LineBase {
   readonly kind: 'series';
   readonly record: RunEventData['series-recorded'];
   readonly marks: SeriesState['marks'];
+}
+
+/** A photo was kept. */
+export interface PhotoLine extends LineBase {
+  readonly kind: 'photo';
+  readonly record: RunEventData['photo-attached'];
 }
 
 export interface CodesLine extends LineBase {
@@ -75,4 +83,6 @@ export interface SaidLine extends LineBase {
   readonly what: string;
   /** The person's own words or the particulars. */
   readonly words?: string;
+  /** The id of the person whom it is about. */
+  readonly person?: string;
 }

@@ -3,6 +3,8 @@ import { BandGauge } from '../shared/band-gauge';
 import { CodesCompared } from './codes-compared';
 import { PassageTitle } from './passage-title';
 import { clockTime } from '../core/time-words';
+import type { PhotoLoad } from './photo-load';
+import { PhotoView } from './photo-view';
 import type { SeriesLoad } from './series-load';
 import { SeriesView } from './series-view';
 import type { Passage } from './story-line';
@@ -12,7 +14,7 @@ import { WayTaken } from './way-taken';
 /** A run as it happened: a table with a body for each claim of a step. */
 @Component({
   selector: 'bay-story-table',
-  imports: [BandGauge, CodesCompared, PassageTitle, SeriesView, WayTaken],
+  imports: [BandGauge, CodesCompared, PassageTitle, PhotoView, SeriesView, WayTaken],
   templateUrl: './story-table.html',
   styleUrl: './story-table.css',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -21,6 +23,11 @@ export class StoryTable {
   readonly passages = input.required<readonly Passage[]>();
   /** The loaded series by the hash of their bytes. */
   readonly series = input<ReadonlyMap<string, SeriesLoad>>(new Map());
+
+  /** The loaded photos by the hash of their bytes. */
+  readonly photos = input<ReadonlyMap<string, PhotoLoad>>(new Map());
+  /** Person's id -> how they are called. */
+  readonly names = input<ReadonlyMap<string, string>>(new Map());
 
   /** The air of the place, kilopascals; absent where it was not known. */
   readonly stationKpa = input<number>();

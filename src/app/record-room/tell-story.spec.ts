@@ -1,3 +1,4 @@
+import { roundTo } from '../../../procedures/engine/testing/walk-round-walk';
 import { coldMorning } from '../shared/practice/cold-morning';
 import { hotIdleWhistle } from '../shared/practice/hot-idle-whistle';
 import { compiledLibraryProcedure, walkScenario, type Walk } from '../shared/testing/walk-scenario';
@@ -139,5 +140,39 @@ describe('the story of a run', () => {
     const at = events.find((event) => event.type === 'reading-recorded' && event.data.name === 'boostPressure');
     expect(story.brokenOff).toEqual({ seq: at?.seq, what: `event ${at?.seq} was changed after it was written` });
     expect(story.passages.at(-1)?.step?.id).toBe('boost-pressure');
+  });
+});
+
+describe('the story of a run with photos, a call, a release and readings that end', () => {
+  const walk = roundTo('decide').do({ do: 'redo', step: 'coolant', reason: 'its reading no longer holds' });
+  const story = tellStory(walk.procedure, walk.header, walk.events).story;
+
+  it('tells the called steps as part of the step that called, and what was found there', () => {
+    const called = story.passages.filter(({ within }) => within !== undefined);
+    expect(called.map(({ step, within }) => [step?.number, within?.number])).toEqual([
+      ['4.1', '4'],
+      ['4.2', '4'],
+      ['4.3', '4'],
+      ['4.4', '4'],
+    ]);
+    const [call] = passages(story, 'plug-test');
+    expect(said(call)).toContainEqual(expect.stringMatching(/^What the called procedure found: The plug holds 4\.2/));
+    expect(values(call).map(({ value }) => [value.name, value.judgement?.result])).toEqual([['plugThere', 'in']]);
+  });
+
+  it('names who looked and who released, on what', () => {
+    const lines = passages(story, 'show')[0]?.lines.filter((line): line is SaidLine => line.kind === 'said');
+    expect(lines?.map(({ what, words, person }) => [what, words, person])).toEqual([
+      ['A second person has looked', 'The plug sits square and is secured.', 'brandt'],
+      ['Released by the lead', 'Two clamps.', 'okafor'],
+    ]);
+  });
+
+  it('shows a photo by its hash, and says which reading ended with which step', () => {
+    expect(passages(story, 'photo')[0]?.lines.find(({ kind }) => kind === 'photo')).toMatchObject({
+      record: { mediaType: 'image/jpeg', bytes: 1 },
+    });
+    expect(said(passages(story, 'stand')[0])).toContain('No longer holds: Coolant temperature: A warm engine cools.');
+    expect(said(passages(story, 'decide')[0]).join()).not.toContain('No longer holds');
   });
 });

@@ -1,5 +1,13 @@
 import type { CompiledProcedure, Step } from '../../../procedures/document';
-import { applyEvent, type NamedValue, type RunEvent, type RunHeader, type RunState } from '../../../procedures/engine';
+import {
+  applyEvent,
+  renderTemplate,
+  type EventOf,
+  type NamedValue,
+  type RunEvent,
+  type RunHeader,
+  type RunState,
+} from '../../../procedures/engine';
 import { sayEvent } from './event-words';
 import type { Passage, SaidLine, Story, StoryLine, ValueLine } from './story-line';
 
@@ -20,15 +28,18 @@ export function tellStory(procedure: CompiledProcedure, header: RunHeader, event
     const result = applyEvent(procedure, header, state, event);
     if (!result.ok) {
       const { seq, what } = result.refusal;
-      return { story: { passages: close(passages, state), brokenOff: { seq, what } }, state };
+      return { story: { passages: close(procedure, passages, state), brokenOff: { seq, what } }, state };
     }
     if (passages.length === 0 || begins(event)) passages.push(open(procedure, event));
     const passage = passages.at(-1);
-    passage?.lines.push(...linesOf(procedure, event, state, result.state));
+    passage?.lines.push(
+      ...linesOf(procedure, event, state, result.state),
+      ...endedReadings(event, state, result.state),
+    );
     if (passage !== undefined) refreshMarks(passage, result.state);
     state = result.state;
   }
-  return { story: { passages: close(passages, state) }, state };
+  return { story: { passages: close(procedure, passages, state) }, state };
 }
 
 interface OpenPassage {
@@ -58,6 +69,8 @@ function linesOf(
   switch (event.type) {
     case 'series-recorded':
       return [{ kind: 'series', seq, at, record: event.data, marks: {} }];
+    case 'photo-attached':
+      return [{ kind: 'photo', seq, at, record: event.data }];
     case 'codes-recorded': {
       const step = procedure.step(event.data.step);
       const earlier =
@@ -89,7 +102,11 @@ function linesOf(
       ];
     }
     case 'step-done':
-      return [...endOfNoise(procedure.step(event.data.step), event, after), ...valuesOf(after, event)];
+      return [
+        ...endOfNoise(procedure.step(event.data.step), event, after),
+        ...foundThere(procedure, event, before),
+        ...valuesOf(after, event),
+      ];
     default: {
       const said = sayEvent(procedure, event);
       const values = valuesOf(after, event);
@@ -114,6 +131,32 @@ function endOfNoise(step: Step | undefined, { seq, at, type }: RunEvent, after: 
   return [{ kind: 'said', seq, at, type, tone: 'live', what: 'No end of the noise was marked' }];
 }
 
+/** What a called procedure found, said where the run comes back from it. */
+function foundThere(
+  procedure: CompiledProcedure,
+  { seq, at, type, data }: EventOf<'step-done'>,
+  before: RunState | undefined,
+): readonly SaidLine[] {
+  if (before?.verdict === undefined || procedure.step(data.step)?.kind !== 'call') return [];
+  const finding = procedure.step(before.verdict);
+  if (finding?.kind !== 'finding' || procedure.blockOf(finding.id)?.call !== data.step) return [];
+  const words = renderTemplate(procedure, before, finding.verdict) ?? finding.title;
+  return [{ kind: 'said', seq, at, type, tone: 'plain', what: 'What the called procedure found', words }];
+}
+
+/** Readings that stopped holding with this event: what was decided before rests on them still, nothing after does. */
+function endedReadings(
+  { seq, at, type }: RunEvent,
+  before: RunState | undefined,
+  after: RunState,
+): readonly SaidLine[] {
+  if (before === undefined || before.values === after.values) return [];
+  return Object.values(after.values).flatMap(({ name, label, stale }): readonly SaidLine[] => {
+    if (stale === undefined || before.values[name]?.stale !== undefined) return [];
+    return [{ kind: 'said', seq, at, type, tone: 'live', what: `No longer holds: ${label}`, words: stale.because }];
+  });
+}
+
 /** The values that this event gave: a take completed them, or the step's results were computed. */
 function valuesOf(after: RunState, { seq, at }: RunEvent): readonly ValueLine[] {
   return Object.values(after.values)
@@ -136,14 +179,18 @@ function refreshMarks(passage: OpenPassage, state: RunState): void {
   });
 }
 
-function close(passages: readonly OpenPassage[], state: RunState | undefined): readonly Passage[] {
+function close(
+  procedure: CompiledProcedure,
+  passages: readonly OpenPassage[],
+  state: RunState | undefined,
+): readonly Passage[] {
   const later = new Map<string, number>();
   const closed: Passage[] = [];
   for (const passage of [...passages].reverse()) {
     const lines = [...passage.lines]
       .reverse()
       .map((line) => (line.kind === 'value' ? withTakenAgain(line, later) : line));
-    closed.push(closePassage(passage, lines.reverse(), state));
+    closed.push(closePassage(procedure, passage, lines.reverse(), state));
   }
   return closed.reverse();
 }
@@ -154,8 +201,15 @@ function withTakenAgain(line: ValueLine, later: Map<string, number>): ValueLine 
   return takenAgainAt === undefined ? line : { ...line, takenAgainAt };
 }
 
-function closePassage(passage: OpenPassage, lines: readonly StoryLine[], state: RunState | undefined): Passage {
+function closePassage(
+  procedure: CompiledProcedure,
+  passage: OpenPassage,
+  lines: readonly StoryLine[],
+  state: RunState | undefined,
+): Passage {
   const { seq, at, step } = passage;
+  const call = step === undefined ? undefined : procedure.blockOf(step.id)?.call;
+  const within = call === undefined ? undefined : procedure.step(call);
   const claim = state?.walked.find((candidate) => candidate.claimedSeq === seq);
   const unjudged = claim?.notMeasured === true ? 'not-measured' : claim?.doneSeq === undefined ? undefined : 'done';
   const result = claim?.result ?? unjudged;
@@ -163,6 +217,7 @@ function closePassage(passage: OpenPassage, lines: readonly StoryLine[], state: 
     seq,
     at,
     lines,
+    ...(within === undefined ? {} : { within }),
     isLeft: claim?.isLeft ?? false,
     ...(step === undefined ? {} : { step }),
     ...(result === undefined ? {} : { result }),
