@@ -41,6 +41,17 @@ export function quantitiesOf(step: Step, words: (expression: string) => string):
         ),
         ...results,
       ];
+    case 'hold':
+      return [
+        ...(step.begins ?? []).map((quantity) =>
+          reading(quantity, `${takenText(quantity.takes ?? 1, [])}, as it begins`),
+        ),
+        ...(step.ends ?? []).map((quantity) => reading(quantity, `${takenText(quantity.takes ?? 1, [])}, as it ends`)),
+        ...results,
+      ];
+    case 'call':
+      return [...step.takes.map((taken) => reading(taken, `taken over: ${taken.from} there`)), ...results];
+    case 'ramp':
     case 'listen':
       return [
         ...step.finds.map((found) =>

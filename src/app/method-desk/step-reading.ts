@@ -5,6 +5,7 @@ import { CautionPanel } from '../shared/caution-panel';
 import { conditionWords, nameBook } from './condition-words';
 import type { FileProblem } from './read-procedure-file';
 import { kindWords } from './kind-words';
+import { factsOf } from './step-facts';
 import { quantitiesOf } from './step-quantities';
 import { waysOf } from './step-ways';
 
@@ -38,9 +39,13 @@ export class StepReading {
   );
   protected readonly quantitiesTitle = computed(() => {
     const { kind } = this.step();
-    if (kind === 'listen') return 'What it finds';
-    return kind === 'reading' || kind === 'wait' ? 'What it takes' : 'What it computes';
+    if (kind === 'listen' || kind === 'ramp') return 'What it finds';
+    return kind === 'reading' || kind === 'wait' || kind === 'hold' || kind === 'call'
+      ? 'What it takes'
+      : 'What it computes';
   });
+  /** What it asks of people and time. */
+  protected readonly facts = computed(() => factsOf(this.document(), this.step()));
   /** The start card's own cautions hold throughout. */
   protected readonly cautions = computed(() => {
     const step = this.step();
