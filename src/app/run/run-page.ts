@@ -24,6 +24,7 @@ import { syncWords } from '../shared/sync-words';
 import { briefConnection } from './brief-connection';
 import { CurrentStepView } from './current-step';
 import { EntryDraft } from './entry-draft';
+import { frameLayout } from './frame/frame-layout';
 import { HonestWays } from './frame/honest-ways';
 import { RunHeaderBar } from './frame/run-header';
 import { StopRow } from './frame/stop-row';
@@ -120,6 +121,7 @@ export class RunPage {
     const id = run?.state.current?.id ?? run?.state.finding;
     return run === undefined || id === undefined ? undefined : run.procedure.step(id);
   });
+  protected readonly layout = computed(() => frameLayout(this.step()));
   protected readonly canMeasure = computed(() => {
     const step = this.step();
     return step !== undefined && 'cannotMeasure' in step;
