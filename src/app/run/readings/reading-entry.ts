@@ -115,7 +115,10 @@ export class ReadingEntry extends StepEntry<'reading' | 'wait' | 'hold'> {
     return preview === undefined || !preview.ok || preview.way !== undefined;
   });
   protected readonly primaryLabel = computed(() => {
-    if (this.step().kind === 'wait') return 'Record';
+    const { kind } = this.step();
+    // What a hold begins with is followed by its clock, and a wait may have to be read again.
+    const isFollowed = kind === 'hold' && this.run().state.current?.timer === undefined;
+    if (kind === 'wait' || isFollowed) return 'Record';
     return this.isLastTake() ? 'Record\nand go on' : 'Record';
   });
   /** A wait that has all its readings and is not over: what there is to do meanwhile. */
