@@ -26,6 +26,9 @@ export class KnownValues {
   private readonly bits: NameBits;
   private readonly givings: ReadonlyMap<Step, Giving>;
   private readonly settersOf: ReadonlyMap<string, readonly RunPlace[]>;
+  /** By way, and by the finding that the run heads for where that matters. */
+  private readonly plans = new Map<Way, Map<string | undefined, EdgePlan>>();
+  private readonly asking = new Map<Step, boolean>();
 
   constructor(
     private readonly graph: RunGraph,
@@ -40,13 +43,10 @@ export class KnownValues {
     const first = graph.places[0];
     if (first === undefined) return;
     this.known.set(first, this.bits.of(startingNames(document)));
-    for (let isChanged = true; isChanged;) {
-      isChanged = false;
-      for (const place of graph.places) {
-        if (!this.known.has(place)) continue;
-        for (const edge of place.out) isChanged = this.pass(edge) || isChanged;
-      }
-    }
+    this.goThrough([first]);
+    // What rests on a truth rests on the steps that set it: it is looked at again until nothing changes.
+    const resting = graph.places.filter((place) => place.out.some((edge) => this.planOf(edge).resting.length > 0));
+    while (this.goThrough(resting.filter((place) => this.known.has(place))));
   }
 
   /** Whether a run can come here at all, as far as truths tell: they are false until a step sets them. */
@@ -87,6 +87,21 @@ export class KnownValues {
     };
   }
 
+  /** Carries what is known onwards from places, and from those that change by it; whether anything changed. */
+  private goThrough(places: readonly RunPlace[]): boolean {
+    let isChanged = false;
+    const waiting = new Set(places);
+    for (const place of waiting) {
+      waiting.delete(place);
+      for (const edge of place.out) {
+        if (!this.pass(edge)) continue;
+        isChanged = true;
+        waiting.add(edge.to);
+      }
+    }
+    return isChanged;
+  }
+
   /** Carries what is known over an edge; whether that changed anything. */
   private pass(edge: RunEdge): boolean {
     const coming = this.after(edge);
@@ -98,33 +113,61 @@ export class KnownValues {
   }
 
   /** What is known after an edge: a step that is stopped gives nothing. Undefined where it cannot be taken yet. */
-  private after({ from, way }: RunEdge): bigint | undefined {
-    const givesNothing = way.kind === 'stop' || (way.kind === 'cannot-measure' && this.counts === 'measured');
-    if (givesNothing) return this.at(from, 'before');
-    let known = this.at(from, 'at-ways');
-    for (const { tree, isTaken } of this.conditionsPassed(from, way)) {
-      for (const name of namesIn(tree)) {
-        const isNew = !this.bits.has(known, name);
-        if (isNew && isImplied(this.truthWithout(tree, name, from), isTaken)) known |= this.bits.of([name]);
-        const needed = isTaken ? this.knownWithTruth(tree, name, from) : 0n;
-        if (needed === undefined) return undefined;
-        known |= needed;
-      }
+  private after(edge: RunEdge): bigint | undefined {
+    const { from } = edge;
+    const { implied, resting } = this.planOf(edge);
+    if (implied === undefined) return this.at(from, 'before');
+    let known = this.at(from, 'at-ways') | implied;
+    for (const setters of resting) {
+      const set = this.knownAtAll(setters);
+      if (set === undefined) return undefined;
+      known |= set;
     }
     return known;
   }
 
-  /**
-   * A way that needs a truth is taken after a step that sets it, and what was known there is known still. Undefined as
-   * long as no such step was come to.
-   */
-  private knownWithTruth(tree: Expression, name: string, from: RunPlace): bigint | undefined {
-    const setters = this.settersOf.get(name);
-    if (setters === undefined || this.truthUnset(tree, name, from) !== 'fails') return 0n;
+  /** A way that needs a truth is taken after a step that sets it, and what was known there is known still. */
+  private knownAtAll(setters: readonly RunPlace[]): bigint | undefined {
     return setters
       .filter((setter) => this.known.has(setter))
       .map((setter) => this.at(setter, 'at-ways'))
       .reduce<bigint | undefined>((all, set) => (all === undefined ? set : all & set), undefined);
+  }
+
+  /** What an edge tells by itself: it depends on the finding that the run heads for only where a condition asks. */
+  private planOf({ from, way }: RunEdge): EdgePlan {
+    const givesNothing = way.kind === 'stop' || (way.kind === 'cannot-measure' && this.counts === 'measured');
+    if (givesNothing) return tellsNothing;
+    const plans = this.plans.get(way) ?? new Map<string | undefined, EdgePlan>();
+    this.plans.set(way, plans);
+    const verdict = this.asksForFinding(from.step) ? from.verdict : undefined;
+    const plan = plans.get(verdict) ?? this.newPlan(from, way);
+    plans.set(verdict, plan);
+    return plan;
+  }
+
+  private newPlan(from: RunPlace, way: Way): EdgePlan {
+    let implied = 0n;
+    const resting: (readonly RunPlace[])[] = [];
+    for (const { tree, isTaken } of this.conditionsPassed(from, way)) {
+      for (const name of namesIn(tree)) {
+        if (isImplied(this.truthWithout(tree, name, from), isTaken)) implied |= this.bits.of([name]);
+        const setters = isTaken ? this.settersOf.get(name) : undefined;
+        if (setters !== undefined && this.truthUnset(tree, name, from) === 'fails') resting.push(setters);
+      }
+    }
+    return { implied, resting };
+  }
+
+  private asksForFinding(step: Step): boolean {
+    const known = this.asking.get(step);
+    if (known !== undefined) return known;
+    const asks = conditionsOf(step).some((when) => {
+      const tree = this.subject.trees.get(when);
+      return tree !== undefined && namesIn(tree).some((name) => this.graph.isFinding(name));
+    });
+    this.asking.set(step, asks);
+    return asks;
   }
 
   private truthUnset(tree: Expression, name: string, { verdict }: RunPlace): PartialTruth {
@@ -135,13 +178,28 @@ export class KnownValues {
 
   /** The conditions that were tried before this way, and its own. */
   private conditionsPassed({ step }: RunPlace, way: Way): readonly { tree: Expression; isTaken: boolean }[] {
-    if (step.kind === 'finding' || way.kind === 'cannot-measure') return [];
+    if (way.kind === 'cannot-measure') return [];
     const last = way.branch ?? Number.POSITIVE_INFINITY;
-    return (step.next ?? []).slice(0, last + 1).flatMap(({ when }, index) => {
-      const tree = this.subject.trees.get(when);
-      return tree === undefined ? [] : [{ tree, isTaken: index === last }];
-    });
+    return conditionsOf(step)
+      .slice(0, last + 1)
+      .flatMap((when, index) => {
+        const tree = this.subject.trees.get(when);
+        return tree === undefined ? [] : [{ tree, isTaken: index === last }];
+      });
   }
+}
+
+/** What the conditions on the way tell; `implied` is undefined where the step gives nothing. */
+interface EdgePlan {
+  readonly implied: bigint | undefined;
+  /** For each truth that the way needs, the places that can set it. */
+  readonly resting: readonly (readonly RunPlace[])[];
+}
+
+const tellsNothing: EdgePlan = { implied: undefined, resting: [] };
+
+function conditionsOf(step: Step): readonly string[] {
+  return step.kind === 'finding' ? [] : (step.next ?? []).map(({ when }) => when);
 }
 
 function settersIn({ places }: RunGraph): ReadonlyMap<string, readonly RunPlace[]> {

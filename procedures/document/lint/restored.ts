@@ -26,19 +26,18 @@ export function neverRestored({ document, graphs }: LintSubject): readonly LintF
 function leftAtFindings({ places }: RunGraph, bits: NameBits): bigint {
   const open = new Map<RunPlace, bigint>();
   let left = 0n;
-  for (let isChanged = true; isChanged;) {
-    isChanged = false;
-    for (const place of places) {
-      const before = open.get(place) ?? 0n;
-      if (place.step.kind === 'finding') left |= before;
-      const after =
-        place.step.kind === 'restore' ? 0n : before | bits.of((place.step.disturbs ?? []).map(({ item }) => item));
-      for (const { to } of place.out) {
-        const known = open.get(to) ?? 0n;
-        if ((known | after) === known) continue;
-        open.set(to, known | after);
-        isChanged = true;
-      }
+  const waiting = new Set(places);
+  for (const place of waiting) {
+    waiting.delete(place);
+    const before = open.get(place) ?? 0n;
+    if (place.step.kind === 'finding') left |= before;
+    const after =
+      place.step.kind === 'restore' ? 0n : before | bits.of((place.step.disturbs ?? []).map(({ item }) => item));
+    for (const { to } of place.out) {
+      const known = open.get(to) ?? 0n;
+      if ((known | after) === known) continue;
+      open.set(to, known | after);
+      waiting.add(to);
     }
   }
   return left;

@@ -47,6 +47,7 @@ export class RunGraph {
   readonly looseEnds: readonly LooseEnd[];
   private readonly byKey = new Map<string, RunPlace>();
   private readonly stepPlaces = new Map<string, number>();
+  private readonly ways: (readonly Way[])[] = [];
 
   constructor(
     private readonly document: ProcedureDocument,
@@ -155,7 +156,7 @@ export class RunGraph {
   private openWays(from: RunPlace): readonly Way[] {
     const ways: Way[] = [];
     let isDecided = false;
-    for (const way of waysOf(this.document, from.place)) {
+    for (const way of this.waysAt(from.place)) {
       const isTried = way.kind === 'branch' || way.kind === 'thenceforth' || way.kind === 'otherwise';
       if (isTried && isDecided && way.kind !== 'thenceforth') continue;
       const truth = this.truthOf(way, from.verdict);
@@ -164,6 +165,15 @@ export class RunGraph {
       ways.push(way);
       if (way.kind === 'branch' && truth === 'holds') isDecided = true;
     }
+    return ways;
+  }
+
+  /** A step's ways are the same whatever the run heads for. */
+  private waysAt(place: number): readonly Way[] {
+    const known = this.ways[place];
+    if (known !== undefined) return known;
+    const ways = waysOf(this.document, place);
+    this.ways[place] = ways;
     return ways;
   }
 
@@ -176,8 +186,12 @@ export class RunGraph {
   /** Of the truths only findings and halves are settled before the run. */
   settledTruth(name: string, verdict: string | undefined): boolean | undefined {
     if (this.half !== undefined && (name === 'cold' || name === 'warm')) return name === this.half;
+    return this.isFinding(name) ? name === verdict : undefined;
+  }
+
+  isFinding(name: string): boolean {
     const place = this.stepPlaces.get(name);
-    return place !== undefined && this.document.steps[place]?.kind === 'finding' ? name === verdict : undefined;
+    return place !== undefined && this.document.steps[place]?.kind === 'finding';
   }
 }
 

@@ -16,11 +16,11 @@ import { wayName } from './ways';
 export function valuesBeforeUse(subject: LintSubject): readonly LintFinding[] {
   const findings = new Map<string, LintFinding>();
   const uses = usesByStep(subject);
-  const titles = new Set(subject.document.steps.map(({ id }) => id));
+  const texts = new TemplateUses(subject);
   for (const graph of subject.graphs) {
     const known = new KnownValues(graph, subject);
     for (const place of graph.places.filter((candidate) => known.isReached(candidate))) {
-      for (const use of [...(uses.get(place.step.id) ?? []), ...templateUses(place, titles)]) {
+      for (const use of [...(uses.get(place.step.id) ?? []), ...texts.at(place)]) {
         for (const name of missingFor(use, place, known, subject)) {
           const key = `${use.pointer} ${name}`;
           if (!findings.has(key)) findings.set(key, finding(use, name, place, wayWithout(graph, place, name, isStop)));
@@ -67,22 +67,37 @@ const isSentence = ({ pointer }: ExpressionPlace): boolean => /\/(cause|correcti
 const isBranch = ({ pointer }: ExpressionPlace): boolean => /\/next\/\d+\/when$/.test(pointer);
 
 /** The reasons of the ways that the run can take here, and a finding's verdict; a step's id stands for its title. */
-function templateUses(place: RunPlace, titles: ReadonlySet<string>): readonly Use[] {
-  const { step } = place;
-  const valueNames = (template: string): readonly string[] =>
-    namesInTemplate(template).filter((name) => !visitNames.includes(name) && !titles.has(name));
-  if (step.kind === 'finding') {
-    const names = valueNames(step.verdict);
-    return [{ where: 'the verdict', pointer: `/steps/${place.place}/verdict`, when: 'before', names }];
+class TemplateUses {
+  private readonly titles: ReadonlySet<string>;
+  private readonly byPointer = new Map<string, Use>();
+
+  constructor({ document }: LintSubject) {
+    this.titles = new Set(document.steps.map(({ id }) => id));
   }
-  return place.out
-    .filter(({ way }) => way.kind !== 'stop')
-    .map(({ way }) => ({
-      where: `the reason of ${wayName(way)}`,
-      pointer: `${way.pointer}/because`,
-      when: 'at-ways',
-      names: valueNames(way.exit.because),
-    }));
+
+  at({ step, place, out }: RunPlace): readonly Use[] {
+    if (step.kind === 'finding') {
+      const pointer = `/steps/${place}/verdict`;
+      return [this.use(pointer, () => ({ where: 'the verdict', when: 'before' }), step.verdict)];
+    }
+    return out
+      .filter(({ way }) => way.kind !== 'stop')
+      .map(({ way }) => {
+        const at = (): Pick<Use, 'where' | 'when'> => ({ where: `the reason of ${wayName(way)}`, when: 'at-ways' });
+        return this.use(`${way.pointer}/because`, at, way.exit.because);
+      })
+      .filter(({ names }) => names.length > 0);
+  }
+
+  /** A step is come to heading for many findings, and its texts are the same. */
+  private use(pointer: string, at: () => Pick<Use, 'where' | 'when'>, template: string): Use {
+    const known = this.byPointer.get(pointer);
+    if (known !== undefined) return known;
+    const names = namesInTemplate(template).filter((name) => !visitNames.includes(name) && !this.titles.has(name));
+    const use: Use = { ...at(), pointer, names };
+    this.byPointer.set(pointer, use);
+    return use;
+  }
 }
 
 function missingFor(use: Use, place: RunPlace, known: KnownValues, { trees }: LintSubject): readonly string[] {

@@ -1,6 +1,7 @@
 import type { Expression } from '../../expression/expression';
 import { factsOf, type Beforehand, type Fact } from './decision-facts';
-import { findCase, type Search } from './find-case';
+import { findCase, type PreparedCondition } from './find-case';
+import { possibleTruths } from './possible-truths';
 import { isFoundByLot } from './try-cases';
 
 /** Whether a branch can be the first that holds; `unlikely` where neither a case nor a proof was found. */
@@ -8,10 +9,17 @@ export type Taken = 'can-be' | 'never' | 'unlikely';
 
 /** An ordered list of conditions, asked about all cases that there can be. */
 export class DecisionCases {
-  constructor(
-    private readonly conditions: readonly Expression[],
-    private readonly beforehand: Beforehand,
-  ) {}
+  private readonly facts: ReadonlyMap<string, Fact>;
+  private readonly conditions: readonly PreparedCondition[];
+
+  constructor(conditions: readonly Expression[], beforehand: Beforehand) {
+    const facts = factsOf(conditions, beforehand);
+    this.facts = facts;
+    this.conditions = conditions.map((condition) => ({
+      truths: possibleTruths(condition, facts, beforehand),
+      keys: [...factsOf([condition], beforehand).keys()],
+    }));
+  }
 
   /** Whether a run can take the branch, as far as its own condition and those before it tell. */
   taken(index: number): Taken {
@@ -32,20 +40,17 @@ export class DecisionCases {
    * out of both sides.
    */
   missesOnlyPoints(): boolean {
-    const facts = factsOf(this.conditions, this.beforehand);
-    if (![...facts.values()].some(({ fact }) => fact === 'cell' || fact === 'order')) return false;
-    const wanted = { not: this.conditions, allows: isMeasured };
-    const besidePoints = findCase({ ...wanted, allows: isBesidePoint }, facts, this.beforehand);
-    return besidePoints.found === 'none' && findCase(wanted, facts, this.beforehand).found === 'case';
+    if (![...this.facts.values()].some(({ fact }) => fact === 'cell' || fact === 'order')) return false;
+    const besidePoints = findCase({ not: this.conditions, allows: isBesidePoint }, this.facts);
+    return besidePoints === 'none' && findCase({ not: this.conditions, allows: isMeasured }, this.facts) === 'case';
   }
 
-  private takenAfter(index: number, not: readonly Expression[]): Taken {
+  private takenAfter(index: number, not: readonly PreparedCondition[]): Taken {
     const holding = this.conditions[index];
     if (holding === undefined) return 'can-be';
-    const wanted = { not, holding };
-    const { found }: Search = findCase(wanted, factsOf([holding, ...not], this.beforehand), this.beforehand);
+    const found = findCase({ not, holding }, this.facts);
     if (found !== 'open') return found === 'none' ? 'never' : 'can-be';
-    return isFoundByLot(wanted, this.beforehand) ? 'can-be' : 'unlikely';
+    return isFoundByLot({ not, holding }, this.facts) ? 'can-be' : 'unlikely';
   }
 }
 

@@ -119,9 +119,16 @@ function cellsAround(figures: readonly number[], { low, high }: Interval): reado
     const last = cuts.at(-1);
     if (last === undefined || !isNearlyEqual(last, figure)) cuts.push(figure);
   }
-  const cells: Interval[] = [{ low, high: cuts[0] ?? high }];
-  cuts.forEach((cut, index) => cells.push({ low: cut, high: cut }, { low: cut, high: cuts[index + 1] ?? high }));
+  const above = (cut: number): number => cut + nextTo(cut);
+  const below = (cut: number | undefined): number => (cut === undefined ? high : cut - nextTo(cut));
+  const cells: Interval[] = [{ low, high: below(cuts[0]) }];
+  cuts.forEach((cut, index) => cells.push({ low: cut, high: cut }, { low: above(cut), high: below(cuts[index + 1]) }));
   return cells.map((cell) => ({ low: Math.max(cell.low, low), high: Math.min(cell.high, high) }));
+}
+
+/** A cell beside a figure ends just short of it, by a little more than what counts as equal (`isNearlyEqual`). */
+function nextTo(figure: number): number {
+  return Math.max(1e-11 * Math.abs(figure), 1e-14);
 }
 
 /** Whether an expression of measured values can still have none: a division, and calculations with a range. */

@@ -12,113 +12,147 @@ export const untold = 4;
 /** Facts that are settled, by their keys; the others are open. */
 export type Settled = ReadonlyMap<string, number>;
 
-/** Evaluates a condition over what is settled, with the logic of a run (strong Kleene, see `compileEvaluation`). */
-export class PossibleTruths {
+/** A condition that can be asked what it may come to. */
+export type PossibleTruths = (settled: Settled) => Truths;
+
+/** Compiles a condition over facts, with the logic of a run (strong Kleene, see `compileEvaluation`). */
+export function possibleTruths(
+  condition: Expression,
+  facts: ReadonlyMap<string, Fact>,
+  beforehand: Beforehand,
+): PossibleTruths {
+  return new Compiler(facts, beforehand).of(condition);
+}
+
+class Compiler {
   constructor(
     private readonly facts: ReadonlyMap<string, Fact>,
     private readonly beforehand: Beforehand,
   ) {}
 
-  of(node: Expression, settled: Settled): Truths {
+  of(node: Expression): PossibleTruths {
     switch (node.node) {
       case 'name':
-        return this.truth(node.name, settled);
-      case 'not':
-        return negated(this.of(node.of, settled));
+        return this.truth(node.name);
+      case 'not': {
+        const of = this.of(node.of);
+        return (settled) => negated(of(settled));
+      }
       case 'logic': {
-        const [left, right] = [this.of(node.left, settled), this.of(node.right, settled)];
-        return node.operator === 'and' ? both(left, right) : negated(both(negated(left), negated(right)));
+        const [left, right] = [this.of(node.left), this.of(node.right)];
+        if (node.operator === 'and') return (settled) => both(left(settled), right(settled));
+        return (settled) => negated(both(negated(left(settled)), negated(right(settled))));
       }
       case 'about':
-        return this.about(node, settled);
+        return this.about(node);
       case 'comparison':
-        return this.comparison(node, settled);
+        return this.comparison(node);
       default:
-        return holds | fails | untold;
+        return () => holds | fails | untold;
     }
   }
 
-  private truth(name: string, settled: Settled): Truths {
-    if (this.beforehand.isNever(name)) return fails;
-    const alone = settled.get(`truth ${name}`);
-    if (alone !== undefined) return alone === 1 ? holds : fails;
+  private truth(name: string): PossibleTruths {
+    if (this.beforehand.isNever(name)) return () => fails;
     const group = this.beforehand.groups.find(({ names }) => names.includes(name));
-    const which = group === undefined ? undefined : settled.get(`one-of ${group.names.join(' ')}`);
-    if (group === undefined || which === undefined) return holds | fails;
-    return group.names[which] === name ? holds : fails;
+    const key = group === undefined ? `truth ${name}` : `one-of ${group.names.join(' ')}`;
+    const place = group === undefined ? 1 : group.names.indexOf(name);
+    return (settled) => {
+      const known = settled.get(key);
+      if (known === undefined) return holds | fails;
+      return known === place ? holds : fails;
+    };
   }
 
-  private about({ asks, name }: AboutNode, settled: Settled): Truths {
-    const measured = this.measured(name, settled);
+  private about({ asks, name }: AboutNode): PossibleTruths {
+    const measured = this.measured(name);
     if (asks === 'measured') return measured;
-    const result = settled.get(`result ${name}`);
-    const told = result === undefined ? holds | fails : result === resultPlaces[asks] ? holds : fails;
-    return (measured & holds ? told : 0) | (measured & fails ? untold : 0);
+    const key = `result ${name}`;
+    const place = resultPlaces[asks];
+    return (settled) => {
+      const result = settled.get(key);
+      const told = result === undefined ? holds | fails : result === place ? holds : fails;
+      const has = measured(settled);
+      return (has & holds ? told : 0) | (has & fails ? untold : 0);
+    };
   }
 
   /** Whether a quantity has a value. */
-  private measured(name: string, settled: Settled): Truths {
+  private measured(name: string): PossibleTruths {
     const { isFresh, range } = this.beforehand;
-    if (isFresh(name) || constantOf(range(name)) !== undefined) return holds;
-    const known = settled.get(`measured ${name}`);
-    if (known === undefined) return holds | fails;
-    return known === 1 ? holds : fails;
+    if (isFresh(name) || constantOf(range(name)) !== undefined) return () => holds;
+    const key = `measured ${name}`;
+    return (settled) => {
+      const known = settled.get(key);
+      if (known === undefined) return holds | fails;
+      return known === 1 ? holds : fails;
+    };
   }
 
-  private comparison(node: ComparisonNode, settled: Settled): Truths {
-    const measured = namesIn(node).map((name) => this.measured(name, settled));
-    const missing = measured.some((truths) => truths & fails) ? untold : 0;
-    if (measured.some((truths) => !(truths & holds))) return untold;
-    const orders = this.orders(node, settled);
-    const told = (['less', 'equal', 'greater'] as const)
-      .filter((order) => orders & orderBits[order])
-      .reduce((truths, order) => truths | (agrees[node.operator][order] ? holds : fails), 0);
-    return told | (orders & orderBits.none ? untold : 0) | missing;
+  private comparison(node: ComparisonNode): PossibleTruths {
+    const measured = namesIn(node).map((name) => this.measured(name));
+    const ordersOf = this.orders(node);
+    const agreeing = agrees[node.operator];
+    return (settled) => {
+      let missing = 0;
+      for (const has of measured) {
+        const truths = has(settled);
+        if (!(truths & holds)) return untold;
+        if (truths & fails) missing = untold;
+      }
+      const orders = ordersOf(settled);
+      const isTrue = orders & agreeing ? holds : 0;
+      const isFalse = orders & ~agreeing & orderBits.any ? fails : 0;
+      return isTrue | isFalse | (orders & orderBits.none ? untold : 0) | missing;
+    };
   }
 
   /** How the two sides may compare. */
-  private orders(node: ComparisonNode, settled: Settled): number {
-    const { range } = this.beforehand;
-    const against = figureOf(node, range);
-    if (against?.name !== undefined)
-      return this.ordersToFigure(against.name, against.figure, against.isSwapped, settled);
+  private orders(node: ComparisonNode): (settled: Settled) => number {
+    const against = figureOf(node, this.beforehand.range);
+    if (against?.name !== undefined) return this.ordersToFigure(against.name, against.figure, against.isSwapped);
     const { left, right, isSwapped, isSame, key } = orderedSides(node);
-    const inCells = (name: string): Interval => this.rangeWithin(name, settled);
-    const feasible = isSame ? orderBits.equal : feasibleOrders(intervalOf(left, inCells), intervalOf(right, inCells));
-    const fact = this.facts.get(key);
-    const known = settled.get(key);
-    const lacking = fact?.size === 4 ? orderBits.none : 0;
-    const orders = known === undefined ? feasible | lacking : (feasible | lacking) & (1 << known);
-    return isSwapped ? swapped(orders) : orders;
+    const lacking = this.facts.get(key)?.size === 4 ? orderBits.none : 0;
+    const names = namesIn(node);
+    return (settled) => {
+      const cells = new Map(names.map((name) => [name, this.rangeWithin(name, settled)]));
+      const inCells = (name: string): Interval => cells.get(name) ?? this.beforehand.range(name);
+      const sides = isSame ? orderBits.equal : feasibleOrders(intervalOf(left, inCells), intervalOf(right, inCells));
+      const feasible = sides | lacking;
+      const known = settled.get(key);
+      const orders = known === undefined ? feasible : feasible & (1 << known);
+      return isSwapped ? swapped(orders) : orders;
+    };
   }
 
-  private ordersToFigure(name: string, figure: number, isSwapped: boolean, settled: Settled): number {
-    const orders = feasibleOrders(this.rangeWithin(name, settled), { low: figure, high: figure });
-    const place = settled.get(`cell ${name}`);
-    // A cell between two figures does not hold its ends.
-    const inside = place !== undefined && place % 2 === 0 ? orders & ~orderBits.equal : orders;
-    return isSwapped ? swapped(inside) : inside;
+  private ordersToFigure(name: string, figure: number, isSwapped: boolean): (settled: Settled) => number {
+    const there = { low: figure, high: figure };
+    return (settled) => {
+      const orders = feasibleOrders(this.rangeWithin(name, settled), there);
+      return isSwapped ? swapped(orders) : orders;
+    };
   }
 
   private rangeWithin(name: string, settled: Settled): Interval {
     const place = settled.get(`cell ${name}`);
-    const fact = this.facts.get(`cell ${name}`);
+    const fact = place === undefined ? undefined : this.facts.get(`cell ${name}`);
     const cell = place === undefined || fact?.fact !== 'cell' ? undefined : fact.cells[place];
     return cell ?? this.beforehand.range(name);
   }
 }
 
 const resultPlaces: Readonly<Partial<Record<AboutNode['asks'], number>>> = { inBand: 0, outOfBand: 1, tooClose: 2 };
-const orderBits = { less: 1, equal: 2, greater: 4, none: 8 } as const;
-type Order = 'less' | 'equal' | 'greater';
+/** Bit by value of an `order` fact; `any` is all three that tell something. */
+const orderBits = { less: 1, equal: 2, greater: 4, none: 8, any: 7 } as const;
 
-const agrees: Readonly<Record<ComparisonNode['operator'], Readonly<Record<Order, boolean>>>> = {
-  '<': { less: true, equal: false, greater: false },
-  '<=': { less: true, equal: true, greater: false },
-  '>': { less: false, equal: false, greater: true },
-  '>=': { less: false, equal: true, greater: true },
-  '==': { less: false, equal: true, greater: false },
-  '!=': { less: true, equal: false, greater: true },
+/** The orders of the two sides in which a comparison holds. */
+const agrees: Readonly<Record<ComparisonNode['operator'], number>> = {
+  '<': orderBits.less,
+  '<=': orderBits.less | orderBits.equal,
+  '>': orderBits.greater,
+  '>=': orderBits.greater | orderBits.equal,
+  '==': orderBits.equal,
+  '!=': orderBits.less | orderBits.greater,
 };
 
 function feasibleOrders(left: Interval, right: Interval): number {
