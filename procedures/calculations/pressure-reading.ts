@@ -1,52 +1,151 @@
-import { fitLine } from './fit';
+import { displayUncertainty, scatterBehindDisplay } from './display-step';
+import { hiddenShare, lastOfRun } from './pressure-swing';
 import { indexAt, scatterOf, type Series } from './ramp-series';
+import { largestMove, lineThrough, slopeBeside, stepsS, type EndLine } from './ramp-slopes';
 
 /** The pressure just before the drop is read from a short stretch, so that a step of a hand-turned supply shows. */
 const readingS = 0.5;
 const fewestReadingSamples = 8;
-/** The supply's steps are looked for in this long a stretch before the drop. */
-const stepsS = 10;
+const independentReadings = 4;
+/** Half-width of the confidence intervals in standard deviations. */
+const agreeing = 3;
+/** By hand the pressure goes up in steps, several times as steep as in the mean: the last reading is worth the most. */
+const byHand = 2;
+const agreeingByHand = 1;
+
+/**
+ * A valve begins to close before it is shut, and runs the rest of the way by itself between two samples: as far as this
+ * above the last pressure at which it was heard (our allowance; no source).
+ */
+const closingTravelKpa = 0.2;
 
 /** A pressure read off the end of a stretch of the series. */
 export interface EndReading {
   readonly valueKpa: number;
-  /** Standard uncertainty from how far the stretch is from a straight rise. */
+  /** Standard uncertainty from the scatter of the stretch. */
   readonly scatterKpa: number;
-  /** How far the pressure may rise within the gap that follows, unseen; never below 0. */
+  /** Standard uncertainty from the display's step. */
+  readonly displayKpa: number;
+  /** Standard deviation of a single reading of it. */
+  readonly deviationKpa: number;
+  /** How far the pressure may have fallen (0 or less) and risen (0 or more) within the gap that follows, unseen. */
+  readonly unseenFallKpa: number;
   readonly unseenRiseKpa: number;
+  /** How far the valve may have gone on closing, and the pressure rising, until it was shut; 0 or more. */
+  readonly travelKpa: number;
+  /** How much further a step of a hand-turned supply would have taken it, if one fell into the gap; 0 or more. */
+  readonly unseenStepKpa: number;
+  /** The reading at which the gap ends, less `valueKpa`; undefined at the end of the series. */
+  readonly nextKpa: number | undefined;
 }
+
+/** Where and how to read a pressure. */
+export interface ReadingPlace {
+  readonly timeS: number;
+  /** How long nothing is known after that. */
+  readonly gapS: number;
+  /** When the valve was shut for certain; the end of the gap when it is left out. */
+  readonly shutByS?: number | undefined;
+  readonly resolutionKpa: number;
+  /** Before this the pressure went another way: the valve was shut for a moment. */
+  readonly sinceS?: number | undefined;
+}
+
+const alone = (valueKpa: number, resolutionKpa: number, riseKpa = 0): EndReading => ({
+  valueKpa,
+  scatterKpa: 0,
+  displayKpa: resolutionKpa / Math.sqrt(12),
+  deviationKpa: 0,
+  unseenFallKpa: 0,
+  unseenRiseKpa: riseKpa,
+  travelKpa: closingTravelKpa,
+  unseenStepKpa: 0,
+  nextKpa: undefined,
+});
 
 /**
  * Reads the pressure at `timeS` from the samples before it, since one alone would carry all of its scatter, and tells
- * how far it may rise in the `gapS` that follows.
+ * how far it may go in the `gapS` that follows.
  */
-export function readPressureAt(pressure: Series, timeS: number, gapS: number, resolutionKpa: number): EndReading {
+export function readPressureAt(pressure: Series, place: ReadingPlace): EndReading {
+  const { timeS, gapS, shutByS = timeS + gapS, resolutionKpa, sinceS } = place;
   const { timeS: times, value } = pressure;
   const end = Math.max(1, indexAt(times, timeS + 1e-9));
   const before = value[end - 1];
   const after = value[end];
   // Typed points stand seconds apart: a line through them would take a pause for a rise. The truth lies between the two.
   if (before !== undefined && after !== undefined && timeS - (times[end - 1] ?? timeS) > readingS + 1e-9) {
-    return { valueKpa: before, scatterKpa: 0, unseenRiseKpa: Math.max(0, after - before) };
+    return alone(before, resolutionKpa, Math.max(0, after - before));
+  }
+  const longAgo = Math.min(end - 1, indexAt(times, timeS - stepsS));
+  const next = value[indexAt(times, shutByS - 1e-9)];
+  if (sinceS !== undefined) {
+    return lastOfRun(pressure, { end, longAgo, first: indexAt(times, sinceS) }, gapS, resolutionKpa, next);
   }
   const start = Math.max(0, Math.min(indexAt(times, timeS - readingS), end - fewestReadingSamples));
-  const x = times.subarray(start, end).map((time) => time - timeS);
-  const y = value.subarray(start, end);
-  if (x.length < 3 || x[0] === x[x.length - 1])
-    return { valueKpa: y[y.length - 1] ?? NaN, scatterKpa: 0, unseenRiseKpa: 0 };
-  const { slope, intercept, residualDeviation } = fitLine(x, y);
-  // Not divided by the root of n: neighbours stray together while a valve begins to move.
-  const stepKpa = largestRise(pressure, Math.min(start, indexAt(times, timeS - stepsS)), end, gapS) - resolutionKpa;
-  return { valueKpa: intercept, scatterKpa: residualDeviation, unseenRiseKpa: Math.max(0, slope * gapS, stepKpa) };
+  if (end - start < 3 || times[start] === times[end - 1]) return alone(value[end - 1] ?? NaN, resolutionKpa);
+  const line = lineThrough(pressure, start, end, timeS);
+  const slope = slopeBeside(pressure, line, { first: longAgo, start, end }, resolutionKpa);
+  const deviationKpa = Math.max(scatterOf(value, longAgo, end), resolutionKpa / 2);
+  const steepestKpa = largestMove(pressure, Math.min(start, longAgo), end, gapS, resolutionKpa, 1);
+  const isByHand = steepestKpa > byHand * Math.max(0, slope.slope * gapS);
+  const reach = (isByHand ? agreeingByHand : agreeing) * deviationKpa;
+  const { valueKpa, count, lagS, disagreeing } = agreeingEnd(pressure, { start, end, timeS }, slope.slope, reach);
+  const turnedFrom = end - Math.max(3, disagreeing);
+  const turning = disagreeing > 0 ? lineThrough(pressure, turnedFrom, end, timeS).slope : 0;
+  const riseKpa = Math.max(0, slope.slope * gapS, turning * gapS);
+  return {
+    valueKpa,
+    scatterKpa: Math.hypot(deviationOfMean(line, count, resolutionKpa), slope.slopeError * lagS),
+    displayKpa: displayUncertainty(resolutionKpa, scatterBehindDisplay(pressure, 0, end, resolutionKpa)),
+    deviationKpa: line.residualDeviation,
+    unseenFallKpa: 0,
+    unseenRiseKpa: riseKpa,
+    travelKpa: closingTravelKpa,
+    unseenStepKpa: Math.max(0, steepestKpa - riseKpa),
+    nextKpa: next === undefined ? undefined : next - valueKpa,
+  };
 }
 
-/** The largest rise within `spanS`, or between neighbours, in [from..to), less what their common scatter explains. */
-function largestRise({ timeS: times, value }: Series, from: number, to: number, spanS: number): number {
-  let largest = 0;
-  let start = from;
-  for (let index = from + 1; index < to; index++) {
-    while (start < index - 1 && (times[start] ?? NaN) < (times[index] ?? NaN) - spanS - 1e-9) start++;
-    largest = Math.max(largest, (value[index] ?? NaN) - (value[start] ?? NaN));
-  }
-  return Math.max(0, largest - 2 * Math.SQRT2 * scatterOf(value, from, to));
+interface EndMean {
+  readonly valueKpa: number;
+  readonly count: number;
+  /** From the middle of the readings to the moment of reading. */
+  readonly lagS: number;
+  /** How many of the last readings no longer agreed; 0 when all did. */
+  readonly disagreeing: number;
 }
+
+/**
+ * The pressure at `timeS` by the mean of the last readings of [start..end), carried on along the slope: of as many as
+ * agree with each other, for a hand may just have begun to turn the supply.
+ *
+ * Source: the intersection of confidence intervals (Goldenshluger and Nemirovski, 1997), growing by doubling.
+ */
+function agreeingEnd(
+  { timeS: times, value }: Series,
+  { start, end, timeS }: { start: number; end: number; timeS: number },
+  slope: number,
+  reachOfOneKpa: number,
+): EndMean {
+  let best = { valueKpa: NaN, count: 0, lagS: 0, disagreeing: 0 };
+  let [low, high] = [-Infinity, Infinity];
+  let [sum, lag, count] = [0, 0, 0];
+  for (let wanted = 1; count < end - start; wanted *= 2) {
+    for (; count < Math.min(wanted, end - start); count++) {
+      const index = end - 1 - count;
+      sum += value[index] ?? NaN;
+      lag += timeS - (times[index] ?? NaN);
+    }
+    const valueKpa = (sum + slope * lag) / count;
+    const reachKpa = reachOfOneKpa / Math.sqrt(count);
+    [low, high] = [Math.max(low, valueKpa - reachKpa), Math.min(high, valueKpa + reachKpa)];
+    if (low > high) return { ...best, disagreeing: count };
+    best = { valueKpa, count, lagS: lag / count, disagreeing: 0 };
+  }
+  return best;
+}
+
+/** Neighbours stray together: their mean is no better than that of a few. */
+const deviationOfMean = ({ residualDeviation }: EndLine, count: number, resolutionKpa: number): number =>
+  Math.max(residualDeviation, hiddenShare * resolutionKpa) / Math.sqrt(Math.min(count, independentReadings));

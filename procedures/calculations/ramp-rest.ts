@@ -62,7 +62,10 @@ function calmRest({ timeS, value }: Series, lengthS: number, resolutionKpa: numb
   if (surelyDriftsKpa > Math.max(mayDriftKpa, resolutionKpa / 2)) return undefined;
   let sum = 0;
   for (let index = 0; index < count; index++) sum += value[index] ?? NaN;
-  return { levelKpa: sum / count, deviationKpa: scatterOf(value, 0, count) / Math.sqrt(count) };
+  return {
+    levelKpa: sum / count,
+    deviationKpa: scatterOf(value, 0, count) / Math.sqrt(count),
+  };
 }
 
 /** The rest at the start of a ramp: before the pressure rises and before the hiss begins. */

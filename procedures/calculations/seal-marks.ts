@@ -1,5 +1,6 @@
 import { requireInRange } from './argument-range';
 import { readPressureAt } from './pressure-reading';
+import { readSwing } from './pressure-swing';
 import { restBefore } from './ramp-rest';
 import { rampSeries, smallestStep, type RampSample } from './ramp-series';
 import { sealAt, type SealOptions, type SealPoint } from './seal-result';
@@ -23,7 +24,9 @@ const fewestSamples = 3;
  * The mark comes 0.2 to 1 s after the noise has gone, when the pressure has already jumped. So the pressure is read
  * 1 s before the mark, and what it may have risen until 0.2 s before it is in the value (half) and in the uncertainty
  * (half, as a rectangular half-width). `timeS` is the middle of that stretch. Without a gauge the manifold pressure is
- * taken from its own rest before `noiseBeginsS`. `confidence` tells how far a recorded sound level bears the mark out,
+ * taken from its own rest before `noiseBeginsS`. Where the pressure swung down shortly before, as with a valve that
+ * chatters, it is anywhere between its lowest and highest reading of that stretch. k = 2, both ends of the stretch
+ * inside; a reaction slower or quicker than that is not covered. `confidence` tells how far a recorded sound level bears the mark out,
  * 0 without one.
  *
  * Throws RangeError as `findSealPoint` does, when the marks are not inside the samples' time, and when `noiseStopsS`
@@ -45,14 +48,19 @@ export function sealPointFromMarks(samples: readonly RampSample[], marks: SealMa
   const stepKpa = resolutionKpa ?? smallestStep(samples, isGauge ? 'gaugeKpa' : 'mapKpa');
   const rest = isGauge ? undefined : restBefore(pressure, noiseBeginsS, stepKpa);
   if (!isGauge && rest === undefined) return { sealed: false, reason: 'no-rest' };
-  const spanS = slowestReactionS - quickestReactionS;
-  const reading = readPressureAt(pressure, noiseStopsS - slowestReactionS, spanS, stepKpa);
+  const place = {
+    timeS: noiseStopsS - slowestReactionS,
+    gapS: slowestReactionS - quickestReactionS,
+    resolutionKpa: stepKpa,
+  };
+  const reading = readSwing(pressure, place) ?? readPressureAt(pressure, place);
   const timeS = noiseStopsS - (slowestReactionS + quickestReactionS) / 2;
   return sealAt(reading, {
     timeS,
     rest,
     stationKpa,
     resolutionKpa: stepKpa,
+    coversEnds: true,
     confidence: explainedByTwoLevels(sound, timeS),
   });
 }

@@ -141,6 +141,32 @@ describe('findSealPoint', () => {
     expect(Math.abs(found.aboveStationKpa - sealKpa)).toBeLessThanOrEqual(found.uncertaintyKpa);
   });
 
+  it('gives a finite result or a reason for any series, however its times are bunched', () => {
+    const step = fc.constantFrom(0, 0, 0.02, 0.1, 0.25, 1, 4);
+    const reading = fc.record({
+      step,
+      gaugeKpa: fc.option(fc.integer({ min: -10, max: 130 }), { nil: undefined }),
+      soundDb: fc.option(fc.constantFrom(40, 45, 60, 61, 80), { nil: undefined }),
+    });
+    fc.assert(
+      fc.property(fc.array(reading, { maxLength: 200 }), (readings) => {
+        let timeS = 0;
+        const samples = readings.map(({ step, gaugeKpa, soundDb }) => ({
+          timeS: (timeS += step),
+          mapKpa: stationKpa + (gaugeKpa ?? 0) / 10,
+          gaugeKpa: gaugeKpa === undefined ? undefined : gaugeKpa / 10,
+          soundDb,
+        }));
+        const found = findSealPoint(samples, { stationKpa });
+        if (!found.sealed) return;
+        expect(Number.isFinite(found.aboveStationKpa)).toBe(true);
+        expect(found.uncertaintyKpa).toBeGreaterThan(0);
+        expect(found.uncertaintyKpa).toBeLessThan(100);
+      }),
+      { numRuns: 300 },
+    );
+  });
+
   it('refuses what is no measurement', () => {
     const broken = (change: Partial<RampSample>) => [...ramp({ endS: 20 }), { timeS: 21, mapKpa: 94, ...change }];
     expect(() => findSealPoint(broken({ mapKpa: NaN }), { stationKpa })).toThrow('mapKpa of sample 81 is NaN');

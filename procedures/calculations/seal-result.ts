@@ -1,3 +1,4 @@
+import { coveringSum } from './even-and-normal';
 import { type EndReading } from './pressure-reading';
 import { type Rest } from './ramp-rest';
 
@@ -27,8 +28,9 @@ export type SealPoint =
       /** The gauge's value there; without a gauge, the manifold pressure less its own value at rest. */
       readonly aboveStationKpa: number;
       /**
-       * Expanded uncertainty (k = 2) of `aboveStationKpa` from resolution, sampling and scatter. The instrument's
-       * accuracy is not in it, nor, for `pressureKpa`, the station pressure's uncertainty.
+       * Expanded uncertainty of `aboveStationKpa` from resolution, sampling, scatter and the valve's way of closing: about
+       * 95 % lies inside, that is k = 2 where the shares are normal and less where one that is even over a stretch
+       * prevails. The instrument's accuracy is not in it, nor, for `pressureKpa`, the station pressure's uncertainty.
        */
       readonly uncertaintyKpa: number;
       /** Share of the sound level's variation around the drop that two levels explain, 0 to 1. */
@@ -44,16 +46,6 @@ export interface SealOptions {
   readonly resolutionKpa?: number | undefined;
 }
 
-const coverageFactor = 2;
-/**
- * A valve begins to close before it is shut, and runs the rest of the way by itself between two samples: as far as this
- * above the last pressure at which it was heard (our allowance; no source).
- */
-const closingTravelKpa = 0.2;
-
-/** Standard uncertainty of a display's step: half of it as a rectangular half-width. */
-const stepUncertainty = (resolutionKpa: number): number => resolutionKpa / Math.sqrt(12);
-
 /** What a seal point is put together from, beside the reading. */
 export interface SealFacts {
   readonly timeS: number;
@@ -62,21 +54,33 @@ export interface SealFacts {
   readonly stationKpa: number;
   readonly resolutionKpa: number;
   readonly confidence: number;
+  /** Whether both ends of what went unseen have to lie inside the uncertainty: they are no rarer than its middle. */
+  readonly coversEnds?: boolean;
 }
 
 /** Puts a seal point together; without a rest the reading is a gauge's. */
 export function sealAt(reading: EndReading, facts: SealFacts): SealPoint {
-  const { timeS, rest, stationKpa, resolutionKpa, confidence } = facts;
-  // The noise was still there at the reading and gone at the next sample: it went away in between.
-  const halfRiseKpa = (reading.unseenRiseKpa + closingTravelKpa) / 2;
-  const aboveStationKpa = reading.valueKpa + halfRiseKpa - (rest?.levelKpa ?? 0);
-  const parts = [
-    stepUncertainty(resolutionKpa),
+  const { timeS, rest, stationKpa, resolutionKpa, confidence, coversEnds = false } = facts;
+  // The noise was still there at the reading and gone at the next sample: it went away in between, evenly anywhere.
+  // The valve was shut at the next sample, so that the pressure there is the most it can have been.
+  const mostKpa =
+    Math.max(0, reading.nextKpa ?? Infinity) + 2 * Math.hypot(reading.deviationKpa, resolutionKpa / Math.sqrt(12));
+  const travelKpa = Math.min(reading.travelKpa, mostKpa);
+  const riseKpa = Math.min(reading.unseenRiseKpa, mostKpa - travelKpa);
+  const halfStepKpa = Math.min(reading.unseenStepKpa, mostKpa - travelKpa - riseKpa) / 2;
+  const halfGapKpa = (riseKpa - reading.unseenFallKpa) / 2;
+  const aboveStationKpa =
+    reading.valueKpa + travelKpa / 2 + (riseKpa + reading.unseenFallKpa) / 2 + halfStepKpa - (rest?.levelKpa ?? 0);
+  const normalKpa = Math.hypot(
+    reading.displayKpa,
     reading.scatterKpa,
-    halfRiseKpa / Math.sqrt(3),
-    ...(rest === undefined ? [] : [stepUncertainty(resolutionKpa), rest.deviationKpa]),
-  ];
-  const uncertaintyKpa = coverageFactor * Math.hypot(...parts);
+    // Either it fell into the gap or it did not: two points, whose standard deviation is half of what is between them.
+    halfStepKpa,
+    ...(rest === undefined ? [] : [reading.displayKpa, rest.deviationKpa]),
+  );
+  const uncertaintyKpa = coversEnds
+    ? 2 * Math.hypot(normalKpa, (halfGapKpa + travelKpa / 2) / Math.sqrt(3))
+    : coveringSum(normalKpa, halfGapKpa, travelKpa / 2);
   return {
     sealed: true,
     timeS,
