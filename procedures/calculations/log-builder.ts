@@ -6,10 +6,17 @@ import { type LogProblem, type ScanLog } from './scan-log';
 /** So many problems are told one by one; a file that has more has one cause. */
 const toldProblems = 100;
 
+/** A log of more cells than this is no log of a ramp or a drive, and would not fit into a tablet's memory. */
+const mostCells = 20_000_000;
+/** Finer than any logger's clock, and coarser than the binary dust by which decimal times differ. */
+const perSecond = 1e6;
+
 interface ChannelDraft {
   readonly name: string;
   unit: string | undefined;
-  readonly values: (number | undefined)[];
+  /** The samples in which it has a number, in their order, and the numbers. */
+  readonly samples: number[];
+  readonly values: number[];
   readonly refused: LogProblem[];
   readonly firstLine: number;
 }
@@ -24,6 +31,7 @@ export class LogBuilder {
   private readonly drafts: ChannelDraft[] = [];
   private readonly timesS: number[] = [];
   private readonly problems: LogProblem[] = [];
+  private lastTicks: number | undefined;
 
   constructor(private readonly style: CellStyle) {}
 
@@ -41,9 +49,17 @@ export class LogBuilder {
     return this.drafts.some(({ values }) => values.length > 0);
   }
 
-  /** Opens a sample at this time, or goes back to it when it is that of the last one. Times never fall. */
-  openSample(timeS: number): void {
-    if (timeS !== this.lastTimeS) this.timesS.push(timeS);
+  /**
+   * Opens a sample at this time, or goes back to it when it is that of the last one, to the microsecond; tells whether it
+   * is the last one. Times never fall.
+   */
+  openSample(timeS: number): 'new' | 'again' {
+    const [start = timeS] = this.timesS;
+    const ticks = Math.round((timeS - start) * perSecond);
+    if (ticks === this.lastTicks) return 'again';
+    this.lastTicks = ticks;
+    this.timesS.push(timeS);
+    return 'new';
   }
 
   /** Puts a cell into the open sample; gives false when the channel has a value there already. */
@@ -57,9 +73,9 @@ export class LogBuilder {
       channel.refused.push({ line, what: `${name}: "${shortened(cell)}" is no number` });
       return true;
     }
-    if (channel.values[sample] !== undefined) return channel.values[sample] === value;
-    while (channel.values.length < sample) channel.values.push(undefined);
-    channel.values[sample] = value;
+    if (channel.samples.at(-1) === sample) return channel.values.at(-1) === value;
+    channel.samples.push(sample);
+    channel.values.push(value);
     return true;
   }
 
@@ -67,18 +83,36 @@ export class LogBuilder {
   finish(): ScanLog {
     const startS = this.timesS[0] ?? 0;
     const { drafts } = this;
-    const kept = drafts.filter(({ values }) => values.some((value) => value !== undefined));
+    const kept = this.fitting(drafts.filter(({ values }) => values.length > 0));
     for (const { name, values, refused, firstLine } of drafts) {
-      if (values.some((value) => value !== undefined)) for (const problem of refused) this.problems.push(problem);
+      if (values.length > 0) for (const problem of refused) this.problems.push(problem);
       else if (refused.length > 0) this.report(firstLine, `${name} holds words and no numbers: left out`);
     }
     return {
       channels: kept.map(({ name, unit }) => ({ name, unit, quantity: channelQuantity(name) })),
-      // Decimal times differ by binary dust; a microsecond is finer than any logger's clock.
-      timeS: this.timesS.map((timeS) => Math.round((timeS - startS) * 1e6) / 1e6),
-      values: kept.map(({ values }) => Array.from(this.timesS, (_, sample) => values[sample])),
+      timeS: this.timesS.map((timeS) => Math.round((timeS - startS) * perSecond) / perSecond),
+      values: kept.map((channel) => this.inSamples(channel)),
       problems: this.toldProblems(),
     };
+  }
+
+  /** As many channels as fit, those with the most numbers, in the order of the file. */
+  private fitting(drafts: readonly ChannelDraft[]): readonly ChannelDraft[] {
+    const most = Math.max(1, Math.floor(mostCells / Math.max(1, this.timesS.length)));
+    if (drafts.length <= most) return drafts;
+    const fullest = new Set([...drafts].sort((one, other) => other.values.length - one.values.length).slice(0, most));
+    const [left] = drafts.filter((draft) => !fullest.has(draft));
+    this.report(
+      left?.firstLine ?? 1,
+      `${drafts.length} channels are too many: the ${most} with most readings are kept`,
+    );
+    return drafts.filter((draft) => fullest.has(draft));
+  }
+
+  private inSamples({ samples, values }: ChannelDraft): (number | undefined)[] {
+    const series = new Array<number | undefined>(this.timesS.length).fill(undefined);
+    for (const [index, sample] of samples.entries()) series[sample] = values[index];
+    return series;
   }
 
   private toldProblems(): LogProblem[] {
@@ -94,7 +128,7 @@ export class LogBuilder {
     const key = unit === undefined ? name : `${name}\n${unit}`;
     const known = this.channels.get(key);
     if (known !== undefined) return known;
-    const channel: ChannelDraft = { name, unit, values: [], refused: [], firstLine: line };
+    const channel: ChannelDraft = { name, unit, samples: [], values: [], refused: [], firstLine: line };
     this.drafts.push(channel);
     this.channels.set(key, channel);
     if (!this.channels.has(name)) this.channels.set(name, channel);

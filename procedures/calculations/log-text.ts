@@ -79,6 +79,13 @@ export function decodeLog(bytes: Uint8Array): string {
   return fromUtf8(hasMark ? bytes.subarray(3) : bytes) ?? textOf(Uint16Array.from(bytes));
 }
 
+/** Leaves out the NUL characters at the end, with which a recorder that lost its supply fills up its last block. */
+export function withoutPadding(text: string): string {
+  let length = text.length;
+  while (length > 0 && text.charCodeAt(length - 1) === 0) length--;
+  return text.slice(0, length);
+}
+
 /** Of text, hardly any character is a control character; of anything else, many are. */
 const mostControlShare = 0.02;
 

@@ -1,9 +1,9 @@
 import { numberIn } from './log-cells';
 
-/** A time cell in seconds: of a day for a clock, of any zero for the others. */
+/** A time cell in seconds, but a bare number in the unit of its column: of a day for a clock, of any zero otherwise. */
 export interface TimeReading {
   readonly seconds: number;
-  readonly kind: 'number' | 'clock' | 'date';
+  readonly kind: 'number' | 'measured' | 'clock' | 'date';
 }
 
 const daySeconds = 86_400;
@@ -27,11 +27,21 @@ function zoneSeconds(zone: string): number {
   return (zone.startsWith('-') ? -1 : 1) * (hours * 3600 + minutes * 60);
 }
 
-/** Reads a time: a number, h:mm:ss or mm:ss with fractions, or a date with a clock. Undefined when it is none. */
+const withUnit = /^([+-]?[\d.,]+)\s*([a-z\u00b5]{1,12})$/i;
+
+/** Reads a time that has its unit beside it, such as `0.5 s`. */
+function measuredIn(cell: string, decimalMark: '.' | ','): TimeReading | undefined {
+  const [, figures = '', unit] = withUnit.exec(cell) ?? [];
+  const per = secondsPer(unit);
+  const value = per === undefined ? undefined : numberIn(figures, decimalMark);
+  return value === undefined || per === undefined ? undefined : { seconds: value * per, kind: 'measured' };
+}
+
+/** Reads a time: a number, one with its unit, h:mm:ss or mm:ss with fractions, or a date with a clock. Undefined when it is none. */
 export function timeIn(cell: string, decimalMark: '.' | ','): TimeReading | undefined {
   const seconds = numberIn(cell, decimalMark) ?? numberIn(cell, decimalMark === '.' ? ',' : '.');
   if (seconds !== undefined) return { seconds, kind: 'number' };
-  if (!cell.includes(':')) return undefined;
+  if (!cell.includes(':')) return measuredIn(cell, decimalMark);
   const [iso, year = '', month = '', day = '', hours = '', zone = ''] = isoDate.exec(cell) ?? [];
   if (iso !== undefined) {
     // Hours and minutes alone are not minutes and seconds behind a date.

@@ -1,7 +1,7 @@
 import { cellsOf, cellStyleOf, isNothing, type CellStyle } from './log-cells';
 import { LogBuilder } from './log-builder';
 import { columnsOf, headerLine, isUnitsRow, layoutOf, namesTime, type Layout } from './log-header';
-import { decodeLog, isBinary } from './log-text';
+import { decodeLog, isBinary, withoutPadding } from './log-text';
 import { overMidnight, secondsPer, timeIn } from './log-time';
 import { unitAsWritten } from './log-units';
 import { type LogHints, type ScanLog } from './scan-log';
@@ -30,9 +30,11 @@ const nothingRead = (line: number, what: string): ScanLog => ({
  * @example parseScanLog('Time (s),MAP (kPa)\n0,93.9\n1,94.0').values // [[93.9, 94.0]]
  */
 export function parseScanLog(input: Uint8Array | string, hints: LogHints = {}): ScanLog {
-  const text = typeof input === 'string' ? input.replace(/^\ufeff/, '') : decodeLog(input);
-  if (text.trim() === '') return nothingRead(1, 'the file is empty');
-  if (isBinary(text)) return nothingRead(1, 'the file is not text');
+  const decoded = typeof input === 'string' ? input.replace(/^\ufeff/, '') : decodeLog(input);
+  if (decoded.trim() === '') return nothingRead(1, 'the file is empty');
+  const padded = withoutPadding(decoded);
+  if (padded.trim() === '' || isBinary(padded)) return nothingRead(1, 'the file is not text');
+  const text = padded.replaceAll('\0', '');
   const lines = text.split(/\r\n|\n|\r/);
   const { delimiter, decimalMark } = hints;
   const style = cellStyleOf(lines, {
@@ -49,6 +51,8 @@ export function parseScanLog(input: Uint8Array | string, hints: LogHints = {}): 
 class LogReader {
   private readonly builder: LogBuilder;
   private layout: Layout | undefined;
+  /** The lines that named it: the same again change nothing. */
+  private header: string | undefined;
   private secondsPerUnit = 1;
   private readonly toSeconds = overMidnight();
   private isBelowHeaderAgain = false;
@@ -82,8 +86,11 @@ class LogReader {
     const next = index + (hasUnits ? 2 : 1);
     let first = next;
     while (first < this.lines.length && this.lines[first]?.trim() === '') first++;
+    const header = this.lines.slice(index, next).join('\n');
+    if (header === this.header) return next;
     const layout = layoutOf(columns, this.cellsAt(first), this.style);
     if (layout === undefined) return next;
+    this.header = header;
     this.layout = layout;
     this.secondsPerUnit = secondsPer(this.hints.timeUnit) ?? this.timeUnitAt(layout, first);
     return next;
@@ -95,7 +102,8 @@ class LogReader {
     const named = secondsPer(unit) ?? secondsPer(name);
     if (named !== undefined) return named;
     const times: number[] = [];
-    for (let index = first; index < this.lines.length && times.length < steadyTimes; index++) {
+    const lookedTo = Math.min(this.lines.length, first + lookedThrough);
+    for (let index = first; index < lookedTo && times.length < steadyTimes; index++) {
       const reading = timeIn(this.cellsAt(index)[timeColumn] ?? '', this.style.decimalMark);
       if (reading?.kind === 'number' && reading.seconds !== times.at(-1)) times.push(reading.seconds);
     }
@@ -126,6 +134,10 @@ class LogReader {
       return index + 1;
     }
     const timeS = this.toSeconds(reading) * (reading.kind === 'number' ? this.secondsPerUnit : 1);
+    if (!(Math.abs(timeS) <= latestS)) {
+      this.builder.report(index + 1, 'no time in this line: left out');
+      return index + 1;
+    }
     const { lastTimeS = -Infinity } = this.builder;
     if (timeS < lastTimeS && this.isBelowHeaderAgain) {
       this.builder.report(index + 1, 'another recording begins here: left out from here on');
@@ -138,8 +150,7 @@ class LogReader {
   }
 
   private takeReadings(layout: Layout, cells: readonly string[], timeS: number, line: number): void {
-    const isAgain = timeS === this.builder.lastTimeS;
-    this.builder.openSample(timeS);
+    const isAgain = this.builder.openSample(timeS) === 'again';
     if (layout.kind === 'long') {
       const [name = '', value = '', unit = ''] = [
         cells[layout.nameColumn],
@@ -150,8 +161,10 @@ class LogReader {
       return;
     }
     let isNew = true;
-    for (const [index, { name, unit }] of layout.columns.entries()) {
-      if (index !== layout.timeColumn) isNew = this.builder.put(name, unit, cells[index] ?? '', line) && isNew;
+    // No further than the row goes: a header may be very wide and the rows short.
+    for (const [index, cell] of cells.slice(0, layout.columns.length).entries()) {
+      const { name = '', unit } = layout.columns[index] ?? {};
+      if (index !== layout.timeColumn) isNew = this.builder.put(name, unit, cell, line) && isNew;
     }
     if (isAgain && !isNew) this.reportAgain(line);
     if (cells.slice(layout.columns.length).some((cell) => !isNothing(cell))) {
@@ -164,8 +177,12 @@ class LogReader {
   }
 }
 
+/** Three million years; a count of seconds, or of microseconds since 1970, ends long before. */
+const latestS = 1e14;
 /** So many different times show the size of the steps. */
 const steadyTimes = 20;
+/** They are looked for in so many lines: a header may come again very often, and one moment fill many rows. */
+const lookedThrough = 100;
 /** No scan tool waits 20 seconds between two rows, so whole numbers that far apart are milliseconds. */
 const leastMillisecondStep = 20;
 /** A count of seconds since 1970 reaches this in the year 5138; one of milliseconds did in 1973. */
