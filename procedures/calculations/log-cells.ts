@@ -27,6 +27,9 @@ const longestCell = 200;
 const trimmed = (cell: string): string =>
   cell.length > longestCell ? `${cell.slice(0, longestCell).trim()}...` : cell.trim();
 
+/** One character more, unless it would be cut off anyway. */
+const longer = (cell: string, character: string): string => (cell.length > longestCell ? cell : cell + character);
+
 const isBlank = (cell: string): boolean => cell.length < longestCell && cell.trim() === '';
 
 /** Divides a line into cells without the blanks and quotes around them, none longer than 200 characters. */
@@ -38,12 +41,13 @@ export function cellsOf(line: string, delimiter: Delimiter): string[] {
   let isQuoted = false;
   for (let index = 0; index < line.length; index++) {
     const character = line.charAt(index);
-    if (character === '"' && isQuoted && line.charAt(index + 1) === '"') cell += line.charAt(index++);
-    else if (character === '"' && (isQuoted || isBlank(cell))) isQuoted = !isQuoted;
+    if (character === '"' && isQuoted && line.charAt(index + 1) === '"') {
+      cell = longer(cell, line.charAt(index++));
+    } else if (character === '"' && (isQuoted || isBlank(cell))) isQuoted = !isQuoted;
     else if (character === delimiter && !isQuoted) {
       cells.push(trimmed(cell));
       cell = '';
-    } else cell += character;
+    } else cell = longer(cell, character);
   }
   cells.push(trimmed(cell));
   return cells;
