@@ -1,4 +1,3 @@
-import { compileProcedure } from './compile-procedure';
 import { expressionPlaces } from './expression-places';
 import type { Expression } from './expression/expression';
 import { parseExpression } from './expression/parse';
@@ -10,6 +9,7 @@ import { lateCautions } from './lint/caution-place';
 import { cautionsWithWork, notesWithImperatives } from './lint/caution-work';
 import { piledUpCautions } from './lint/cautions';
 import { mixedConnectives } from './lint/conditions';
+import { expressionFindings } from './lint/expression-findings';
 import { exitFindings } from './lint/exits';
 import { limitsBeyondGear } from './lint/limit-and-gear';
 import { limitsInWords } from './lint/limit-in-words';
@@ -104,19 +104,4 @@ function treesOf(document: ProcedureDocument): ReadonlyMap<string, Expression> {
     if (parsed.ok) trees.set(source, parsed.expression);
   }
   return trees;
-}
-
-function expressionFindings(document: ProcedureDocument): readonly LintFinding[] {
-  const compiled = compileProcedure(document);
-  if (compiled.ok) return [];
-  const numbers = new Map(document.steps.map(({ id, number }) => [id, number]));
-  return compiled.problems.map(({ step, where, pointer, message }): LintFinding => {
-    const place = step === undefined ? '' : `Step ${numbers.get(step) ?? step}, `;
-    return {
-      rule: pointer === undefined ? 'names' : 'expression',
-      ...(step === undefined ? {} : { step }),
-      ...(pointer === undefined ? {} : { pointer }),
-      message: `${place}${where}: ${message}`,
-    };
-  });
 }

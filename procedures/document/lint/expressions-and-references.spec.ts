@@ -22,7 +22,8 @@ describe('expressions and references: what publishing refuses', () => {
     {
       what: 'a gauge pressure against an absolute one',
       rule: 'expression',
-      message: /^Step 7, branch 1: A gauge pressure and an absolute pressure cannot be compared.*absolute\(/,
+      message:
+        /^Step 7, branch 1: A gauge pressure and an absolute pressure cannot be compared.*absolute\(.*It reads: `highestGauge > manifoldPressure`\.$/,
       changes: [[`${place('judge')}/next/0`, (branch) => (branch['when'] = 'highestGauge > manifoldPressure')]],
     },
     {
@@ -122,6 +123,16 @@ describe('expressions and references: what publishing refuses', () => {
     const errors = errorsOf(changedDocument(everyKind, ...changes));
     expect(errors).toContainEqual(expect.objectContaining({ rule, message: expect.stringMatching(message) }));
   });
+});
+
+it('shows the part of a long expression that is wrong', () => {
+  const when = [...Array.from({ length: 9 }, () => 'highestGauge > 2 kPa'), 'whistle', 'noiseHeard'].join(' or ');
+  const document = changedDocument(everyKind, [`${place('judge')}/next/0`, (branch) => (branch['when'] = when)]);
+  const [{ message = '' } = {}] = errorsOf(document);
+  expect(message).toMatch(
+    /^Step 7, branch 1: `whistle` is not declared: .* It reads: `….* or whistle or noiseHeard`\.$/,
+  );
+  expect(message.length).toBeLessThan(300);
 });
 
 it('lets a text name a finding for its title, and what the visit gives', () => {
