@@ -75,9 +75,9 @@ const errorRules: readonly ((subject: LintSubject) => readonly LintFinding[])[] 
 const warningRules: readonly ((subject: LintSubject) => readonly LintFinding[])[] = [narrowBands, doubleActions];
 
 /**
- * Reads a document as its publisher would: shape, expressions, ways, values, restoring, cautions. Every way is
- * explored with its readings left open, so a way that is shown may need readings that no car has. Never throws on a
- * document's content; time grows with the steps times the findings.
+ * Reads a document as its publisher would: shape, expressions, ways, decisions, values, restoring, limits, wording. Every
+ * way is explored with its readings left open, so a way that is shown may need readings that no car has. Never throws on
+ * a document's content; the work grows in line with steps and branches, times the findings that a run can head for.
  */
 export function lintProcedure(document: ProcedureDocument, options: LintOptions = {}): LintReport {
   const validation = validateDocument(document);

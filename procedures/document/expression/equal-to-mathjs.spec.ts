@@ -16,9 +16,11 @@ import { compileEvaluation } from './evaluate';
 import type { Expression } from './expression';
 import { inferKind } from './infer-kind';
 import { numberPart } from './number-part';
+import { partsOf } from './names-in';
 import { isPhysical } from './signatures';
 import { parseExpression } from './parse';
 import { baseUnitOf, Dice, ExpressionAuthor, kinds, unitsOf, valueRange, type Want } from './testing/random-expression';
+import { calculations } from './vocabulary';
 
 /*
  * The closures against mathjs's own evaluation with its own units (mathjs 15), for random expressions. Units that
@@ -139,6 +141,13 @@ interface Tally {
   without: number;
   /** Ours is decided by the other side of `and` or `or`, where mathjs stops at the first side. */
   decided: number;
+  /** How often each function was called where both gave a value. */
+  readonly calls: Map<string, number>;
+}
+
+function countCalls(node: Expression, calls: Map<string, number>): void {
+  if (node.node === 'call') calls.set(node.calls, (calls.get(node.calls) ?? 0) + 1);
+  partsOf(node).forEach((part) => countCalls(part, calls));
 }
 
 function compareOne(seed: number, tally: Tally): void {
@@ -182,6 +191,7 @@ function compareOne(seed: number, tally: Tally): void {
     expect([what, theirs]).toEqual([what, ours.value]);
   } else {
     tally.numbers += 1;
+    countCalls(parsed.expression, tally.calls);
     if (typeof theirs !== 'number') throw new Error(`${what}: they give ${String(theirs)}, we ${ours.value}`);
     const scale = magnitude(parsed.expression, environment);
     expect([what, Math.abs(ours.value - theirs) <= 1e-11 * scale]).toEqual([what, true]);
@@ -202,10 +212,13 @@ function outcomeOf(text: string, scope: Record<string, unknown>): unknown {
 }
 
 it('gives what mathjs gives, over 6,000 random expressions', () => {
-  const tally: Tally = { numbers: 0, truths: 0, without: 0, decided: 0 };
+  const tally: Tally = { numbers: 0, truths: 0, without: 0, decided: 0, calls: new Map() };
   for (let seed = 1; seed <= 6_000; seed += 1) compareOne(seed, tally);
   expect(tally.numbers).toBeGreaterThan(2_000);
   expect(tally.truths).toBeGreaterThan(2_000);
   expect(tally.without).toBeGreaterThan(0);
   expect(tally.decided).toBeLessThan(tally.without);
+  for (const name of Object.keys(calculations)) {
+    expect([name, (tally.calls.get(name) ?? 0) >= 20]).toEqual([name, true]);
+  }
 });
