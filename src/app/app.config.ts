@@ -1,12 +1,6 @@
 import { provideHttpClient, withFetch, withInterceptors } from '@angular/common/http';
 import { type ApplicationConfig, ErrorHandler, isDevMode, provideBrowserGlobalErrorListeners } from '@angular/core';
-import {
-  provideRouter,
-  TitleStrategy,
-  withComponentInputBinding,
-  withInMemoryScrolling,
-  withRouterConfig,
-} from '@angular/router';
+import { provideRouter, TitleStrategy, withComponentInputBinding, withRouterConfig } from '@angular/router';
 import { provideServiceWorker } from '@angular/service-worker';
 import { routes } from './app.routes';
 import { PageTitle } from './core/page-title';
@@ -19,12 +13,7 @@ export const appConfig: ApplicationConfig = {
   providers: [
     provideBrowserGlobalErrorListeners(),
     { provide: ErrorHandler, useExisting: UnexpectedErrors },
-    provideRouter(
-      routes,
-      withComponentInputBinding(),
-      withRouterConfig({ paramsInheritanceStrategy: 'always' }),
-      withInMemoryScrolling({ scrollPositionRestoration: 'top' }),
-    ),
+    provideRouter(routes, withComponentInputBinding(), withRouterConfig({ paramsInheritanceStrategy: 'always' })),
     { provide: TitleStrategy, useExisting: PageTitle },
     provideHttpClient(withFetch(), withInterceptors([sessionInterceptor, problemInterceptor])),
     provideServiceWorker('ngsw-worker.js', { enabled: !isDevMode() }),

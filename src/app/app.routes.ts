@@ -1,12 +1,14 @@
 import type { Routes } from '@angular/router';
+import { BenchPage } from './bench/bench-page';
 import { roleGuard, signedInGuard } from './core/signed-in-guard';
+import { SignInPage } from './sign-in/sign-in-page';
 
 /** One lazy route per feature. Who may not enter a room is told so before its code is loaded. */
 export const routes: Routes = [
   {
     path: 'sign-in',
     title: 'Sign in',
-    loadComponent: () => import('./sign-in/sign-in-page').then((m) => m.SignInPage),
+    component: SignInPage,
   },
   {
     path: '',
@@ -16,7 +18,7 @@ export const routes: Routes = [
         path: '',
         pathMatch: 'full',
         title: 'Bench',
-        loadComponent: () => import('./bench/bench-page').then((m) => m.BenchPage),
+        component: BenchPage,
       },
       {
         path: 'tablet',
@@ -26,13 +28,13 @@ export const routes: Routes = [
       {
         path: 'visit',
         canMatch: [roleGuard('technician', 'lead')],
-        loadChildren: () => import('./visit/visit.routes').then((m) => m.routes),
+        loadChildren: () => import('./at-the-car').then((m) => m.visitRoutes),
       },
       {
         path: 'run',
         title: 'Run',
         canMatch: [roleGuard('apprentice', 'technician', 'lead')],
-        loadChildren: () => import('./run/run.routes').then((m) => m.routes),
+        loadChildren: () => import('./at-the-car').then((m) => m.runRoutes),
       },
       {
         path: 'records',

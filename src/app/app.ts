@@ -1,7 +1,7 @@
-import { afterNextRender, ChangeDetectionStrategy, Component, inject, Injector, signal } from '@angular/core';
+import { afterNextRender, ChangeDetectionStrategy, Component, DOCUMENT, inject, Injector, signal } from '@angular/core';
 import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
 import { NavigationEnd, Router, RouterOutlet } from '@angular/router';
-import { filter, take } from 'rxjs';
+import { filter } from 'rxjs';
 import { AppUpdate } from './core/app-update';
 import { HandSetting } from './core/hand-setting';
 import { StorageRoom } from './core/storage-room';
@@ -20,6 +20,7 @@ import { UnexpectedErrors } from './core/unexpected-errors';
 export class App {
   private readonly injector = inject(Injector);
   private readonly router = inject(Router);
+  private readonly document = inject(DOCUMENT);
   private readonly errors = inject(UnexpectedErrors);
   protected readonly update = inject(AppUpdate);
 
@@ -32,10 +33,13 @@ export class App {
     this.router.events
       .pipe(
         filter((event) => event instanceof NavigationEnd),
-        take(1),
         takeUntilDestroyed(),
       )
-      .subscribe(() => this.hasArrived.set(true));
+      .subscribe(() => {
+        this.hasArrived.set(true);
+        // Every page begins at its top.
+        this.document.defaultView?.scrollTo(0, 0);
+      });
     afterNextRender(() => this.startInBackground());
   }
 

@@ -1,6 +1,6 @@
 import { ErrorHandler, inject, type Signal } from '@angular/core';
 import { toSignal } from '@angular/core/rxjs-interop';
-import { Dexie, liveQuery } from 'dexie';
+import { Dexie, liveQuery } from '#dexie';
 import { from } from 'rxjs';
 
 /**

@@ -1,5 +1,5 @@
 import { inject, Injectable, InjectionToken } from '@angular/core';
-import { Dexie, type EntityTable, type Table } from 'dexie';
+import { Dexie, type EntityTable, type Table } from '#dexie';
 import type { RunEvent } from '../../../procedures/engine';
 import type { BlobRow, OutboxRow, ReceiptRow, RunRow, SettingRow, TabletKeyRow } from './stored-rows';
 import type { Colleague, GearItem, PublishedProcedure, Site, Visit, VisitRun } from './wire';

@@ -1,4 +1,4 @@
-import { Dexie } from 'dexie';
+import { Dexie } from '#dexie';
 import type { RunEvent } from '../../../procedures/engine';
 import type { OfflineStore, PracticeStore, RunTables } from './offline-store';
 import type { BlobRow, RunRow } from './stored-rows';

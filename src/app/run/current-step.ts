@@ -2,55 +2,23 @@ import { ChangeDetectionStrategy, Component, computed, input, output } from '@an
 import type { Step } from '../../../procedures/document';
 import type { RunCommand, Series } from '../../../procedures/engine';
 import type { Colleague, GearItem, Person } from '../core/wire';
-import { CodesEntry } from './codes/codes-entry';
-import { entryField } from './entry-draft';
-import { FindingEntry } from './finding/finding-entry';
 import { CautionGate } from './frame/caution-gate';
 import { HandSide } from './frame/hand-side';
 import { WideSide } from './frame/wide-side';
 import type { ClocksNow } from './hold-clock';
-import { ListenEntry } from './listen/listen-entry';
+import { LaterStep } from './later';
 import type { ListenDone, SeriesTaken } from './listen/listen-requests';
 import type { ShownPhoto } from './photo/kept-photos';
-import { PhotoEntry } from './photo/photo-entry';
 import type { PhotoTaken } from './photo/photo-file';
-import { ReadingEntry } from './readings/reading-entry';
 import type { RunProblem, RunView } from './run-view';
-import { SecondPersonEntry } from './second-person/second-person-entry';
 import { isForSomebody } from './second-person/waiting-for';
 import { StartEntry } from './start/start-entry';
 import { cautionToRead } from './step-cautions';
-import { ActionEntry } from './steps/action-entry';
-import { CallEntry } from './steps/call-entry';
-import { ChoiceEntry } from './steps/choice-entry';
-import { ComputeEntry } from './steps/compute-entry';
-import { DriveEntry } from './steps/drive-entry';
-import { HoldEntry } from './steps/hold-entry';
-import { RestoreEntry } from './steps/restore-entry';
-import { timedStage } from './timed-stage';
 
 /** The current step: its cautions first, then the entry of its kind. */
 @Component({
   selector: 'bay-current-step',
-  imports: [
-    ActionEntry,
-    CallEntry,
-    CautionGate,
-    ChoiceEntry,
-    CodesEntry,
-    ComputeEntry,
-    DriveEntry,
-    FindingEntry,
-    HandSide,
-    HoldEntry,
-    ListenEntry,
-    PhotoEntry,
-    ReadingEntry,
-    RestoreEntry,
-    SecondPersonEntry,
-    StartEntry,
-    WideSide,
-  ],
+  imports: [CautionGate, HandSide, LaterStep, StartEntry, WideSide],
   templateUrl: './current-step.html',
   styles: ':host { display: contents }',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -71,8 +39,6 @@ export class CurrentStepView {
   /** Everybody who has an account, and who of them is signed in here. */
   readonly people = input<readonly Colleague[]>([]);
   readonly person = input<Person>();
-  /** A log that the practice bench offers. */
-  readonly offered = input<{ readonly fileName: string; readonly path: string }>();
   readonly problem = input<RunProblem>();
   readonly isBusy = input(false);
   readonly commanded = output<RunCommand>();
@@ -83,8 +49,6 @@ export class CurrentStepView {
   readonly holdOver = output();
   readonly leftForBench = output();
 
-  /** What is edited in the write-up and not kept yet. */
-  protected readonly writeUp = entryField<object>(this.run, 'write-up', {});
   /** The caution that has to be acknowledged before the step's entry unlocks. */
   protected readonly caution = computed(() => {
     const step = this.step();
@@ -94,10 +58,4 @@ export class CurrentStepView {
   });
   /** Whether only somebody else's part of the step, or the way on after it, is left. */
   protected readonly isForSomebody = computed(() => isForSomebody(this.run(), this.step()));
-  /** What a timed step asks for now. */
-  protected readonly stage = computed(() => {
-    const step = this.step();
-    return step.kind === 'hold' || step.kind === 'wait' ? timedStage(this.run(), step) : undefined;
-  });
-  protected readonly elapsed = () => this.clocks()().elapsed;
 }

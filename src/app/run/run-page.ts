@@ -14,9 +14,7 @@ import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
 import { Router } from '@angular/router';
 import type { Step } from '../../../procedures/document';
 import type { RunCommand } from '../../../procedures/engine';
-import { HandSetting } from '../core/hand-setting';
 import { Sync } from '../core/sync';
-import { Theme } from '../core/theme';
 import { clock, monotonicClock } from '../core/time-and-ids';
 import { BenchSheet } from '../shared/practice/bench-sheet';
 import { RouteRibbon } from '../shared/route-ribbon';
@@ -28,30 +26,19 @@ import { frameLayout } from './frame/frame-layout';
 import { HonestWays } from './frame/honest-ways';
 import { RunHeaderBar } from './frame/run-header';
 import { StopRow } from './frame/stop-row';
+import { RunSheets } from './later';
 import { ListenFlow } from './listen/listen-flow';
 import { pedalAct } from './pedal-keys';
 import { KeptPhotos } from './photo/kept-photos';
 import type { PhotoTaken } from './photo/photo-file';
-import { practiceRamp } from './practice-ramp';
 import { PrimaryAction } from './primary-action';
 import { RunGear } from './run-gear';
 import { RunPeople } from './run-people';
 import { RunPreferences } from './run-preferences';
 import { RunStore } from './run-store';
 import { toneAfter } from './run-tones';
-import { GearSheet } from './sheets/gear-sheet';
-import { LimitTakeover } from './sheets/limit-takeover';
 import type { LaidSheet } from './sheets/laid-sheet';
-import { LookBackSheet } from './sheets/look-back-sheet';
-import { OpenListSheet } from './sheets/open-list-sheet';
-import { ResumeCard } from './sheets/resume-card';
-import { SheetBody } from './sheets/sheet-body';
-import { SheetHand } from './sheets/sheet-hand';
-import { StopSheet } from './sheets/stop-sheet';
-import { TakeAgainSheet } from './sheets/take-again-sheet';
-import { ViewSheet } from './sheets/view-sheet';
-import { WayOutSheet } from './sheets/way-out-sheet';
-import { WhySheet } from './sheets/why-sheet';
+import type { Takeover } from './sheets/run-sheets';
 import { TapGuard } from './tap-guard';
 import { Tones } from './tones';
 import { AwakeScreen } from './wake-lock';
@@ -64,26 +51,7 @@ const placeLostMs = 30_000;
 /** One run on the screen: the frame that never moves, the step in it, and what is laid over it. */
 @Component({
   selector: 'bay-run-page',
-  imports: [
-    BenchSheet,
-    CurrentStepView,
-    GearSheet,
-    HonestWays,
-    LimitTakeover,
-    LookBackSheet,
-    OpenListSheet,
-    ResumeCard,
-    RouteRibbon,
-    RunHeaderBar,
-    SheetBody,
-    SheetHand,
-    StopRow,
-    StopSheet,
-    TakeAgainSheet,
-    ViewSheet,
-    WayOutSheet,
-    WhySheet,
-  ],
+  imports: [BenchSheet, CurrentStepView, HonestWays, RouteRibbon, RunHeaderBar, RunSheets, StopRow],
   providers: [AwakeScreen, EntryDraft, KeptPhotos, ListenFlow, PrimaryAction, RunGear, RunPeople, RunStore],
   templateUrl: './run-page.html',
   styleUrl: './run-page.css',
@@ -95,8 +63,6 @@ export class RunPage {
   protected readonly flow = inject(ListenFlow);
   protected readonly awake = inject(AwakeScreen);
   protected readonly preferences = inject(RunPreferences);
-  protected readonly holding = inject(HandSetting);
-  protected readonly theme = inject(Theme);
   protected readonly gear = inject(RunGear);
   protected readonly photos = inject(KeptPhotos);
   protected readonly people = inject(RunPeople);
@@ -160,7 +126,7 @@ export class RunPage {
     return this.awake.isAwake() === false ? `${kept}, may go dark` : kept;
   });
   /** What lies over the step by the run's own state: it goes only when it is answered. */
-  protected readonly takeover = computed<'limit' | 'stopped' | 'resume' | 'elsewhere' | undefined>(() => {
+  protected readonly takeover = computed<Takeover | undefined>(() => {
     const state = this.run()?.state;
     if (state === undefined) return undefined;
     if (state.alarm !== undefined) return 'limit';
@@ -170,7 +136,6 @@ export class RunPage {
     return isPaused || this.store.needsResume() ? 'resume' : undefined;
   });
   protected readonly isCovered = computed(() => this.takeover() !== undefined || this.sheet() !== undefined);
-  protected readonly ramp = computed(() => practiceRamp(this.run()?.header));
 
   protected readonly readClocks = () => this.store.clocks();
 

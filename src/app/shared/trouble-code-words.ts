@@ -1,4 +1,5 @@
-import { describeTroubleCode } from '../../../procedures/calculations';
+// By its path: through the room's face the list of meanings would come with the first step already.
+import { describeTroubleCode } from '../../../procedures/calculations/trouble-code';
 
 /** Letter, digit 0 to 3, three hexadecimal digits (SAE J2012 / ISO 15031-6, from memory). */
 const form = /^[PCBU][0-3][0-9A-F]{3}$/;

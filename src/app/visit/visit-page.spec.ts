@@ -89,7 +89,7 @@ describe('VisitPage', () => {
   it('says who began the half, when, on which tablet and how it stands, and begins nothing', async () => {
     const { press, opened, text } = await shown(elsewhere);
     await press(/Cold half again/);
-    expect(text()).toContain('The cold half was begun on this visit already');
+    await eventually(() => expect(text()).toContain('The cold half was begun on this visit already'));
     expect(text()).toMatch(/R\. Adeyemi, today \d+:00, on tablet B2\s*still open\s*It goes on there\./);
     expect(await opened()).toEqual([]);
     await press(/Leave it at that/);
@@ -99,7 +99,7 @@ describe('VisitPage', () => {
   it('begins another with a reason alone, which stands in the record with the runs that were known', async () => {
     const { root, press, gone, opened } = await shown(elsewhere);
     await press(/Cold half again/);
-    await press(/Begin another/);
+    await eventually(() => press(/Begin another/));
     expect(textOf(byRole(root, 'alert'))).toBe('Say why another is begun: it is kept with the run.');
     expect(gone).not.toHaveBeenCalled();
     await press(/Repaired since/);

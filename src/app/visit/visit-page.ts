@@ -11,16 +11,16 @@ import type { PublishedProcedure } from '../core/wire';
 import { TopBar } from '../shared/top-bar';
 import { TwiceBegun } from '../shared/twice-begun';
 import { BegunAlready } from './begun-already';
+import { CodeMeanings } from './code-meanings';
 import { ProcedureCard } from './procedure-card';
 import { RunBeginner, type Half } from './run-beginner';
-import { codeWords } from '../shared/trouble-code-words';
 import { groupVin } from './vin-words';
 import { VisitStore } from './visit-store';
 
 /** One visit: the car, the concern, and the procedures that fit, from which a run begins. */
 @Component({
   selector: 'bay-visit-page',
-  imports: [BegunAlready, NgTemplateOutlet, ProcedureCard, RouterLink, TopBar, TwiceBegun],
+  imports: [BegunAlready, CodeMeanings, NgTemplateOutlet, ProcedureCard, RouterLink, TopBar, TwiceBegun],
   templateUrl: './visit-page.html',
   styleUrl: './visit-page.css',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -54,9 +54,6 @@ export class VisitPage {
     const { text = '', unit = '' } = this.view()?.visit.odometer ?? {};
     return `${text.replace(/\B(?=(\d{3})+$)/g, ',')} ${unit}`;
   });
-  protected readonly codes = computed(() =>
-    (this.view()?.visit.codes ?? []).map((code) => ({ code, words: codeWords(code) })),
-  );
   protected readonly runs = computed(() =>
     (this.view()?.runs ?? []).map((run) => ({
       runId: run.runId,

@@ -1,6 +1,6 @@
 import { computed, inject, Injectable, type Signal } from '@angular/core';
 import { toObservable, toSignal } from '@angular/core/rxjs-interop';
-import { liveQuery } from 'dexie';
+import { liveQuery } from '#dexie';
 import { from, switchMap } from 'rxjs';
 import { knownRuns, type KnownRun } from '../core/known-runs';
 import { OfflineStore } from '../core/offline-store';

@@ -1,4 +1,5 @@
 import type { Routes } from '@angular/router';
+import { VisitPage } from './visit-page';
 
 /** One car, one repair order, one concern. */
 export const routes: Routes = [
@@ -8,5 +9,5 @@ export const routes: Routes = [
     title: 'Change a visit',
     loadComponent: () => import('./visit-form-page').then((m) => m.VisitFormPage),
   },
-  { path: ':id', title: 'Visit', loadComponent: () => import('./visit-page').then((m) => m.VisitPage) },
+  { path: ':id', title: 'Visit', component: VisitPage },
 ];

@@ -6,6 +6,7 @@ import type { PlotMark } from '../../shared/ramp-plot-options';
 import { HandSide } from '../frame/hand-side';
 import { StepPictureView } from '../frame/step-picture-view';
 import { WideSide } from '../frame/wide-side';
+import { practiceRamp } from '../practice-ramp';
 import { StepEntry } from '../step-entry';
 import { FoundControls } from './found-controls';
 import { FileTaking } from './file-taking';
@@ -32,7 +33,7 @@ export class ListenEntry extends StepEntry<'listen' | 'ramp'> {
   /** The run's monotonic time, milliseconds. */
   readonly elapsed = input.required<() => number>();
   /** A log that the practice bench offers: what it is called, and its bytes. */
-  readonly offered = input<{ readonly fileName: string; readonly path: string }>();
+  protected readonly offered = computed(() => practiceRamp(this.run().header));
   readonly seriesTaken = output<SeriesTaken>();
   readonly finished = output<ListenDone>();
 

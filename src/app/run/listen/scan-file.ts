@@ -1,4 +1,6 @@
-import { isUnit, parseScanLog, unitKind, type LogChannel, type ScanLog } from '../../../../procedures/calculations';
+import { isUnit, unitKind, type LogChannel, type ScanLog } from '../../../../procedures/calculations';
+// By its path: through the room's face it would come with the first step already.
+import { parseScanLog } from '../../../../procedures/calculations/parse-scan-log';
 import type { Channel, ListenStep } from '../../../../procedures/document';
 import type { Series } from '../../../../procedures/engine';
 

@@ -6,7 +6,7 @@ import { CautionGate } from '../frame/caution-gate';
 import { HandSide } from '../frame/hand-side';
 import { WideSide } from '../frame/wide-side';
 import { StepEntry } from '../step-entry';
-import { GearChoice } from './gear-choice';
+import { GearChoice } from '../later';
 import { startStage } from './start-stages';
 
 /** The start card: what must be ready, what to do at once in danger, the cautions that hold throughout, the gear. */
