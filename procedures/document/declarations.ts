@@ -1,4 +1,4 @@
-import type { UnitName } from '../calculations';
+import type { UnitName } from '../calculations/for-a-run';
 import { declaredKind, truth, type Kind } from './expression/kinds';
 import { isCalculation, isQuestion } from './expression/vocabulary';
 import type { PressureSense, ProcedureDocument, Quantity, Step } from './procedure-document';

@@ -1,4 +1,4 @@
-import type { UnitName } from '../calculations';
+import type { UnitName } from '../calculations/for-a-run';
 import type { Exit } from './exit';
 import type { PressureSense } from './quantity';
 import type { Caution, Step } from './step';

@@ -1,4 +1,4 @@
-import type { UnitName } from '../calculations';
+import type { UnitName } from '../calculations/for-a-run';
 
 /** Gauge and absolute are different kinds: neither is compared with the other. */
 export type PressureSense = 'absolute' | 'gauge';

@@ -1,4 +1,4 @@
-import type { UnitName } from '../calculations';
+import type { UnitName } from '../calculations/for-a-run';
 import type { Branch, Exit } from './exit';
 import type { PressureSense, Quantity, ReadQuantity, Result } from './quantity';
 

@@ -1,5 +1,5 @@
 import type { CompiledProcedure, ProcedureDocument } from '../document';
-import { unitKind } from '../calculations';
+import { unitKind } from '../calculations/for-a-run';
 import { brokenLink, contentHash, headerHash } from './chain';
 import { exceedLimit, overrule, reachFinding, redo } from './apply-detours';
 import {

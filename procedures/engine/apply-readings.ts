@@ -1,4 +1,4 @@
-import { unitKind } from '../calculations';
+import { unitKind } from '../calculations/for-a-run';
 import { isSeriesStep, type CompiledProcedure, type Step } from '../document';
 import { own } from './environment';
 import { parseDecimal } from './figures';

@@ -1,5 +1,5 @@
-import { differenceFromBase } from '../calculations';
-import type { UnitName } from '../calculations';
+import { differenceFromBase } from '../calculations/for-a-run';
+import type { UnitName } from '../calculations/for-a-run';
 import { own } from './environment';
 import { figureText } from './figures';
 import type { NamedValue, RunState } from './run-state';

@@ -1,4 +1,4 @@
-import { convert, unitKind } from '../calculations';
+import { convert, unitKind } from '../calculations/for-a-run';
 import type { GearNeed } from '../document';
 import { CannotDo, type Drafting } from './drafting';
 import { own } from './environment';

@@ -1,4 +1,4 @@
-import { convert, isUnit } from '../calculations';
+import { convert, isUnit } from '../calculations/for-a-run';
 import type { SeriesStep } from '../document';
 import { CannotDo, type Drafting } from './drafting';
 import { own } from './environment';

@@ -1,4 +1,4 @@
-import { convert, isUnit, unitKind, type UnitName } from '../calculations';
+import { convert, isUnit, unitKind, type UnitName } from '../calculations/for-a-run';
 import type { Channel, EntryWay, ReadQuantity, Step } from '../document';
 import { CannotDo, type Drafting } from './drafting';
 import { parseDecimal, tidyDecimal } from './figures';

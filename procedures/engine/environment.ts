@@ -1,4 +1,4 @@
-import { toBase } from '../calculations';
+import { toBase } from '../calculations/for-a-run';
 import type { Environment, JudgedResult } from '../document';
 import type { NamedValue, RunState } from './run-state';
 

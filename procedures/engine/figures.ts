@@ -1,4 +1,4 @@
-import { fromBase, differenceFromBase, type UnitName } from '../calculations';
+import { fromBase, differenceFromBase, type UnitName } from '../calculations/for-a-run';
 
 const decimalText = /^-?\d{1,7}(\.\d{1,6})?$/;
 

@@ -1,4 +1,7 @@
-/** The public face of the engine: events and their chain, replay, deciding, and what a run's state gives to show. */
+/**
+ * The public face of the engine: events and their chain, replay, deciding, and what a run's state gives to show.
+ * `validate-event` and `evidence` are imported by their paths: the first step of a run does without them.
+ */
 export * from './run-event';
 export * from './run-state';
 export * from './run-command';
@@ -22,7 +25,6 @@ export { cautionCount } from './cautions';
 export { decide } from './decide';
 export { coarseness, isOverdue } from './decide-gear';
 export { previewDecision, type DecisionPreview } from './deciding';
-export { evidenceOf, type Evidence, type FindingEvidence } from './evidence';
 export { parseDecimal, tidyDecimal } from './figures';
 export { samplesOf, suggestMark, type MarkSuggestion } from './listening';
 export { openRun, type OpeningFacts } from './open-run';

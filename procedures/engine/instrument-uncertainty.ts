@@ -1,4 +1,10 @@
-import { differenceFromBase, differenceToBase, expandedUncertainty, unitKind, type UnitName } from '../calculations';
+import {
+  differenceFromBase,
+  differenceToBase,
+  expandedUncertainty,
+  unitKind,
+  type UnitName,
+} from '../calculations/for-a-run';
 import type { PressureSense, Quantity } from '../document';
 import { decimalsOf } from './figures';
 import type { InstrumentRange, InstrumentSnapshot } from './run-event';

@@ -1,4 +1,4 @@
-import { judge, type UnitName } from '../calculations';
+import { judge, type UnitName } from '../calculations/for-a-run';
 import type { CompiledProcedure, Environment, Quantity } from '../document';
 import { decimalsOf, fixed, shownIn, trimmed } from './figures';
 import type { Judgement } from './run-state';

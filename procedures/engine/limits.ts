@@ -1,4 +1,4 @@
-import { toBase, type UnitName } from '../calculations';
+import { toBase, type UnitName } from '../calculations/for-a-run';
 import type { CompiledProcedure, Environment, Limit, PressureSense } from '../document';
 import { limitHoldsAt } from './called';
 import { own } from './environment';

@@ -14,7 +14,7 @@ import {
   type RampSample,
   type SealPoint,
   type SensorTracking,
-} from '../calculations';
+} from '../calculations/for-a-run';
 import { isSeriesStep, type CompiledProcedure, type FoundQuantity, type SeriesStep } from '../document';
 import { own } from './environment';
 import { figureText, type FigureText } from './figures';

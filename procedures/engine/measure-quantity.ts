@@ -1,4 +1,4 @@
-import { differenceToBase, fromBase, toBase, type UnitName } from '../calculations';
+import { differenceToBase, fromBase, toBase, type UnitName } from '../calculations/for-a-run';
 import type { CompiledProcedure, EntryWay, Quantity, ReadQuantity } from '../document';
 import { environmentOf } from './environment';
 import { decimalsOf, figureText, fixed, uncertaintyText } from './figures';

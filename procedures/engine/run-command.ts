@@ -1,4 +1,4 @@
-import type { UnitName } from '../calculations';
+import type { UnitName } from '../calculations/for-a-run';
 import type { EventDraft, InstrumentSnapshot, ReadingSource, RunEventData, TroubleCodeEntry } from './run-event';
 import type { Series } from './series';
 

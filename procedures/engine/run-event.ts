@@ -1,5 +1,5 @@
 import type { InstrumentKind, PressureSense } from '../document';
-import type { UnitName } from '../calculations';
+import type { UnitName } from '../calculations/for-a-run';
 
 /** What the first event's `prev` is the hash of: which procedure is run, on what, and whether it is real. Never changes. */
 export interface RunHeader {

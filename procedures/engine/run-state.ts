@@ -1,5 +1,5 @@
 import type { JudgedResult, PressureSense } from '../document';
-import type { UnitName } from '../calculations';
+import type { UnitName } from '../calculations/for-a-run';
 import type {
   BegunAgain,
   DecisionInput,

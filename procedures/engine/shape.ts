@@ -1,4 +1,4 @@
-import { isUnit } from '../calculations';
+import { isUnit } from '../calculations/for-a-run';
 
 /**
  * Says what keeps a value from having a shape, with the place in it (`data/figure/text is no text`); undefined when it

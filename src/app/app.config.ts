@@ -1,7 +1,6 @@
 import { provideHttpClient, withFetch, withInterceptors } from '@angular/common/http';
-import { type ApplicationConfig, ErrorHandler, isDevMode, provideBrowserGlobalErrorListeners } from '@angular/core';
+import { type ApplicationConfig, ErrorHandler, provideBrowserGlobalErrorListeners } from '@angular/core';
 import { provideRouter, TitleStrategy, withComponentInputBinding, withRouterConfig } from '@angular/router';
-import { provideServiceWorker } from '@angular/service-worker';
 import { routes } from './app.routes';
 import { PageTitle } from './core/page-title';
 import { problemInterceptor } from './core/problem-interceptor';
@@ -16,6 +15,5 @@ export const appConfig: ApplicationConfig = {
     provideRouter(routes, withComponentInputBinding(), withRouterConfig({ paramsInheritanceStrategy: 'always' })),
     { provide: TitleStrategy, useExisting: PageTitle },
     provideHttpClient(withFetch(), withInterceptors([sessionInterceptor, problemInterceptor])),
-    provideServiceWorker('ngsw-worker.js', { enabled: !isDevMode() }),
   ],
 };

@@ -1,4 +1,4 @@
-import type { UnitKind } from '../../calculations';
+import type { UnitKind } from '../../calculations/for-a-run';
 
 /**
  * Exponents of kilogram, metre, second, kelvin, ampere and decibel: what a value measures, whatever its unit is. The

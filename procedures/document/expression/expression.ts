@@ -1,4 +1,4 @@
-import type { UnitName } from '../../calculations';
+import type { UnitName } from '../../calculations/for-a-run';
 
 /** Where a node stands in its source: from `start` up to, not including, `end`, in UTF-16 code units. */
 export interface Span {

@@ -1,4 +1,4 @@
-import { unitKind, units, type UnitName } from '../../calculations';
+import { unitKind, units, type UnitName } from '../../calculations/for-a-run';
 import type { PressureSense } from '../procedure-document';
 import { dimensionInWords, dimensionOf, isSameDimension, unitKindOf, type Dimension } from './dimension';
 import type { ExpressionProblem, Span } from './expression';

@@ -1,4 +1,4 @@
-import { toAbsolute, toBase, toGauge } from '../../calculations';
+import { toAbsolute, toBase, toGauge } from '../../calculations/for-a-run';
 import { signatures } from './signatures';
 import type { Environment } from './environment';
 import { stationPressureName, type ArithmeticNode, type CallNode, type Expression } from './expression';

@@ -1,13 +1,11 @@
 import {
   decayLeakRate,
-  elevationOf,
   orificeDiameter,
   orificeMassFlow,
   speedDensityAirflow,
-  standardPressure,
-  stationPressure,
   volumetricEfficiency,
-} from '../../calculations';
+} from '../../calculations/air-and-leaks';
+import { elevationOf, standardPressure, stationPressure } from '../../calculations/for-a-run';
 import type { PhysicalCalculation } from './expression';
 import { plainNumber, pressure, quantityOf, type QuantityKind } from './kinds';
 

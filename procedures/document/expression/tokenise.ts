@@ -1,4 +1,4 @@
-import { isUnit, units, type UnitName } from '../../calculations';
+import { isUnit, units, type UnitName } from '../../calculations/for-a-run';
 import type { ExpressionProblem, Span } from './expression';
 import { refusedWords } from './vocabulary';
 

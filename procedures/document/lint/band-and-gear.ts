@@ -1,4 +1,4 @@
-import { differenceFromBase, differenceToBase, expandedUncertainty, unitKind } from '../../calculations';
+import { differenceFromBase, differenceToBase, expandedUncertainty, unitKind } from '../../calculations/for-a-run';
 import type { GearNeed } from '../procedure-document';
 import { bandedQuantities, type BandedQuantity } from './banded-quantities';
 import { stepWords, type LintFinding, type LintSubject } from './lint-finding';

@@ -1,4 +1,4 @@
-import { isUnit, toBase, unitKind, units, type UnitName } from '../../calculations';
+import { isUnit, toBase, unitKind, units, type UnitName } from '../../calculations/for-a-run';
 
 /** A figure with its unit, as a text says it. */
 export interface WrittenFigure {

@@ -1,4 +1,4 @@
-import { differenceFromBase, toBase, unitKind } from '../../calculations';
+import { differenceFromBase, toBase, unitKind } from '../../calculations/for-a-run';
 import { truthPart } from '../expression/truth-part';
 import type { Limit } from '../procedure-document';
 import { isSeriesStep } from '../step-parts';

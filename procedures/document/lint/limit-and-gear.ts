@@ -1,4 +1,4 @@
-import { fromBase, toBase, unitKind } from '../../calculations';
+import { fromBase, toBase, unitKind } from '../../calculations/for-a-run';
 import { expressionPlaces, type ExpressionPlace } from '../expression-places';
 import type { ComparisonNode, Expression } from '../expression/expression';
 import { partsOf } from '../expression/names-in';

@@ -1,4 +1,4 @@
-import { differenceFromBase } from '../../calculations';
+import { differenceFromBase } from '../../calculations/for-a-run';
 import type { Limit } from '../procedure-document';
 import { ceilingOf } from './ceilings';
 import { documentTexts, textPlace, type PlacedText } from './document-texts';

@@ -1,4 +1,4 @@
-import { toBase, unitKind } from '../../calculations';
+import { toBase, unitKind } from '../../calculations/for-a-run';
 import { declarationsOf, type Declaration } from '../declarations';
 import type { Environment } from '../expression/environment';
 import type { Expression } from '../expression/expression';

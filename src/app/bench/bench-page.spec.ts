@@ -1,7 +1,6 @@
 import 'fake-indexeddb/auto';
 import { TestBed } from '@angular/core/testing';
 import { provideRouter } from '@angular/router';
-import { provideServiceWorker } from '@angular/service-worker';
 import { OfflineStore } from '../core/offline-store';
 import type { RunRow, RunSummary } from '../core/stored-rows';
 import { coreForSpecs, eventually, okafor, startOfDay, workOffline } from '../core/testing/core-for-specs';
@@ -65,7 +64,7 @@ const procedure = {
 } as unknown as PublishedProcedure;
 
 async function bench(role: Role, fillStore: (store: OfflineStore) => Promise<unknown> = () => Promise.resolve()) {
-  const { server } = coreForSpecs([provideRouter([]), provideServiceWorker('none.js', { enabled: false })]);
+  const { server } = coreForSpecs([provideRouter([])]);
   const store = TestBed.inject(OfflineStore);
   await fillStore(store);
   await workOffline(server, { ...okafor, role });

@@ -1,4 +1,4 @@
-import { convert } from '../../../procedures/calculations';
+import { convert } from '../../../procedures/calculations/for-a-run';
 import type { CompiledProcedure, JudgedResult } from '../../../procedures/document';
 import { shownUnit, type EventOf, type RunEvent, type RunState } from '../../../procedures/engine';
 import type { BenchEntry, PracticeScenario } from '../shared/practice/practice-scenario';

@@ -1,4 +1,4 @@
-import { convert, isUnit } from '../../../procedures/calculations';
+import { convert, isUnit } from '../../../procedures/calculations/for-a-run';
 import type { Series } from '../../../procedures/engine';
 
 /** Channels that are absolute pressures; the gauge's is a rise already. */

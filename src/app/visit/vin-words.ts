@@ -1,4 +1,4 @@
-import { checkVin, modelYear, vinCheckDigit } from '../../../procedures/calculations';
+import { checkVin, modelYear, vinCheckDigit } from '../../../procedures/calculations/for-a-run';
 
 /** World maker identifier, descriptor, indicator: the sections of a vehicle identification number (ISO 3779). */
 const sections = [3, 6, 8] as const;

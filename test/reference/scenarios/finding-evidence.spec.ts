@@ -1,4 +1,4 @@
-import { evidenceOf, type Evidence } from '../../../procedures/engine';
+import { evidenceOf, type Evidence } from '../../../procedures/engine/evidence';
 import type { RunWalk } from '../../../procedures/engine/testing/run-walk';
 import { compiledValveSeal } from '../../support/compiled-valve-seal';
 import { fineGear, gaugeG7, scanToolS1 } from '../../support/ossenholt-gear';

@@ -1,4 +1,4 @@
-import { standardPressure, stationPressure, toBase } from '../../../calculations';
+import { standardPressure, stationPressure, toBase } from '../../../calculations/for-a-run';
 import { stationPressureName, type CallNode, type Expression } from '../../expression/expression';
 
 /** All that a number can be, both ends included, in base units. */

@@ -1,4 +1,4 @@
-import { toBase, unitKind } from '../../../calculations';
+import { toBase, unitKind } from '../../../calculations/for-a-run';
 import type { Expression } from '../../expression/expression';
 import type { ProcedureDocument, Quantity } from '../../procedure-document';
 import { findsOf, isFoundQuantity, readsOf, resultsOf, takenOf } from '../../step-parts';

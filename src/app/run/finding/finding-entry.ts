@@ -1,5 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, input, output, signal } from '@angular/core';
-import { evidenceOf, renderTemplate } from '../../../../procedures/engine';
+import { renderTemplate } from '../../../../procedures/engine';
+import { evidenceOf } from '../../../../procedures/engine/evidence';
 import { ResultMark } from '../../shared/result-mark';
 import { resultWords } from '../../shared/result-words';
 import { BigAction } from '../frame/big-action';

@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input, linkedSignal, output, signal } from '@angular/core';
-import { isUnit } from '../../../../procedures/calculations';
+import { isUnit } from '../../../../procedures/calculations/for-a-run';
 import { shownUnit, type Series } from '../../../../procedures/engine';
 import { RampPlot } from '../../shared/ramp-plot';
 import type { PlotMark } from '../../shared/ramp-plot-options';

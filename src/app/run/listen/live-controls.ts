@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
-import { isUnit } from '../../../../procedures/calculations';
+import { isUnit } from '../../../../procedures/calculations/for-a-run';
 import { previewListening, shownUnit, type RunCommand, type Series } from '../../../../procedures/engine';
 import { BigAction } from '../frame/big-action';
 import { JudgedLine } from '../readings/judged-line';

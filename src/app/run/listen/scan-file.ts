@@ -1,4 +1,4 @@
-import { isUnit, unitKind, type LogChannel, type ScanLog } from '../../../../procedures/calculations';
+import { isUnit, unitKind, type LogChannel, type ScanLog } from '../../../../procedures/calculations/for-a-run';
 // By its path: through the room's face it would come with the first step already.
 import { parseScanLog } from '../../../../procedures/calculations/parse-scan-log';
 import type { Channel, ListenStep } from '../../../../procedures/document';

@@ -1,6 +1,6 @@
 import type { EventOf, Take } from '../../../../procedures/engine';
 import type { RunView } from '../run-view';
-import { fromBase } from '../../../../procedures/calculations';
+import { fromBase } from '../../../../procedures/calculations/for-a-run';
 import type { ReadQuantity } from '../../../../procedures/document';
 
 /** What was recorded last for a quantity before the step was claimed this time: its figure as it was typed. */

@@ -1,4 +1,4 @@
-import { unitKind, type UnitName } from '../../../../procedures/calculations';
+import { unitKind, type UnitName } from '../../../../procedures/calculations/for-a-run';
 import type { EntryWay, PressureSense, ReadQuantity } from '../../../../procedures/document';
 import type { InstrumentSnapshot, RunState } from '../../../../procedures/engine';
 

@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, effect, output, signal } from '@angular/core';
-import type { UnitName } from '../../../../procedures/calculations';
+import type { UnitName } from '../../../../procedures/calculations/for-a-run';
 import {
   parseDecimal,
   previewBand,

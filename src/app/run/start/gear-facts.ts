@@ -1,4 +1,4 @@
-import { convert, unitKind } from '../../../../procedures/calculations';
+import { convert, unitKind } from '../../../../procedures/calculations/for-a-run';
 import type { GearNeed } from '../../../../procedures/document';
 import { coarseness, isOverdue, shownUnit, type InstrumentSnapshot } from '../../../../procedures/engine';
 import { daysUntil } from '../../core/time-words';

@@ -1,5 +1,5 @@
 import type { TroubleCodeEntry } from '../../../../procedures/engine';
-import type { UnitName } from '../../../../procedures/calculations';
+import type { UnitName } from '../../../../procedures/calculations/for-a-run';
 import type { BenchEntry } from './practice-scenario';
 
 /** An instrument shows a figure. */

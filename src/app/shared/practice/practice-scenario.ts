@@ -1,4 +1,4 @@
-import type { UnitName } from '../../../../procedures/calculations';
+import type { UnitName } from '../../../../procedures/calculations/for-a-run';
 import type { TroubleCodeEntry, VisitSnapshot } from '../../../../procedures/engine';
 
 /** A car with a fault that nobody is told about, for a run of kind practice. */
