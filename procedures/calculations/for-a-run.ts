@@ -37,4 +37,3 @@ export {
   type UnitKind,
   type UnitName,
 } from './units';
-export { checkVin, modelYear, vinCheckDigit, type VinCheck, type VinProblem } from './vin';

@@ -5,3 +5,4 @@ export { decodePid, type PidReading } from './pid';
 export { type Monitor, type Readiness } from './readiness';
 export { parseScanLog } from './parse-scan-log';
 export { decodeTroubleCode, describeTroubleCode } from './trouble-code';
+export { checkVin, modelYear, vinCheckDigit, type VinCheck, type VinProblem } from './vin';

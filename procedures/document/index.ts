@@ -1,6 +1,6 @@
 /**
  * The public face of procedure documents. The app imports types from here, and the functions lazily: reading
- * expressions brings mathjs's parser with it.
+ * expressions brings mathjs's parser with it. What only looks at a step is imported from `step-parts` by its path.
  */
 export * from './procedure-document';
 export {

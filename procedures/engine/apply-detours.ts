@@ -1,4 +1,5 @@
-import { isSeriesStep, type CompiledProcedure } from '../document';
+import type { CompiledProcedure } from '../document';
+import { isSeriesStep } from '../document/step-parts';
 import { dropLastTake } from './apply-readings';
 import { requireCurrent, requireStep } from './apply-walk';
 import { RefusedEvent } from './refusal';

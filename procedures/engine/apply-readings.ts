@@ -1,5 +1,6 @@
 import { unitKind } from '../calculations/for-a-run';
-import { isSeriesStep, type CompiledProcedure, type Step } from '../document';
+import type { CompiledProcedure, Step } from '../document';
+import { isSeriesStep } from '../document/step-parts';
 import { own } from './environment';
 import { parseDecimal } from './figures';
 import { added, withEntry, withoutEntry } from './state-changes';

@@ -1,4 +1,5 @@
-import { isSeriesStep, type CompiledProcedure, type Step } from '../document';
+import type { CompiledProcedure, Step } from '../document';
+import { isSeriesStep } from '../document/step-parts';
 import { cautionCount } from './cautions';
 import { isComplete, recordTake, takeBack } from './decide-readings';
 import { finishListening, importSeries, placeMark, takeMarkAway } from './decide-listening';

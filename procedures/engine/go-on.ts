@@ -1,4 +1,5 @@
-import { resultsOf, takenOf, type CompiledProcedure, type Step } from '../document';
+import type { CompiledProcedure, Step } from '../document';
+import { resultsOf, takenOf } from '../document/step-parts';
 import type { NamedValue } from './run-state';
 import { CannotDo, type Drafting } from './drafting';
 import { requireSomebody } from './decide-second-person';

@@ -15,7 +15,8 @@ import {
   type SealPoint,
   type SensorTracking,
 } from '../calculations/for-a-run';
-import { isSeriesStep, type CompiledProcedure, type FoundQuantity, type SeriesStep } from '../document';
+import type { CompiledProcedure, FoundQuantity, SeriesStep } from '../document';
+import { isSeriesStep } from '../document/step-parts';
 import { own } from './environment';
 import { figureText, type FigureText } from './figures';
 import { rangeFor } from './instrument-uncertainty';

@@ -1,16 +1,7 @@
-import {
-  findsOf,
-  isFoundQuantity,
-  isFoundTruth,
-  readsOf,
-  type EntryWay,
-  type FoundQuantity,
-  type FoundTruth,
-  type ReadQuantity,
-  type Step,
-} from '../document';
+import type { EntryWay, FoundQuantity, FoundTruth, ReadQuantity, Step } from '../document';
+import { findsOf, isFoundQuantity, isFoundTruth, readsOf } from '../document/step-parts';
 
-export { channelsOf, readsOf, resultsOf } from '../document';
+export { channelsOf, readsOf, resultsOf } from '../document/step-parts';
 
 /** What a step looks for in its series as quantities. */
 export function foundQuantitiesOf(step: Step): readonly FoundQuantity[] {

@@ -1,4 +1,5 @@
-import { takenOf, type CompiledProcedure, type Validity } from '../document';
+import type { CompiledProcedure, Validity } from '../document';
+import { takenOf } from '../document/step-parts';
 import { own } from './environment';
 import { readsOf, resultsOf } from './quantities';
 import type { NamedValue, RunState } from './run-state';

@@ -9,9 +9,13 @@ const budgetBytes = 220_000;
 /** In every build of it and in nothing else: a message of mathjs, the expression library. */
 const expressionLibrary = 'Unexpected end of expression';
 
+/** The library's own chunk has 53 kB: what is more than this lies in it and should be counted. */
+const libraryBytes = 56_000;
+
 interface Script {
   readonly name: string;
   readonly bytes: number;
+  readonly isLibrary: boolean;
 }
 
 /**
@@ -24,25 +28,17 @@ async function countedPage(browser: Browser): Promise<{ page: Page; scripts: () 
   await page.addInitScript(() => {
     window.requestIdleCallback = () => 0;
   });
-  const coming: Promise<Script | undefined>[] = [];
+  const coming: Promise<Script>[] = [];
   page.on('response', (response) => {
     if (response.request().resourceType() !== 'script') return;
     const name = new URL(response.url()).pathname;
     coming.push(
-      response.body().then((body) => {
-        return body.includes(expressionLibrary) ? undefined : { name, bytes: gzipSync(body).length };
-      }),
+      response
+        .body()
+        .then((body) => ({ name, bytes: gzipSync(body).length, isLibrary: body.includes(expressionLibrary) })),
     );
   });
-  return {
-    page,
-    scripts: async () => {
-      const come = await Promise.all(coming);
-      // The library must be seen, or what is left out here would be left out of nothing.
-      expect(come.filter((script) => script === undefined)).toHaveLength(1);
-      return come.filter((script) => script !== undefined).sort((a, b) => b.bytes - a.bytes);
-    },
-  };
+  return { page, scripts: () => Promise.all(coming) };
 }
 
 const sum = (scripts: readonly Script[]): number => scripts.reduce((total, { bytes }) => total + bytes, 0);
@@ -55,7 +51,11 @@ test('from the sign-in to the first step at most 220 kB of script are fetched, w
   await page.getByRole('link', { name: /^Take it/ }).click();
   await page.getByRole('button', { name: /the cold half|Cold half again/ }).click();
   await expect(page.locator('bay-start-entry h1').first()).toBeVisible();
-  const fetched = await scripts();
+  const come = await scripts();
+  const library = come.filter(({ isLibrary }) => isLibrary);
+  expect(library).toHaveLength(1);
+  expect(sum(library)).toBeLessThanOrEqual(libraryBytes);
+  const fetched = come.filter(({ isLibrary }) => !isLibrary).sort((a, b) => b.bytes - a.bytes);
   const total = sum(fetched);
   const largest = fetched.slice(0, 12).map(({ name, bytes }) => `${bytes} ${name}`);
   info.annotations.push({ type: 'script', description: `${total} bytes gzip in ${fetched.length} files` });

@@ -1,6 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, input, model } from '@angular/core';
 import { ResultMark } from '../shared/result-mark';
-import { caretIn, groupVin, tidyVin, vinLength, vinVerdict } from './vin-words';
+import { caretIn, groupVin, tidyVin, vinLength } from './vin-text';
+import { vinVerdict } from './vin-words';
 
 /** The VIN, grouped while it is typed and checked at once. One that does not fit may be kept after a second look. */
 @Component({

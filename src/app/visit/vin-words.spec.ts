@@ -1,4 +1,5 @@
-import { caretIn, groupVin, tidyVin, vinVerdict } from './vin-words';
+import { caretIn, groupVin, tidyVin } from './vin-text';
+import { vinVerdict } from './vin-words';
 
 describe('VIN words', () => {
   it('groups what is typed into its three sections', () => {

@@ -14,7 +14,7 @@ import { BegunAlready } from './begun-already';
 import { CodeMeanings } from './code-meanings';
 import { ProcedureCard } from './procedure-card';
 import { RunBeginner, type Half } from './run-beginner';
-import { groupVin } from './vin-words';
+import { groupVin } from './vin-text';
 import { VisitStore } from './visit-store';
 
 /** One visit: the car, the concern, and the procedures that fit, from which a run begins. */
