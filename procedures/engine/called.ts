@@ -24,10 +24,13 @@ export function destinationOf(procedure: CompiledProcedure, state: RunState, ste
 }
 
 function headingBeforeCall(procedure: CompiledProcedure, state: RunState, call: string): string | undefined {
-  const entered = [...state.walked]
-    .reverse()
-    .find(({ step }) => step !== call && procedure.blockOf(step)?.call === call && isFirst(procedure, step));
-  return entered === undefined ? state.verdict : entered.verdictBefore;
+  // From the newest back: a call that was just gone through is near the end.
+  for (let index = state.walked.length - 1; index >= 0; index -= 1) {
+    const claim = state.walked[index];
+    if (claim === undefined || claim.step === call) continue;
+    if (procedure.blockOf(claim.step)?.call === call && isFirst(procedure, claim.step)) return claim.verdictBefore;
+  }
+  return state.verdict;
 }
 
 function isFirst(procedure: CompiledProcedure, step: string): boolean {
