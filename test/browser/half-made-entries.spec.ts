@@ -1,7 +1,7 @@
 import type { Page } from '@playwright/test';
 import { acknowledge, shownStep, tap, walkTo, type Answers } from './support/at-the-car';
 import { expect, test } from './support/test';
-import { signIn } from './support/visits';
+import { openVisit, signIn } from './support/visits';
 
 /** Takes the ramp that the bench offers, and says that the noise never stopped. */
 async function listenToTheBench(page: Page): Promise<void> {
@@ -134,4 +134,26 @@ test('a choice and the words beside it outlive a reload and a pause; what is ref
   await reach(page, '13');
   await expect(choice.getByRole('checkbox', { name: 'At a joint' })).not.toBeChecked();
   await expect(page.locator('#asked')).toHaveCount(0);
+});
+
+test('a half-typed visit outlives a reload right after the last key, with the code that is not added yet', async ({
+  page,
+}) => {
+  await signIn(page, 'okafor');
+  await openVisit(page, { Make: 'Merrow' });
+  const last: [label: string, text: string, shown: string][] = [
+    ['VIN', '1ZZBT4CK4LR2048', '1ZZ BT4CK4 LR2048'],
+    ['Repair order', '4431', '4431'],
+    ['Odometer', '61240', '61240'],
+    ['Concern', 'Whistle at idle', 'Whistle at idle'],
+    ['Trouble codes', 'P00', 'P00'],
+  ];
+  for (const [label, text, shown] of last) {
+    const field = page.getByRole('textbox', { name: label });
+    await field.pressSequentially(text);
+    await page.reload();
+    await expect(field).toHaveValue(shown);
+  }
+  for (const [label, , shown] of last) await expect(page.getByRole('textbox', { name: label })).toHaveValue(shown);
+  await expect(page.getByRole('textbox', { name: 'Make' })).toHaveValue('Merrow');
 });

@@ -10,8 +10,9 @@ import { codeProblem, codesIn, codeWords } from '../shared/trouble-code-words';
 })
 export class CodeListField {
   readonly codes = model.required<readonly string[]>();
+  /** What stands in the field and was not added yet. */
+  readonly typed = model('');
 
-  protected readonly typed = signal('');
   protected readonly problem = signal<string | undefined>(undefined);
   protected readonly listed = computed(() => this.codes().map((code) => ({ code, words: codeWords(code) })));
 

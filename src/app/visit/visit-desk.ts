@@ -15,8 +15,13 @@ export class VisitDesk {
   private readonly now = inject(clock);
   private readonly makeId = inject(newId);
 
+  /** Key -> the newest draft that is not written yet; undefined is to be forgotten. */
+  private readonly unwritten = new Map<string, VisitDraft | undefined>();
+  private written: Promise<void> = Promise.resolve();
+
   /** The draft of a visit: what was typed last, else the visit as it is kept, else an empty one. Undefined: no such visit. */
   async draft(visitId: string | undefined): Promise<VisitDraft | undefined> {
+    await this.written.catch(() => undefined);
     const typed = await this.settings.read<VisitDraft>(this.keyOf(visitId));
     if (typed !== undefined) return { ...emptyDraft, ...typed };
     if (visitId === undefined) return emptyDraft;
@@ -24,14 +29,14 @@ export class VisitDesk {
     return visit && draftOf(visit);
   }
 
-  /** Keeps what is typed so far. */
-  async keepDraft(visitId: string | undefined, draft: VisitDraft): Promise<void> {
-    await this.settings.write(this.keyOf(visitId), draft);
+  /** Keeps what is typed so far, at once. */
+  keepDraft(visitId: string | undefined, draft: VisitDraft): Promise<void> {
+    return this.put(this.keyOf(visitId), draft);
   }
 
   /** Forgets what is typed. */
-  async forgetDraft(visitId: string | undefined): Promise<void> {
-    await this.settings.forget(this.keyOf(visitId));
+  forgetDraft(visitId: string | undefined): Promise<void> {
+    return this.put(this.keyOf(visitId), undefined);
   }
 
   /** Keeps the visit that a draft without problems makes, and gives it back. */
@@ -55,6 +60,22 @@ export class VisitDesk {
 
   thisYear(): number {
     return new Date(this.now()).getFullYear();
+  }
+
+  /** One write at a time, each with the newest: nothing older ends up over it. */
+  private put(key: string, draft: VisitDraft | undefined): Promise<void> {
+    this.unwritten.set(key, draft);
+    const write = (): Promise<void> => this.write(key);
+    this.written = this.written.then(write, write);
+    return this.written;
+  }
+
+  private async write(key: string): Promise<void> {
+    if (!this.unwritten.has(key)) return;
+    const draft = this.unwritten.get(key);
+    this.unwritten.delete(key);
+    if (draft === undefined) await this.settings.forget(key);
+    else await this.settings.write(key, draft);
   }
 
   private keyOf(visitId: string | undefined): string {

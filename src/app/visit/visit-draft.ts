@@ -11,6 +11,8 @@ export interface VisitDraft {
   readonly odometerUnit: 'km' | 'mi';
   readonly concern: string;
   readonly codes: readonly string[];
+  /** What stands in the codes' field and was not added yet. */
+  readonly codesTyped: string;
   readonly make: string;
   readonly model: string;
   readonly colour: string;
@@ -30,6 +32,7 @@ export const emptyDraft: VisitDraft = {
   odometerUnit: 'km',
   concern: '',
   codes: [],
+  codesTyped: '',
   make: '',
   model: '',
   colour: '',
@@ -101,6 +104,7 @@ export function draftOf(visit: Visit): VisitDraft {
     odometerUnit: visit.odometer.unit,
     concern: visit.concern,
     codes: visit.codes,
+    codesTyped: '',
     make: car.make,
     model: car.model,
     colour: car.colour ?? '',

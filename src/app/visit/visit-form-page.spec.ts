@@ -3,6 +3,7 @@ import { ChangeDetectionStrategy, Component } from '@angular/core';
 import { TestBed } from '@angular/core/testing';
 import { provideRouter, Router } from '@angular/router';
 import { OfflineStore } from '../core/offline-store';
+import { SettingsBook } from '../core/settings-book';
 import { coreForSpecs, eventually, registeredTablet, workOffline } from '../core/testing/core-for-specs';
 import { VisitFormPage } from './visit-form-page';
 
@@ -102,13 +103,27 @@ describe('VisitFormPage', () => {
     const first = await form();
     await first.type('vin', '1zzbt4ck');
     await first.type('concern', 'Whistle at');
-    const drafts = () => TestBed.inject(OfflineStore).settings.filter(({ key }) => key.startsWith('visit-draft'));
-    await eventually(async () => expect(JSON.stringify(await drafts().toArray())).toContain('Whistle at'));
+    await first.type('codes', 'P006');
     first.fixture.destroy();
     document.body.replaceChildren();
 
     const second = await form();
-    expect([second.valueOf('vin'), second.valueOf('concern')]).toEqual(['1ZZ BT4CK', 'Whistle at']);
+    await second.fixture.whenStable();
+    expect(['vin', 'concern', 'codes'].map(second.valueOf)).toEqual(['1ZZ BT4CK', 'Whistle at', 'P006']);
+    expect(second.errors()).toEqual([]);
+  });
+
+  it('keeps every key as it is typed, without waiting for the next', async () => {
+    const store = await signedIn();
+    const write = jest.spyOn(TestBed.inject(SettingsBook), 'write');
+    const { fixture, type } = await form();
+    await fixture.whenStable();
+    expect(write).not.toHaveBeenCalled();
+    await type('repair-order', '44');
+    expect(write).toHaveBeenCalledTimes(1);
+    await eventually(async () =>
+      expect(await store.settings.get('visit-draft:new:p-okafor')).toMatchObject({ value: { repairOrder: '44' } }),
+    );
   });
 
   it('forgets what was typed once the visit is kept', async () => {
@@ -119,8 +134,9 @@ describe('VisitFormPage', () => {
     await eventually(async () => expect(await drafts()).toBe(1));
     await keep();
     await eventually(async () => expect(await drafts()).toBe(0));
-    // What is typed is kept 250 ms after the last key: nothing of that may come after.
-    await new Promise((resolve) => setTimeout(resolve, 400));
+    // Nothing of what was typed may be written after that.
+    await atVisit();
+    await new Promise((resolve) => setTimeout(resolve, 100));
     expect(await drafts()).toBe(0);
   });
 

@@ -3,7 +3,6 @@ import {
   ChangeDetectionStrategy,
   Component,
   computed,
-  DestroyRef,
   effect,
   type ElementRef,
   inject,
@@ -23,9 +22,6 @@ import { VinField } from './vin-field';
 import { vinVerdict } from './vin-words';
 import { VisitDesk } from './visit-desk';
 import { draftProblems, emptyDraft, type VisitDraft } from './visit-draft';
-
-/** How long after the last key what is typed is kept. */
-const keepAfterMs = 250;
 
 /** Opens a visit, or changes one. */
 @Component({
@@ -69,7 +65,6 @@ export class VisitFormPage {
     const verdict = vinVerdict(this.draft().vin, this.thisYear);
     return verdict.is === 'fits' ? verdict.year : undefined;
   });
-  private timer: ReturnType<typeof setTimeout> | undefined;
 
   constructor() {
     // The store is outside: reading it is begun anew for each visit that the address names.
@@ -77,8 +72,7 @@ export class VisitFormPage {
       const id = this.id();
       untracked(() => void this.open(id));
     });
-    inject(DestroyRef).onDestroy(() => void this.keepNow());
-    this.form.valueChanges.subscribe(() => this.keepSoon());
+    this.form.valueChanges.subscribe(() => this.keepTyped());
   }
 
   protected leave(field: string): void {
@@ -90,27 +84,24 @@ export class VisitFormPage {
     const areCodesTaken = this.codesField()?.take() ?? true;
     this.wantsAll.set(true);
     if (!areCodesTaken || Object.keys(this.allProblems()).length > 0) {
-      // The page may be left while the store still writes: what it shows does not wait for that.
       this.showFirstProblem();
-      return this.keepNow();
+      return;
     }
     this.phase.set('keeping');
-    this.dropTimer();
     const visit = await this.desk.keep(this.id(), this.typed());
     await this.router.navigate(['/visit', visit.id], { replaceUrl: true });
   }
 
   protected async giveUp(): Promise<void> {
-    this.dropTimer();
     await this.desk.forgetDraft(this.id());
     await this.router.navigateByUrl(this.id() === undefined ? '/' : `/visit/${this.id()}`);
   }
 
   private async open(id: string | undefined): Promise<void> {
+    this.phase.set('loading');
     const draft = await this.desk.draft(id);
     if (draft === undefined) return this.phase.set('missing');
     this.form.setValue({ ...draft }, { emitEvent: true });
-    this.dropTimer();
     this.phase.set('ready');
   }
 
@@ -118,21 +109,9 @@ export class VisitFormPage {
     return this.form.getRawValue();
   }
 
-  private keepSoon(): void {
-    clearTimeout(this.timer);
-    this.timer = setTimeout(() => void this.keepNow(), keepAfterMs);
-  }
-
-  /** Keeps what was typed since it was last kept. */
-  private async keepNow(): Promise<void> {
-    if (this.timer === undefined) return;
-    this.dropTimer();
-    await this.desk.keepDraft(this.id(), this.typed());
-  }
-
-  private dropTimer(): void {
-    clearTimeout(this.timer);
-    this.timer = undefined;
+  /** Every change is kept at once: the page may be loaded again after any key. */
+  private keepTyped(): void {
+    if (this.phase() === 'ready') void this.desk.keepDraft(this.id(), this.typed());
   }
 
   private showFirstProblem(): void {
