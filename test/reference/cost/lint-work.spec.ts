@@ -1,8 +1,8 @@
-import { WorkCounter } from '../../test/support/work-counter';
-import { lintProcedure } from './lint';
-import type { ProcedureDocument } from './procedure-document';
-import { longProcedure } from './testing/long-procedure';
-import { wideProcedure } from './testing/wide-procedure';
+import { WorkCounter } from '../../support/work-counter';
+import { lintProcedure } from '../../../procedures/document/lint';
+import type { ProcedureDocument } from '../../../procedures/document/procedure-document';
+import { longProcedure } from '../../../procedures/document/testing/long-procedure';
+import { wideProcedure } from '../../../procedures/document/testing/wide-procedure';
 
 const findings = 8;
 /** As many steps in all: the start card, the restore step and the findings, "not completed" among them, included. */

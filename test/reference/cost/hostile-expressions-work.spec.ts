@@ -1,6 +1,6 @@
 import fc from 'fast-check';
-import { WorkCounter } from '../../../test/support/work-counter';
-import { parseExpression } from './parse';
+import { WorkCounter } from '../../support/work-counter';
+import { parseExpression } from '../../../procedures/document/expression/parse';
 
 /*
  * What a hostile text can cost, in blocks of code entered; the longest text that is read at all has 2,000 characters.

@@ -1,6 +1,6 @@
 import fc from 'fast-check';
-import { inferKind } from './infer-kind';
-import { parseExpression } from './parse';
+import { inferKind } from '../../../procedures/document/expression/infer-kind';
+import { parseExpression } from '../../../procedures/document/expression/parse';
 
 /** Of the processor, generous for a slow machine; the texts are up to 1 MB. `hostile-work.spec.ts` counts the work. */
 const boundMs = 500;
