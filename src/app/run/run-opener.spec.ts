@@ -3,13 +3,14 @@ import { TestBed } from '@angular/core/testing';
 import type { ProcedureDocument } from '../../../procedures/document';
 import { plugHold } from '../../../procedures/document/testing/plug-hold';
 import { walkRound } from '../../../procedures/document/testing/walk-round';
-import { contentHash, openRun, type RunHeader } from '../../../procedures/engine';
+import { contentHash, openRun, type EventDraft, type RunHeader } from '../../../procedures/engine';
 import { openingFacts } from '../../../procedures/engine/testing/run-walk';
+import { roundTo } from '../../../procedures/engine/testing/walk-round-walk';
 import { OfflineStore } from '../core/offline-store';
 import { procedureCompiler } from '../core/procedure-compiler';
 import { RunJournal } from '../core/run-journal';
-import { closeStores, coreForSpecs, registeredTablet, workOffline } from '../core/testing/core-for-specs';
-import type { PublishedProcedure } from '../core/wire';
+import { closeStores, coreForSpecs, okafor, registeredTablet, workOffline } from '../core/testing/core-for-specs';
+import type { Person, PublishedProcedure } from '../core/wire';
 import { RunOpener } from './run-opener';
 
 const header: RunHeader = {
@@ -29,15 +30,15 @@ function published(document: ProcedureDocument, status: PublishedProcedure['stat
 }
 
 /** A tablet with a run of the walk-round on it, which calls the plug hold test. */
-async function tabletWithRun(): Promise<OfflineStore> {
+async function tabletWithRun(person: Person = okafor, more: readonly EventDraft[] = []): Promise<OfflineStore> {
   const { server } = coreForSpecs();
   await registeredTablet();
-  await workOffline(server);
+  await workOffline(server, person);
   const store = TestBed.inject(OfflineStore);
   await store.procedures.bulkPut([published(walkRound), published(plugHold, 'withdrawn')]);
   const opening = openRun(await TestBed.inject(procedureCompiler)(walkRound), openingFacts);
   if (!opening.ok) throw new Error(opening.message);
-  await TestBed.inject(RunJournal).open(header, opening.drafts);
+  await TestBed.inject(RunJournal).open(header, [...opening.drafts, ...more]);
   TestBed.inject(RunJournal).release(header.runId);
   return store;
 }
@@ -64,5 +65,18 @@ describe('RunOpener', () => {
     await expect(TestBed.inject(procedureCompiler)(walkRound)).rejects.toThrow(
       'It calls plug-hold, version 1, which is not on this tablet yet. It comes with the next sync.',
     );
+  });
+
+  it('opens a real run for a manager only where it waits for a release', async () => {
+    const manager: Person = { ...okafor, id: 'p-lindqvist', role: 'manager' };
+    await tabletWithRun(manager);
+    expect(await TestBed.inject(RunOpener).open(header.runId)).toMatchObject({ ok: false, why: 'not-allowed' });
+    closeStores();
+    TestBed.resetTestingModule();
+    const drafts = roundTo('show').events.slice(2);
+    const looked = { type: 'verified', data: { step: 'show', by: 'brandt' } } as const;
+    const walked = drafts.map(({ type, data }) => ({ type, data }) as EventDraft);
+    await tabletWithRun(manager, [...walked, looked]);
+    expect(await TestBed.inject(RunOpener).open(header.runId)).toMatchObject({ ok: true });
   });
 });
