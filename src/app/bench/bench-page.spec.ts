@@ -60,7 +60,7 @@ const procedure = {
   version: 1,
   status: 'published',
   publishedAt: '2026-12-01T07:00:00Z',
-  document: { title: 'Seal', appliesTo: { codes: ['P0068'], symptoms: [], engine: [] } },
+  document: { title: 'Seal', steps: [], appliesTo: { codes: ['P0068'], symptoms: [], engine: [] } },
 } as unknown as PublishedProcedure;
 
 async function bench(role: Role, fillStore: (store: OfflineStore) => Promise<unknown> = () => Promise.resolve()) {

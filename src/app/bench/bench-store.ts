@@ -3,7 +3,7 @@ import { begunUnaware, isOver, knownRuns, standingWords, type KnownRun } from '.
 import { liveRows } from '../core/live-rows';
 import { OfflineStore } from '../core/offline-store';
 import { Session } from '../core/session';
-import { fitsOf, isFit, startable } from '../core/procedure-fit';
+import { fitsOf, isFit, readyOffline } from '../core/procedure-fit';
 import type { RunRow, RunSummary } from '../core/stored-rows';
 import { clock } from '../core/time-and-ids';
 import { daysUntil } from '../core/time-words';
@@ -93,7 +93,7 @@ export class BenchStore {
     waitingVisits(this.visits() ?? [], this.known(), this.procedures() ?? []),
   );
   readonly ready: Signal<ReadyView> = computed(() => {
-    const usable = startable(this.procedures() ?? []);
+    const usable = readyOffline(this.procedures() ?? []);
     const here = (this.gear() ?? []).filter(({ siteId, inUse }) => inUse && siteId === this.session.person()?.siteId);
     return {
       procedures: usable.length,

@@ -1,5 +1,5 @@
 import type { PublishedProcedure } from './wire';
-import { fitsOf, isFit, startable } from './procedure-fit';
+import { fitsOf, isFit, readyOffline, startable } from './procedure-fit';
 
 const procedure = (id: string, version: number, change: Partial<PublishedProcedure> = {}, applies = {}) =>
   ({
@@ -19,6 +19,23 @@ describe('startable', () => {
       procedure('drop', 1, { status: 'withdrawn' }),
     ];
     expect(startable(all).map(({ id, version }) => `${id} ${version}`)).toEqual(['seal 2']);
+  });
+});
+
+describe('readyOffline', () => {
+  const calling = (id: string, ...calls: readonly string[]) =>
+    procedure(id, 1, {
+      document: {
+        title: id,
+        steps: calls.map((called) => ({ kind: 'call', procedure: called, version: 1 })),
+      },
+    } as unknown as Partial<PublishedProcedure>);
+
+  it('leaves out what calls a version that is not here, at any depth; a withdrawn one is here', () => {
+    const plug = { ...calling('plug'), status: 'withdrawn' as const };
+    const all = [calling('seal', 'plug'), plug, calling('round', 'hold'), calling('hold', 'vent')];
+    expect(readyOffline(all).map(({ id }) => id)).toEqual(['seal']);
+    expect(readyOffline([...all, calling('vent')]).map(({ id }) => id)).toEqual(['hold', 'round', 'seal', 'vent']);
   });
 });
 

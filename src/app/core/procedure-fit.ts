@@ -20,6 +20,20 @@ export function startable(procedures: readonly PublishedProcedure[]): readonly P
   return [...newest.values()].sort((a, b) => (a.document.title < b.document.title ? -1 : 1));
 }
 
+/** Those of the startable that can be run without a network: every version that they call is here too, at any depth. */
+export function readyOffline(procedures: readonly PublishedProcedure[]): readonly PublishedProcedure[] {
+  const here = new Map(procedures.map((procedure) => [`${procedure.id}@${procedure.version}`, procedure]));
+  const isWhole = ({ document }: PublishedProcedure, seen: ReadonlySet<string>): boolean =>
+    document.steps.every((step) => {
+      if (step.kind !== 'call') return true;
+      const key = `${step.procedure}@${step.version}`;
+      const called = here.get(key);
+      // Calls that come back to one another are for publishing to refuse.
+      return called !== undefined && (seen.has(key) || isWhole(called, new Set([...seen, key])));
+    });
+  return startable(procedures).filter((procedure) => isWhole(procedure, new Set()));
+}
+
 /** Each startable procedure with what of the visit it fits, the best first. */
 export function fitsOf(
   procedures: readonly PublishedProcedure[],

@@ -11,7 +11,7 @@ import type { ListenDone } from './listen-requests';
   selector: 'bay-found-controls',
   imports: [BigAction, JudgedLine],
   template: `
-    <div class="found scrolls">
+    <div class="found scrolls" tabindex="-1">
       @for (value of found(); track value.name) {
         <bay-judged-line [value]="value" />
       }
