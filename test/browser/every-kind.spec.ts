@@ -4,6 +4,7 @@ import type { RunEvent } from '../../procedures/engine';
 import { plugHold } from '../../procedures/document/testing/plug-hold';
 import { walkRound } from '../../procedures/document/testing/walk-round';
 import { acknowledge, enter, tap } from './support/at-the-car';
+import { bringChecker, sideways, violations } from './support/measured';
 import { publishAsLead } from './support/publish';
 import { expect, test } from './support/test';
 import { readyWithoutNetwork, signIn, signOut } from './support/visits';
@@ -12,22 +13,30 @@ import { eventsOnTablet, rowsOf } from './support/what-is-kept';
 // What is published here would be every other file's procedure as well.
 test.use({ productName: 'every-kind' });
 
+/** Each size in another theme, so that all of them are seen on these screens. */
 const sizes = [
-  { width: 1280, height: 800 },
-  { width: 800, height: 1280 },
-  { width: 360, height: 740 },
-];
+  { width: 800, height: 1280, theme: 'night' },
+  { width: 360, height: 740, theme: 'glare' },
+  { width: 1280, height: 800, theme: 'day' },
+] as const;
 const folder = process.env['BAYHAND_KIND_PICTURES'];
 
-/** Where somebody asked for pictures of these screens, each is taken in every size. */
+/**
+ * Holds the screen against what every one of them keeps, in each size and theme: nothing beyond the edge, enough
+ * contrast, and on a tablet nothing that the accessibility checker finds. Where somebody asked for pictures, one is taken of each.
+ */
 async function look(page: Page, name: string): Promise<void> {
-  if (folder === undefined) return;
-  for (const size of sizes) {
+  for (const { theme, ...size } of sizes) {
     await page.setViewportSize(size);
-    await page.waitForTimeout(150);
-    await page.screenshot({ path: `${folder}/${name}-${size.width}x${size.height}.png` });
+    await page.evaluate((theme) => (document.documentElement.dataset['theme'] = theme), theme);
+    const where = `${name} at ${size.width}x${size.height}, ${theme}`;
+    // The way walked is a strip of its own, which scrolls.
+    expect(await sideways(page, 'bay-route .walked'), where).toEqual([]);
+    // A tablet that lies across may have a keyboard; what scrolls on a phone is scrolled by the finger.
+    const rules = theme === 'day' ? undefined : ['color-contrast'];
+    expect(await violations(page, rules), where).toEqual([]);
+    if (folder !== undefined) await page.screenshot({ path: `${folder}/${name}-${size.width}x${size.height}.png` });
   }
-  await page.setViewportSize({ width: 1280, height: 800 });
 }
 
 const at = (page: Page, number: string) =>
@@ -40,6 +49,7 @@ test('walks through a called procedure, a release, photos, timed readings and a 
 }) => {
   test.setTimeout(300_000);
   await publishAsLead(product.baseUrl, [plugHold, walkRound]);
+  await bringChecker(page);
   await signIn(page, 'okafor');
   await readyWithoutNetwork(page);
   await page.getByRole('link', { name: /^Take it/ }).click();

@@ -24,12 +24,16 @@ export async function violations(page: Page, rules?: readonly string[]): Promise
   return found.violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ html }) => html).join(' | ')}`);
 }
 
-/** What can be scrolled sideways, or lies beyond the screen's edge where nobody can tap or read it. */
-export async function sideways(page: Page): Promise<readonly string[]> {
-  return page.evaluate(() => {
+/**
+ * What can be scrolled sideways, or lies beyond the screen's edge where nobody can tap or read it. `strips` are those
+ * that scroll in themselves by design.
+ */
+export async function sideways(page: Page, strips?: string): Promise<readonly string[]> {
+  return page.evaluate((strips) => {
     const root = document.documentElement;
     const found = root.scrollWidth > root.clientWidth ? [`the page: ${root.scrollWidth} of ${root.clientWidth}`] : [];
     for (const element of document.body.querySelectorAll<HTMLElement>('*')) {
+      if (strips !== undefined && element.closest(strips) !== null) continue;
       const name = `${element.tagName.toLowerCase()}.${element.className}`;
       const { overflowX } = getComputedStyle(element);
       const isScroller = overflowX === 'auto' || overflowX === 'scroll';
@@ -39,7 +43,7 @@ export async function sideways(page: Page): Promise<readonly string[]> {
       if (isToBeSeen && (left < -1 || right > innerWidth + 1)) found.push(`${name} lies at ${left} to ${right}`);
     }
     return found;
-  });
+  }, strips);
 }
 
 /** Sizes in the millimetres that the look is drawn in. */
