@@ -260,8 +260,8 @@ export interface RestoreStep extends GoesOn {
 /** Ends a path. */
 export interface FindingStep extends StepBase {
   readonly kind: 'finding';
-  /** How it is drawn: as in band, out of band, or too close to call. */
-  readonly result: JudgedResult;
+  /** How it is drawn: as in band, out of band, too close to call, or as one that judges nothing. */
+  readonly result: FindingResult;
   /** The verdict as a template. */
   readonly verdict: string;
   readonly cause: readonly Sentence[];
@@ -274,6 +274,9 @@ export interface FindingStep extends StepBase {
 
 /** The three results of a reading. */
 export type JudgedResult = 'in' | 'out' | 'too-close';
+
+/** What a finding says: one of the three results, or that nothing was judged. */
+export type FindingResult = JudgedResult | 'not-judged';
 
 /** A sentence of a write-up. It is left out when `when` does not hold or a value that it names was never measured. */
 export interface Sentence {

@@ -28,6 +28,16 @@ it('accepts a document with every kind of step and every field', () => {
   expect(validateDocument(copy())).toEqual({ ok: true, document: everyKind });
 });
 
+it('accepts each result of a finding, the one too close to call among them, and no other', () => {
+  const place = everyKind.steps.findIndex(({ kind }) => kind === 'finding');
+  const accepted = ['in', 'out', 'too-close', 'not-judged', 'open', ''].filter((result) => {
+    const document = copy();
+    at(document, `steps/${place}`)['result'] = result;
+    return validateDocument(document).ok;
+  });
+  expect(accepted).toEqual(['in', 'out', 'too-close', 'not-judged']);
+});
+
 describe('each field of each part', () => {
   /** The fields that the types mark as optional. */
   const optional = [

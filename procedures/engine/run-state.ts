@@ -1,4 +1,4 @@
-import type { JudgedResult, PressureSense } from '../document';
+import type { FindingResult, JudgedResult, PressureSense } from '../document';
 import type { UnitName } from '../calculations/for-a-run';
 import type {
   BegunAgain,
@@ -108,8 +108,8 @@ export interface WalkedStep {
   readonly claimedAt: number;
   readonly doneSeq?: number;
   readonly doneAt?: number;
-  /** The worst result among what was judged here, for the Route's bead. */
-  readonly result?: JudgedResult;
+  /** The worst result among what was judged here, or the finding's own, for the Route's bead. */
+  readonly result?: FindingResult;
   readonly notMeasured?: boolean;
   /** The finding that the run headed for when the step was claimed. */
   readonly verdictBefore?: string;

@@ -199,6 +199,16 @@ describe('crankcase valve seal', () => {
     expect(sentences.filter((sentence) => sentence.split(/\s+/).length > 20)).toEqual([]);
   });
 
+  it('says of each finding what was judged, and that the ones that prove nothing judged nothing', () => {
+    const byResult = (result: string): readonly string[] =>
+      document.steps.flatMap((step) => (step.kind === 'finding' && step.result === result ? [step.number] : []));
+    expect([byResult('in'), byResult('too-close'), byResult('not-judged')]).toEqual([
+      ['F1'],
+      ['F3'],
+      ['F5', 'F7', 'F11', 'F12'],
+    ]);
+  });
+
   it('ends each finding with one sentence for the customer, cold and warm', () => {
     for (const { id, customer } of findings) {
       const halves = customer.map(({ when }) => when);

@@ -10,7 +10,7 @@ import {
   IsUUID,
   Matches,
 } from 'class-validator';
-import type { JudgedResult } from '../../procedures/document';
+import type { FindingResult } from '../../procedures/document';
 import type { RunEvent, RunHeader, RunState } from '../../procedures/engine';
 import { PlainText } from '../http/plain-text';
 import { Nested } from '../http/validated';
@@ -97,8 +97,8 @@ export class RecordRow {
   declare verdict?: string;
 
   @IsOptional()
-  @IsIn(['in', 'out', 'too-close'])
-  declare result?: JudgedResult;
+  @IsIn(['in', 'out', 'too-close', 'not-judged'])
+  declare result?: FindingResult;
 }
 
 export class RecordPage {

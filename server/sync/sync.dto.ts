@@ -11,7 +11,7 @@ import {
   MaxLength,
   Min,
 } from 'class-validator';
-import type { JudgedResult } from '../../procedures/document';
+import type { FindingResult } from '../../procedures/document';
 import type { BegunAgain, RunHeader, RunState } from '../../procedures/engine';
 import type { ColleagueOnTheWire } from '../access/access.service';
 import type { GearOnTheWire } from '../gear/gear.service';
@@ -237,8 +237,8 @@ export class VisitRun {
   declare verdict?: string;
 
   @IsOptional()
-  @IsIn(['in', 'out', 'too-close'])
-  declare result?: JudgedResult;
+  @IsIn(['in', 'out', 'too-close', 'not-judged'])
+  declare result?: FindingResult;
 
   @IsOptional()
   @Nested(() => BegunAgainDto)

@@ -73,7 +73,7 @@ export class Run {
   declare verdict: string | null;
 
   @Column({ name: 'result', type: 'text', nullable: true })
-  declare result: 'in' | 'out' | 'too-close' | null;
+  declare result: 'in' | 'out' | 'too-close' | 'not-judged' | null;
 
   /** What the search looks through, in small letters. */
   @Column({ name: 'searched', type: 'text' })

@@ -1,6 +1,6 @@
 import { declarationsOf } from '../declarations';
 import { namesIn } from '../expression/names-in';
-import type { Branch, FindingStep, Step } from '../procedure-document';
+import type { Branch, FindingResult, FindingStep, Step } from '../procedure-document';
 import { KnownValues } from './known-values';
 import { stepWords, wayWords, type LintFinding, type LintSubject } from './lint-finding';
 import { askedFor } from './named-values';
@@ -41,10 +41,15 @@ interface Suspect {
   readonly names: readonly string[];
 }
 
+/** Whether a finding says how it is; one that is too close to call, or judges nothing, leaves the matter open. */
+function isVerdict(result: FindingResult): boolean {
+  return result !== 'too-close' && result !== 'not-judged';
+}
+
 function suspectsOf({ document, trees }: LintSubject): ReadonlyMap<Step, Suspect> {
   const verdicts = new Map(
     document.steps.flatMap((step) =>
-      step.kind === 'finding' && step.result !== 'too-close' ? [[step.id, step] as const] : [],
+      step.kind === 'finding' && isVerdict(step.result) ? [[step.id, step] as const] : [],
     ),
   );
   const { declarations } = declarationsOf(document);

@@ -44,7 +44,7 @@ export const everyKindFindings: readonly FindingStep[] = [
     kind: 'finding',
     title: 'Not completed',
     action: 'The test was not completed.',
-    result: 'too-close',
+    result: 'not-judged',
     verdict: 'The test was not completed.',
     cause: [],
     correction: [{ text: 'Repeat the test.' }],

@@ -138,7 +138,7 @@ export const plugHold: ProcedureDocument = {
         id: 'plugUnfinished',
         number: '7',
         title: 'Plug not tested',
-        result: 'too-close',
+        result: 'not-judged',
         verdict: 'The plug was not tested.',
       },
       { cause: [] },

@@ -31,7 +31,7 @@ export const walkRoundFindings: readonly FindingStep[] = [
     kind: 'finding',
     title: 'Not completed',
     action: 'The test was not completed.',
-    result: 'too-close',
+    result: 'not-judged',
     verdict: 'The test was not completed.',
     cause: [],
     correction: [{ text: 'Begin it again.' }],

@@ -1,4 +1,4 @@
-import type { JudgedResult } from '../../../procedures/document';
+import type { FindingResult } from '../../../procedures/document';
 import type { BegunAgain, RunHeader, RunState } from '../../../procedures/engine';
 import type { Countersignature, Person } from './wire';
 
@@ -34,7 +34,7 @@ export interface RunSummary {
   readonly personName: string;
   readonly openedAt: number;
   readonly current: { readonly number: string; readonly title: string; readonly action: string } | undefined;
-  readonly walked: readonly { readonly label: string; readonly result?: JudgedResult | 'not-measured' }[];
+  readonly walked: readonly { readonly label: string; readonly result?: FindingResult | 'not-measured' }[];
   readonly disturbed: readonly string[];
   /** Why and since when it is set aside or stopped. */
   readonly pause: { readonly at: number; readonly reason: string } | undefined;

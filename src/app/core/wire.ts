@@ -1,4 +1,4 @@
-import type { ProcedureDocument, InstrumentKind, JudgedResult } from '../../../procedures/document';
+import type { ProcedureDocument, InstrumentKind, FindingResult } from '../../../procedures/document';
 import type { BegunAgain, InstrumentRange, RunState } from '../../../procedures/engine';
 
 /** What the server and the tablet say to each other, as JSON. */
@@ -113,7 +113,7 @@ export interface VisitRun {
   readonly status: RunState['status'];
   /** The finding in words. */
   readonly verdict?: string;
-  readonly result?: JudgedResult;
+  readonly result?: FindingResult;
   /** Why it was begun beside others. */
   readonly again?: BegunAgain;
 }

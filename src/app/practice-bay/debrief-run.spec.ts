@@ -50,7 +50,7 @@ describe('the debrief of a practice run', () => {
         if (walk.state.status === 'stopped') walk.do({ do: 'leave-stop', how: 'not-completed' });
       },
     });
-    expect(finding).toMatchObject({ result: 'too-close', reached: 'Not completed' });
+    expect(finding).toMatchObject({ result: 'not-judged', reached: 'Not completed' });
   });
 
   it('says by how much a mark was too early, and where the noise stops', () => {

@@ -1,5 +1,5 @@
 import { convert } from '../../../procedures/calculations/for-a-run';
-import type { CompiledProcedure, JudgedResult } from '../../../procedures/document';
+import type { CompiledProcedure, FindingResult } from '../../../procedures/document';
 import { shownUnit, type EventOf, type RunEvent, type RunState } from '../../../procedures/engine';
 import type { BenchEntry, PracticeScenario } from '../shared/practice/practice-scenario';
 
@@ -14,7 +14,7 @@ export interface Debrief {
 }
 
 export interface ComparedFinding {
-  readonly result: JudgedResult;
+  readonly result: FindingResult;
   /** The titles of the findings; `reached` is absent where the run has none. */
   readonly reached: string | undefined;
   readonly planted: string;
@@ -22,7 +22,7 @@ export interface ComparedFinding {
 }
 
 export interface ComparedMark {
-  readonly result: JudgedResult;
+  readonly result: FindingResult;
   readonly words: string;
 }
 
@@ -64,7 +64,7 @@ function compareFinding(procedure: CompiledProcedure, { planted }: PracticeScena
   if (state.finding === undefined || openEnds.has(state.finding)) {
     return {
       ...titles,
-      result: 'too-close',
+      result: 'not-judged',
       words: 'The run was not brought to its end: the fault is still in the car.',
     };
   }
@@ -76,7 +76,7 @@ function compareMark(procedure: CompiledProcedure, { planted }: PracticeScenario
   const series = listen?.kind === 'listen' ? state.series[listen.name] : undefined;
   const markedS = series?.marks['noise-stops']?.timeS;
   const stops = planted.noiseStops;
-  if (series === undefined) return { result: 'too-close', words: 'The ramp was not taken.' };
+  if (series === undefined) return { result: 'not-judged', words: 'The ramp was not taken.' };
   if (stops === undefined) {
     return markedS === undefined
       ? { result: 'in', words: 'The noise never stops, and you marked no end of it.' }

@@ -1,4 +1,4 @@
-import type { JudgedResult } from '../../../procedures/document';
+import type { FindingResult } from '../../../procedures/document';
 import type { RunEvent, RunHeader, RunState } from '../../../procedures/engine';
 import type { Countersignature, PublishedProcedure, VisitRun } from '../core/wire';
 
@@ -18,7 +18,7 @@ export interface RecordRow {
   readonly finding?: string | null;
   /** The finding in words. */
   readonly verdict?: string | null;
-  readonly result?: JudgedResult | null;
+  readonly result?: FindingResult | null;
 }
 
 export interface RecordPage {

@@ -8,6 +8,7 @@ const colours: Readonly<Record<ShownResult, string>> = {
   in: 'var(--in)',
   out: 'var(--out)',
   'too-close': 'var(--close)',
+  'not-judged': 'var(--ink)',
   done: 'var(--ink)',
   'not-measured': 'var(--ink)',
 };

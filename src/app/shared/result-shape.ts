@@ -3,8 +3,8 @@ import type { ShownResult } from './result-words';
 
 /**
  * The shape of a result, drawn round the origin inside someone else's SVG: in band a disc with a tick, out of band a
- * square with a cross, too close to call a ring half filled. Never by colour alone. `done` is a small dot,
- * `not-measured` an empty ring with a bar.
+ * square with a cross, too close to call a ring half filled. Never by colour alone. `not-judged` is an
+ * empty diamond, `done` a small dot, `not-measured` an empty ring with a bar.
  */
 @Component({
   // An SVG's children must be SVG elements, so this one takes a group.
@@ -35,6 +35,9 @@ import type { ShownResult } from './result-words';
         />
         <svg:path [attr.d]="halfDisc()" fill="var(--close)" />
       }
+      @case ('not-judged') {
+        <svg:path [attr.d]="diamond()" fill="var(--sheet)" stroke="var(--ink-2)" [attr.stroke-width]="pen()" />
+      }
       @case ('not-measured') {
         <svg:circle [attr.r]="radius() * 0.84" fill="var(--sheet)" stroke="var(--ink-2)" [attr.stroke-width]="pen()" />
         <svg:path [attr.d]="bar()" fill="none" stroke="var(--ink-2)" [attr.stroke-width]="pen()" />
@@ -64,6 +67,10 @@ export class ResultShape {
   protected readonly halfDisc = computed(() => {
     const r = this.radius() * 0.78;
     return `M0 ${-r}a${r} ${r} 0 0 1 0 ${2 * r}z`;
+  });
+  protected readonly diamond = computed(() => {
+    const r = this.radius() * 0.86;
+    return `M0 ${-r}L${r} 0L0 ${r}L${-r} 0z`;
   });
   protected readonly bar = computed(() => `M${-this.radius() * 0.38} 0h${this.radius() * 0.76}`);
 }

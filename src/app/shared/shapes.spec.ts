@@ -42,6 +42,7 @@ describe('ResultMark', () => {
     ['in', 'in band', 'circle', 'path'],
     ['out', 'out of band', 'rect', 'path'],
     ['too-close', 'too close to call', 'circle', 'path'],
+    ['not-judged', 'not judged', 'path'],
   ])('shows %s as words and as a shape of its own', async (result, words, ...shapes) => {
     const mark = await shown(ResultMark, { result });
     expect(nameOf(mark)).toBe(words);
@@ -55,6 +56,11 @@ describe('ResultMark', () => {
 });
 
 describe('RouteRibbon', () => {
+  it('reads out that a finding judged nothing', async () => {
+    const route = await shown(RouteRibbon, { walked: [{ label: 'F12', result: 'not-judged' }] });
+    expect(route.querySelector('li')?.textContent?.trim()).toBe('F12not judged');
+  });
+
   const walked = [{ label: '4', result: 'in' }, { label: '5' }, { label: '6', result: 'not-measured' }];
 
   it('lists the walked steps with their results, then the current one, then every way on', async () => {
