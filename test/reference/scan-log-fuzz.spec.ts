@@ -3,7 +3,7 @@ import { parseScanLog } from '../../procedures/calculations';
 import { brokenContract, cellSoup, damagedLog, goodLogs } from '../support/scan-log-contract';
 
 /** Ten times as many in npm run test:long. */
-const numRuns = 1000;
+const numRuns = 300;
 
 describe('parseScanLog on what is no log', () => {
   it.each([
