@@ -5,7 +5,7 @@ import { requireCurrent, requireStep } from './apply-walk';
 import { RefusedEvent } from './refusal';
 import type { EventOf } from './run-event';
 import type { RunState } from './run-state';
-import { added, changedFrom, withoutEntry } from './state-changes';
+import { added, changedFrom, withoutStep } from './state-changes';
 
 export function overrule(procedure: CompiledProcedure, state: RunState, event: EventOf<'branch-overruled'>): RunState {
   requireStep(procedure, event.data.step);
@@ -59,17 +59,16 @@ export function exceedLimit(procedure: CompiledProcedure, state: RunState, event
   requireCurrent(state, stepId);
   const alarm = { seq: event.seq, step: stepId, limit: limit.id, name, figure, says: limit.says, then: limit.then };
   return {
-    ...dropLastTake(withoutSeries(procedure, state, stepId), name),
+    ...(isSeriesStep(requireStep(procedure, stepId)) ? withoutRamp(state, stepId) : dropLastTake(state, name)),
     alarm,
     exceeded: added(state.exceeded, alarm),
   };
 }
 
-/** A series that went over a limit is evidence, but nothing is found in it: the ramp is taken again. */
-function withoutSeries(procedure: CompiledProcedure, state: RunState, stepId: string): RunState {
-  const step = requireStep(procedure, stepId);
-  if (!isSeriesStep(step)) return state;
-  return { ...state, series: withoutEntry(state.series, step.name) };
+/** A ramp that went over a limit is evidence, but nothing of it counts, neither point nor mark: it is taken again. */
+function withoutRamp(state: RunState, stepId: string): RunState {
+  const current = requireCurrent(state, stepId);
+  return { ...state, series: withoutStep(state.series, stepId), current: { ...current, takes: {} } };
 }
 
 export function reachFinding(

@@ -11,7 +11,33 @@ describe('a limit', () => {
     });
     walk.do({ do: 'acknowledge-limit' });
     expect(walk.state.alarm).toBeUndefined();
-    expect(walk.state.current?.takes['gauge']).toEqual([]);
+    expect(walk.state.current?.takes['gauge'] ?? []).toEqual([]);
+  });
+
+  it('that a ramp exceeds lets it begin anew by itself: no point or mark of it counts, and all stay in the record', () => {
+    const walk = atListen().do(
+      { do: 'record', name: 'gauge', text: '0.0', unit: 'kPa', timeS: 0 },
+      { do: 'mark', mark: 'noise-begins', timeS: 2, by: 'tap' },
+      { do: 'record', name: 'gauge', text: '3.0', unit: 'kPa', timeS: 4 },
+      { do: 'mark', mark: 'noise-stops', timeS: 6, by: 'tap' },
+      { do: 'record', name: 'gauge', text: '36.0', unit: 'kPa', timeS: 8 },
+      { do: 'acknowledge-limit' },
+    );
+    expect(walk.state.current?.takes['gauge'] ?? []).toEqual([]);
+    expect(walk.state.series['ramp']).toBeUndefined();
+    const points = walk.events.filter(({ type, data }) => type === 'reading-recorded' && 'timeS' in data);
+    expect(points).toHaveLength(3);
+    expect(walk.events.filter(({ type }) => type === 'mark-placed')).toHaveLength(2);
+
+    walk.do({ do: 'record', name: 'gauge', text: '0.0', unit: 'kPa', timeS: 0 });
+    expect(walk.state.current?.takes['gauge']).toMatchObject([{ text: '0.0', timeS: 0 }]);
+  });
+
+  it('that a reading exceeds leaves the earlier rounds of the step as they are', () => {
+    const walk = atListen();
+    const before = walk.state.values;
+    walk.do({ do: 'record', name: 'gauge', text: '36.0', unit: 'kPa', timeS: 0 }, { do: 'acknowledge-limit' });
+    expect(walk.state.values).toEqual(before);
   });
 
   it('is held against every sample of a series, manifold pressure less the air of the place too', () => {

@@ -140,15 +140,11 @@ describe('LiveControls', () => {
     expect(page.done).toEqual([]);
   });
 
-  it('begins the ramp anew, after a limit was exceeded as well', async () => {
+  it('begins the ramp anew, once that is confirmed', async () => {
     const page = await shown();
     await tap(page, 'Gauge at zero: begin to raise');
     page.at(4);
     await tap(page, '+ 1');
-    page.walk.do({ do: 'record', name: 'gauge', text: '40', unit: 'kPa', timeS: 8 });
-    expect(page.walk.state.alarm).toBeDefined();
-    page.walk.do({ do: 'acknowledge-limit' });
-    await refresh(page.fixture, page.walk);
     buttonNamed(page.fixture, 'Begin anew').click();
     await page.fixture.whenStable();
     await tap(page, 'Sure? Begin anew');
@@ -160,6 +156,24 @@ describe('LiveControls', () => {
     expect(page.walk.state.current?.id).toBe('raise-and-listen');
     expect(page.walk.state.current?.takes['gauge'] ?? []).toEqual([]);
     expect(page.walk.state.series['listening']).toBeUndefined();
+  });
+
+  it('stands at zero again after a limit, and counts its time anew', async () => {
+    const page = await shown();
+    await tap(page, 'Gauge at zero: begin to raise');
+    page.at(4);
+    await tap(page, 'The noise begins');
+    page.walk.do({ do: 'record', name: 'gauge', text: '40', unit: 'kPa', timeS: 8 }, { do: 'acknowledge-limit' });
+    await refresh(page.fixture, page.walk);
+    expect(elementOf(page.fixture).querySelector('.figure .num')?.textContent).toBe('\u200b');
+    expect(hasButton(page.fixture, '+ 1')).toBe(false);
+    await tap(page, 'Gauge at zero: begin to raise');
+    expect(page.commands.at(-1)).toMatchObject({ text: '0.0', timeS: 0 });
+    // The walk's clock goes on by a second at each event: the second beginning is five events after the first.
+    page.at(5 + 5);
+    await tap(page, '+ 1');
+    expect(page.commands.at(-1)).toMatchObject({ text: '1.0', timeS: 5 });
+    expect(hasButton(page.fixture, 'The noise begins')).toBe(true);
   });
 
   it('says that it is raised too fast, by the step\u2019s own band, and not before', async () => {

@@ -8,7 +8,7 @@ import type { RunProblem, RunView } from '../run-view';
 import type { StepOf } from '../step-entry';
 import type { ListenDone } from './listen-requests';
 import { SureButton } from './sure-button';
-import { raised, riseRate, stepsFor, timeBase, type MarkName } from './live-series';
+import { raised, rampSince, riseRate, stepsFor, timeBase, type MarkName } from './live-series';
 
 /** What the gauge is raised to, and what it must never go over. */
 export interface Aim {
@@ -152,7 +152,7 @@ export class LiveControls {
 
   private seconds(): number {
     const { events, state } = this.run();
-    const base = timeBase(events, state.current?.claimedSeq ?? 0);
+    const base = timeBase(events, rampSince(state));
     const last = this.series().timeS.at(-1);
     const now = base === undefined ? 0 : (this.elapsed()() - base) / 1000;
     return tenth(last === undefined ? Math.max(0, now) : Math.max(now, last + 0.1));

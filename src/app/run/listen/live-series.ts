@@ -5,16 +5,21 @@ import type { SeriesStep } from '../../../../procedures/document';
 export type MarkName = 'noise-begins' | 'noise-stops';
 
 /**
- * The run's monotonic time, in milliseconds, that is second 0 of the points and marks typed in this claim. Undefined
- * before the first one.
+ * The run's monotonic time, in milliseconds, that is second 0 of the points and marks typed after an event: the claim of
+ * the step, or the limit after which the ramp began anew. Undefined before the first one.
  */
-export function timeBase(events: readonly RunEvent[], claimedSeq: number): number | undefined {
+export function timeBase(events: readonly RunEvent[], afterSeq: number): number | undefined {
   const first = events.find(
     (event): event is EventOf<'reading-recorded'> | EventOf<'mark-placed'> =>
-      event.seq > claimedSeq &&
+      event.seq > afterSeq &&
       ((event.type === 'reading-recorded' && event.data.timeS !== undefined) || event.type === 'mark-placed'),
   );
   return first === undefined ? undefined : first.elapsed - (first.data.timeS ?? 0) * 1000;
+}
+
+/** The event after which the current ramp was begun. */
+export function rampSince({ current, exceeded }: Pick<RunState, 'current' | 'exceeded'>): number {
+  return Math.max(current?.claimedSeq ?? 0, exceeded.at(-1)?.seq ?? 0);
 }
 
 /** The typed points of a claim as a series: one time axis, each channel where it was typed. */
