@@ -1,14 +1,13 @@
 import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
 import type { Step } from '../../../procedures/document';
 import type { RunCommand, Series } from '../../../procedures/engine';
-import type { Colleague, GearItem, Person } from '../core/wire';
+import type { GearItem } from '../core/wire';
 import { CautionGate } from './frame/caution-gate';
 import { HandSide } from './frame/hand-side';
 import { WideSide } from './frame/wide-side';
 import type { ClocksNow } from './hold-clock';
 import { LaterStep } from './later';
 import type { ListenDone, SeriesTaken } from './listen/listen-requests';
-import type { ShownPhoto } from './photo/kept-photos';
 import type { PhotoTaken } from './photo/photo-file';
 import type { RunProblem, RunView } from './run-view';
 import { isForSomebody } from './second-person/waiting-for';
@@ -34,11 +33,6 @@ export class CurrentStepView {
   readonly clocks = input.required<() => ClocksNow>();
   /** The listen step's kept series, once its bytes are read. */
   readonly kept = input<Series>();
-  /** The photos that were kept in the current step. */
-  readonly photos = input<readonly ShownPhoto[]>([]);
-  /** Everybody who has an account, and who of them is signed in here. */
-  readonly people = input<readonly Colleague[]>([]);
-  readonly person = input<Person>();
   readonly problem = input<RunProblem>();
   readonly isBusy = input(false);
   readonly commanded = output<RunCommand>();

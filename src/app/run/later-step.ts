@@ -1,17 +1,17 @@
-import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, inject, input, output } from '@angular/core';
 import type { Step } from '../../../procedures/document';
 import type { RunCommand, Series } from '../../../procedures/engine';
-import type { Colleague, Person } from '../core/wire';
 import { CodesEntry } from './codes/codes-entry';
 import { entryField } from './entry-draft';
 import { FindingEntry } from './finding/finding-entry';
 import type { ClocksNow } from './hold-clock';
 import { ListenEntry } from './listen/listen-entry';
 import type { ListenDone, SeriesTaken } from './listen/listen-requests';
-import type { ShownPhoto } from './photo/kept-photos';
+import { KeptPhotos } from './photo/kept-photos';
 import { PhotoEntry } from './photo/photo-entry';
 import type { PhotoTaken } from './photo/photo-file';
 import { ReadingEntry } from './readings/reading-entry';
+import { RunPeople } from './run-people';
 import type { RunProblem, RunView } from './run-view';
 import { SecondPersonEntry } from './second-person/second-person-entry';
 import { isForSomebody } from './second-person/waiting-for';
@@ -42,22 +42,22 @@ import { timedStage } from './timed-stage';
     RestoreEntry,
     SecondPersonEntry,
   ],
+  // What the first step has no use for is brought with the others.
+  providers: [KeptPhotos, RunPeople],
   templateUrl: './later-step.html',
   styles: ':host { display: contents }',
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class LaterStep {
+  protected readonly photos = inject(KeptPhotos);
+  protected readonly people = inject(RunPeople);
+
   readonly run = input.required<RunView>();
   readonly step = input.required<Step>();
   /** Reads the run's clocks. */
   readonly clocks = input.required<() => ClocksNow>();
   /** The listen step's kept series, once its bytes are read. */
   readonly kept = input<Series>();
-  /** The photos that were kept in the current step. */
-  readonly photos = input<readonly ShownPhoto[]>([]);
-  /** Everybody who has an account, and who of them is signed in here. */
-  readonly people = input<readonly Colleague[]>([]);
-  readonly person = input<Person>();
   readonly problem = input<RunProblem>();
   readonly isBusy = input(false);
   readonly commanded = output<RunCommand>();

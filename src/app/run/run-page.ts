@@ -29,11 +29,9 @@ import { StopRow } from './frame/stop-row';
 import { RunSheets } from './later';
 import { ListenFlow } from './listen/listen-flow';
 import { pedalAct } from './pedal-keys';
-import { KeptPhotos } from './photo/kept-photos';
 import type { PhotoTaken } from './photo/photo-file';
 import { PrimaryAction } from './primary-action';
 import { RunGear } from './run-gear';
-import { RunPeople } from './run-people';
 import { RunPreferences } from './run-preferences';
 import { RunStore } from './run-store';
 import { toneAfter } from './run-tones';
@@ -52,7 +50,7 @@ const placeLostMs = 30_000;
 @Component({
   selector: 'bay-run-page',
   imports: [BenchSheet, CurrentStepView, HonestWays, RouteRibbon, RunHeaderBar, RunSheets, StopRow],
-  providers: [AwakeScreen, EntryDraft, KeptPhotos, ListenFlow, PrimaryAction, RunGear, RunPeople, RunStore],
+  providers: [AwakeScreen, EntryDraft, ListenFlow, PrimaryAction, RunGear, RunStore],
   templateUrl: './run-page.html',
   styleUrl: './run-page.css',
   host: { '(window:keydown)': 'pedal($event)' },
@@ -64,8 +62,6 @@ export class RunPage {
   protected readonly awake = inject(AwakeScreen);
   protected readonly preferences = inject(RunPreferences);
   protected readonly gear = inject(RunGear);
-  protected readonly photos = inject(KeptPhotos);
-  protected readonly people = inject(RunPeople);
   private readonly draft = inject(EntryDraft);
   private readonly primary = inject(PrimaryAction);
   private readonly tones = inject(Tones);

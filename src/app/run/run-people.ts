@@ -3,7 +3,8 @@ import { liveRows } from '../core/live-rows';
 import { OfflineStore } from '../core/offline-store';
 import { Session } from '../core/session';
 
-/** Who is signed in, and who else has an account: for what a run asks of somebody else. Provided by the run's page. */
+/** Who is signed in, and who else has an account: for what a run asks of somebody else. Provided by the steps
+ * after the first. */
 @Injectable()
 export class RunPeople {
   private readonly store = inject(OfflineStore);

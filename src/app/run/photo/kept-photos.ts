@@ -9,7 +9,7 @@ export interface ShownPhoto {
   readonly url: string;
 }
 
-/** The kept photos of the current photo step, read back from the tablet. Provided by the run's page. */
+/** The kept photos of the current photo step, read back from the tablet. Provided by the steps after the first. */
 @Injectable()
 export class KeptPhotos {
   private readonly store = inject(RunStore);
