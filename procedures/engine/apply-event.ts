@@ -138,7 +138,7 @@ export function reduceEvent(procedure: CompiledProcedure, state: RunState, event
     case 'not-measurable':
     case 'not-applicable':
       requireCurrent(state, event.data.step);
-      return amendClaim(state, { notMeasured: true });
+      return amendClaim(state, { notMeasured: true, notMeasuredBecause: event.data.reason });
     case 'series-recorded':
       return recordSeries(procedure, state, event);
     case 'mark-placed':

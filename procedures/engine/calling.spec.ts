@@ -95,7 +95,7 @@ describe('a called procedure', () => {
     const walk = inPartTest().do(
       { do: 'confirm' },
       { do: 'stop', reason: '' },
-      { do: 'leave-stop', how: 'not-completed' },
+      { do: 'leave-stop', how: 'not-completed', reason: 'the plug moved' },
     );
     expect(walk.state.current?.id).toBe('restore');
     walk.do({ do: 'restore', item: 'cap' }, { do: 'restore', item: 'plug' });

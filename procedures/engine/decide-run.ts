@@ -46,15 +46,21 @@ export function leavePause(drafting: Drafting): void {
 }
 
 /** From the make-safe sheet either back to the step, or to the end as not completed, with all put back. */
-export function leaveStop(drafting: Drafting, how: 'go-back' | 'not-completed'): void {
-  if (drafting.state.status !== 'stopped') throw new CannotDo('not-stopped', 'The run is not stopped.');
-  if (how === 'go-back') return drafting.add({ type: 'resumed', data: { from: 'stopped' } });
+export function leaveStop(drafting: Drafting, command: Extract<RunCommand, { do: 'leave-stop' }>): void {
+  const { status, pause: stop } = drafting.state;
+  if (status !== 'stopped') throw new CannotDo('not-stopped', 'The run is not stopped.');
+  const said = (command.reason ?? '').trim();
+  if (command.how === 'go-back') {
+    return drafting.add({ type: 'resumed', data: { from: 'stopped', ...(said === '' ? {} : { reason: said }) } });
+  }
+  const reason = said === '' ? (stop?.reason ?? '') : said;
+  if (reason === '') throw new CannotDo('say-why', 'Say in a few words why the test ends here.', 'reason');
   const id = drafting.state.current?.id ?? drafting.state.finding;
   const step = id === undefined ? undefined : drafting.procedure.step(id);
   const exit =
     step === undefined ? undefined : exitsOf(drafting.procedure, step).find((candidate) => candidate.exit === 'stop');
   if (step === undefined || exit === undefined) throw new CannotDo('no-step', 'There is no step to leave.');
-  takeExit(drafting, step, exit);
+  takeExit(drafting, step, exit, reason);
 }
 
 /** Takes a step again: what followed from it is left behind, visible. */

@@ -98,7 +98,7 @@ function perform(drafting: Drafting, command: RunCommand): void {
     case 'resume':
       return leavePause(drafting);
     case 'leave-stop':
-      return leaveStop(drafting, command.how);
+      return leaveStop(drafting, command);
     case 'acknowledge-limit':
       return acknowledgeLimit(drafting);
     case 'redo':

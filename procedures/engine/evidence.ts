@@ -101,9 +101,10 @@ function evidenceAt(
 function endedAt(events: readonly RunEvent[], { number, title }: Step, claim: Decided): Evidence {
   const { claimedSeq, way } = claim;
   const within = events.filter(({ seq }) => seq > claimedSeq && seq <= way.seq);
-  const reason = within
+  const said = within
     .flatMap((event) => (event.type === 'not-measurable' || event.type === 'stopped' ? [event.data.reason] : []))
     .at(-1);
+  const reason = way.reason ?? said;
   const what = way.exit === 'stop' ? 'stopped' : 'cannot be measured';
   const text = reason === undefined || reason === '' ? what : `${what}: ${reason}`;
   return { kind: 'observation', step: claim.step, label: `Step ${number}, ${lowerFirst(title)}`, text };

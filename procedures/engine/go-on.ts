@@ -47,8 +47,8 @@ export function takeAgain(procedure: CompiledProcedure, { label, step, stale }: 
   );
 }
 
-/** Takes one exit: the branch, then the next step's claim or the finding. */
-export function takeExit(drafting: Drafting, step: Step, exit: NamedExit): void {
+/** Takes one exit: the branch, with the person's own reason where one was asked for, then the next step's claim or the finding. */
+export function takeExit(drafting: Drafting, step: Step, exit: NamedExit, reason?: string): void {
   const { procedure } = drafting;
   const data = branchData(procedure, drafting.state, step, exit);
   const target = procedure.step(data.to);
@@ -58,7 +58,7 @@ export function takeExit(drafting: Drafting, step: Step, exit: NamedExit): void 
       `Step ${step.number} leads to ${data.to}, which this version does not have. Set the run aside and tell the lead.`,
     );
   }
-  drafting.add({ type: 'branch-taken', data });
+  drafting.add({ type: 'branch-taken', data: reason === undefined ? data : { ...data, reason } });
   if (target.kind === 'finding') {
     const verdict = renderTemplate(procedure, drafting.state, target.verdict) ?? target.title;
     drafting.add({ type: 'finding-reached', data: { finding: target.id, verdict } });

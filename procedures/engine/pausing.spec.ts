@@ -24,6 +24,26 @@ describe('stop, pause and what is disturbed', () => {
     expect(walk.state.status).toBe('closed');
   });
 
+  it('asks why before it ends as not completed, keeps it, and leaves it open on the way back', () => {
+    const walk = atListen().do({ do: 'stop', reason: '' });
+    expect(walk.ask({ do: 'leave-stop', how: 'not-completed', reason: ' ' })).toMatchObject({
+      ok: false,
+      code: 'say-why',
+      field: 'reason',
+      message: 'Say in a few words why the test ends here.',
+    });
+    walk.do({ do: 'leave-stop', how: 'go-back', reason: ' the plug sits again ' });
+    expect(walk.events.at(-1)).toMatchObject({
+      type: 'resumed',
+      data: { from: 'stopped', reason: 'the plug sits again' },
+    });
+    walk.do({ do: 'stop', reason: '' }, { do: 'leave-stop', how: 'not-completed', reason: 'the plug moved' });
+    expect(walk.state.walked.find(({ step }) => step === 'listen')?.way).toMatchObject({
+      exit: 'stop',
+      reason: 'the plug moved',
+    });
+  });
+
   it('puts on the open list what the stopped step may have taken apart already', () => {
     const walk = atManifold().cautions(1).do({ do: 'record', name: 'manifoldPressure', text: '94.2', unit: 'kPa' });
     walk.do({ do: 'stop', reason: '' });

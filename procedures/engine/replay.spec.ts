@@ -4,7 +4,7 @@ import { atListen, procedure } from './testing/small-walks';
 describe('replay', () => {
   const walk = atListen().do(
     { do: 'stop', reason: '' },
-    { do: 'leave-stop', how: 'not-completed' },
+    { do: 'leave-stop', how: 'not-completed', reason: 'the plug moved' },
     { do: 'restore', item: 'dipstick' },
     { do: 'close' },
   );

@@ -68,7 +68,8 @@ export type RunCommand =
   | { readonly do: 'set-aside'; readonly reason: string }
   | { readonly do: 'resume' }
   | { readonly do: 'stop'; readonly reason: string }
-  | { readonly do: 'leave-stop'; readonly how: 'go-back' | 'not-completed' }
+  /** Why it was stopped: needed to end as not completed, unless it was said when stopping. */
+  | { readonly do: 'leave-stop'; readonly how: 'go-back' | 'not-completed'; readonly reason?: string }
   | { readonly do: 'acknowledge-limit' }
   | { readonly do: 'note'; readonly text: string; readonly isMargin?: boolean }
   /** Takes another authored exit of the step before, by the exit's name; what that step recorded stays. */

@@ -213,6 +213,8 @@ export interface RunEventData {
     readonly inputs: readonly DecisionInput[];
     readonly because: string;
     readonly verdict?: string;
+    /** Why the person ended the test there, in their words; only on the way out of a stop. */
+    readonly reason?: string;
   };
   'branch-overruled': {
     readonly step: string;
@@ -231,7 +233,11 @@ export interface RunEventData {
     readonly by: 'lead' | 'manager';
   };
   'set-aside': { readonly reason: string };
-  resumed: { readonly from: 'set-aside' | 'stopped' | 'reload' | 'lead-called' };
+  resumed: {
+    readonly from: 'set-aside' | 'stopped' | 'reload' | 'lead-called';
+    /** Why it had been stopped, where the person said so. */
+    readonly reason?: string;
+  };
   'handed-over': { readonly to: string; readonly reason: string };
   /** A value went over a limit. Nothing goes on until it is acknowledged. */
   'limit-exceeded': { readonly step: string; readonly limit: string; readonly name: string; readonly figure: Figure };

@@ -111,6 +111,8 @@ export interface WalkedStep {
   /** The worst result among what was judged here, or the finding's own, for the Route's bead. */
   readonly result?: FindingResult;
   readonly notMeasured?: boolean;
+  /** Why it was not, in the person's words. */
+  readonly notMeasuredBecause?: string;
   /** The finding that the run headed for when the step was claimed. */
   readonly verdictBefore?: string;
   /** The claim was left without being done: by redoing another step, or because the way to it was overruled. */
@@ -126,6 +128,8 @@ export interface BranchTaken {
   readonly inputs: readonly DecisionInput[];
   readonly because: string;
   readonly verdict?: string;
+  /** Why the person ended the test there; only on the way out of a stop. */
+  readonly reason?: string;
 }
 
 /** A quantity of the run, in base units (Pa, K, s, ...) beside the text it was given as. */

@@ -9,7 +9,7 @@ import { sha256Hex } from './sha256';
 import { count, objectOf, text } from './shape';
 
 /** The form of `RunState` that snapshots hold. It is counted up whenever a member of the state changes. */
-export const snapshotFormat = 3;
+export const snapshotFormat = 4;
 
 /**
  * A state kept so that a replay need not begin at the start: a copy that can be thrown away, never the truth. JSON;

@@ -79,6 +79,7 @@ const dataOf: RunEventData = {
     inputs: [{ name: 'x', label: 'X', text: '3', unit: 'kPa', uncertainty: '0.1' }],
     because: 'it is',
     verdict: 'seals',
+    reason: 'the plug moved',
   },
   'branch-overruled': { step: 'a', computed: 'next-0', chosen: 'otherwise', reason: 'heard it' },
   'step-redone': { step: 'a', reason: 'slipped' },
@@ -86,7 +87,7 @@ const dataOf: RunEventData = {
   'lead-called': { step: 'a', question: 'which port?' },
   released: { step: 'a', evidence: 'seen', by: 'lead' },
   'set-aside': { reason: 'lunch' },
-  resumed: { from: 'set-aside' },
+  resumed: { from: 'stopped', reason: 'the plug sits again' },
   'handed-over': { to: 'adeyemi', reason: 'shift' },
   'limit-exceeded': { step: 'a', limit: 'ceiling', name: 'gauge', figure },
   'alert-raised': { step: 'a', text: 'hot' },
@@ -131,7 +132,8 @@ const optional: Readonly<Partial<Record<keyof RunEventData, readonly string[]>>>
   'reading-recorded': ['way', 'instrument', 'resolution', 'uncertainty', 'timeS'],
   'series-recorded': ['fileName'],
   'choice-made': ['text'],
-  'branch-taken': ['when', 'verdict'],
+  'branch-taken': ['when', 'verdict', 'reason'],
+  resumed: ['reason'],
 };
 
 describe.each(types)('%s', (type) => {

@@ -1,9 +1,11 @@
 import type { CompiledProcedure, FindingStep, Sentence } from '../document';
+import { endedBefore } from './ended-before';
 import { environmentOf, own } from './environment';
 import { truthOf } from './judge-quantity';
 import { readQuantity, wayOf } from './quantities';
 import type { ChosenInstrument, RunState } from './run-state';
-import { renderCited, shownUnit, type Citation } from './template';
+import { endStop } from './sentence-end';
+import { renderCited, shownUnit, type Citation, type RenderedTemplate } from './template';
 
 /** One part of a write-up, sentence by sentence with what each one rests on. */
 export interface WriteUpPart {
@@ -32,7 +34,11 @@ export function composeWriteUp(procedure: CompiledProcedure, state: RunState): W
   const verdict: Sentence[] = finding?.kind === 'finding' ? [{ text: finding.verdict }] : [];
   return {
     concern: part(procedure, state, [...concernOf(state), ...codesOf(procedure)], true),
-    cause: part(procedure, state, [...verdict, ...authored.cause, ...limitsOf(procedure, state)], true),
+    cause: joined([
+      ...rendered(procedure, state, verdict, true),
+      ...endedBefore(procedure, state),
+      ...rendered(procedure, state, [...authored.cause, ...limitsOf(procedure, state)], true),
+    ]),
     correction: part(procedure, state, [...authored.correction, ...testedBy(procedure, state)], true),
     customer: part(procedure, state, authored.customer, false),
     deference: procedure.document.deference,
@@ -41,7 +47,7 @@ export function composeWriteUp(procedure: CompiledProcedure, state: RunState): W
 
 function concernOf(state: RunState): readonly Sentence[] {
   const { visit } = state;
-  const odometer = `${visit.odometer.text} ${visit.odometer.unit}`;
+  const odometer = `${inThousands(visit.odometer.text)} ${visit.odometer.unit}`;
   return [{ text: `${visit.car}, RO ${visit.repairOrder}, ${odometer}: ${endStop(visit.concern)}` }];
 }
 
@@ -92,14 +98,26 @@ function part(
   sentences: readonly Sentence[],
   cite: boolean,
 ): WriteUpPart {
-  const environment = environmentOf(state);
-  const rendered = sentences
-    .filter(({ when }) => when === undefined || truthOf(procedure, when, environment) === true)
-    .flatMap(({ text }) => renderCited(procedure, state, text, { cite }) ?? []);
-  return { text: rendered.map(({ text }) => text).join(' '), sentences: rendered };
+  return joined(rendered(procedure, state, sentences, cite));
 }
 
-function endStop(text: string): string {
-  const tidy = text.trim();
-  return /[.!?]$/.test(tidy) ? tidy : `${tidy}.`;
+function rendered(
+  procedure: CompiledProcedure,
+  state: RunState,
+  sentences: readonly Sentence[],
+  cite: boolean,
+): readonly RenderedTemplate[] {
+  const environment = environmentOf(state);
+  return sentences
+    .filter(({ when }) => when === undefined || truthOf(procedure, when, environment) === true)
+    .flatMap(({ text }) => renderCited(procedure, state, text, { cite }) ?? []);
+}
+
+function joined(sentences: readonly RenderedTemplate[]): WriteUpPart {
+  return { text: sentences.map(({ text }) => text).join(' '), sentences };
+}
+
+/** A whole number with a comma between its thousands. */
+function inThousands(text: string): string {
+  return text.replace(/^\d{4,}/, (digits) => digits.replace(/\B(?=(\d{3})+$)/g, ','));
 }

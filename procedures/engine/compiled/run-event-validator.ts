@@ -2,7 +2,7 @@
 // Made by build-validators.mjs from the schema; not to be edited.
 
 export const checkRunEvent = validate52;
-const schema19 = {"$schema":"https://json-schema.org/draft/2020-12/schema","$id":"run-event.schema.json","title":"Run event","description":"One thing that happened in a run: the envelope, and the data of its type. Agrees with run-event.ts.","type":"object","properties":{"runId":{"$ref":"#/$defs/anyUuid"},"seq":{"$ref":"#/$defs/seq"},"id":{"$ref":"#/$defs/uuid"},"at":{"$ref":"#/$defs/count"},"elapsed":{"type":"number","minimum":0,"maximum":9007199254740991},"actor":{"$ref":"#/$defs/id"},"device":{"$ref":"#/$defs/id"},"build":{"$ref":"#/$defs/id"},"schema":{"const":1},"prev":{"$ref":"#/$defs/hash"},"hash":{"$ref":"#/$defs/hash"},"type":{"enum":["opened","gear-chosen","step-claimed","step-done","caution-acknowledged","reading-recorded","not-measurable","not-applicable","predicted","series-recorded","mark-placed","codes-recorded","timer-started","timer-ended","choice-made","photo-attached","note-written","margin-note-written","disturbed","restored","branch-taken","branch-overruled","step-redone","undone","lead-called","released","set-aside","resumed","handed-over","limit-exceeded","alert-raised","alert-acknowledged","stopped","version-notice-answered","finding-reached","write-up-written","closed","verified","signed","amended","joined","clock-jumped","transcribed"]},"data":{"type":"object"}},"required":["runId","seq","id","at","elapsed","actor","device","build","schema","prev","hash","type","data"],"allOf":[{"if":{"properties":{"type":{"const":"opened"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/opened"}}}},{"if":{"properties":{"type":{"const":"gear-chosen"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/gear-chosen"}}}},{"if":{"properties":{"type":{"const":"step-claimed"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/step-claimed"}}}},{"if":{"properties":{"type":{"const":"step-done"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/step-done"}}}},{"if":{"properties":{"type":{"const":"caution-acknowledged"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/caution-acknowledged"}}}},{"if":{"properties":{"type":{"const":"reading-recorded"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/reading-recorded"}}}},{"if":{"properties":{"type":{"const":"not-measurable"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/not-measurable"}}}},{"if":{"properties":{"type":{"const":"not-applicable"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/not-applicable"}}}},{"if":{"properties":{"type":{"const":"predicted"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/predicted"}}}},{"if":{"properties":{"type":{"const":"series-recorded"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/series-recorded"}}}},{"if":{"properties":{"type":{"const":"mark-placed"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/mark-placed"}}}},{"if":{"properties":{"type":{"const":"codes-recorded"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/codes-recorded"}}}},{"if":{"properties":{"type":{"const":"timer-started"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/timer-started"}}}},{"if":{"properties":{"type":{"const":"timer-ended"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/timer-ended"}}}},{"if":{"properties":{"type":{"const":"choice-made"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/choice-made"}}}},{"if":{"properties":{"type":{"const":"photo-attached"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/photo-attached"}}}},{"if":{"properties":{"type":{"const":"note-written"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/note-written"}}}},{"if":{"properties":{"type":{"const":"margin-note-written"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/margin-note-written"}}}},{"if":{"properties":{"type":{"const":"disturbed"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/disturbed"}}}},{"if":{"properties":{"type":{"const":"restored"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/restored"}}}},{"if":{"properties":{"type":{"const":"branch-taken"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/branch-taken"}}}},{"if":{"properties":{"type":{"const":"branch-overruled"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/branch-overruled"}}}},{"if":{"properties":{"type":{"const":"step-redone"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/step-redone"}}}},{"if":{"properties":{"type":{"const":"undone"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/undone"}}}},{"if":{"properties":{"type":{"const":"lead-called"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/lead-called"}}}},{"if":{"properties":{"type":{"const":"released"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/released"}}}},{"if":{"properties":{"type":{"const":"set-aside"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/set-aside"}}}},{"if":{"properties":{"type":{"const":"resumed"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/resumed"}}}},{"if":{"properties":{"type":{"const":"handed-over"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/handed-over"}}}},{"if":{"properties":{"type":{"const":"limit-exceeded"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/limit-exceeded"}}}},{"if":{"properties":{"type":{"const":"alert-raised"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/alert-raised"}}}},{"if":{"properties":{"type":{"const":"alert-acknowledged"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/alert-acknowledged"}}}},{"if":{"properties":{"type":{"const":"stopped"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/stopped"}}}},{"if":{"properties":{"type":{"const":"version-notice-answered"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/version-notice-answered"}}}},{"if":{"properties":{"type":{"const":"finding-reached"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/finding-reached"}}}},{"if":{"properties":{"type":{"const":"write-up-written"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/write-up-written"}}}},{"if":{"properties":{"type":{"const":"closed"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/closed"}}}},{"if":{"properties":{"type":{"const":"verified"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/verified"}}}},{"if":{"properties":{"type":{"const":"signed"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/signed"}}}},{"if":{"properties":{"type":{"const":"amended"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/amended"}}}},{"if":{"properties":{"type":{"const":"joined"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/joined"}}}},{"if":{"properties":{"type":{"const":"clock-jumped"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/clock-jumped"}}}},{"if":{"properties":{"type":{"const":"transcribed"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/transcribed"}}}}],"additionalProperties":false,"$defs":{"unit":{"enum":["kPa","Pa","hPa","bar","psi","inHg","inH2O","mmHg","degC","degF","K","L/min","ft3/min","m3/s","g/s","kg/h","lb/min","L","cm3","mm","m","km","mi","Nm","lbf.ft","V","mV","ohm","kohm","s","min","h","km/h","mph","%","1","rpm","dB"]},"sense":{"enum":["absolute","gauge"]},"id":{"description":"An id or a name of the document.","type":"string","minLength":1,"maxLength":100},"step":{"type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"hash":{"description":"SHA-256, hexadecimal.","type":"string","pattern":"^[0-9a-f]{64}$"},"label":{"type":"string","maxLength":200},"words":{"type":"string","maxLength":4000},"figureText":{"description":"A figure with the digits that were given.","type":"string","minLength":1,"maxLength":40},"seq":{"type":"integer","minimum":1,"maximum":9007199254740991},"count":{"type":"integer","minimum":0,"maximum":9007199254740991},"source":{"enum":["typed","file","simulated","computed"]},"figure":{"type":"object","properties":{"text":{"$ref":"#/$defs/figureText"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"}},"required":["text","unit"],"additionalProperties":false},"inputFigure":{"type":"object","properties":{"text":{"$ref":"#/$defs/figureText"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"source":{"$ref":"#/$defs/label"}},"required":["text","unit","source"],"additionalProperties":false},"instrumentRange":{"type":"object","properties":{"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"low":{"type":"number"},"high":{"type":"number"},"resolution":{"type":"number","minimum":0},"accuracy":{"type":"number","minimum":0}},"required":["unit","low","high","resolution","accuracy"],"additionalProperties":false},"instrument":{"type":"object","properties":{"id":{"$ref":"#/$defs/id"},"kind":{"enum":["pressure-gauge","scan-tool","listening-probe","barometer","thermometer"]},"label":{"$ref":"#/$defs/label"},"shows":{"type":"array","items":{"$ref":"#/$defs/instrumentRange"},"maxItems":20},"dueOn":{"type":"string","pattern":"^[0-9]{4}-[0-9]{2}-[0-9]{2}$"}},"required":["id","kind","label","shows","dueOn"],"additionalProperties":false},"visit":{"type":"object","properties":{"repairOrder":{"$ref":"#/$defs/label"},"vin":{"type":"string","maxLength":40},"car":{"$ref":"#/$defs/label"},"odometer":{"$ref":"#/$defs/figure"},"concern":{"$ref":"#/$defs/words"},"codes":{"type":"array","items":{"type":"string","maxLength":20},"maxItems":100}},"required":["repairOrder","vin","car","odometer","concern","codes"],"additionalProperties":false},"code":{"type":"object","properties":{"code":{"type":"string","minLength":1,"maxLength":20},"status":{"enum":["stored","pending","permanent"]},"freezeFrame":{"$ref":"#/$defs/words"}},"required":["code","status"],"additionalProperties":false},"decisionInput":{"type":"object","properties":{"name":{"$ref":"#/$defs/id"},"label":{"$ref":"#/$defs/label"},"text":{"type":"string","maxLength":200},"unit":{"$ref":"#/$defs/unit"},"uncertainty":{"$ref":"#/$defs/figureText"}},"required":["name","label","text"],"additionalProperties":false},"report":{"type":"string","maxLength":40000},"opened":{"type":"object","properties":{"visit":{"$ref":"#/$defs/visit"},"siteName":{"$ref":"#/$defs/label"},"inputs":{"type":"object","propertyNames":{"type":"string","pattern":"^[a-z][A-Za-z0-9]*$","maxLength":60},"maxProperties":200,"additionalProperties":{"$ref":"#/$defs/inputFigure"}},"person":{"$ref":"#/$defs/label"},"again":{"$ref":"#/$defs/begunAgain"}},"required":["visit","siteName","inputs","person"],"additionalProperties":false},"begunAgain":{"description":"Why a run was begun although others of the same half were known.","type":"object","properties":{"because":{"$ref":"#/$defs/words"},"besides":{"type":"array","items":{"$ref":"#/$defs/anyUuid"},"maxItems":200}},"required":["because","besides"],"additionalProperties":false},"gear-chosen":{"type":"object","properties":{"role":{"$ref":"#/$defs/id"},"instrument":{"$ref":"#/$defs/instrument"},"overdueBecause":{"$ref":"#/$defs/words"}},"required":["role","instrument"],"additionalProperties":false},"step-claimed":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"}},"required":["step"],"additionalProperties":false},"step-done":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"}},"required":["step"],"additionalProperties":false},"caution-acknowledged":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"caution":{"type":"integer","minimum":0,"maximum":1000}},"required":["step","caution"],"additionalProperties":false},"reading-recorded":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"name":{"$ref":"#/$defs/id"},"figure":{"$ref":"#/$defs/figure"},"source":{"$ref":"#/$defs/source"},"way":{"$ref":"#/$defs/id"},"instrument":{"$ref":"#/$defs/id"},"resolution":{"$ref":"#/$defs/figureText"},"uncertainty":{"$ref":"#/$defs/figureText"},"timeS":{"type":"number","minimum":0}},"required":["step","name","figure","source"],"additionalProperties":false},"not-measurable":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"reason":{"$ref":"#/$defs/words"}},"required":["step","reason"],"additionalProperties":false},"not-applicable":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"reason":{"$ref":"#/$defs/words"}},"required":["step","reason"],"additionalProperties":false},"predicted":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"option":{"$ref":"#/$defs/id"}},"required":["step","option"],"additionalProperties":false},"series-recorded":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"name":{"$ref":"#/$defs/id"},"sha256":{"$ref":"#/$defs/hash"},"bytes":{"$ref":"#/$defs/count"},"samples":{"$ref":"#/$defs/count"},"durationS":{"type":"number","minimum":0},"channels":{"type":"array","items":{"type":"object","properties":{"name":{"$ref":"#/$defs/label"},"unit":{"type":"string","maxLength":40},"column":{"$ref":"#/$defs/label"}},"required":["name","unit","column"],"additionalProperties":false},"maxItems":200},"source":{"$ref":"#/$defs/source"},"fileName":{"type":"string","maxLength":400},"skipped":{"$ref":"#/$defs/count"},"problems":{"type":"array","items":{"$ref":"#/$defs/words"},"maxItems":100}},"required":["step","name","sha256","bytes","samples","durationS","channels","source","skipped","problems"],"additionalProperties":false},"mark-placed":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"series":{"$ref":"#/$defs/id"},"mark":{"enum":["noise-begins","noise-stops"]},"timeS":{"type":"number","minimum":0},"by":{"enum":["tap","pedal","suggested"]}},"required":["step","series","mark","timeS","by"],"additionalProperties":false},"codes-recorded":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"name":{"$ref":"#/$defs/id"},"codes":{"type":"array","items":{"$ref":"#/$defs/code"},"maxItems":200}},"required":["step","name","codes"],"additionalProperties":false},"timer-started":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"seconds":{"type":"number","minimum":0}},"required":["step","seconds"],"additionalProperties":false},"timer-ended":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"certain":{"type":"boolean"}},"required":["step","certain"],"additionalProperties":false},"choice-made":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"name":{"$ref":"#/$defs/id"},"options":{"type":"array","items":{"$ref":"#/$defs/id"},"maxItems":50},"text":{"$ref":"#/$defs/words"}},"required":["step","name","options"],"additionalProperties":false},"photo-attached":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"sha256":{"$ref":"#/$defs/hash"},"bytes":{"$ref":"#/$defs/count"},"mediaType":{"type":"string","maxLength":100}},"required":["step","sha256","bytes","mediaType"],"additionalProperties":false},"note-written":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"text":{"$ref":"#/$defs/words"}},"required":["step","text"],"additionalProperties":false},"margin-note-written":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"text":{"$ref":"#/$defs/words"}},"required":["step","text"],"additionalProperties":false},"disturbed":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"item":{"$ref":"#/$defs/id"},"label":{"$ref":"#/$defs/label"}},"required":["step","item","label"],"additionalProperties":false},"restored":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"item":{"$ref":"#/$defs/id"}},"required":["step","item"],"additionalProperties":false},"branch-taken":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"to":{"$ref":"#/$defs/step"},"exit":{"type":"string","minLength":1,"maxLength":60},"when":{"type":"string","maxLength":2000},"inputs":{"type":"array","items":{"$ref":"#/$defs/decisionInput"},"maxItems":400},"because":{"$ref":"#/$defs/words"},"verdict":{"$ref":"#/$defs/step"}},"required":["step","to","exit","inputs","because"],"additionalProperties":false},"branch-overruled":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"computed":{"$ref":"#/$defs/id"},"chosen":{"$ref":"#/$defs/id"},"reason":{"$ref":"#/$defs/words"}},"required":["step","computed","chosen","reason"],"additionalProperties":false},"step-redone":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"reason":{"$ref":"#/$defs/words"}},"required":["step","reason"],"additionalProperties":false},"undone":{"type":"object","properties":{"seq":{"$ref":"#/$defs/seq"},"reason":{"$ref":"#/$defs/words"}},"required":["seq","reason"],"additionalProperties":false},"lead-called":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"question":{"$ref":"#/$defs/words"}},"required":["step","question"],"additionalProperties":false},"released":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"evidence":{"$ref":"#/$defs/words"},"by":{"enum":["lead","manager"]}},"required":["step","evidence","by"],"additionalProperties":false},"set-aside":{"type":"object","properties":{"reason":{"$ref":"#/$defs/words"}},"required":["reason"],"additionalProperties":false},"resumed":{"type":"object","properties":{"from":{"enum":["set-aside","stopped","reload","lead-called"]}},"required":["from"],"additionalProperties":false},"handed-over":{"type":"object","properties":{"to":{"$ref":"#/$defs/id"},"reason":{"$ref":"#/$defs/words"}},"required":["to","reason"],"additionalProperties":false},"limit-exceeded":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"limit":{"$ref":"#/$defs/id"},"name":{"$ref":"#/$defs/id"},"figure":{"$ref":"#/$defs/figure"}},"required":["step","limit","name","figure"],"additionalProperties":false},"alert-raised":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"text":{"$ref":"#/$defs/words"}},"required":["step","text"],"additionalProperties":false},"alert-acknowledged":{"type":"object","properties":{"seq":{"$ref":"#/$defs/seq"}},"required":["seq"],"additionalProperties":false},"stopped":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"reason":{"$ref":"#/$defs/words"}},"required":["step","reason"],"additionalProperties":false},"version-notice-answered":{"type":"object","properties":{"version":{"$ref":"#/$defs/seq"},"answer":{"enum":["go-on","end"]}},"required":["version","answer"],"additionalProperties":false},"finding-reached":{"type":"object","properties":{"finding":{"$ref":"#/$defs/step"},"verdict":{"$ref":"#/$defs/words"}},"required":["finding","verdict"],"additionalProperties":false},"write-up-written":{"type":"object","properties":{"concern":{"$ref":"#/$defs/report"},"cause":{"$ref":"#/$defs/report"},"correction":{"$ref":"#/$defs/report"},"customer":{"$ref":"#/$defs/report"},"edited":{"type":"array","items":{"enum":["concern","cause","correction","customer"]},"maxItems":4}},"required":["concern","cause","correction","customer","edited"],"additionalProperties":false},"closed":{"type":"object","properties":{"finding":{"$ref":"#/$defs/step"}},"required":["finding"],"additionalProperties":false},"verified":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"by":{"$ref":"#/$defs/id"}},"required":["step","by"],"additionalProperties":false},"signed":{"type":"object","properties":{"head":{"$ref":"#/$defs/hash"},"meaning":{"enum":["performed","reviewed"]},"signature":{"type":"string","minLength":1,"maxLength":1000},"key":{"type":"string","minLength":1,"maxLength":1000}},"required":["head","meaning","signature","key"],"additionalProperties":false},"amended":{"type":"object","properties":{"text":{"$ref":"#/$defs/words"},"reason":{"$ref":"#/$defs/words"}},"required":["text","reason"],"additionalProperties":false},"joined":{"type":"object","properties":{"branch":{"$ref":"#/$defs/id"},"head":{"$ref":"#/$defs/hash"}},"required":["branch","head"],"additionalProperties":false},"clock-jumped":{"type":"object","properties":{"byMs":{"type":"number"}},"required":["byMs"],"additionalProperties":false},"transcribed":{"type":"object","properties":{"from":{"$ref":"#/$defs/words"}},"required":["from"],"additionalProperties":false},"anyUuid":{"type":"string","pattern":"^[0-9a-f]{8}(-[0-9a-f]{4}){3}-[0-9a-f]{12}$"},"uuid":{"type":"string","pattern":"^[0-9a-f]{8}-[0-9a-f]{4}-7[0-9a-f]{3}-[89ab][0-9a-f]{3}-[0-9a-f]{12}$"}}};
+const schema19 = {"$schema":"https://json-schema.org/draft/2020-12/schema","$id":"run-event.schema.json","title":"Run event","description":"One thing that happened in a run: the envelope, and the data of its type. Agrees with run-event.ts.","type":"object","properties":{"runId":{"$ref":"#/$defs/anyUuid"},"seq":{"$ref":"#/$defs/seq"},"id":{"$ref":"#/$defs/uuid"},"at":{"$ref":"#/$defs/count"},"elapsed":{"type":"number","minimum":0,"maximum":9007199254740991},"actor":{"$ref":"#/$defs/id"},"device":{"$ref":"#/$defs/id"},"build":{"$ref":"#/$defs/id"},"schema":{"const":1},"prev":{"$ref":"#/$defs/hash"},"hash":{"$ref":"#/$defs/hash"},"type":{"enum":["opened","gear-chosen","step-claimed","step-done","caution-acknowledged","reading-recorded","not-measurable","not-applicable","predicted","series-recorded","mark-placed","codes-recorded","timer-started","timer-ended","choice-made","photo-attached","note-written","margin-note-written","disturbed","restored","branch-taken","branch-overruled","step-redone","undone","lead-called","released","set-aside","resumed","handed-over","limit-exceeded","alert-raised","alert-acknowledged","stopped","version-notice-answered","finding-reached","write-up-written","closed","verified","signed","amended","joined","clock-jumped","transcribed"]},"data":{"type":"object"}},"required":["runId","seq","id","at","elapsed","actor","device","build","schema","prev","hash","type","data"],"allOf":[{"if":{"properties":{"type":{"const":"opened"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/opened"}}}},{"if":{"properties":{"type":{"const":"gear-chosen"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/gear-chosen"}}}},{"if":{"properties":{"type":{"const":"step-claimed"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/step-claimed"}}}},{"if":{"properties":{"type":{"const":"step-done"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/step-done"}}}},{"if":{"properties":{"type":{"const":"caution-acknowledged"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/caution-acknowledged"}}}},{"if":{"properties":{"type":{"const":"reading-recorded"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/reading-recorded"}}}},{"if":{"properties":{"type":{"const":"not-measurable"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/not-measurable"}}}},{"if":{"properties":{"type":{"const":"not-applicable"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/not-applicable"}}}},{"if":{"properties":{"type":{"const":"predicted"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/predicted"}}}},{"if":{"properties":{"type":{"const":"series-recorded"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/series-recorded"}}}},{"if":{"properties":{"type":{"const":"mark-placed"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/mark-placed"}}}},{"if":{"properties":{"type":{"const":"codes-recorded"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/codes-recorded"}}}},{"if":{"properties":{"type":{"const":"timer-started"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/timer-started"}}}},{"if":{"properties":{"type":{"const":"timer-ended"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/timer-ended"}}}},{"if":{"properties":{"type":{"const":"choice-made"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/choice-made"}}}},{"if":{"properties":{"type":{"const":"photo-attached"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/photo-attached"}}}},{"if":{"properties":{"type":{"const":"note-written"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/note-written"}}}},{"if":{"properties":{"type":{"const":"margin-note-written"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/margin-note-written"}}}},{"if":{"properties":{"type":{"const":"disturbed"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/disturbed"}}}},{"if":{"properties":{"type":{"const":"restored"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/restored"}}}},{"if":{"properties":{"type":{"const":"branch-taken"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/branch-taken"}}}},{"if":{"properties":{"type":{"const":"branch-overruled"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/branch-overruled"}}}},{"if":{"properties":{"type":{"const":"step-redone"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/step-redone"}}}},{"if":{"properties":{"type":{"const":"undone"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/undone"}}}},{"if":{"properties":{"type":{"const":"lead-called"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/lead-called"}}}},{"if":{"properties":{"type":{"const":"released"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/released"}}}},{"if":{"properties":{"type":{"const":"set-aside"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/set-aside"}}}},{"if":{"properties":{"type":{"const":"resumed"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/resumed"}}}},{"if":{"properties":{"type":{"const":"handed-over"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/handed-over"}}}},{"if":{"properties":{"type":{"const":"limit-exceeded"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/limit-exceeded"}}}},{"if":{"properties":{"type":{"const":"alert-raised"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/alert-raised"}}}},{"if":{"properties":{"type":{"const":"alert-acknowledged"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/alert-acknowledged"}}}},{"if":{"properties":{"type":{"const":"stopped"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/stopped"}}}},{"if":{"properties":{"type":{"const":"version-notice-answered"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/version-notice-answered"}}}},{"if":{"properties":{"type":{"const":"finding-reached"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/finding-reached"}}}},{"if":{"properties":{"type":{"const":"write-up-written"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/write-up-written"}}}},{"if":{"properties":{"type":{"const":"closed"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/closed"}}}},{"if":{"properties":{"type":{"const":"verified"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/verified"}}}},{"if":{"properties":{"type":{"const":"signed"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/signed"}}}},{"if":{"properties":{"type":{"const":"amended"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/amended"}}}},{"if":{"properties":{"type":{"const":"joined"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/joined"}}}},{"if":{"properties":{"type":{"const":"clock-jumped"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/clock-jumped"}}}},{"if":{"properties":{"type":{"const":"transcribed"}},"required":["type"]},"then":{"properties":{"data":{"$ref":"#/$defs/transcribed"}}}}],"additionalProperties":false,"$defs":{"unit":{"enum":["kPa","Pa","hPa","bar","psi","inHg","inH2O","mmHg","degC","degF","K","L/min","ft3/min","m3/s","g/s","kg/h","lb/min","L","cm3","mm","m","km","mi","Nm","lbf.ft","V","mV","ohm","kohm","s","min","h","km/h","mph","%","1","rpm","dB"]},"sense":{"enum":["absolute","gauge"]},"id":{"description":"An id or a name of the document.","type":"string","minLength":1,"maxLength":100},"step":{"type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"hash":{"description":"SHA-256, hexadecimal.","type":"string","pattern":"^[0-9a-f]{64}$"},"label":{"type":"string","maxLength":200},"words":{"type":"string","maxLength":4000},"figureText":{"description":"A figure with the digits that were given.","type":"string","minLength":1,"maxLength":40},"seq":{"type":"integer","minimum":1,"maximum":9007199254740991},"count":{"type":"integer","minimum":0,"maximum":9007199254740991},"source":{"enum":["typed","file","simulated","computed"]},"figure":{"type":"object","properties":{"text":{"$ref":"#/$defs/figureText"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"}},"required":["text","unit"],"additionalProperties":false},"inputFigure":{"type":"object","properties":{"text":{"$ref":"#/$defs/figureText"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"source":{"$ref":"#/$defs/label"}},"required":["text","unit","source"],"additionalProperties":false},"instrumentRange":{"type":"object","properties":{"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"low":{"type":"number"},"high":{"type":"number"},"resolution":{"type":"number","minimum":0},"accuracy":{"type":"number","minimum":0}},"required":["unit","low","high","resolution","accuracy"],"additionalProperties":false},"instrument":{"type":"object","properties":{"id":{"$ref":"#/$defs/id"},"kind":{"enum":["pressure-gauge","scan-tool","listening-probe","barometer","thermometer"]},"label":{"$ref":"#/$defs/label"},"shows":{"type":"array","items":{"$ref":"#/$defs/instrumentRange"},"maxItems":20},"dueOn":{"type":"string","pattern":"^[0-9]{4}-[0-9]{2}-[0-9]{2}$"}},"required":["id","kind","label","shows","dueOn"],"additionalProperties":false},"visit":{"type":"object","properties":{"repairOrder":{"$ref":"#/$defs/label"},"vin":{"type":"string","maxLength":40},"car":{"$ref":"#/$defs/label"},"odometer":{"$ref":"#/$defs/figure"},"concern":{"$ref":"#/$defs/words"},"codes":{"type":"array","items":{"type":"string","maxLength":20},"maxItems":100}},"required":["repairOrder","vin","car","odometer","concern","codes"],"additionalProperties":false},"code":{"type":"object","properties":{"code":{"type":"string","minLength":1,"maxLength":20},"status":{"enum":["stored","pending","permanent"]},"freezeFrame":{"$ref":"#/$defs/words"}},"required":["code","status"],"additionalProperties":false},"decisionInput":{"type":"object","properties":{"name":{"$ref":"#/$defs/id"},"label":{"$ref":"#/$defs/label"},"text":{"type":"string","maxLength":200},"unit":{"$ref":"#/$defs/unit"},"uncertainty":{"$ref":"#/$defs/figureText"}},"required":["name","label","text"],"additionalProperties":false},"report":{"type":"string","maxLength":40000},"opened":{"type":"object","properties":{"visit":{"$ref":"#/$defs/visit"},"siteName":{"$ref":"#/$defs/label"},"inputs":{"type":"object","propertyNames":{"type":"string","pattern":"^[a-z][A-Za-z0-9]*$","maxLength":60},"maxProperties":200,"additionalProperties":{"$ref":"#/$defs/inputFigure"}},"person":{"$ref":"#/$defs/label"},"again":{"$ref":"#/$defs/begunAgain"}},"required":["visit","siteName","inputs","person"],"additionalProperties":false},"begunAgain":{"description":"Why a run was begun although others of the same half were known.","type":"object","properties":{"because":{"$ref":"#/$defs/words"},"besides":{"type":"array","items":{"$ref":"#/$defs/anyUuid"},"maxItems":200}},"required":["because","besides"],"additionalProperties":false},"gear-chosen":{"type":"object","properties":{"role":{"$ref":"#/$defs/id"},"instrument":{"$ref":"#/$defs/instrument"},"overdueBecause":{"$ref":"#/$defs/words"}},"required":["role","instrument"],"additionalProperties":false},"step-claimed":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"}},"required":["step"],"additionalProperties":false},"step-done":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"}},"required":["step"],"additionalProperties":false},"caution-acknowledged":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"caution":{"type":"integer","minimum":0,"maximum":1000}},"required":["step","caution"],"additionalProperties":false},"reading-recorded":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"name":{"$ref":"#/$defs/id"},"figure":{"$ref":"#/$defs/figure"},"source":{"$ref":"#/$defs/source"},"way":{"$ref":"#/$defs/id"},"instrument":{"$ref":"#/$defs/id"},"resolution":{"$ref":"#/$defs/figureText"},"uncertainty":{"$ref":"#/$defs/figureText"},"timeS":{"type":"number","minimum":0}},"required":["step","name","figure","source"],"additionalProperties":false},"not-measurable":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"reason":{"$ref":"#/$defs/words"}},"required":["step","reason"],"additionalProperties":false},"not-applicable":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"reason":{"$ref":"#/$defs/words"}},"required":["step","reason"],"additionalProperties":false},"predicted":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"option":{"$ref":"#/$defs/id"}},"required":["step","option"],"additionalProperties":false},"series-recorded":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"name":{"$ref":"#/$defs/id"},"sha256":{"$ref":"#/$defs/hash"},"bytes":{"$ref":"#/$defs/count"},"samples":{"$ref":"#/$defs/count"},"durationS":{"type":"number","minimum":0},"channels":{"type":"array","items":{"type":"object","properties":{"name":{"$ref":"#/$defs/label"},"unit":{"type":"string","maxLength":40},"column":{"$ref":"#/$defs/label"}},"required":["name","unit","column"],"additionalProperties":false},"maxItems":200},"source":{"$ref":"#/$defs/source"},"fileName":{"type":"string","maxLength":400},"skipped":{"$ref":"#/$defs/count"},"problems":{"type":"array","items":{"$ref":"#/$defs/words"},"maxItems":100}},"required":["step","name","sha256","bytes","samples","durationS","channels","source","skipped","problems"],"additionalProperties":false},"mark-placed":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"series":{"$ref":"#/$defs/id"},"mark":{"enum":["noise-begins","noise-stops"]},"timeS":{"type":"number","minimum":0},"by":{"enum":["tap","pedal","suggested"]}},"required":["step","series","mark","timeS","by"],"additionalProperties":false},"codes-recorded":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"name":{"$ref":"#/$defs/id"},"codes":{"type":"array","items":{"$ref":"#/$defs/code"},"maxItems":200}},"required":["step","name","codes"],"additionalProperties":false},"timer-started":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"seconds":{"type":"number","minimum":0}},"required":["step","seconds"],"additionalProperties":false},"timer-ended":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"certain":{"type":"boolean"}},"required":["step","certain"],"additionalProperties":false},"choice-made":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"name":{"$ref":"#/$defs/id"},"options":{"type":"array","items":{"$ref":"#/$defs/id"},"maxItems":50},"text":{"$ref":"#/$defs/words"}},"required":["step","name","options"],"additionalProperties":false},"photo-attached":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"sha256":{"$ref":"#/$defs/hash"},"bytes":{"$ref":"#/$defs/count"},"mediaType":{"type":"string","maxLength":100}},"required":["step","sha256","bytes","mediaType"],"additionalProperties":false},"note-written":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"text":{"$ref":"#/$defs/words"}},"required":["step","text"],"additionalProperties":false},"margin-note-written":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"text":{"$ref":"#/$defs/words"}},"required":["step","text"],"additionalProperties":false},"disturbed":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"item":{"$ref":"#/$defs/id"},"label":{"$ref":"#/$defs/label"}},"required":["step","item","label"],"additionalProperties":false},"restored":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"item":{"$ref":"#/$defs/id"}},"required":["step","item"],"additionalProperties":false},"branch-taken":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"to":{"$ref":"#/$defs/step"},"exit":{"type":"string","minLength":1,"maxLength":60},"when":{"type":"string","maxLength":2000},"inputs":{"type":"array","items":{"$ref":"#/$defs/decisionInput"},"maxItems":400},"because":{"$ref":"#/$defs/words"},"verdict":{"$ref":"#/$defs/step"},"reason":{"$ref":"#/$defs/words"}},"required":["step","to","exit","inputs","because"],"additionalProperties":false},"branch-overruled":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"computed":{"$ref":"#/$defs/id"},"chosen":{"$ref":"#/$defs/id"},"reason":{"$ref":"#/$defs/words"}},"required":["step","computed","chosen","reason"],"additionalProperties":false},"step-redone":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"reason":{"$ref":"#/$defs/words"}},"required":["step","reason"],"additionalProperties":false},"undone":{"type":"object","properties":{"seq":{"$ref":"#/$defs/seq"},"reason":{"$ref":"#/$defs/words"}},"required":["seq","reason"],"additionalProperties":false},"lead-called":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"question":{"$ref":"#/$defs/words"}},"required":["step","question"],"additionalProperties":false},"released":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"evidence":{"$ref":"#/$defs/words"},"by":{"enum":["lead","manager"]}},"required":["step","evidence","by"],"additionalProperties":false},"set-aside":{"type":"object","properties":{"reason":{"$ref":"#/$defs/words"}},"required":["reason"],"additionalProperties":false},"resumed":{"type":"object","properties":{"from":{"enum":["set-aside","stopped","reload","lead-called"]},"reason":{"$ref":"#/$defs/words"}},"required":["from"],"additionalProperties":false},"handed-over":{"type":"object","properties":{"to":{"$ref":"#/$defs/id"},"reason":{"$ref":"#/$defs/words"}},"required":["to","reason"],"additionalProperties":false},"limit-exceeded":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"limit":{"$ref":"#/$defs/id"},"name":{"$ref":"#/$defs/id"},"figure":{"$ref":"#/$defs/figure"}},"required":["step","limit","name","figure"],"additionalProperties":false},"alert-raised":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"text":{"$ref":"#/$defs/words"}},"required":["step","text"],"additionalProperties":false},"alert-acknowledged":{"type":"object","properties":{"seq":{"$ref":"#/$defs/seq"}},"required":["seq"],"additionalProperties":false},"stopped":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"reason":{"$ref":"#/$defs/words"}},"required":["step","reason"],"additionalProperties":false},"version-notice-answered":{"type":"object","properties":{"version":{"$ref":"#/$defs/seq"},"answer":{"enum":["go-on","end"]}},"required":["version","answer"],"additionalProperties":false},"finding-reached":{"type":"object","properties":{"finding":{"$ref":"#/$defs/step"},"verdict":{"$ref":"#/$defs/words"}},"required":["finding","verdict"],"additionalProperties":false},"write-up-written":{"type":"object","properties":{"concern":{"$ref":"#/$defs/report"},"cause":{"$ref":"#/$defs/report"},"correction":{"$ref":"#/$defs/report"},"customer":{"$ref":"#/$defs/report"},"edited":{"type":"array","items":{"enum":["concern","cause","correction","customer"]},"maxItems":4}},"required":["concern","cause","correction","customer","edited"],"additionalProperties":false},"closed":{"type":"object","properties":{"finding":{"$ref":"#/$defs/step"}},"required":["finding"],"additionalProperties":false},"verified":{"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"by":{"$ref":"#/$defs/id"}},"required":["step","by"],"additionalProperties":false},"signed":{"type":"object","properties":{"head":{"$ref":"#/$defs/hash"},"meaning":{"enum":["performed","reviewed"]},"signature":{"type":"string","minLength":1,"maxLength":1000},"key":{"type":"string","minLength":1,"maxLength":1000}},"required":["head","meaning","signature","key"],"additionalProperties":false},"amended":{"type":"object","properties":{"text":{"$ref":"#/$defs/words"},"reason":{"$ref":"#/$defs/words"}},"required":["text","reason"],"additionalProperties":false},"joined":{"type":"object","properties":{"branch":{"$ref":"#/$defs/id"},"head":{"$ref":"#/$defs/hash"}},"required":["branch","head"],"additionalProperties":false},"clock-jumped":{"type":"object","properties":{"byMs":{"type":"number"}},"required":["byMs"],"additionalProperties":false},"transcribed":{"type":"object","properties":{"from":{"$ref":"#/$defs/words"}},"required":["from"],"additionalProperties":false},"anyUuid":{"type":"string","pattern":"^[0-9a-f]{8}(-[0-9a-f]{4}){3}-[0-9a-f]{12}$"},"uuid":{"type":"string","pattern":"^[0-9a-f]{8}-[0-9a-f]{4}-7[0-9a-f]{3}-[89ab][0-9a-f]{3}-[0-9a-f]{12}$"}}};
 const schema20 = {"type":"object","properties":{"visit":{"$ref":"#/$defs/visit"},"siteName":{"$ref":"#/$defs/label"},"inputs":{"type":"object","propertyNames":{"type":"string","pattern":"^[a-z][A-Za-z0-9]*$","maxLength":60},"maxProperties":200,"additionalProperties":{"$ref":"#/$defs/inputFigure"}},"person":{"$ref":"#/$defs/label"},"again":{"$ref":"#/$defs/begunAgain"}},"required":["visit","siteName","inputs","person"],"additionalProperties":false};
 const schema21 = {"type":"object","properties":{"repairOrder":{"$ref":"#/$defs/label"},"vin":{"type":"string","maxLength":40},"car":{"$ref":"#/$defs/label"},"odometer":{"$ref":"#/$defs/figure"},"concern":{"$ref":"#/$defs/words"},"codes":{"type":"array","items":{"type":"string","maxLength":20},"maxItems":100}},"required":["repairOrder","vin","car","odometer","concern","codes"],"additionalProperties":false};
 const schema22 = {"type":"string","maxLength":200};
@@ -3612,7 +3612,7 @@ return errors === 0;
 }
 validate184.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema58 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"to":{"$ref":"#/$defs/step"},"exit":{"type":"string","minLength":1,"maxLength":60},"when":{"type":"string","maxLength":2000},"inputs":{"type":"array","items":{"$ref":"#/$defs/decisionInput"},"maxItems":400},"because":{"$ref":"#/$defs/words"},"verdict":{"$ref":"#/$defs/step"}},"required":["step","to","exit","inputs","because"],"additionalProperties":false};
+const schema58 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"to":{"$ref":"#/$defs/step"},"exit":{"type":"string","minLength":1,"maxLength":60},"when":{"type":"string","maxLength":2000},"inputs":{"type":"array","items":{"$ref":"#/$defs/decisionInput"},"maxItems":400},"because":{"$ref":"#/$defs/words"},"verdict":{"$ref":"#/$defs/step"},"reason":{"$ref":"#/$defs/words"}},"required":["step","to","exit","inputs","because"],"additionalProperties":false};
 const schema59 = {"type":"object","properties":{"name":{"$ref":"#/$defs/id"},"label":{"$ref":"#/$defs/label"},"text":{"type":"string","maxLength":200},"unit":{"$ref":"#/$defs/unit"},"uncertainty":{"$ref":"#/$defs/figureText"}},"required":["name","label","text"],"additionalProperties":false};
 
 function validate191(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
@@ -3796,7 +3796,7 @@ vErrors.push(err4);
 errors++;
 }
 for(const key0 in data){
-if(!(((((((key0 === "step") || (key0 === "to")) || (key0 === "exit")) || (key0 === "when")) || (key0 === "inputs")) || (key0 === "because")) || (key0 === "verdict"))){
+if(!((((((((key0 === "step") || (key0 === "to")) || (key0 === "exit")) || (key0 === "when")) || (key0 === "inputs")) || (key0 === "because")) || (key0 === "verdict")) || (key0 === "reason"))){
 const err5 = {instancePath,schemaPath:"#/additionalProperties",keyword:"additionalProperties",params:{additionalProperty: key0},message:"must NOT have additional properties"};
 if(vErrors === null){
 vErrors = [err5];
@@ -3923,6 +3923,12 @@ vErrors = vErrors === null ? validate97.errors : vErrors.concat(validate97.error
 errors = vErrors.length;
 }
 }
+if(data.reason !== undefined){
+if(!(validate66(data.reason, {instancePath:instancePath+"/reason",parentData:data,parentDataProperty:"reason",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate66.errors : vErrors.concat(validate66.errors);
+errors = vErrors.length;
+}
+}
 }
 else {
 const err13 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
@@ -3941,10 +3947,10 @@ validate188.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false}
 
 const schema60 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"computed":{"$ref":"#/$defs/id"},"chosen":{"$ref":"#/$defs/id"},"reason":{"$ref":"#/$defs/words"}},"required":["step","computed","chosen","reason"],"additionalProperties":false};
 
-function validate200(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate201(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate200.evaluated;
+const evaluated0 = validate201.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4039,17 +4045,17 @@ vErrors.push(err5);
 }
 errors++;
 }
-validate200.errors = vErrors;
+validate201.errors = vErrors;
 return errors === 0;
 }
-validate200.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate201.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema61 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"reason":{"$ref":"#/$defs/words"}},"required":["step","reason"],"additionalProperties":false};
 
-function validate206(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate207(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate206.evaluated;
+const evaluated0 = validate207.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4112,18 +4118,18 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate206.errors = vErrors;
+validate207.errors = vErrors;
 return errors === 0;
 }
-validate206.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate207.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema62 = {"type":"object","properties":{"seq":{"$ref":"#/$defs/seq"},"reason":{"$ref":"#/$defs/words"}},"required":["seq","reason"],"additionalProperties":false};
 const schema63 = {"type":"integer","minimum":1,"maximum":9007199254740991};
 
-function validate211(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate212(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate211.evaluated;
+const evaluated0 = validate212.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4162,16 +4168,16 @@ vErrors.push(err2);
 errors++;
 }
 }
-validate211.errors = vErrors;
+validate212.errors = vErrors;
 return errors === 0;
 }
-validate211.evaluated = {"dynamicProps":false,"dynamicItems":false};
+validate212.evaluated = {"dynamicProps":false,"dynamicItems":false};
 
 
-function validate210(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate211(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate210.evaluated;
+const evaluated0 = validate211.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4212,8 +4218,8 @@ errors++;
 }
 }
 if(data.seq !== undefined){
-if(!(validate211(data.seq, {instancePath:instancePath+"/seq",parentData:data,parentDataProperty:"seq",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate211.errors : vErrors.concat(validate211.errors);
+if(!(validate212(data.seq, {instancePath:instancePath+"/seq",parentData:data,parentDataProperty:"seq",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate212.errors : vErrors.concat(validate212.errors);
 errors = vErrors.length;
 }
 }
@@ -4234,17 +4240,17 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate210.errors = vErrors;
+validate211.errors = vErrors;
 return errors === 0;
 }
-validate210.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate211.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema64 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"question":{"$ref":"#/$defs/words"}},"required":["step","question"],"additionalProperties":false};
 
-function validate215(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate216(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate215.evaluated;
+const evaluated0 = validate216.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4307,17 +4313,17 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate215.errors = vErrors;
+validate216.errors = vErrors;
 return errors === 0;
 }
-validate215.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate216.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema65 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"evidence":{"$ref":"#/$defs/words"},"by":{"enum":["lead","manager"]}},"required":["step","evidence","by"],"additionalProperties":false};
 
-function validate219(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate220(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate219.evaluated;
+const evaluated0 = validate220.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4403,17 +4409,17 @@ vErrors.push(err5);
 }
 errors++;
 }
-validate219.errors = vErrors;
+validate220.errors = vErrors;
 return errors === 0;
 }
-validate219.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate220.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema66 = {"type":"object","properties":{"reason":{"$ref":"#/$defs/words"}},"required":["reason"],"additionalProperties":false};
 
-function validate223(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate224(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate223.evaluated;
+const evaluated0 = validate224.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4460,17 +4466,17 @@ vErrors.push(err2);
 }
 errors++;
 }
-validate223.errors = vErrors;
+validate224.errors = vErrors;
 return errors === 0;
 }
-validate223.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate224.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema67 = {"type":"object","properties":{"from":{"enum":["set-aside","stopped","reload","lead-called"]}},"required":["from"],"additionalProperties":false};
+const schema67 = {"type":"object","properties":{"from":{"enum":["set-aside","stopped","reload","lead-called"]},"reason":{"$ref":"#/$defs/words"}},"required":["from"],"additionalProperties":false};
 
-function validate226(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate227(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate226.evaluated;
+const evaluated0 = validate227.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4489,7 +4495,7 @@ vErrors.push(err0);
 errors++;
 }
 for(const key0 in data){
-if(!(key0 === "from")){
+if(!((key0 === "from") || (key0 === "reason"))){
 const err1 = {instancePath,schemaPath:"#/additionalProperties",keyword:"additionalProperties",params:{additionalProperty: key0},message:"must NOT have additional properties"};
 if(vErrors === null){
 vErrors = [err1];
@@ -4513,6 +4519,12 @@ vErrors.push(err2);
 errors++;
 }
 }
+if(data.reason !== undefined){
+if(!(validate66(data.reason, {instancePath:instancePath+"/reason",parentData:data,parentDataProperty:"reason",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate66.errors : vErrors.concat(validate66.errors);
+errors = vErrors.length;
+}
+}
 }
 else {
 const err3 = {instancePath,schemaPath:"#/type",keyword:"type",params:{type: "object"},message:"must be object"};
@@ -4524,17 +4536,17 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate226.errors = vErrors;
+validate227.errors = vErrors;
 return errors === 0;
 }
-validate226.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate227.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema68 = {"type":"object","properties":{"to":{"$ref":"#/$defs/id"},"reason":{"$ref":"#/$defs/words"}},"required":["to","reason"],"additionalProperties":false};
 
-function validate228(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate230(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate228.evaluated;
+const evaluated0 = validate230.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4597,17 +4609,17 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate228.errors = vErrors;
+validate230.errors = vErrors;
 return errors === 0;
 }
-validate228.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate230.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema69 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"limit":{"$ref":"#/$defs/id"},"name":{"$ref":"#/$defs/id"},"figure":{"$ref":"#/$defs/figure"}},"required":["step","limit","name","figure"],"additionalProperties":false};
 
-function validate232(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate234(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate232.evaluated;
+const evaluated0 = validate234.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4702,17 +4714,17 @@ vErrors.push(err5);
 }
 errors++;
 }
-validate232.errors = vErrors;
+validate234.errors = vErrors;
 return errors === 0;
 }
-validate232.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate234.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema70 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"text":{"$ref":"#/$defs/words"}},"required":["step","text"],"additionalProperties":false};
 
-function validate238(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate240(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate238.evaluated;
+const evaluated0 = validate240.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4775,17 +4787,17 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate238.errors = vErrors;
+validate240.errors = vErrors;
 return errors === 0;
 }
-validate238.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate240.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema71 = {"type":"object","properties":{"seq":{"$ref":"#/$defs/seq"}},"required":["seq"],"additionalProperties":false};
 
-function validate242(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate244(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate242.evaluated;
+const evaluated0 = validate244.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4816,8 +4828,8 @@ errors++;
 }
 }
 if(data.seq !== undefined){
-if(!(validate211(data.seq, {instancePath:instancePath+"/seq",parentData:data,parentDataProperty:"seq",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate211.errors : vErrors.concat(validate211.errors);
+if(!(validate212(data.seq, {instancePath:instancePath+"/seq",parentData:data,parentDataProperty:"seq",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate212.errors : vErrors.concat(validate212.errors);
 errors = vErrors.length;
 }
 }
@@ -4832,17 +4844,17 @@ vErrors.push(err2);
 }
 errors++;
 }
-validate242.errors = vErrors;
+validate244.errors = vErrors;
 return errors === 0;
 }
-validate242.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate244.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema72 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"reason":{"$ref":"#/$defs/words"}},"required":["step","reason"],"additionalProperties":false};
 
-function validate245(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate247(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate245.evaluated;
+const evaluated0 = validate247.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4905,17 +4917,17 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate245.errors = vErrors;
+validate247.errors = vErrors;
 return errors === 0;
 }
-validate245.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate247.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema73 = {"type":"object","properties":{"version":{"$ref":"#/$defs/seq"},"answer":{"enum":["go-on","end"]}},"required":["version","answer"],"additionalProperties":false};
 
-function validate249(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate251(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate249.evaluated;
+const evaluated0 = validate251.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -4956,8 +4968,8 @@ errors++;
 }
 }
 if(data.version !== undefined){
-if(!(validate211(data.version, {instancePath:instancePath+"/version",parentData:data,parentDataProperty:"version",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate211.errors : vErrors.concat(validate211.errors);
+if(!(validate212(data.version, {instancePath:instancePath+"/version",parentData:data,parentDataProperty:"version",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate212.errors : vErrors.concat(validate212.errors);
 errors = vErrors.length;
 }
 }
@@ -4985,17 +4997,17 @@ vErrors.push(err4);
 }
 errors++;
 }
-validate249.errors = vErrors;
+validate251.errors = vErrors;
 return errors === 0;
 }
-validate249.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate251.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema74 = {"type":"object","properties":{"finding":{"$ref":"#/$defs/step"},"verdict":{"$ref":"#/$defs/words"}},"required":["finding","verdict"],"additionalProperties":false};
 
-function validate252(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate254(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate252.evaluated;
+const evaluated0 = validate254.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -5058,18 +5070,18 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate252.errors = vErrors;
+validate254.errors = vErrors;
 return errors === 0;
 }
-validate252.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate254.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema75 = {"type":"object","properties":{"concern":{"$ref":"#/$defs/report"},"cause":{"$ref":"#/$defs/report"},"correction":{"$ref":"#/$defs/report"},"customer":{"$ref":"#/$defs/report"},"edited":{"type":"array","items":{"enum":["concern","cause","correction","customer"]},"maxItems":4}},"required":["concern","cause","correction","customer","edited"],"additionalProperties":false};
 const schema76 = {"type":"string","maxLength":40000};
 
-function validate257(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate259(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate257.evaluated;
+const evaluated0 = validate259.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -5098,16 +5110,16 @@ vErrors.push(err1);
 }
 errors++;
 }
-validate257.errors = vErrors;
+validate259.errors = vErrors;
 return errors === 0;
 }
-validate257.evaluated = {"dynamicProps":false,"dynamicItems":false};
+validate259.evaluated = {"dynamicProps":false,"dynamicItems":false};
 
 
-function validate256(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate258(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate256.evaluated;
+const evaluated0 = validate258.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -5178,26 +5190,26 @@ errors++;
 }
 }
 if(data.concern !== undefined){
-if(!(validate257(data.concern, {instancePath:instancePath+"/concern",parentData:data,parentDataProperty:"concern",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate257.errors : vErrors.concat(validate257.errors);
+if(!(validate259(data.concern, {instancePath:instancePath+"/concern",parentData:data,parentDataProperty:"concern",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate259.errors : vErrors.concat(validate259.errors);
 errors = vErrors.length;
 }
 }
 if(data.cause !== undefined){
-if(!(validate257(data.cause, {instancePath:instancePath+"/cause",parentData:data,parentDataProperty:"cause",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate257.errors : vErrors.concat(validate257.errors);
+if(!(validate259(data.cause, {instancePath:instancePath+"/cause",parentData:data,parentDataProperty:"cause",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate259.errors : vErrors.concat(validate259.errors);
 errors = vErrors.length;
 }
 }
 if(data.correction !== undefined){
-if(!(validate257(data.correction, {instancePath:instancePath+"/correction",parentData:data,parentDataProperty:"correction",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate257.errors : vErrors.concat(validate257.errors);
+if(!(validate259(data.correction, {instancePath:instancePath+"/correction",parentData:data,parentDataProperty:"correction",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate259.errors : vErrors.concat(validate259.errors);
 errors = vErrors.length;
 }
 }
 if(data.customer !== undefined){
-if(!(validate257(data.customer, {instancePath:instancePath+"/customer",parentData:data,parentDataProperty:"customer",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate257.errors : vErrors.concat(validate257.errors);
+if(!(validate259(data.customer, {instancePath:instancePath+"/customer",parentData:data,parentDataProperty:"customer",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate259.errors : vErrors.concat(validate259.errors);
 errors = vErrors.length;
 }
 }
@@ -5251,17 +5263,17 @@ vErrors.push(err9);
 }
 errors++;
 }
-validate256.errors = vErrors;
+validate258.errors = vErrors;
 return errors === 0;
 }
-validate256.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate258.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema77 = {"type":"object","properties":{"finding":{"$ref":"#/$defs/step"}},"required":["finding"],"additionalProperties":false};
 
-function validate263(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate265(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate263.evaluated;
+const evaluated0 = validate265.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -5308,17 +5320,17 @@ vErrors.push(err2);
 }
 errors++;
 }
-validate263.errors = vErrors;
+validate265.errors = vErrors;
 return errors === 0;
 }
-validate263.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate265.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema78 = {"type":"object","properties":{"step":{"$ref":"#/$defs/step"},"by":{"$ref":"#/$defs/id"}},"required":["step","by"],"additionalProperties":false};
 
-function validate266(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate268(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate266.evaluated;
+const evaluated0 = validate268.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -5381,17 +5393,17 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate266.errors = vErrors;
+validate268.errors = vErrors;
 return errors === 0;
 }
-validate266.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate268.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema79 = {"type":"object","properties":{"head":{"$ref":"#/$defs/hash"},"meaning":{"enum":["performed","reviewed"]},"signature":{"type":"string","minLength":1,"maxLength":1000},"key":{"type":"string","minLength":1,"maxLength":1000}},"required":["head","meaning","signature","key"],"additionalProperties":false};
 
-function validate270(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate272(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate270.evaluated;
+const evaluated0 = validate272.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -5551,17 +5563,17 @@ vErrors.push(err12);
 }
 errors++;
 }
-validate270.errors = vErrors;
+validate272.errors = vErrors;
 return errors === 0;
 }
-validate270.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate272.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema80 = {"type":"object","properties":{"text":{"$ref":"#/$defs/words"},"reason":{"$ref":"#/$defs/words"}},"required":["text","reason"],"additionalProperties":false};
 
-function validate273(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate275(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate273.evaluated;
+const evaluated0 = validate275.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -5624,17 +5636,17 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate273.errors = vErrors;
+validate275.errors = vErrors;
 return errors === 0;
 }
-validate273.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate275.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema81 = {"type":"object","properties":{"branch":{"$ref":"#/$defs/id"},"head":{"$ref":"#/$defs/hash"}},"required":["branch","head"],"additionalProperties":false};
 
-function validate277(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate279(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate277.evaluated;
+const evaluated0 = validate279.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -5697,17 +5709,17 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate277.errors = vErrors;
+validate279.errors = vErrors;
 return errors === 0;
 }
-validate277.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate279.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema82 = {"type":"object","properties":{"byMs":{"type":"number"}},"required":["byMs"],"additionalProperties":false};
 
-function validate281(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate283(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate281.evaluated;
+const evaluated0 = validate283.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -5761,17 +5773,17 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate281.errors = vErrors;
+validate283.errors = vErrors;
 return errors === 0;
 }
-validate281.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate283.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema83 = {"type":"object","properties":{"from":{"$ref":"#/$defs/words"}},"required":["from"],"additionalProperties":false};
 
-function validate283(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate285(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate283.evaluated;
+const evaluated0 = validate285.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -5818,18 +5830,18 @@ vErrors.push(err2);
 }
 errors++;
 }
-validate283.errors = vErrors;
+validate285.errors = vErrors;
 return errors === 0;
 }
-validate283.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate285.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema84 = {"type":"string","pattern":"^[0-9a-f]{8}-[0-9a-f]{4}-7[0-9a-f]{3}-[89ab][0-9a-f]{3}-[0-9a-f]{12}$"};
 const pattern8 = new RegExp("^[0-9a-f]{8}-[0-9a-f]{4}-7[0-9a-f]{3}-[89ab][0-9a-f]{3}-[0-9a-f]{12}$", "u");
 
-function validate288(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate290(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate288.evaluated;
+const evaluated0 = validate290.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -5858,10 +5870,10 @@ vErrors.push(err1);
 }
 errors++;
 }
-validate288.errors = vErrors;
+validate290.errors = vErrors;
 return errors === 0;
 }
-validate288.evaluated = {"dynamicProps":false,"dynamicItems":false};
+validate290.evaluated = {"dynamicProps":false,"dynamicItems":false};
 
 
 function validate52(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
@@ -7527,8 +7539,8 @@ if(_valid21){
 const _errs131 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate200(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate200.errors : vErrors.concat(validate200.errors);
+if(!(validate201(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate201.errors : vErrors.concat(validate201.errors);
 errors = vErrors.length;
 }
 }
@@ -7604,8 +7616,8 @@ if(_valid22){
 const _errs137 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate206(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate206.errors : vErrors.concat(validate206.errors);
+if(!(validate207(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate207.errors : vErrors.concat(validate207.errors);
 errors = vErrors.length;
 }
 }
@@ -7681,8 +7693,8 @@ if(_valid23){
 const _errs143 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate210(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate210.errors : vErrors.concat(validate210.errors);
+if(!(validate211(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate211.errors : vErrors.concat(validate211.errors);
 errors = vErrors.length;
 }
 }
@@ -7758,8 +7770,8 @@ if(_valid24){
 const _errs149 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate215(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate215.errors : vErrors.concat(validate215.errors);
+if(!(validate216(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate216.errors : vErrors.concat(validate216.errors);
 errors = vErrors.length;
 }
 }
@@ -7835,8 +7847,8 @@ if(_valid25){
 const _errs155 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate219(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate219.errors : vErrors.concat(validate219.errors);
+if(!(validate220(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate220.errors : vErrors.concat(validate220.errors);
 errors = vErrors.length;
 }
 }
@@ -7912,8 +7924,8 @@ if(_valid26){
 const _errs161 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate223(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate223.errors : vErrors.concat(validate223.errors);
+if(!(validate224(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate224.errors : vErrors.concat(validate224.errors);
 errors = vErrors.length;
 }
 }
@@ -7989,8 +8001,8 @@ if(_valid27){
 const _errs167 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate226(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate226.errors : vErrors.concat(validate226.errors);
+if(!(validate227(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate227.errors : vErrors.concat(validate227.errors);
 errors = vErrors.length;
 }
 }
@@ -8066,8 +8078,8 @@ if(_valid28){
 const _errs173 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate228(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate228.errors : vErrors.concat(validate228.errors);
+if(!(validate230(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate230.errors : vErrors.concat(validate230.errors);
 errors = vErrors.length;
 }
 }
@@ -8143,8 +8155,8 @@ if(_valid29){
 const _errs179 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate232(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate232.errors : vErrors.concat(validate232.errors);
+if(!(validate234(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate234.errors : vErrors.concat(validate234.errors);
 errors = vErrors.length;
 }
 }
@@ -8220,8 +8232,8 @@ if(_valid30){
 const _errs185 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate238(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate238.errors : vErrors.concat(validate238.errors);
+if(!(validate240(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate240.errors : vErrors.concat(validate240.errors);
 errors = vErrors.length;
 }
 }
@@ -8297,8 +8309,8 @@ if(_valid31){
 const _errs191 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate242(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate242.errors : vErrors.concat(validate242.errors);
+if(!(validate244(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate244.errors : vErrors.concat(validate244.errors);
 errors = vErrors.length;
 }
 }
@@ -8374,8 +8386,8 @@ if(_valid32){
 const _errs197 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate245(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate245.errors : vErrors.concat(validate245.errors);
+if(!(validate247(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate247.errors : vErrors.concat(validate247.errors);
 errors = vErrors.length;
 }
 }
@@ -8451,8 +8463,8 @@ if(_valid33){
 const _errs203 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate249(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate249.errors : vErrors.concat(validate249.errors);
+if(!(validate251(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate251.errors : vErrors.concat(validate251.errors);
 errors = vErrors.length;
 }
 }
@@ -8528,8 +8540,8 @@ if(_valid34){
 const _errs209 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate252(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate252.errors : vErrors.concat(validate252.errors);
+if(!(validate254(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate254.errors : vErrors.concat(validate254.errors);
 errors = vErrors.length;
 }
 }
@@ -8605,8 +8617,8 @@ if(_valid35){
 const _errs215 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate256(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate256.errors : vErrors.concat(validate256.errors);
+if(!(validate258(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate258.errors : vErrors.concat(validate258.errors);
 errors = vErrors.length;
 }
 }
@@ -8682,8 +8694,8 @@ if(_valid36){
 const _errs221 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate263(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate263.errors : vErrors.concat(validate263.errors);
+if(!(validate265(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate265.errors : vErrors.concat(validate265.errors);
 errors = vErrors.length;
 }
 }
@@ -8759,8 +8771,8 @@ if(_valid37){
 const _errs227 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate266(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate266.errors : vErrors.concat(validate266.errors);
+if(!(validate268(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate268.errors : vErrors.concat(validate268.errors);
 errors = vErrors.length;
 }
 }
@@ -8836,8 +8848,8 @@ if(_valid38){
 const _errs233 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate270(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate270.errors : vErrors.concat(validate270.errors);
+if(!(validate272(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate272.errors : vErrors.concat(validate272.errors);
 errors = vErrors.length;
 }
 }
@@ -8913,8 +8925,8 @@ if(_valid39){
 const _errs239 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate273(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate273.errors : vErrors.concat(validate273.errors);
+if(!(validate275(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate275.errors : vErrors.concat(validate275.errors);
 errors = vErrors.length;
 }
 }
@@ -8990,8 +9002,8 @@ if(_valid40){
 const _errs245 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate277(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate277.errors : vErrors.concat(validate277.errors);
+if(!(validate279(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate279.errors : vErrors.concat(validate279.errors);
 errors = vErrors.length;
 }
 }
@@ -9067,8 +9079,8 @@ if(_valid41){
 const _errs251 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate281(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate281.errors : vErrors.concat(validate281.errors);
+if(!(validate283(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate283.errors : vErrors.concat(validate283.errors);
 errors = vErrors.length;
 }
 }
@@ -9144,8 +9156,8 @@ if(_valid42){
 const _errs257 = errors;
 if(data && typeof data == "object" && !Array.isArray(data)){
 if(data.data !== undefined){
-if(!(validate283(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate283.errors : vErrors.concat(validate283.errors);
+if(!(validate285(data.data, {instancePath:instancePath+"/data",parentData:data,parentDataProperty:"data",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate285.errors : vErrors.concat(validate285.errors);
 errors = vErrors.length;
 }
 }
@@ -9327,14 +9339,14 @@ errors = vErrors.length;
 }
 }
 if(data.seq !== undefined){
-if(!(validate211(data.seq, {instancePath:instancePath+"/seq",parentData:data,parentDataProperty:"seq",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate211.errors : vErrors.concat(validate211.errors);
+if(!(validate212(data.seq, {instancePath:instancePath+"/seq",parentData:data,parentDataProperty:"seq",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate212.errors : vErrors.concat(validate212.errors);
 errors = vErrors.length;
 }
 }
 if(data.id !== undefined){
-if(!(validate288(data.id, {instancePath:instancePath+"/id",parentData:data,parentDataProperty:"id",rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate288.errors : vErrors.concat(validate288.errors);
+if(!(validate290(data.id, {instancePath:instancePath+"/id",parentData:data,parentDataProperty:"id",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate290.errors : vErrors.concat(validate290.errors);
 errors = vErrors.length;
 }
 }

@@ -176,7 +176,7 @@ export function dataOf(procedure: CompiledProcedure): Readonly<Record<RunEventTy
     disturbed: fc.record({ step, item, label: words }),
     restored: fc.record({ step, item }),
     'branch-taken': fc.record(
-      { step, to: step, exit, inputs: fc.constant([]), because: words, verdict: step },
+      { step, to: step, exit, inputs: fc.constant([]), because: words, verdict: step, reason: words },
       { requiredKeys: ['step', 'to', 'exit', 'inputs', 'because'] },
     ),
     'branch-overruled': fc.record({ step, computed: exit, chosen: exit, reason: words }),
@@ -185,7 +185,10 @@ export function dataOf(procedure: CompiledProcedure): Readonly<Record<RunEventTy
     'lead-called': fc.record({ step, question: words }),
     released: fc.record({ step, evidence: words }),
     'set-aside': fc.record({ reason: words }),
-    resumed: fc.record({ from: fc.constantFrom('set-aside', 'stopped', 'reload', 'lead-called') }),
+    resumed: fc.record(
+      { from: fc.constantFrom('set-aside', 'stopped', 'reload', 'lead-called'), reason: words },
+      { requiredKeys: ['from'] },
+    ),
     'handed-over': fc.record({ to: words, reason: words }),
     'limit-exceeded': fc.record({ step, limit: name, name, figure }),
     'alert-raised': fc.record({ step, text: words }),

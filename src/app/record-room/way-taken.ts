@@ -15,6 +15,9 @@ import { isPlainWay } from './story-rows';
         <span class="because">{{ line().way.because }}</span>
       </p>
     }
+    @if (line().way.reason; as reason) {
+      <p class="because">Why: {{ reason }}</p>
+    }
     @if (line().verdict; as step) {
       <p class="because">Heads for the finding: {{ step.title }}</p>
     }

@@ -70,7 +70,7 @@ describe('crankcase valve seal, warm half, coarse gauge and coarse bus: too clos
   it('writes it up', () => {
     expect(writeUpTexts(walk)).toEqual({
       concern: [
-        'Merrow Heron 1.6 turbo, silver, RO 4417, 84210 km: Whistle at idle, hesitates under load.',
+        'Merrow Heron 1.6 turbo, silver, RO 4417, 84,210 km: Whistle at idle, hesitates under load.',
         'Trouble codes before the test: P0068 stored (step 3).',
       ].join(' '),
       cause: [

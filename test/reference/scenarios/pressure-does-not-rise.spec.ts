@@ -44,12 +44,12 @@ describe('crankcase valve seal, cold half: the pressure cannot be raised past th
   it('writes it up', () => {
     expect(writeUpTexts(walk)).toEqual({
       concern: [
-        'Merrow Heron 1.6 turbo, silver, RO 4417, 84210 km: Whistle at idle, hesitates under load.',
+        'Merrow Heron 1.6 turbo, silver, RO 4417, 84,210 km: Whistle at idle, hesitates under load.',
         'Trouble codes before the test: P0068 stored (step 3).',
       ].join(' '),
       cause: [
         'Not completed: whether the manifold valve seals is not known.',
-        'The test was ended before it had its finding; the record says where and why.',
+        'The test ended at step 13, Where the air comes out: the compressor runs dry.',
         'Key on and engine off, manifold pressure was 94.2 ± 0.6 kPa (step 5).',
         'Key on and engine off, boost pressure was 93.9 ± 0.6 kPa (step 6).',
         'The pressure had been raised to 4.0 ± 0.3 kPa (step 11) above the air of the place.',

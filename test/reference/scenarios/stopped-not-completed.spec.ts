@@ -16,8 +16,8 @@ describe('crankcase valve seal, cold half: stopped while the pressure is raised'
         '11',
         {
           commands: [
-            { do: 'stop', reason: 'the plug moved' },
-            { do: 'leave-stop', how: 'not-completed' },
+            { do: 'stop', reason: '' },
+            { do: 'leave-stop', how: 'not-completed', reason: 'the plug moved' },
           ],
         },
       ],
@@ -46,12 +46,12 @@ describe('crankcase valve seal, cold half: stopped while the pressure is raised'
   it('writes it up', () => {
     expect(writeUpTexts(walk)).toEqual({
       concern: [
-        'Merrow Heron 1.6 turbo, silver, RO 4417, 84210 km: Whistle at idle, hesitates under load.',
+        'Merrow Heron 1.6 turbo, silver, RO 4417, 84,210 km: Whistle at idle, hesitates under load.',
         'Trouble codes before the test: P0068 stored (step 3).',
       ].join(' '),
       cause: [
         'Not completed: whether the manifold valve seals is not known.',
-        'The test was ended before it had its finding; the record says where and why.',
+        'The test was stopped at step 11, Raise slowly and listen: the plug moved.',
         'Key on and engine off, manifold pressure was 94.2 ± 0.6 kPa (step 5).',
         'Key on and engine off, boost pressure was 93.9 ± 0.6 kPa (step 6).',
       ].join(' '),

@@ -59,7 +59,7 @@ describe('crankcase valve seal, warm half: the valve seals', () => {
   it('writes it up', () => {
     expect(writeUpTexts(walk)).toEqual({
       concern: [
-        'Merrow Heron 1.6 turbo, silver, RO 4417, 84210 km: Whistle at idle, hesitates under load.',
+        'Merrow Heron 1.6 turbo, silver, RO 4417, 84,210 km: Whistle at idle, hesitates under load.',
         'Trouble codes before the test: P0068 stored (step 3).',
       ].join(' '),
       cause: [
