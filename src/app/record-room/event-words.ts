@@ -1,5 +1,5 @@
 import type { CompiledProcedure, Step } from '../../../procedures/document';
-import type { EventOf, RunEvent } from '../../../procedures/engine';
+import { shownUnit, type EventOf, type RunEvent, type RunState } from '../../../procedures/engine';
 import { clockTime } from '../core/time-words';
 import type { Tone } from './story-line';
 
@@ -16,6 +16,15 @@ const plain = (what: string, words?: string): EventWords => ({ what, words, tone
 const live = (what: string, words?: string): EventWords => ({ what, words, tone: 'live' });
 const out = (what: string, words?: string): EventWords => ({ what, words, tone: 'out' });
 
+/** Which limit a person acknowledged, by the state before they did. */
+export function acknowledged(procedure: CompiledProcedure, before: RunState | undefined): EventWords {
+  const alarm = before?.alarm;
+  if (alarm === undefined) return plain('Acknowledged');
+  const { text, unit } = alarm.figure;
+  const number = procedure.step(alarm.step)?.number ?? alarm.step;
+  return plain('Acknowledged', `the limit exceeded at step ${number}, ${text} ${shownUnit(unit)}: ${alarm.then}`);
+}
+
 /**
  * Says what an event was, for those that the story tells in words: place-keeping marks, readings, series, codes and
  * photos and ways have lines of their own and give undefined.
@@ -29,6 +38,7 @@ export function sayEvent(procedure: CompiledProcedure, event: RunEvent): EventWo
     case 'codes-recorded':
     case 'photo-attached':
     case 'branch-taken':
+    case 'alert-acknowledged':
       return undefined;
     case 'opened':
       return sayOpened(event);
@@ -71,15 +81,13 @@ export function sayEvent(procedure: CompiledProcedure, event: RunEvent): EventWo
     case 'set-aside':
       return live('Set aside', event.data.reason);
     case 'resumed':
-      return plain(`Gone on after ${resumedAfter[event.data.from]}`);
+      return plain(`Gone on after ${resumedAfter[event.data.from]}`, event.data.reason);
     case 'handed-over':
       return plain(`Handed over to ${event.data.to}`, event.data.reason);
     case 'limit-exceeded':
       return sayLimit(procedure, event);
     case 'alert-raised':
       return live('Alert', event.data.text);
-    case 'alert-acknowledged':
-      return plain('Acknowledged', `what event ${event.data.seq} said`);
     case 'stopped':
       return out('Stopped, supply off', event.data.reason);
     case 'version-notice-answered':

@@ -1,8 +1,10 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import type { Step } from '../../../procedures/document';
 import { RampPlot } from '../shared/ramp-plot';
+import { marksShown } from './marks-shown';
 import type { SeriesLoad } from './series-load';
 import type { SeriesLine } from './story-line';
+import { channelLabels } from './typed-points';
 
 /** A kept series: where it came from, the ramp with its marks, and what its reader could not make sense of. */
 @Component({
@@ -33,15 +35,7 @@ export class SeriesView {
     const from = fileName ?? (source === 'typed' ? 'typed points' : source === 'simulated' ? 'simulated' : 'a file');
     return `${samples} samples over ${Math.round(durationS)} s, ${from}`;
   });
-  protected readonly marks = computed(() => {
-    const { marks } = this.line();
-    const begins = marks['noise-begins'];
-    const stops = marks['noise-stops'];
-    return [
-      ...(begins === undefined ? [] : [{ label: 'noise begins', timeS: begins.timeS, isMain: false }]),
-      ...(stops === undefined ? [] : [{ label: 'noise stops', timeS: stops.timeS, isMain: true }]),
-    ];
-  });
+  protected readonly marks = computed(() => marksShown(this.line().marks));
   /** What the lines are, in words: the drawing alone tells them apart by dashes. */
   protected readonly legend = computed(() => {
     const names = this.names();
@@ -55,11 +49,7 @@ export class SeriesView {
     const sound = channels.some(({ name }) => name === 'sound') ? ['below them: the level of the sound'] : [];
     return lines.length === 0 ? '' : [`${capital(lines.join(', '))}${above}`, ...sound].join('; ');
   });
-  protected readonly names = computed(() => {
-    const step = this.step();
-    const channels = step?.kind === 'listen' ? step.channels : [];
-    return Object.fromEntries(channels.map((channel) => [channel.name, channel.label]));
-  });
+  protected readonly names = computed(() => channelLabels(this.step()));
 }
 
 const dashes = ['solid', 'dashed', 'dotted'];

@@ -1,4 +1,5 @@
-import type { Step } from '../../../procedures/document';
+import type { UnitName } from '../../../procedures/calculations/for-a-run';
+import type { Channel, Step } from '../../../procedures/document';
 import type { NamedValue, RunEventData, RunEventType, SeriesState, TroubleCodeEntry } from '../../../procedures/engine';
 import type { ShownResult } from '../shared/result-words';
 
@@ -24,7 +25,7 @@ export interface Passage {
   readonly lines: readonly StoryLine[];
 }
 
-export type StoryLine = ValueLine | SeriesLine | PhotoLine | CodesLine | WayLine | SaidLine;
+export type StoryLine = ValueLine | SeriesLine | PointsLine | PhotoLine | CodesLine | WayLine | SaidLine;
 
 interface LineBase {
   readonly seq: number;
@@ -46,6 +47,25 @@ export interface SeriesLine extends LineBase {
   readonly kind: 'series';
   readonly record: RunEventData['series-recorded'];
   readonly marks: SeriesState['marks'];
+}
+
+/** Points that were typed into a ramp and are in no kept series: they stay to be read, and do not count. */
+export interface PointsLine extends LineBase {
+  readonly kind: 'points';
+  readonly points: readonly TypedPoint[];
+  /** Those placed in the same claim. */
+  readonly marks: SeriesState['marks'];
+}
+
+export interface TypedPoint {
+  readonly seq: number;
+  /** Seconds from the start of the ramp. */
+  readonly timeS: number;
+  /** The channel's name. */
+  readonly channel: Channel['name'];
+  readonly text: string;
+  readonly unit: UnitName;
+  readonly isTakenBack: boolean;
 }
 
 /** A photo was kept. */

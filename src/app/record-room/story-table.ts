@@ -5,6 +5,7 @@ import { PassageTitle } from './passage-title';
 import { clockTime } from '../core/time-words';
 import type { PhotoLoad } from './photo-load';
 import { PhotoView } from './photo-view';
+import { PointsView } from './points-view';
 import type { SeriesLoad } from './series-load';
 import { SeriesView } from './series-view';
 import type { Passage } from './story-line';
@@ -14,7 +15,7 @@ import { WayTaken } from './way-taken';
 /** A run as it happened: a table with a body for each claim of a step. */
 @Component({
   selector: 'bay-story-table',
-  imports: [BandGauge, CodesCompared, PassageTitle, PhotoView, SeriesView, WayTaken],
+  imports: [BandGauge, CodesCompared, PassageTitle, PhotoView, PointsView, SeriesView, WayTaken],
   templateUrl: './story-table.html',
   styleUrl: './story-table.css',
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -8,7 +8,8 @@ import {
   type RunHeader,
   type RunState,
 } from '../../../procedures/engine';
-import { sayEvent } from './event-words';
+import { acknowledged, sayEvent } from './event-words';
+import { noPoints, pointsLine, withEvent, type GatheredPoints } from './typed-points';
 import type { Passage, SaidLine, Story, StoryLine, ValueLine } from './story-line';
 
 /** A run retold, with the state that the retelling ended in. */
@@ -36,7 +37,10 @@ export function tellStory(procedure: CompiledProcedure, header: RunHeader, event
       ...linesOf(procedure, event, state, result.state),
       ...endedReadings(event, state, result.state),
     );
-    if (passage !== undefined) refreshMarks(passage, result.state);
+    if (passage !== undefined) {
+      passage.gathered = withEvent(passage.gathered, event);
+      refreshMarks(passage, result.state);
+    }
     state = result.state;
   }
   return { story: { passages: close(procedure, passages, state) }, state };
@@ -47,6 +51,7 @@ interface OpenPassage {
   readonly at: number;
   readonly step: Step | undefined;
   lines: StoryLine[];
+  gathered: GatheredPoints;
 }
 
 function begins(event: RunEvent): boolean {
@@ -56,7 +61,13 @@ function begins(event: RunEvent): boolean {
 function open(procedure: CompiledProcedure, event: RunEvent): OpenPassage {
   const isOfStep = event.type === 'step-claimed' || event.type === 'branch-overruled';
   const id = isOfStep ? event.data.step : event.type === 'finding-reached' ? event.data.finding : undefined;
-  return { seq: event.seq, at: event.at, step: id === undefined ? undefined : procedure.step(id), lines: [] };
+  return {
+    seq: event.seq,
+    at: event.at,
+    step: id === undefined ? undefined : procedure.step(id),
+    lines: [],
+    gathered: noPoints,
+  };
 }
 
 function linesOf(
@@ -107,6 +118,8 @@ function linesOf(
         ...foundThere(procedure, event, before),
         ...valuesOf(after, event),
       ];
+    case 'alert-acknowledged':
+      return [{ kind: 'said', seq, at, type: event.type, ...acknowledged(procedure, before) }];
     default: {
       const said = sayEvent(procedure, event);
       const values = valuesOf(after, event);
@@ -187,12 +200,20 @@ function close(
   const later = new Map<string, number>();
   const closed: Passage[] = [];
   for (const passage of [...passages].reverse()) {
-    const lines = [...passage.lines]
+    const lines = withPoints(passage)
       .reverse()
       .map((line) => (line.kind === 'value' ? withTakenAgain(line, later) : line));
     closed.push(closePassage(procedure, passage, lines.reverse(), state));
   }
   return closed.reverse();
+}
+
+/** The lines, with what was typed and does not count where it began. */
+function withPoints({ lines, gathered }: OpenPassage): StoryLine[] {
+  const line = pointsLine(gathered, lines);
+  if (line === undefined) return [...lines];
+  const before = lines.filter(({ seq }) => seq < line.seq);
+  return [...before, line, ...lines.slice(before.length)];
 }
 
 function withTakenAgain(line: ValueLine, later: Map<string, number>): ValueLine {
