@@ -18,6 +18,7 @@ export { fitLine, fitRobustLine, type LineFit } from './fit';
 export { type RampSample } from './ramp-series';
 export { type LogChannel, type LogHints, type LogProblem, type ScanLog } from './scan-log';
 export { sealPointFromMarks, type SealMarks } from './seal-marks';
+export { findNoiseBegin } from './noise-begin';
 export { findSealPoint } from './seal-point';
 export { type NoSealReason, type SealOptions, type SealPoint } from './seal-result';
 export { steepestRise, type SteepestRise } from './steepest-rise';

@@ -2,6 +2,7 @@ import {
   convert,
   differenceToBase,
   expandedUncertainty,
+  findNoiseBegin,
   findSealPoint,
   isUnit,
   sealPointFromMarks,
@@ -107,6 +108,11 @@ export function suggestMark(procedure: CompiledProcedure, state: RunState, serie
     timeS: seal.timeS,
     pressureText: figureText(seal.aboveStationKpa * 1000, seal.uncertaintyKpa * 1000, 'kPa').text,
   };
+}
+
+/** Where the level leaves its background, by the calculation; undefined where it does not tell. */
+export function suggestBegin(state: RunState, series: Series): number | undefined {
+  return findNoiseBegin(samplesOf(series, stationKpaOf(state, series)));
 }
 
 export function currentSeriesStep(procedure: CompiledProcedure, state: RunState): SeriesStep | undefined {

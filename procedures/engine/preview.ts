@@ -2,7 +2,7 @@ import type { CompiledProcedure, Step } from '../document';
 import { decide } from './decide';
 import { Drafting } from './drafting';
 import { own } from './environment';
-import { analyseListening, currentSeriesStep, suggestMark, type MarkSuggestion } from './listening';
+import { analyseListening, currentSeriesStep, suggestBegin, suggestMark, type MarkSuggestion } from './listening';
 import { computedValue } from './measure-quantity';
 import type { RunCommand } from './run-command';
 import type { RunEventData, RunHeader } from './run-event';
@@ -52,6 +52,8 @@ export interface ListeningPreview {
   readonly values: readonly NamedValue[];
   readonly problems: readonly string[];
   readonly suggestion: MarkSuggestion;
+  /** A place for the mark `noise begins`, seconds in the series; undefined where the level does not tell it. */
+  readonly suggestedBeginS: number | undefined;
 }
 
 /** What the series and its marks give as they stand. Undefined where the current step does not listen. */
@@ -67,7 +69,12 @@ export function previewListening(
   const values = found.map(({ quantity, figure }) =>
     computedValue(procedure, state, quantity, { text: figure.text, uncertainty: figure.uncertaintyText }, provenance),
   );
-  return { values, problems, suggestion: suggestMark(procedure, state, series) };
+  return {
+    values,
+    problems,
+    suggestion: suggestMark(procedure, state, series),
+    suggestedBeginS: suggestBegin(state, series),
+  };
 }
 
 /** A way that the run may take next, for the Route. */

@@ -1,23 +1,38 @@
-import { ChangeDetectionStrategy, Component, computed, effect, input, linkedSignal, output } from '@angular/core';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  effect,
+  input,
+  linkedSignal,
+  output,
+  signal,
+} from '@angular/core';
 import { previewListening, type RunCommand, type Series } from '../../../../procedures/engine';
 import type { PlotMark } from '../../shared/ramp-plot-options';
 import { BigAction } from '../frame/big-action';
-import { JudgedLine } from '../readings/judged-line';
 import { ReadingDisplay } from '../readings/reading-display';
 import type { RunProblem, RunView } from '../run-view';
 import type { StepOf } from '../step-entry';
+import { FoundDisplay } from './found-display';
 import type { ListenDone } from './listen-requests';
 import { SureButton } from './sure-button';
-import { valueAt, withMark } from './live-series';
+import { valueAt, withMark, type MarkName } from './live-series';
 import { plotMarks } from './plot-marks';
 
+type Places = Readonly<Record<MarkName, number | undefined>>;
+
+const names: readonly MarkName[] = ['noise-begins', 'noise-stops'];
+/** Noise stops lies after noise begins, by a sample of a quick log at least. */
+const apartS = 0.05;
+
 /**
- * Marking a series that came as a file: the calculation offers the moment at which the level falls, a person accepts or
- * moves it. Nothing is recorded while the mark is moved.
+ * Marking a series that came as a file: the calculation offers the moments at which the level rises and falls, a person
+ * accepts or moves them. Nothing is recorded while a mark is moved.
  */
 @Component({
   selector: 'bay-mark-controls',
-  imports: [BigAction, JudgedLine, ReadingDisplay, SureButton],
+  imports: [BigAction, FoundDisplay, ReadingDisplay, SureButton],
   templateUrl: './mark-controls.html',
   styleUrl: './listen-controls.css',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -33,27 +48,45 @@ export class MarkControls {
   /** The marks as they are being moved, for the plot. */
   readonly movedMarks = output<readonly PlotMark[] | undefined>();
 
-  private readonly recorded = computed(() => this.run().state.series[this.step().name]?.marks['noise-stops']?.timeS);
-  protected readonly suggestion = computed(() => {
+  protected readonly choices = [
+    { mark: 'noise-begins', label: 'Noise begins' },
+    { mark: 'noise-stops', label: 'Noise stops' },
+  ] as const;
+  /** The mark that is moved. */
+  protected readonly chosen = signal<MarkName>('noise-stops');
+
+  private readonly recorded = computed<Places>(() => {
+    const marks = this.run().state.series[this.step().name]?.marks;
+    return { 'noise-begins': marks?.['noise-begins']?.timeS, 'noise-stops': marks?.['noise-stops']?.timeS };
+  });
+  private readonly offered = computed(() => {
     const { procedure, state } = this.run();
-    return previewListening(procedure, state, this.series())?.suggestion;
+    return previewListening(procedure, state, this.series());
   });
-  private readonly start = computed(() => {
-    const suggestion = this.suggestion();
-    return this.recorded() ?? (suggestion?.ok === true ? suggestion.timeS : undefined);
+  private readonly suggested = computed<Places>(() => {
+    const suggestion = this.offered()?.suggestion;
+    const stops = suggestion?.ok === true ? suggestion.timeS : undefined;
+    const begins = this.offered()?.suggestedBeginS;
+    const isBefore = begins !== undefined && (stops === undefined || begins < stops);
+    return { 'noise-begins': isBefore ? begins : undefined, 'noise-stops': stops };
   });
-  /** Where the mark stands now; undefined while there is none. */
-  protected readonly at = linkedSignal(() => this.start());
-  /** Whether the mark stands where the calculation put it. */
-  protected readonly isSuggested = computed(() => {
-    const suggestion = this.suggestion();
-    return suggestion?.ok === true && this.at() === suggestion.timeS;
+  /** Where the marks stand now; undefined while there is none. */
+  protected readonly places = linkedSignal<Places>(() => {
+    const [recorded, suggested] = [this.recorded(), this.suggested()];
+    const begins = recorded['noise-begins'] ?? suggested['noise-begins'];
+    const stops = recorded['noise-stops'] ?? suggested['noise-stops'];
+    return { 'noise-begins': begins, 'noise-stops': stops };
   });
+  protected readonly at = computed(() => this.places()[this.chosen()]);
+  protected readonly stopsAt = computed(() => this.places()['noise-stops']);
+  protected readonly hasAny = computed(() => names.some((name) => this.places()[name] !== undefined));
   protected readonly preview = computed(() => {
-    const at = this.at();
-    if (at === undefined || this.series().timeS.length < 3) return undefined;
+    if (this.stopsAt() === undefined || this.series().timeS.length < 3) return undefined;
     const { procedure, state } = this.run();
-    const marked = withMark(state, this.step().name, 'noise-stops', at, this.isSuggested() ? 'suggested' : 'tap');
+    const marked = this.standing().reduce(
+      (marks, { mark, timeS, by }) => withMark(marks, this.step().name, mark, timeS, by),
+      state,
+    );
     return previewListening(procedure, marked, this.series());
   });
   protected readonly found = computed(() => this.preview()?.values.find(({ judgement }) => judgement !== undefined));
@@ -63,55 +96,68 @@ export class MarkControls {
     return value === undefined ? '' : value.toFixed(1);
   });
   protected readonly unit = computed(() => this.series().channels.find(({ name }) => name === 'gauge')?.unit ?? '');
+  protected readonly time = computed(() => {
+    const at = this.at();
+    return at === undefined ? 'no mark yet' : `at ${at.toFixed(1)} s`;
+  });
   protected readonly remark = computed(() => {
-    const suggestion = this.suggestion();
-    if (this.at() === undefined) {
+    const suggestion = this.offered()?.suggestion;
+    if (this.stopsAt() === undefined) {
       const why = suggestion !== undefined && !suggestion.ok ? suggestion.reason : '';
       return `${why} Move the mark to where the noise stopped, or say below that there was none.`.trim();
     }
-    return this.preview()?.problems[0] ?? (this.isSuggested() ? 'Found where the level falls for good.' : '');
+    return this.preview()?.problems[0] ?? '';
   });
-  protected readonly notes = computed(() => {
-    const at = this.at();
-    return [at === undefined ? 'no mark yet' : `at ${at.toFixed(1)} s`];
+  protected readonly atMark = computed(() => {
+    const gauge = this.gaugeAt() === '' ? this.time() : `${this.gaugeAt()} ${this.unit()}, ${this.time()}`;
+    const isOffered = this.at() !== undefined && this.at() === this.suggested()[this.chosen()];
+    return `Gauge at the mark ${gauge}${isOffered ? ', as offered' : ''}`;
   });
+
+  /** The marks that stand, and whether each is where the calculation put it. */
+  private readonly standing = computed(() =>
+    names.flatMap((mark) => {
+      const timeS = this.places()[mark];
+      if (timeS === undefined) return [];
+      return [{ mark, timeS, by: timeS === this.suggested()[mark] ? ('suggested' as const) : ('tap' as const) }];
+    }),
+  );
 
   constructor() {
     // Towards the plot on the other side of the step.
     effect(() => {
-      const at = this.at();
-      const label = this.found()?.text === undefined ? undefined : `noise stops: ${this.found()?.text} ${this.unit()}`;
+      const found = this.found()?.text;
       this.movedMarks.emit(
-        plotMarks(
-          this.run().state,
-          this.step(),
-          at === undefined ? undefined : { mark: 'noise-stops', timeS: at, ...(label === undefined ? {} : { label }) },
-        ),
+        plotMarks(this.run().state, this.step(), {
+          'noise-begins': { timeS: this.places()['noise-begins'] },
+          'noise-stops': {
+            timeS: this.stopsAt(),
+            label: found === undefined ? undefined : `noise stops: ${found} ${this.unit()}`,
+          },
+        }),
       );
     });
   }
 
   protected move(byS: number): void {
     const { timeS } = this.series();
-    const first = (timeS[0] ?? 0) + 1;
-    const last = timeS.at(-1) ?? 0;
-    const from = this.at() ?? (first + last) / 2;
-    this.at.set(Math.round(Math.min(last, Math.max(first, from + byS)) * 100) / 100);
+    const [first, last] = [timeS[0] ?? 0, timeS.at(-1) ?? 0];
+    const [begins, stops] = [this.places()['noise-begins'], this.stopsAt()];
+    const isBegin = this.chosen() === 'noise-begins';
+    const least = isBegin ? first : Math.max(first + 1, (begins ?? first) + apartS);
+    const most = isBegin ? Math.min(last, (stops ?? last) - apartS) : last;
+    const from = this.at() ?? (first + 1 + last) / 2;
+    this.place(Math.round(Math.min(most, Math.max(least, from + byS)) * 100) / 100);
   }
 
   protected takeAway(): void {
-    if (this.recorded() !== undefined) this.commanded.emit({ do: 'unmark', mark: 'noise-stops' });
-    this.at.set(undefined);
+    const mark = this.chosen();
+    if (this.recorded()[mark] !== undefined) this.commanded.emit({ do: 'unmark', mark });
+    this.place(undefined);
   }
 
   protected keep(): void {
-    const timeS = this.at();
-    if (timeS === undefined) return;
-    const by = this.isSuggested() ? 'suggested' : 'tap';
-    this.finished.emit({
-      series: this.series(),
-      marks: timeS === this.recorded() ? [] : [{ mark: 'noise-stops', timeS, by }],
-    });
+    if (this.stopsAt() !== undefined) this.finish(this.standing());
   }
 
   /** The step once more, for another log; the one that is left behind stays in the record. */
@@ -120,11 +166,21 @@ export class MarkControls {
   }
 
   protected finishSilent(): void {
-    this.finished.emit({ series: this.series(), marks: [] });
+    this.finish([]);
   }
 
   protected finishNeverStopped(): void {
-    const timeS = this.series().timeS[0] ?? 0;
-    this.finished.emit({ series: this.series(), marks: [{ mark: 'noise-begins', timeS, by: 'tap' }] });
+    const begins = this.standing().filter(({ mark }) => mark === 'noise-begins');
+    const fromStart = { mark: 'noise-begins', timeS: this.series().timeS[0] ?? 0, by: 'tap' } as const;
+    this.finish(begins.length > 0 ? begins : [fromStart]);
+  }
+
+  private finish(marks: ListenDone['marks']): void {
+    const isNew = marks.filter(({ mark, timeS }) => timeS !== this.recorded()[mark]);
+    this.finished.emit({ series: this.series(), marks: isNew });
+  }
+
+  private place(timeS: number | undefined): void {
+    this.places.update((places) => ({ ...places, [this.chosen()]: timeS }));
   }
 }

@@ -5,17 +5,18 @@ import type { MarkName } from './live-series';
 
 const words: Readonly<Record<MarkName, string>> = { 'noise-begins': 'noise begins', 'noise-stops': 'noise stops' };
 
-/** The step's marks for the plot, with a mark that is being moved in its new place. */
-export function plotMarks(
-  state: RunState,
-  step: SeriesStep,
-  moved?: { readonly mark: MarkName; readonly timeS: number; readonly label?: string },
-): readonly PlotMark[] {
+/** Marks that are being moved: where they stand now, and what is said there; one without a time is away. */
+export type MovedMarks = Partial<
+  Record<MarkName, { readonly timeS: number | undefined; readonly label?: string | undefined }>
+>;
+
+/** The step's marks for the plot, with those that are being moved in their new places. */
+export function plotMarks(state: RunState, step: SeriesStep, moved: MovedMarks = {}): readonly PlotMark[] {
   const marks = state.series[step.name]?.marks ?? {};
   return (['noise-begins', 'noise-stops'] as const).flatMap((mark) => {
-    const timeS = moved?.mark === mark ? moved.timeS : marks[mark]?.timeS;
+    const change = moved[mark];
+    const timeS = change === undefined ? marks[mark]?.timeS : change.timeS;
     if (timeS === undefined) return [];
-    const label = (moved?.mark === mark ? moved.label : undefined) ?? words[mark];
-    return [{ label, timeS, isMain: mark === 'noise-stops' }];
+    return [{ label: change?.label ?? words[mark], timeS, isMain: mark === 'noise-stops' }];
   });
 }
