@@ -1,6 +1,6 @@
 import type { Page } from '@playwright/test';
-import { walkTo, type Answers } from './support/at-the-car';
-import { bringChecker, measuredControls, sideways, violations } from './support/measured';
+import { acknowledge, shownStep, tap, walkTo, type Answers } from './support/at-the-car';
+import { bringChecker, measuredControls, sideways, troubleWithStop, violations } from './support/measured';
 import { expect, test } from './support/test';
 import { openVisit, signIn } from './support/visits';
 import { rowsOf } from './support/what-is-kept';
@@ -71,4 +71,91 @@ test('each kind of screen fits a tablet both ways and a phone, breaks no rule of
   await page.goto('/records');
   await expect(page.locator('bay-record-table').getByText('4490').first()).toBeVisible();
   await checkScreen(page, 'Record room');
+});
+
+const coldMorning: Answers = {
+  ...gear,
+  read: { '2e': ['14', '13'], '4': ['1014'], '5': ['94.0'], '6': ['93.7'], '15b': ['0.0'] },
+  way: { '4': 'Altimeter setting' },
+  codes: { '3': ['P0068 stored'], '18a': ['P0068 stored'] },
+  choose: { '13': ['Only at the manifold valve'] },
+};
+
+/** *Stop, supply off* can be tapped all over at each size, whatever stands beside it or is laid over the step. */
+async function checkStop(page: Page, name: string): Promise<void> {
+  for (const size of sizes) {
+    await page.setViewportSize(size);
+    expect.soft(await troubleWithStop(page), `Stop: ${name} at ${size.width} x ${size.height}`).toEqual([]);
+    expect.soft(await sideways(page), `${name} at ${size.width} x ${size.height}`).toEqual([]);
+  }
+  await page.setViewportSize(tablet);
+}
+
+/** Types the gauge's figure on the pad. */
+async function typePoint(page: Page, digits: string): Promise<void> {
+  await tap(page.getByRole('button', { name: 'Type it' }));
+  for (const digit of digits) await page.keyboard.press(digit === '.' ? 'Period' : digit);
+  await tap(page.getByRole('button', { name: /Record\s+the point/ }));
+}
+
+test('Stop can be tapped all over while listening, over a limit, on coming back and at the finding', async ({
+  page,
+}) => {
+  test.setTimeout(180_000);
+  await page.emulateMedia({ reducedMotion: 'reduce' });
+  await signIn(page, 'adeyemi');
+  await openVisit(page, {
+    VIN: '7ZZFD9HA0NP310446',
+    Make: 'Merrow',
+    Model: 'Packhorse',
+    'Repair order (RO)': '4491',
+    Odometer: '152310',
+    "Concern, in the customer's words": 'Whistle at idle',
+  });
+  await page.getByRole('button', { name: 'Keep the visit' }).click();
+  await page.getByRole('button', { name: /Start the cold half/ }).click();
+  await walkTo(page, '11', coldMorning);
+  await checkStop(page, 'caution');
+  await acknowledge(page, (await shownStep(page)).cautions?.length ?? 0);
+  await checkStop(page, 'listen, at zero');
+
+  const begin = page.getByRole('button', { name: /Gauge at zero/ });
+  await tap(begin);
+  await checkStop(page, 'listen');
+  await tap(page.getByRole('button', { name: 'Type it' }));
+  await checkStop(page, 'listen, the pad');
+  await tap(page.getByRole('button', { name: 'Back to the steps' }));
+  await page.reload();
+  await expect(page.getByRole('button', { name: /Go on with step 11/ })).toBeVisible();
+  await checkStop(page, 'resume');
+  await tap(page.getByRole('button', { name: /Go on with step 11/ }));
+
+  // On the stop itself there is none any more: both ways on are whole instead.
+  await page.getByRole('button', { name: 'Stop, supply off' }).click();
+  for (const size of sizes) {
+    await page.setViewportSize(size);
+    for (const name of [/^Back to step 11/, /^End as not completed/]) {
+      await expect.soft(page.getByRole('button', { name })).toBeInViewport({ ratio: 1 });
+    }
+  }
+  await page.setViewportSize(tablet);
+  await tap(page.getByRole('button', { name: /^Back to step 11/ }));
+
+  await typePoint(page, '34');
+  await tap(page.getByRole('button', { name: '+ 1', exact: true }));
+  await expect(page.getByRole('heading', { name: 'Limit exceeded' })).toBeVisible();
+  await checkStop(page, 'limit');
+  await tap(page.getByRole('button', { name: /It is done: back to step 11/ }));
+
+  // The ramp begins anew by itself.
+  await expect(begin).toBeVisible();
+  await expect(page.getByRole('button', { name: '+ 1', exact: true })).toBeHidden();
+  await tap(begin);
+  for (const digits of ['1', '2', '3']) await typePoint(page, digits);
+  await tap(page.getByRole('button', { name: 'It never stopped' }));
+  await tap(page.getByRole('button', { name: 'Sure? It never stopped' }));
+  await expect(page.locator('bay-listen-entry')).toBeHidden();
+  await walkTo(page, 'the end', coldMorning);
+  await expect(page.locator('bay-finding-entry')).toBeVisible();
+  await checkStop(page, 'finding');
 });

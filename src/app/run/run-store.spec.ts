@@ -1,6 +1,6 @@
 import 'fake-indexeddb/auto';
 import { TestBed } from '@angular/core/testing';
-import { openRun, type RunHeader } from '../../../procedures/engine';
+import { openRun, type EventDraft, type RunHeader } from '../../../procedures/engine';
 import { openingFacts } from '../../../procedures/engine/testing/run-walk';
 import { contentHash } from '../../../procedures/engine';
 import { OfflineStore } from '../core/offline-store';
@@ -15,7 +15,8 @@ import {
 } from '../core/testing/core-for-specs';
 import { RunStore } from './run-store';
 import { tapGuardMs } from './tap-guard';
-import { instruments, valveSeal } from './testing/run-for-specs';
+import { RampQueue } from './ramp-queue';
+import { instruments, valveSeal, walkedTo } from './testing/run-for-specs';
 
 const header: RunHeader = {
   runId: '018f0000-0000-7000-8000-00000000aaaa',
@@ -195,5 +196,63 @@ describe('RunStore', () => {
     const instrument = instruments['gauge'];
     if (instrument === undefined) throw new Error('no gauge');
     expect(await store.act({ do: 'choose-gear', role: 'gauge', instrument }, { isFollowUp: true })).toBe(true);
+  });
+
+  describe('at a ramp', () => {
+    const at = (timeS: number, text: string) => ({ do: 'record', name: 'gauge', text, unit: 'kPa', timeS }) as const;
+
+    /** A run that stands at the ramp, gone on with. */
+    async function atRamp() {
+      const run = await openedRun();
+      const rampHeader = { ...header, runId: '018f0000-0000-7000-8000-00000000cccc' };
+      const { events } = walkedTo('raise-and-listen', { header: rampHeader });
+      await run.journal.open(
+        rampHeader,
+        events.map(({ type, data }) => ({ type, data }) as EventDraft),
+      );
+      run.journal.release(rampHeader.runId);
+      await run.store.load(rampHeader.runId);
+      run.time.pass(tapGuardMs);
+      expect(await run.store.act({ do: 'resume' })).toBe(true);
+      run.time.pass(tapGuardMs);
+      return run;
+    }
+
+    it('writes what is tapped while a point is being written, in its order, and nothing is disabled meanwhile', async () => {
+      const { store, time } = await atRamp();
+      const queue = TestBed.inject(RampQueue);
+      const first = store.act(at(0, '0.0'));
+      expect(store.busy()).toBe('record');
+      expect(store.isBusy()).toBe(false);
+      time.pass(10);
+      const mark = store.act({ do: 'mark', mark: 'noise-begins', timeS: 0.1, by: 'tap' });
+      const second = store.act(at(0.25, '0.5'));
+      expect(queue.commands()).toHaveLength(3);
+      expect(await Promise.all([first, mark, second])).toEqual([true, true, true]);
+      expect(queue.commands()).toEqual([]);
+      expect(store.view()?.events.slice(-3)).toMatchObject([
+        { type: 'reading-recorded', data: { timeS: 0 } },
+        { type: 'mark-placed', data: { timeS: 0.1 } },
+        { type: 'reading-recorded', data: { timeS: 0.25 } },
+      ]);
+    });
+
+    it('keeps a mark behind a point that is refused, and says why that was', async () => {
+      const { store } = await atRamp();
+      const point = store.act(at(0, 'not a figure'));
+      const mark = store.act({ do: 'mark', mark: 'noise-begins', timeS: 0.1, by: 'tap' });
+      expect(await Promise.all([point, mark])).toEqual([false, true]);
+      expect(store.view()?.events.at(-1)?.type).toBe('mark-placed');
+    });
+
+    it('does not decide anything else meanwhile, but stops', async () => {
+      const { store } = await atRamp();
+      const point = store.act(at(0, '0.0'));
+      expect(await store.act({ do: 'redo', step: 'raise-and-listen', reason: 'anew' })).toBe(false);
+      const stop = store.act({ do: 'stop', reason: '' });
+      const again = store.act({ do: 'stop', reason: '' });
+      expect(await Promise.all([point, stop, again])).toEqual([true, true, false]);
+      expect(store.state()?.status).toBe('stopped');
+    });
   });
 });

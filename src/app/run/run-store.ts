@@ -14,7 +14,8 @@ import { clock, monotonicClock } from '../core/time-and-ids';
 import { ClockWatch } from './clock-watch';
 import { RunOpener, type OpenedRun } from './run-opener';
 import type { RunProblem, RunView } from './run-view';
-import { TapGuard } from './tap-guard';
+import { isOfRamp, RampQueue } from './ramp-queue';
+import { TapGuard, type TapKind } from './tap-guard';
 import type { ClocksNow } from './hold-clock';
 
 /** How far the page has got. */
@@ -43,6 +44,7 @@ export class RunStore {
   private readonly opener = inject(RunOpener);
   private readonly journal = inject(RunJournal);
   private readonly session = inject(Session);
+  private readonly rampQueue = inject(RampQueue);
   private readonly now = inject(clock);
   private readonly monotonic = inject(monotonicClock);
 
@@ -50,7 +52,9 @@ export class RunStore {
   private readonly status = signal<RunPhase>('loading');
   private readonly detail = signal('');
   private readonly writesElsewhere = signal(false);
-  private readonly acting = signal<RunCommand['do'] | undefined>(undefined);
+  private readonly acting = signal<{ readonly do: RunCommand['do']; readonly isOfRamp: boolean } | undefined>(
+    undefined,
+  );
   private readonly trouble = signal<RunProblem | undefined>(undefined);
   private readonly awaitsResume = signal(false);
   private readonly guard = new TapGuard(this.monotonic);
@@ -59,6 +63,8 @@ export class RunStore {
   private elapsedOffset = 0;
   private loadedElapsed = 0;
   private clockBackMs = 0;
+  /** The last command that is being written or waits for it. */
+  private lastInLine: Promise<boolean> | undefined;
 
   readonly phase = this.status.asReadonly();
   /** What a phase without a run is about: an id, a version, the event that does not fit. */
@@ -68,8 +74,9 @@ export class RunStore {
   /** Whether another window writes this run. */
   readonly isElsewhere = this.writesElsewhere.asReadonly();
   /** The command that is being written now. */
-  readonly busy = this.acting.asReadonly();
-  readonly isBusy = computed(() => this.acting() !== undefined);
+  readonly busy = computed(() => this.acting()?.do);
+  /** Whether nothing else can be done until it is written; a ramp's next point or mark can. */
+  readonly isBusy = computed(() => this.acting()?.isOfRamp === false);
   readonly problem = this.trouble.asReadonly();
   /** Whether the resume card has to be answered before anything else. */
   readonly needsResume = this.awaitsResume.asReadonly();
@@ -122,28 +129,45 @@ export class RunStore {
 
   /**
    * Does a command: true when its events are written and the screen has gone on. False when it was refused (then
-   * `problem` says why, and nothing that was entered is lost), or when it was a double tap.
+   * `problem` says why, and nothing that was entered is lost), or when it was a double tap. The points and marks of a
+   * ramp, and the stop, wait in line behind what is being written; anything else is not done meanwhile.
    */
   async act(command: RunCommand, extras: ActExtras = {}): Promise<boolean> {
     const view = this.opened();
-    if (view === undefined || this.acting() !== undefined || this.writesElsewhere()) return false;
-    if (extras.isFollowUp !== true && !this.guard.admit()) return false;
-    if (this.awaitsResume() && !answersResume.has(command.do)) {
-      this.trouble.set({ code: 'resume-first', message: 'Answer first whether you go on here.' });
+    if (view === undefined || this.writesElsewhere()) return false;
+    const kind = tapKind(command, view);
+    const ahead = this.lastInLine;
+    if (kind === 'decision' && ahead !== undefined) return false;
+    if (extras.isFollowUp !== true && !this.guard.admit(kind)) return false;
+    if (kind === 'ramp') this.rampQueue.add(command);
+    this.trouble.set(undefined);
+    const perform = (): Promise<boolean> => this.perform(command, extras);
+    const turn = ahead === undefined ? perform() : ahead.then(perform, perform);
+    this.lastInLine = turn;
+    try {
+      return await turn;
+    } finally {
+      if (this.lastInLine === turn) this.lastInLine = undefined;
+      if (kind === 'ramp') this.rampQueue.remove(command);
+    }
+  }
+
+  private async perform(command: RunCommand, extras: ActExtras): Promise<boolean> {
+    const view = this.opened();
+    if (view === undefined || this.writesElsewhere()) return false;
+    if (command.do === 'stop' && view.state.status === 'stopped') return false;
+    const refusal = this.refusalOf(command, view);
+    if (refusal !== undefined) {
+      this.trouble.set(refusal);
       return false;
     }
-    if (view.header.kind === 'real' && this.session.person()?.role === 'manager' && !ofManager.has(command.do)) {
-      this.trouble.set({ code: 'not-yours', message: 'A manager only releases here. Whoever runs the test goes on.' });
-      return false;
-    }
-    this.acting.set(command.do);
+    this.acting.set({ do: command.do, isOfRamp: isOfRamp(command, view) });
     try {
       const outcome = decide(view.procedure, view.state, command, this.now());
       if (!outcome.ok) {
         this.trouble.set(outcome);
         return false;
       }
-      this.trouble.set(undefined);
       await this.write(view, [...this.clockWatch.drafts(), ...outcome.drafts], extras.blobs ?? []);
       if (command.do === 'resume') this.awaitsResume.set(false);
       return true;
@@ -153,6 +177,16 @@ export class RunStore {
     } finally {
       this.acting.set(undefined);
     }
+  }
+
+  private refusalOf(command: RunCommand, { header }: RunView): RunProblem | undefined {
+    if (this.awaitsResume() && !answersResume.has(command.do)) {
+      return { code: 'resume-first', message: 'Answer first whether you go on here.' };
+    }
+    if (header.kind === 'real' && this.session.person()?.role === 'manager' && !ofManager.has(command.do)) {
+      return { code: 'not-yours', message: 'A manager only releases here. Whoever runs the test goes on.' };
+    }
+    return undefined;
   }
 
   private async write(view: RunView, drafts: readonly EventDraft[], blobs: readonly NewBlob[]): Promise<void> {
@@ -192,6 +226,11 @@ function applied(view: RunView, events: readonly RunEvent[]): RunState {
     if (!result.ok) throw new RangeError(`event ${result.refusal.seq} does not fit: ${result.refusal.what}`);
     return result.state;
   }, view.state);
+}
+
+function tapKind(command: RunCommand, view: RunView): TapKind {
+  if (command.do === 'stop') return 'stop';
+  return isOfRamp(command, view) ? 'ramp' : 'decision';
 }
 
 const isOpen = (state: RunState): boolean => state.status !== 'closed' && state.status !== 'signed';

@@ -77,3 +77,28 @@ export async function measuredControls(page: Page): Promise<MeasuredControls> {
     return { keys, nearestToStop };
   });
 }
+
+/** Why nobody could tap *Stop, supply off* all over as it stands; empty when one of them can be. */
+export async function troubleWithStop(page: Page): Promise<readonly string[]> {
+  return page.evaluate(() => {
+    const stops = [...document.querySelectorAll('button')].filter(
+      (button) => button.textContent?.trim() === 'Stop, supply off',
+    );
+    const troubles = stops.map((stop) => {
+      const { left, right, top, bottom, width, height } = stop.getBoundingClientRect();
+      const box = `at ${left}, ${top} to ${right}, ${bottom}`;
+      if (width * height === 0) return 'has no size';
+      if (left < 0 || top < 0 || right > innerWidth || bottom > innerHeight) return `leaves the screen, ${box}`;
+      for (const across of [0.03, 0.25, 0.5, 0.75, 0.97]) {
+        for (const along of [0.08, 0.5, 0.92]) {
+          const over = document.elementFromPoint(left + across * width, top + along * height);
+          if (over === null || !stop.contains(over))
+            return `lies under ${over?.outerHTML.slice(0, 80) ?? 'nothing'}, ${box}`;
+        }
+      }
+      return undefined;
+    });
+    if (stops.length === 0) return ['is not there'];
+    return troubles.includes(undefined) ? [] : troubles.filter((trouble) => trouble !== undefined);
+  });
+}

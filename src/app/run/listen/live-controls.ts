@@ -1,13 +1,28 @@
-import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  inject,
+  input,
+  linkedSignal,
+  output,
+  signal,
+} from '@angular/core';
 import { isUnit } from '../../../../procedures/calculations/for-a-run';
 import { previewListening, shownUnit, type RunCommand, type Series } from '../../../../procedures/engine';
 import { BigAction } from '../frame/big-action';
 import { JudgedLine } from '../readings/judged-line';
+import { NumberPad } from '../readings/number-pad';
+import { pressKey, type PadKey } from '../readings/number-text';
+import { RampQueue } from '../ramp-queue';
 import { ReadingDisplay } from '../readings/reading-display';
 import type { RunProblem, RunView } from '../run-view';
 import type { StepOf } from '../step-entry';
+import { BounceGuard, bounceMs } from '../tap-guard';
+import { FoundDisplay } from './found-display';
 import type { ListenDone } from './listen-requests';
 import { SureButton } from './sure-button';
+import { tappedRamp } from './tapped-ramp';
 import { raised, rampSince, riseRate, stepsFor, timeBase, type MarkName } from './live-series';
 
 /** What the gauge is raised to, and what it must never go over. */
@@ -19,12 +34,13 @@ export interface Aim {
 }
 
 /**
- * Typing a ramp while it happens: each tap on a step says what the gauge shows at that moment. The one large button
- * marks where the noise begins and where it stops.
+ * Typing a ramp while it happens: each tap on a step says what the gauge shows at that moment, or its exact figure is
+ * entered on the pad. The one large button marks where the noise begins and where it stops. Every tap belongs to its own
+ * moment: none waits for the one before to be written, and only a bounce on the same control is left out.
  */
 @Component({
   selector: 'bay-live-controls',
-  imports: [BigAction, JudgedLine, ReadingDisplay, SureButton],
+  imports: [BigAction, FoundDisplay, JudgedLine, NumberPad, ReadingDisplay, SureButton],
   templateUrl: './live-controls.html',
   styleUrl: './listen-controls.css',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -41,6 +57,11 @@ export class LiveControls {
   readonly finished = output<ListenDone>();
   readonly fileAsked = output();
 
+  private readonly queue = inject(RampQueue);
+  private readonly bounce = new BounceGuard(() => this.elapsed()());
+  /** When the ramp was begun here, until that is written; the run's monotonic time, milliseconds. */
+  private begunAt: number | undefined;
+
   private readonly gauge = computed(() => this.step().channels.find(({ name }) => name === 'gauge'));
   private readonly unit = computed(() => {
     const unit = this.gauge()?.unit ?? 'kPa';
@@ -53,12 +74,26 @@ export class LiveControls {
     return range?.resolution ?? 0.1;
   });
   protected readonly steps = computed(() => stepsFor(this.resolution()));
-  private readonly points = computed(() => this.run().state.current?.takes['gauge'] ?? []);
-  protected readonly hasBegun = computed(() => this.points().length > 0);
-  protected readonly now = computed(() => this.points().at(-1)?.text);
-  protected readonly marks = computed(() => this.run().state.series[this.step().name]?.marks ?? {});
-  protected readonly stopsAt = computed(() => this.marks()['noise-stops']?.timeS);
-  protected readonly beginsAt = computed(() => this.marks()['noise-begins']?.timeS);
+  private readonly written = computed(() => {
+    const { current, series } = this.run().state;
+    return { points: current?.takes['gauge'] ?? [], marks: series[this.step().name]?.marks ?? {} };
+  });
+  private readonly tapped = computed(() => tappedRamp(this.written(), this.queue.commands()));
+  protected readonly hasBegun = computed(() => this.tapped().points.length > 0);
+  protected readonly now = computed(() => this.tapped().points.at(-1)?.text);
+  protected readonly stopsAt = computed(() => this.tapped().marks['noise-stops']?.timeS);
+  protected readonly beginsAt = computed(() => this.tapped().marks['noise-begins']?.timeS);
+  /** When the figure on the pad was entered as a point, seconds in the ramp. */
+  private readonly entered = signal<number | undefined>(undefined);
+  /** Whether the gauge's exact figure is being entered; done once its point counts. */
+  protected readonly isTyping = linkedSignal<boolean, boolean>({
+    source: () => {
+      const { points } = this.written();
+      return points.length === 0 || points.some(({ timeS }) => timeS === this.entered());
+    },
+    computation: (isDone, before) => !isDone && before?.value === true,
+  });
+  protected readonly typed = linkedSignal({ source: this.isTyping, computation: () => '' });
   /** The noise has stopped, and no point was typed since: without one nobody knows the pressure at that moment. */
   protected readonly lacksPointAfter = computed(() => {
     const stops = this.stopsAt();
@@ -108,22 +143,45 @@ export class LiveControls {
   protected readonly canFinish = computed(() => this.series().timeS.length >= 3);
 
   protected begin(): void {
+    if (!this.bounce.admit('mark', bounceMs.mark)) return;
+    this.begunAt = this.elapsed()();
     this.record(raised('0', 0, this.resolution()), 0);
   }
 
   protected raise(step: number): void {
+    if (!this.bounce.admit(`raise ${step}`)) return;
     this.record(raised(this.now() ?? '0', step, this.resolution()), this.seconds());
   }
 
+  protected press(key: PadKey): void {
+    this.typed.update((text) => pressKey(text, key));
+  }
+
+  protected erase(): void {
+    if (this.typed() === '') this.isTyping.set(false);
+    else this.press('erase');
+  }
+
+  /** The point is timed at this tap: when the figure was read, not when its first digit was entered. */
+  protected recordTyped(): void {
+    if (this.typed() === '' || !this.bounce.admit('record', bounceMs.mark)) return;
+    const timeS = this.seconds();
+    this.entered.set(timeS);
+    this.record(this.typed(), timeS);
+  }
+
   protected takeBack(): void {
+    if (!this.bounce.admit('undo', bounceMs.mark)) return;
     this.commanded.emit({ do: 'take-back', name: 'gauge', reason: 'taken back' });
   }
 
   protected mark(mark: MarkName): void {
+    if (!this.bounce.admit('mark', bounceMs.mark)) return;
     this.commanded.emit({ do: 'mark', mark, timeS: this.seconds(), by: 'tap' });
   }
 
   protected unmark(mark: MarkName): void {
+    if (!this.bounce.admit('unmark', bounceMs.mark)) return;
     this.commanded.emit({ do: 'unmark', mark });
   }
 
@@ -146,14 +204,14 @@ export class LiveControls {
   /** Moves the mark by half a second. */
   protected move(byS: number): void {
     const stops = this.stopsAt();
-    if (stops === undefined) return;
+    if (stops === undefined || !this.bounce.admit(`move ${byS}`)) return;
     this.commanded.emit({ do: 'mark', mark: 'noise-stops', timeS: tenth(Math.max(0, stops + byS)), by: 'tap' });
   }
 
   private seconds(): number {
     const { events, state } = this.run();
-    const base = timeBase(events, rampSince(state));
-    const last = this.series().timeS.at(-1);
+    const base = timeBase(events, rampSince(state)) ?? this.begunAt;
+    const last = this.tapped().points.at(-1)?.timeS;
     const now = base === undefined ? 0 : (this.elapsed()() - base) / 1000;
     return tenth(last === undefined ? Math.max(0, now) : Math.max(now, last + 0.1));
   }

@@ -35,7 +35,7 @@ import type { RunProblem, RunView } from '../run-view';
           {{ done() }}
         </button>
         @if (!isStopped()) {
-          <button type="button" class="stop" [disabled]="isBusy()" (click)="commanded.emit({ do: 'stop', reason: '' })">
+          <button type="button" class="stop" (click)="commanded.emit({ do: 'stop', reason: '' })">
             Stop, supply off
           </button>
         }
