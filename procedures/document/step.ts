@@ -178,6 +178,8 @@ export type FoundQuantity = Quantity & {
 /** A timed wait, such as one under pressure, with what is read as it begins and as it ends. */
 export interface HoldStep extends Measures {
   readonly kind: 'hold';
+  /** A name under which texts say for how long it was held. */
+  readonly heldAs?: string;
   readonly seconds: number;
   readonly begins?: readonly ReadQuantity[];
   readonly ends?: readonly ReadQuantity[];

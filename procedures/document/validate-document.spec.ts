@@ -65,6 +65,7 @@ describe('each field of each part', () => {
     'stay',
     'release',
     'verify',
+    'heldAs',
     'begins',
     'ends',
     'atLeastSeconds',

@@ -81,6 +81,8 @@ export function finishStep(procedure: CompiledProcedure, state: RunState, event:
   next.walked = lastChanged(next.walked, (claim) => {
     claim.doneSeq = event.seq;
     claim.doneAt = event.at;
+    if (step.kind === 'hold' && current.timer?.ended === true && current.timer.certain)
+      claim.heldSeconds = current.timer.seconds;
     if (result !== undefined) claim.result = result;
   });
   return next;

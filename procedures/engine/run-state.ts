@@ -110,6 +110,8 @@ export interface WalkedStep {
   readonly doneAt?: number;
   /** The worst result among what was judged here, or the finding's own, for the Route's bead. */
   readonly result?: FindingResult;
+  /** For how long it was held, where its clock ran to the end. */
+  readonly heldSeconds?: number;
   readonly notMeasured?: boolean;
   /** Why it was not, in the person's words. */
   readonly notMeasuredBecause?: string;

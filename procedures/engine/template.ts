@@ -81,10 +81,23 @@ function wordsFor(procedure: CompiledProcedure, state: RunState, name: string): 
   const series = own(state.series, name);
   if (series?.record !== undefined)
     return { text: `${series.record.samples} samples`, step: series.step, seq: series.seq };
+  const held = heldFor(procedure, state, name);
+  if (held !== undefined) return held;
   if (name === 'concern') return { text: state.visit.concern, seq: 1 };
   if (name === 'repairOrder') return { text: state.visit.repairOrder, seq: 1 };
   if (name === 'car') return { text: state.visit.car, seq: 1 };
   return procedure.step(name)?.title === undefined ? undefined : { text: procedure.step(name)?.title ?? '', seq: 1 };
+}
+
+/** For how long the newest hold of that name was held; undefined where its clock did not run to the end. */
+function heldFor(procedure: CompiledProcedure, state: RunState, name: string): Words | undefined {
+  const claim = state.walked.findLast(({ step: id, isLeft, heldSeconds }) => {
+    const step = procedure.step(id);
+    return step?.kind === 'hold' && step.heldAs === name && isLeft !== true && heldSeconds !== undefined;
+  });
+  return claim === undefined
+    ? undefined
+    : { text: `${claim.heldSeconds} s`, step: claim.step, seq: claim.doneSeq ?? claim.claimedSeq };
 }
 
 /** A unit as people read it. */

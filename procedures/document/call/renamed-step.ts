@@ -47,6 +47,7 @@ function content(step: Step, renaming: Renaming, roles: Roles): object {
       return { reads: reads(step.reads), until: expression(step.until) };
     case 'hold':
       return {
+        ...(step.heldAs === undefined ? {} : { heldAs: name(step.heldAs) }),
         ...(step.begins === undefined ? {} : { begins: reads(step.begins) }),
         ...(step.ends === undefined ? {} : { ends: reads(step.ends) }),
       };

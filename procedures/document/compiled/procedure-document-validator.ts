@@ -2,7 +2,7 @@
 // Made by build-validators.mjs from the schema; not to be edited.
 
 export const checkProcedureDocument = validate52;
-const schema19 = {"$schema":"https://json-schema.org/draft/2020-12/schema","$id":"procedure-document.schema.json","title":"Procedure document","description":"What a lead authors, a version freezes and a run walks. Agrees with procedure-document.ts; what lies between the parts (names, ways, restoring) is the lint's.","type":"object","properties":{"format":{"const":1},"id":{"$ref":"#/$defs/procedureId"},"title":{"$ref":"#/$defs/label"},"purpose":{"$ref":"#/$defs/paragraph"},"system":{"$ref":"#/$defs/label"},"appliesTo":{"$ref":"#/$defs/appliesTo"},"expectedMinutes":{"type":"integer","minimum":1,"maximum":1440},"useLevel":{"enum":["every-step","consulted"]},"pair":{"type":"boolean"},"gear":{"type":"array","items":{"$ref":"#/$defs/gearNeed"},"maxItems":30},"inputs":{"type":"array","items":{"$ref":"#/$defs/input"},"maxItems":100},"pictures":{"type":"array","items":{"$ref":"#/$defs/identifier"},"maxItems":30},"references":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":50},"deference":{"$ref":"#/$defs/paragraph"},"start":{"$ref":"#/$defs/startCard"},"limits":{"type":"array","items":{"$ref":"#/$defs/limit"},"maxItems":20},"stop":{"$ref":"#/$defs/stopSheet"},"steps":{"type":"array","items":{"$ref":"#/$defs/step"},"minItems":2,"maxItems":500}},"required":["format","id","title","purpose","system","appliesTo","expectedMinutes","useLevel","gear","inputs","pictures","references","deference","start","limits","stop","steps"],"additionalProperties":false,"$defs":{"unit":{"enum":["kPa","Pa","hPa","bar","psi","inHg","inH2O","mmHg","degC","degF","K","L/min","ft3/min","m3/s","g/s","kg/h","lb/min","L","cm3","mm","m","km","mi","Nm","lbf.ft","V","mV","ohm","kohm","s","min","h","km/h","mph","%","1","rpm","dB"]},"sense":{"description":"Gauge and absolute are different kinds.","enum":["absolute","gauge"]},"name":{"description":"A name in expressions: letters and digits, first letter small.","type":"string","pattern":"^[a-z][A-Za-z0-9]*$","maxLength":60},"identifier":{"description":"Letters, digits and hyphens.","type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"procedureId":{"description":"Lower-case words joined by hyphens.","type":"string","pattern":"^[a-z0-9]+(-[a-z0-9]+)*$","maxLength":80},"decimal":{"description":"A figure as text, with the digits that it was given with.","type":"string","pattern":"^-?[0-9]+(\\.[0-9]+)?$","maxLength":20},"expression":{"description":"Text in the expression language.","type":"string","minLength":1,"maxLength":2000},"label":{"type":"string","minLength":1,"maxLength":120},"line":{"type":"string","minLength":1,"maxLength":300},"paragraph":{"description":"May be a template: {name} stands for a value of the run.","type":"string","minLength":1,"maxLength":1000},"range":{"type":"object","properties":{"low":{"type":"number"},"high":{"type":"number"}},"required":["low","high"],"additionalProperties":false},"caution":{"type":"object","properties":{"word":{"enum":["danger","warning","caution","notice"]},"text":{"$ref":"#/$defs/paragraph"}},"required":["word","text"],"additionalProperties":false},"appliesTo":{"type":"object","properties":{"codes":{"type":"array","items":{"type":"string","pattern":"^[PCBU][0-3][0-9A-F]{3}$"},"maxItems":100},"symptoms":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":30},"engine":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":30}},"required":["codes","symptoms","engine"],"additionalProperties":false},"instrumentKind":{"enum":["pressure-gauge","scan-tool","listening-probe","barometer","thermometer"]},"gearNeed":{"type":"object","properties":{"role":{"$ref":"#/$defs/name"},"kind":{"$ref":"#/$defs/instrumentKind"},"label":{"$ref":"#/$defs/label"},"optional":{"type":"boolean"},"shows":{"type":"object","properties":{"unit":{"$ref":"#/$defs/unit"},"low":{"type":"number"},"high":{"type":"number"},"resolution":{"type":"number","exclusiveMinimum":0}},"required":["unit","low","high","resolution"],"additionalProperties":false}},"required":["role","kind","label"],"additionalProperties":false},"input":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"from":{"enum":["site.elevation","visit.displacement","default"]},"default":{"$ref":"#/$defs/decimal"},"source":{"$ref":"#/$defs/line"}},"required":["name","label","unit","from","source"],"additionalProperties":false},"startCard":{"type":"object","properties":{"prerequisites":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":20},"stopActions":{"type":"array","items":{"$ref":"#/$defs/line"},"minItems":1,"maxItems":3},"people":{"$ref":"#/$defs/line"},"throughout":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12}},"required":["prerequisites","stopActions","people","throughout"],"additionalProperties":false},"limit":{"type":"object","properties":{"id":{"$ref":"#/$defs/identifier"},"holds":{"$ref":"#/$defs/expression"},"of":{"type":"array","items":{"$ref":"#/$defs/name"},"minItems":1,"maxItems":50},"says":{"$ref":"#/$defs/line"},"then":{"$ref":"#/$defs/line"}},"required":["id","holds","of","says","then"],"additionalProperties":false},"exit":{"type":"object","properties":{"to":{"description":"A step's id, or `verdict`.","type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"because":{"$ref":"#/$defs/line"},"verdict":{"$ref":"#/$defs/name"}},"required":["to","because"],"additionalProperties":false},"branch":{"type":"object","properties":{"to":{"description":"A step's id, or `verdict`.","type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"because":{"$ref":"#/$defs/line"},"verdict":{"$ref":"#/$defs/name"},"when":{"$ref":"#/$defs/expression"},"atMost":{"type":"integer","minimum":1,"maximum":20},"thenceforth":{"$ref":"#/$defs/exit"}},"required":["to","because","when"],"dependentRequired":{"atMost":["thenceforth"],"thenceforth":["atMost"]},"additionalProperties":false},"stopSheet":{"type":"object","properties":{"makeSafe":{"type":"array","items":{"$ref":"#/$defs/line"},"minItems":1,"maxItems":12},"exit":{"$ref":"#/$defs/exit"}},"required":["makeSafe","exit"],"additionalProperties":false},"band":{"type":"object","properties":{"low":{"$ref":"#/$defs/expression"},"high":{"$ref":"#/$defs/expression"},"when":{"$ref":"#/$defs/expression"},"unjudged":{"$ref":"#/$defs/line"},"source":{"$ref":"#/$defs/line"}},"required":["source"],"anyOf":[{"required":["low"]},{"required":["high"]}],"additionalProperties":false},"result":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"},"is":{"$ref":"#/$defs/expression"}},"required":["name","label","unit","is"],"additionalProperties":false},"entry":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"plausible":{"$ref":"#/$defs/range"},"gear":{"$ref":"#/$defs/name"}},"required":["name","label","unit","plausible"],"additionalProperties":false},"entryWay":{"type":"object","properties":{"id":{"$ref":"#/$defs/identifier"},"label":{"$ref":"#/$defs/label"},"hint":{"$ref":"#/$defs/line"},"entry":{"$ref":"#/$defs/entry"},"is":{"$ref":"#/$defs/expression"},"uncertainty":{"$ref":"#/$defs/expression"}},"required":["id","label","hint","is"],"additionalProperties":false},"readQuantity":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"},"gear":{"$ref":"#/$defs/name"},"plausible":{"$ref":"#/$defs/range"},"takes":{"type":"integer","minimum":1,"maximum":5},"ways":{"type":"array","items":{"$ref":"#/$defs/entryWay"},"minItems":1,"maxItems":10},"validity":{"$ref":"#/$defs/validity"}},"required":["name","label","unit","plausible"],"additionalProperties":false},"picture":{"type":"object","properties":{"sheet":{"$ref":"#/$defs/identifier"},"marks":{"type":"array","items":{"$ref":"#/$defs/identifier"},"maxItems":30},"labels":{"type":"object","propertyNames":{"pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"maxProperties":30,"additionalProperties":{"$ref":"#/$defs/label"}}},"required":["sheet","marks"],"additionalProperties":false},"disturbed":{"type":"object","properties":{"item":{"$ref":"#/$defs/identifier"},"label":{"$ref":"#/$defs/label"},"restore":{"$ref":"#/$defs/line"}},"required":["item","label","restore"],"additionalProperties":false},"option":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"ask":{"$ref":"#/$defs/line"},"alone":{"type":"boolean"},"picture":{"$ref":"#/$defs/picture"}},"required":["name","label"],"additionalProperties":false},"channel":{"type":"object","properties":{"name":{"enum":["gauge","manifold","boost","sound"]},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"gear":{"$ref":"#/$defs/name"},"needed":{"type":"boolean"}},"required":["name","label","unit","needed"],"additionalProperties":false},"foundTruth":{"type":"object","properties":{"what":{"enum":["noise-heard","noise-stopped"]},"name":{"$ref":"#/$defs/name"}},"required":["what","name"],"additionalProperties":false},"foundQuantity":{"type":"object","properties":{"what":{"enum":["seal-point","highest-gauge","rise-rate","manifold-gain","boost-gain","worst-gap"]},"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"}},"required":["what","name","label","unit"],"additionalProperties":false},"found":{"type":"object","discriminator":{"propertyName":"what"},"required":["what"],"oneOf":[{"$ref":"#/$defs/foundTruth"},{"$ref":"#/$defs/foundQuantity"}]},"driveWindow":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"what":{"$ref":"#/$defs/line"}},"required":["name","label","what"],"additionalProperties":false},"sentence":{"type":"object","properties":{"text":{"$ref":"#/$defs/paragraph"},"when":{"$ref":"#/$defs/expression"}},"required":["text"],"additionalProperties":false},"startStep":{"type":"object","properties":{"kind":{"const":"start"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"actionStep":{"type":"object","properties":{"kind":{"const":"action"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"readingStep":{"type":"object","properties":{"kind":{"const":"reading"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"reads":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","reads"],"additionalProperties":false},"choiceStep":{"type":"object","properties":{"kind":{"const":"choice"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"several":{"type":"boolean"},"options":{"type":"array","items":{"$ref":"#/$defs/option"},"minItems":1,"maxItems":30},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","options"],"additionalProperties":false},"listenStep":{"type":"object","properties":{"kind":{"const":"listen"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"channels":{"type":"array","items":{"$ref":"#/$defs/channel"},"minItems":1,"maxItems":4},"target":{"type":"number"},"finds":{"type":"array","items":{"$ref":"#/$defs/found"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","channels","target","finds"],"additionalProperties":false},"holdStep":{"type":"object","properties":{"kind":{"const":"hold"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"seconds":{"type":"integer","minimum":1,"maximum":86400},"begins":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"ends":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","seconds"],"additionalProperties":false},"waitStep":{"type":"object","properties":{"kind":{"const":"wait"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"reads":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"until":{"$ref":"#/$defs/expression"},"atLeastSeconds":{"type":"integer","minimum":1,"maximum":86400},"meanwhile":{"$ref":"#/$defs/paragraph"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","reads","until","meanwhile"],"additionalProperties":false},"codesStep":{"type":"object","properties":{"kind":{"const":"codes"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"comparedWith":{"$ref":"#/$defs/name"},"newCodes":{"$ref":"#/$defs/name"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name"],"additionalProperties":false},"driveStep":{"type":"object","properties":{"kind":{"const":"drive"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"windows":{"type":"array","items":{"$ref":"#/$defs/driveWindow"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","windows"],"additionalProperties":false},"computeStep":{"type":"object","properties":{"kind":{"const":"compute"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"restoreStep":{"type":"object","properties":{"kind":{"const":"restore"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"findingStep":{"type":"object","properties":{"kind":{"const":"finding"},"id":{"$ref":"#/$defs/name"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"result":{"enum":["in","out","too-close","not-judged"]},"verdict":{"$ref":"#/$defs/paragraph"},"cause":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"correction":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"customer":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"nextProcedure":{"$ref":"#/$defs/procedureId"}},"required":["id","number","title","action","kind","result","verdict","cause","correction","customer"],"additionalProperties":false},"validity":{"type":"object","description":"Ends after minutes, or when one of the steps is done.","properties":{"minutes":{"type":"number","exclusiveMinimum":0,"maximum":1440},"until":{"type":"array","items":{"$ref":"#/$defs/identifier"},"minItems":1,"maxItems":30},"because":{"$ref":"#/$defs/line"}},"required":["because"],"anyOf":[{"required":["minutes"]},{"required":["until"]}],"additionalProperties":false},"releasePoint":{"type":"object","properties":{"by":{"enum":["lead","manager"]},"evidence":{"$ref":"#/$defs/line"}},"required":["by","evidence"],"additionalProperties":false},"verification":{"type":"object","properties":{"how":{"enum":["independent","concurrent"]},"what":{"$ref":"#/$defs/line"}},"required":["how","what"],"additionalProperties":false},"takenResult":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"},"from":{"$ref":"#/$defs/name"}},"required":["name","label","unit","from"],"additionalProperties":false},"calledFinding":{"type":"object","properties":{"finding":{"$ref":"#/$defs/name"},"name":{"$ref":"#/$defs/name"}},"required":["finding","name"],"additionalProperties":false},"rampStep":{"type":"object","properties":{"kind":{"const":"ramp"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"channels":{"type":"array","items":{"$ref":"#/$defs/channel"},"minItems":1,"maxItems":4},"target":{"type":"number"},"finds":{"type":"array","items":{"$ref":"#/$defs/foundQuantity"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","channels","target","finds"],"additionalProperties":false},"photoStep":{"type":"object","properties":{"kind":{"const":"photo"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"},"name":{"$ref":"#/$defs/name"},"shows":{"type":"array","items":{"$ref":"#/$defs/line"},"minItems":1,"maxItems":10}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","shows"],"additionalProperties":false},"callStep":{"type":"object","properties":{"kind":{"const":"call"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"procedure":{"$ref":"#/$defs/procedureId"},"version":{"type":"integer","minimum":1,"maximum":100000},"takes":{"type":"array","items":{"$ref":"#/$defs/takenResult"},"maxItems":30},"finds":{"type":"array","items":{"$ref":"#/$defs/calledFinding"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise","procedure","version","takes","finds"],"additionalProperties":false},"step":{"type":"object","discriminator":{"propertyName":"kind"},"required":["kind"],"oneOf":[{"$ref":"#/$defs/startStep"},{"$ref":"#/$defs/actionStep"},{"$ref":"#/$defs/readingStep"},{"$ref":"#/$defs/choiceStep"},{"$ref":"#/$defs/listenStep"},{"$ref":"#/$defs/holdStep"},{"$ref":"#/$defs/waitStep"},{"$ref":"#/$defs/codesStep"},{"$ref":"#/$defs/driveStep"},{"$ref":"#/$defs/computeStep"},{"$ref":"#/$defs/restoreStep"},{"$ref":"#/$defs/findingStep"},{"$ref":"#/$defs/rampStep"},{"$ref":"#/$defs/photoStep"},{"$ref":"#/$defs/callStep"}]}}};
+const schema19 = {"$schema":"https://json-schema.org/draft/2020-12/schema","$id":"procedure-document.schema.json","title":"Procedure document","description":"What a lead authors, a version freezes and a run walks. Agrees with procedure-document.ts; what lies between the parts (names, ways, restoring) is the lint's.","type":"object","properties":{"format":{"const":1},"id":{"$ref":"#/$defs/procedureId"},"title":{"$ref":"#/$defs/label"},"purpose":{"$ref":"#/$defs/paragraph"},"system":{"$ref":"#/$defs/label"},"appliesTo":{"$ref":"#/$defs/appliesTo"},"expectedMinutes":{"type":"integer","minimum":1,"maximum":1440},"useLevel":{"enum":["every-step","consulted"]},"pair":{"type":"boolean"},"gear":{"type":"array","items":{"$ref":"#/$defs/gearNeed"},"maxItems":30},"inputs":{"type":"array","items":{"$ref":"#/$defs/input"},"maxItems":100},"pictures":{"type":"array","items":{"$ref":"#/$defs/identifier"},"maxItems":30},"references":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":50},"deference":{"$ref":"#/$defs/paragraph"},"start":{"$ref":"#/$defs/startCard"},"limits":{"type":"array","items":{"$ref":"#/$defs/limit"},"maxItems":20},"stop":{"$ref":"#/$defs/stopSheet"},"steps":{"type":"array","items":{"$ref":"#/$defs/step"},"minItems":2,"maxItems":500}},"required":["format","id","title","purpose","system","appliesTo","expectedMinutes","useLevel","gear","inputs","pictures","references","deference","start","limits","stop","steps"],"additionalProperties":false,"$defs":{"unit":{"enum":["kPa","Pa","hPa","bar","psi","inHg","inH2O","mmHg","degC","degF","K","L/min","ft3/min","m3/s","g/s","kg/h","lb/min","L","cm3","mm","m","km","mi","Nm","lbf.ft","V","mV","ohm","kohm","s","min","h","km/h","mph","%","1","rpm","dB"]},"sense":{"description":"Gauge and absolute are different kinds.","enum":["absolute","gauge"]},"name":{"description":"A name in expressions: letters and digits, first letter small.","type":"string","pattern":"^[a-z][A-Za-z0-9]*$","maxLength":60},"identifier":{"description":"Letters, digits and hyphens.","type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"procedureId":{"description":"Lower-case words joined by hyphens.","type":"string","pattern":"^[a-z0-9]+(-[a-z0-9]+)*$","maxLength":80},"decimal":{"description":"A figure as text, with the digits that it was given with.","type":"string","pattern":"^-?[0-9]+(\\.[0-9]+)?$","maxLength":20},"expression":{"description":"Text in the expression language.","type":"string","minLength":1,"maxLength":2000},"label":{"type":"string","minLength":1,"maxLength":120},"line":{"type":"string","minLength":1,"maxLength":300},"paragraph":{"description":"May be a template: {name} stands for a value of the run.","type":"string","minLength":1,"maxLength":1000},"range":{"type":"object","properties":{"low":{"type":"number"},"high":{"type":"number"}},"required":["low","high"],"additionalProperties":false},"caution":{"type":"object","properties":{"word":{"enum":["danger","warning","caution","notice"]},"text":{"$ref":"#/$defs/paragraph"}},"required":["word","text"],"additionalProperties":false},"appliesTo":{"type":"object","properties":{"codes":{"type":"array","items":{"type":"string","pattern":"^[PCBU][0-3][0-9A-F]{3}$"},"maxItems":100},"symptoms":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":30},"engine":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":30}},"required":["codes","symptoms","engine"],"additionalProperties":false},"instrumentKind":{"enum":["pressure-gauge","scan-tool","listening-probe","barometer","thermometer"]},"gearNeed":{"type":"object","properties":{"role":{"$ref":"#/$defs/name"},"kind":{"$ref":"#/$defs/instrumentKind"},"label":{"$ref":"#/$defs/label"},"optional":{"type":"boolean"},"shows":{"type":"object","properties":{"unit":{"$ref":"#/$defs/unit"},"low":{"type":"number"},"high":{"type":"number"},"resolution":{"type":"number","exclusiveMinimum":0}},"required":["unit","low","high","resolution"],"additionalProperties":false}},"required":["role","kind","label"],"additionalProperties":false},"input":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"from":{"enum":["site.elevation","visit.displacement","default"]},"default":{"$ref":"#/$defs/decimal"},"source":{"$ref":"#/$defs/line"}},"required":["name","label","unit","from","source"],"additionalProperties":false},"startCard":{"type":"object","properties":{"prerequisites":{"type":"array","items":{"$ref":"#/$defs/line"},"maxItems":20},"stopActions":{"type":"array","items":{"$ref":"#/$defs/line"},"minItems":1,"maxItems":3},"people":{"$ref":"#/$defs/line"},"throughout":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12}},"required":["prerequisites","stopActions","people","throughout"],"additionalProperties":false},"limit":{"type":"object","properties":{"id":{"$ref":"#/$defs/identifier"},"holds":{"$ref":"#/$defs/expression"},"of":{"type":"array","items":{"$ref":"#/$defs/name"},"minItems":1,"maxItems":50},"says":{"$ref":"#/$defs/line"},"then":{"$ref":"#/$defs/line"}},"required":["id","holds","of","says","then"],"additionalProperties":false},"exit":{"type":"object","properties":{"to":{"description":"A step's id, or `verdict`.","type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"because":{"$ref":"#/$defs/line"},"verdict":{"$ref":"#/$defs/name"}},"required":["to","because"],"additionalProperties":false},"branch":{"type":"object","properties":{"to":{"description":"A step's id, or `verdict`.","type":"string","pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"because":{"$ref":"#/$defs/line"},"verdict":{"$ref":"#/$defs/name"},"when":{"$ref":"#/$defs/expression"},"atMost":{"type":"integer","minimum":1,"maximum":20},"thenceforth":{"$ref":"#/$defs/exit"}},"required":["to","because","when"],"dependentRequired":{"atMost":["thenceforth"],"thenceforth":["atMost"]},"additionalProperties":false},"stopSheet":{"type":"object","properties":{"makeSafe":{"type":"array","items":{"$ref":"#/$defs/line"},"minItems":1,"maxItems":12},"exit":{"$ref":"#/$defs/exit"}},"required":["makeSafe","exit"],"additionalProperties":false},"band":{"type":"object","properties":{"low":{"$ref":"#/$defs/expression"},"high":{"$ref":"#/$defs/expression"},"when":{"$ref":"#/$defs/expression"},"unjudged":{"$ref":"#/$defs/line"},"source":{"$ref":"#/$defs/line"}},"required":["source"],"anyOf":[{"required":["low"]},{"required":["high"]}],"additionalProperties":false},"result":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"},"is":{"$ref":"#/$defs/expression"}},"required":["name","label","unit","is"],"additionalProperties":false},"entry":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"plausible":{"$ref":"#/$defs/range"},"gear":{"$ref":"#/$defs/name"}},"required":["name","label","unit","plausible"],"additionalProperties":false},"entryWay":{"type":"object","properties":{"id":{"$ref":"#/$defs/identifier"},"label":{"$ref":"#/$defs/label"},"hint":{"$ref":"#/$defs/line"},"entry":{"$ref":"#/$defs/entry"},"is":{"$ref":"#/$defs/expression"},"uncertainty":{"$ref":"#/$defs/expression"}},"required":["id","label","hint","is"],"additionalProperties":false},"readQuantity":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"},"gear":{"$ref":"#/$defs/name"},"plausible":{"$ref":"#/$defs/range"},"takes":{"type":"integer","minimum":1,"maximum":5},"ways":{"type":"array","items":{"$ref":"#/$defs/entryWay"},"minItems":1,"maxItems":10},"validity":{"$ref":"#/$defs/validity"}},"required":["name","label","unit","plausible"],"additionalProperties":false},"picture":{"type":"object","properties":{"sheet":{"$ref":"#/$defs/identifier"},"marks":{"type":"array","items":{"$ref":"#/$defs/identifier"},"maxItems":30},"labels":{"type":"object","propertyNames":{"pattern":"^[A-Za-z][A-Za-z0-9-]*$","maxLength":60},"maxProperties":30,"additionalProperties":{"$ref":"#/$defs/label"}}},"required":["sheet","marks"],"additionalProperties":false},"disturbed":{"type":"object","properties":{"item":{"$ref":"#/$defs/identifier"},"label":{"$ref":"#/$defs/label"},"restore":{"$ref":"#/$defs/line"}},"required":["item","label","restore"],"additionalProperties":false},"option":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"ask":{"$ref":"#/$defs/line"},"alone":{"type":"boolean"},"picture":{"$ref":"#/$defs/picture"}},"required":["name","label"],"additionalProperties":false},"channel":{"type":"object","properties":{"name":{"enum":["gauge","manifold","boost","sound"]},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"gear":{"$ref":"#/$defs/name"},"needed":{"type":"boolean"}},"required":["name","label","unit","needed"],"additionalProperties":false},"foundTruth":{"type":"object","properties":{"what":{"enum":["noise-heard","noise-stopped"]},"name":{"$ref":"#/$defs/name"}},"required":["what","name"],"additionalProperties":false},"foundQuantity":{"type":"object","properties":{"what":{"enum":["seal-point","highest-gauge","rise-rate","manifold-gain","boost-gain","worst-gap"]},"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"}},"required":["what","name","label","unit"],"additionalProperties":false},"found":{"type":"object","discriminator":{"propertyName":"what"},"required":["what"],"oneOf":[{"$ref":"#/$defs/foundTruth"},{"$ref":"#/$defs/foundQuantity"}]},"driveWindow":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"what":{"$ref":"#/$defs/line"}},"required":["name","label","what"],"additionalProperties":false},"sentence":{"type":"object","properties":{"text":{"$ref":"#/$defs/paragraph"},"when":{"$ref":"#/$defs/expression"}},"required":["text"],"additionalProperties":false},"startStep":{"type":"object","properties":{"kind":{"const":"start"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"actionStep":{"type":"object","properties":{"kind":{"const":"action"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"readingStep":{"type":"object","properties":{"kind":{"const":"reading"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"reads":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","reads"],"additionalProperties":false},"choiceStep":{"type":"object","properties":{"kind":{"const":"choice"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"several":{"type":"boolean"},"options":{"type":"array","items":{"$ref":"#/$defs/option"},"minItems":1,"maxItems":30},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","options"],"additionalProperties":false},"listenStep":{"type":"object","properties":{"kind":{"const":"listen"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"channels":{"type":"array","items":{"$ref":"#/$defs/channel"},"minItems":1,"maxItems":4},"target":{"type":"number"},"finds":{"type":"array","items":{"$ref":"#/$defs/found"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","channels","target","finds"],"additionalProperties":false},"holdStep":{"type":"object","properties":{"kind":{"const":"hold"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"heldAs":{"$ref":"#/$defs/name"},"seconds":{"type":"integer","minimum":1,"maximum":86400},"begins":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"ends":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","seconds"],"additionalProperties":false},"waitStep":{"type":"object","properties":{"kind":{"const":"wait"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"reads":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"until":{"$ref":"#/$defs/expression"},"atLeastSeconds":{"type":"integer","minimum":1,"maximum":86400},"meanwhile":{"$ref":"#/$defs/paragraph"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","reads","until","meanwhile"],"additionalProperties":false},"codesStep":{"type":"object","properties":{"kind":{"const":"codes"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"comparedWith":{"$ref":"#/$defs/name"},"newCodes":{"$ref":"#/$defs/name"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name"],"additionalProperties":false},"driveStep":{"type":"object","properties":{"kind":{"const":"drive"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"windows":{"type":"array","items":{"$ref":"#/$defs/driveWindow"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","windows"],"additionalProperties":false},"computeStep":{"type":"object","properties":{"kind":{"const":"compute"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"restoreStep":{"type":"object","properties":{"kind":{"const":"restore"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false},"findingStep":{"type":"object","properties":{"kind":{"const":"finding"},"id":{"$ref":"#/$defs/name"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"result":{"enum":["in","out","too-close","not-judged"]},"verdict":{"$ref":"#/$defs/paragraph"},"cause":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"correction":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"customer":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"nextProcedure":{"$ref":"#/$defs/procedureId"}},"required":["id","number","title","action","kind","result","verdict","cause","correction","customer"],"additionalProperties":false},"validity":{"type":"object","description":"Ends after minutes, or when one of the steps is done.","properties":{"minutes":{"type":"number","exclusiveMinimum":0,"maximum":1440},"until":{"type":"array","items":{"$ref":"#/$defs/identifier"},"minItems":1,"maxItems":30},"because":{"$ref":"#/$defs/line"}},"required":["because"],"anyOf":[{"required":["minutes"]},{"required":["until"]}],"additionalProperties":false},"releasePoint":{"type":"object","properties":{"by":{"enum":["lead","manager"]},"evidence":{"$ref":"#/$defs/line"}},"required":["by","evidence"],"additionalProperties":false},"verification":{"type":"object","properties":{"how":{"enum":["independent","concurrent"]},"what":{"$ref":"#/$defs/line"}},"required":["how","what"],"additionalProperties":false},"takenResult":{"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"},"from":{"$ref":"#/$defs/name"}},"required":["name","label","unit","from"],"additionalProperties":false},"calledFinding":{"type":"object","properties":{"finding":{"$ref":"#/$defs/name"},"name":{"$ref":"#/$defs/name"}},"required":["finding","name"],"additionalProperties":false},"rampStep":{"type":"object","properties":{"kind":{"const":"ramp"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"channels":{"type":"array","items":{"$ref":"#/$defs/channel"},"minItems":1,"maxItems":4},"target":{"type":"number"},"finds":{"type":"array","items":{"$ref":"#/$defs/foundQuantity"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","channels","target","finds"],"additionalProperties":false},"photoStep":{"type":"object","properties":{"kind":{"const":"photo"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"},"name":{"$ref":"#/$defs/name"},"shows":{"type":"array","items":{"$ref":"#/$defs/line"},"minItems":1,"maxItems":10}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","shows"],"additionalProperties":false},"callStep":{"type":"object","properties":{"kind":{"const":"call"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"procedure":{"$ref":"#/$defs/procedureId"},"version":{"type":"integer","minimum":1,"maximum":100000},"takes":{"type":"array","items":{"$ref":"#/$defs/takenResult"},"maxItems":30},"finds":{"type":"array","items":{"$ref":"#/$defs/calledFinding"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise","procedure","version","takes","finds"],"additionalProperties":false},"step":{"type":"object","discriminator":{"propertyName":"kind"},"required":["kind"],"oneOf":[{"$ref":"#/$defs/startStep"},{"$ref":"#/$defs/actionStep"},{"$ref":"#/$defs/readingStep"},{"$ref":"#/$defs/choiceStep"},{"$ref":"#/$defs/listenStep"},{"$ref":"#/$defs/holdStep"},{"$ref":"#/$defs/waitStep"},{"$ref":"#/$defs/codesStep"},{"$ref":"#/$defs/driveStep"},{"$ref":"#/$defs/computeStep"},{"$ref":"#/$defs/restoreStep"},{"$ref":"#/$defs/findingStep"},{"$ref":"#/$defs/rampStep"},{"$ref":"#/$defs/photoStep"},{"$ref":"#/$defs/callStep"}]}}};
 const func1 = Object.prototype.hasOwnProperty;
 const schema20 = {"description":"Lower-case words joined by hyphens.","type":"string","pattern":"^[a-z0-9]+(-[a-z0-9]+)*$","maxLength":80};
 const func2 = (text) => [...text].length;
@@ -6115,7 +6115,7 @@ return errors === 0;
 }
 validate240.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
-const schema62 = {"type":"object","properties":{"kind":{"const":"hold"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"seconds":{"type":"integer","minimum":1,"maximum":86400},"begins":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"ends":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","seconds"],"additionalProperties":false};
+const schema62 = {"type":"object","properties":{"kind":{"const":"hold"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"heldAs":{"$ref":"#/$defs/name"},"seconds":{"type":"integer","minimum":1,"maximum":86400},"begins":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"ends":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","seconds"],"additionalProperties":false};
 
 function validate281(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
@@ -6443,9 +6443,15 @@ vErrors = vErrors === null ? validate133.errors : vErrors.concat(validate133.err
 errors = vErrors.length;
 }
 }
+if(data.heldAs !== undefined){
+if(!(validate66(data.heldAs, {instancePath:instancePath+"/heldAs",parentData:data,parentDataProperty:"heldAs",rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate66.errors : vErrors.concat(validate66.errors);
+errors = vErrors.length;
+}
+}
 if(data.seconds !== undefined){
-let data17 = data.seconds;
-if(!(((typeof data17 == "number") && (!(data17 % 1) && !isNaN(data17))) && (isFinite(data17)))){
+let data18 = data.seconds;
+if(!(((typeof data18 == "number") && (!(data18 % 1) && !isNaN(data18))) && (isFinite(data18)))){
 const err22 = {instancePath:instancePath+"/seconds",schemaPath:"#/properties/seconds/type",keyword:"type",params:{type: "integer"},message:"must be integer"};
 if(vErrors === null){
 vErrors = [err22];
@@ -6455,8 +6461,8 @@ vErrors.push(err22);
 }
 errors++;
 }
-if((typeof data17 == "number") && (isFinite(data17))){
-if(data17 > 86400 || isNaN(data17)){
+if((typeof data18 == "number") && (isFinite(data18))){
+if(data18 > 86400 || isNaN(data18)){
 const err23 = {instancePath:instancePath+"/seconds",schemaPath:"#/properties/seconds/maximum",keyword:"maximum",params:{comparison: "<=", limit: 86400},message:"must be <= 86400"};
 if(vErrors === null){
 vErrors = [err23];
@@ -6466,7 +6472,7 @@ vErrors.push(err23);
 }
 errors++;
 }
-if(data17 < 1 || isNaN(data17)){
+if(data18 < 1 || isNaN(data18)){
 const err24 = {instancePath:instancePath+"/seconds",schemaPath:"#/properties/seconds/minimum",keyword:"minimum",params:{comparison: ">=", limit: 1},message:"must be >= 1"};
 if(vErrors === null){
 vErrors = [err24];
@@ -6479,9 +6485,9 @@ errors++;
 }
 }
 if(data.begins !== undefined){
-let data18 = data.begins;
-if(Array.isArray(data18)){
-if(data18.length > 20){
+let data19 = data.begins;
+if(Array.isArray(data19)){
+if(data19.length > 20){
 const err25 = {instancePath:instancePath+"/begins",schemaPath:"#/properties/begins/maxItems",keyword:"maxItems",params:{limit: 20},message:"must NOT have more than 20 items"};
 if(vErrors === null){
 vErrors = [err25];
@@ -6491,7 +6497,7 @@ vErrors.push(err25);
 }
 errors++;
 }
-if(data18.length < 1){
+if(data19.length < 1){
 const err26 = {instancePath:instancePath+"/begins",schemaPath:"#/properties/begins/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
 if(vErrors === null){
 vErrors = [err26];
@@ -6501,9 +6507,9 @@ vErrors.push(err26);
 }
 errors++;
 }
-const len3 = data18.length;
+const len3 = data19.length;
 for(let i3=0; i3<len3; i3++){
-if(!(validate184(data18[i3], {instancePath:instancePath+"/begins/" + i3,parentData:data18,parentDataProperty:i3,rootData,dynamicAnchors}))){
+if(!(validate184(data19[i3], {instancePath:instancePath+"/begins/" + i3,parentData:data19,parentDataProperty:i3,rootData,dynamicAnchors}))){
 vErrors = vErrors === null ? validate184.errors : vErrors.concat(validate184.errors);
 errors = vErrors.length;
 }
@@ -6521,9 +6527,9 @@ errors++;
 }
 }
 if(data.ends !== undefined){
-let data20 = data.ends;
-if(Array.isArray(data20)){
-if(data20.length > 20){
+let data21 = data.ends;
+if(Array.isArray(data21)){
+if(data21.length > 20){
 const err28 = {instancePath:instancePath+"/ends",schemaPath:"#/properties/ends/maxItems",keyword:"maxItems",params:{limit: 20},message:"must NOT have more than 20 items"};
 if(vErrors === null){
 vErrors = [err28];
@@ -6533,7 +6539,7 @@ vErrors.push(err28);
 }
 errors++;
 }
-if(data20.length < 1){
+if(data21.length < 1){
 const err29 = {instancePath:instancePath+"/ends",schemaPath:"#/properties/ends/minItems",keyword:"minItems",params:{limit: 1},message:"must NOT have fewer than 1 items"};
 if(vErrors === null){
 vErrors = [err29];
@@ -6543,9 +6549,9 @@ vErrors.push(err29);
 }
 errors++;
 }
-const len4 = data20.length;
+const len4 = data21.length;
 for(let i4=0; i4<len4; i4++){
-if(!(validate184(data20[i4], {instancePath:instancePath+"/ends/" + i4,parentData:data20,parentDataProperty:i4,rootData,dynamicAnchors}))){
+if(!(validate184(data21[i4], {instancePath:instancePath+"/ends/" + i4,parentData:data21,parentDataProperty:i4,rootData,dynamicAnchors}))){
 vErrors = vErrors === null ? validate184.errors : vErrors.concat(validate184.errors);
 errors = vErrors.length;
 }
@@ -6563,9 +6569,9 @@ errors++;
 }
 }
 if(data.next !== undefined){
-let data22 = data.next;
-if(Array.isArray(data22)){
-if(data22.length > 30){
+let data23 = data.next;
+if(Array.isArray(data23)){
+if(data23.length > 30){
 const err31 = {instancePath:instancePath+"/next",schemaPath:"#/properties/next/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
 if(vErrors === null){
 vErrors = [err31];
@@ -6575,9 +6581,9 @@ vErrors.push(err31);
 }
 errors++;
 }
-const len5 = data22.length;
+const len5 = data23.length;
 for(let i5=0; i5<len5; i5++){
-if(!(validate136(data22[i5], {instancePath:instancePath+"/next/" + i5,parentData:data22,parentDataProperty:i5,rootData,dynamicAnchors}))){
+if(!(validate136(data23[i5], {instancePath:instancePath+"/next/" + i5,parentData:data23,parentDataProperty:i5,rootData,dynamicAnchors}))){
 vErrors = vErrors === null ? validate136.errors : vErrors.concat(validate136.errors);
 errors = vErrors.length;
 }
@@ -6601,9 +6607,9 @@ errors = vErrors.length;
 }
 }
 if(data.results !== undefined){
-let data25 = data.results;
-if(Array.isArray(data25)){
-if(data25.length > 30){
+let data26 = data.results;
+if(Array.isArray(data26)){
+if(data26.length > 30){
 const err33 = {instancePath:instancePath+"/results",schemaPath:"#/properties/results/maxItems",keyword:"maxItems",params:{limit: 30},message:"must NOT have more than 30 items"};
 if(vErrors === null){
 vErrors = [err33];
@@ -6613,9 +6619,9 @@ vErrors.push(err33);
 }
 errors++;
 }
-const len6 = data25.length;
+const len6 = data26.length;
 for(let i6=0; i6<len6; i6++){
-if(!(validate143(data25[i6], {instancePath:instancePath+"/results/" + i6,parentData:data25,parentDataProperty:i6,rootData,dynamicAnchors}))){
+if(!(validate143(data26[i6], {instancePath:instancePath+"/results/" + i6,parentData:data26,parentDataProperty:i6,rootData,dynamicAnchors}))){
 vErrors = vErrors === null ? validate143.errors : vErrors.concat(validate143.errors);
 errors = vErrors.length;
 }
@@ -6656,10 +6662,10 @@ validate281.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false}
 
 const schema63 = {"type":"object","properties":{"kind":{"const":"wait"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"reads":{"type":"array","items":{"$ref":"#/$defs/readQuantity"},"minItems":1,"maxItems":20},"until":{"$ref":"#/$defs/expression"},"atLeastSeconds":{"type":"integer","minimum":1,"maximum":86400},"meanwhile":{"$ref":"#/$defs/paragraph"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","reads","until","meanwhile"],"additionalProperties":false};
 
-function validate299(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate300(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate299.evaluated;
+const evaluated0 = validate300.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -7178,17 +7184,17 @@ vErrors.push(err34);
 }
 errors++;
 }
-validate299.errors = vErrors;
+validate300.errors = vErrors;
 return errors === 0;
 }
-validate299.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate300.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema64 = {"type":"object","properties":{"kind":{"const":"codes"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"comparedWith":{"$ref":"#/$defs/name"},"newCodes":{"$ref":"#/$defs/name"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name"],"additionalProperties":false};
 
-function validate318(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate319(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate318.evaluated;
+const evaluated0 = validate319.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -7616,18 +7622,18 @@ vErrors.push(err26);
 }
 errors++;
 }
-validate318.errors = vErrors;
+validate319.errors = vErrors;
 return errors === 0;
 }
-validate318.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate319.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema65 = {"type":"object","properties":{"kind":{"const":"drive"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"windows":{"type":"array","items":{"$ref":"#/$defs/driveWindow"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","windows"],"additionalProperties":false};
 const schema66 = {"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"what":{"$ref":"#/$defs/line"}},"required":["name","label","what"],"additionalProperties":false};
 
-function validate350(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate351(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate350.evaluated;
+const evaluated0 = validate351.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -7706,16 +7712,16 @@ vErrors.push(err4);
 }
 errors++;
 }
-validate350.errors = vErrors;
+validate351.errors = vErrors;
 return errors === 0;
 }
-validate350.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate351.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 
-function validate337(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate338(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate337.evaluated;
+const evaluated0 = validate338.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -8079,8 +8085,8 @@ errors++;
 }
 const len3 = data18.length;
 for(let i3=0; i3<len3; i3++){
-if(!(validate350(data18[i3], {instancePath:instancePath+"/windows/" + i3,parentData:data18,parentDataProperty:i3,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate350.errors : vErrors.concat(validate350.errors);
+if(!(validate351(data18[i3], {instancePath:instancePath+"/windows/" + i3,parentData:data18,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate351.errors : vErrors.concat(validate351.errors);
 errors = vErrors.length;
 }
 }
@@ -8183,17 +8189,17 @@ vErrors.push(err30);
 }
 errors++;
 }
-validate337.errors = vErrors;
+validate338.errors = vErrors;
 return errors === 0;
 }
-validate337.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate338.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema67 = {"type":"object","properties":{"kind":{"const":"compute"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false};
 
-function validate359(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate360(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate359.evaluated;
+const evaluated0 = validate360.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -8577,17 +8583,17 @@ vErrors.push(err24);
 }
 errors++;
 }
-validate359.errors = vErrors;
+validate360.errors = vErrors;
 return errors === 0;
 }
-validate359.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate360.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema68 = {"type":"object","properties":{"kind":{"const":"restore"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise"],"additionalProperties":false};
 
-function validate374(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate375(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate374.evaluated;
+const evaluated0 = validate375.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -8971,18 +8977,18 @@ vErrors.push(err24);
 }
 errors++;
 }
-validate374.errors = vErrors;
+validate375.errors = vErrors;
 return errors === 0;
 }
-validate374.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate375.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema69 = {"type":"object","properties":{"kind":{"const":"finding"},"id":{"$ref":"#/$defs/name"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"result":{"enum":["in","out","too-close","not-judged"]},"verdict":{"$ref":"#/$defs/paragraph"},"cause":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"correction":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"customer":{"type":"array","items":{"$ref":"#/$defs/sentence"},"maxItems":60},"nextProcedure":{"$ref":"#/$defs/procedureId"}},"required":["id","number","title","action","kind","result","verdict","cause","correction","customer"],"additionalProperties":false};
 const schema70 = {"type":"object","properties":{"text":{"$ref":"#/$defs/paragraph"},"when":{"$ref":"#/$defs/expression"}},"required":["text"],"additionalProperties":false};
 
-function validate402(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate403(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate402.evaluated;
+const evaluated0 = validate403.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -9035,16 +9041,16 @@ vErrors.push(err2);
 }
 errors++;
 }
-validate402.errors = vErrors;
+validate403.errors = vErrors;
 return errors === 0;
 }
-validate402.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate403.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 
-function validate389(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate390(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate389.evaluated;
+const evaluated0 = validate390.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -9421,8 +9427,8 @@ errors++;
 }
 const len3 = data19.length;
 for(let i3=0; i3<len3; i3++){
-if(!(validate402(data19[i3], {instancePath:instancePath+"/cause/" + i3,parentData:data19,parentDataProperty:i3,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate402.errors : vErrors.concat(validate402.errors);
+if(!(validate403(data19[i3], {instancePath:instancePath+"/cause/" + i3,parentData:data19,parentDataProperty:i3,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate403.errors : vErrors.concat(validate403.errors);
 errors = vErrors.length;
 }
 }
@@ -9453,8 +9459,8 @@ errors++;
 }
 const len4 = data21.length;
 for(let i4=0; i4<len4; i4++){
-if(!(validate402(data21[i4], {instancePath:instancePath+"/correction/" + i4,parentData:data21,parentDataProperty:i4,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate402.errors : vErrors.concat(validate402.errors);
+if(!(validate403(data21[i4], {instancePath:instancePath+"/correction/" + i4,parentData:data21,parentDataProperty:i4,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate403.errors : vErrors.concat(validate403.errors);
 errors = vErrors.length;
 }
 }
@@ -9485,8 +9491,8 @@ errors++;
 }
 const len5 = data23.length;
 for(let i5=0; i5<len5; i5++){
-if(!(validate402(data23[i5], {instancePath:instancePath+"/customer/" + i5,parentData:data23,parentDataProperty:i5,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate402.errors : vErrors.concat(validate402.errors);
+if(!(validate403(data23[i5], {instancePath:instancePath+"/customer/" + i5,parentData:data23,parentDataProperty:i5,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate403.errors : vErrors.concat(validate403.errors);
 errors = vErrors.length;
 }
 }
@@ -9519,17 +9525,17 @@ vErrors.push(err31);
 }
 errors++;
 }
-validate389.errors = vErrors;
+validate390.errors = vErrors;
 return errors === 0;
 }
-validate389.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate390.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema71 = {"type":"object","properties":{"kind":{"const":"ramp"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"name":{"$ref":"#/$defs/name"},"channels":{"type":"array","items":{"$ref":"#/$defs/channel"},"minItems":1,"maxItems":4},"target":{"type":"number"},"finds":{"type":"array","items":{"$ref":"#/$defs/foundQuantity"},"minItems":1,"maxItems":20},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","channels","target","finds"],"additionalProperties":false};
 
-function validate409(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate410(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate409.evaluated;
+const evaluated0 = validate410.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -10072,17 +10078,17 @@ vErrors.push(err36);
 }
 errors++;
 }
-validate409.errors = vErrors;
+validate410.errors = vErrors;
 return errors === 0;
 }
-validate409.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate410.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema72 = {"type":"object","properties":{"kind":{"const":"photo"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"cannotMeasure":{"$ref":"#/$defs/exit"},"name":{"$ref":"#/$defs/name"},"shows":{"type":"array","items":{"$ref":"#/$defs/line"},"minItems":1,"maxItems":10}},"required":["id","number","title","action","kind","otherwise","cannotMeasure","name","shows"],"additionalProperties":false};
 
-function validate428(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate429(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate428.evaluated;
+const evaluated0 = validate429.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -10550,18 +10556,18 @@ vErrors.push(err30);
 }
 errors++;
 }
-validate428.errors = vErrors;
+validate429.errors = vErrors;
 return errors === 0;
 }
-validate428.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate429.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema73 = {"type":"object","properties":{"kind":{"const":"call"},"id":{"$ref":"#/$defs/identifier"},"number":{"description":"As people say it: 11, 16a.","type":"string","pattern":"^[A-Za-z0-9]+$","maxLength":8},"title":{"$ref":"#/$defs/label"},"action":{"$ref":"#/$defs/line"},"short":{"$ref":"#/$defs/label"},"notes":{"type":"array","items":{"$ref":"#/$defs/paragraph"},"minItems":1,"maxItems":10},"why":{"$ref":"#/$defs/paragraph"},"cautions":{"type":"array","items":{"$ref":"#/$defs/caution"},"maxItems":12},"picture":{"$ref":"#/$defs/picture"},"disturbs":{"type":"array","items":{"$ref":"#/$defs/disturbed"},"minItems":1,"maxItems":12},"stay":{"type":"boolean"},"release":{"$ref":"#/$defs/releasePoint"},"verify":{"$ref":"#/$defs/verification"},"next":{"type":"array","items":{"$ref":"#/$defs/branch"},"maxItems":30},"otherwise":{"$ref":"#/$defs/exit"},"results":{"type":"array","items":{"$ref":"#/$defs/result"},"maxItems":30},"procedure":{"$ref":"#/$defs/procedureId"},"version":{"type":"integer","minimum":1,"maximum":100000},"takes":{"type":"array","items":{"$ref":"#/$defs/takenResult"},"maxItems":30},"finds":{"type":"array","items":{"$ref":"#/$defs/calledFinding"},"maxItems":30}},"required":["id","number","title","action","kind","otherwise","procedure","version","takes","finds"],"additionalProperties":false};
 const schema74 = {"type":"object","properties":{"name":{"$ref":"#/$defs/name"},"label":{"$ref":"#/$defs/label"},"unit":{"$ref":"#/$defs/unit"},"sense":{"$ref":"#/$defs/sense"},"band":{"$ref":"#/$defs/band"},"from":{"$ref":"#/$defs/name"}},"required":["name","label","unit","from"],"additionalProperties":false};
 
-function validate462(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate463(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate462.evaluated;
+const evaluated0 = validate463.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -10668,17 +10674,17 @@ vErrors.push(err5);
 }
 errors++;
 }
-validate462.errors = vErrors;
+validate463.errors = vErrors;
 return errors === 0;
 }
-validate462.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate463.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 const schema75 = {"type":"object","properties":{"finding":{"$ref":"#/$defs/name"},"name":{"$ref":"#/$defs/name"}},"required":["finding","name"],"additionalProperties":false};
 
-function validate470(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate471(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate470.evaluated;
+const evaluated0 = validate471.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -10741,16 +10747,16 @@ vErrors.push(err3);
 }
 errors++;
 }
-validate470.errors = vErrors;
+validate471.errors = vErrors;
 return errors === 0;
 }
-validate470.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate471.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 
-function validate446(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
+function validate447(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
 let vErrors = null;
 let errors = 0;
-const evaluated0 = validate446.evaluated;
+const evaluated0 = validate447.evaluated;
 if(evaluated0.dynamicProps){
 evaluated0.props = undefined;
 }
@@ -11219,8 +11225,8 @@ errors++;
 }
 const len5 = data24.length;
 for(let i5=0; i5<len5; i5++){
-if(!(validate462(data24[i5], {instancePath:instancePath+"/takes/" + i5,parentData:data24,parentDataProperty:i5,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate462.errors : vErrors.concat(validate462.errors);
+if(!(validate463(data24[i5], {instancePath:instancePath+"/takes/" + i5,parentData:data24,parentDataProperty:i5,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate463.errors : vErrors.concat(validate463.errors);
 errors = vErrors.length;
 }
 }
@@ -11251,8 +11257,8 @@ errors++;
 }
 const len6 = data26.length;
 for(let i6=0; i6<len6; i6++){
-if(!(validate470(data26[i6], {instancePath:instancePath+"/finds/" + i6,parentData:data26,parentDataProperty:i6,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate470.errors : vErrors.concat(validate470.errors);
+if(!(validate471(data26[i6], {instancePath:instancePath+"/finds/" + i6,parentData:data26,parentDataProperty:i6,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate471.errors : vErrors.concat(validate471.errors);
 errors = vErrors.length;
 }
 }
@@ -11279,10 +11285,10 @@ vErrors.push(err35);
 }
 errors++;
 }
-validate446.errors = vErrors;
+validate447.errors = vErrors;
 return errors === 0;
 }
-validate446.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
+validate447.evaluated = {"props":true,"dynamicProps":false,"dynamicItems":false};
 
 
 function validate111(data, {instancePath="", parentData, parentDataProperty, rootData=data, dynamicAnchors={}}={}){
@@ -11361,8 +11367,8 @@ props0 = true;
 }
 }
 else if(tag0 === "wait"){
-if(!(validate299(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate299.errors : vErrors.concat(validate299.errors);
+if(!(validate300(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate300.errors : vErrors.concat(validate300.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -11370,8 +11376,8 @@ props0 = true;
 }
 }
 else if(tag0 === "codes"){
-if(!(validate318(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate318.errors : vErrors.concat(validate318.errors);
+if(!(validate319(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate319.errors : vErrors.concat(validate319.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -11379,8 +11385,8 @@ props0 = true;
 }
 }
 else if(tag0 === "drive"){
-if(!(validate337(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate337.errors : vErrors.concat(validate337.errors);
+if(!(validate338(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate338.errors : vErrors.concat(validate338.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -11388,8 +11394,8 @@ props0 = true;
 }
 }
 else if(tag0 === "compute"){
-if(!(validate359(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate359.errors : vErrors.concat(validate359.errors);
+if(!(validate360(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate360.errors : vErrors.concat(validate360.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -11397,8 +11403,8 @@ props0 = true;
 }
 }
 else if(tag0 === "restore"){
-if(!(validate374(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate374.errors : vErrors.concat(validate374.errors);
+if(!(validate375(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate375.errors : vErrors.concat(validate375.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -11406,8 +11412,8 @@ props0 = true;
 }
 }
 else if(tag0 === "finding"){
-if(!(validate389(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate389.errors : vErrors.concat(validate389.errors);
+if(!(validate390(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate390.errors : vErrors.concat(validate390.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -11415,8 +11421,8 @@ props0 = true;
 }
 }
 else if(tag0 === "ramp"){
-if(!(validate409(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate409.errors : vErrors.concat(validate409.errors);
+if(!(validate410(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate410.errors : vErrors.concat(validate410.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -11424,8 +11430,8 @@ props0 = true;
 }
 }
 else if(tag0 === "photo"){
-if(!(validate428(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate428.errors : vErrors.concat(validate428.errors);
+if(!(validate429(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate429.errors : vErrors.concat(validate429.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){
@@ -11433,8 +11439,8 @@ props0 = true;
 }
 }
 else if(tag0 === "call"){
-if(!(validate446(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
-vErrors = vErrors === null ? validate446.errors : vErrors.concat(validate446.errors);
+if(!(validate447(data, {instancePath,parentData,parentDataProperty,rootData,dynamicAnchors}))){
+vErrors = vErrors === null ? validate447.errors : vErrors.concat(validate447.errors);
 errors = vErrors.length;
 }
 if(props0 !== true){

@@ -18,6 +18,7 @@ export function askedFor(step: Step): readonly string[] {
 
 /** What a step keeps as a whole under its own name. */
 function namedAsWhole(step: Step): readonly string[] {
+  if (step.kind === 'hold') return step.heldAs === undefined ? [] : [step.heldAs];
   return 'name' in step ? [step.name] : [];
 }
 

@@ -189,6 +189,7 @@ export const everyKindSteps: readonly Step[] = [
     kind: 'hold',
     title: 'Hold',
     action: 'Hold the pressure.',
+    heldAs: 'heldFor',
     seconds: 30,
     begins: [
       {

@@ -77,7 +77,7 @@ describe('crankcase valve seal, warm half, coarse gauge and coarse bus: too clos
         'The manifold valve seals, but at 3.0 ± 1.8 kPa (step 11) it is too close to call.',
         'Warm, with the coolant at 79 ± 1.3 °C (step 11a), an end of the band, 1.5 kPa to 5.0 kPa, lies inside the measurement uncertainty.',
         'It was taken three times.',
-        'It stayed quiet for 30 s at 10 kPa.',
+        'It stayed quiet for 30 s (step 12a) after the pressure had been raised to 11.8 ± 1.8 kPa (step 11).',
         'Key on and engine off, manifold pressure was 94 ± 0.8 kPa (step 5) and boost pressure 94 ± 0.8 kPa (step 6); the air of the place was 93.9 ± 0.3 kPa (step 4).',
         'How a sensor followed the gauge is too close to call: manifold 1.003 ± 0.007 (step 11) and boost 0.984 ± 0.008 (step 11) per gauge, their widest gap -1.0 ± 0.9 kPa (step 11).',
       ].join(' '),

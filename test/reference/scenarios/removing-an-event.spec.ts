@@ -46,7 +46,9 @@ describe('a write-up without one of its events', () => {
     const rest = writeUpTexts({ procedure, state: without(reading('manifoldPressure')) }).cause;
     expect(rest).not.toContain('94.2');
     expect(rest).not.toContain('manifold pressure was');
-    expect(rest).toContain('It stayed quiet for 30 s at 10 kPa.');
+    expect(rest).toContain(
+      'It stayed quiet for 30 s (step 12a) after the pressure had been raised to 11.8 ± 0.3 kPa (step 11).',
+    );
   });
 
   it('gives no seal point that was not found', () => {
