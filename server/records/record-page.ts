@@ -1,4 +1,5 @@
 import type { EntityManager } from 'typeorm';
+import type { RunHeader } from '../../procedures/engine';
 import type { RecordColumn, RecordPage, RecordRow, RecordsQuery } from './records.dto';
 
 const pageSize = 50;
@@ -18,6 +19,7 @@ const orderBy: Readonly<Record<RecordColumn, string>> = {
 
 interface ListedRow {
   run_id: string;
+  header: string;
   procedure_title: string;
   version: number;
   repair_order: string;
@@ -43,7 +45,7 @@ export async function recordPage(manager: EntityManager, query: RecordsQuery): P
   const offset = (Number(query.page ?? '1') - 1) * pageSize;
   const [counted] = await manager.query<{ total: string }[]>(`SELECT count(*) AS total FROM run ${where}`, values);
   const rows = await manager.query<ListedRow[]>(
-    `SELECT run_id, procedure_title, version, repair_order, car, person_name, opened_at, closed_at, status, finding,
+    `SELECT run_id, header, procedure_title, version, repair_order, car, person_name, opened_at, closed_at, status, finding,
        verdict, result
      FROM run ${where} ORDER BY ${order} LIMIT ${pageSize} OFFSET ${offset}`,
     values,
@@ -51,7 +53,7 @@ export async function recordPage(manager: EntityManager, query: RecordsQuery): P
   return { total: Number(counted?.total ?? 0), rows: rows.map(rowOnTheWire) };
 }
 
-function filterOf({ text, finding, kind }: RecordsQuery): { where: string; values: string[] } {
+function filterOf({ text, finding, kind, status }: RecordsQuery): { where: string; values: string[] } {
   const values: string[] = [];
   const conditions: string[] = [];
   const add = (condition: (place: string) => string, value: string) => {
@@ -61,6 +63,7 @@ function filterOf({ text, finding, kind }: RecordsQuery): { where: string; value
   for (const word of wordsOf(text ?? '')) add((place) => `searched LIKE ${place}`, `%${literally(word)}%`);
   if (finding) add((place) => `finding = ${place}`, finding);
   if (kind) add((place) => `procedure_id = ${place}`, kind);
+  if (status) add((place) => `status = ${place}`, status);
   return { where: conditions.length === 0 ? '' : `WHERE ${conditions.join(' AND ')}`, values };
 }
 
@@ -78,6 +81,7 @@ function literally(word: string): string {
 }
 
 function rowOnTheWire(row: ListedRow): RecordRow {
+  const { half } = JSON.parse(row.header) as RunHeader;
   return {
     runId: row.run_id,
     procedureTitle: row.procedure_title,
@@ -87,6 +91,7 @@ function rowOnTheWire(row: ListedRow): RecordRow {
     person: row.person_name,
     openedAt: Number(row.opened_at),
     status: row.status,
+    ...(half === undefined ? {} : { half }),
     ...(row.closed_at === null ? {} : { closedAt: Number(row.closed_at) }),
     ...(row.finding === null ? {} : { finding: row.finding }),
     ...(row.verdict === null ? {} : { verdict: row.verdict }),

@@ -31,6 +31,8 @@ export const recordColumns = [
 export type RecordColumn = (typeof recordColumns)[number];
 const sorts = recordColumns.flatMap((column) => [column, `-${column}`]);
 
+const runStates = ['open', 'set-aside', 'stopped', 'lead-called', 'closed', 'signed'] satisfies RunState['status'][];
+
 export class RecordsQuery {
   /** Looked for in order, car, VIN, person, procedure, verdict and concern; every word must be there. */
   @IsOptional()
@@ -46,6 +48,11 @@ export class RecordsQuery {
   @IsOptional()
   @PlainText({ min: 0, max: 100 })
   declare kind?: string;
+
+  /** A run's state. */
+  @IsOptional()
+  @IsIn(runStates)
+  declare status?: RunState['status'];
 
   /** A column, with a minus in front for the last first. */
   @IsOptional()
@@ -87,6 +94,11 @@ export class RecordRow {
 
   @IsString()
   declare status: RunState['status'];
+
+  /** Which half of a pair; absent for a run that is none. */
+  @IsOptional()
+  @IsIn(['cold', 'warm'])
+  declare half?: 'cold' | 'warm';
 
   @IsOptional()
   @IsString()

@@ -1,6 +1,7 @@
 import { HttpClient, httpResource, type HttpResourceRef } from '@angular/common/http';
 import { inject, Injectable } from '@angular/core';
 import { firstValueFrom } from 'rxjs';
+import type { RunState } from '../../../procedures/engine';
 import { readRecordDetail, readRecordPage, type RecordDetail, type RecordPage } from './record-wire';
 
 /** What the list is asked for. */
@@ -9,13 +10,15 @@ export interface RecordQuery {
   readonly text: string;
   /** A finding's id; empty for any. */
   readonly finding: string;
+  /** A run's state; empty for any. */
+  readonly status: RunState['status'] | '';
   readonly sort: RecordSort;
 }
 
 /** The column, with a minus in front for the newest or last first. */
 export type RecordSort = `${'' | '-'}${RecordColumn}`;
 
-export type RecordColumn = 'openedAt' | 'repairOrder' | 'car' | 'person' | 'procedureTitle' | 'verdict';
+export type RecordColumn = 'openedAt' | 'repairOrder' | 'car' | 'person' | 'procedureTitle' | 'status' | 'verdict';
 
 /** The server's records: read only. */
 @Injectable({ providedIn: 'root' })
@@ -24,8 +27,14 @@ export class RecordArchive {
 
   /** One page of the list, pages counted from 1. Fails with `ApiProblem`. */
   async page(query: RecordQuery, page: number): Promise<RecordPage> {
-    const { text, finding, sort } = query;
-    const params = { ...(text === '' ? {} : { text }), ...(finding === '' ? {} : { finding }), sort, page };
+    const { text, finding, status, sort } = query;
+    const params = {
+      ...(text === '' ? {} : { text }),
+      ...(finding === '' ? {} : { finding }),
+      ...(status === '' ? {} : { status }),
+      sort,
+      page,
+    };
     return readRecordPage(await firstValueFrom(this.http.get<unknown>('/api/records', { params })));
   }
 

@@ -67,8 +67,11 @@ describe('the Record room’s list', () => {
   });
 
   it('asks for what the address says, so that the way back finds the same list', async () => {
-    await harness.navigateByUrl('/records?text=heron&finding=doesNotSeal&sort=car');
-    await answer('/api/records?text=heron&finding=doesNotSeal&sort=car&page=1', { total: 1, rows: [row] });
+    await harness.navigateByUrl('/records?text=heron&finding=doesNotSeal&status=closed&sort=car');
+    await answer('/api/records?text=heron&finding=doesNotSeal&status=closed&sort=car&page=1', {
+      total: 1,
+      rows: [row],
+    });
     expect((byRole(root(), 'textbox', 'Find') as HTMLInputElement).value).toBe('heron');
     expect(textOf(byRole(root(), 'status', 'record'))).toBe('1 record');
   });

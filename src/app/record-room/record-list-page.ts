@@ -10,6 +10,7 @@ import { KnownFindings } from './known-findings';
 import type { RecordQuery, RecordSort } from './record-archive';
 import { RecordListStore } from './record-list-store';
 import { RecordTable } from './record-table';
+import { statusWords } from './record-words';
 
 /** Long enough for a word to be typed, short enough to feel immediate. */
 const typingPauseMs = 250;
@@ -35,12 +36,14 @@ export class RecordListPage {
   /** Of the address: what the list is asked for. */
   readonly text = input<string>();
   readonly finding = input<string>();
+  readonly status = input<string>();
   readonly sort = input<string>();
 
   private readonly table = viewChild(RecordTable);
 
-  protected readonly form = this.forms.group({ text: '', finding: '' });
+  protected readonly form = this.forms.group({ text: '', finding: '', status: '' });
   protected readonly findings = this.known.groups;
+  protected readonly states = states;
   protected readonly rowHeight = toSignal(
     this.breakpoints.observe(narrow).pipe(map(({ matches }) => (matches ? 84 : 60))),
     { initialValue: 60 },
@@ -52,11 +55,16 @@ export class RecordListPage {
     return `${total.toLocaleString('en-GB')} ${total === 1 ? 'record' : 'records'}`;
   });
   protected readonly isFiltered = computed(() => {
-    const { text, finding } = this.store.query();
-    return text !== '' || finding !== '';
+    const { text, finding, status } = this.store.query();
+    return text !== '' || finding !== '' || status !== '';
   });
   private readonly asked = computed<RecordQuery>(
-    () => ({ text: this.text() ?? '', finding: this.finding() ?? '', sort: sortOf(this.sort()) }),
+    () => ({
+      text: this.text() ?? '',
+      finding: this.finding() ?? '',
+      status: statusOf(this.status()),
+      sort: sortOf(this.sort()),
+    }),
     { equal: (a, b) => JSON.stringify(a) === JSON.stringify(b) },
   );
 
@@ -74,7 +82,7 @@ export class RecordListPage {
   }
 
   protected clear(): void {
-    this.form.setValue({ text: '', finding: '' });
+    this.form.setValue({ text: '', finding: '', status: '' });
   }
 
   /** Down from the field goes to the list. */
@@ -95,8 +103,8 @@ export class RecordListPage {
     toObservable(this.asked)
       .pipe(takeUntilDestroyed())
       .subscribe((query) => {
-        const { text, finding } = query;
-        this.form.setValue({ text, finding }, { emitEvent: false });
+        const { text, finding, status } = query;
+        this.form.setValue({ text, finding, status }, { emitEvent: false });
         void this.store.ask(query);
       });
   }
@@ -105,11 +113,13 @@ export class RecordListPage {
     this.form.valueChanges
       .pipe(
         debounceTime(typingPauseMs),
-        map(({ text = '', finding = '' }) => ({ text: text.trim(), finding })),
-        distinctUntilChanged((a, b) => a.text === b.text && a.finding === b.finding),
+        map(({ text = '', finding = '', status = '' }) => ({ text: text.trim(), finding, status })),
+        distinctUntilChanged((a, b) => a.text === b.text && a.finding === b.finding && a.status === b.status),
         takeUntilDestroyed(),
       )
-      .subscribe(({ text, finding }) => void this.rememberInAddress({ text: text || null, finding: finding || null }));
+      .subscribe(({ text, finding, status }) => {
+        void this.rememberInAddress({ text: text || null, finding: finding || null, status: status || null });
+      });
   }
 
   private rememberInAddress(queryParams: Record<string, string | null>): Promise<boolean> {
@@ -117,7 +127,16 @@ export class RecordListPage {
   }
 }
 
-const columns = new Set(['openedAt', 'repairOrder', 'car', 'person', 'procedureTitle', 'verdict']);
+const columns = new Set(['openedAt', 'repairOrder', 'car', 'person', 'procedureTitle', 'status', 'verdict']);
+const states = (Object.keys(statusWords) as (keyof typeof statusWords)[]).map((status) => ({
+  status,
+  words: statusWords[status],
+}));
+
+/** What the address says, where it is a state; else any. */
+function statusOf(text: string | undefined): RecordQuery['status'] {
+  return states.find(({ status }) => status === text)?.status ?? '';
+}
 
 /** What the address says, where it says something that can be sorted by; else the newest first. */
 function sortOf(text: string | undefined): RecordSort {

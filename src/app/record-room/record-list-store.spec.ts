@@ -24,7 +24,7 @@ function rowsFrom(first: number, count: number, car = 'Merrow Heron'): RecordRow
 describe('the list of records', () => {
   let server: HttpTestingController;
   let store: RecordListStore;
-  const newest = { text: '', finding: '', sort: '-openedAt' } as const;
+  const newest = { text: '', finding: '', status: '', sort: '-openedAt' } as const;
   const url = (page: number, more = '') => `/api/records?${more}sort=-openedAt&page=${page}`;
 
   beforeEach(() => {

@@ -12,7 +12,7 @@ export type ListStatus = 'loading' | 'ready' | 'failed';
 export class RecordListStore {
   private readonly archive = inject(RecordArchive);
 
-  private readonly asked = signal<RecordQuery>({ text: '', finding: '', sort: '-openedAt' });
+  private readonly asked = signal<RecordQuery>({ text: '', finding: '', status: '', sort: '-openedAt' });
   private readonly pages = signal<ReadonlyMap<number, readonly RecordRow[]>>(new Map());
   private readonly count = signal<number | undefined>(undefined);
   private readonly problem = signal<unknown>(undefined);

@@ -13,6 +13,7 @@ const rows: RecordRow[] = Array.from({ length: 200 }, (_, index) => ({
   person: 'I. Okafor',
   openedAt: new Date(2026, 11, 2, 9, 2).getTime(),
   status: index === 1 ? 'set-aside' : 'closed',
+  half: index % 2 === 0 ? 'cold' : 'warm',
   ...(index === 0 ? { result: 'out' as const, verdict: 'The manifold valve does not seal.' } : {}),
 }));
 
@@ -56,6 +57,17 @@ describe('the table of records', () => {
     expect(textOf(first!)).toContain('out of band The manifold valve does not seal.');
     expect(textOf(first!)).toMatch(/2 Dec 2026\s*9:02/);
     expect(textOf(second!)).toContain('set aside');
+  });
+
+  it('tells the halves of a pair apart, and a run that is not closed from one that is', () => {
+    const [, first, second] = allByRole(root(), 'row');
+    expect(textOf(first!)).toMatch(/4400\s*cold half/);
+    expect(textOf(second!)).toMatch(/4401\s*warm half/);
+    expect([first, second].map((row) => row!.querySelector('.state .open')?.textContent)).toEqual([
+      undefined,
+      'set aside',
+    ]);
+    expect(textOf(first!)).toContain('closed');
   });
 
   it('is walked by arrows and opens the current row by Enter', async () => {

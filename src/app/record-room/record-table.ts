@@ -69,11 +69,13 @@ export class RecordTable {
   protected readonly current = linkedSignal<unknown, number>({ source: this.question, computation: () => 0 });
   protected readonly words = resultWords;
   protected readonly status = statusWords;
+  protected readonly isEnded = ({ status }: RecordRow): boolean => status === 'closed' || status === 'signed';
   protected readonly columns: readonly Column[] = [
     { sortBy: 'openedAt', label: 'Opened' },
     { sortBy: 'repairOrder', label: 'Order' },
     { sortBy: 'car', label: 'Car' },
     { sortBy: 'procedureTitle', label: 'Procedure' },
+    { sortBy: 'status', label: 'State' },
     { sortBy: 'verdict', label: 'Finding' },
     { sortBy: 'person', label: 'By' },
   ];

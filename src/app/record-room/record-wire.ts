@@ -14,6 +14,8 @@ export interface RecordRow {
   readonly openedAt: string | number;
   readonly closedAt?: string | number | null;
   readonly status: RunState['status'];
+  /** Which half of a pair; absent for a run that is none. */
+  readonly half?: 'cold' | 'warm';
   /** The finding's id. */
   readonly finding?: string | null;
   /** The finding in words. */
