@@ -29,6 +29,19 @@ describe('WhySheet', () => {
     expect(text).toContain('It leads to step 5');
   });
 
+  it('says which it was where no rule decided', async () => {
+    const chosen = tooClose().do({ do: 'overrule', exit: 'otherwise', reason: 'seen' });
+    const cases = [walkedTo('boost-pressure'), walkedTo('flow-open'), chosen];
+    const texts: string[] = [];
+    for (const walk of cases) {
+      texts.push(textOf((await shown(walk)).fixture));
+      TestBed.resetTestingModule();
+    }
+    expect(texts[0]).toContain('No other rule of this step held.');
+    expect(texts[1]).toContain('The author gave this step one way only.');
+    expect(texts[2]).toContain('A person chose this way instead of the one that the rules led to.');
+  });
+
   it('offers the author\u2019s other ways, and takes one with a reason', async () => {
     const { fixture, commands } = await shown(tooClose());
     buttonNamed(fixture, 'This does not fit: take another way').click();

@@ -44,6 +44,22 @@ export class WhySheet {
 
   protected readonly decision = computed(() => lastDecision(this.run()));
   protected readonly way = computed(() => this.decision()?.walked.way);
+  /** Why it went this way though no rule of the step decided it. */
+  protected readonly without = computed(() => {
+    const decision = this.decision();
+    const way = decision?.walked.way;
+    if (decision === undefined || way === undefined) return undefined;
+    const { step, walked } = decision;
+    // The claim of a way that was overruled begins with that event.
+    const isChosen = this.run().events.some(
+      ({ seq, type }) => type === 'branch-overruled' && seq === walked.claimedSeq,
+    );
+    if (isChosen) return 'A person chose this way instead of the one that the rules led to.';
+    if (way.exit === 'stop') return 'The test was stopped there.';
+    if (way.exit === 'cannot-measure') return 'Somebody said that it could not be done there.';
+    const isOnly = !('next' in step) || step.next === undefined || step.next.length === 0;
+    return isOnly ? 'The author gave this step one way only.' : 'No other rule of this step held.';
+  });
   protected readonly led = computed(() => {
     const to = this.way()?.to;
     return to === undefined ? undefined : this.run().procedure.step(to);
