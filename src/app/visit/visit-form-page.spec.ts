@@ -5,6 +5,7 @@ import { provideRouter, Router } from '@angular/router';
 import { OfflineStore } from '../core/offline-store';
 import { SettingsBook } from '../core/settings-book';
 import { coreForSpecs, eventually, registeredTablet, workOffline } from '../core/testing/core-for-specs';
+import { VisitDesk } from './visit-desk';
 import { VisitFormPage } from './visit-form-page';
 
 @Component({ selector: 'bay-blank', template: '', changeDetection: ChangeDetectionStrategy.OnPush })
@@ -124,6 +125,28 @@ describe('VisitFormPage', () => {
     await eventually(async () =>
       expect(await store.settings.get('visit-draft:new:p-okafor')).toMatchObject({ value: { repairOrder: '44' } }),
     );
+  });
+
+  it('finds again what the end of the page did not let it write', async () => {
+    const store = await signedIn();
+    const first = await form();
+    await first.fixture.whenStable();
+    const write = jest
+      .spyOn(TestBed.inject(SettingsBook), 'write')
+      .mockImplementation(() => new Promise(() => undefined));
+    await first.type('odometer', '61');
+    await first.type('odometer', '61240');
+    window.dispatchEvent(new Event('pagehide'));
+    expect(await store.settings.get('visit-draft:new:p-okafor')).toBeUndefined();
+    first.fixture.destroy();
+    document.body.replaceChildren();
+    write.mockRestore();
+
+    // The next page knows nothing of this one.
+    const desk = TestBed.runInInjectionContext(() => new VisitDesk());
+    expect(await desk.draft(undefined)).toMatchObject({ odometer: '61240' });
+    expect(await store.settings.get('visit-draft:new:p-okafor')).toMatchObject({ value: { odometer: '61240' } });
+    await eventually(() => expect(localStorage).toHaveLength(0));
   });
 
   it('forgets what was typed once the visit is kept', async () => {
