@@ -120,7 +120,7 @@ describe('BenchPage', () => {
       await store.visits.put(visit('v-1', '4402'));
       await store.runs.put(run('r-1', { summary: { ...summary, status: 'closed', verdict: 'Does not seal' } }));
     });
-    await eventually(() => expect(text()).toContain('warm half of a pair'));
+    await eventually(() => expect(text()).toContain('warm half not recorded yet'));
     expect(text()).toContain('Merrow Heron, silver: Does not seal');
   });
 

@@ -29,7 +29,7 @@ export interface ClosedRun {
 export interface WaitingVisit {
   readonly visit: Visit;
   readonly car: string;
-  /** `2 procedures fit`, `warm half of a pair`, or who is at it elsewhere. */
+  /** `2 procedures fit`, `warm half not recorded yet`, or who is at it elsewhere. */
   readonly fits: string;
   /** Whether someone is at it on another tablet. */
   readonly isTaken: boolean;
@@ -136,7 +136,7 @@ function waitingVisits(
       return ofVisit.some(({ isHere }) => isHere) ? [] : [{ visit, car, fits, isTaken: true }];
     }
     const half = missingHalf(ofVisit);
-    return half === undefined ? [] : [{ visit, car, fits: `${half} half of a pair`, isTaken: false }];
+    return half === undefined ? [] : [{ visit, car, fits: `${half} half not recorded yet`, isTaken: false }];
   });
 }
 

@@ -11,7 +11,7 @@ import { readProcedureFile } from './read-procedure-file';
 
 /** What was last done, for the person to see. */
 export interface DeskNotice {
-  readonly tone: 'done' | 'failed';
+  readonly tone: 'done' | 'unfinished' | 'failed';
   readonly text: string;
 }
 
@@ -60,7 +60,10 @@ export class MethodDeskStore {
         return this.keep(refusedImport({ fileName, text }, read.document, error));
       }
       await this.putAway();
-      this.said.set({ tone: 'done', text: `${fileName} is a draft now. ${publishingWords(problems)}` });
+      this.said.set({
+        tone: problems === 0 ? 'done' : 'unfinished',
+        text: `${fileName} is a draft now. ${publishingWords(problems)}`,
+      });
       this.list.reload();
     });
   }
