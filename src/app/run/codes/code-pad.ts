@@ -15,7 +15,9 @@ import { codeSystems, hexDigits, mayFollow } from './code-text';
     </div>
     <div class="digits">
       @for (digit of digits; track digit) {
-        <button type="button" [disabled]="!mayFollow(text(), digit)" (click)="pressed.emit(digit)">{{ digit }}</button>
+        <button type="button" [disabled]="text() === '' || !mayFollow(text(), digit)" (click)="pressed.emit(digit)">
+          {{ digit }}
+        </button>
       }
     </div>
   `,

@@ -53,6 +53,19 @@ describe('CodesEntry', () => {
     expect(commands).toEqual([{ do: 'record-codes', codes: [{ code: 'P0068', status: 'stored' }] }]);
   });
 
+  it('offers the letters first, then the digits that may follow', async () => {
+    const { fixture } = await shown();
+    await tap(fixture, 'Enter a code');
+    const open = () =>
+      [...elementOf(fixture).querySelectorAll<HTMLButtonElement>('bay-code-pad .digits button')]
+        .filter(({ disabled }) => !disabled)
+        .map(({ textContent }) => textContent?.trim());
+    expect(open()).toEqual([]);
+    window.dispatchEvent(new KeyboardEvent('keydown', { key: 'C', cancelable: true }));
+    await fixture.whenStable();
+    expect(open()).toEqual(['1', '2', '3', '0']);
+  });
+
   it('says of a maker\u2019s own code what the visit says of it', async () => {
     const { fixture } = await shown();
     await tap(fixture, 'Enter a code');

@@ -17,6 +17,8 @@ const rows: readonly PadKey[] = ['7', '8', '9', '4', '5', '6', '1', '2', '3', '-
         type="button"
         [class]="'key k' + $index"
         [attr.aria-label]="words[key] ?? null"
+        [disabled]="!takes(key)"
+        [title]="takes(key) ? '' : 'An absolute pressure is never below zero'"
         (click)="pressed.emit(key)"
       >
         {{ key === '-' ? '−' : key }}
@@ -43,6 +45,8 @@ export class NumberPad {
   /** Whether there is something to record; a tap before that is answered in words. */
   readonly isReady = input(true);
   readonly isBusy = input(false);
+  /** Whether what is read can be below zero; an absolute pressure cannot. */
+  readonly isSigned = input(true);
   readonly eraseLabel = input('Erase');
   readonly pressed = output<PadKey>();
   readonly erased = output();
@@ -51,12 +55,16 @@ export class NumberPad {
   protected readonly keys = rows;
   protected readonly words: Partial<Record<PadKey, string>> = { '-': 'minus', '.': 'decimal point' };
 
+  protected takes(key: PadKey): boolean {
+    return key !== '-' || this.isSigned();
+  }
+
   protected take(event: KeyboardEvent): void {
     if (event.defaultPrevented || event.ctrlKey || event.metaKey || event.altKey || isTyping(event.target)) return;
     const key = padKeyOf(event.key);
     if (key === undefined) return;
     event.preventDefault();
-    this.pressed.emit(key);
+    if (this.takes(key)) this.pressed.emit(key);
   }
 }
 

@@ -73,6 +73,19 @@ describe('ReadingEntry', () => {
     expect(elementOf(fixture).querySelector('[role=alert]')).toBeNull();
   });
 
+  it('has no minus for an absolute pressure, on the pad or on a keyboard', async () => {
+    const { fixture } = await shown('manifold-pressure');
+    expect(buttonNamed(fixture, 'minus').disabled).toBe(true);
+    for (const key of ['-', '9']) window.dispatchEvent(new KeyboardEvent('keydown', { key }));
+    await fixture.whenStable();
+    expect(elementOf(fixture).querySelector('.figure .num')?.textContent).toBe('9');
+  });
+
+  it('has a minus for a temperature', async () => {
+    const { fixture } = await shown('cold-enough', 'wait');
+    expect(buttonNamed(fixture, 'minus').disabled).toBe(false);
+  });
+
   it('takes a hardware keyboard\u2019s digits, and no letter', async () => {
     const { fixture } = await shown('manifold-pressure');
     for (const key of ['9', 'x', '4', ',', 'e', '2']) window.dispatchEvent(new KeyboardEvent('keydown', { key }));
