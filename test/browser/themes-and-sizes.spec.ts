@@ -55,6 +55,14 @@ test('each kind of screen fits a tablet both ways and a phone, breaks no rule of
   await checkScreen(page, 'Visit');
 
   await page.getByRole('button', { name: /Start the cold half/ }).click();
+  // What comes before the procedure is read before its card can be confirmed, without scrolling.
+  const deference = page.locator('bay-start-entry bay-hand-side .deference');
+  for (const size of sizes) {
+    await page.setViewportSize(size);
+    await expect.soft(deference, `at ${size.width} x ${size.height}`).toBeInViewport({ ratio: 1 });
+    await expect.soft(page.getByRole('button', { name: /All of this\s+is ready/ })).toBeInViewport({ ratio: 1 });
+  }
+  await checkScreen(page, 'start card');
   await walkTo(page, '2e', gear);
   await expect(page.locator('bay-number-pad')).toBeVisible();
   await checkScreen(page, 'reading step');

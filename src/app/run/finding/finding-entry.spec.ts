@@ -53,7 +53,8 @@ describe('FindingEntry', () => {
   it('shows the verdict and the write-up as the record composes it', async () => {
     const { fixture } = await shown(ended());
     expect(elementOf(fixture).querySelector('h1')?.textContent).toContain('Not completed');
-    expect(partNamed(fixture, 'Concern').textContent).toContain('composed from the record');
+    expect(textOf(fixture)).toContain('Write-up composed from the record');
+    expect(partNamed(fixture, 'Concern').querySelector('em')).toBeNull();
     expect(partNamed(fixture, 'Concern').textContent).toContain('Whistle at idle');
   });
 
@@ -95,7 +96,7 @@ describe('FindingEntry', () => {
     await fixture.whenStable();
     await write(fixture, 'Come back with another thermometer.');
     await tap('Done');
-    expect(partNamed(fixture, 'Correction').textContent).toContain('edited');
+    expect(partNamed(fixture, 'Correction').querySelector('em')?.textContent).toBe('edited');
     await tap('Keep the write-up');
     expect(walk.state.writeUp).toMatchObject({
       correction: 'Come back with another thermometer.',
@@ -111,7 +112,8 @@ describe('FindingEntry', () => {
     await write(fixture, 'Something else.');
     await tap('As the record composed it');
     await tap('Done');
-    expect(partNamed(fixture, 'Cause').textContent).toContain('composed from the record');
+    expect(partNamed(fixture, 'Cause').querySelector('em')).toBeNull();
+    expect(partNamed(fixture, 'Cause').textContent).not.toContain('Something else.');
   });
 
   it('reads back what is open, and closes only from there', async () => {

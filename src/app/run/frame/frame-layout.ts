@@ -1,13 +1,15 @@
 import type { Step } from '../../../../procedures/document';
 
 /** What a step needs room for where room is scarce; empty where the number pad does. */
-export type FrameLayout = 'listens' | 'tells' | 'looks' | 'compares' | 'pictures' | '';
+export type FrameLayout = 'starts' | 'listens' | 'tells' | 'looks' | 'compares' | 'pictures' | '';
 
 /** How the run's frame shares its room between the wide side and the hand at a step. */
 export function frameLayout(step: Step | undefined): FrameLayout {
   switch (step?.kind) {
     case undefined:
       return '';
+    case 'start':
+      return 'starts';
     case 'listen':
     case 'ramp':
       return 'listens';

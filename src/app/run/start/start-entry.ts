@@ -1,3 +1,4 @@
+import { NgTemplateOutlet } from '@angular/common';
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import type { GearItem } from '../../core/wire';
 import { entryField } from '../entry-draft';
@@ -12,7 +13,7 @@ import { startStage } from './start-stages';
 /** The start card: what must be ready, what to do at once in danger, the cautions that hold throughout, the gear. */
 @Component({
   selector: 'bay-start-entry',
-  imports: [BigAction, CautionGate, GearChoice, HandSide, WideSide],
+  imports: [BigAction, CautionGate, GearChoice, HandSide, NgTemplateOutlet, WideSide],
   templateUrl: './start-entry.html',
   styleUrl: './start-entry.css',
   changeDetection: ChangeDetectionStrategy.OnPush,
