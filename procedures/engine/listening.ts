@@ -2,20 +2,22 @@ import {
   convert,
   differenceToBase,
   expandedUncertainty,
+  isUnit,
+  standardPressure,
+  toBase,
+  unitKind,
+} from '../calculations/for-a-run';
+import {
   findNoiseBegin,
   findSealPoint,
-  isUnit,
   sealPointFromMarks,
-  standardPressure,
   steepestRise,
-  toBase,
   trackSensors,
-  unitKind,
   type NoSealReason,
   type RampSample,
   type SealPoint,
   type SensorTracking,
-} from '../calculations/for-a-run';
+} from '../calculations/ramps';
 import type { CompiledProcedure, FoundQuantity, SeriesStep } from '../document';
 import { isSeriesStep } from '../document/step-parts';
 import { own } from './environment';

@@ -1,4 +1,4 @@
-import type { RunHeader } from '../../../procedures/engine';
+import type { RunHeader } from '../../../procedures/engine/showing';
 import { dayTime } from './time-words';
 import type { RunRow } from './stored-rows';
 import { tabletWords } from './tablet-words';

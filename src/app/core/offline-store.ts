@@ -1,6 +1,6 @@
 import { inject, Injectable, InjectionToken } from '@angular/core';
 import { Dexie, type EntityTable, type Table } from '#dexie';
-import type { RunEvent } from '../../../procedures/engine';
+import type { RunEvent } from '../../../procedures/engine/showing';
 import type { BlobRow, OutboxRow, ReceiptRow, RunRow, SettingRow, TabletKeyRow } from './stored-rows';
 import type { Colleague, GearItem, PublishedProcedure, Site, Visit, VisitRun } from './wire';
 

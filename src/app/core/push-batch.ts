@@ -1,4 +1,4 @@
-import type { RunEvent, RunHeader } from '../../../procedures/engine';
+import type { RunEvent, RunHeader } from '../../../procedures/engine/showing';
 import type { OfflineStore } from './offline-store';
 import type { OutboxDocument, OutboxEvents, OutboxRow } from './stored-rows';
 import type { Visit } from './wire';

@@ -1,5 +1,11 @@
 import { inject, Injectable } from '@angular/core';
-import { headerHash, sealEvent, type EventDraft, type RunEvent, type RunHeader } from '../../../procedures/engine';
+import {
+  headerHash,
+  sealEvent,
+  type EventDraft,
+  type RunEvent,
+  type RunHeader,
+} from '../../../procedures/engine/showing';
 import { buildId } from './build-id';
 import { OfflineStore, PracticeStore, type RunTables } from './offline-store';
 import { RunLocks } from './run-locks';

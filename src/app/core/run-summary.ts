@@ -1,5 +1,5 @@
 import type { ProcedureDocument, Step } from '../../../procedures/document';
-import type { RunState } from '../../../procedures/engine';
+import type { RunState } from '../../../procedures/engine/showing';
 import type { RunSummary } from './stored-rows';
 
 /** What the Bench shows of a run, from its state. Store it with the events that led there. */

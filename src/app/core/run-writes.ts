@@ -1,5 +1,5 @@
 import { Dexie } from '#dexie';
-import type { RunEvent } from '../../../procedures/engine';
+import type { RunEvent } from '../../../procedures/engine/showing';
 import type { OfflineStore, PracticeStore, RunTables } from './offline-store';
 import type { BlobRow, RunRow } from './stored-rows';
 

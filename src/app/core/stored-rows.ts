@@ -1,5 +1,5 @@
 import type { FindingResult } from '../../../procedures/document';
-import type { BegunAgain, RunHeader, RunState } from '../../../procedures/engine';
+import type { BegunAgain, RunHeader, RunState } from '../../../procedures/engine/showing';
 import type { Countersignature, Person } from './wire';
 
 /**

@@ -1,5 +1,5 @@
 import type { ProcedureDocument, InstrumentKind, FindingResult } from '../../../procedures/document';
-import type { BegunAgain, InstrumentRange, RunState } from '../../../procedures/engine';
+import type { BegunAgain, InstrumentRange, RunState } from '../../../procedures/engine/showing';
 
 /** What the server and the tablet say to each other, as JSON. */
 

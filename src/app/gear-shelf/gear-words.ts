@@ -1,5 +1,5 @@
 import type { InstrumentKind } from '../../../procedures/document';
-import { shownUnit, type InstrumentRange } from '../../../procedures/engine';
+import { shownUnit, type InstrumentRange } from '../../../procedures/engine/showing';
 import { daysUntil } from '../core/time-words';
 
 /** What an instrument is, as people call it. */

@@ -1,6 +1,6 @@
 import { computed, inject, Injectable, signal } from '@angular/core';
 import type { ProcedureDocument } from '../../../procedures/document';
-import { contentHash } from '../../../procedures/engine';
+import { contentHash } from '../../../procedures/engine/showing';
 import { ApiProblem } from '../core/api-problem';
 import { Sync } from '../core/sync';
 import { problemsOf } from './import-problems';

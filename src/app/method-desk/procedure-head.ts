@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
-import { shownUnit } from '../../../procedures/engine';
+import { shownUnit } from '../../../procedures/engine/showing';
 import type { ProcedureDocument } from '../../../procedures/document';
 import type { FileProblem } from './read-procedure-file';
 

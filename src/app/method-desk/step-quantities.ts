@@ -1,5 +1,5 @@
 import type { Band, Quantity, Step } from '../../../procedures/document';
-import { shownUnit } from '../../../procedures/engine';
+import { shownUnit } from '../../../procedures/engine/showing';
 import { foundLabel } from './found-label';
 
 /** What a step gives a name to, for reading. */

@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
-import { shownUnit } from '../../../procedures/engine';
+import { shownUnit } from '../../../procedures/engine/showing';
 import type { ProcedureDocument, Step } from '../../../procedures/document';
 import { CautionPanel } from '../shared/caution-panel';
 import { conditionWords, nameBook } from './condition-words';

@@ -1,6 +1,6 @@
 import { convert } from '../../../procedures/calculations/for-a-run';
 import type { CompiledProcedure, FindingResult } from '../../../procedures/document';
-import { shownUnit, type EventOf, type RunEvent, type RunState } from '../../../procedures/engine';
+import { shownUnit, type EventOf, type RunEvent, type RunState } from '../../../procedures/engine/showing';
 import type { BenchEntry, PracticeScenario } from '../shared/practice/practice-scenario';
 
 /** What a practice run found, held against what was planted. */

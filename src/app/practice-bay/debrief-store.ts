@@ -1,5 +1,5 @@
 import { inject, Injectable, resource, signal } from '@angular/core';
-import { replay, renderTemplate, type RunState } from '../../../procedures/engine';
+import { replay, renderTemplate, type RunState } from '../../../procedures/engine/showing';
 import { OfflineStore } from '../core/offline-store';
 import { procedureCompiler } from '../core/procedure-compiler';
 import { RunJournal } from '../core/run-journal';

@@ -1,6 +1,6 @@
 import { inject, Injectable } from '@angular/core';
 import type { CompiledProcedure } from '../../../procedures/document';
-import { openRun, replay, type RunEvent, type RunHeader } from '../../../procedures/engine';
+import { openRun, replay, type RunEvent, type RunHeader } from '../../../procedures/engine/showing';
 import { CalledVersionMissing, procedureCompiler } from '../core/procedure-compiler';
 import { RunJournal } from '../core/run-journal';
 import { summariseRun } from '../core/run-summary';

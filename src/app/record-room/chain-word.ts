@@ -1,4 +1,4 @@
-import { verifyChain, type RunEvent, type RunHeader } from '../../../procedures/engine';
+import { verifyChain, type RunEvent, type RunHeader } from '../../../procedures/engine/showing';
 import type { BranchCountersignature } from './record-wire';
 import { clockTime } from '../core/time-words';
 import { dayText, momentOf } from './record-time';

@@ -1,4 +1,4 @@
-import type { TroubleCodeEntry } from '../../../procedures/engine';
+import type { TroubleCodeEntry } from '../../../procedures/engine/showing';
 
 /** One code in the readings before and after. */
 export interface ComparedCode {

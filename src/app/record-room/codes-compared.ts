@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
-import type { TroubleCodeEntry } from '../../../procedures/engine';
+import type { TroubleCodeEntry } from '../../../procedures/engine/showing';
 import { compareCodes, type ComparedCode } from './code-comparison';
 
 /** Trouble codes as they were read; where an earlier reading is given, both side by side with what changed. */

@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, input, signal } from '@angular/core';
-import type { RunEvent } from '../../../procedures/engine';
+import type { RunEvent } from '../../../procedures/engine/showing';
 import { clockTime } from '../core/time-words';
 
 /** All events as they are stored, in their order; data and hashes of one on demand. */

@@ -1,5 +1,5 @@
 import type { CompiledProcedure, Step } from '../../../procedures/document';
-import { shownUnit, type EventOf, type RunEvent, type RunState } from '../../../procedures/engine';
+import { shownUnit, type EventOf, type RunEvent, type RunState } from '../../../procedures/engine/showing';
 import { clockTime } from '../core/time-words';
 import type { Tone } from './story-line';
 

@@ -1,4 +1,4 @@
-import type { SeriesState } from '../../../procedures/engine';
+import type { SeriesState } from '../../../procedures/engine/showing';
 import type { PlotMark } from '../shared/ramp-plot-options';
 
 /** The marks of a series as the plot shows them. */

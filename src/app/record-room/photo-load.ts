@@ -1,4 +1,4 @@
-import { sha256Hex } from '../../../procedures/engine';
+import { sha256Hex } from '../../../procedures/engine/showing';
 
 /** How far the fetching of a photo is. */
 export type PhotoLoad =

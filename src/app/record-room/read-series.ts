@@ -1,4 +1,4 @@
-import { decodeSeries, sha256Hex, type Series } from '../../../procedures/engine';
+import { decodeSeries, sha256Hex, type Series } from '../../../procedures/engine/showing';
 
 /** The bytes are not those that the record names, or are no series. */
 export class DamagedSeries extends Error {

@@ -1,7 +1,7 @@
 import { HttpClient, httpResource, type HttpResourceRef } from '@angular/common/http';
 import { inject, Injectable } from '@angular/core';
 import { firstValueFrom } from 'rxjs';
-import type { RunState } from '../../../procedures/engine';
+import type { RunState } from '../../../procedures/engine/showing';
 import { readRecordDetail, readRecordPage, type RecordDetail, type RecordPage } from './record-wire';
 
 /** What the list is asked for. */

@@ -1,5 +1,5 @@
 import { computed, DestroyRef, inject, Injectable, resource, signal } from '@angular/core';
-import type { RunEvent } from '../../../procedures/engine';
+import type { RunEvent } from '../../../procedures/engine/showing';
 import { ApiProblem } from '../core/api-problem';
 import { wordOfChain } from './chain-word';
 import { DamagedSeries, readSeries } from './read-series';

@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
-import { shownUnit, type RunState } from '../../../procedures/engine';
+import { shownUnit, type RunState } from '../../../procedures/engine/showing';
 import type { PublishedProcedure } from '../core/wire';
 import { clockTime } from '../core/time-words';
 import { dayText, durationText, momentOf } from './record-time';

@@ -1,5 +1,5 @@
 import type { FindingResult } from '../../../procedures/document';
-import type { RunEvent, RunHeader, RunState } from '../../../procedures/engine';
+import type { RunEvent, RunHeader, RunState } from '../../../procedures/engine/showing';
 import type { Countersignature, PublishedProcedure, VisitRun } from '../core/wire';
 
 /** One row of the list: the server's projection of a run. */

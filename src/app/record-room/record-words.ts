@@ -1,4 +1,4 @@
-import type { RunState } from '../../../procedures/engine';
+import type { RunState } from '../../../procedures/engine/showing';
 
 /** A run's status as it is said. */
 export const statusWords: Readonly<Record<RunState['status'], string>> = {

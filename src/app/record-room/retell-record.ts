@@ -1,5 +1,6 @@
 import type { CompiledProcedure } from '../../../procedures/document';
-import { composeWriteUp, contentHash, type RunState, type WriteUp } from '../../../procedures/engine';
+import { composeWriteUp, type WriteUp } from '../../../procedures/engine';
+import { contentHash, type RunState } from '../../../procedures/engine/showing';
 import type { RecordDetail } from './record-wire';
 import type { Story } from './story-line';
 import { tellStory } from './tell-story';

@@ -1,4 +1,4 @@
-import type { Series } from '../../../procedures/engine';
+import type { Series } from '../../../procedures/engine/showing';
 
 /** How far the fetching of a series is. */
 export type SeriesLoad =

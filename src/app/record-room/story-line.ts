@@ -1,6 +1,12 @@
 import type { UnitName } from '../../../procedures/calculations/for-a-run';
 import type { Channel, Step } from '../../../procedures/document';
-import type { NamedValue, RunEventData, RunEventType, SeriesState, TroubleCodeEntry } from '../../../procedures/engine';
+import type {
+  NamedValue,
+  RunEventData,
+  RunEventType,
+  SeriesState,
+  TroubleCodeEntry,
+} from '../../../procedures/engine/showing';
 import type { ShownResult } from '../shared/result-words';
 
 /** A run retold for a reader: what happened, claim by claim. */

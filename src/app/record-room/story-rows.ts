@@ -1,4 +1,4 @@
-import { shownUnit, type NamedValue } from '../../../procedures/engine';
+import { shownUnit, type NamedValue } from '../../../procedures/engine/showing';
 import type { JudgedResult, Step } from '../../../procedures/document';
 import { resultWords } from '../shared/result-words';
 import type { Passage, SaidLine, StoryLine, ValueLine, WayLine } from './story-line';

@@ -7,7 +7,7 @@ import {
   type RunEvent,
   type RunHeader,
   type RunState,
-} from '../../../procedures/engine';
+} from '../../../procedures/engine/showing';
 import { acknowledged, sayEvent } from './event-words';
 import { noPoints, pointsLine, withEvent, type GatheredPoints } from './typed-points';
 import type { Passage, SaidLine, Story, StoryLine, ValueLine } from './story-line';

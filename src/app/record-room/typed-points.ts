@@ -1,4 +1,10 @@
-import { shownUnit, type EventOf, type RunEvent, type Series, type SeriesState } from '../../../procedures/engine';
+import {
+  shownUnit,
+  type EventOf,
+  type RunEvent,
+  type Series,
+  type SeriesState,
+} from '../../../procedures/engine/showing';
 import type { Channel, Step } from '../../../procedures/document';
 import type { PointsLine, StoryLine, TypedPoint } from './story-line';
 

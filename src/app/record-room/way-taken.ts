@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
-import { shownUnit, type DecisionInput } from '../../../procedures/engine';
+import { shownUnit, type DecisionInput } from '../../../procedures/engine/showing';
 import type { WayLine } from './story-line';
 import { isPlainWay } from './story-rows';
 

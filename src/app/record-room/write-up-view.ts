@@ -1,5 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
-import { writeUpParts, type Citation, type RunEventData, type WriteUp } from '../../../procedures/engine';
+import { writeUpParts, type WriteUp } from '../../../procedures/engine';
+import type { Citation, RunEventData } from '../../../procedures/engine/showing';
 
 /** The write-up as it was kept, with what the record itself gave where a person edited it, and what each part rests on. */
 @Component({

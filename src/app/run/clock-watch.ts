@@ -1,4 +1,4 @@
-import type { EventDraft } from '../../../procedures/engine';
+import type { EventDraft } from '../../../procedures/engine/showing';
 
 /** A clock that jumped by more than this is an event of its own; less is what network time corrects every day. */
 export const notedJumpMs = 120_000;

@@ -1,6 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
 import type { Step } from '../../../procedures/document';
-import type { RunCommand, Series } from '../../../procedures/engine';
+import type { RunCommand, Series } from '../../../procedures/engine/showing';
 import type { GearItem } from '../core/wire';
 import { CautionGate } from './frame/caution-gate';
 import { HandSide } from './frame/hand-side';
@@ -10,7 +10,6 @@ import { LaterStep } from './later';
 import type { ListenDone, SeriesTaken } from './listen/listen-requests';
 import type { PhotoTaken } from './photo/photo-file';
 import type { RunProblem, RunView } from './run-view';
-import { isForSomebody } from './second-person/waiting-for';
 import { StartEntry } from './start/start-entry';
 import { cautionToRead } from './step-cautions';
 
@@ -50,6 +49,9 @@ export class CurrentStepView {
     const at = cautionToRead(this.run(), step);
     return at === undefined ? undefined : { at };
   });
-  /** Whether only somebody else's part of the step, or the way on after it, is left. */
-  protected readonly isForSomebody = computed(() => isForSomebody(this.run(), this.step()));
+  /** Whether it is a start card that nobody else has a part in. */
+  protected readonly isOwnStart = computed(() => {
+    const { kind, release, verify } = this.step();
+    return kind === 'start' && release === undefined && verify === undefined;
+  });
 }

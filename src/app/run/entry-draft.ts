@@ -1,6 +1,6 @@
 import { computed, inject, Injectable, signal, type Signal } from '@angular/core';
 import { Subject } from 'rxjs';
-import type { RunEvent } from '../../../procedures/engine';
+import type { RunEvent } from '../../../procedures/engine/showing';
 import { SettingsBook } from '../core/settings-book';
 import type { RunView } from './run-view';
 

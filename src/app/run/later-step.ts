@@ -1,6 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input, output } from '@angular/core';
 import type { Step } from '../../../procedures/document';
-import type { RunCommand, Series } from '../../../procedures/engine';
+import type { RunCommand, Series } from '../../../procedures/engine/showing';
+import type { GearItem } from '../core/wire';
 import { CodesEntry } from './codes/codes-entry';
 import { entryField } from './entry-draft';
 import { FindingEntry } from './finding/finding-entry';
@@ -13,6 +14,7 @@ import type { PhotoTaken } from './photo/photo-file';
 import { ReadingEntry } from './readings/reading-entry';
 import { RunPeople } from './run-people';
 import type { RunProblem, RunView } from './run-view';
+import { StartEntry } from './start/start-entry';
 import { SecondPersonEntry } from './second-person/second-person-entry';
 import { isForSomebody } from './second-person/waiting-for';
 import { ActionEntry } from './steps/action-entry';
@@ -24,7 +26,7 @@ import { HoldEntry } from './steps/hold-entry';
 import { RestoreEntry } from './steps/restore-entry';
 import { timedStage } from './timed-stage';
 
-/** The entry of any step but the first. Apart from it, so that the first one need not wait for all the others. */
+/** The entry of any step but a start card of one's own. Apart from it, so that the first one need not wait for all the others. */
 @Component({
   selector: 'bay-later-step',
   imports: [
@@ -41,6 +43,7 @@ import { timedStage } from './timed-stage';
     ReadingEntry,
     RestoreEntry,
     SecondPersonEntry,
+    StartEntry,
   ],
   // What the first step has no use for is brought with the others.
   providers: [KeptPhotos, RunPeople],
@@ -54,6 +57,10 @@ export class LaterStep {
 
   readonly run = input.required<RunView>();
   readonly step = input.required<Step>();
+  /** The site's instruments. */
+  readonly gear = input.required<readonly GearItem[]>();
+  /** The device's clock. */
+  readonly now = input.required<number>();
   /** Reads the run's clocks. */
   readonly clocks = input.required<() => ClocksNow>();
   /** The listen step's kept series, once its bytes are read. */

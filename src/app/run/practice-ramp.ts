@@ -1,4 +1,4 @@
-import type { RunHeader } from '../../../procedures/engine';
+import type { RunHeader } from '../../../procedures/engine/showing';
 import { scenarioOfVisit } from '../shared/practice/practice-scenarios';
 
 /** The log that the practice bench offers for a practice run's ramp; undefined for real work. */

@@ -1,5 +1,5 @@
 import { Injectable, signal } from '@angular/core';
-import type { RunCommand } from '../../../procedures/engine';
+import type { RunCommand } from '../../../procedures/engine/showing';
 import type { RunView } from './run-view';
 
 /** What a person does while a ramp goes up: each belongs to its moment, and waits for no other to be written. */

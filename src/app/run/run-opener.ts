@@ -1,6 +1,6 @@
 import { inject, Injectable } from '@angular/core';
 import type { CompiledProcedure, ProcedureDocument } from '../../../procedures/document';
-import { replay, waitsForSomebody, type RunState } from '../../../procedures/engine';
+import { replay, waitsForSomebody, type RunState } from '../../../procedures/engine/showing';
 import { OfflineStore } from '../core/offline-store';
 import { RunJournal } from '../core/run-journal';
 import { Session } from '../core/session';

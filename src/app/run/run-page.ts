@@ -13,7 +13,7 @@ import {
 import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
 import { Router } from '@angular/router';
 import type { Step } from '../../../procedures/document';
-import type { RunCommand } from '../../../procedures/engine';
+import type { RunCommand } from '../../../procedures/engine/showing';
 import { Sync } from '../core/sync';
 import { clock, monotonicClock } from '../core/time-and-ids';
 import { BenchSheet } from '../shared/practice/bench-sheet';

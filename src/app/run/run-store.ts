@@ -1,12 +1,11 @@
 import { computed, inject, Injectable, signal } from '@angular/core';
 import {
   applyEvent,
-  decide,
   type EventDraft,
   type RunCommand,
   type RunEvent,
   type RunState,
-} from '../../../procedures/engine';
+} from '../../../procedures/engine/showing';
 import { NobodyToSign, RunJournal, RunWrittenElsewhere, type NewBlob } from '../core/run-journal';
 import { summariseRun } from '../core/run-summary';
 import { Session } from '../core/session';
@@ -163,6 +162,8 @@ export class RunStore {
     }
     this.acting.set({ do: command.do, isOfRamp: isOfRamp(command, view) });
     try {
+      // What decides comes in idle time after the first step is shown; a tap before that waits for it.
+      const { decide } = await import('../../../procedures/engine');
       const outcome = decide(view.procedure, view.state, command, this.now());
       if (!outcome.ok) {
         this.trouble.set(outcome);

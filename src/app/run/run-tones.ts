@@ -1,5 +1,5 @@
 import type { JudgedResult } from '../../../procedures/document';
-import type { RunState } from '../../../procedures/engine';
+import type { RunState } from '../../../procedures/engine/showing';
 import type { ToneName } from './tones';
 
 const worstFirst: readonly JudgedResult[] = ['out', 'too-close', 'in'];

@@ -1,5 +1,5 @@
 import type { CompiledProcedure } from '../../../procedures/document';
-import type { RunEvent, RunHeader, RunState } from '../../../procedures/engine';
+import type { RunEvent, RunHeader, RunState } from '../../../procedures/engine/showing';
 
 /** A run as its screens see it. */
 export interface RunView {

@@ -1,6 +1,6 @@
 import { Directive, input, output } from '@angular/core';
 import type { Step, StepKind } from '../../../procedures/document';
-import type { RunCommand } from '../../../procedures/engine';
+import type { RunCommand } from '../../../procedures/engine/showing';
 import type { RunProblem, RunView } from './run-view';
 
 /** A step as its kind's views see it. */

@@ -1,5 +1,6 @@
 import type { Step } from '../../../procedures/document';
-import { secondsOf, takesNeeded } from '../../../procedures/engine';
+import { secondsOf } from '../../../procedures/engine';
+import { takesNeeded } from '../../../procedures/engine/showing';
 import { takesOf } from './readings/earlier-readings';
 import type { RunView } from './run-view';
 

@@ -1,5 +1,5 @@
 import type { Step } from '../../../procedures/document';
-import { resultsOf, type NamedValue, type RunState, type WalkedStep } from '../../../procedures/engine';
+import { resultsOf, type NamedValue, type RunState, type WalkedStep } from '../../../procedures/engine/showing';
 import type { ShownResult } from '../shared/result-words';
 import type { RunView } from './run-view';
 

@@ -1,5 +1,5 @@
 import type { Step } from '../../../procedures/document';
-import { routeAhead, wayOn, type WayAhead } from '../../../procedures/engine';
+import { routeAhead, wayOn, type WayAhead } from '../../../procedures/engine/showing';
 import type { RunView } from './run-view';
 
 /**

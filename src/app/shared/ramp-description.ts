@@ -1,4 +1,4 @@
-import type { Series } from '../../../procedures/engine';
+import type { Series } from '../../../procedures/engine/showing';
 
 /** What a mark says, for the description. */
 export interface DescribedMark {

@@ -1,5 +1,5 @@
 import type uPlot from 'uplot';
-import type { Series } from '../../../procedures/engine';
+import type { Series } from '../../../procedures/engine/showing';
 
 /** A mark on the time axis with the words beside it. */
 export interface PlotMark {

@@ -11,7 +11,7 @@ import {
   viewChild,
 } from '@angular/core';
 import type uPlot from 'uplot';
-import type { Series } from '../../../procedures/engine';
+import type { Series } from '../../../procedures/engine/showing';
 import { hostSize } from './element-size';
 import { describeRamp } from './ramp-description';
 import { risesAbove } from './ramp-rises';

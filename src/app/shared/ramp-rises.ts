@@ -1,5 +1,5 @@
 import { convert, isUnit } from '../../../procedures/calculations/for-a-run';
-import type { Series } from '../../../procedures/engine';
+import type { Series } from '../../../procedures/engine/showing';
 
 /** Channels that are absolute pressures; the gauge's is a rise already. */
 const absolute: ReadonlySet<string> = new Set(['manifold', 'boost']);

@@ -7,7 +7,7 @@ import {
   type OpeningFacts,
   type RunEvent,
   type RunHeader,
-} from '../../../procedures/engine';
+} from '../../../procedures/engine/showing';
 import type { CompiledProcedure } from '../../../procedures/document';
 import { knownRuns } from '../core/known-runs';
 import { OfflineStore } from '../core/offline-store';

@@ -1,7 +1,7 @@
 import { NgTemplateOutlet } from '@angular/common';
 import { ChangeDetectionStrategy, Component, computed, effect, inject, input, signal } from '@angular/core';
 import { Router, RouterLink } from '@angular/router';
-import type { BegunAgain } from '../../../procedures/engine';
+import type { BegunAgain } from '../../../procedures/engine/showing';
 import { begunUnaware, isOver, runsOfSameWork, standingWords, type KnownRun } from '../core/known-runs';
 import { clock } from '../core/time-and-ids';
 import { dayTime } from '../core/time-words';

@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, linkedSignal } from '@angular/core';
-import type { TroubleCodeEntry } from '../../../../procedures/engine';
+import type { TroubleCodeEntry } from '../../../../procedures/engine/showing';
 import { codeWords } from '../../shared/trouble-code-words';
 import { entryField } from '../entry-draft';
 import { BigAction } from '../frame/big-action';

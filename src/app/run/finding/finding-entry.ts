@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input, output, signal } from '@angular/core';
-import { renderTemplate } from '../../../../procedures/engine';
+import { renderTemplate } from '../../../../procedures/engine/showing';
 import { evidenceOf } from '../../../../procedures/engine/evidence';
 import { ResultMark } from '../../shared/result-mark';
 import { resultWords } from '../../shared/result-words';

@@ -1,6 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
 import type { Step } from '../../../../procedures/document';
-import type { RunCommand } from '../../../../procedures/engine';
+import type { RunCommand } from '../../../../procedures/engine/showing';
 import { CautionPanel } from '../../shared/caution-panel';
 import { PrimaryButton } from '../primary-action';
 import type { RunView } from '../run-view';

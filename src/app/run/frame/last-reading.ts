@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
-import { shownUnit } from '../../../../procedures/engine';
+import { shownUnit } from '../../../../procedures/engine/showing';
 import { ResultMark } from '../../shared/result-mark';
 import type { RunView } from '../run-view';
 import { latestValue } from '../walked-steps';

@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
-import { expectedSteps } from '../../../../procedures/engine';
+import { expectedSteps } from '../../../../procedures/engine/showing';
 import type { RunView } from '../run-view';
 
 /** What is always in sight: car and order, procedure and version, the place, what is disturbed, what is kept. */

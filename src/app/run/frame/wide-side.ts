@@ -1,6 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import type { Step } from '../../../../procedures/document';
-import { renderTemplate } from '../../../../procedures/engine';
+import { renderTemplate } from '../../../../procedures/engine/showing';
 import { CautionPanel } from '../../shared/caution-panel';
 import { BenchSheet } from '../../shared/practice/bench-sheet';
 import { unbroken } from '../../shared/unbroken';

@@ -1,5 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
-import { previewListening, type RunCommand, type Series } from '../../../../procedures/engine';
+import { previewListening } from '../../../../procedures/engine';
+import type { RunCommand, Series } from '../../../../procedures/engine/showing';
 import { BigAction } from '../frame/big-action';
 import { JudgedLine } from '../readings/judged-line';
 import type { RunProblem, RunView } from '../run-view';

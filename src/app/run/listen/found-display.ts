@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
-import { shownUnit, type NamedValue } from '../../../../procedures/engine';
+import { shownUnit, type NamedValue } from '../../../../procedures/engine/showing';
 import { ReadingDisplay } from '../readings/reading-display';
 
 /** What the marks give, in the largest figures and over its band; what the gauge shows there stands below, small. */

@@ -1,6 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, input, linkedSignal, output, signal } from '@angular/core';
 import { isUnit } from '../../../../procedures/calculations/for-a-run';
-import { shownUnit, type Series } from '../../../../procedures/engine';
+import { shownUnit, type Series } from '../../../../procedures/engine/showing';
 import { RampPlot } from '../../shared/ramp-plot';
 import type { PlotMark } from '../../shared/ramp-plot-options';
 import { HandSide } from '../frame/hand-side';

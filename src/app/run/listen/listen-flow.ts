@@ -1,5 +1,5 @@
 import { effect, inject, Injectable, signal, untracked } from '@angular/core';
-import type { Series } from '../../../../procedures/engine';
+import type { Series } from '../../../../procedures/engine/showing';
 import { RunJournal } from '../../core/run-journal';
 import { RunStore } from '../run-store';
 import type { ListenDone, SeriesTaken } from './listen-requests';

@@ -1,4 +1,4 @@
-import type { Series } from '../../../../procedures/engine';
+import type { Series } from '../../../../procedures/engine/showing';
 import type { MarkName } from './live-series';
 import type { SeriesFacts } from './series-blob';
 

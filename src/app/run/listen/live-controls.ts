@@ -9,7 +9,8 @@ import {
   signal,
 } from '@angular/core';
 import { isUnit } from '../../../../procedures/calculations/for-a-run';
-import { previewListening, shownUnit, type RunCommand, type Series } from '../../../../procedures/engine';
+import { previewListening } from '../../../../procedures/engine';
+import { shownUnit, type RunCommand, type Series } from '../../../../procedures/engine/showing';
 import { BigAction } from '../frame/big-action';
 import { JudgedLine } from '../readings/judged-line';
 import { NumberPad } from '../readings/number-pad';

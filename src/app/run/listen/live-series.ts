@@ -1,4 +1,4 @@
-import type { EventOf, RunEvent, RunState, Series, Take } from '../../../../procedures/engine';
+import type { EventOf, RunEvent, RunState, Series, Take } from '../../../../procedures/engine/showing';
 import type { SeriesStep } from '../../../../procedures/document';
 
 /** A series' mark. */

@@ -8,7 +8,8 @@ import {
   output,
   signal,
 } from '@angular/core';
-import { previewListening, type RunCommand, type Series } from '../../../../procedures/engine';
+import { previewListening } from '../../../../procedures/engine';
+import type { RunCommand, Series } from '../../../../procedures/engine/showing';
 import type { PlotMark } from '../../shared/ramp-plot-options';
 import { BigAction } from '../frame/big-action';
 import { ReadingDisplay } from '../readings/reading-display';

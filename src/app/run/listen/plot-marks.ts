@@ -1,5 +1,5 @@
 import type { SeriesStep } from '../../../../procedures/document';
-import type { RunState } from '../../../../procedures/engine';
+import type { RunState } from '../../../../procedures/engine/showing';
 import type { PlotMark } from '../../shared/ramp-plot-options';
 import type { MarkName } from './live-series';
 

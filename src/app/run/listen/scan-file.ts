@@ -2,7 +2,7 @@ import { isUnit, unitKind, type LogChannel, type ScanLog } from '../../../../pro
 // By its path: through the room's face it would come with the first step already.
 import { parseScanLog } from '../../../../procedures/calculations/parse-scan-log';
 import type { Channel, ListenStep } from '../../../../procedures/document';
-import type { Series } from '../../../../procedures/engine';
+import type { Series } from '../../../../procedures/engine/showing';
 
 /** A log of a ramp of some minutes has well under a megabyte; anything near this is another kind of file. */
 export const largestFileBytes = 20 * 1024 * 1024;

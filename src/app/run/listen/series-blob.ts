@@ -1,4 +1,10 @@
-import { decodeSeries, encodeSeries, sha256Hex, type RunCommand, type Series } from '../../../../procedures/engine';
+import {
+  decodeSeries,
+  encodeSeries,
+  sha256Hex,
+  type RunCommand,
+  type Series,
+} from '../../../../procedures/engine/showing';
 import type { NewBlob } from '../../core/run-journal';
 
 /** What the record of a series says beside its samples. */

@@ -1,4 +1,4 @@
-import type { RunCommand, SeriesState, Take } from '../../../../procedures/engine';
+import type { RunCommand, SeriesState, Take } from '../../../../procedures/engine/showing';
 import type { MarkName } from './live-series';
 
 /** A ramp as the person at it has tapped it, down to the last tap. */

@@ -1,4 +1,4 @@
-import { sha256Hex, type RunCommand } from '../../../../procedures/engine';
+import { sha256Hex, type RunCommand } from '../../../../procedures/engine/showing';
 import type { NewBlob } from '../../core/run-journal';
 
 /** The most that the server keeps of one photo, bytes. */

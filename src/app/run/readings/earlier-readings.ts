@@ -1,4 +1,4 @@
-import type { EventOf, Take } from '../../../../procedures/engine';
+import type { EventOf, Take } from '../../../../procedures/engine/showing';
 import type { RunView } from '../run-view';
 import { fromBase } from '../../../../procedures/calculations/for-a-run';
 import type { ReadQuantity } from '../../../../procedures/document';

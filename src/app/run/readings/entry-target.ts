@@ -1,6 +1,6 @@
 import { unitKind, type UnitName } from '../../../../procedures/calculations/for-a-run';
 import type { EntryWay, PressureSense, ReadQuantity } from '../../../../procedures/document';
-import type { InstrumentSnapshot, RunState } from '../../../../procedures/engine';
+import type { InstrumentSnapshot, RunState } from '../../../../procedures/engine/showing';
 
 /** What is typed for a quantity: itself, or what one of its ways asks for. */
 export interface EntryTarget {

@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
-import { shownUnit, type NamedValue } from '../../../../procedures/engine';
+import { shownUnit, type NamedValue } from '../../../../procedures/engine/showing';
 import { BandGauge } from '../../shared/band-gauge';
 import { ResultMark } from '../../shared/result-mark';
 import { resultWords } from '../../shared/result-words';

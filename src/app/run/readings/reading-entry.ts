@@ -1,14 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, effect, output, signal } from '@angular/core';
 import type { UnitName } from '../../../../procedures/calculations/for-a-run';
-import {
-  parseDecimal,
-  previewBand,
-  previewReading,
-  readsOf,
-  shownUnit,
-  takesNeeded,
-  type NamedValue,
-} from '../../../../procedures/engine';
+import { previewBand, previewReading } from '../../../../procedures/engine';
+import { parseDecimal, readsOf, shownUnit, takesNeeded, type NamedValue } from '../../../../procedures/engine/showing';
 import { entryField } from '../entry-draft';
 import { HandSide } from '../frame/hand-side';
 import { WideSide } from '../frame/wide-side';

@@ -1,6 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import type { Step } from '../../../../procedures/document';
-import { waitsForSomebody } from '../../../../procedures/engine';
+import { waitsForSomebody } from '../../../../procedures/engine/showing';
 import type { Colleague, Person } from '../../core/wire';
 import { entryField } from '../entry-draft';
 import { BigAction } from '../frame/big-action';

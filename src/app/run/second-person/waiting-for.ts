@@ -1,5 +1,6 @@
 import type { Step } from '../../../../procedures/document';
-import { decide, waitsForSomebody } from '../../../../procedures/engine';
+import { decide } from '../../../../procedures/engine';
+import { waitsForSomebody } from '../../../../procedures/engine/showing';
 import type { RunView } from '../run-view';
 
 /**

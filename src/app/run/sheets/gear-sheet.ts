@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input, output, signal } from '@angular/core';
-import type { RunCommand } from '../../../../procedures/engine';
+import type { RunCommand } from '../../../../procedures/engine/showing';
 import type { GearItem } from '../../core/wire';
 import { PrimaryButton } from '../primary-action';
 import type { RunProblem, RunView } from '../run-view';

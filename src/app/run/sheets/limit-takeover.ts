@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
-import { shownUnit, type LimitAlarm, type RunCommand } from '../../../../procedures/engine';
+import { shownUnit, type LimitAlarm, type RunCommand } from '../../../../procedures/engine/showing';
 import { PrimaryButton } from '../primary-action';
 import { shownFigure } from '../readings/number-text';
 import type { RunProblem, RunView } from '../run-view';

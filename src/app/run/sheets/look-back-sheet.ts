@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input, output, signal } from '@angular/core';
-import type { RunCommand } from '../../../../procedures/engine';
+import type { RunCommand } from '../../../../procedures/engine/showing';
 import { clockTime } from '../../core/time-words';
 import { ResultMark } from '../../shared/result-mark';
 import { resultWords } from '../../shared/result-words';

@@ -1,4 +1,4 @@
-import { shownUnit, type NamedValue, type RunEvent } from '../../../../procedures/engine';
+import { shownUnit, type NamedValue, type RunEvent } from '../../../../procedures/engine/showing';
 import type { RunView } from '../run-view';
 import { valuesOf, type WalkedPlace } from '../walked-steps';
 

@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
-import { shownUnit, type NamedValue, type RunState, type WalkedStep } from '../../../../procedures/engine';
+import { shownUnit, type NamedValue, type RunState, type WalkedStep } from '../../../../procedures/engine/showing';
 import { howLong } from '../../core/time-words';
 import { ResultMark } from '../../shared/result-mark';
 import { clockText, readHold, type ClocksNow } from '../hold-clock';

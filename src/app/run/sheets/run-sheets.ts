@@ -1,6 +1,6 @@
 import { ChangeDetectionStrategy, Component, inject, input, output } from '@angular/core';
 import type { Step } from '../../../../procedures/document';
-import type { RunCommand } from '../../../../procedures/engine';
+import type { RunCommand } from '../../../../procedures/engine/showing';
 import { HandSetting } from '../../core/hand-setting';
 import { Theme } from '../../core/theme';
 import { RunGear } from '../run-gear';

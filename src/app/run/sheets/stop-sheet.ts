@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
-import type { RunCommand } from '../../../../procedures/engine';
+import type { RunCommand } from '../../../../procedures/engine/showing';
 import { ReasonField } from '../../shared/reason-field';
 import { entryField } from '../entry-draft';
 import { RefusalLine } from '../frame/refusal-line';

@@ -1,6 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, input, linkedSignal, output } from '@angular/core';
 import type { Step } from '../../../../procedures/document';
-import { renderTemplate, type RunCommand } from '../../../../procedures/engine';
+import { renderTemplate, type RunCommand } from '../../../../procedures/engine/showing';
 import { entryField } from '../entry-draft';
 import type { HonestWay } from '../frame/honest-ways';
 import { RefusalLine } from '../frame/refusal-line';

@@ -1,5 +1,11 @@
 import { ChangeDetectionStrategy, Component, computed, input, output, signal } from '@angular/core';
-import { exitsOf, shownUnit, type DecisionInput, type NamedExit, type RunCommand } from '../../../../procedures/engine';
+import {
+  exitsOf,
+  shownUnit,
+  type DecisionInput,
+  type NamedExit,
+  type RunCommand,
+} from '../../../../procedures/engine/showing';
 import { entryField } from '../entry-draft';
 import { RefusalLine } from '../frame/refusal-line';
 import { PrimaryButton } from '../primary-action';

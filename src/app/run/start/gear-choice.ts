@@ -1,6 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
 import type { GearNeed } from '../../../../procedures/document';
-import type { InstrumentSnapshot, RunCommand } from '../../../../procedures/engine';
+import type { InstrumentSnapshot, RunCommand } from '../../../../procedures/engine/showing';
 import type { GearItem } from '../../core/wire';
 import { entryField } from '../entry-draft';
 import { RefusalLine } from '../frame/refusal-line';

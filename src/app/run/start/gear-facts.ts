@@ -1,6 +1,7 @@
 import { convert, unitKind } from '../../../../procedures/calculations/for-a-run';
 import type { GearNeed } from '../../../../procedures/document';
-import { coarseness, isOverdue, shownUnit, type InstrumentSnapshot } from '../../../../procedures/engine';
+import { coarseness, isOverdue } from '../../../../procedures/engine';
+import { shownUnit, type InstrumentSnapshot } from '../../../../procedures/engine/showing';
 import { daysUntil } from '../../core/time-words';
 import type { GearItem } from '../../core/wire';
 

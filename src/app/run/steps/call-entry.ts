@@ -1,5 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed } from '@angular/core';
-import { previewDecision, previewTaken, renderTemplate } from '../../../../procedures/engine';
+import { previewDecision, previewTaken } from '../../../../procedures/engine';
+import { renderTemplate } from '../../../../procedures/engine/showing';
 import { ResultMark } from '../../shared/result-mark';
 import { unbroken } from '../../shared/unbroken';
 import { BigAction } from '../frame/big-action';

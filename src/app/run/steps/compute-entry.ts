@@ -1,5 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed } from '@angular/core';
-import { previewDecision, previewResults, resultsOf, shownUnit } from '../../../../procedures/engine';
+import { previewDecision, previewResults } from '../../../../procedures/engine';
+import { resultsOf, shownUnit } from '../../../../procedures/engine/showing';
 import { unbroken } from '../../shared/unbroken';
 import { BigAction } from '../frame/big-action';
 import { HandSide } from '../frame/hand-side';

@@ -1,4 +1,4 @@
-import { shownUnit } from '../../../../procedures/engine';
+import { shownUnit } from '../../../../procedures/engine/showing';
 import type { RunView } from '../run-view';
 
 /** One piece of a formula: a name with the value that stands for it, or whatever stands between the names. */

@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed } from '@angular/core';
-import { dueAt } from '../../../../procedures/engine';
+import { dueAt } from '../../../../procedures/engine/showing';
 import { BigAction } from '../frame/big-action';
 import { HandSide } from '../frame/hand-side';
 import { RefusalLine } from '../frame/refusal-line';

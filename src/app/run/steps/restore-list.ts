@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, input, output } from '@angular/core';
-import type { DisturbedItem } from '../../../../procedures/engine';
+import type { DisturbedItem } from '../../../../procedures/engine/showing';
 
 /** What is disturbed, each with the sentence that puts it back and one big tick. */
 @Component({

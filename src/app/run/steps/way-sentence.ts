@@ -1,5 +1,5 @@
 import type { CompiledProcedure } from '../../../../procedures/document';
-import type { RunEventData } from '../../../../procedures/engine';
+import type { RunEventData } from '../../../../procedures/engine/showing';
 
 /** Where a way leads, as a sentence: the step, and the finding that the run then heads for. */
 export function waySentence(

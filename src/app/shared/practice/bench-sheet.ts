@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input, linkedSignal } from '@angular/core';
-import { shownUnit } from '../../../../procedures/engine';
+import { shownUnit } from '../../../../procedures/engine/showing';
 import { scenarioOfVisit } from './practice-scenarios';
 
 /**

@@ -1,4 +1,4 @@
-import type { TroubleCodeEntry } from '../../../../procedures/engine';
+import type { TroubleCodeEntry } from '../../../../procedures/engine/showing';
 import type { UnitName } from '../../../../procedures/calculations/for-a-run';
 import type { BenchEntry } from './practice-scenario';
 

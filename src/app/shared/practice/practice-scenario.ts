@@ -1,5 +1,5 @@
 import type { UnitName } from '../../../../procedures/calculations/for-a-run';
-import type { TroubleCodeEntry, VisitSnapshot } from '../../../../procedures/engine';
+import type { TroubleCodeEntry, VisitSnapshot } from '../../../../procedures/engine/showing';
 
 /** A car with a fault that nobody is told about, for a run of kind practice. */
 export interface PracticeScenario {
