@@ -79,7 +79,8 @@ function requireRestAtZero(drafting: Drafting, step: SeriesStep, series: Series)
   const first = channel.values.filter(
     (value, index): value is number => value !== undefined && (series.timeS[index] ?? begin) <= begin + restS,
   );
-  const rest = [...first].sort((a, b) => a - b)[Math.floor(first.length / 2)];
+  // Of two in the middle the lower one: a point that was typed within the first second belongs to the ramp.
+  const rest = [...first].sort((a, b) => a - b)[Math.floor((first.length - 1) / 2)];
   if (rest === undefined) return;
   const allowed = 2 * range.accuracy + range.resolution;
   const shown = convert(rest, channel.unit, range.unit);

@@ -104,4 +104,12 @@ describe('a series that does not begin at zero', () => {
   it('is taken where the gauge is off by no more than its accuracy and step allow', () => {
     expect(atListen().ask({ do: 'import-series', record, series: lifted(0.5) })).toMatchObject({ ok: true });
   });
+
+  it('is taken where the second point was typed within the first second', () => {
+    const quick: Series = {
+      timeS: [0, 0.9, 2],
+      channels: [{ name: 'gauge', unit: 'kPa', values: [0, 1, 2] }],
+    };
+    expect(atListen().ask({ do: 'import-series', record, series: quick })).toMatchObject({ ok: true });
+  });
 });
