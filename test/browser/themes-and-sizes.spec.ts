@@ -1,3 +1,4 @@
+import { join } from 'node:path';
 import type { Page } from '@playwright/test';
 import { acknowledge, shownStep, tap, walkTo, type Answers } from './support/at-the-car';
 import { bringChecker, measuredControls, sideways, troubleWithStop, violations } from './support/measured';
@@ -5,6 +6,7 @@ import { expect, test } from './support/test';
 import { openVisit, signIn } from './support/visits';
 import { rowsOf } from './support/what-is-kept';
 
+const ramp = join(__dirname, '../reference/ramps/demo-warm-seals.csv');
 const tablet = { width: 1280, height: 800 } as const;
 const sizes = [tablet, { width: 800, height: 1280 }, { width: 360, height: 740 }] as const;
 const gear: Answers = {
@@ -83,10 +85,16 @@ test('each kind of screen fits a tablet both ways and a phone, breaks no rule of
 
 const coldMorning: Answers = {
   ...gear,
-  read: { '2e': ['14', '13'], '4': ['1014'], '5': ['94.0'], '6': ['93.7'], '15b': ['0.0'] },
+  read: { '2e': ['14', '13'], '4': ['1014'], '5': ['94.0'], '6': ['93.7'], '11a': ['14'], '15b': ['0.0'] },
   way: { '4': 'Altimeter setting' },
-  codes: { '3': ['P0068 stored'], '18a': ['P0068 stored'] },
-  choose: { '13': ['Only at the manifold valve'] },
+  codes: { '3': ['P0068 stored'], '18a': ['P0068 stored'], '19c': [] },
+  choose: {
+    '12b': ['It stayed quiet'],
+    '18b': ['They are cleared'],
+    '19': ['Both halves are done'],
+    '19a': ['Nothing forbids driving'],
+    '19b': ['Idle', 'Steady ride'],
+  },
 };
 
 /** *Stop, supply off* can be tapped all over at each size, whatever stands beside it or is laid over the step. */
@@ -102,7 +110,7 @@ async function checkStop(page: Page, name: string): Promise<void> {
 async function typePoint(page: Page, digits: string): Promise<void> {
   await tap(page.getByRole('button', { name: 'Type it' }));
   await expect(page.locator('bay-number-pad')).toBeVisible();
-  for (const digit of digits) await page.keyboard.press(digit);
+  for (const digit of digits) await page.keyboard.press(digit === '.' ? 'Period' : digit);
   await expect(page.locator('bay-reading-display .figure .num')).toHaveText(digits);
   await tap(page.getByRole('button', { name: /Record\s+the point/ }));
 }
@@ -160,9 +168,22 @@ test('Stop can be tapped all over while listening, over a limit, on coming back 
   await expect(begin).toBeVisible();
   await expect(page.getByRole('button', { name: '+ 1', exact: true })).toBeHidden();
   await tap(begin);
-  for (const digits of ['1', '2', '3']) await typePoint(page, digits);
-  await tap(page.getByRole('button', { name: 'It never stopped' }));
-  await tap(page.getByRole('button', { name: 'Sure? It never stopped' }));
+  await typePoint(page, '1');
+  await tap(page.getByRole('button', { name: /The noise\s+begins/ }));
+  await typePoint(page, '3');
+  await tap(page.getByRole('button', { name: /The noise\s+stopped/ }));
+  await typePoint(page, '3.5');
+  await checkStop(page, 'listen, marked');
+  await tap(page.getByRole('button', { name: 'Begin anew' }));
+  await tap(page.getByRole('button', { name: 'Sure? Begin anew' }));
+  await acknowledge(page, (await shownStep(page)).cautions?.length ?? 0);
+  await page.getByRole('button', { name: 'Take a log of the scan tool instead' }).click();
+  await checkStop(page, 'listen, a file');
+  await page.locator('input[type=file]').setInputFiles(ramp);
+  await tap(page.getByRole('button', { name: 'Take this series' }));
+  await expect(page.getByText('Gauge at the mark')).toBeVisible();
+  await checkStop(page, 'listen, the marks of a file');
+  await tap(page.getByRole('button', { name: /Keep the mark/ }));
   await expect(page.locator('bay-listen-entry')).toBeHidden();
   await walkTo(page, 'the end', coldMorning);
   await expect(page.locator('bay-finding-entry')).toBeVisible();

@@ -27,6 +27,13 @@ import { ReadingDisplay } from '../readings/reading-display';
       line-height: 1.3;
     }
     @media (max-width: 640px) {
+      /* The plot needs the room: in words the result stands beside the figure. */
+      :host {
+        --display-band: none;
+      }
+      :host-context(bay-mark-controls) .remark {
+        display: none;
+      }
       .remark {
         font-size: 15px;
         line-height: 1.2;

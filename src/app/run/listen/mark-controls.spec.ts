@@ -97,7 +97,7 @@ describe('MarkControls', () => {
 
   it('shows the seal point largest, and the gauge at the mark below it', async () => {
     const page = await shown(log(true));
-    const said = /Gauge at the mark (\d\.\d) kPa, at 24\.0 s, as offered/.exec(textOf(page.fixture));
+    const said = /Gauge at the mark (\d\.\d) kPa at 24\.0 s, offered/.exec(textOf(page.fixture));
     expect(Number(said?.[1])).toBeCloseTo(3.8, 1);
     expect(elementOf(page.fixture).querySelector('.name')?.textContent).toBe('Seal point');
     expect(page.drawn.at(-1)?.at(-1)?.label).toBe(`noise stops: ${figure(page)} kPa`);

@@ -110,9 +110,9 @@ export class MarkControls {
     return this.preview()?.problems[0] ?? '';
   });
   protected readonly atMark = computed(() => {
-    const gauge = this.gaugeAt() === '' ? this.time() : `${this.gaugeAt()} ${this.unit()}, ${this.time()}`;
+    const gauge = this.gaugeAt() === '' ? this.time() : `${this.gaugeAt()} ${this.unit()} ${this.time()}`;
     const isOffered = this.at() !== undefined && this.at() === this.suggested()[this.chosen()];
-    return `Gauge at the mark ${gauge}${isOffered ? ', as offered' : ''}`;
+    return `Gauge at the mark ${gauge}${isOffered ? ', offered' : ''}`;
   });
 
   /** The marks that stand, and whether each is where the calculation put it. */
