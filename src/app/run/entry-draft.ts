@@ -2,6 +2,7 @@ import { computed, inject, Injectable, signal, type Signal } from '@angular/core
 import { Subject } from 'rxjs';
 import type { RunEvent } from '../../../procedures/engine/showing';
 import { SettingsBook } from '../core/settings-book';
+import { WriteAhead } from '../core/write-ahead';
 import type { RunView } from './run-view';
 
 /** What stands in one field, and the seq of the event since which it stands there. */
@@ -11,6 +12,10 @@ interface KeptField {
 }
 
 type KeptFields = Readonly<Record<string, KeptField>>;
+
+interface KeptRow {
+  readonly fields?: KeptFields;
+}
 
 /** A field of an entry: reads what stands in it, and takes what is entered. */
 export interface EntryField<T> {
@@ -48,6 +53,7 @@ const endsEntry: ReadonlySet<EventType> = new Set<EventType>([
 @Injectable()
 export class EntryDraft {
   private readonly settings = inject(SettingsBook);
+  private readonly ahead = inject(WriteAhead);
 
   private readonly kept = signal<KeptFields>({});
   private runId: string | undefined;
@@ -102,14 +108,18 @@ export class EntryDraft {
   }
 
   private async read(runId: string): Promise<void> {
-    const row = await this.settings.read<{ readonly fields?: KeptFields }>(keyOf(runId));
+    const row = await this.settings.read<KeptRow>(keyOf(runId));
+    const left = this.ahead.left<KeptRow>(keyOf(runId));
     // What was entered while it was being read is newer.
-    if (this.runId === runId && row?.fields !== undefined) this.kept.update((kept) => ({ ...row.fields, ...kept }));
+    if (this.runId !== runId) return;
+    // What the page before could not finish writing is newer than what it wrote.
+    this.kept.update((kept) => ({ ...row?.fields, ...left?.value?.fields, ...kept }));
   }
 
   /** One write at a time, each with what stands in the fields when it begins: nothing waits to be kept. */
   private async write(): Promise<void> {
     this.isStale = true;
+    if (this.runId !== undefined) this.ahead.put(keyOf(this.runId), { fields: this.kept() });
     if (this.isWriting) return;
     this.isWriting = true;
     try {
@@ -119,6 +129,7 @@ export class EntryDraft {
         const fields = this.kept();
         if (Object.keys(fields).length === 0) await this.settings.forget(keyOf(this.runId));
         else await this.settings.write(keyOf(this.runId), { fields });
+        if (!this.isStale) this.ahead.done(keyOf(this.runId));
       }
     } finally {
       this.isWriting = false;

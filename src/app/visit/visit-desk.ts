@@ -1,13 +1,11 @@
-import { DOCUMENT, inject, Injectable } from '@angular/core';
+import { inject, Injectable } from '@angular/core';
 import { Session } from '../core/session';
 import { SettingsBook } from '../core/settings-book';
 import { clock, newId } from '../core/time-and-ids';
 import { VisitBook } from '../core/visit-book';
 import type { Visit } from '../core/wire';
+import { WriteAhead } from '../core/write-ahead';
 import { draftOf, emptyDraft, visitOf, type VisitDraft } from './visit-draft';
-
-/** Where the page leaves what it could not write any more before it went. */
-const leftBehindKey = 'visit-drafts-left-behind';
 
 /** Opens and changes visits; what is typed is kept on the tablet until the visit is, so that a reload loses nothing. */
 @Injectable({ providedIn: 'root' })
@@ -17,20 +15,15 @@ export class VisitDesk {
   private readonly session = inject(Session);
   private readonly now = inject(clock);
   private readonly makeId = inject(newId);
+  private readonly ahead = inject(WriteAhead);
 
   /** Key -> the newest draft that is not written to its end yet; undefined is to be forgotten. */
   private readonly unwritten = new Map<string, VisitDraft | undefined>();
   private written: Promise<void> = Promise.resolve();
-  private readonly window = inject(DOCUMENT).defaultView;
-
-  constructor() {
-    // A write that the page's end cuts short is lost: what is on its way is left where it is written at once.
-    this.window?.addEventListener('pagehide', () => this.leaveBehind());
-  }
 
   /** The draft of a visit: what was typed last, else the visit as it is kept, else an empty one. Undefined: no such visit. */
   async draft(visitId: string | undefined): Promise<VisitDraft | undefined> {
-    this.findAgain();
+    this.findAgain(this.keyOf(visitId));
     await this.written.catch(() => undefined);
     const typed = await this.settings.read<VisitDraft>(this.keyOf(visitId));
     if (typed !== undefined) return { ...emptyDraft, ...typed };
@@ -75,6 +68,7 @@ export class VisitDesk {
   /** One write at a time, each with the newest: nothing older ends up over it. */
   private put(key: string, draft: VisitDraft | undefined): Promise<void> {
     this.unwritten.set(key, draft);
+    this.ahead.put(key, draft);
     const write = (): Promise<void> => this.write(key);
     this.written = this.written.then(write, write);
     return this.written;
@@ -85,23 +79,15 @@ export class VisitDesk {
     const draft = this.unwritten.get(key);
     if (draft === undefined) await this.settings.forget(key);
     else await this.settings.write(key, draft);
-    if (this.unwritten.get(key) === draft) this.unwritten.delete(key);
+    if (this.unwritten.get(key) !== draft) return;
+    this.unwritten.delete(key);
+    this.ahead.done(key);
   }
 
-  private leaveBehind(): void {
-    if (this.unwritten.size === 0) return;
-    const drafts = [...this.unwritten].map(([key, draft]) => ({ key, draft }));
-    this.window?.localStorage.setItem(leftBehindKey, JSON.stringify(drafts));
-  }
-
-  /** Takes up what the page before left behind; the page may also come back with all that it knew. */
-  private findAgain(): void {
-    const left = this.window?.localStorage.getItem(leftBehindKey);
-    if (left === null || left === undefined) return;
-    for (const { key, draft } of JSON.parse(left) as { key: string; draft?: VisitDraft }[]) {
-      if (!this.unwritten.has(key)) void this.put(key, draft);
-    }
-    void this.written.then(() => this.window?.localStorage.removeItem(leftBehindKey));
+  /** Takes up what a page before could not finish writing. */
+  private findAgain(key: string): void {
+    const left = this.ahead.left<VisitDraft>(key);
+    if (left !== undefined && !this.unwritten.has(key)) void this.put(key, left.value);
   }
 
   private keyOf(visitId: string | undefined): string {

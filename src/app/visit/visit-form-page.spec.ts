@@ -136,7 +136,6 @@ describe('VisitFormPage', () => {
       .mockImplementation(() => new Promise(() => undefined));
     await first.type('odometer', '61');
     await first.type('odometer', '61240');
-    window.dispatchEvent(new Event('pagehide'));
     expect(await store.settings.get('visit-draft:new:p-okafor')).toBeUndefined();
     first.fixture.destroy();
     document.body.replaceChildren();
