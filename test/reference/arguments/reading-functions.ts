@@ -77,6 +77,12 @@ export const readingFunctions: Readonly<Record<string, ExportedFunction>> = {
     numbers: { stationKpa: [-1, 0] },
     lists: ['gaugeKpa', 'firstKpa', 'secondKpa'],
   },
+  findNoiseBegin: {
+    valid: fc.record({ samples: ramp }),
+    call: inOrder('findNoiseBegin', 'samples'),
+    numbers: {},
+    samples: { samples: ['timeS', 'gaugeKpa', 'mapKpa', 'soundDb'] },
+  },
   findSealPoint: {
     valid: fc.record({
       samples: ramp,
