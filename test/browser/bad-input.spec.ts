@@ -128,8 +128,9 @@ async function refuseReadings(page: Page, kept: Kept): Promise<void> {
 }
 
 async function refuseFiles(page: Page, folder: string, kept: Kept): Promise<void> {
-  const before = await kept();
+  // It is there once the last caution is written.
   await page.getByRole('button', { name: 'Take a log of the scan tool instead' }).click();
+  const before = await kept();
   const taking = page.locator('bay-file-taking');
   const files: readonly (readonly [name: string, bytes: string | Buffer | number, says: RegExp])[] = [
     [

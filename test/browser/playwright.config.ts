@@ -7,8 +7,8 @@ export default defineConfig({
   testMatch: '**/*.spec.ts',
   outputDir: '../../test-results/browser',
   globalSetup: './support/begin.mjs',
-  // Two tablets at a time: as many as there are cores.
-  workers: 2,
+  // Three tablets at a time: each mostly waits, as a person would.
+  workers: 3,
   fullyParallel: false,
   retries: 0,
   forbidOnly: true,
