@@ -22,6 +22,7 @@ export {
 } from './step-parts';
 export { type CallBlock, type ProcedureLibrary } from './call/expand-calls';
 export { callsOf, gatherCalls, libraryOf, type CalledKey, type GatheredCalls } from './call/gather-library';
+export { type CompiledValidator } from './schema-error';
 export { type Declaration } from './declarations';
 export { type Environment, type Evaluation, type EvaluationProblem } from './expression/environment';
 export { type Expression, type ExpressionProblem, type Span } from './expression/expression';

@@ -1,7 +1,7 @@
 import { checkProcedureDocument } from './compiled/procedure-document-validator';
 import { placeInWords } from './place-in-words';
 import type { ProcedureDocument } from './procedure-document';
-import { schemaErrorInWords, type CompiledValidator } from './schema-error';
+import { schemaErrorInWords } from './schema-error';
 
 /** One thing that keeps a value from being a procedure document. */
 export interface DocumentProblem {
@@ -20,15 +20,13 @@ export type Validation =
 /** A person mends a few at a time; a file that is something else altogether would give thousands. */
 const mostProblems = 50;
 
-const check = checkProcedureDocument as unknown as CompiledValidator;
-
 /**
  * Holds a value of unknown shape, such as an imported file, against `procedure-document.schema.json`. What lies
  * between the parts (expressions, names, ways on) is the compiler's and the lint's. At most 50 problems come back.
  */
 export function validateDocument(value: unknown): Validation {
-  if (check(value)) return { ok: true, document: value as ProcedureDocument };
-  const problems = (check.errors ?? []).flatMap((error): DocumentProblem[] => {
+  if (checkProcedureDocument(value)) return { ok: true, document: value as ProcedureDocument };
+  const problems = (checkProcedureDocument.errors ?? []).flatMap((error): DocumentProblem[] => {
     const words = schemaErrorInWords(error);
     if (words === undefined) return [];
     const { step, words: place } = placeInWords(value, error.instancePath);

@@ -10,13 +10,6 @@ export interface EventProblem {
 export type EventValidation =
   { readonly ok: true; readonly event: RunEvent } | { readonly ok: false; readonly problems: readonly EventProblem[] };
 
-/** As much of a compiled validator (the form is ajv's) as is read here. */
-interface CompiledCheck {
-  (value: unknown): boolean;
-  errors?: readonly { instancePath: string; keyword: string; params: object; message?: string }[] | null;
-}
-
-const check = checkRunEvent as unknown as CompiledCheck;
 const mostProblems = 20;
 
 /**
@@ -24,8 +17,8 @@ const mostProblems = 20;
  * rights and sense are checked elsewhere. Imported by its path, not through the room's face: the app never needs it.
  */
 export function validateRunEvent(value: unknown): EventValidation {
-  if (check(value)) return { ok: true, event: value as RunEvent };
-  const problems = (check.errors ?? [])
+  if (checkRunEvent(value)) return { ok: true, event: value as RunEvent };
+  const problems = (checkRunEvent.errors ?? [])
     .filter(({ keyword }) => keyword !== 'if')
     .map(({ instancePath, keyword, params, message }) => ({
       pointer: instancePath,

@@ -91,7 +91,7 @@ async function filesUnder(root, path) {
   return entries
     .filter((entry) => entry.isFile())
     .map((entry) => join(path, join(entry.parentPath, entry.name).slice(folder.length)))
-    .filter((file) => !/\.spec\.ts$|^procedures\/document\/compiled\/|^server\/start\//.test(file))
+    .filter((file) => !/\.spec\.ts$|^procedures\/[^/]+\/compiled\/|^server\/start\//.test(file))
     .sort();
 }
 
