@@ -3,7 +3,7 @@ import type { CompiledProcedure, Step } from '../document';
 import { isSeriesStep } from '../document/step-parts';
 import { own } from './environment';
 import { parseDecimal } from './figures';
-import { added, withEntry, withoutEntry } from './state-changes';
+import { added, draftOf, withEntry, withoutEntry } from './state-changes';
 import { computedValue, measureQuantity } from './measure-quantity';
 import { channelsOf, foundQuantitiesOf, readQuantity, takesNeeded, wayOf } from './quantities';
 import { RefusedEvent } from './refusal';
@@ -11,7 +11,6 @@ import { requireCurrent, requireStep } from './apply-walk';
 import { endStaleReadings } from './validity';
 import type { EventOf, RunEventData } from './run-event';
 import type { NamedValue, RunState, SeriesState, Take } from './run-state';
-import { draftOf } from './state-changes';
 
 /** One take: when the quantity has all it needs, its value follows. */
 export function recordReading(

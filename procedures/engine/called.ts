@@ -15,12 +15,16 @@ export interface Destination {
  * is still the one that was headed for. Leaving that step, the run heads again for what it did before the call.
  */
 export function destinationOf(procedure: CompiledProcedure, state: RunState, step: Step, exit: Exit): Destination {
-  const before = step.kind === 'call' ? headingBeforeCall(procedure, state, step.id) : state.verdict;
-  const named = exit.verdict ?? before;
+  const named = exit.verdict ?? headingFrom(procedure, state, step);
   const to = exit.to === 'verdict' ? named : exit.to;
   const block = to === undefined ? undefined : procedure.blockOf(to);
   const isCalledFinding = to !== undefined && block !== undefined && procedure.step(to)?.kind === 'finding';
   return isCalledFinding ? { to: block.call, heading: to } : { to, heading: named };
+}
+
+/** The finding that the run heads for on leaving a step that names none itself. */
+export function headingFrom(procedure: CompiledProcedure, state: RunState, step: Step): string | undefined {
+  return step.kind === 'call' ? headingBeforeCall(procedure, state, step.id) : state.verdict;
 }
 
 function headingBeforeCall(procedure: CompiledProcedure, state: RunState, call: string): string | undefined {

@@ -52,6 +52,20 @@ describe('a called procedure', () => {
     expect(walk.state.verdict).toBe('early');
   });
 
+  it('shows on the Route what the caller headed for, once the call is done', () => {
+    const walk = partWith(
+      inPartTest({
+        ...outerProcedure,
+        steps: outerProcedure.steps.map((step) =>
+          step.kind === 'call' ? { ...step, next: [], otherwise: { to: 'verdict', because: 'it is done' } } : step,
+        ),
+      }),
+      '5.0',
+    );
+    expect(walk.state.current?.id).toBe('part');
+    expect(routeAhead(walk.procedure, walk.state).map(({ to }) => to)).toEqual(['early']);
+  });
+
   it('can be gone through again within the caller’s bound, its own bounds counting anew', () => {
     const walk = inPartTest();
     const tooHigh = (): void => void walk.do({ do: 'confirm' }, read('partPartPressure', '16', 'kPa'));

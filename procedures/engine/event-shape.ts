@@ -38,6 +38,7 @@ const dataShapes: Readonly<Record<RunEventType, Shape>> = {
     siteName: text,
     inputs: recordOf(objectOf({ text, unit, 'sense?': sense, source: text })),
     person: text,
+    'again?': objectOf({ because: text, besides: listOf(text) }),
   }),
   'gear-chosen': objectOf({ role: text, instrument, 'overdueBecause?': text }),
   'step-claimed': step,

@@ -1,4 +1,5 @@
 import type { CompiledProcedure, Step } from '../document';
+import { headingFrom } from './called';
 import type { RunHeader } from './run-event';
 import type { RunState } from './run-state';
 
@@ -15,7 +16,7 @@ export interface WayAhead {
 export function routeAhead(procedure: CompiledProcedure, state: RunState): readonly WayAhead[] {
   const step = state.current === undefined ? undefined : procedure.step(state.current.id);
   if (step === undefined) return [];
-  return targetsOf(procedure, step, state.header.half, state.verdict).map((target, index) => ({
+  return targetsOf(procedure, step, state.header.half, headingFrom(procedure, state, step)).map((target, index) => ({
     to: target.id,
     label: wayLabel(target),
     isMain: index === 0,

@@ -1,4 +1,4 @@
-import { compileProcedure } from '../../document';
+import { compileProcedure, type CompiledProcedure, type ProcedureDocument } from '../../document';
 import { partTest } from '../../document/testing/part-test';
 import type { InstrumentSnapshot, RunCommand, Series } from '..';
 import { outerProcedure } from './outer-procedure';
@@ -49,11 +49,15 @@ export function logged(series: Series): RunCommand {
   return { do: 'import-series', record, series };
 }
 
-/** A run of the outer procedure, its called one written in, at its first step after the start card. */
-export function outerWalk(): RunWalk {
-  const compiled = compileProcedure(outerProcedure, (id) => (id === partTest.id ? partTest : undefined));
+function compiledOuter(document: ProcedureDocument): CompiledProcedure {
+  const compiled = compileProcedure(document, (id) => (id === partTest.id ? partTest : undefined));
   if (!compiled.ok) throw new Error(compiled.problems.map(({ message }) => message).join('\n'));
-  return new RunWalk(compiled.procedure)
+  return compiled.procedure;
+}
+
+/** A run of the outer procedure, its called one written in, at its first step after the start card. */
+export function outerWalk(document: ProcedureDocument = outerProcedure): RunWalk {
+  return new RunWalk(compiledOuter(document))
     .cautions(1)
     .do(
       { do: 'choose-gear', role: 'gauge', instrument: gauge },
@@ -63,8 +67,8 @@ export function outerWalk(): RunWalk {
 }
 
 /** The same with the coolant read and the plug in, at the first step of the called procedure. */
-export function inPartTest(): RunWalk {
-  return outerWalk()
+export function inPartTest(document?: ProcedureDocument): RunWalk {
+  return outerWalk(document)
     .do(read('coolant', '88', 'degC'), { do: 'confirm' })
     .cautions(1)
     .do({ do: 'confirm' });

@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, computed, input, linkedSignal, output, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, input, linkedSignal, output } from '@angular/core';
 import { isUnit } from '../../../../procedures/calculations/for-a-run';
 import { shownUnit, type Series } from '../../../../procedures/engine/showing';
 import { RampPlot } from '../../shared/ramp-plot';
@@ -37,8 +37,11 @@ export class ListenEntry extends StepEntry<'listen' | 'ramp'> {
   readonly seriesTaken = output<SeriesTaken>();
   readonly finished = output<ListenDone>();
 
-  /** Whether a file is being chosen. */
-  protected readonly taking = signal(false);
+  /** Whether a file is being chosen; at another step or round none is yet. */
+  protected readonly taking = linkedSignal({
+    source: () => this.run().state.current?.claimedSeq,
+    computation: () => false,
+  });
   /** What was refused, until what it was about is changed. */
   protected readonly standing = linkedSignal(() => this.problem());
   /** The marks as they are being moved, before they are recorded. */
