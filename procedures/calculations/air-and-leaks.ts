@@ -1,4 +1,4 @@
-/** The calculations of air, its flow and its leaks, which a procedure's expressions may call. */
+/** The calculations of air, its flow and its leaks, some of which a procedure's expressions may call. */
 export { dryAirDensity, type DryAir } from './dry-air';
 export { speedDensityAirflow, volumetricEfficiency, type EngineAir } from './engine-airflow';
 export { fitDecay, type DecayFit, type DecaySample, type DecayVolume } from './fit-decay';

@@ -24,8 +24,8 @@ describe('coveringHalfWidth', () => {
     expect(share / Math.sqrt(2 * Math.PI)).toBeCloseTo(0.9545, 4);
   });
 
-  it('covers two even errors of one size within half a percent of their triangle', () => {
+  it('covers two even errors of one size within one and a half percent of their triangle', () => {
     // A triangle of half-width 2 holds 95.45 % within 2 (1 - sqrt(0.0455)).
-    expect(coveringSum(0, 1, 1) / (2 * (1 - Math.sqrt(0.0455)))).toBeCloseTo(1, 1);
+    expect(Math.abs(coveringSum(0, 1, 1) / (2 * (1 - Math.sqrt(0.0455))) - 1)).toBeLessThan(0.015);
   });
 });

@@ -2,6 +2,7 @@ import type { CompiledProcedure } from '../document';
 import type { BranchTaken, RunState, WalkedStep } from './run-state';
 import { endStop } from './sentence-end';
 import type { RenderedTemplate } from './template';
+import { lowerFirst } from './within-a-sentence';
 
 /**
  * Where and why a test ended before it had its finding, as one sentence that cites the step; none where it came to a
@@ -28,8 +29,4 @@ function sentence(place: string, claim: WalkedStep, way: BranchTaken): string {
 
 function withReason(what: string, reason = ''): string {
   return endStop(reason.trim() === '' ? what : `${what}: ${lowerFirst(reason.trim())}`);
-}
-
-function lowerFirst(text: string): string {
-  return /^[A-Z][a-z]/.test(text) ? text.charAt(0).toLowerCase() + text.slice(1) : text;
 }

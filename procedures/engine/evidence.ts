@@ -4,6 +4,7 @@ import { own } from './environment';
 import type { RunEvent } from './run-event';
 import type { BranchTaken, NamedValue, RunState, WalkedStep } from './run-state';
 import { exitsOf } from './ways-on';
+import { lowerFirst } from './within-a-sentence';
 
 /** One thing that a finding rests on: a measured value, or what a person saw, heard or could not do, in words. */
 export type Evidence =
@@ -138,5 +139,3 @@ function noiseWords(state: RunState, series: string): string {
   if (marks['noise-stops'] !== undefined) return 'heard, and it stopped';
   return marks['noise-begins'] === undefined ? 'none was heard' : 'heard, and it never stopped';
 }
-
-const lowerFirst = (words: string): string => words.charAt(0).toLowerCase() + words.slice(1);

@@ -2,6 +2,7 @@ import type { CompiledProcedure, Step } from '../document';
 import { headingFrom } from './called';
 import type { RunHeader } from './run-event';
 import type { RunState } from './run-state';
+import { lowerFirst } from './within-a-sentence';
 
 /** A way that the run may take next, for the Route. */
 export interface WayAhead {
@@ -24,7 +25,7 @@ export function routeAhead(procedure: CompiledProcedure, state: RunState): reado
 }
 
 function wayLabel({ kind, number, title }: Step): string {
-  const words = title.charAt(0).toLowerCase() + title.slice(1);
+  const words = lowerFirst(title);
   return kind === 'finding' ? words : `${number}, ${words}`;
 }
 

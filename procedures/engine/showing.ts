@@ -43,3 +43,4 @@ export {
 export { renderCited, renderTemplate, shownUnit, type Citation } from './template';
 export { exitsOf, wayOn, type NamedExit } from './ways-on';
 export { expectedSteps, routeAhead, type WayAhead } from './route-ahead';
+export { lowerFirst } from './within-a-sentence';

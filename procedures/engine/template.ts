@@ -1,6 +1,7 @@
 import type { CompiledProcedure } from '../document';
 import { own } from './environment';
 import type { RunState } from './run-state';
+import { lowerFirst } from './within-a-sentence';
 
 /** A number or a choice of the run that a sentence cites. */
 export interface Citation {
@@ -103,8 +104,4 @@ function heldFor(procedure: CompiledProcedure, state: RunState, name: string): W
 /** A unit as people read it. */
 export function shownUnit(unit: string): string {
   return { degC: '\u00b0C', degF: '\u00b0F', '1': '', ohm: '\u03a9', kohm: 'k\u03a9' }[unit] ?? unit;
-}
-
-function lowerFirst(text: string): string {
-  return /^[A-Z][a-z]/.test(text) ? text.charAt(0).toLowerCase() + text.slice(1) : text;
 }

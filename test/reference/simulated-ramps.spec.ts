@@ -2,7 +2,8 @@ import { fewestHits, mostHits } from '../support/ramps/binomial-bounds';
 import { neverSealingConditions, sealingConditions } from '../support/ramps/ramp-conditions';
 import { byMarks, bySound, scoreRamps } from '../support/ramps/ramp-score';
 
-// The bounds are those of the long run (npm run test:long); here they are widened by what chance does to so few ramps.
+// What is found and covered at least is bounded as in the long run (npm run test:long), widened by what chance does to
+// so few ramps. That the uncertainty is not stated too wide, 99 % at most, only the long run's thousand can tell.
 const ramps = 100;
 const firstSeed = 100_000;
 
@@ -12,7 +13,6 @@ describe(`seal points of ${ramps} simulated ramps a condition`, () => {
     const { sealed, covered, meanErrorKpa } = heard!;
     expect(sealed).toBeGreaterThanOrEqual(fewestHits(ramps, kind.dropDb === undefined ? 0.98 : 0.85));
     expect(covered).toBeGreaterThanOrEqual(fewestHits(sealed, 0.93));
-    expect(covered).toBeLessThanOrEqual(mostHits(sealed, 0.99));
     expect(Math.abs(meanErrorKpa)).toBeLessThan(0.2);
     expect(marked!.sealed).toBe(ramps);
     expect(marked!.covered).toBeGreaterThanOrEqual(fewestHits(ramps, leastMarked(kind.valve)));

@@ -3,6 +3,7 @@ import { RouterLink } from '@angular/router';
 import { clockTime, howLong } from '../core/time-words';
 import { RouteRibbon } from '../shared/route-ribbon';
 import type { OpenRun } from './bench-store';
+import { lowerFirst } from '../../../procedures/engine/showing';
 
 /** One open run: the car, the step, the way so far, what is disturbed, and the way back to it. */
 @Component({
@@ -47,7 +48,3 @@ export class RunCard {
     return current ? `Go back to step ${current.number}` : 'Go on';
   });
 }
-
-/** A sentence goes on after a colon; a word in capitals or with digits stays as it is. */
-const lowerFirst = (text: string): string =>
-  /^[A-Z][a-z]/.test(text) ? text.charAt(0).toLowerCase() + text.slice(1) : text;

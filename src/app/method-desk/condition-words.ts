@@ -1,5 +1,6 @@
 import type { ProcedureDocument, Step } from '../../../procedures/document';
 import { foundLabel } from './found-label';
+import { lowerFirst } from '../../../procedures/engine/showing';
 
 /** Name in expressions -> how people call it. */
 export type NameBook = ReadonlyMap<string, string>;
@@ -76,8 +77,4 @@ function namesOf(step: Step): readonly (readonly [string, string])[] {
 
 function quoted(text: string): string {
   return `\u2018${text}\u2019`;
-}
-
-function lowerFirst(text: string): string {
-  return /^[A-Z][a-z]/.test(text) ? text.charAt(0).toLowerCase() + text.slice(1) : text;
 }

@@ -1,5 +1,5 @@
 import type { Band, Quantity, Step } from '../../../procedures/document';
-import { shownUnit } from '../../../procedures/engine/showing';
+import { lowerFirst, shownUnit } from '../../../procedures/engine/showing';
 import { foundLabel } from './found-label';
 
 /** What a step gives a name to, for reading. */
@@ -83,8 +83,4 @@ function bandText(band: Band, words: (expression: string) => string): string {
   const to = band.high === undefined ? '' : `to ${words(band.high)}`;
   const only = band.when === undefined ? '' : `, judged only if ${words(band.when)}`;
   return `${`${from} ${to}`.trim()}${only}`;
-}
-
-function lowerFirst(text: string): string {
-  return /^[A-Z][a-z]/.test(text) ? text.charAt(0).toLowerCase() + text.slice(1) : text;
 }

@@ -1,5 +1,5 @@
 import type { CompiledProcedure, Step } from '../../../procedures/document';
-import { shownUnit, type EventOf, type RunEvent, type RunState } from '../../../procedures/engine/showing';
+import { lowerFirst, shownUnit, type EventOf, type RunEvent, type RunState } from '../../../procedures/engine/showing';
 import { clockTime } from '../core/time-words';
 import type { Tone } from './story-line';
 
@@ -192,8 +192,4 @@ function jumpText(byMs: number): string {
 function unknownWords(event: never): EventWords {
   const { type, at } = event as RunEvent;
   return live('An event that this build does not know', `${type}, ${clockTime(at)}`);
-}
-
-function lowerFirst(text: string): string {
-  return /^[A-Z][a-z]/.test(text) ? text.charAt(0).toLowerCase() + text.slice(1) : text;
 }

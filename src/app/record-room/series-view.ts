@@ -5,6 +5,7 @@ import { marksShown } from './marks-shown';
 import type { SeriesLoad } from './series-load';
 import type { SeriesLine } from './story-line';
 import { channelLabels } from './typed-points';
+import { lowerFirst } from '../../../procedures/engine/showing';
 
 /** A kept series: where it came from, the ramp with its marks, and what its reader could not make sense of. */
 @Component({
@@ -53,10 +54,6 @@ export class SeriesView {
 }
 
 const dashes = ['solid', 'dashed', 'dotted'];
-
-function lowerFirst(text: string): string {
-  return /^[A-Z][a-z]/.test(text) ? text.charAt(0).toLowerCase() + text.slice(1) : text;
-}
 
 function capital(text: string): string {
   return text.charAt(0).toUpperCase() + text.slice(1);

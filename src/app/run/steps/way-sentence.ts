@@ -1,5 +1,6 @@
 import type { CompiledProcedure } from '../../../../procedures/document';
 import type { RunEventData } from '../../../../procedures/engine/showing';
+import { lowerFirst } from '../../../../procedures/engine/showing';
 
 /** Where a way leads, as a sentence: the step, and the finding that the run then heads for. */
 export function waySentence(
@@ -13,5 +14,3 @@ export function waySentence(
   const next = `It goes on with step ${target.number}, ${lowerFirst(target.title)}`;
   return finding === undefined ? `${next}.` : `${next}; the finding so far: ${lowerFirst(finding)}.`;
 }
-
-const lowerFirst = (words: string): string => words.charAt(0).toLowerCase() + words.slice(1);
