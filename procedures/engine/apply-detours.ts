@@ -9,7 +9,7 @@ import { added, changedFrom, withoutStep } from './state-changes';
 
 export function overrule(procedure: CompiledProcedure, state: RunState, event: EventOf<'branch-overruled'>): RunState {
   requireStep(procedure, event.data.step);
-  const at = findLastIndex(state.walked, (claim) => claim.step === event.data.step && claim.way !== undefined);
+  const at = state.walked.findLastIndex((claim) => claim.step === event.data.step && claim.way !== undefined);
   if (at < 0) throw new RefusedEvent('not-done', 'no way was taken from that step');
   const overruled = state.walked[at];
   const walked = changedFrom(state.walked, at + 1, (claim) => ({ ...claim, isLeft: true }));
@@ -28,7 +28,7 @@ export function overrule(procedure: CompiledProcedure, state: RunState, event: E
 export function redo(procedure: CompiledProcedure, state: RunState, event: EventOf<'step-redone'>): RunState {
   const step = requireStep(procedure, event.data.step);
   if (step.kind === 'finding') throw new RefusedEvent('not-done', 'a finding is reached, not taken again');
-  const at = findLastIndex(state.walked, (claim) => claim.step === event.data.step);
+  const at = state.walked.findLastIndex((claim) => claim.step === event.data.step);
   const earlier = state.walked[at];
   if (earlier === undefined) throw new RefusedEvent('not-done', 'that step was never walked');
   return {
@@ -42,14 +42,6 @@ export function redo(procedure: CompiledProcedure, state: RunState, event: Event
     due: step.id,
     overruled: undefined,
   };
-}
-
-function findLastIndex<T>(list: readonly T[], matches: (entry: T) => boolean): number {
-  for (let index = list.length - 1; index >= 0; index -= 1) {
-    const entry = list[index];
-    if (entry !== undefined && matches(entry)) return index;
-  }
-  return -1;
 }
 
 export function exceedLimit(procedure: CompiledProcedure, state: RunState, event: EventOf<'limit-exceeded'>): RunState {

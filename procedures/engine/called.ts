@@ -1,4 +1,4 @@
-import type { CallBlock, CompiledProcedure, Exit, Step } from '../document';
+import type { CompiledProcedure, Exit, Step } from '../document';
 import { environmentOf, own } from './environment';
 import { decimalsOf } from './figures';
 import { judgeQuantity } from './judge-quantity';
@@ -91,7 +91,7 @@ export function withoutCountsOf(
 }
 
 /** Whether a step belongs to what a call step calls, at any depth. */
-export function isInCall(procedure: CompiledProcedure, step: string, call: string): boolean {
+function isInCall(procedure: CompiledProcedure, step: string, call: string): boolean {
   for (let block = procedure.blockOf(step); block !== undefined; block = procedure.blockOf(block.call)) {
     if (block.call === call) return true;
   }
@@ -101,12 +101,11 @@ export function isInCall(procedure: CompiledProcedure, step: string, call: strin
 /** Whether a limit holds at a step: a called procedure's own hold in its steps alone. */
 export function limitHoldsAt(procedure: CompiledProcedure, limit: string, step: string | undefined): boolean {
   const owner = procedure.blockOfLimit(limit);
-  return owner === undefined || (step !== undefined && isInCall(procedure, step, owner.call));
+  return owner === undefined || (step !== undefined && owner.steps.has(step));
 }
 
 /** What a restore step puts back: everything, or in a called procedure what that one took apart. */
 export function dueAt(procedure: CompiledProcedure, state: RunState, step: string): RunState['disturbed'] {
-  const block: CallBlock | undefined = procedure.blockOf(step);
-  if (block === undefined) return state.disturbed;
-  return state.disturbed.filter((item) => isInCall(procedure, item.step, block.call));
+  const block = procedure.blockOf(step);
+  return block === undefined ? state.disturbed : state.disturbed.filter((item) => block.steps.has(item.step));
 }

@@ -1,17 +1,7 @@
 import type { Page } from '@playwright/test';
-import { acknowledge, shownStep, tap, walkTo, type Answers } from './support/at-the-car';
+import { acknowledge, listenToTheBench, shownStep, tap, walkTo, type Answers } from './support/at-the-car';
 import { expect, test } from './support/test';
 import { openVisit, signIn } from './support/visits';
-
-/** Takes the ramp that the bench offers, and says that the noise never stopped. */
-async function listenToTheBench(page: Page): Promise<void> {
-  await page.getByRole('button', { name: 'Take a log of the scan tool instead' }).click();
-  await page.getByRole('button', { name: /Take the bench's log/ }).click();
-  await expect(page.getByText('421 samples')).toBeVisible();
-  await tap(page.getByRole('button', { name: 'Take this series' }));
-  await tap(page.getByRole('button', { name: 'It never stopped' }));
-  await tap(page.getByRole('button', { name: 'Sure? It never stopped' }));
-}
 
 const coldMorning: Answers = {
   gear: { gauge: 'G-12', scanTool: 'S-3', probe: 'L-2', barometer: 'B-1', thermometer: 'T-4' },

@@ -1,21 +1,11 @@
 import type { Page } from '@playwright/test';
 import { headerHash, type RunHeader } from '../../procedures/engine';
-import { tap, walkTo, type Answers } from './support/at-the-car';
+import { listenToTheBench, tap, walkTo, type Answers } from './support/at-the-car';
 import { practiceSeen, watchPractice } from './support/practice-edge';
 import { pushByHand } from './support/push-by-hand';
 import { expect, test } from './support/test';
 import { readyWithoutNetwork, signIn, signOut } from './support/visits';
 import { eventsOnTablet, rowsOf, storedOnTablet } from './support/what-is-kept';
-
-/** Takes the ramp that the bench offers, and says that the noise never stopped. */
-async function listenToTheBench(page: Page): Promise<void> {
-  await page.getByRole('button', { name: 'Take a log of the scan tool instead' }).click();
-  await page.getByRole('button', { name: /Take the bench's log/ }).click();
-  await expect(page.getByText('421 samples')).toBeVisible();
-  await tap(page.getByRole('button', { name: 'Take this series' }));
-  await tap(page.getByRole('button', { name: 'It never stopped' }));
-  await tap(page.getByRole('button', { name: 'Sure? It never stopped' }));
-}
 
 /** What a careful apprentice enters, told by the bench alone. */
 const coldMorning: Answers = {

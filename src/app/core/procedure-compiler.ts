@@ -20,6 +20,19 @@ export class CalledVersionMissing extends Error {
  */
 export type ProcedureCompiler = (document: ProcedureDocument) => Promise<CompiledProcedure>;
 
+/** The same for whoever says in words what is not here: that is no fault of the run's. */
+export async function compiledOrMissing(
+  compile: ProcedureCompiler,
+  document: ProcedureDocument,
+): Promise<CompiledProcedure | CalledVersionMissing> {
+  try {
+    return await compile(document);
+  } catch (error) {
+    if (error instanceof CalledVersionMissing) return error;
+    throw error;
+  }
+}
+
 /** The expression library is the heaviest part of the app, so it comes in a chunk of its own. */
 export const procedureCompiler = new InjectionToken<ProcedureCompiler>('procedureCompiler', {
   factory: () => {

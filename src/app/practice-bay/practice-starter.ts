@@ -1,7 +1,6 @@
 import { inject, Injectable } from '@angular/core';
-import type { CompiledProcedure } from '../../../procedures/document';
 import { openRun, replay, type RunEvent, type RunHeader } from '../../../procedures/engine/showing';
-import { CalledVersionMissing, procedureCompiler } from '../core/procedure-compiler';
+import { CalledVersionMissing, compiledOrMissing, procedureCompiler } from '../core/procedure-compiler';
 import { RunJournal } from '../core/run-journal';
 import { summariseRun } from '../core/run-summary';
 import { Session } from '../core/session';
@@ -24,7 +23,7 @@ export class PracticeStarter {
   async start(scenario: PracticeScenario, published: PublishedProcedure): Promise<StartedPractice> {
     const person = this.session.person();
     if (person === undefined) return { ok: false, why: 'Nobody is signed in.' };
-    const procedure = await this.compiled(published);
+    const procedure = await compiledOrMissing(this.compile, published.document);
     if (procedure instanceof CalledVersionMissing) return { ok: false, why: procedure.message };
     const opening = openRun(procedure, {
       visit: scenario.visit,
@@ -55,14 +54,5 @@ export class PracticeStarter {
       this.journal.release(header.runId);
     }
     return { ok: true, runId: header.runId };
-  }
-
-  private async compiled({ document }: PublishedProcedure): Promise<CompiledProcedure | CalledVersionMissing> {
-    try {
-      return await this.compile(document);
-    } catch (error) {
-      if (error instanceof CalledVersionMissing) return error;
-      throw error;
-    }
   }
 }

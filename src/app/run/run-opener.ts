@@ -1,10 +1,10 @@
 import { inject, Injectable } from '@angular/core';
-import type { CompiledProcedure, ProcedureDocument } from '../../../procedures/document';
+import type { CompiledProcedure } from '../../../procedures/document';
 import { replay, waitsForSomebody, type RunState } from '../../../procedures/engine/showing';
 import { OfflineStore } from '../core/offline-store';
 import { RunJournal } from '../core/run-journal';
 import { Session } from '../core/session';
-import { CalledVersionMissing, procedureCompiler } from '../core/procedure-compiler';
+import { CalledVersionMissing, compiledOrMissing, procedureCompiler } from '../core/procedure-compiler';
 import type { RunView } from './run-view';
 
 /** A run as it was found on this tablet, or why it cannot be shown. */
@@ -43,7 +43,7 @@ export class RunOpener {
     if (published === undefined) {
       return { ok: false, why: 'no-procedure', what: `${header.procedureId}, version ${header.version}` };
     }
-    const procedure = await this.compiled(published.document);
+    const procedure = await compiledOrMissing(this.compile, published.document);
     if (procedure instanceof CalledVersionMissing) {
       const { procedure: id, version } = procedure.called;
       return { ok: false, why: 'no-procedure', what: `${id}, version ${version}, which is called in it` };
@@ -66,16 +66,6 @@ export class RunOpener {
 
   close(runId: string): void {
     this.journal.release(runId);
-  }
-
-  /** A called version that is not here is no fault of the run's: it is said. */
-  private async compiled(document: ProcedureDocument): Promise<CompiledProcedure | CalledVersionMissing> {
-    try {
-      return await this.compile(document);
-    } catch (error) {
-      if (error instanceof CalledVersionMissing) return error;
-      throw error;
-    }
   }
 }
 

@@ -22,7 +22,6 @@ export interface PlotColours {
 export interface PlotRequest {
   readonly series: Series;
   readonly marks: readonly PlotMark[];
-  readonly strip: { readonly fromS: number; readonly toS: number } | undefined;
   readonly names: Readonly<Record<string, string>>;
   readonly width: number;
   readonly height: number;
@@ -108,7 +107,6 @@ export function plotOptions(request: PlotRequest): uPlot.Options {
       }),
     ],
     hooks: {
-      drawClear: [(plot: uPlot): void => drawStrip(plot, request)],
       draw: [(plot: uPlot): void => drawMarks(plot, request)],
     },
   };
@@ -164,20 +162,6 @@ function sideAxis(
       return ticks.map((tick, index) => (tick === null ? null : index === last ? `${tick} ${unit}` : String(tick)));
     },
   };
-}
-
-function drawStrip(plot: uPlot, { strip, colours }: PlotRequest): void {
-  if (!strip) return;
-  const { ctx, bbox } = plot;
-  const from = Math.max(bbox.left, plot.valToPos(strip.fromS, 'x', true));
-  const to = Math.min(bbox.left + bbox.width, plot.valToPos(strip.toS, 'x', true));
-  ctx.save();
-  ctx.fillStyle = colours.liveWash;
-  ctx.fillRect(from, bbox.top, to - from, bbox.height);
-  ctx.strokeStyle = colours.live;
-  ctx.lineWidth = 1;
-  ctx.strokeRect(from, bbox.top, to - from, bbox.height);
-  ctx.restore();
 }
 
 /** Marks are lines across both parts; each label takes the side with more room, one row lower than the one before. */

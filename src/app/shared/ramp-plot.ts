@@ -17,16 +17,9 @@ import { describeRamp } from './ramp-description';
 import { risesAbove } from './ramp-rises';
 import { plotData, plotOptions, type PlotColours, type PlotMark } from './ramp-plot-options';
 
-/** A stretch of the time axis that is washed: the uncertainty round a mark. */
-export interface PlotStrip {
-  readonly fromS: number;
-  readonly toS: number;
-}
-
 /**
- * A logged series on one time axis: the pressures above, the sound's level below, with marks across both and the
- * uncertainty round a mark as a strip. The drawing library comes lazily; the same facts stand as text for those who
- * cannot see it.
+ * A logged series on one time axis: the pressures above, the sound's level below, with marks across both. The drawing
+ * library comes lazily; the same facts stand as text for those who cannot see it.
  */
 @Component({
   selector: 'bay-ramp-plot',
@@ -58,7 +51,6 @@ export class RampPlot {
   readonly series = input.required<Series>();
   /** Marks with the words beside them; `isMain` is drawn solid, the others dotted. */
   readonly marks = input<readonly PlotMark[]>([]);
-  readonly strip = input<PlotStrip>();
   /**
    * The air of the place, kilopascals: absolute pressures are drawn as rises above it, on the gauge's own scale. As
    * they are where it is not known.
@@ -93,7 +85,6 @@ export class RampPlot {
     const options = plotOptions({
       series: this.drawn(),
       marks: this.marks(),
-      strip: this.strip(),
       names: this.names(),
       width,
       height: Math.max(height, 72),

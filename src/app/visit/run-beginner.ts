@@ -11,7 +11,7 @@ import {
 import type { CompiledProcedure } from '../../../procedures/document';
 import { knownRuns } from '../core/known-runs';
 import { OfflineStore } from '../core/offline-store';
-import { CalledVersionMissing, procedureCompiler } from '../core/procedure-compiler';
+import { CalledVersionMissing, compiledOrMissing, procedureCompiler } from '../core/procedure-compiler';
 import { NobodyToSign, RunJournal } from '../core/run-journal';
 import { summariseRun } from '../core/run-summary';
 import { Session } from '../core/session';
@@ -45,22 +45,13 @@ export class RunBeginner {
     const site = await this.store.sites.get(visit.siteId);
     if (!site)
       return { ok: false, message: 'The site of this visit is not on the tablet yet: it comes with the next sync.' };
-    const procedure = await this.compiled(published);
+    const procedure = await compiledOrMissing(this.compile, published.document);
     if (procedure instanceof CalledVersionMissing) return { ok: false, message: procedure.message };
     const facts = openingFacts(visit, site, person.displayName);
     const outcome = openRun(procedure, again === undefined ? facts : { ...facts, again });
     if (!outcome.ok) return { ok: false, message: outcome.message };
     const header = await this.headerOf(visit, published, half);
     return this.write(procedure, header, outcome.drafts);
-  }
-
-  private async compiled({ document }: PublishedProcedure): Promise<CompiledProcedure | CalledVersionMissing> {
-    try {
-      return await this.compile(document);
-    } catch (error) {
-      if (error instanceof CalledVersionMissing) return error;
-      throw error;
-    }
   }
 
   private async write(procedure: CompiledProcedure, header: RunHeader, drafts: readonly EventDraft[]): Promise<Begun> {

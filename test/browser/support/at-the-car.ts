@@ -192,3 +192,13 @@ async function restoreAll(page: Page): Promise<void> {
   const back = page.getByRole('button', { name: /All is back/ });
   if (await back.isVisible()) await tap(back);
 }
+
+/** Takes the ramp that the bench offers, and says that the noise never stopped. */
+export async function listenToTheBench(page: Page): Promise<void> {
+  await page.getByRole('button', { name: 'Take a log of the scan tool instead' }).click();
+  await page.getByRole('button', { name: /Take the bench's log/ }).click();
+  await expect(page.getByText('421 samples')).toBeVisible();
+  await tap(page.getByRole('button', { name: 'Take this series' }));
+  await tap(page.getByRole('button', { name: 'It never stopped' }));
+  await tap(page.getByRole('button', { name: 'Sure? It never stopped' }));
+}

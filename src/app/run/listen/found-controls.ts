@@ -5,7 +5,7 @@ import { BigAction } from '../frame/big-action';
 import { JudgedLine } from '../readings/judged-line';
 import type { RunProblem, RunView } from '../run-view';
 import type { StepOf } from '../step-entry';
-import type { ListenDone } from './listen-requests';
+import { anotherFile, type ListenDone } from './listen-requests';
 
 /** A ramp that came as a file and has no marks: what is found in it, judged, and what could not be found. */
 @Component({
@@ -61,8 +61,7 @@ export class FoundControls {
   protected readonly found = computed(() => this.preview()?.values ?? []);
   protected readonly problems = computed(() => this.preview()?.problems ?? []);
 
-  /** The step once more, for another log; the one that is left behind stays in the record. */
   protected takeAnotherFile(): void {
-    this.commanded.emit({ do: 'redo', step: this.step().id, reason: 'another file is taken' });
+    this.commanded.emit(anotherFile(this.step().id));
   }
 }

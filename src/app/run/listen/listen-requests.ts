@@ -1,4 +1,4 @@
-import type { Series } from '../../../../procedures/engine/showing';
+import type { RunCommand, Series } from '../../../../procedures/engine/showing';
 import type { MarkName } from './live-series';
 import type { SeriesFacts } from './series-blob';
 
@@ -18,4 +18,9 @@ export interface ListenDone {
     readonly timeS: number;
     readonly by: 'tap' | 'suggested';
   }[];
+}
+
+/** The step once more, for another log; the one that is left behind stays in the record. */
+export function anotherFile(step: string): RunCommand {
+  return { do: 'redo', step, reason: 'another file is taken' };
 }

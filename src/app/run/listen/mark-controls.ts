@@ -16,7 +16,7 @@ import { ReadingDisplay } from '../readings/reading-display';
 import type { RunProblem, RunView } from '../run-view';
 import type { StepOf } from '../step-entry';
 import { FoundDisplay } from './found-display';
-import type { ListenDone } from './listen-requests';
+import { anotherFile, type ListenDone } from './listen-requests';
 import { SureButton } from './sure-button';
 import { valueAt, withMark, type MarkName } from './live-series';
 import { plotMarks } from './plot-marks';
@@ -161,9 +161,8 @@ export class MarkControls {
     if (this.stopsAt() !== undefined) this.finish(this.standing());
   }
 
-  /** The step once more, for another log; the one that is left behind stays in the record. */
   protected takeAnotherFile(): void {
-    this.commanded.emit({ do: 'redo', step: this.step().id, reason: 'another file is taken' });
+    this.commanded.emit(anotherFile(this.step().id));
   }
 
   protected finishSilent(): void {
