@@ -139,6 +139,18 @@ test('Stop can be tapped all over while listening, over a limit, on coming back 
   const begin = page.getByRole('button', { name: /Gauge at zero/ });
   await tap(begin);
   await checkStop(page, 'listen');
+  // What nobody expected is said over any page, and not over Stop.
+  await page.evaluate(
+    () =>
+      void setTimeout(() => {
+        throw new Error('made for this check');
+      }),
+  );
+  const unexpected = page.getByRole('alert').filter({ hasText: 'Something went wrong here' });
+  await expect(unexpected).toBeVisible();
+  await checkStop(page, 'listen, after something went wrong');
+  await unexpected.getByRole('button', { name: 'Go on' }).click();
+  await expect(unexpected).toBeHidden();
   await tap(page.getByRole('button', { name: 'Type it' }));
   await checkStop(page, 'listen, the pad');
   await tap(page.getByRole('button', { name: 'Back to the steps' }));

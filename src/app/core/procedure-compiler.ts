@@ -1,5 +1,6 @@
 import { inject, InjectionToken } from '@angular/core';
 import type { CalledKey, CompiledProcedure, ProcedureDocument } from '../../../procedures/document';
+import { fetchPart } from './fetch-part';
 import { OfflineStore } from './offline-store';
 
 /** A procedure calls a version that is not on this tablet: no run of it can be opened here before that has come. */
@@ -38,7 +39,8 @@ export const procedureCompiler = new InjectionToken<ProcedureCompiler>('procedur
   factory: () => {
     const { procedures } = inject(OfflineStore);
     return async (document) => {
-      const { compileProcedure, gatherCalls, libraryOf } = await import('../../../procedures/document');
+      const part = fetchPart(() => import('../../../procedures/document'));
+      const { compileProcedure, gatherCalls, libraryOf } = await part;
       const { found, missing } = await gatherCalls(document, ({ procedure, version }) =>
         procedures.get([procedure, version]),
       );

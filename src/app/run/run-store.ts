@@ -9,6 +9,7 @@ import {
 import { NobodyToSign, RunJournal, RunWrittenElsewhere, type NewBlob } from '../core/run-journal';
 import { summariseRun } from '../core/run-summary';
 import { Session } from '../core/session';
+import { fetchPart } from '../core/fetch-part';
 import { clock, monotonicClock } from '../core/time-and-ids';
 import { ClockWatch } from './clock-watch';
 import { RunOpener, type OpenedRun } from './run-opener';
@@ -163,7 +164,7 @@ export class RunStore {
     this.acting.set({ do: command.do, isOfRamp: isOfRamp(command, view) });
     try {
       // What decides comes in idle time after the first step is shown; a tap before that waits for it.
-      const { decide } = await import('../../../procedures/engine');
+      const { decide } = await fetchPart(() => import('../../../procedures/engine'));
       const outcome = decide(view.procedure, view.state, command, this.now());
       if (!outcome.ok) {
         this.trouble.set(outcome);

@@ -12,6 +12,7 @@ import {
 } from '@angular/core';
 import type uPlot from 'uplot';
 import type { Series } from '../../../procedures/engine/showing';
+import { fetchPart } from '../core/fetch-part';
 import { hostSize } from './element-size';
 import { describeRamp } from './ramp-description';
 import { risesAbove } from './ramp-rises';
@@ -70,11 +71,17 @@ export class RampPlot {
   protected readonly description = computed(() => describeRamp(this.series(), this.marks(), this.names()));
 
   constructor() {
-    void import('uplot').then((module) => this.library.set(module.default));
+    void this.fetchLibrary();
     this.redrawOnThemeChange();
     // A canvas is outside Angular's templates: it is drawn anew when data, room or theme change.
     afterRenderEffect(() => this.draw());
     inject(DestroyRef).onDestroy(() => this.plot?.destroy());
+  }
+
+  /** Without it the same facts stand as text, and nothing is laid over the step because of a drawing. */
+  private async fetchLibrary(): Promise<void> {
+    const module = await fetchPart(() => import('uplot')).catch(() => undefined);
+    this.library.set(module?.default);
   }
 
   private draw(): void {
